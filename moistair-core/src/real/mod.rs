@@ -1,0 +1,95 @@
+//! The arithmetic that every formula is written in.
+//!
+//! A formula is written once, generic over [`Real`], and runs as a single number (`f64`, `f32`), as a row of numbers
+//! ([`Lanes`]) or, later, with derivatives. All of them are made of IEEE `+ − × ÷ √` and integer moves of bits in one
+//! fixed order, so that a result has the same bits on every face and every processor.
+
+mod elementary;
+mod lanes;
+mod scalar;
+
+#[cfg(test)]
+mod tests;
+
+use core::ops::{Add, Div, Mul, Neg, Sub};
+
+pub use lanes::Lanes;
+pub use scalar::Scalar;
+
+/// The result of a comparison: one truth value, or one per lane.
+pub trait Mask: Copy {
+    /// Both.
+    fn and(self, other: Self) -> Self;
+    /// Either or both.
+    fn or(self, other: Self) -> Self;
+    /// The opposite.
+    fn not(self) -> Self;
+}
+
+/// Numbers that a formula can be evaluated in. Sealed by being unreachable from outside the crate.
+pub trait Real:
+    Copy
+    + Add<Output = Self>
+    + Sub<Output = Self>
+    + Mul<Output = Self>
+    + Div<Output = Self>
+    + Neg<Output = Self>
+{
+    /// What a comparison returns.
+    type Mask: Mask;
+
+    /// The nearest representable value of a published constant, in every lane.
+    fn constant(value: f64) -> Self;
+    /// Square root, correctly rounded; NaN below zero.
+    fn sqrt(self) -> Self;
+    /// Natural exponential.
+    fn exp(self) -> Self;
+    /// Natural logarithm; −∞ at ±0, NaN below.
+    fn ln(self) -> Self;
+    /// Arc tangent.
+    fn atan(self) -> Self;
+    /// `self < other`; false when either is NaN.
+    fn lt(self, other: Self) -> Self::Mask;
+    /// `self <= other`; false when either is NaN.
+    fn le(self, other: Self) -> Self::Mask;
+    /// `a` where the mask holds, `b` elsewhere.
+    fn select(mask: Self::Mask, a: Self, b: Self) -> Self;
+
+    /// The smaller; `self` where they cannot be compared.
+    #[inline(always)]
+    fn at_most(self, limit: Self) -> Self {
+        Self::select(limit.lt(self), limit, self)
+    }
+
+    /// The larger; `self` where they cannot be compared.
+    #[inline(always)]
+    fn at_least(self, limit: Self) -> Self {
+        Self::select(self.lt(limit), limit, self)
+    }
+}
+
+/// A published constant in the arithmetic at hand: `x * k(1.86)`.
+#[inline(always)]
+pub fn k<R: Real>(value: f64) -> R {
+    R::constant(value)
+}
+
+/// `c₀ + c₁ x + c₂ x² + …` by Horner's rule, coefficients in ascending order.
+#[inline(always)]
+pub fn polynomial<R: Real, const N: usize>(x: R, coefficients: [f64; N]) -> R {
+    coefficients.into_iter().rev().fold(k(0.0), |sum, c| sum * x + k(c))
+}
+
+/// `xⁿ` by repeated squaring; the exponent is a constant of the formula, never data.
+#[inline(always)]
+pub fn power<R: Real>(x: R, exponent: u32) -> R {
+    let (mut result, mut square, mut rest) = (k(1.0), x, exponent);
+    while rest != 0 {
+        if rest & 1 == 1 {
+            result = result * square;
+        }
+        square = square * square;
+        rest >>= 1;
+    }
+    result
+}
