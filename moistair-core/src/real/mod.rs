@@ -4,6 +4,7 @@
 //! ([`Lanes`]) or, later, with derivatives. All of them are made of IEEE `+ − × ÷ √` and integer moves of bits in one
 //! fixed order, so that a result has the same bits on every face and every processor.
 
+mod coefficients;
 mod elementary;
 mod lanes;
 mod scalar;
@@ -74,10 +75,12 @@ pub fn k<R: Real>(value: f64) -> R {
     R::constant(value)
 }
 
-/// `c₀ + c₁ x + c₂ x² + …` by Horner's rule, coefficients in ascending order.
+/// `c₀ + c₁ x + c₂ x² + …` by Horner's rule, coefficients in ascending order; 0 without any.
 #[inline(always)]
 pub fn polynomial<R: Real, const N: usize>(x: R, coefficients: [f64; N]) -> R {
-    coefficients.into_iter().rev().fold(k(0.0), |sum, c| sum * x + k(c))
+    let mut descending = coefficients.iter().rev();
+    let leading = descending.next().map_or(0.0, |&c| c);
+    descending.fold(k(leading), |sum, &c| sum * x + k(c))
 }
 
 /// `xⁿ` by repeated squaring; the exponent is a constant of the formula, never data.
