@@ -9,9 +9,26 @@ use super::{Mask, Real};
 #[derive(Clone, Copy, Debug)]
 pub struct Lanes<T, const N: usize>(pub [T; N]);
 
+// Plain loops that change an array in place: `array::map` leaves a large function like `exp` as one call per element.
 impl<T: Copy, const N: usize> Lanes<T, N> {
     #[inline(always)]
-    fn zip<U: Copy, V>(self, other: Lanes<U, N>, f: impl Fn(T, U) -> V) -> [V; N] {
+    fn each(mut self, f: impl Fn(T) -> T) -> Self {
+        for value in &mut self.0 {
+            *value = f(*value);
+        }
+        self
+    }
+
+    #[inline(always)]
+    fn with(mut self, other: Self, f: impl Fn(T, T) -> T) -> Self {
+        for (value, other) in self.0.iter_mut().zip(other.0) {
+            *value = f(*value, other);
+        }
+        self
+    }
+
+    #[inline(always)]
+    fn compare<M>(self, other: Self, f: impl Fn(T, T) -> M) -> [M; N] {
         core::array::from_fn(|i| f(self.0[i], other.0[i]))
     }
 }
@@ -22,7 +39,7 @@ macro_rules! operator {
             type Output = Self;
             #[inline(always)]
             fn $method(self, other: Self) -> Self {
-                Self(self.zip(other, T::$method))
+                self.with(other, T::$method)
             }
         }
     )*};
@@ -33,7 +50,7 @@ impl<T: Real, const N: usize> Neg for Lanes<T, N> {
     type Output = Self;
     #[inline(always)]
     fn neg(self) -> Self {
-        Self(self.0.map(T::neg))
+        self.each(T::neg)
     }
 }
 
@@ -61,27 +78,27 @@ impl<T: Real, const N: usize> Real for Lanes<T, N> {
     }
     #[inline(always)]
     fn sqrt(self) -> Self {
-        Self(self.0.map(T::sqrt))
+        self.each(T::sqrt)
     }
     #[inline(always)]
     fn exp(self) -> Self {
-        Self(self.0.map(T::exp))
+        self.each(T::exp)
     }
     #[inline(always)]
     fn ln(self) -> Self {
-        Self(self.0.map(T::ln))
+        self.each(T::ln)
     }
     #[inline(always)]
     fn atan(self) -> Self {
-        Self(self.0.map(T::atan))
+        self.each(T::atan)
     }
     #[inline(always)]
     fn lt(self, other: Self) -> Self::Mask {
-        self.zip(other, T::lt)
+        self.compare(other, T::lt)
     }
     #[inline(always)]
     fn le(self, other: Self) -> Self::Mask {
-        self.zip(other, T::le)
+        self.compare(other, T::le)
     }
     #[inline(always)]
     fn select(mask: Self::Mask, a: Self, b: Self) -> Self {
