@@ -43,11 +43,13 @@ pub struct Periods {
 
 impl Periods {
     /// Periods of this length, s, each beginning at a multiple of it, so that hours of Unix time are hours of UTC. The
-    /// total brings its rule and its longest step; a length outside [`SHORTEST_PERIOD`] … [`LONGEST_TIME`] or NaN is
-    /// taken as the nearer of them.
+    /// total brings its rule and its longest step; a length outside [`SHORTEST_PERIOD`] … [`LONGEST_TIME`] is taken
+    /// as the nearer of them, NaN as the shorter.
     #[must_use]
     pub fn new(length: f64, empty: Total) -> Self {
-        let length = microseconds(length.max(SHORTEST_PERIOD).min(LONGEST_TIME));
+        // Not `clamp`: NaN becomes the shortest.
+        let length = if length > SHORTEST_PERIOD { length } else { SHORTEST_PERIOD };
+        let length = microseconds(length.min(LONGEST_TIME));
         Self { current: Total::new(empty.rule(), empty.longest_step()), start: 0, length: length.unwrap_or(1) }
     }
 

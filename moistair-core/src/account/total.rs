@@ -41,7 +41,12 @@ pub(super) struct Sample {
 
 impl Sample {
     pub(super) fn new(rate: f64, quality: Quality) -> Self {
-        if rate.is_finite() { Self { rate, quality } } else { Self { rate: 0.0, quality: Quality::Refused } }
+        // Adding zero makes −0 plain zero, so that extremes have one bit pattern.
+        if rate.is_finite() {
+            Self { rate: rate + 0.0, quality }
+        } else {
+            Self { rate: 0.0, quality: Quality::Refused }
+        }
     }
 
     /// The sample that a rule puts `share` of the way from one sample to the next.

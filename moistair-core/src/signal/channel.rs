@@ -174,7 +174,8 @@ impl Channel {
     /// Refused as [`Reason::Stuck`] from the sample on that is the `samples`th in a row within `resolution` (unit of the
     /// core) of the first of them, until one is not. Zero (the default) or one sample: no stuck rule.
     ///
-    /// Choose the row longer than the longest true calm: outdoor air stays at 100 % for a foggy night, a command for a
+    /// Choose the resolution below the smallest step of the signal, since two decimals exactly one resolution apart can
+    /// round to either side. Choose the row longer than the longest true calm: outdoor air stays at 100 % for a foggy night, a command for a
     /// season. Missing and out-of-range samples neither lengthen nor break the row.
     #[must_use]
     pub const fn with_stuck(mut self, resolution: f64, samples: u32) -> Self {

@@ -113,7 +113,8 @@ impl ChannelState {
     /// Notes the value for the stuck rule; whether it is stuck.
     fn is_stuck(&mut self, channel: &Channel, value: f64, reference: Option<f64>) -> bool {
         let reference_moved = self.reference_moved(channel, reference);
-        if self.unchanged == 0 || !((value - self.steady).abs() <= channel.resolution) {
+        let same = (value - self.steady).abs() <= channel.resolution;
+        if self.unchanged == 0 || !same {
             (self.steady, self.unchanged) = (value, 1);
         } else if reference_moved {
             self.unchanged = self.unchanged.saturating_add(1);

@@ -81,6 +81,11 @@ impl Clock {
         (self.started != 0).then(|| seconds(self.now))
     }
 
+    #[cfg(test)]
+    pub(super) fn from_parts([now, candidate]: [i64; 2], [candidates, started]: [u32; 2]) -> Self {
+        Self { now, candidate, candidates, started }
+    }
+
     /// The last accepted time, µs.
     pub(crate) fn now(&self) -> i64 {
         self.now

@@ -48,7 +48,8 @@ coded_enum! {
         AboveSaturation = 4, "slightly above saturation, taken as saturated";
         /// Unchanged for longer than a living signal would be.
         Stuck = 5, "stuck";
-        /// A good reading after a pause: nothing may be integrated across the pause.
+        /// A good reading after a pause: nothing may be integrated across the pause. A total judges that once more, by
+        /// the longest step that it bridges.
         Gap = 6, "first reading after a gap";
         /// The time is not later than the time before.
         TimeNotIncreasing = 7, "time not increasing";
