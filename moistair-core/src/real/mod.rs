@@ -29,12 +29,7 @@ pub trait Mask: Copy {
 
 /// Numbers that a formula can be evaluated in. Sealed by being unreachable from outside the crate.
 pub trait Real:
-    Copy
-    + Add<Output = Self>
-    + Sub<Output = Self>
-    + Mul<Output = Self>
-    + Div<Output = Self>
-    + Neg<Output = Self>
+    Copy + Add<Output = Self> + Sub<Output = Self> + Mul<Output = Self> + Div<Output = Self> + Neg<Output = Self>
 {
     /// What a comparison returns.
     type Mask: Mask;

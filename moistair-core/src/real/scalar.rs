@@ -20,7 +20,9 @@ impl Mask for bool {
 /// The scalar that public types are generic over: `f64` (default) or `f32`. Sealed.
 ///
 /// Every formula has one text for both; `f32` carries about seven digits, which a small controller may prefer.
-pub trait Scalar: Real + num_traits::float::FloatCore + core::fmt::Debug + core::fmt::Display + 'static {
+pub trait Scalar:
+    Real<Mask = bool> + num_traits::float::FloatCore + core::fmt::Debug + core::fmt::Display + 'static
+{
     /// The value as `f64`, exact for both types.
     fn to_f64(self) -> f64;
 }

@@ -1,0 +1,172 @@
+//! Every quantity and every limit, once: the checks, the messages and the documentation read this table.
+
+/// Declares [`Quantity`] and its table.
+macro_rules! quantities {
+    ($($(#[$doc:meta])* $variant:ident = $code:literal, $name:literal, $unit:literal, $min:expr, $max:expr;)*) => {
+        /// What a number means. The codes are stable and never re-used; those below [`PROPERTY_COUNT`] are properties of a
+        /// state of moist air and can be read from it.
+        #[derive(Clone, Copy, Debug, PartialEq, Eq, Hash)]
+        #[non_exhaustive]
+        #[repr(i32)]
+        pub enum Quantity {
+            $($(#[$doc])* $variant = $code,)*
+        }
+
+        impl Quantity {
+            /// All quantities, in the order of their codes.
+            pub const ALL: &'static [Self] = &[$(Self::$variant),*];
+
+            /// The name used in messages and, with underscores, on the C and Python faces.
+            #[must_use]
+            pub const fn name(self) -> &'static str {
+                match self { $(Self::$variant => $name,)* }
+            }
+
+            /// The unit of the C and Python faces, of messages and of [`Quantity::limits`].
+            #[must_use]
+            pub const fn unit(self) -> &'static str {
+                match self { $(Self::$variant => $unit,)* }
+            }
+
+            /// The declared range of an input, both ends included.
+            #[must_use]
+            pub const fn limits(self) -> (f64, f64) {
+                match self { $(Self::$variant => ($min, $max),)* }
+            }
+
+            /// The stable code.
+            #[must_use]
+            pub const fn code(self) -> i32 {
+                self as i32
+            }
+
+            /// The quantity with a given code.
+            #[must_use]
+            pub const fn from_code(code: i32) -> Option<Self> {
+                match code {
+                    $($code => Some(Self::$variant),)*
+                    _ => None,
+                }
+            }
+        }
+    };
+}
+
+/// Codes below this number are properties of a state.
+pub const PROPERTY_COUNT: i32 = 23;
+
+const INFINITY: f64 = f64::INFINITY;
+
+quantities! {
+    /// Dry-bulb temperature. The range of states; the formulations themselves reach 193.15 to 473.15 K (IAPWS G8-10).
+    DryBulb = 0, "dry bulb", "°C", -80.0, 150.0;
+    /// Absolute total pressure.
+    Pressure = 1, "pressure", "Pa", 20_000.0, 1_100_000.0;
+    /// Mass of water vapor per mass of dry air.
+    HumidityRatio = 2, "humidity ratio", "kg/kg", 0.0, 10.0;
+    /// Moles of water vapor per mole of moist air.
+    WaterMoleFraction = 3, "water mole fraction", "1", 0.0, 0.95;
+    /// Water mole fraction times total pressure.
+    VaporPressure = 4, "vapor pressure", "Pa", 0.0, 1_045_000.0;
+    /// Mass of water vapor per mass of moist air.
+    SpecificHumidity = 5, "specific humidity", "kg/kg", 0.0, 10.0 / 11.0;
+    /// Mass of water vapor per volume of moist air.
+    AbsoluteHumidity = 6, "absolute humidity", "kg/m³", 0.0, 6.0;
+    /// Enthalpy per mass of dry air.
+    SpecificEnthalpy = 7, "specific enthalpy", "J/kg", -90_000.0, 30_000_000.0;
+    /// Volume per mass of dry air.
+    SpecificVolume = 8, "specific volume", "m³/kg", 0.04, 120.0;
+    /// Mass of moist air per volume.
+    Density = 9, "density", "kg/m³", 0.05, 25.0;
+    /// Isobaric heat capacity per mass of dry air, at constant humidity ratio.
+    SpecificHeat = 10, "specific heat", "J/(kg K)", 0.0, INFINITY;
+    /// p v / (R T) of the mixture.
+    CompressibilityFactor = 11, "compressibility factor", "1", 0.0, INFINITY;
+    /// x_w / x_ws over the stable surface: ice below the melting temperature, liquid above. Over ice it may exceed one.
+    RelativeHumidity = 12, "relative humidity", "1", 0.0, 1.6;
+    /// x_w / x_ws over liquid water, supercooled below the melting temperature (WMO convention).
+    RelativeHumidityOverLiquid = 13, "relative humidity over liquid", "1", 0.0, 1.0;
+    /// W / W_s over the stable surface.
+    DegreeOfSaturation = 14, "degree of saturation", "1", 0.0, 1.6;
+    /// (x_ws − x_w) p over the stable surface.
+    VaporPressureDeficit = 15, "vapor pressure deficit", "Pa", 0.0, INFINITY;
+    /// Saturation pressure of pure water over the stable surface.
+    SaturationPressure = 16, "saturation pressure", "Pa", 0.0, INFINITY;
+    /// x_ws p over the saturation pressure of pure water.
+    EnhancementFactor = 17, "enhancement factor", "1", 0.0, INFINITY;
+    /// Thermodynamic wet bulb (adiabatic saturation), over liquid at or above the melting temperature, over ice below.
+    WetBulb = 18, "wet bulb", "°C", -100.0, 160.0;
+    /// Thermodynamic wet bulb over liquid water, supercooled below the melting temperature.
+    WetBulbOverLiquid = 19, "wet bulb over liquid", "°C", -40.0, 160.0;
+    /// Thermodynamic wet bulb over ice.
+    WetBulbOverIce = 20, "wet bulb over ice", "°C", -100.0, 0.01;
+    /// Temperature of saturation over liquid water at the same pressure and composition.
+    DewPoint = 21, "dew point", "°C", -40.0, 200.0;
+    /// Temperature of saturation over ice at the same pressure and composition.
+    FrostPoint = 22, "frost point", "°C", -100.0, 0.01;
+
+    /// Dry-air mass flow.
+    DryAirFlow = 32, "dry-air mass flow", "kg/s", 0.0, 1.0e6;
+    /// Volume flow at a stated state.
+    VolumeFlow = 33, "volume flow", "m³/s", 0.0, 1.0e6;
+    /// Reference density of a standard volume flow.
+    StandardDensity = 34, "standard density", "kg/m³", 0.5, 2.0;
+    /// Heat flow, positive into the air.
+    HeatFlow = 35, "heat flow", "W", -1.0e12, 1.0e12;
+    /// Flow of liquid water or steam.
+    WaterFlow = 36, "water flow", "kg/s", 0.0, 1.0e6;
+    /// Temperature of liquid water.
+    WaterTemperature = 37, "water temperature", "°C", 0.0, 200.0;
+    /// Specific enthalpy of steam, on the datum of liquid water at the triple point (0 °C for the ideal gas).
+    SteamEnthalpy = 38, "steam enthalpy", "J/kg", 0.0, 4_000_000.0;
+    /// Temperature that a process is to leave.
+    LeavingTemperature = 39, "leaving temperature", "°C", -80.0, 150.0;
+    /// Apparatus dew point of a coil.
+    ApparatusDewPoint = 40, "apparatus dew point", "°C", -40.0, 150.0;
+    /// Bypass factor of a coil.
+    BypassFactor = 41, "bypass factor", "1", 0.0, 1.0;
+    /// Saturation effectiveness of a humidifier.
+    SaturationEffectiveness = 42, "saturation effectiveness", "1", 0.0, 1.0;
+    /// Temperature at which condensate leaves.
+    CondensateTemperature = 43, "condensate temperature", "°C", -40.0, 150.0;
+    /// Elevation above mean sea level, range of the standard atmosphere's lowest layer (ISO 2533).
+    Elevation = 44, "elevation", "m", -5_000.0, 11_000.0;
+    /// Drift of a tower as a fraction of the circulating water.
+    DriftFraction = 45, "drift fraction", "1", 0.0, 0.05;
+    /// Concentration of the circulating water over that of the make-up.
+    CyclesOfConcentration = 46, "cycles of concentration", "1", 1.0, 1_000.0;
+    /// Temperature range of the water in a tower.
+    TowerRange = 47, "tower range", "K", 0.0, 200.0;
+    /// Total water per dry air, vapor and condensate.
+    TotalWater = 48, "total water", "kg/kg", 0.0, 10.0;
+    /// Specific enthalpy that a process leaves, with its condensate.
+    LeavingEnthalpy = 49, "leaving enthalpy", "J/kg", -90_000.0, 30_000_000.0;
+}
+
+impl Quantity {
+    /// Whether the quantity is a property that can be read from a state.
+    #[must_use]
+    pub const fn is_property(self) -> bool {
+        self.code() < PROPERTY_COUNT
+    }
+
+    /// What a value outside the range looks like, where one slip of the unit is common.
+    #[must_use]
+    pub fn likely_slip(self, value: f64) -> &'static str {
+        match self {
+            Self::RelativeHumidity | Self::RelativeHumidityOverLiquid | Self::DegreeOfSaturation
+                if value > 1.03 && value <= 110.0 =>
+            {
+                "; a percentage? a fraction is expected"
+            }
+            Self::HumidityRatio if value > 10.0 => "; grams? kilograms per kilogram of dry air are expected",
+            Self::Pressure if (80.0..=1_100.0).contains(&value) => {
+                "; kilopascals or hectopascals? pascals are expected"
+            }
+            Self::Pressure if (2.0..=32.0).contains(&value) => "; bar, psi or inches of mercury? pascals are expected",
+            Self::DryBulb if (190.0..=425.0).contains(&value) => "; kelvins? degrees Celsius are expected",
+            Self::SpecificEnthalpy => "; kilojoules? joules per kilogram of dry air are expected",
+            _ => "",
+        }
+    }
+}

@@ -1,0 +1,170 @@
+//! What can be wrong, with the quantity, its value and its limits.
+
+use crate::bounds::Quantity;
+
+/// Why a call gives no result. `Copy`, and formats its text only when asked to.
+#[derive(Clone, Copy, Debug, PartialEq, thiserror::Error)]
+#[non_exhaustive]
+pub enum Error {
+    /// A value is NaN or infinite.
+    #[error("{} is not a finite number", .quantity.name())]
+    NotFinite {
+        /// Which input.
+        quantity: Quantity,
+    },
+    /// A value lies outside the declared range of its quantity.
+    #[error("{} {value} {} is outside {min} to {max} {}{}", .quantity.name(), .quantity.unit(), .quantity.unit(), .quantity.likely_slip(*.value))]
+    OutOfRange {
+        /// Which input.
+        quantity: Quantity,
+        /// Its value.
+        value: f64,
+        /// The least value allowed.
+        min: f64,
+        /// The greatest value allowed.
+        max: f64,
+    },
+    /// A value is in its declared range, but no state has it at this dry bulb and pressure.
+    #[error("{} {value} {} has no state here: at this dry bulb and pressure it lies between {min} and {max} {}", .quantity.name(), .quantity.unit(), .quantity.unit())]
+    Unattainable {
+        /// Which input.
+        quantity: Quantity,
+        /// Its value.
+        value: f64,
+        /// The value of dry air here, or of the other end of the attainable range.
+        min: f64,
+        /// The value at saturation, or at the other end.
+        max: f64,
+    },
+    /// The result would hold more vapor than saturation allows; the surplus would condense.
+    #[error("{} {value} {} crosses saturation: at most {max} {} here", .quantity.name(), .quantity.unit(), .quantity.unit())]
+    Supersaturated {
+        /// What was asked for.
+        quantity: Quantity,
+        /// Its value.
+        value: f64,
+        /// Its value at saturation.
+        max: f64,
+    },
+    /// The state is valid, but this property has no meaning there.
+    #[error("{} has no value at this state: {}", .quantity.name(), .reason.text())]
+    NoValue {
+        /// Which property.
+        quantity: Quantity,
+        /// Why.
+        reason: NoValue,
+    },
+    /// Two states of different formulations in one process.
+    #[error("states of different formulations cannot be combined: their enthalpies stand on different datums")]
+    MixedFormulations,
+    /// Two streams at different pressures where one is needed.
+    #[error("states at different pressures need the pressure of the outlet, none was given")]
+    MixedPressures,
+    /// A process on no air at all.
+    #[error("the dry-air mass flow is zero: heat or water would have nothing to go to")]
+    NoFlow,
+    /// A process cannot do what was asked; the value and the limits that bind it.
+    #[error("{} {value} {} cannot be reached by this process: {min} to {max} {}", .quantity.name(), .quantity.unit(), .quantity.unit())]
+    Infeasible {
+        /// What was asked for.
+        quantity: Quantity,
+        /// Its value.
+        value: f64,
+        /// The least that can be reached.
+        min: f64,
+        /// The most that can be reached.
+        max: f64,
+    },
+    /// A selector that names nothing, or nothing that fits here.
+    #[error("selector {code} does not name what is needed here")]
+    UnknownSelector {
+        /// The selector as given.
+        code: i32,
+    },
+}
+
+/// Why a property has no value at a valid state.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Hash)]
+#[non_exhaustive]
+#[repr(i32)]
+pub enum NoValue {
+    /// There is no water vapor.
+    DryAir = 0,
+    /// The saturation pressure exceeds the total pressure: nothing saturates here.
+    AboveBoiling = 1,
+    /// The value would lie below the range of saturation over this surface.
+    BelowSurfaceRange = 2,
+    /// The value would lie above the range of saturation over this surface.
+    AboveSurfaceRange = 3,
+}
+
+impl NoValue {
+    /// The reason in words.
+    #[must_use]
+    pub const fn text(self) -> &'static str {
+        match self {
+            Self::DryAir => "there is no water vapor",
+            Self::AboveBoiling => "the saturation pressure exceeds the total pressure, so that nothing saturates",
+            Self::BelowSurfaceRange => "it would lie below the range of saturation over this surface",
+            Self::AboveSurfaceRange => "it would lie above the range of saturation over this surface",
+        }
+    }
+}
+
+impl Error {
+    /// The stable code, as on the C face: 2xx a value, 3xx no result. Never re-used.
+    #[must_use]
+    pub const fn code(&self) -> i32 {
+        match self {
+            Self::UnknownSelector { .. } => 102,
+            Self::NotFinite { .. } => 201,
+            Self::OutOfRange { .. } => 202,
+            Self::Unattainable { .. } => 203,
+            Self::Supersaturated { .. } => 204,
+            Self::MixedFormulations => 205,
+            Self::MixedPressures => 206,
+            Self::NoFlow => 207,
+            Self::Infeasible { .. } => 301,
+            Self::NoValue { reason, .. } => 310 + *reason as i32,
+        }
+    }
+
+    /// The quantity at fault, where there is one.
+    #[must_use]
+    pub const fn quantity(&self) -> Option<Quantity> {
+        match *self {
+            Self::NotFinite { quantity }
+            | Self::OutOfRange { quantity, .. }
+            | Self::Unattainable { quantity, .. }
+            | Self::Supersaturated { quantity, .. }
+            | Self::Infeasible { quantity, .. }
+            | Self::NoValue { quantity, .. } => Some(quantity),
+            _ => None,
+        }
+    }
+
+    /// The offending value and its limits (value, min, max), where there are any.
+    #[must_use]
+    pub const fn value_and_limits(&self) -> Option<(f64, f64, f64)> {
+        match *self {
+            Self::OutOfRange { value, min, max, .. }
+            | Self::Unattainable { value, min, max, .. }
+            | Self::Infeasible { value, min, max, .. } => Some((value, min, max)),
+            Self::Supersaturated { value, max, .. } => Some((value, 0.0, max)),
+            _ => None,
+        }
+    }
+}
+
+/// `value` if it is finite and within the declared range of its quantity.
+pub(crate) fn checked<S: crate::Scalar>(quantity: Quantity, value: S) -> Result<S, Error> {
+    let (min, max) = quantity.limits();
+    let wide = value.to_f64();
+    if !wide.is_finite() {
+        return Err(Error::NotFinite { quantity });
+    }
+    if !(min <= wide && wide <= max) {
+        return Err(Error::OutOfRange { quantity, value: wide, min, max });
+    }
+    Ok(value)
+}

@@ -1,0 +1,106 @@
+//! The perfect-gas relations of ASHRAE Fundamentals 2021 (SI), chapter 1, with Hyland–Wexler saturation.
+//!
+//! One datum throughout: dry air and liquid water at 0 °C; ice −333.4 + 2.1 t kJ/kg, so that ice sublimes at 2834.4 kJ/kg at 0 °C.
+//! The chapter's wet-bulb equation below freezing rounds this to 2830.
+
+use super::{Gas, Mixture, Saturation};
+use crate::quantity::ZERO_CELSIUS;
+use crate::real::{Real, k};
+use crate::saturation::{Surface, hyland_wexler_ice, hyland_wexler_liquid};
+
+/// Gas constant of dry air, J/(kg K): text to Eq. (1).
+const R_DRY_AIR: f64 = 287.042;
+/// Eq. (26): v = R T (1 + 1.607858 W) / p.
+const VOLUME_OF_WATER: f64 = 1.607858;
+/// Eq. (30): h = 1.006 t + W (2501 + 1.86 t), kJ.
+const CP_DRY_AIR: f64 = 1_006.0;
+const CP_VAPOR: f64 = 1_860.0;
+const H_VAPOR: f64 = 2_501_000.0;
+/// h_w = 4.186 t
+const CP_LIQUID: f64 = 4_186.0;
+/// h_i = −333.4 + 2.1 t
+const H_ICE: f64 = -333_400.0;
+const CP_ICE: f64 = 2_100.0;
+/// Where the two saturation curves cross, °C.
+const MELTING: f64 = 0.01;
+
+#[derive(Clone, Copy, Debug)]
+pub struct IdealGas<R> {
+    celsius: R,
+    kelvins: R,
+}
+
+impl<R: Real> IdealGas<R> {
+    fn vapor_enthalpy(&self) -> R {
+        self.celsius * k(CP_VAPOR) + k(H_VAPOR)
+    }
+
+    /// Of liquid water or ice at this temperature.
+    fn condensed(&self, surface: Surface) -> R {
+        let (liquid, ice) = (self.celsius * k(CP_LIQUID), self.celsius * k(CP_ICE) + k(H_ICE));
+        self.choose(surface, ice, liquid)
+    }
+
+    /// Saturation pressure of pure water and the slope of its logarithm.
+    fn pure(&self, surface: Surface) -> (R, R) {
+        let (liquid, liquid_slope) = hyland_wexler_liquid(self.kelvins);
+        let (ice, ice_slope) = hyland_wexler_ice(self.kelvins);
+        (self.choose(surface, ice, liquid).exp(), self.choose(surface, ice_slope, liquid_slope))
+    }
+
+    fn choose(&self, surface: Surface, ice: R, liquid: R) -> R {
+        match surface {
+            Surface::Liquid => liquid,
+            Surface::Ice => ice,
+            Surface::Stable => R::select(self.celsius.lt(k(MELTING)), ice, liquid),
+        }
+    }
+}
+
+impl<R: Real> Mixture<R> for IdealGas<R> {
+    const MOLAR_MASS_RATIO: f64 = 0.621945;
+
+    #[inline(always)]
+    fn at(celsius: R) -> Self {
+        Self { celsius, kelvins: celsius + k(ZERO_CELSIUS) }
+    }
+
+    #[inline(always)]
+    fn gas(&self, pressure: R, humidity_ratio: R) -> Gas<R> {
+        let dry = self.kelvins * k(R_DRY_AIR) / pressure;
+        Gas {
+            volume: dry * (humidity_ratio * k(VOLUME_OF_WATER) + k(1.0)),
+            enthalpy: self.celsius * k(CP_DRY_AIR) + humidity_ratio * self.vapor_enthalpy(),
+            specific_heat: humidity_ratio * k(CP_VAPOR) + k(CP_DRY_AIR),
+            compressibility: k(1.0),
+            volume_of_water: dry * k(VOLUME_OF_WATER),
+            enthalpy_of_water: self.vapor_enthalpy(),
+        }
+    }
+
+    #[inline(always)]
+    fn saturation(&self, pressure: R, surface: Surface) -> Saturation<R> {
+        let (pure, slope) = self.pure(surface);
+        Saturation {
+            mole_fraction: pure / pressure,
+            humidity_ratio: pure * k(Self::MOLAR_MASS_RATIO) / (pressure - pure),
+            log_slope: slope * pressure / (pressure - pure),
+            condensed_enthalpy: self.condensed(surface),
+        }
+    }
+
+    #[inline(always)]
+    fn pure_saturation_pressure(&self, _pressure: R, surface: Surface) -> R {
+        self.pure(surface).0
+    }
+
+    #[inline(always)]
+    fn melting_temperature(_pressure: R) -> R {
+        k(MELTING)
+    }
+
+    #[inline(always)]
+    fn condensed_enthalpy(celsius: R, _pressure: R, surface: Surface) -> R {
+        Self::at(celsius).condensed(surface)
+    }
+}

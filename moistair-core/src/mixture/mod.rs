@@ -1,0 +1,78 @@
+//! Formulations of moist air: what a mixture of dry air and water vapor is, and what it is in equilibrium with.
+//!
+//! Every property and every solve in `state/` is written once over [`Mixture`].
+
+mod ideal_gas;
+mod real_gas;
+
+pub use ideal_gas::IdealGas;
+pub use real_gas::RealGas;
+
+use crate::real::Real;
+use crate::saturation::Surface;
+
+/// The gas at given temperature, pressure and humidity ratio, per kilogram of dry air.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Gas<R> {
+    /// v, m³/kg
+    pub volume: R,
+    /// h, J/kg
+    pub enthalpy: R,
+    /// ∂h/∂T at constant p and W, J/(kg K)
+    pub specific_heat: R,
+    /// p v / (R T) of the mixture.
+    pub compressibility: R,
+    /// ∂v/∂W at constant T and p, m³/kg
+    pub volume_of_water: R,
+    /// ∂h/∂W at constant T and p, J/kg
+    pub enthalpy_of_water: R,
+}
+
+/// Equilibrium of the gas with a condensed phase at given temperature and pressure.
+#[derive(Clone, Copy, Debug)]
+pub struct Saturation<R> {
+    /// Water mole fraction; not between zero and one where nothing saturates.
+    pub mole_fraction: R,
+    /// Humidity ratio.
+    pub humidity_ratio: R,
+    /// d ln W_s / dT at constant pressure, 1/K.
+    pub log_slope: R,
+    /// Enthalpy of the condensed phase, J/kg.
+    pub condensed_enthalpy: R,
+}
+
+/// A formulation. `Self` holds what depends on temperature alone.
+pub trait Mixture<R: Real>: Copy {
+    /// Molar mass of water over that of dry air.
+    const MOLAR_MASS_RATIO: f64;
+
+    /// At a temperature, °C.
+    fn at(celsius: R) -> Self;
+
+    /// The gas at a pressure [Pa] and humidity ratio.
+    fn gas(&self, pressure: R, humidity_ratio: R) -> Gas<R>;
+
+    /// Equilibrium over a surface at a pressure.
+    fn saturation(&self, pressure: R, surface: Surface) -> Saturation<R>;
+
+    /// Saturation pressure of pure water over a surface; the stable one is chosen at `pressure`.
+    fn pure_saturation_pressure(&self, pressure: R, surface: Surface) -> R;
+
+    /// Temperature at which ice and liquid water coexist under a pressure, °C.
+    fn melting_temperature(pressure: R) -> R;
+
+    /// Enthalpy of ice and of liquid water at a temperature and pressure, J/kg.
+    fn condensed_enthalpy(celsius: R, pressure: R, surface: Surface) -> R;
+
+    /// Humidity ratio of a water mole fraction.
+    #[inline(always)]
+    fn humidity_ratio(mole_fraction: R) -> R {
+        mole_fraction * crate::real::k(Self::MOLAR_MASS_RATIO) / (crate::real::k::<R>(1.0) - mole_fraction)
+    }
+
+    /// Water mole fraction of a humidity ratio.
+    #[inline(always)]
+    fn mole_fraction(humidity_ratio: R) -> R {
+        humidity_ratio / (humidity_ratio + crate::real::k(Self::MOLAR_MASS_RATIO))
+    }
+}

@@ -1,0 +1,216 @@
+//! A state from its dry bulb and any second property.
+
+use crate::basis::{Basis, with_mixture};
+use crate::bounds::Quantity;
+use crate::error::{Error, checked};
+use crate::mixture::{Gas, Mixture};
+use crate::quantity::*;
+use crate::real::{Real, Scalar, k};
+use crate::saturation::Surface;
+
+use super::MoistAir;
+use super::property::{View, saturates};
+
+/// Newton steps for humidity ratio from enthalpy, volume or wet bulb; see the test of this module.
+pub(super) const RATIO_STEPS: usize = 3;
+
+/// A value this close beyond saturation, relative in the humidity ratio, counts as saturated: it is rounding.
+const SATURATION_TOLERANCE: f64 = 1e-9;
+
+/// A property that fixes a state together with dry bulb and pressure, by its own type. Sealed.
+pub trait SecondProperty<S: Scalar>: Copy + sealed::Sealed {
+    /// Which property it is.
+    const QUANTITY: Quantity;
+
+    /// Its value on the unit of [`Quantity::unit`].
+    fn value(self) -> S;
+}
+
+mod sealed {
+    pub trait Sealed {}
+}
+
+macro_rules! second_properties {
+    ($($type:ident.$read:ident: $quantity:ident;)*) => {$(
+        impl<S> sealed::Sealed for $type<S> {}
+        impl<S: Scalar> SecondProperty<S> for $type<S> {
+            const QUANTITY: Quantity = Quantity::$quantity;
+            fn value(self) -> S {
+                self.$read()
+            }
+        }
+    )*};
+}
+
+second_properties! {
+    RelativeHumidity.fraction: RelativeHumidity;
+    RelativeHumidityOverLiquid.fraction: RelativeHumidityOverLiquid;
+    WetBulb.celsius: WetBulb;
+    WetBulbOverLiquid.celsius: WetBulbOverLiquid;
+    WetBulbOverIce.celsius: WetBulbOverIce;
+    DewPoint.celsius: DewPoint;
+    FrostPoint.celsius: FrostPoint;
+    HumidityRatio.kilograms_per_kilogram: HumidityRatio;
+    SpecificHumidity.kilograms_per_kilogram: SpecificHumidity;
+    AbsoluteHumidity.kilograms_per_cubic_meter: AbsoluteHumidity;
+    VaporPressure.pascals: VaporPressure;
+    WaterMoleFraction.fraction: WaterMoleFraction;
+    DegreeOfSaturation.fraction: DegreeOfSaturation;
+    SpecificEnthalpy.joules_per_kilogram: SpecificEnthalpy;
+    SpecificVolume.cubic_meters_per_kilogram: SpecificVolume;
+    Density.kilograms_per_cubic_meter: Density;
+}
+
+impl<S: Scalar> MoistAir<S> {
+    /// A state from dry bulb, any second property by its type, and a basis (a pressure, or pressure and formulation).
+    ///
+    /// Range: dry bulb −80 to 150 °C, 20 to 1100 kPa, water mole fraction to 0.95, vapor up to saturation over liquid water (over
+    /// ice below −40 °C, where no liquid lasts). Vapor supersaturated over ice is a valid state. The dry bulb reads back
+    /// bit for bit. A second property within 1e-9 beyond saturation is taken as saturated.
+    ///
+    /// # Errors
+    /// [`Error::NotFinite`], [`Error::OutOfRange`] for a value outside its declared range, [`Error::Unattainable`] where no state has it.
+    ///
+    /// ```
+    /// use moistair_core::{Length, MoistAir, Pressure, RelativeHumidity, Temperature};
+    /// let site = Pressure::at_elevation(Length::from_meters(1_600.0))?;
+    /// let outdoor = MoistAir::from_dry_bulb(Temperature::from_celsius(34.0), RelativeHumidity::from_percent(38.0), site)?;
+    /// assert!((outdoor.wet_bulb()?.celsius() - 21.98).abs() < 0.1);
+    ///
+    /// // A percentage where a fraction is meant is refused, and the message says so.
+    /// let slip = MoistAir::from_dry_bulb(Temperature::from_celsius(34.0), RelativeHumidity::from_fraction(38.0), site);
+    /// assert!(slip.is_err());
+    /// # Ok::<(), moistair_core::Error>(())
+    /// ```
+    pub fn from_dry_bulb<P: SecondProperty<S>>(
+        dry_bulb: Temperature<S>,
+        second: P,
+        basis: impl Into<Basis<S>>,
+    ) -> Result<Self, Error> {
+        Self::from_dry_bulb_and(dry_bulb, P::QUANTITY, second.value(), basis)
+    }
+
+    /// The same with the second property named by a selector, for callers that choose it at run time.
+    ///
+    /// # Errors
+    /// As [`MoistAir::from_dry_bulb`]; [`Error::UnknownSelector`] for a quantity that does not fix a state.
+    pub fn from_dry_bulb_and(
+        dry_bulb: Temperature<S>,
+        quantity: Quantity,
+        value: S,
+        basis: impl Into<Basis<S>>,
+    ) -> Result<Self, Error> {
+        let basis = basis.into();
+        let celsius = checked(Quantity::DryBulb, dry_bulb.celsius())?;
+        let pressure = checked(Quantity::Pressure, basis.pressure().pascals())?;
+        let value = checked(quantity, value)?;
+        with_mixture!(basis.formulation(), S, M => {
+            let mixture = M::<S>::at(celsius);
+            let limit = greatest_humidity_ratio(&mixture, celsius, pressure);
+            let ratio = humidity_ratio(&mixture, pressure, quantity, value, limit)
+                .ok_or(Error::UnknownSelector { code: quantity.code() })?;
+            let inside = |humidity_ratio: S| {
+                let gas = mixture.gas(pressure, humidity_ratio);
+                Self { celsius, pascals: pressure, humidity_ratio, gas, formulation: basis.formulation() }
+            };
+            match settle(ratio, limit) {
+                Some(humidity_ratio) => Ok(inside(humidity_ratio)),
+                None => {
+                    let end = |humidity_ratio: S, missing: f64| {
+                        let view = View { mixture, celsius, pressure, humidity_ratio, gas: mixture.gas(pressure, humidity_ratio) };
+                        view.value(quantity).map_or(missing, Scalar::to_f64)
+                    };
+                    let (least, most) = quantity.limits();
+                    let (a, b) = (end(k(0.0), least), end(limit, most));
+                    Err(Error::Unattainable { quantity, value: value.to_f64(), min: a.min(b), max: a.max(b) })
+                }
+            }
+        })
+    }
+}
+
+/// The ratio if it lies between dry and saturated, snapped to the ends when rounding carried it past them.
+fn settle<S: Scalar>(ratio: S, limit: S) -> Option<S> {
+    // f32 cannot resolve the tolerance; a few of its own units then stand for it.
+    let tolerance = limit * k::<S>(SATURATION_TOLERANCE).at_least(S::epsilon() * k(8.0));
+    if !((-tolerance).le(ratio) && ratio.le(limit + tolerance)) {
+        return None;
+    }
+    Some(ratio.at_least(k(0.0)).at_most(limit))
+}
+
+/// The humidity ratio at saturation over liquid (over ice below −40 °C), or the greatest declared where nothing saturates.
+pub(super) fn greatest_humidity_ratio<M: Mixture<S>, S: Scalar>(mixture: &M, celsius: S, pressure: S) -> S {
+    let surface = if celsius.lt(k(Quantity::DewPoint.limits().0)) { Surface::Ice } else { Surface::Liquid };
+    let saturation = mixture.saturation(pressure, surface);
+    let declared = k(Quantity::HumidityRatio.limits().1);
+    S::select(saturates(saturation.mole_fraction), saturation.humidity_ratio, declared).at_most(declared)
+}
+
+/// The humidity ratio that goes with a second property; may lie outside what the air can hold. `None` if the quantity does not
+/// fix a state.
+pub(super) fn humidity_ratio<M: Mixture<R>, R: Real>(
+    mixture: &M,
+    pressure: R,
+    quantity: Quantity,
+    value: R,
+    limit: R,
+) -> Option<R> {
+    let one = k::<R>(1.0);
+    let of_saturation = |surface| mixture.saturation(pressure, surface).mole_fraction;
+    let at_temperature = |surface| M::at(value).saturation(pressure, surface).mole_fraction;
+    let wet_bulb = |surface| {
+        let wet = M::at(value);
+        let saturation = wet.saturation(pressure, surface);
+        let saturated = wet.gas(pressure, saturation.humidity_ratio);
+        let condensed = saturation.condensed_enthalpy;
+        let target = saturated.enthalpy - saturation.humidity_ratio * condensed;
+        search(mixture, pressure, limit, move |w, gas| {
+            (gas.enthalpy - w * condensed - target, gas.enthalpy_of_water - condensed)
+        })
+    };
+    match quantity {
+        Quantity::HumidityRatio => Some(value),
+        Quantity::SpecificHumidity => Some(value / (one - value)),
+        Quantity::WaterMoleFraction => Some(M::humidity_ratio(value)),
+        Quantity::VaporPressure => Some(M::humidity_ratio(value / pressure)),
+        Quantity::RelativeHumidity => Some(M::humidity_ratio(value * of_saturation(Surface::Stable))),
+        Quantity::RelativeHumidityOverLiquid => Some(M::humidity_ratio(value * of_saturation(Surface::Liquid))),
+        Quantity::DegreeOfSaturation => Some(value * M::humidity_ratio(of_saturation(Surface::Stable))),
+        Quantity::DewPoint => Some(M::humidity_ratio(at_temperature(Surface::Liquid))),
+        Quantity::FrostPoint => Some(M::humidity_ratio(at_temperature(Surface::Ice))),
+        Quantity::WetBulb => wet_bulb(Surface::Stable),
+        Quantity::WetBulbOverLiquid => wet_bulb(Surface::Liquid),
+        Quantity::WetBulbOverIce => wet_bulb(Surface::Ice),
+        Quantity::SpecificEnthalpy => {
+            search(mixture, pressure, limit, |_, gas| (gas.enthalpy - value, gas.enthalpy_of_water))
+        }
+        Quantity::SpecificVolume => {
+            search(mixture, pressure, limit, |_, gas| (gas.volume - value, gas.volume_of_water))
+        }
+        Quantity::Density => {
+            search(mixture, pressure, limit, |w, gas| (value * gas.volume - one - w, value * gas.volume_of_water - one))
+        }
+        Quantity::AbsoluteHumidity => {
+            search(mixture, pressure, limit, |w, gas| (value * gas.volume - w, value * gas.volume_of_water - one))
+        }
+        _ => None,
+    }
+}
+
+/// The root in W of a function that is nearly linear between dry and saturated: the chord, then Newton, kept near the interval.
+fn search<M: Mixture<R>, R: Real>(mixture: &M, pressure: R, limit: R, f: impl Fn(R, &Gas<R>) -> (R, R)) -> Option<R> {
+    let at = |w| f(w, &mixture.gas(pressure, w));
+    let margin = limit * k(0.01);
+    let near = |w: R| w.at_least(-margin).at_most(limit + margin);
+    let (dry, (saturated, _)) = (at(k(0.0)), at(limit));
+    // Over a vanishing interval the chord is noise; the slope at the dry end serves.
+    let chord = (saturated - dry.0) / limit;
+    let slope = R::select(limit.lt(k(1e-6)), dry.1, chord);
+    let mut w = near(-(dry.0 / slope));
+    for _ in 0..RATIO_STEPS {
+        let (value, slope) = at(w);
+        w = near(w - value / slope);
+    }
+    Some(w)
+}

@@ -1,0 +1,314 @@
+//! What can be read from a state: the solves, written once over mixture and arithmetic, and the checked reader.
+
+use crate::basis::with_mixture;
+use crate::bounds::Quantity;
+use crate::error::{Error, NoValue};
+use crate::mixture::{Gas, Mixture};
+use crate::quantity::ZERO_CELSIUS;
+use crate::real::{Mask, Real, Scalar, k};
+use crate::saturation::{Magnus, Surface};
+
+use super::MoistAir;
+
+/// Newton steps, constant so that the work is; the tests of this module show each count to be enough and none to be idle.
+pub(super) const DEW_POINT_STEPS: usize = 4;
+pub(super) const WET_BULB_STEPS: usize = 5;
+const WET_BULB_HALVINGS: usize = 8;
+
+/// Temperature, °C, at which a water mole fraction saturates over a surface.
+///
+/// ln x_ws is nearly linear in 1/T: Newton in that variable.
+pub(super) fn dew_point<M: Mixture<R>, R: Real, const STEPS: usize>(
+    mole_fraction: R,
+    pressure: R,
+    surface: Surface,
+) -> R {
+    let target = mole_fraction.ln();
+    let mut kelvins = Magnus::over(surface).temperature(target + pressure.ln()) + k(ZERO_CELSIUS);
+    for _ in 0..STEPS {
+        let saturation = M::at(kelvins - k(ZERO_CELSIUS)).saturation(pressure, surface);
+        // d ln x / dT = (1 − x) d ln W / dT
+        let slope = (k::<R>(1.0) - saturation.mole_fraction) * saturation.log_slope;
+        let error = saturation.mole_fraction.ln() - target;
+        kelvins = kelvins / (k::<R>(1.0) + error / (slope * kelvins));
+    }
+    kelvins - k(ZERO_CELSIUS)
+}
+
+/// Thermodynamic wet bulb, °C, over liquid or ice: x with h + (W_s(x) − W) h_c(x) = h_s(x)
+/// (ASHRAE Fundamentals 2021 ch. 1, Eq. (33), without its approximations).
+pub(super) fn wet_bulb<M: Mixture<R>, R: Real, const STEPS: usize>(
+    celsius: R,
+    pressure: R,
+    humidity_ratio: R,
+    enthalpy: R,
+    surface: Surface,
+) -> R {
+    let mut x = wet_bulb_start(celsius, pressure, humidity_ratio, surface);
+    for _ in 0..STEPS {
+        let (deficit, slope) = saturation_deficit::<M, R>(x, pressure, humidity_ratio, enthalpy, surface);
+        x = x - deficit / slope;
+    }
+    x
+}
+
+/// h + (W_s − W) h_c − h_s at a trial temperature x, and its slope in x: falling and concave, positive left of the wet bulb.
+pub(super) fn saturation_deficit<M: Mixture<R>, R: Real>(
+    x: R,
+    pressure: R,
+    humidity_ratio: R,
+    enthalpy: R,
+    surface: Surface,
+) -> (R, R) {
+    let mixture = M::at(x);
+    let saturation = mixture.saturation(pressure, surface);
+    let saturated = mixture.gas(pressure, saturation.humidity_ratio);
+    let missing = saturation.humidity_ratio - humidity_ratio;
+    let ratio_slope = saturation.humidity_ratio * saturation.log_slope;
+    (
+        enthalpy + missing * saturation.condensed_enthalpy - saturated.enthalpy,
+        ratio_slope * (saturation.condensed_enthalpy - saturated.enthalpy_of_water)
+            + missing * k(condensed_heat_capacity(surface))
+            - saturated.specific_heat,
+    )
+}
+
+/// Near enough for a slope, J/(kg K).
+const fn condensed_heat_capacity(surface: Surface) -> f64 {
+    match surface {
+        Surface::Ice => 2_100.0,
+        Surface::Liquid | Surface::Stable => 4_200.0,
+    }
+}
+
+/// A wet bulb within 1.5 K on the warm side, by halving the interval of possible ones under rounded perfect-gas constants.
+fn wet_bulb_start<R: Real>(celsius: R, pressure: R, humidity_ratio: R, surface: Surface) -> R {
+    let curve = Magnus::over(surface);
+    let (coldest, latent_at_zero, heat_capacity) = match surface {
+        Surface::Ice => (-105.0, 2_834_000.0, 2_100.0),
+        Surface::Liquid | Surface::Stable => (-45.0, 2_501_000.0, 4_200.0),
+    };
+    let (mut cold, mut warm) = (k::<R>(coldest), celsius + k(2.0));
+    for _ in 0..WET_BULB_HALVINGS {
+        let x = (cold + warm) * k(0.5);
+        let saturated = curve.pressure(x);
+        let latent = k::<R>(latent_at_zero) + x * k(1_860.0 - heat_capacity);
+        let supply = humidity_ratio * (latent + (celsius - x) * k(1_860.0)) + (celsius - x) * k(1_006.0);
+        // The wet bulb is warmer if the air at x saturates with less than is supplied.
+        let warmer = (saturated * latent * k(0.622)).lt((pressure - saturated) * supply);
+        cold = R::select(warmer, x, cold);
+        warm = R::select(warmer, warm, x);
+    }
+    warm
+}
+
+/// The wet bulb over the stable surface: liquid where that one is at or above the melting temperature, else ice. Where
+/// both exist, near 0 °C, this is the rule; the value steps by 0.3 to 0.4 K where the choice changes.
+pub(super) fn stable_wet_bulb<M: Mixture<R>, R: Real>(celsius: R, pressure: R, humidity_ratio: R, enthalpy: R) -> R {
+    let melting = M::melting_temperature(pressure);
+    let (at_melting, _) = saturation_deficit::<M, R>(melting, pressure, humidity_ratio, enthalpy, Surface::Liquid);
+    let over = |surface| wet_bulb::<M, R, WET_BULB_STEPS>(celsius, pressure, humidity_ratio, enthalpy, surface);
+    R::select(k::<R>(0.0).le(at_melting), over(Surface::Liquid).at_least(melting), over(Surface::Ice).at_most(melting))
+}
+
+/// Whether a saturation exists in the gas phase.
+pub(super) fn saturates<R: Real>(mole_fraction: R) -> R::Mask {
+    k::<R>(0.0).lt(mole_fraction).and(mole_fraction.lt(k(1.0)))
+}
+
+/// A state as its numbers, with the temperature functions of its mixture at hand.
+pub(super) struct View<M, S> {
+    pub mixture: M,
+    pub celsius: S,
+    pub pressure: S,
+    pub humidity_ratio: S,
+    pub gas: Gas<S>,
+}
+
+impl<S: Scalar> MoistAir<S> {
+    /// A property by its selector, on the units of [`Quantity::unit`].
+    ///
+    /// # Errors
+    /// [`Error::NoValue`] where the property has no meaning at this state; [`Error::UnknownSelector`] if the quantity is not a
+    /// property of a state.
+    ///
+    /// ```
+    /// # use moistair_core::*;
+    /// let air = MoistAir::from_dry_bulb(
+    ///     Temperature::from_celsius(20.0), HumidityRatio::from_grams_per_kilogram(0.0), Pressure::from_kilopascals(100.0))?;
+    /// assert_eq!(air.value(Quantity::VaporPressure)?, 0.0);
+    /// assert!(air.value(Quantity::DewPoint).is_err()); // dry air has none; the state is valid all the same
+    /// # Ok::<(), Error>(())
+    /// ```
+    pub fn value(&self, quantity: Quantity) -> Result<S, Error> {
+        with_mixture!(self.formulation, S, M => self.view::<M<S>>().value(quantity))
+    }
+
+    /// Many properties at once: calls `take` for each with its value or the reason why there is none.
+    pub fn values(
+        &self,
+        quantities: impl IntoIterator<Item = Quantity>,
+        mut take: impl FnMut(Quantity, Result<S, Error>),
+    ) {
+        with_mixture!(self.formulation, S, M => {
+            let view = self.view::<M<S>>();
+            for quantity in quantities {
+                take(quantity, view.value(quantity));
+            }
+        });
+    }
+
+    fn view<M: Mixture<S>>(&self) -> View<M, S> {
+        View {
+            mixture: M::at(self.celsius),
+            celsius: self.celsius,
+            pressure: self.pascals,
+            humidity_ratio: self.humidity_ratio,
+            gas: self.gas,
+        }
+    }
+}
+
+impl<M: Mixture<S>, S: Scalar> View<M, S> {
+    pub fn mole_fraction(&self) -> S {
+        M::mole_fraction(self.humidity_ratio)
+    }
+
+    pub fn value(&self, quantity: Quantity) -> Result<S, Error> {
+        let (one, w) = (k::<S>(1.0), self.humidity_ratio);
+        Ok(match quantity {
+            Quantity::DryBulb => self.celsius,
+            Quantity::Pressure => self.pressure,
+            Quantity::HumidityRatio => w,
+            Quantity::WaterMoleFraction => self.mole_fraction(),
+            Quantity::VaporPressure => self.mole_fraction() * self.pressure,
+            Quantity::SpecificHumidity => w / (one + w),
+            Quantity::AbsoluteHumidity => w / self.gas.volume,
+            Quantity::SpecificEnthalpy => self.gas.enthalpy,
+            Quantity::SpecificVolume => self.gas.volume,
+            Quantity::Density => (one + w) / self.gas.volume,
+            Quantity::SpecificHeat => self.gas.specific_heat,
+            Quantity::CompressibilityFactor => self.gas.compressibility,
+            Quantity::RelativeHumidity => self.mole_fraction() / self.saturation(quantity, Surface::Stable)?,
+            Quantity::RelativeHumidityOverLiquid => {
+                self.mole_fraction() / self.saturation(quantity, Surface::Liquid)?
+            }
+            Quantity::DegreeOfSaturation => w / M::humidity_ratio(self.saturation(quantity, Surface::Stable)?),
+            Quantity::VaporPressureDeficit => {
+                (self.saturation(quantity, Surface::Stable)? - self.mole_fraction()) * self.pressure
+            }
+            Quantity::SaturationPressure => self.mixture.pure_saturation_pressure(self.pressure, Surface::Stable),
+            Quantity::EnhancementFactor => {
+                self.saturation(quantity, Surface::Stable)? * self.pressure
+                    / self.mixture.pure_saturation_pressure(self.pressure, Surface::Stable)
+            }
+            Quantity::WetBulb => {
+                self.within(quantity, stable_wet_bulb::<M, S>(self.celsius, self.pressure, w, self.gas.enthalpy))?
+            }
+            Quantity::WetBulbOverLiquid => self.wet_bulb_over(quantity, Surface::Liquid)?,
+            Quantity::WetBulbOverIce => self.wet_bulb_over(quantity, Surface::Ice)?,
+            Quantity::DewPoint => self.saturation_temperature(quantity, Surface::Liquid)?,
+            Quantity::FrostPoint => self.saturation_temperature(quantity, Surface::Ice)?,
+            _ => return Err(Error::UnknownSelector { code: quantity.code() }),
+        })
+    }
+
+    /// Saturation mole fraction at this temperature and pressure.
+    fn saturation(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
+        let no_value = |reason| Err(Error::NoValue { quantity, reason });
+        if surface == Surface::Liquid && self.celsius.lt(k(Quantity::DewPoint.limits().0)) {
+            return no_value(NoValue::BelowSurfaceRange);
+        }
+        let mole_fraction = self.mixture.saturation(self.pressure, surface).mole_fraction;
+        if saturates(mole_fraction) { Ok(mole_fraction) } else { no_value(NoValue::AboveBoiling) }
+    }
+
+    fn wet_bulb_over(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
+        let value = wet_bulb::<M, S, WET_BULB_STEPS>(
+            self.celsius,
+            self.pressure,
+            self.humidity_ratio,
+            self.gas.enthalpy,
+            surface,
+        );
+        self.within_surface(quantity, value, surface)
+    }
+
+    fn saturation_temperature(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
+        if !k::<S>(0.0).lt(self.humidity_ratio) {
+            return Err(Error::NoValue { quantity, reason: NoValue::DryAir });
+        }
+        let value = dew_point::<M, S, DEW_POINT_STEPS>(self.mole_fraction(), self.pressure, surface);
+        self.within_surface(quantity, value, surface)
+    }
+
+    fn within_surface(&self, quantity: Quantity, value: S, surface: Surface) -> Result<S, Error> {
+        if surface == Surface::Ice && M::melting_temperature(self.pressure).lt(value) {
+            return Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange });
+        }
+        self.within(quantity, value)
+    }
+
+    /// The value, if it lies in the range of its quantity.
+    fn within(&self, quantity: Quantity, value: S) -> Result<S, Error> {
+        let (min, max) = quantity.limits();
+        let wide = value.to_f64();
+        if min <= wide && wide <= max {
+            Ok(value)
+        } else if wide > max {
+            Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange })
+        } else {
+            Err(Error::NoValue { quantity, reason: NoValue::BelowSurfaceRange })
+        }
+    }
+}
+
+/// Declares the typed readers.
+macro_rules! readers {
+    ($($(#[$doc:meta])* $method:ident -> $type:ident::$from:ident, $quantity:ident;)*) => {
+        impl<S: Scalar> MoistAir<S> {$(
+            $(#[$doc])*
+            ///
+            /// # Errors
+            /// [`Error::NoValue`] with the reason where it has no meaning at this state.
+            pub fn $method(&self) -> Result<crate::quantity::$type<S>, Error> {
+                self.value(Quantity::$quantity).map(crate::quantity::$type::$from)
+            }
+        )*}
+    };
+}
+
+readers! {
+    /// Relative humidity x_w / x_ws over the stable surface (ice below the melting temperature, liquid above). Above one
+    /// where vapor is supersaturated over ice.
+    relative_humidity -> RelativeHumidity::from_fraction, RelativeHumidity;
+    /// Relative humidity x_w / x_ws over liquid water (down to −40 °C), the convention of WMO-No. 8.
+    relative_humidity_over_liquid -> RelativeHumidityOverLiquid::from_fraction, RelativeHumidityOverLiquid;
+    /// Degree of saturation W / W_s over the stable surface.
+    degree_of_saturation -> DegreeOfSaturation::from_fraction, DegreeOfSaturation;
+    /// Vapor pressure deficit (x_ws − x_w) p over the stable surface; negative where supersaturated over ice.
+    vapor_pressure_deficit -> VaporPressure::from_pascals, VaporPressureDeficit;
+    /// Saturation pressure of pure water over the stable surface.
+    saturation_pressure -> VaporPressure::from_pascals, SaturationPressure;
+    /// Thermodynamic wet bulb (adiabatic saturation) over the stable surface: over liquid where that wet bulb is at or above the
+    /// melting temperature, over ice otherwise. Where the choice changes the value steps by 0.3 to 0.4 K.
+    wet_bulb -> WetBulb::from_celsius, WetBulb;
+    /// Thermodynamic wet bulb over liquid water, supercooled below the melting temperature.
+    wet_bulb_over_liquid -> WetBulbOverLiquid::from_celsius, WetBulbOverLiquid;
+    /// Thermodynamic wet bulb over ice.
+    wet_bulb_over_ice -> WetBulbOverIce::from_celsius, WetBulbOverIce;
+    /// Dew point: always over liquid water, −40 °C and above.
+    dew_point -> DewPoint::from_celsius, DewPoint;
+    /// Frost point: always over ice, −100 °C to the melting temperature.
+    frost_point -> FrostPoint::from_celsius, FrostPoint;
+}
+
+impl<S: Scalar> MoistAir<S> {
+    /// Enhancement factor: x_ws p over the saturation pressure of pure water, stable surface; 1 for the ideal gas.
+    ///
+    /// # Errors
+    /// [`Error::NoValue`] above the boiling temperature.
+    pub fn enhancement_factor(&self) -> Result<S, Error> {
+        self.value(Quantity::EnhancementFactor)
+    }
+}

@@ -1,0 +1,122 @@
+//! Liquid water: IAPWS R6-95(2018) at given temperature and pressure, supercooled and superheated included.
+
+use super::{water, water_vapor};
+use crate::quantity::ZERO_CELSIUS;
+use crate::real::{Real, k, polynomial};
+
+/// Liquid water is evaluated between these, °C; outside, at the nearer end.
+pub const RANGE: (f64, f64) = (-45.0, 205.0);
+
+/// R6-95 has no liquid below about −39.5 °C at atmospheric pressure (its stability limit); from here on down, °C, the
+/// liquid is continued with a constant heat capacity.
+const STABILITY_LIMIT: f64 = -37.0;
+/// Of R6-95 at −37 °C and 101 325 Pa, J/(kg K); a test computes it again.
+const HEAT_CAPACITY_AT_LIMIT: f64 = 5_707.6;
+
+/// Newton steps for the density. See the test of this module.
+const DENSITY_STEPS: usize = 2;
+
+/// A condensed phase per kilogram: Gibbs energy and enthalpy [J/kg], volume [m³/kg].
+#[derive(Clone, Copy, Debug)]
+pub struct Condensed<R> {
+    pub gibbs: R,
+    pub enthalpy: R,
+    pub volume: R,
+}
+
+/// Liquid water at `celsius`, `pascals`.
+pub fn at<R: Real>(celsius: R, pascals: R) -> Condensed<R> {
+    at_after::<R, DENSITY_STEPS>(celsius, pascals)
+}
+
+fn at_after<R: Real, const STEPS: usize>(celsius: R, pascals: R) -> Condensed<R> {
+    let celsius = celsius.at_least(k(RANGE.0)).at_most(k(RANGE.1));
+    let within = celsius.at_least(k(STABILITY_LIMIT));
+    colder(equation::<R, STEPS>(within, pascals), within, celsius)
+}
+
+/// R6-95 itself.
+fn equation<R: Real, const STEPS: usize>(celsius: R, pascals: R) -> Condensed<R> {
+    let kelvins = celsius + k(ZERO_CELSIUS);
+    let rt = kelvins * k(water::GAS_CONSTANT);
+    let tau = k::<R>(water::CRITICAL_TEMPERATURE) / kelvins;
+    let mut delta = density_start(celsius, pascals);
+    for _ in 0..STEPS {
+        // p = ρ R T (1 + δφʳ_δ) and its slope in density: R6-95 Table 3.
+        let residual = water::residual(delta, tau);
+        let pressure = delta * rt * (residual.density_first + k(1.0)) * k(water::CRITICAL_DENSITY);
+        let slope =
+            rt * (residual.density_first * k(2.0) + residual.density_second + k(1.0)) * k(water::CRITICAL_DENSITY);
+        delta = delta - (pressure - pascals) / slope;
+    }
+    let residual = water::residual(delta, tau);
+    let ideal = water_vapor::ideal(kelvins);
+    let volume = k::<R>(1.0) / (delta * k(water::CRITICAL_DENSITY));
+    let helmholtz = rt * (delta.ln() + ideal.value + residual.value);
+    let energy = rt * (ideal.first + residual.temperature_first);
+    // With p for ρRT(1 + δφʳ_δ), the Gibbs energy is stationary in what is left of the error of density.
+    Condensed { gibbs: helmholtz + pascals * volume, enthalpy: energy + pascals * volume, volume }
+}
+
+/// Continues below [`STABILITY_LIMIT`] with a constant heat capacity and volume.
+fn colder<R: Real>(at_limit: Condensed<R>, limit: R, celsius: R) -> Condensed<R> {
+    let difference = celsius - limit;
+    let (kelvins, limit) = (celsius + k(ZERO_CELSIUS), limit + k(ZERO_CELSIUS));
+    let entropy = (at_limit.enthalpy - at_limit.gibbs) / limit;
+    let heat_capacity = k::<R>(HEAT_CAPACITY_AT_LIMIT);
+    Condensed {
+        gibbs: at_limit.gibbs - entropy * difference + heat_capacity * (difference - kelvins * (kelvins / limit).ln()),
+        enthalpy: at_limit.enthalpy + heat_capacity * difference,
+        volume: at_limit.volume,
+    }
+}
+
+/// δ near 0.1 MPa, within 5e-5, by a polynomial in √(t + 41 °C) that this project fitted to R6-95 itself (the root follows
+/// the density into the stability limit); a mean compressibility does for the pressure.
+fn density_start<R: Real>(celsius: R, pascals: R) -> R {
+    const FIT: [f64; 8] =
+        [3.0846269, -0.13559452, -0.2274285, -0.032949177, -0.022421427, 0.0078682654, 0.0040252234, -0.015242695];
+    let root = (celsius * k(0.01) + k(0.41)).sqrt();
+    polynomial((root - k(0.8842193570679061)) / k(0.6842193570679062), FIT)
+        * ((pascals - k(101_325.0)) * k(5e-10) + k(1.0))
+}
+
+#[cfg(test)]
+mod probe {
+    #[test]
+    fn print_density() {
+        for i in 0..=250 {
+            let t = -45.0 + i as f64;
+            let c = super::at_after::<f64, 14>(t, 101325.0);
+            std::println!("FIT {t} {:.15}", 1.0 / c.volume / 322.0);
+        }
+        for (t, dt) in [(-37.0, 0.01), (-36.0, 0.01), (-35.0, 0.01), (-30.0, 0.01), (0.0, 0.01)] {
+            let h = |t| super::equation::<f64, 20>(t, 101325.0).enthalpy;
+            std::println!("CP {t} {}", (h(t + dt) - h(t - dt)) / (2.0 * dt));
+        }
+        let (mut wg, mut wv) = ([0.0f64; 6], [0.0f64; 6]);
+        for i in 0..=242 {
+            for p in [20e3, 101325.0, 1.1e6, 1.6e6] {
+                let t = -37.0 + i as f64;
+                let e = super::equation::<f64, 20>(t, p);
+                let c = [
+                    super::equation::<f64, 0>(t, p),
+                    super::equation::<f64, 1>(t, p),
+                    super::equation::<f64, 2>(t, p),
+                    super::equation::<f64, 3>(t, p),
+                    super::equation::<f64, 4>(t, p),
+                ];
+                for k in 0..5 {
+                    wg[k] = wg[k].max((c[k].gibbs - e.gibbs).abs() / (461.5 * (t + 273.15)));
+                    wv[k] = wv[k].max((c[k].enthalpy - e.enthalpy).abs());
+                }
+            }
+        }
+        std::println!("worst g/RT {wg:?} h {wv:?}");
+        let c = super::at_after::<f64, 14>(26.85, 101325.0);
+        std::println!("{c:?}");
+        for t in [-20.0f64, -70.0, 0.0] {
+            std::println!("{:?}", super::super::ice::at(t, 101325.0));
+        }
+    }
+}

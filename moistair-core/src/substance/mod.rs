@@ -1,0 +1,124 @@
+//! The pure substances, each from its own published equation.
+//!
+//! Water and dry air are published as Helmholtz energies `f(ρ, T) = R T (ln δ + φ°(τ) + φʳ(δ, τ))` with reduced density δ and
+//! reduced inverse temperature τ. Functions of temperature alone come as a [`Jet`], so that the mixture can form
+//! energies and heat capacities; the residual of a gas comes as the coefficients of its expansion in powers of density.
+
+pub mod dry_air;
+pub mod ice;
+pub mod liquid_water;
+pub mod water;
+pub mod water_vapor;
+
+use crate::real::{Real, k};
+
+/// A function of temperature with its first two derivatives in the reduced form that Helmholtz equations use:
+/// `f`, `τ ∂f/∂τ`, `τ² ∂²f/∂τ²` (any τ ∝ 1/T gives the same).
+#[derive(Clone, Copy, Debug)]
+pub struct Jet<R> {
+    pub value: R,
+    pub first: R,
+    pub second: R,
+}
+
+impl<R: Real> Jet<R> {
+    pub fn zero() -> Self {
+        Self { value: k(0.0), first: k(0.0), second: k(0.0) }
+    }
+
+    /// `n τᵗ` for a given `τᵗ`.
+    pub fn power(tau_to_t: R, t: f64, n: f64) -> Self {
+        let value = tau_to_t * k(n);
+        let first = value * k(t);
+        Self { value, first, second: first * k(t - 1.0) }
+    }
+
+    /// `n ln(1 − e^{−γτ})`: a harmonic (Einstein) oscillator.
+    pub fn oscillator(tau: R, n: f64, gamma: f64) -> Self {
+        let x = tau * k(gamma);
+        let decay = (-x).exp();
+        let rest = k::<R>(1.0) - decay;
+        let occupation = decay / rest;
+        Self { value: rest.ln() * k(n), first: x * occupation * k(n), second: -(x * x * occupation / rest) * k(n) }
+    }
+
+    pub fn plus(self, other: Self) -> Self {
+        Self { value: self.value + other.value, first: self.first + other.first, second: self.second + other.second }
+    }
+
+    pub fn times(self, factor: R) -> Self {
+        Self { value: self.value * factor, first: self.first * factor, second: self.second * factor }
+    }
+}
+
+/// One term `n δᵈ τᵗ exp(−δᶜ)` of a residual Helmholtz energy (no exponential when `c` is zero).
+#[derive(Clone, Copy, Debug)]
+pub struct Term {
+    pub c: u32,
+    pub d: u32,
+    pub t: f64,
+    pub n: f64,
+}
+
+impl Term {
+    pub const fn new(c: u32, d: u32, t: f64, n: f64) -> Self {
+        Self { c, d, t, n }
+    }
+
+    /// Coefficient of `δᵒʳᵈᵉʳ` in `δᵈ exp(−δᶜ) = Σ (−1)ʲ δᵈ⁺ᶜʲ / j!`.
+    const fn weight(self, order: u32) -> f64 {
+        if order < self.d || (self.c == 0 && order != self.d) {
+            return 0.0;
+        }
+        if order == self.d {
+            return 1.0;
+        }
+        if (order - self.d) % self.c != 0 {
+            return 0.0;
+        }
+        let count = (order - self.d) / self.c;
+        let mut weight = 1.0;
+        let mut j = 1;
+        while j <= count {
+            weight /= -(j as f64);
+            j += 1;
+        }
+        weight
+    }
+
+    /// The weights of orders 1 to `N`.
+    #[allow(clippy::indexing_slicing, reason = "evaluated at compile time")]
+    pub const fn weights<const N: usize, const L: usize>(terms: [Self; L]) -> [[f64; N]; L] {
+        let mut table = [[0.0; N]; L];
+        let mut i = 0;
+        while i < L {
+            let mut order = 0;
+            while order < N {
+                table[i][order] = terms[i].weight(order as u32 + 1);
+                order += 1;
+            }
+            i += 1;
+        }
+        table
+    }
+}
+
+/// The residual as `Σₖ aₖ(τ) δᵏ`, k = 1 … N: the virial expansion of its Helmholtz energy.
+pub fn density_series<R: Real, const N: usize, const L: usize>(
+    terms: &[Term; L],
+    weights: &[[f64; N]; L],
+    tau: R,
+) -> [Jet<R>; N] {
+    let ln_tau = tau.ln();
+    let mut series = [Jet::zero(); N];
+    for (term, weights) in terms.iter().zip(weights) {
+        if weights.iter().all(|weight| weight.to_bits() == 0) {
+            continue; // a term of higher order only; decided by the table, never by data
+        }
+        let jet = Jet::power((ln_tau * k(term.t)).exp(), term.t, term.n);
+        for (sum, weight) in series.iter_mut().zip(weights) {
+            *sum = sum.plus(jet.times(k(*weight)));
+        }
+    }
+    series
+}

@@ -1,0 +1,38 @@
+//! Water vapor: IAPWS R6-95(2018), ideal-gas part in full, residual expanded in powers of density.
+
+use super::{Jet, Term, density_series, water};
+use crate::real::{Real, k};
+
+pub use water::{CRITICAL_DENSITY as REDUCING_DENSITY, GAS_CONSTANT, MOLAR_MASS};
+
+/// Orders of density kept. Up to ρ⁴ and ρ⁶ are felt (ρ⁶: 2e-9 of the pressure of saturated steam at 20 °C, 2e-5 at
+/// 100 °C); ρ⁵ stays below 1e-9 and is carried because it costs nothing.
+pub const ORDERS: usize = 6;
+
+const WEIGHTS: [[f64; ORDERS]; 51] = Term::weights(water::TERMS);
+
+/// n°₄ to n°₈ and γ°₄ to γ°₈ of R6-95 Table 1.
+const OSCILLATORS: [(f64, f64); 5] = [
+    (0.012436, 1.28728967),
+    (0.97315, 3.53734222),
+    (1.27950, 7.74073708),
+    (0.96956, 9.24437796),
+    (0.24873, 27.5075105),
+];
+
+/// The part of φ° that depends on temperature: R6-95 Eq. (5) less ln δ.
+pub fn ideal<R: Real>(kelvins: R) -> Jet<R> {
+    const N: [f64; 3] = [-8.3204464837497, 6.6832105275932, 3.00632];
+    let tau = k::<R>(water::CRITICAL_TEMPERATURE) / kelvins;
+    let polynomial = Jet {
+        value: k::<R>(N[0]) + tau * k(N[1]) + tau.ln() * k(N[2]),
+        first: tau * k(N[1]) + k(N[2]),
+        second: k(-N[2]),
+    };
+    OSCILLATORS.iter().fold(polynomial, |sum, &(n, gamma)| sum.plus(Jet::oscillator(tau, n, gamma)))
+}
+
+/// Coefficients of δ¹ to δ⁶ of φʳ.
+pub fn residual<R: Real>(kelvins: R) -> [Jet<R>; ORDERS] {
+    density_series(&water::TERMS, &WEIGHTS, k::<R>(water::CRITICAL_TEMPERATURE) / kelvins)
+}
