@@ -14,6 +14,15 @@
 //! | subnormal | 1                         | as accurate as elsewhere | x |
 //! | result above the largest number    | +∞  |       |        |
 //! | result below the smallest *normal* number | +0 |   |     |
+//!
+//! Largest error in units in the last place: measured, and the bound that the tests hold it to. `f64` against decimal
+//! arithmetic at 2.4 million random arguments, of which the worst are in the tests' table; `f32` at every argument,
+//! against `f64`.
+//!
+//! |             | exp           | ln            | atan          |
+//! |-------------|---------------|---------------|---------------|
+//! | `f64`       | 0.952, 1.0    | 0.843, 0.9    | 1.417, 1.5    |
+//! | `f32`       | 1.008, 1.01   | 0.840, 0.85   | 1.392, 1.40   |
 
 use super::coefficients;
 use super::polynomial;

@@ -1,16 +1,19 @@
 //! Accuracy, edges, and sameness of the elementary functions.
 
+use std::collections::BTreeMap;
 use std::println;
 
 use super::*;
 
+type Function<T> = fn(T) -> T;
+
 const REFERENCE: &str = include_str!("elementary_reference.csv");
 
 /// Largest error in units in the last place that the documentation states, and the rows of the table that it is held to.
-const BOUNDS: [(&str, fn(f64) -> f64, f64, usize); 3] =
-    [("exp", Real::exp, 1.0, 150), ("ln", Real::ln, 0.9, 200), ("atan", Real::atan, 1.5, 150)];
+const BOUNDS: [(&str, Function<f64>, f64, usize); 3] =
+    [("exp", Real::exp, 1.0, 190), ("ln", Real::ln, 0.9, 250), ("atan", Real::atan, 1.5, 190)];
 /// The same for `f32`.
-const SINGLE_BOUNDS: [(&str, fn(f32) -> f32, fn(f64) -> f64, f64); 3] =
+const SINGLE_BOUNDS: [(&str, Function<f32>, Function<f64>, f64); 3] =
     [("exp", Real::exp, Real::exp, 1.01), ("ln", Real::ln, Real::ln, 0.85), ("atan", Real::atan, Real::atan, 1.40)];
 
 /// SplitMix64 (Steele, Lea and Flood 2014, "Fast splittable pseudorandom number generators", fig. 17).
@@ -57,26 +60,28 @@ fn from_hex(field: Option<&str>) -> f64 {
     f64::from_bits(u64::from_str_radix(field.unwrap(), 16).unwrap())
 }
 
+/// The rows of the reference table for one function: range, argument, value in two parts.
+fn reference_rows(function: &str) -> impl Iterator<Item = (&'static str, f64, f64, f64)> {
+    REFERENCE.lines().filter_map(move |line| {
+        let mut fields = line.strip_prefix(function)?.strip_prefix(',')?.split(',');
+        Some((fields.next()?, from_hex(fields.next()), from_hex(fields.next()), from_hex(fields.next())))
+    })
+}
+
 #[test]
 fn reference_values_in_double_precision() {
     for (name, function, bound, rows) in BOUNDS {
-        let (mut range, mut worst, mut overall, mut compared) = ("", 0.0, 0.0_f64, 0);
-        for line in REFERENCE.lines().filter(|line| line.starts_with(name)) {
-            let mut fields = line.split(',').skip(1);
-            let row_range = fields.next().unwrap();
-            let (x, value, rest) = (from_hex(fields.next()), from_hex(fields.next()), from_hex(fields.next()));
-            if row_range != range {
-                (range, worst) = (row_range, 0.0);
-            }
+        let (mut compared, mut ranges) = (0, BTreeMap::new());
+        for (range, x, value, rest) in reference_rows(name) {
             let error = ((function(x) - value) - rest).abs() / unit(value, 53, -1022);
             assert!(error <= bound, "{name}({x:e}): {error} units in the last place");
-            worst = f64::max(worst, error);
-            overall = overall.max(error);
+            let worst = ranges.entry(range).or_insert(0.0_f64);
+            *worst = worst.max(error);
             compared += 1;
-            println!("{name:5} {range:14} so far {worst:.4} of {bound} units in the last place");
         }
-        assert!(compared >= rows, "{name}: {compared} rows compared");
-        assert!(overall >= bound / 2.0, "{name}: stale bound {bound}, largest error {overall}");
+        println!("{name:5} f64 {ranges:.4?} of {bound} units in the last place, {compared} values");
+        assert!(compared >= rows, "{name}: {compared} values compared");
+        assert!(ranges.into_values().any(|worst| worst >= bound / 2.0), "{name}: stale bound {bound}");
     }
 }
 
@@ -122,7 +127,7 @@ macro_rules! special_values {
         fn $test() {
             let (infinity, nan, pi_half) = ($float::INFINITY, $float::NAN, $pi_half);
             let (tiny, smallest, largest) = ($float::from_bits(1), $float::MIN_POSITIVE, $float::MAX);
-            let table: [(&str, fn($float) -> $float, &[($float, $float)]); 4] = [
+            let table: [(&str, Function<$float>, &[($float, $float)]); 4] = [
                 (
                     "exp",
                     Real::exp,
@@ -268,7 +273,7 @@ fn neighbouring_arguments_do_not_fall() {
     rises("atan", Real::atan, -4.0, 4.0, [-2.0, -0.5, 0.5, 2.0].into_iter());
 }
 
-fn rises(name: &str, function: fn(f64) -> f64, low: f64, high: f64, seams: impl Iterator<Item = f64>) {
+fn rises(name: &str, function: Function<f64>, low: f64, high: f64, seams: impl Iterator<Item = f64>) {
     let mut random = Random(5);
     let around = seams
         .map(|seam| (0..100).fold(seam, |x, _| x.next_down()))
@@ -300,8 +305,10 @@ fn exponential_and_logarithm_are_inverse() {
 
 #[test]
 fn polynomial_and_power() {
-    assert_eq!(polynomial(2.0, []), 0.0_f64);
-    assert_eq!(polynomial(f64::INFINITY, [3.0]), 3.0);
-    assert_eq!(polynomial(2.0, [1.0, 2.0, 3.0]), 17.0_f64);
-    assert_eq!([0, 1, 2, 5, 8].map(|n| power(-3.0, n)), [1.0, -3.0, 9.0, -243.0, 6561.0_f64]);
+    assert!(same(polynomial(2.0, []), 0.0_f64));
+    assert!(same(polynomial(f64::INFINITY, [3.0]), 3.0));
+    assert!(same(polynomial(2.0, [1.0, 2.0, 3.0]), 17.0_f64));
+    for (exponent, expected) in [(0, 1.0), (1, -3.0), (2, 9.0), (5, -243.0), (8, 6561.0_f64)] {
+        assert!(same(power(-3.0, exponent), expected));
+    }
 }
