@@ -49,6 +49,10 @@ fn rules_differ_as_they_should() {
         }
         [total.positive(), total.negative(), total.total(), total.lowest().unwrap(), total.highest().unwrap()]
     };
+    let mut falling = Total::new(Rule::Trapezoid, 10.0);
+    falling.add(0.0, -0.0, Quality::Good);
+    falling.add(10.0, -3.0, Quality::Good);
+    assert_eq!((falling.lowest(), falling.highest().map(f64::to_bits)), (Some(-3.0), Some(0)));
     assert_eq!(total(Rule::Step), [40.0, -40.0, 0.0, -2.0, 4.0]);
     // Zero is crossed after 2/3 of the first and 1/4 of the second span.
     let expected = [0.5 * 4.0 * 20.0 / 3.0 + 0.5 * 6.0 * 15.0, -0.5 * 2.0 * (10.0 / 3.0 + 5.0), 50.0, -2.0, 6.0];
@@ -90,6 +94,15 @@ fn time_and_overflow_do_no_harm() {
     let back = [0.0, 1.0, 2.0, 3.0].map(|time| total.add(time, 7.0, Quality::Good));
     assert_eq!(back, [Added::TimeRefused, Added::TimeRefused, Added::Gap, Added::Counted]);
     assert_eq!(total.total(), 17.0);
+}
+
+#[test]
+fn what_cancels_leaves_the_small_remainder() {
+    let mut total = Total::new(Rule::Step, 1.0);
+    for (time, rate) in [(0.0, 1e16), (1.0, 1.0), (2.0, -1e16), (3.0, 0.0)] {
+        total.add(time, rate, Quality::Good);
+    }
+    assert_eq!(total.total(), 1.0);
 }
 
 #[test]
@@ -153,7 +166,7 @@ fn no_padding() {
 
 #[test]
 fn a_pause_does_not_run_through_its_periods() {
-    let mut hours = Periods::new(3600.0, Total::new(Rule::Trapezoid, 1e9));
+    let mut hours = Periods::new(3600.0, Total::new(Rule::Trapezoid, f64::INFINITY));
     assert_eq!(hours.add(-1e10, 1.0, Quality::Good), None);
     let first = hours.add(1e10, 1.0, Quality::Good).unwrap();
     assert!((first.start - -1e10).abs() < 3600.0 && first.total.covered_seconds() == 0.0);

@@ -194,7 +194,8 @@ impl Total {
     #[must_use]
     pub fn total(&self) -> f64 {
         let mut net = self.positive;
-        if net.merge(&self.negative) { net.value() } else { self.positive.value() + self.negative.value() }
+        net.merge(&self.negative);
+        net.value()
     }
 
     /// The part with a positive rate, ≥ 0.

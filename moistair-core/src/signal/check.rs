@@ -125,11 +125,15 @@ impl ChannelState {
     /// Whether this sample counts for the stuck rule: always without a reference, else when that has moved.
     fn reference_moved(&mut self, channel: &Channel, reference: Option<f64>) -> bool {
         let Some(reference) = reference else { return true };
-        let moved = self.has_reference != 0 && (reference - self.reference).abs() > channel.reference_resolution;
-        if moved || (self.has_reference == 0 && reference.is_finite()) {
+        if !reference.is_finite() {
+            return false;
+        }
+        let (known, near) =
+            (self.has_reference != 0, (reference - self.reference).abs() <= channel.reference_resolution);
+        if !(known && near) {
             (self.reference, self.has_reference) = (reference, 1);
         }
-        moved
+        known && !near
     }
 
     /// Notes a raw reading in percent; whether the readings are fractions after all.
@@ -197,7 +201,7 @@ impl Channel {
 
     /// [`check`](Self::check) beside a reference: a sample counts as unchanged only when the reference has moved by more
     /// than its resolution ([`with_reference_resolution`](Self::with_reference_resolution)) since it last did, so that
-    /// a plant at rest does not look stuck. A NaN reference has not moved.
+    /// a plant at rest does not look stuck. A reference that is not finite has not moved.
     #[must_use]
     pub fn check_beside(&self, state: &mut ChannelState, time: f64, raw: f64, reference: f64) -> Checked {
         self.judge(state, time, raw, Some(reference))
@@ -249,8 +253,8 @@ impl Channel {
 
     /// The last good value while it is young enough, else nothing.
     fn fill(&self, state: &ChannelState, cause: Reason, gap: bool) -> Checked {
-        let age = state.age(state.good_time);
-        if state.has_good != 0 && 0.0 <= age && age <= self.hold && self.contains(state.good) {
+        // The limits may have been changed since.
+        if state.has_good != 0 && state.age(state.good_time) <= self.hold && self.contains(state.good) {
             return Checked::held(state.good, cause, gap);
         }
         Checked::refused(cause, gap)

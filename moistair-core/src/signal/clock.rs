@@ -65,8 +65,7 @@ impl Clock {
             *self = Self { now: time, started: 1, ..Self::default() };
             return Tick::Forward { microseconds: step };
         }
-        let follows = self.candidates > 0 && time > self.candidate;
-        self.candidates = if follows { self.candidates.saturating_add(1) } else { 1 };
+        self.candidates = if time > self.candidate { self.candidates.saturating_add(1) } else { 1 };
         self.candidate = time;
         if self.candidates < RESTART_SAMPLES {
             return Tick::NotIncreasing;

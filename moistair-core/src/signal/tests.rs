@@ -154,8 +154,31 @@ fn fractions_on_a_percent_channel_are_found_out() {
     assert!(!reasons(channel.with_slip_samples(0), (0..1440).map(room)).contains(&Reason::LooksLikeFraction));
     assert!(!reasons(Channel::command_percent(), (0..1440).map(|_| 0.0)).contains(&Reason::LooksLikeFraction));
     assert!(!reasons(Channel::command_percent(), (0..1440).map(|_| 0.7)).contains(&Reason::LooksLikeFraction));
+    // A dry room at a tenth of a percent does not reach what fractions would.
+    assert!(!reasons(channel, (0..1440).map(|minute| 0.3 * room(minute))).contains(&Reason::LooksLikeFraction));
     // One true percent clears the suspicion.
     assert_eq!(reasons(channel, (0..100).map(room).chain([45.0])).last(), Some(&Reason::Ok));
+}
+
+#[test]
+fn zero_is_no_evidence_of_fractions() {
+    let channel = Channel::command_percent().with_slip_samples(4);
+    let mut state = ChannelState::default();
+    let mut at = |hour: u32, raw| channel.check(&mut state, 3600.0 * f64::from(hour), raw).reason();
+    let found = [0.5, 0.0, 0.6, 0.6, 0.0, 0.0, 0.5, 0.0, 0.5];
+    let first = found.into_iter().zip(0..).position(|(raw, hour)| at(hour, raw) == Reason::LooksLikeFraction);
+    assert_eq!(first, Some(8), "the fourth that moved and is not zero");
+}
+
+#[test]
+fn fractions_are_found_out_by_a_clock_set_back() {
+    let channel = Channel::relative_humidity_percent();
+    let mut state = ChannelState::default();
+    for minute in 0..30 {
+        assert!(channel.check(&mut state, 1e9 + 60.0 * f64::from(minute), room(minute)).value().is_some());
+    }
+    let found = (0..100).map(|minute| channel.check(&mut state, 60.0 * f64::from(minute), room(minute)).reason());
+    assert_eq!(found.last(), Some(Reason::LooksLikeFraction));
 }
 
 #[test]
@@ -168,6 +191,13 @@ fn stuck_from_the_nth_sample_until_it_moves() {
     // A slow drift moves away from the first of the row.
     assert!(reasons(channel, (0..100).map(|i| 20.0 + 0.02 * f64::from(i))).iter().all(|reason| *reason == Ok));
     assert_eq!(reasons(DAY, [20.0; 1000]), [Ok; 1000]);
+    assert_eq!(reasons(DAY.with_stuck(0.05, 1), [20.0; 10]), [Ok; 10]);
+    // Above saturation the reading lives on, though the value does not.
+    let wet = Channel::relative_humidity_percent().with_stuck(0.0005, 2);
+    assert_eq!(
+        reasons(wet, [101.0, 101.2, 100.9, 100.9])[1..],
+        [Reason::AboveSaturation, Reason::AboveSaturation, Stuck]
+    );
 }
 
 #[test]
@@ -180,6 +210,13 @@ fn a_plant_at_rest_is_not_stuck() {
     assert!((100..110).all(|minute| check(minute, f64::NAN) == Reason::Ok));
     let moving = [110, 111, 112, 113].map(|minute| check(minute, f64::from(minute)));
     assert_eq!(moving, [Reason::Ok, Reason::Ok, Reason::Stuck, Reason::Stuck]);
+
+    let mut state = ChannelState::default();
+    let references = [f64::NAN, f64::INFINITY, f64::NAN, 1.0, 2.0, 3.0, f64::INFINITY, 3.1, 4.0];
+    let found = references.into_iter().zip(0..).position(|(reference, minute)| {
+        channel.check_beside(&mut state, 60.0 * f64::from(minute), 20.0, reference).value().is_none()
+    });
+    assert_eq!(found, Some(8), "the third move of the reference");
 }
 
 #[test]
@@ -196,6 +233,10 @@ fn the_last_good_value_is_held_up_to_its_age() {
     let old = channel.check(&mut state, 180.000001, f64::NAN);
     assert_eq!((old.value(), old.value_or(-1.0), old.reason()), (None, -1.0, Reason::Missing));
     assert_eq!(state.last_good(), Some((20.0, 60.0)));
+    // A value that narrower limits exclude is not held.
+    let narrow = channel.with_range(21.0, 30.0).with_hold(1e6);
+    assert_eq!(narrow.check(&mut state, 200.0, f64::NAN).reason(), Reason::Missing);
+    assert_eq!(channel.with_hold(1e6).check(&mut state, 210.0, f64::NAN).reason(), Reason::Held);
 }
 
 #[test]
