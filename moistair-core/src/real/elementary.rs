@@ -1,7 +1,8 @@
 //! Square root, exponential, logarithm and arc tangent for `f64` and `f32`.
 //!
-//! No branch, no table, no fused multiply-add, no conversion between integer and floating-point numbers: a loop over
-//! an array becomes vector instructions, and every processor gives the same bits. One text serves both types.
+//! Choices are selections between two values, never branches; no table, no fused multiply-add, no conversion between
+//! integer and floating-point numbers: a loop over an array becomes vector instructions, and every processor gives the
+//! same bits. One text serves both types.
 //!
 //! | x         | exp x                     | ln x  | atan x |
 //! |-----------|---------------------------|-------|--------|

@@ -1,5 +1,9 @@
 //! A row of `f64` that moves through a formula together; the compiler turns it into vector instructions.
-#![allow(clippy::indexing_slicing, reason = "constant-length arrays under loops of the same length: no check remains")]
+#![allow(
+    clippy::indexing_slicing,
+    clippy::needless_range_loop,
+    reason = "constant-length arrays under loops of the same length: no check remains, and chained iterators cost speed"
+)]
 
 use core::ops::{Add, Div, Mul, Neg, Sub};
 
@@ -9,7 +13,7 @@ use super::{Mask, Real};
 #[derive(Clone, Copy, Debug)]
 pub struct Lanes<T, const N: usize>(pub [T; N]);
 
-// Plain loops that change an array in place: `array::map` leaves a large function like `exp` as one call per element.
+// Plain loops that change an array in place: `array::map` and `array::from_fn` leave calls that are not made inline.
 impl<T: Copy, const N: usize> Lanes<T, N> {
     #[inline(always)]
     fn each(mut self, f: impl Fn(T) -> T) -> Self {
@@ -21,15 +25,19 @@ impl<T: Copy, const N: usize> Lanes<T, N> {
 
     #[inline(always)]
     fn with(mut self, other: Self, f: impl Fn(T, T) -> T) -> Self {
-        for (value, other) in self.0.iter_mut().zip(other.0) {
-            *value = f(*value, other);
+        for i in 0..N {
+            self.0[i] = f(self.0[i], other.0[i]);
         }
         self
     }
 
     #[inline(always)]
-    fn compare<M>(self, other: Self, f: impl Fn(T, T) -> M) -> [M; N] {
-        core::array::from_fn(|i| f(self.0[i], other.0[i]))
+    fn compare<M: Mask>(self, other: Self, f: impl Fn(T, T) -> M) -> [M; N] {
+        let mut mask = <[M; N]>::NONE;
+        for i in 0..N {
+            mask[i] = f(self.0[i], other.0[i]);
+        }
+        mask
     }
 }
 
@@ -55,17 +63,28 @@ impl<T: Real, const N: usize> Neg for Lanes<T, N> {
 }
 
 impl<M: Mask, const N: usize> Mask for [M; N] {
+    const NONE: Self = [M::NONE; N];
+
     #[inline(always)]
-    fn and(self, other: Self) -> Self {
-        core::array::from_fn(|i| self[i].and(other[i]))
+    fn and(mut self, other: Self) -> Self {
+        for i in 0..N {
+            self[i] = self[i].and(other[i]);
+        }
+        self
     }
     #[inline(always)]
-    fn or(self, other: Self) -> Self {
-        core::array::from_fn(|i| self[i].or(other[i]))
+    fn or(mut self, other: Self) -> Self {
+        for i in 0..N {
+            self[i] = self[i].or(other[i]);
+        }
+        self
     }
     #[inline(always)]
-    fn not(self) -> Self {
-        self.map(M::not)
+    fn not(mut self) -> Self {
+        for value in &mut self {
+            *value = value.not();
+        }
+        self
     }
 }
 
@@ -101,7 +120,10 @@ impl<T: Real, const N: usize> Real for Lanes<T, N> {
         self.compare(other, T::le)
     }
     #[inline(always)]
-    fn select(mask: Self::Mask, a: Self, b: Self) -> Self {
-        Self(core::array::from_fn(|i| T::select(mask[i], a.0[i], b.0[i])))
+    fn select(mask: Self::Mask, mut a: Self, b: Self) -> Self {
+        for i in 0..N {
+            a.0[i] = T::select(mask[i], a.0[i], b.0[i]);
+        }
+        a
     }
 }

@@ -19,6 +19,9 @@ pub use scalar::Scalar;
 
 /// The result of a comparison: one truth value, or one per lane.
 pub trait Mask: Copy {
+    /// False, in every lane.
+    const NONE: Self;
+
     /// Both.
     fn and(self, other: Self) -> Self;
     /// Either or both.

@@ -3,6 +3,8 @@
 use super::{Mask, Real, elementary};
 
 impl Mask for bool {
+    const NONE: Self = false;
+
     #[inline(always)]
     fn and(self, other: Self) -> Self {
         self & other
