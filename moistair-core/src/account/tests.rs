@@ -1,3 +1,5 @@
+#![allow(clippy::float_cmp, reason = "what is compared here is exact")]
+
 use super::*;
 use crate::signal::{Channel, ChannelState, Quality, Reason};
 use proptest::prelude::*;
