@@ -150,6 +150,30 @@ impl Quantity {
         self.code() < PROPERTY_COUNT
     }
 
+    /// Whether the quantity fixes a state together with dry bulb and pressure.
+    #[must_use]
+    pub const fn fixes_state(self) -> bool {
+        matches!(
+            self,
+            Self::HumidityRatio
+                | Self::WaterMoleFraction
+                | Self::VaporPressure
+                | Self::SpecificHumidity
+                | Self::AbsoluteHumidity
+                | Self::SpecificEnthalpy
+                | Self::SpecificVolume
+                | Self::Density
+                | Self::RelativeHumidity
+                | Self::RelativeHumidityOverLiquid
+                | Self::DegreeOfSaturation
+                | Self::WetBulb
+                | Self::WetBulbOverLiquid
+                | Self::WetBulbOverIce
+                | Self::DewPoint
+                | Self::FrostPoint
+        )
+    }
+
     /// What a value outside the range looks like, where one slip of the unit is common.
     #[must_use]
     pub fn likely_slip(self, value: f64) -> &'static str {

@@ -101,6 +101,9 @@ impl<S: Scalar> MoistAir<S> {
         basis: impl Into<Basis<S>>,
     ) -> Result<Self, Error> {
         let basis = basis.into();
+        if !quantity.fixes_state() {
+            return Err(Error::UnknownSelector { code: quantity.code() });
+        }
         let celsius = checked(Quantity::DryBulb, dry_bulb.celsius())?;
         let pressure = checked(Quantity::Pressure, basis.pressure().pascals())?;
         let value = checked(quantity, value)?;
