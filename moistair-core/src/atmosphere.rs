@@ -26,7 +26,7 @@ impl<S: Scalar> Pressure<S> {
     ///
     /// ```
     /// use moistair_core::{Length, Pressure};
-    /// let p = Pressure::at_elevation(Length::from_meters(1_500.0))?;
+    /// let p: Pressure = Pressure::at_elevation(Length::from_meters(1_500.0))?;
     /// assert!((p.pascals() - 84_556.0).abs() < 1.0);
     /// assert!(Pressure::at_elevation(Length::from_meters(20_000.0)).is_err());
     /// # Ok::<(), moistair_core::Error>(())

@@ -9,12 +9,17 @@ pub mod account;
 mod atmosphere;
 mod basis;
 mod bounds;
+#[cfg(test)]
+mod checks;
+pub mod columns;
 mod error;
 mod mixture;
+pub mod process;
 mod quantity;
 mod real;
 mod saturation;
 pub mod signal;
+mod solve;
 mod state;
 mod substance;
 
@@ -24,4 +29,7 @@ pub use error::{Error, NoValue};
 pub use quantity::*;
 pub use real::Scalar;
 pub use saturation::Surface;
-pub use state::{MoistAir, SecondProperty};
+pub use state::{AirWithCondensate, Freezing, MoistAir, SecondProperty, liquid_water_enthalpy};
+
+/// Changes when any result changes in any bit; the change log then states by how much.
+pub const NUMERICS_VERSION: u32 = 1;

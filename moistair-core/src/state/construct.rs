@@ -73,9 +73,9 @@ impl<S: Scalar> MoistAir<S> {
     ///
     /// ```
     /// use moistair_core::{Length, MoistAir, Pressure, RelativeHumidity, Temperature};
-    /// let site = Pressure::at_elevation(Length::from_meters(1_600.0))?;
+    /// let site: Pressure = Pressure::at_elevation(Length::from_meters(1_600.0))?;
     /// let outdoor = MoistAir::from_dry_bulb(Temperature::from_celsius(34.0), RelativeHumidity::from_percent(38.0), site)?;
-    /// assert!((outdoor.wet_bulb()?.celsius() - 21.98).abs() < 0.1);
+    /// assert!((outdoor.wet_bulb()?.celsius() - 22.10).abs() < 0.01);
     ///
     /// // A percentage where a fraction is meant is refused, and the message says so.
     /// let slip = MoistAir::from_dry_bulb(Temperature::from_celsius(34.0), RelativeHumidity::from_fraction(38.0), site);
@@ -132,6 +132,27 @@ impl<S: Scalar> MoistAir<S> {
     }
 }
 
+impl<S: Scalar> MoistAir<S> {
+    /// A state from the numbers that define it, as read from a state before and stored, sent or handed through C since. Every state comes
+    /// back bit for bit, also one that rounding carried a little beyond saturation.
+    ///
+    /// # Errors
+    /// As [`MoistAir::from_dry_bulb`]: whatever the numbers are, what comes back is a state.
+    pub fn restore(
+        dry_bulb: Temperature<S>,
+        humidity_ratio: HumidityRatio<S>,
+        basis: impl Into<Basis<S>>,
+    ) -> Result<Self, Error> {
+        let basis = basis.into();
+        let air = Self::from_dry_bulb(dry_bulb, humidity_ratio, basis)?;
+        let ratio = humidity_ratio.kilograms_per_kilogram();
+        if air.humidity_ratio == ratio {
+            return Ok(air);
+        }
+        Ok(Self::assemble(air.celsius, air.pascals, ratio, air.formulation))
+    }
+}
+
 /// The ratio if it lies between dry and saturated, snapped to the ends when rounding carried it past them.
 fn settle<S: Scalar>(ratio: S, limit: S) -> Option<S> {
     // f32 cannot resolve the tolerance; a few of its own units then stand for it.
@@ -143,7 +164,7 @@ fn settle<S: Scalar>(ratio: S, limit: S) -> Option<S> {
 }
 
 /// The humidity ratio at saturation over liquid (over ice below −40 °C), or the greatest declared where nothing saturates.
-pub(super) fn greatest_humidity_ratio<M: Mixture<S>, S: Scalar>(mixture: &M, celsius: S, pressure: S) -> S {
+pub(crate) fn greatest_humidity_ratio<M: Mixture<S>, S: Scalar>(mixture: &M, celsius: S, pressure: S) -> S {
     let surface = if celsius.lt(k(Quantity::DewPoint.limits().0)) { Surface::Ice } else { Surface::Liquid };
     let saturation = mixture.saturation(pressure, surface);
     let declared = k(Quantity::HumidityRatio.limits().1);
@@ -168,9 +189,9 @@ pub(super) fn humidity_ratio<M: Mixture<R>, R: Real>(
         let saturated = wet.gas(pressure, saturation.humidity_ratio);
         let condensed = saturation.condensed_enthalpy;
         let target = saturated.enthalpy - saturation.humidity_ratio * condensed;
-        search(mixture, pressure, limit, move |w, gas| {
+        Some(search_ratio(mixture, pressure, limit, move |w, gas| {
             (gas.enthalpy - w * condensed - target, gas.enthalpy_of_water - condensed)
-        })
+        }))
     };
     match quantity {
         Quantity::HumidityRatio => Some(value),
@@ -186,23 +207,28 @@ pub(super) fn humidity_ratio<M: Mixture<R>, R: Real>(
         Quantity::WetBulbOverLiquid => wet_bulb(Surface::Liquid),
         Quantity::WetBulbOverIce => wet_bulb(Surface::Ice),
         Quantity::SpecificEnthalpy => {
-            search(mixture, pressure, limit, |_, gas| (gas.enthalpy - value, gas.enthalpy_of_water))
+            Some(search_ratio(mixture, pressure, limit, |_, gas| (gas.enthalpy - value, gas.enthalpy_of_water)))
         }
         Quantity::SpecificVolume => {
-            search(mixture, pressure, limit, |_, gas| (gas.volume - value, gas.volume_of_water))
+            Some(search_ratio(mixture, pressure, limit, |_, gas| (gas.volume - value, gas.volume_of_water)))
         }
-        Quantity::Density => {
-            search(mixture, pressure, limit, |w, gas| (value * gas.volume - one - w, value * gas.volume_of_water - one))
-        }
-        Quantity::AbsoluteHumidity => {
-            search(mixture, pressure, limit, |w, gas| (value * gas.volume - w, value * gas.volume_of_water - one))
-        }
+        Quantity::Density => Some(search_ratio(mixture, pressure, limit, |w, gas| {
+            (value * gas.volume - one - w, value * gas.volume_of_water - one)
+        })),
+        Quantity::AbsoluteHumidity => Some(search_ratio(mixture, pressure, limit, |w, gas| {
+            (value * gas.volume - w, value * gas.volume_of_water - one)
+        })),
         _ => None,
     }
 }
 
 /// The root in W of a function that is nearly linear between dry and saturated: the chord, then Newton, kept near the interval.
-fn search<M: Mixture<R>, R: Real>(mixture: &M, pressure: R, limit: R, f: impl Fn(R, &Gas<R>) -> (R, R)) -> Option<R> {
+pub(crate) fn search_ratio<M: Mixture<R>, R: Real>(
+    mixture: &M,
+    pressure: R,
+    limit: R,
+    f: impl Fn(R, &Gas<R>) -> (R, R),
+) -> R {
     let at = |w| f(w, &mixture.gas(pressure, w));
     let margin = limit * k(0.01);
     let near = |w: R| w.at_least(-margin).at_most(limit + margin);
@@ -215,5 +241,5 @@ fn search<M: Mixture<R>, R: Real>(mixture: &M, pressure: R, limit: R, f: impl Fn
         let (value, slope) = at(w);
         w = near(w - value / slope);
     }
-    Some(w)
+    w
 }

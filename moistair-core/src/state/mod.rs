@@ -1,13 +1,15 @@
 //! A state of moist air.
 
+pub(crate) mod condensate;
 pub(crate) mod construct;
-mod property;
+pub(crate) mod property;
 
 use crate::basis::{Basis, Formulation};
 use crate::mixture::Gas;
 use crate::quantity::*;
 use crate::real::{Scalar, k};
 
+pub use condensate::{AirWithCondensate, Freezing, liquid_water_enthalpy};
 pub use construct::SecondProperty;
 
 /// Moist air without condensate, at a dry bulb, pressure and humidity ratio, on a stated formulation.
@@ -25,6 +27,13 @@ pub struct MoistAir<S = f64> {
 }
 
 impl<S: Scalar> MoistAir<S> {
+    /// From numbers already known to make a state.
+    pub(crate) fn assemble(celsius: S, pascals: S, humidity_ratio: S, formulation: Formulation) -> Self {
+        use crate::mixture::Mixture;
+        let gas = crate::basis::with_mixture!(formulation, S, M => M::<S>::at(celsius).gas(pascals, humidity_ratio));
+        Self { celsius, pascals, humidity_ratio, gas, formulation }
+    }
+
     /// Dry-bulb temperature, bit for bit as given.
     pub fn dry_bulb(&self) -> Temperature<S> {
         Temperature::from_celsius(self.celsius)

@@ -11,14 +11,14 @@ use crate::saturation::{Magnus, Surface};
 use super::MoistAir;
 
 /// Newton steps, constant so that the work is; the tests of this module show each count to be enough and none to be idle.
-pub(super) const DEW_POINT_STEPS: usize = 4;
+pub(crate) const DEW_POINT_STEPS: usize = 4;
 pub(super) const WET_BULB_STEPS: usize = 5;
 const WET_BULB_HALVINGS: usize = 8;
 
 /// Temperature, °C, at which a water mole fraction saturates over a surface.
 ///
 /// ln x_ws is nearly linear in 1/T: Newton in that variable.
-pub(super) fn dew_point<M: Mixture<R>, R: Real, const STEPS: usize>(
+pub(crate) fn dew_point<M: Mixture<R>, R: Real, const STEPS: usize>(
     mole_fraction: R,
     pressure: R,
     surface: Surface,
@@ -112,7 +112,7 @@ pub(super) fn stable_wet_bulb<M: Mixture<R>, R: Real>(celsius: R, pressure: R, h
 }
 
 /// Whether a saturation exists in the gas phase.
-pub(super) fn saturates<R: Real>(mole_fraction: R) -> R::Mask {
+pub(crate) fn saturates<R: Real>(mole_fraction: R) -> R::Mask {
     k::<R>(0.0).lt(mole_fraction).and(mole_fraction.lt(k(1.0)))
 }
 

@@ -1,0 +1,104 @@
+//! Whether heat and water close over a process, recomputed from what enters, what leaves and what was exchanged.
+
+use super::{Exchange, WetStream};
+use crate::quantity::{HeatFlow, MassFlow};
+use crate::real::{Scalar, k};
+use crate::state::MoistAir;
+
+/// The two books of a process: what is left over, and what it is measured against.
+#[derive(Clone, Copy, Debug, PartialEq)]
+#[must_use]
+pub struct Books<S = f64> {
+    /// Heat out − in − exchanged; zero if the book closes.
+    pub heat_residual: HeatFlow<S>,
+    /// Sum of the magnitudes of all sensible and latent terms and of the water's enthalpy.
+    pub heat_scale: HeatFlow<S>,
+    /// Water out − in − exchanged.
+    pub water_residual: MassFlow<S>,
+    /// Sum of the magnitudes of all water terms.
+    pub water_scale: MassFlow<S>,
+    /// What one unit in the last place of the absolute temperatures is worth: enthalpies are no finer than that.
+    pub heat_resolution: HeatFlow<S>,
+}
+
+impl<S: Scalar> Books<S> {
+    /// Whether both close to rounding: 8 ε of the scale, and the resolution of the temperatures.
+    #[must_use]
+    pub fn close(&self) -> bool {
+        let eight = S::epsilon() * k(8.0);
+        let within = |residual: S, limit: S| residual.at_least(-residual) <= limit;
+        within(self.heat_residual.watts(), self.heat_scale.watts() * eight + self.heat_resolution.watts())
+            && within(self.water_residual.kilograms_per_second(), self.water_scale.kilograms_per_second() * eight)
+    }
+}
+
+/// Balances streams that enter against one that leaves.
+///
+/// Enthalpies are computed anew from temperature, pressure and humidity ratio, not taken from the process.
+pub fn balance<S: Scalar>(entering: &[WetStream<S>], leaving: &WetStream<S>, exchange: &Exchange<S>) -> Books<S> {
+    let zero = k::<S>(0.0);
+    let mut sum = Sum { heat: zero, heat_scale: zero, resolution: zero, water: zero, water_scale: zero };
+    sum.add(leaving, k(1.0));
+    for stream in entering {
+        sum.add(stream, k(-1.0));
+    }
+    let (heat, water) = (exchange.heat.watts(), exchange.water.kilograms_per_second());
+    let carried = exchange.water_enthalpy_flow.watts();
+    Books {
+        heat_residual: HeatFlow::from_watts(sum.heat - heat - carried),
+        heat_scale: HeatFlow::from_watts(sum.heat_scale + magnitude(heat) + magnitude(carried)),
+        water_residual: MassFlow::from_kilograms_per_second(sum.water - water),
+        water_scale: MassFlow::from_kilograms_per_second(sum.water_scale + magnitude(water)),
+        heat_resolution: HeatFlow::from_watts(sum.resolution),
+    }
+}
+
+struct Sum<S> {
+    heat: S,
+    heat_scale: S,
+    resolution: S,
+    water: S,
+    water_scale: S,
+}
+
+impl<S: Scalar> Sum<S> {
+    fn add(&mut self, stream: &WetStream<S>, sign: S) {
+        let flow = stream.dry_air_flow().kilograms_per_second();
+        let wet = stream.air();
+        let air = wet.air();
+        let at = |ratio| enthalpy(&air, ratio);
+        let ratio = air.humidity_ratio().kilograms_per_kilogram();
+        let (sensible, total) = (at(k(0.0)), at(ratio));
+        let condensate = wet.specific_enthalpy().joules_per_kilogram() - air.specific_enthalpy().joules_per_kilogram();
+        let water = wet.total_water().kilograms_per_kilogram();
+        self.heat = self.heat + sign * flow * (total + condensate);
+        self.heat_scale =
+            self.heat_scale + flow * (magnitude(sensible) + magnitude(total - sensible) + magnitude(condensate));
+        self.resolution =
+            self.resolution + flow * S::epsilon() * air.dry_bulb().kelvins() * wet_heat_capacity(stream);
+        self.water = self.water + sign * flow * water;
+        self.water_scale = self.water_scale + flow * water;
+    }
+}
+
+fn enthalpy<S: Scalar>(air: &MoistAir<S>, ratio: S) -> S {
+    MoistAir::assemble(air.dry_bulb().celsius(), air.pressure().pascals(), ratio, air.formulation())
+        .specific_enthalpy()
+        .joules_per_kilogram()
+}
+
+/// ∂h/∂T of a stream; along saturation it holds the latent part too, here taken as W L² / (R T²) with rounded constants.
+fn wet_heat_capacity<S: Scalar>(stream: &WetStream<S>) -> S {
+    let air = stream.air().air();
+    let dry = air.specific_heat().joules_per_kilogram_kelvin();
+    if !stream.air().is_wet() {
+        return dry;
+    }
+    let kelvins = air.dry_bulb().kelvins();
+    let ratio = air.humidity_ratio().kilograms_per_kilogram();
+    dry + ratio * (k::<S>(1.0) + ratio * k(1.6)) * k(2.5e6 * 2.5e6 / 461.5) / (kelvins * kelvins)
+}
+
+fn magnitude<S: Scalar>(x: S) -> S {
+    x.at_least(-x)
+}

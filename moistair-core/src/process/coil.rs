@@ -1,0 +1,244 @@
+//! Cooling coils: to a given leaving state, by bypass factor, and between two measured states.
+
+use super::{AirStream, Exchange, parts, same_formulation};
+use crate::basis::with_mixture;
+use crate::bounds::Quantity;
+use crate::error::{Error, checked};
+use crate::mixture::Mixture;
+use crate::quantity::{HeatFlow, HumidityRatio, MassFlow, SpecificEnthalpy, Temperature};
+use crate::real::{Scalar, k};
+use crate::saturation::Surface;
+use crate::state::condensate::{condensed_enthalpy, temperature_of_enthalpy};
+use crate::state::property::saturates;
+use crate::state::{AirWithCondensate, Freezing, MoistAir};
+
+/// At what temperature the condensate leaves: an assumption that moves the load by 0.5 to 1 %.
+#[derive(Clone, Copy, Debug, Default, PartialEq)]
+pub enum CondensateTemperature<S = f64> {
+    /// That of the leaving air, as the handbook's examples take it.
+    #[default]
+    LeavingAir,
+    /// The apparatus dew point; for a coil known by its bypass factor only.
+    Apparatus,
+    /// A stated one.
+    Given(Temperature<S>),
+}
+
+/// Whether and how water condensed.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Hash)]
+#[repr(i32)]
+pub enum CoilRegime {
+    /// No condensate.
+    Dry = 0,
+    /// Liquid condensate.
+    Wet = 1,
+    /// The surface or the leaving air is below the melting temperature: frost, which no steady state describes.
+    Frost = 2,
+}
+
+/// What a cooling coil did.
+#[derive(Clone, Copy, Debug, PartialEq)]
+#[must_use]
+pub struct Cooling<S = f64> {
+    /// The air that leaves.
+    pub leaving: AirStream<S>,
+    /// Heat and water into the air, both negative here.
+    pub exchange: Exchange<S>,
+    /// Heat taken out by the coil, positive.
+    pub cooling_load: HeatFlow<S>,
+    /// ṁ (h(t₁, W₂) − h(t₂, W₂)).
+    pub sensible: HeatFlow<S>,
+    /// The rest of the cooling load.
+    pub latent: HeatFlow<S>,
+    /// Water that drains, positive.
+    pub condensate: MassFlow<S>,
+    /// Dry, wet or frosting.
+    pub regime: CoilRegime,
+}
+
+impl<S: Scalar> Cooling<S> {
+    /// Sensible over total; `None` without a load.
+    #[must_use]
+    pub fn sensible_heat_ratio(&self) -> Option<S> {
+        let load = self.cooling_load.watts();
+        (load != k(0.0)).then(|| self.sensible.watts() / load)
+    }
+}
+
+/// Cools to a given leaving state: Q = ṁ ((h₁ − h₂) − (W₁ − W₂) h_c) (ASHRAE Fundamentals 2021 ch. 1, Example 3).
+///
+/// # Errors
+/// [`Error::Infeasible`] when the leaving air is moister or warmer than the entering; [`Error::MixedFormulations`];
+/// [`Error::UnknownSelector`] for [`CondensateTemperature::Apparatus`], which this coil has not.
+///
+/// ```
+/// use moistair_core::*;
+/// use moistair_core::process::{AirStream, coil::{self, CondensateTemperature}};
+/// let site: Basis = Basis::ideal_gas(Pressure::from_kilopascals(101.325));
+/// let state = |t, rh| MoistAir::from_dry_bulb(Temperature::from_celsius(t), RelativeHumidity::from_percent(rh), site);
+/// let entering = AirStream::from_volume_flow(state(30.0, 50.0)?, VolumeFlow::from_cubic_meters_per_second(5.0))?;
+/// let coil = coil::to_state(&entering, &state(10.0, 100.0)?, CondensateTemperature::LeavingAir)?;
+/// assert!((coil.cooling_load.kilowatts() - 197.0).abs() < 1.0);
+/// assert!(coil::to_state(&entering, &state(29.0, 90.0)?, CondensateTemperature::LeavingAir).is_err()); // moister
+/// # Ok::<(), Error>(())
+/// ```
+pub fn to_state<S: Scalar>(
+    entering: &AirStream<S>,
+    leaving: &MoistAir<S>,
+    condensate: CondensateTemperature<S>,
+) -> Result<Cooling<S>, Error> {
+    same_formulation(&entering.air(), leaving)?;
+    let (celsius, warmest) = (leaving.dry_bulb().celsius(), entering.air().dry_bulb().celsius());
+    if celsius > warmest {
+        return Err(infeasible(
+            Quantity::LeavingTemperature,
+            celsius,
+            k(Quantity::LeavingTemperature.limits().0),
+            warmest,
+        ));
+    }
+    let (_, most) = parts(&entering.air());
+    let (_, ratio) = parts(leaving);
+    if ratio > most {
+        return Err(infeasible(Quantity::HumidityRatio, ratio, k(0.0), most));
+    }
+    let drain = drain_temperature(condensate, celsius, None)?;
+    Ok(account(entering, leaving, drain))
+}
+
+/// A coil known by its apparatus dew point t_a and bypass factor b: W₂ and h₂ lie at b between the surface's and the entering
+/// air's (so that heat and water close exactly), the temperature follows. A surface above the dew point leaves the air's
+/// water alone.
+///
+/// # Errors
+/// [`Error::Infeasible`] for an apparatus dew point above the entering dry bulb; [`Error::OutOfRange`], [`Error::NotFinite`].
+pub fn by_bypass_factor<S: Scalar>(
+    entering: &AirStream<S>,
+    apparatus_dew_point: Temperature<S>,
+    bypass_factor: S,
+    condensate: CondensateTemperature<S>,
+) -> Result<Cooling<S>, Error> {
+    let bypass = checked(Quantity::BypassFactor, bypass_factor)?;
+    let apparatus = checked(Quantity::ApparatusDewPoint, apparatus_dew_point.celsius())?;
+    let air = entering.air();
+    let warmest = air.dry_bulb().celsius();
+    if apparatus > warmest {
+        return Err(infeasible(
+            Quantity::ApparatusDewPoint,
+            apparatus,
+            k(Quantity::ApparatusDewPoint.limits().0),
+            warmest,
+        ));
+    }
+    if bypass == k(1.0) {
+        return Ok(account(entering, &air, drain_temperature(condensate, warmest, Some(apparatus))?));
+    }
+    let pressure = air.pressure().pascals();
+    let (enthalpy, ratio) = parts(&air);
+    let surface_ratio = with_mixture!(air.formulation(), S, M => {
+        let saturation = M::<S>::at(apparatus).saturation(pressure, Surface::Stable);
+        S::select(saturates(saturation.mole_fraction), saturation.humidity_ratio, ratio).at_most(ratio)
+    });
+    let surface = MoistAir::assemble(apparatus, pressure, surface_ratio, air.formulation());
+    let between = |at_surface: S, at_inlet: S| at_surface + bypass * (at_inlet - at_surface);
+    let target = (between(parts(&surface).0, enthalpy), between(surface_ratio, ratio));
+    let celsius =
+        with_mixture!(air.formulation(), S, M => temperature_of_enthalpy::<M<S>, S>(target.0, pressure, target.1));
+    let leaving = if surface_ratio >= ratio {
+        MoistAir::assemble(celsius, pressure, ratio, air.formulation())
+    } else {
+        // Nearly saturated air can be led through fog; its droplets drain with the rest.
+        AirWithCondensate::from_enthalpy_and_water(
+            SpecificEnthalpy::from_joules_per_kilogram(target.0),
+            HumidityRatio::from_kilograms_per_kilogram(target.1),
+            Freezing::Equilibrium,
+            air.basis(),
+        )?
+        .air()
+    };
+    let drain = drain_temperature(condensate, leaving.dry_bulb().celsius(), Some(apparatus))?;
+    let mut cooling = account(entering, &leaving, drain);
+    if cooling.regime == CoilRegime::Wet && freezes(&air, apparatus) {
+        cooling.regime = CoilRegime::Frost;
+    }
+    Ok(cooling)
+}
+
+/// The coil between two measured states. Differences of humidity ratio within `dead_band` are noise of the sensors: the coil then counts
+/// as dry, with the mean humidity ratio on both sides, so that noise does not add up to condensate.
+///
+/// # Errors
+/// [`Error::MixedFormulations`]; [`Error::OutOfRange`], [`Error::NotFinite`] for the dead band.
+pub fn between<S: Scalar>(
+    entering: &AirStream<S>,
+    leaving: &MoistAir<S>,
+    condensate: CondensateTemperature<S>,
+    dead_band: HumidityRatio<S>,
+) -> Result<Cooling<S>, Error> {
+    same_formulation(&entering.air(), leaving)?;
+    let dead_band = checked(Quantity::HumidityRatio, dead_band.kilograms_per_kilogram())?;
+    let ((_, before), (_, after)) = (parts(&entering.air()), parts(leaving));
+    let drain = drain_temperature(condensate, leaving.dry_bulb().celsius(), None)?;
+    if before - after > dead_band {
+        return Ok(account(entering, leaving, drain));
+    }
+    let mean = (before + after) * k(0.5);
+    let at_mean = |air: &MoistAir<S>| {
+        MoistAir::assemble(air.dry_bulb().celsius(), air.pressure().pascals(), mean, air.formulation())
+    };
+    Ok(account(&entering.with_air(at_mean(&entering.air())), &at_mean(leaving), drain))
+}
+
+fn account<S: Scalar>(entering: &AirStream<S>, leaving: &MoistAir<S>, drain: S) -> Cooling<S> {
+    let (flow, air) = (entering.dry_air_flow, entering.air());
+    let ((h1, w1), (h2, w2)) = (parts(&air), parts(leaving));
+    let condensate = flow * (w1 - w2);
+    let drained = if condensate > k(0.0) {
+        condensate * condensed_enthalpy(air.formulation(), drain, air.pressure().pascals(), Surface::Stable)
+    } else {
+        k(0.0)
+    };
+    let heat = flow * (h2 - h1) + drained;
+    let warm = MoistAir::assemble(air.dry_bulb().celsius(), air.pressure().pascals(), w2, air.formulation());
+    let sensible = flow * (parts(&warm).0 - h2);
+    let regime = if condensate <= k(0.0) {
+        CoilRegime::Dry
+    } else if freezes(&air, leaving.dry_bulb().celsius().at_most(drain)) {
+        CoilRegime::Frost
+    } else {
+        CoilRegime::Wet
+    };
+    Cooling {
+        leaving: entering.with_air(*leaving),
+        exchange: Exchange::new(heat, -condensate, -drained),
+        cooling_load: HeatFlow::from_watts(-heat),
+        sensible: HeatFlow::from_watts(sensible),
+        latent: HeatFlow::from_watts(-heat - sensible),
+        condensate: MassFlow::from_kilograms_per_second(condensate),
+        regime,
+    }
+}
+
+fn drain_temperature<S: Scalar>(
+    choice: CondensateTemperature<S>,
+    leaving: S,
+    apparatus: Option<S>,
+) -> Result<S, Error> {
+    match (choice, apparatus) {
+        (CondensateTemperature::LeavingAir, _) => Ok(leaving),
+        (CondensateTemperature::Apparatus, Some(apparatus)) => Ok(apparatus),
+        (CondensateTemperature::Apparatus, None) => Err(Error::UnknownSelector { code: 1 }),
+        (CondensateTemperature::Given(temperature), _) => {
+            checked(Quantity::CondensateTemperature, temperature.celsius())
+        }
+    }
+}
+
+fn freezes<S: Scalar>(air: &MoistAir<S>, celsius: S) -> bool {
+    let pressure = air.pressure().pascals();
+    with_mixture!(air.formulation(), S, M => celsius < <M<S> as Mixture<S>>::melting_temperature(pressure))
+}
+
+fn infeasible<S: Scalar>(quantity: Quantity, value: S, min: S, max: S) -> Error {
+    Error::Infeasible { quantity, value: value.to_f64(), min: min.to_f64(), max: max.to_f64() }
+}
