@@ -1,0 +1,160 @@
+//! Selectors of quantities, their names, units and limits.
+
+use core::ffi::c_char;
+
+use moistair_core::Quantity;
+
+use crate::memory::{Answer, answer};
+use crate::status::{Failure, moistair_error};
+use crate::text::{Text, texts};
+
+/// Number of property selectors: they run from 0 to one less. Later versions may add to them.
+pub const MOISTAIR_PROPERTY_COUNT: i32 = 23;
+
+/// Dry-bulb temperature. The range of states; the formulations themselves reach 193.15 to 473.15 K (IAPWS G8-10) [°C].
+pub const MOISTAIR_DRY_BULB: i32 = 0;
+/// Absolute total pressure [Pa].
+pub const MOISTAIR_PRESSURE: i32 = 1;
+/// Mass of water vapor per mass of dry air [kg/kg].
+pub const MOISTAIR_HUMIDITY_RATIO: i32 = 2;
+/// Moles of water vapor per mole of moist air [1].
+pub const MOISTAIR_WATER_MOLE_FRACTION: i32 = 3;
+/// Water mole fraction times total pressure [Pa].
+pub const MOISTAIR_VAPOR_PRESSURE: i32 = 4;
+/// Mass of water vapor per mass of moist air [kg/kg].
+pub const MOISTAIR_SPECIFIC_HUMIDITY: i32 = 5;
+/// Mass of water vapor per volume of moist air [kg/m³].
+pub const MOISTAIR_ABSOLUTE_HUMIDITY: i32 = 6;
+/// Enthalpy per mass of dry air [J/kg].
+pub const MOISTAIR_SPECIFIC_ENTHALPY: i32 = 7;
+/// Volume per mass of dry air [m³/kg].
+pub const MOISTAIR_SPECIFIC_VOLUME: i32 = 8;
+/// Mass of moist air per volume [kg/m³].
+pub const MOISTAIR_DENSITY: i32 = 9;
+/// Isobaric heat capacity per mass of dry air, at constant humidity ratio [J/(kg K)].
+pub const MOISTAIR_SPECIFIC_HEAT: i32 = 10;
+/// p v / (R T) of the mixture [1].
+pub const MOISTAIR_COMPRESSIBILITY_FACTOR: i32 = 11;
+/// x_w / x_ws over the stable surface: ice below the melting temperature, liquid above. Over ice it may exceed one [1].
+pub const MOISTAIR_RELATIVE_HUMIDITY: i32 = 12;
+/// x_w / x_ws over liquid water, supercooled below the melting temperature (WMO convention) [1].
+pub const MOISTAIR_RELATIVE_HUMIDITY_OVER_LIQUID: i32 = 13;
+/// W / W_s over the stable surface [1].
+pub const MOISTAIR_DEGREE_OF_SATURATION: i32 = 14;
+/// (x_ws − x_w) p over the stable surface [Pa].
+pub const MOISTAIR_VAPOR_PRESSURE_DEFICIT: i32 = 15;
+/// Saturation pressure of pure water over the stable surface [Pa].
+pub const MOISTAIR_SATURATION_PRESSURE: i32 = 16;
+/// x_ws p over the saturation pressure of pure water [1].
+pub const MOISTAIR_ENHANCEMENT_FACTOR: i32 = 17;
+/// Thermodynamic wet bulb (adiabatic saturation), over liquid at or above the melting temperature, over ice below [°C].
+pub const MOISTAIR_WET_BULB: i32 = 18;
+/// Thermodynamic wet bulb over liquid water, supercooled below the melting temperature [°C].
+pub const MOISTAIR_WET_BULB_OVER_LIQUID: i32 = 19;
+/// Thermodynamic wet bulb over ice [°C].
+pub const MOISTAIR_WET_BULB_OVER_ICE: i32 = 20;
+/// Temperature of saturation over liquid water at the same pressure and composition [°C].
+pub const MOISTAIR_DEW_POINT: i32 = 21;
+/// Temperature of saturation over ice at the same pressure and composition [°C].
+pub const MOISTAIR_FROST_POINT: i32 = 22;
+/// Dry-air mass flow [kg/s].
+pub const MOISTAIR_DRY_AIR_MASS_FLOW: i32 = 32;
+/// Volume flow at a stated state [m³/s].
+pub const MOISTAIR_VOLUME_FLOW: i32 = 33;
+/// Reference density of a standard volume flow [kg/m³].
+pub const MOISTAIR_STANDARD_DENSITY: i32 = 34;
+/// Heat flow, positive into the air [W].
+pub const MOISTAIR_HEAT_FLOW: i32 = 35;
+/// Flow of liquid water or steam [kg/s].
+pub const MOISTAIR_WATER_FLOW: i32 = 36;
+/// Temperature of liquid water [°C].
+pub const MOISTAIR_WATER_TEMPERATURE: i32 = 37;
+/// Specific enthalpy of steam, on the datum of liquid water at the triple point (0 °C for the ideal gas) [J/kg].
+pub const MOISTAIR_STEAM_ENTHALPY: i32 = 38;
+/// Temperature that a process is to leave [°C].
+pub const MOISTAIR_LEAVING_TEMPERATURE: i32 = 39;
+/// Apparatus dew point of a coil [°C].
+pub const MOISTAIR_APPARATUS_DEW_POINT: i32 = 40;
+/// Bypass factor of a coil [1].
+pub const MOISTAIR_BYPASS_FACTOR: i32 = 41;
+/// Saturation effectiveness of a humidifier [1].
+pub const MOISTAIR_SATURATION_EFFECTIVENESS: i32 = 42;
+/// Temperature at which condensate leaves [°C].
+pub const MOISTAIR_CONDENSATE_TEMPERATURE: i32 = 43;
+/// Elevation above mean sea level, range of the standard atmosphere's lowest layer (ISO 2533) [m].
+pub const MOISTAIR_ELEVATION: i32 = 44;
+/// Drift of a tower as a fraction of the circulating water [1].
+pub const MOISTAIR_DRIFT_FRACTION: i32 = 45;
+/// Concentration of the circulating water over that of the make-up [1].
+pub const MOISTAIR_CYCLES_OF_CONCENTRATION: i32 = 46;
+/// Temperature range of the water in a tower [K].
+pub const MOISTAIR_TOWER_RANGE: i32 = 47;
+/// Total water per dry air, vapor and condensate [kg/kg].
+pub const MOISTAIR_TOTAL_WATER: i32 = 48;
+/// Specific enthalpy that a process leaves, with its condensate [J/kg].
+pub const MOISTAIR_LEAVING_ENTHALPY: i32 = 49;
+
+/// Limits of a quantity as an input, both included.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_limits {
+    /// The least value allowed.
+    pub min: f64,
+    /// The greatest value allowed; infinite for a property that is only read.
+    pub max: f64,
+}
+
+impl Answer for moistair_limits {
+    fn is_finite(&self) -> bool {
+        self.min <= self.max
+    }
+}
+
+/// The quantity with a selector.
+pub(crate) fn quantity(selector: i32) -> Result<Quantity, Failure> {
+    Quantity::from_code(selector).ok_or(Failure::UnknownSelector(selector))
+}
+
+/// The property with a selector.
+pub(crate) fn property(selector: i32) -> Result<Quantity, Failure> {
+    quantity(selector).and_then(
+        |found| {
+            if found.is_property() { Ok(found) } else { Err(Failure::UnknownSelector(selector)) }
+        },
+    )
+}
+
+fn text(table: &'static [Text], selector: i32) -> *const c_char {
+    let place = Quantity::ALL.iter().position(|quantity| quantity.code() == selector);
+    place.and_then(|place| table.get(place)).map_or(c"".as_ptr(), Text::as_ptr)
+}
+
+/// The name of a quantity, such as "dry_bulb": static, lower case, words joined by underscores. Empty for an unknown selector.
+#[unsafe(no_mangle)]
+pub extern "C" fn moistair_quantity_name(quantity: i32) -> *const c_char {
+    text(texts!(Quantity, Text::name, name), quantity)
+}
+
+/// The unit of a quantity, such as "kg/kg": static, UTF-8. Empty for an unknown selector.
+#[unsafe(no_mangle)]
+pub extern "C" fn moistair_quantity_unit(quantity: i32) -> *const c_char {
+    text(texts!(Quantity, Text::new, unit), quantity)
+}
+
+/// The limits of a quantity as an input, in its unit.
+///
+/// quantity: selector of any quantity; limits: output; error: may be null.
+/// Returns 0, 101, 102, 103.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_quantity_limits(
+    quantity: i32,
+    limits: *mut moistair_limits,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        let (min, max) = self::quantity(quantity)?.limits();
+        Ok(moistair_limits { min, max })
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(limits, error, call) }
+}

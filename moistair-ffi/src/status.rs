@@ -1,0 +1,162 @@
+//! Status codes and the detail of an error.
+
+use core::ffi::{CStr, c_char};
+
+use moistair_core::columns::{ColumnMismatch, NAN};
+use moistair_core::{Error, NoValue};
+
+/// Success.
+pub const MOISTAIR_OK: i32 = 0;
+/// A pointer is null that may not be.
+pub const MOISTAIR_NULL_POINTER: i32 = 101;
+/// A selector that names nothing, or nothing that fits here.
+pub const MOISTAIR_UNKNOWN_SELECTOR: i32 = 102;
+/// A pointer is not aligned for its type.
+pub const MOISTAIR_MISALIGNED: i32 = 103;
+/// Memory to be written overlaps other memory of the call.
+pub const MOISTAIR_OVERLAPPING: i32 = 104;
+/// A count or a stride reaches beyond the address space.
+pub const MOISTAIR_TOO_LONG: i32 = 105;
+/// A value is NaN or infinite.
+pub const MOISTAIR_NOT_FINITE: i32 = 201;
+/// A value lies outside the declared range of its quantity.
+pub const MOISTAIR_OUT_OF_RANGE: i32 = 202;
+/// No state has this value at this dry bulb and pressure.
+pub const MOISTAIR_UNATTAINABLE: i32 = 203;
+/// The result would hold more vapor than saturation allows.
+pub const MOISTAIR_SUPERSATURATED: i32 = 204;
+/// States of different formulations in one process.
+pub const MOISTAIR_MIXED_FORMULATIONS: i32 = 205;
+/// Streams at different pressures where one pressure is needed.
+pub const MOISTAIR_MIXED_PRESSURES: i32 = 206;
+/// A process on no air at all.
+pub const MOISTAIR_NO_FLOW: i32 = 207;
+/// The process cannot reach what was asked.
+pub const MOISTAIR_INFEASIBLE: i32 = 301;
+/// No value: there is no water vapor.
+pub const MOISTAIR_NO_VALUE_DRY_AIR: i32 = 310;
+/// No value: the saturation pressure exceeds the total pressure.
+pub const MOISTAIR_NO_VALUE_ABOVE_BOILING: i32 = 311;
+/// No value: it would lie below the range of saturation over this surface.
+pub const MOISTAIR_NO_VALUE_BELOW_SURFACE_RANGE: i32 = 312;
+/// No value: it would lie above the range of saturation over this surface.
+pub const MOISTAIR_NO_VALUE_ABOVE_SURFACE_RANGE: i32 = 313;
+/// A fault of the library: a result was not a finite number. Nothing was written.
+pub const MOISTAIR_INTERNAL: i32 = 901;
+
+/// The detail of an error. Written whenever a place for it is given; after a success code is 0 and quantity is -1.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_error {
+    /// The offending value in the unit of its quantity; NaN where there is none.
+    pub value: f64,
+    /// The least value allowed; NaN where there is none.
+    pub min: f64,
+    /// The greatest value allowed; NaN where there is none.
+    pub max: f64,
+    /// The status that the function returns.
+    pub code: i32,
+    /// The selector of the quantity at fault; -1 where there is none. For MOISTAIR_UNKNOWN_SELECTOR the selector given.
+    pub quantity: i32,
+}
+
+impl moistair_error {
+    pub(crate) const NONE: Self = Self { value: NAN, min: NAN, max: NAN, code: MOISTAIR_OK, quantity: -1 };
+}
+
+/// Why a call fails.
+#[derive(Clone, Copy, Debug)]
+pub(crate) enum Failure {
+    NullPointer,
+    Misaligned,
+    Overlapping,
+    TooLong,
+    UnknownSelector(i32),
+    Internal,
+    Core(Error),
+}
+
+impl From<Error> for Failure {
+    fn from(error: Error) -> Self {
+        Self::Core(error)
+    }
+}
+
+impl From<ColumnMismatch> for Failure {
+    fn from(mismatch: ColumnMismatch) -> Self {
+        match mismatch {
+            ColumnMismatch::UnknownSelector { code } => Self::UnknownSelector(code),
+            _ => Self::TooLong,
+        }
+    }
+}
+
+impl From<Failure> for moistair_error {
+    fn from(failure: Failure) -> Self {
+        let plain = |code| Self { code, ..Self::NONE };
+        match failure {
+            Failure::NullPointer => plain(MOISTAIR_NULL_POINTER),
+            Failure::Misaligned => plain(MOISTAIR_MISALIGNED),
+            Failure::Overlapping => plain(MOISTAIR_OVERLAPPING),
+            Failure::TooLong => plain(MOISTAIR_TOO_LONG),
+            Failure::Internal => plain(MOISTAIR_INTERNAL),
+            Failure::UnknownSelector(quantity) | Failure::Core(Error::UnknownSelector { code: quantity }) => {
+                Self { quantity, ..plain(MOISTAIR_UNKNOWN_SELECTOR) }
+            }
+            Failure::Core(error) => {
+                let (value, min, max) = error.value_and_limits().unwrap_or((NAN, NAN, NAN));
+                let quantity = error.quantity().map_or(-1, |quantity| quantity.code());
+                Self { value, min, max, code: error.code(), quantity }
+            }
+        }
+    }
+}
+
+/// A status in words: English, lower case, static. Unknown codes read "unknown status".
+#[unsafe(no_mangle)]
+pub extern "C" fn moistair_status_text(code: i32) -> *const c_char {
+    text(code).unwrap_or(c"unknown status").as_ptr()
+}
+
+/// The text of a status, if there is such a status.
+#[must_use]
+pub fn text(code: i32) -> Option<&'static CStr> {
+    Some(match code {
+        MOISTAIR_OK => c"success",
+        MOISTAIR_NULL_POINTER => c"a pointer is null",
+        MOISTAIR_UNKNOWN_SELECTOR => c"a selector does not name what is needed here",
+        MOISTAIR_MISALIGNED => c"a pointer is not aligned for its type",
+        MOISTAIR_OVERLAPPING => c"memory to be written overlaps other memory of the call",
+        MOISTAIR_TOO_LONG => c"a count or a stride reaches beyond the address space",
+        MOISTAIR_NOT_FINITE => c"a value is not a finite number",
+        MOISTAIR_OUT_OF_RANGE => c"a value is outside the range of its quantity",
+        MOISTAIR_UNATTAINABLE => c"no state has this value at this dry bulb and pressure",
+        MOISTAIR_SUPERSATURATED => c"the result would cross saturation",
+        MOISTAIR_MIXED_FORMULATIONS => c"states of different formulations cannot be combined",
+        MOISTAIR_MIXED_PRESSURES => c"states at different pressures need the pressure of the outlet",
+        MOISTAIR_NO_FLOW => c"the dry-air mass flow is zero",
+        MOISTAIR_INFEASIBLE => c"the process cannot reach what was asked",
+        MOISTAIR_NO_VALUE_DRY_AIR => c"no value: there is no water vapor",
+        MOISTAIR_NO_VALUE_ABOVE_BOILING => c"no value: the saturation pressure exceeds the total pressure",
+        MOISTAIR_NO_VALUE_BELOW_SURFACE_RANGE => c"no value: below the range of saturation over this surface",
+        MOISTAIR_NO_VALUE_ABOVE_SURFACE_RANGE => c"no value: above the range of saturation over this surface",
+        MOISTAIR_INTERNAL => c"a result is not a finite number: a fault of the library",
+        _ => return None,
+    })
+}
+
+/// A code here is the code of the core: the constants above are written out for the header.
+const _: () = {
+    const fn no_value(reason: NoValue) -> i32 {
+        Error::NoValue { quantity: moistair_core::Quantity::DewPoint, reason }.code()
+    }
+    assert!(Error::UnknownSelector { code: 0 }.code() == MOISTAIR_UNKNOWN_SELECTOR);
+    assert!(Error::NotFinite { quantity: moistair_core::Quantity::DewPoint }.code() == MOISTAIR_NOT_FINITE);
+    assert!(Error::MixedFormulations.code() == MOISTAIR_MIXED_FORMULATIONS);
+    assert!(Error::MixedPressures.code() == MOISTAIR_MIXED_PRESSURES);
+    assert!(Error::NoFlow.code() == MOISTAIR_NO_FLOW);
+    assert!(no_value(NoValue::DryAir) == MOISTAIR_NO_VALUE_DRY_AIR);
+    assert!(no_value(NoValue::AboveBoiling) == MOISTAIR_NO_VALUE_ABOVE_BOILING);
+    assert!(no_value(NoValue::BelowSurfaceRange) == MOISTAIR_NO_VALUE_BELOW_SURFACE_RANGE);
+    assert!(no_value(NoValue::AboveSurfaceRange) == MOISTAIR_NO_VALUE_ABOVE_SURFACE_RANGE);
+};
