@@ -254,7 +254,8 @@ impl<R: Real> RealGas<R> {
         water_step - air_step / air
     }
 
-    fn pure_pressure<const STEPS: usize>(&self, condensed: impl Fn(R) -> Condensed<R>, start: R) -> R {
+    /// Density of pure water vapor in equilibrium with a condensed phase.
+    fn pure_density<const STEPS: usize>(&self, condensed: impl Fn(R) -> Condensed<R>, start: R) -> R {
         let phase = condensed(start);
         let mut water = start / (self.kelvins * k(water_vapor::GAS_CONSTANT));
         for _ in 0..STEPS {
@@ -267,7 +268,28 @@ impl<R: Real> RealGas<R> {
             let step = error / slope;
             water = water / (k::<R>(1.0) + step + step * step * k(0.5));
         }
-        self.water.pressure(water).0 * self.kelvins
+        water
+    }
+
+    /// Density of saturated steam over liquid water, and over ice.
+    fn steam_density(&self, surface: Surface) -> R {
+        match surface {
+            Surface::Ice => {
+                let start = hyland_wexler_ice(self.kelvins).0.exp();
+                self.pure_density::<PURE_STEPS>(|p| ice::at(self.celsius, p), start)
+            }
+            Surface::Liquid | Surface::Stable => {
+                let start = hyland_wexler_liquid(self.kelvins).0.exp();
+                self.pure_density::<PURE_STEPS>(|p| liquid_water::at(self.celsius, p), start)
+            }
+        }
+    }
+
+    /// Enthalpy of saturated steam at this temperature, J/kg.
+    pub fn saturated_steam_enthalpy(&self) -> R {
+        let density = self.steam_density(Surface::Liquid);
+        let thermal = self.water.thermal(density);
+        (thermal.energy + self.water.pressure(density).0) * self.kelvins / density
     }
 }
 
@@ -340,18 +362,14 @@ impl<R: Real> Mixture<R> for RealGas<R> {
     }
 
     fn pure_saturation_pressure(&self, pressure: R, surface: Surface) -> R {
-        let liquid = || {
-            self.pure_pressure::<PURE_STEPS>(
-                |p| liquid_water::at(self.celsius, p),
-                hyland_wexler_liquid(self.kelvins).0.exp(),
-            )
-        };
-        let ice =
-            || self.pure_pressure::<PURE_STEPS>(|p| ice::at(self.celsius, p), hyland_wexler_ice(self.kelvins).0.exp());
+        let over = |surface| self.water.pressure(self.steam_density(surface)).0 * self.kelvins;
         match surface {
-            Surface::Liquid => liquid(),
-            Surface::Ice => ice(),
-            Surface::Stable => R::select(self.celsius.lt(Self::melting_temperature(pressure)), ice(), liquid()),
+            Surface::Stable => R::select(
+                self.celsius.lt(Self::melting_temperature(pressure)),
+                over(Surface::Ice),
+                over(Surface::Liquid),
+            ),
+            surface => over(surface),
         }
     }
 

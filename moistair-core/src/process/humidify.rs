@@ -7,7 +7,7 @@ use super::{AirStream, Exchange, WetStream, parts};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
-use crate::mixture::Mixture;
+use crate::mixture::{Mixture, RealGas};
 use crate::quantity::{HumidityRatio, MassFlow, RelativeHumidity, SpecificEnthalpy, Temperature};
 use crate::real::{Scalar, k};
 use crate::saturation::Surface;
@@ -28,6 +28,25 @@ pub struct Humidified<S = f64> {
     pub evaporated: MassFlow<S>,
     /// Water that is carried as droplets or ice: condensed steam, or spray that did not evaporate.
     pub carried: MassFlow<S>,
+}
+
+/// Enthalpy of saturated steam at a temperature, IAPWS-95, on the datum of liquid water at the triple point (0.04 kJ/kg off that
+/// of the ideal gas, which is nothing to the purpose). Throttling keeps it.
+///
+/// # Errors
+/// [`Error::OutOfRange`], [`Error::NotFinite`]: 0 to 200 °C.
+///
+/// ```
+/// use moistair_core::{Temperature, process::humidify::saturated_steam_enthalpy};
+/// // ASHRAE Fundamentals 2021 ch. 1, Example 5: 2691.07 kJ/kg at 110 °C.
+/// let steam = saturated_steam_enthalpy(Temperature::from_celsius(110.0_f64))?;
+/// assert!((steam.kilojoules_per_kilogram() - 2691.07).abs() < 0.1);
+/// assert!(saturated_steam_enthalpy(Temperature::from_celsius(383.15)).is_err()); // kelvins
+/// # Ok::<(), moistair_core::Error>(())
+/// ```
+pub fn saturated_steam_enthalpy<S: Scalar>(temperature: Temperature<S>) -> Result<SpecificEnthalpy<S>, Error> {
+    let celsius = checked(Quantity::WaterTemperature, temperature.celsius())?;
+    Ok(SpecificEnthalpy::from_joules_per_kilogram(RealGas::at(celsius).saturated_steam_enthalpy()))
 }
 
 /// How much steam air takes up before it saturates.
