@@ -1,0 +1,42 @@
+//! Errors of the core as Python exceptions.
+
+use moistair_core::{Error, Quantity};
+use pyo3::exceptions::PyRuntimeError;
+use pyo3::prelude::*;
+use pyo3::sync::PyOnceLock;
+
+/// The name of a quantity as a Python identifier.
+pub fn identifier(quantity: Quantity) -> String {
+    quantity.name().replace([' ', '-'], "_")
+}
+
+/// The exception for an error.
+pub fn exception(py: Python<'_>, error: &Error) -> PyErr {
+    let (value, minimum, maximum) = match error.value_and_limits() {
+        Some((value, minimum, maximum)) => (Some(value), Some(minimum), Some(maximum)),
+        None => (None, None, None),
+    };
+    from_parts(py, (error.code(), error.to_string(), error.quantity().map(identifier), value, minimum, maximum))
+}
+
+type Parts = (i32, String, Option<String>, Option<f64>, Option<f64>, Option<f64>);
+
+/// `moistair._errors` chooses the class by the code.
+fn from_parts(py: Python<'_>, parts: Parts) -> PyErr {
+    static FROM_PARTS: PyOnceLock<Py<PyAny>> = PyOnceLock::new();
+    let made = FROM_PARTS.import(py, "moistair._errors", "from_parts").and_then(|make| make.call1(parts));
+    made.map_or_else(|failure| failure, PyErr::from_value)
+}
+
+/// An attribute name that is no property of a state.
+pub fn unknown_name(py: Python<'_>, name: &str) -> PyErr {
+    from_parts(
+        py,
+        (102, format!("{name} is no property of a state"), None::<String>, None::<f64>, None::<f64>, None::<f64>),
+    )
+}
+
+/// Something that this layer should have ruled out; never a panic.
+pub fn internal(reason: impl core::fmt::Display) -> PyErr {
+    PyRuntimeError::new_err(format!("internal error of moistair: {reason}"))
+}

@@ -1,0 +1,823 @@
+//! States of moist air: one, or an array of them.
+
+use core::hash::{Hash, Hasher};
+use std::hash::DefaultHasher;
+
+use moistair_core::columns::{Column, NAN, StateColumns};
+use moistair_core::{Basis, Error, Formulation, Length, MoistAir as Air, Pressure, Quantity, Temperature};
+use numpy::{PyArray1, PyArrayDyn, PyArrayMethods, PyReadwriteArrayDyn, PyUntypedArrayMethods};
+use pyo3::exceptions::{PyTypeError, PyValueError};
+use pyo3::prelude::*;
+use pyo3::sync::PyOnceLock;
+use pyo3::types::{PyDict, PyFloat, PyString, PyTuple, PyType};
+
+use crate::column::{self, Arguments, plain_number};
+use crate::error::{exception, identifier, internal, unknown_name};
+
+/// What fixes a state, as columns of one length; rows without a state hold NaN.
+pub struct States {
+    pub formulation: Formulation,
+    pub shape: Vec<usize>,
+    pub dry_bulb: Vec<f64>,
+    pub pressure: Vec<f64>,
+    pub humidity_ratio: Vec<f64>,
+    pub status: Vec<i32>,
+    pub failed: usize,
+}
+
+pub enum Content {
+    One(Air),
+    Many(States),
+}
+
+/// Moist air without condensate at a dry bulb, a pressure and one second property: one state, or an array of states.
+///
+/// Numbers make one state, whose attributes are floats; arrays (anything NumPy takes) are broadcast against each other and
+/// make an array of states, whose attributes are float64 arrays of the common shape. Values come bit for bit the same
+/// either way. float32 columns are taken, and computed in float64: differences of enthalpies would lose their digits otherwise.
+///
+/// A state is immutable. One state raises where it cannot be made or where a property has no value. In an array a bad
+/// row costs only itself: NaN, with its code in `status`.
+///
+/// Parameters
+/// ----------
+/// dry_bulb : float or array_like
+///     Dry-bulb temperature, °C, −80 to 150.
+/// pressure : float or array_like
+///     Absolute pressure, Pa, 20 000 to 1 100 000. See `pressure_at_elevation`.
+/// relative_humidity : float or array_like
+///     Fraction, over the stable surface: ice below the melting temperature, liquid above.
+/// relative_humidity_over_liquid : float or array_like
+///     Fraction, over liquid water at all temperatures, as instruments and weather records report it.
+/// wet_bulb, wet_bulb_over_liquid, wet_bulb_over_ice : float or array_like
+///     Thermodynamic wet bulb, °C.
+/// dew_point : float or array_like
+///     °C, over liquid water.
+/// frost_point : float or array_like
+///     °C, over ice.
+/// humidity_ratio : float or array_like
+///     kg of water vapor per kg of dry air.
+/// specific_humidity : float or array_like
+///     kg of water vapor per kg of moist air.
+/// absolute_humidity : float or array_like
+///     kg of water vapor per m³.
+/// vapor_pressure : float or array_like
+///     Pa.
+/// water_mole_fraction : float or array_like
+///     Moles of vapor per mole of moist air.
+/// degree_of_saturation : float or array_like
+///     W / W_s, over the stable surface.
+/// specific_enthalpy : float or array_like
+///     J per kg of dry air.
+/// specific_volume : float or array_like
+///     m³ per kg of dry air.
+/// density : float or array_like
+///     Of the moist air, kg/m³.
+/// formulation : {'real_gas', 'ideal_gas'}
+///     Virial mixture after IAPWS G8-10, or the handbook's perfect-gas relations.
+///
+/// Raises
+/// ------
+/// TypeError
+///     Not exactly one second property, or something that is not a number.
+/// ValueError
+///     Shapes that do not match, an unknown formulation.
+/// NotFiniteError, OutOfRangeError, UnattainableError
+///     One state that cannot be made.
+///
+/// Examples
+/// --------
+/// >>> import moistair
+/// >>> air = moistair.MoistAir(dry_bulb=34.0, relative_humidity=0.38, pressure=83_500.0)
+/// >>> f"{air.wet_bulb:.1f} °C, {air.specific_enthalpy / 1000:.1f} kJ/kg"
+/// '22.0 °C, 73.6 kJ/kg'
+/// >>> column = moistair.MoistAir(dry_bulb=[20.0, 25.0, 900.0], relative_humidity=0.5, pressure=101_325.0)
+/// >>> column.dew_point.round(2)
+/// array([ 9.26, 13.86,   nan])
+/// >>> column.status
+/// array([  0,   0, 202], dtype=int32)
+#[pyclass(frozen, weakref, module = "moistair")]
+pub struct MoistAir {
+    content: Content,
+}
+
+/// What may stand beside the dry bulb, in the order of the constructor's arguments.
+const SECOND: [Quantity; 16] = [
+    Quantity::RelativeHumidity,
+    Quantity::RelativeHumidityOverLiquid,
+    Quantity::WetBulb,
+    Quantity::WetBulbOverLiquid,
+    Quantity::WetBulbOverIce,
+    Quantity::DewPoint,
+    Quantity::FrostPoint,
+    Quantity::HumidityRatio,
+    Quantity::SpecificHumidity,
+    Quantity::AbsoluteHumidity,
+    Quantity::VaporPressure,
+    Quantity::WaterMoleFraction,
+    Quantity::DegreeOfSaturation,
+    Quantity::SpecificEnthalpy,
+    Quantity::SpecificVolume,
+    Quantity::Density,
+];
+
+#[pymethods]
+impl MoistAir {
+    #[new]
+    #[pyo3(signature = (*, dry_bulb, pressure, relative_humidity=None, relative_humidity_over_liquid=None, wet_bulb=None,
+        wet_bulb_over_liquid=None, wet_bulb_over_ice=None, dew_point=None, frost_point=None, humidity_ratio=None,
+        specific_humidity=None, absolute_humidity=None, vapor_pressure=None, water_mole_fraction=None,
+        degree_of_saturation=None, specific_enthalpy=None, specific_volume=None, density=None, formulation="real_gas"))]
+    #[allow(clippy::too_many_arguments, reason = "each is a keyword of Python")]
+    fn new<'py>(
+        py: Python<'py>,
+        dry_bulb: Bound<'py, PyAny>,
+        pressure: Bound<'py, PyAny>,
+        relative_humidity: Option<Bound<'py, PyAny>>,
+        relative_humidity_over_liquid: Option<Bound<'py, PyAny>>,
+        wet_bulb: Option<Bound<'py, PyAny>>,
+        wet_bulb_over_liquid: Option<Bound<'py, PyAny>>,
+        wet_bulb_over_ice: Option<Bound<'py, PyAny>>,
+        dew_point: Option<Bound<'py, PyAny>>,
+        frost_point: Option<Bound<'py, PyAny>>,
+        humidity_ratio: Option<Bound<'py, PyAny>>,
+        specific_humidity: Option<Bound<'py, PyAny>>,
+        absolute_humidity: Option<Bound<'py, PyAny>>,
+        vapor_pressure: Option<Bound<'py, PyAny>>,
+        water_mole_fraction: Option<Bound<'py, PyAny>>,
+        degree_of_saturation: Option<Bound<'py, PyAny>>,
+        specific_enthalpy: Option<Bound<'py, PyAny>>,
+        specific_volume: Option<Bound<'py, PyAny>>,
+        density: Option<Bound<'py, PyAny>>,
+        formulation: &str,
+    ) -> PyResult<Self> {
+        let formulation = formulation_named(formulation)?;
+        let given = [
+            relative_humidity,
+            relative_humidity_over_liquid,
+            wet_bulb,
+            wet_bulb_over_liquid,
+            wet_bulb_over_ice,
+            dew_point,
+            frost_point,
+            humidity_ratio,
+            specific_humidity,
+            absolute_humidity,
+            vapor_pressure,
+            water_mole_fraction,
+            degree_of_saturation,
+            specific_enthalpy,
+            specific_volume,
+            density,
+        ];
+        let (quantity, second) = only_one(given)?;
+        if let (Some(t), Some(x), Some(p)) = (plain_number(&dry_bulb), plain_number(&second), plain_number(&pressure)) {
+            return one(py, t?, quantity, x?, p?, formulation);
+        }
+        let name = identifier(quantity);
+        let arguments = Arguments::read(py, &["dry_bulb", &name, "pressure"], &[dry_bulb, second, pressure])?;
+        let columns = arguments.columns()?;
+        let [dry_bulb, second, pressure] = columns[..] else { return Err(internal("three columns expected")) };
+        if arguments.shape.is_empty() {
+            let first = |column: Column| column.get(0).unwrap_or(NAN);
+            return one(py, first(dry_bulb), quantity, first(second), first(pressure), formulation);
+        }
+        let inputs = StateColumns { dry_bulb, property: quantity, second, pressure, formulation };
+        Ok(Content::Many(States::compute(py, arguments.shape.clone(), arguments.rows, inputs)?).into())
+    }
+
+    /// Dry-bulb temperature, °C; bit for bit as given.
+    #[getter]
+    fn dry_bulb<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::DryBulb)
+    }
+
+    /// Absolute pressure, Pa.
+    #[getter]
+    fn pressure<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::Pressure)
+    }
+
+    /// Humidity ratio W, kg of water vapor per kg of dry air.
+    #[getter]
+    fn humidity_ratio<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::HumidityRatio)
+    }
+
+    /// Water mole fraction x_w, moles of vapor per mole of moist air.
+    #[getter]
+    fn water_mole_fraction<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::WaterMoleFraction)
+    }
+
+    /// Vapor pressure x_w p, Pa.
+    #[getter]
+    fn vapor_pressure<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::VaporPressure)
+    }
+
+    /// Specific humidity, kg of water vapor per kg of moist air.
+    #[getter]
+    fn specific_humidity<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::SpecificHumidity)
+    }
+
+    /// Absolute humidity, kg of water vapor per m³.
+    #[getter]
+    fn absolute_humidity<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::AbsoluteHumidity)
+    }
+
+    /// Specific enthalpy h, J per kg of dry air. Datum: dry air at 0 °C, liquid water at the triple point (0 °C for
+    /// the ideal gas).
+    #[getter]
+    fn specific_enthalpy<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::SpecificEnthalpy)
+    }
+
+    /// Specific volume v, m³ per kg of dry air.
+    #[getter]
+    fn specific_volume<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::SpecificVolume)
+    }
+
+    /// Density of the moist air, kg/m³.
+    #[getter]
+    fn density<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::Density)
+    }
+
+    /// Isobaric heat capacity at constant humidity ratio, J/K per kg of dry air.
+    #[getter]
+    fn specific_heat<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::SpecificHeat)
+    }
+
+    /// Compressibility factor p v / (R T) of the mixture; 1 for the ideal gas.
+    #[getter]
+    fn compressibility_factor<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::CompressibilityFactor)
+    }
+
+    /// Relative humidity x_w / x_ws, a fraction, over the stable surface: ice below the melting temperature, liquid
+    /// above. Over ice it may exceed one. No value above boiling.
+    #[getter]
+    fn relative_humidity<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::RelativeHumidity)
+    }
+
+    /// Relative humidity x_w / x_ws, a fraction, over liquid water, supercooled below the melting temperature
+    /// (convention of WMO-No. 8). No value below −40 °C or above boiling.
+    #[getter]
+    fn relative_humidity_over_liquid<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::RelativeHumidityOverLiquid)
+    }
+
+    /// Degree of saturation W / W_s, a fraction, over the stable surface. No value above boiling.
+    #[getter]
+    fn degree_of_saturation<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::DegreeOfSaturation)
+    }
+
+    /// Vapor pressure deficit (x_ws − x_w) p, Pa, over the stable surface; negative where supersaturated over ice.
+    /// No value above boiling.
+    #[getter]
+    fn vapor_pressure_deficit<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::VaporPressureDeficit)
+    }
+
+    /// Saturation pressure of pure water at this temperature, Pa, over the stable surface.
+    #[getter]
+    fn saturation_pressure<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::SaturationPressure)
+    }
+
+    /// Enhancement factor: x_ws p over the saturation pressure of pure water; 1 for the ideal gas. No value above
+    /// boiling.
+    #[getter]
+    fn enhancement_factor<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::EnhancementFactor)
+    }
+
+    /// Thermodynamic wet bulb (adiabatic saturation), °C: over liquid where that one is at or above the melting
+    /// temperature, over ice otherwise.
+    #[getter]
+    fn wet_bulb<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::WetBulb)
+    }
+
+    /// Thermodynamic wet bulb over liquid water, supercooled below the melting temperature, °C. No value below −40
+    /// °C.
+    #[getter]
+    fn wet_bulb_over_liquid<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::WetBulbOverLiquid)
+    }
+
+    /// Thermodynamic wet bulb over ice, °C. No value above the melting temperature.
+    #[getter]
+    fn wet_bulb_over_ice<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::WetBulbOverIce)
+    }
+
+    /// Dew point, °C: always over liquid water, −40 °C and above. No value for dry air.
+    #[getter]
+    fn dew_point<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::DewPoint)
+    }
+
+    /// Frost point, °C: always over ice, −100 °C to the melting temperature. No value for dry air.
+    #[getter]
+    fn frost_point<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::FrostPoint)
+    }
+
+    /// Which formulation: 'real_gas' or 'ideal_gas'.
+    #[getter]
+    fn formulation(&self) -> &'static str {
+        formulation_name(self.formulation_())
+    }
+
+    /// Shape of the attributes; ``()`` for one state.
+    #[getter]
+    fn shape<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyTuple>> {
+        PyTuple::new(py, self.shape_())
+    }
+
+    /// Number of states.
+    #[getter]
+    fn size(&self) -> usize {
+        match &self.content {
+            Content::One(_) => 1,
+            Content::Many(states) => states.status.len(),
+        }
+    }
+
+    /// Why a row has no state: 0 where it has one, else the code of the error. An int32 array; 0 for one state.
+    #[getter]
+    fn status<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        match &self.content {
+            Content::One(_) => Ok(0_i32.into_pyobject(py)?.into_any()),
+            Content::Many(states) => column::array(py, states.status.clone(), &states.shape),
+        }
+    }
+
+    /// Number of rows without a state.
+    #[getter]
+    fn failed(&self) -> usize {
+        match &self.content {
+            Content::One(_) => 0,
+            Content::Many(states) => states.failed,
+        }
+    }
+
+    /// Several properties in one pass, which shares their common work.
+    ///
+    /// Parameters
+    /// ----------
+    /// *names : str
+    ///     Names of properties, as the attributes are called.
+    /// out : dict of str to numpy.ndarray, optional
+    ///     Arrays to write to, one for each name, of the shape of the states: the dictionary of an earlier call, for
+    ///     one. float64 arrays that are contiguous are written directly; others, float32 among them, at the end.
+    ///
+    /// Returns
+    /// -------
+    /// dict of str to float or numpy.ndarray
+    ///     `out` itself where it is given. NaN where a row has no value; one state raises instead.
+    ///
+    /// Raises
+    /// ------
+    /// UnknownNameError
+    ///     A name that is no property.
+    /// NoValueError
+    ///     One state, and a property that has no meaning there.
+    /// TypeError, ValueError
+    ///     `out` does not fit.
+    ///
+    /// Examples
+    /// --------
+    /// >>> import moistair
+    /// >>> day = moistair.MoistAir(dry_bulb=[10.0, 20.0], dew_point=[5.0, 12.0], pressure=101_325.0)
+    /// >>> columns = day.properties("relative_humidity", "wet_bulb")
+    /// >>> columns["wet_bulb"].round(2)
+    /// array([ 7.49, 15.02])
+    /// >>> again = day.properties("relative_humidity", "wet_bulb", out=columns)
+    /// >>> again is columns
+    /// True
+    #[pyo3(signature = (*names, out=None))]
+    fn properties<'py>(
+        &self,
+        py: Python<'py>,
+        names: &Bound<'py, PyTuple>,
+        out: Option<Bound<'py, PyDict>>,
+    ) -> PyResult<Bound<'py, PyDict>> {
+        let names: Vec<Bound<'py, PyString>> =
+            names.iter().map(|name| Ok(name.cast_into()?)).collect::<PyResult<_>>()?;
+        let quantities = names
+            .iter()
+            .map(|name| property_named(&name.to_cow()?).ok_or_else(|| unknown_name(py, &name.to_string())))
+            .collect::<PyResult<Vec<_>>>()?;
+        match (&self.content, out) {
+            (Content::One(air), None) => properties_of_one(py, air, &names, quantities),
+            (Content::One(_), Some(_)) => Err(PyTypeError::new_err("out is for arrays of states; this is one state")),
+            (Content::Many(states), None) => {
+                let result = PyDict::new(py);
+                for (name, column) in names.iter().zip(states.properties(py, &quantities)?) {
+                    result.set_item(name, column::array(py, column, &states.shape)?)?;
+                }
+                Ok(result)
+            }
+            (Content::Many(states), Some(out)) => {
+                states.properties_into(py, &names, &quantities, &out)?;
+                Ok(out)
+            }
+        }
+    }
+
+    fn __eq__(&self, other: &Self) -> bool {
+        self.key() == other.key()
+    }
+
+    fn __hash__(&self) -> u64 {
+        let mut hasher = DefaultHasher::new();
+        self.key().hash(&mut hasher);
+        hasher.finish()
+    }
+
+    fn __repr__(&self) -> String {
+        let formulation = formulation_name(self.formulation_());
+        match &self.content {
+            Content::One(air) => format!(
+                "MoistAir(dry_bulb={:?}, humidity_ratio={:?}, pressure={:?}, formulation='{formulation}')",
+                air.dry_bulb().celsius(),
+                air.humidity_ratio().kilograms_per_kilogram(),
+                air.pressure().pascals(),
+            ),
+            Content::Many(states) => {
+                let shape = states.shape.iter().map(|length| format!("{length},")).collect::<String>();
+                format!("<MoistAir array: shape=({shape}), failed={}, formulation='{formulation}'>", states.failed)
+            }
+        }
+    }
+
+    fn __copy__(slf: Bound<'_, Self>) -> Bound<'_, Self> {
+        slf
+    }
+
+    fn __deepcopy__<'py>(slf: Bound<'py, Self>, _memo: &Bound<'py, PyAny>) -> Bound<'py, Self> {
+        slf
+    }
+
+    fn __reduce__<'py>(slf: &Bound<'py, Self>) -> PyResult<(Bound<'py, PyAny>, Bound<'py, PyTuple>)> {
+        let py = slf.py();
+        let this = slf.get();
+        let restore = py.import("moistair._core")?.getattr("restore_state")?;
+        let code = this.formulation_().code();
+        let parts = match &this.content {
+            Content::One(air) => {
+                let ratio = air.humidity_ratio().kilograms_per_kilogram();
+                (code, (), air.dry_bulb().celsius(), air.pressure().pascals(), ratio, 0).into_pyobject(py)?
+            }
+            Content::Many(states) => {
+                let shape = PyTuple::new(py, &states.shape)?;
+                let column = |values: &Vec<f64>| column::array(py, values.clone(), &[values.len()]);
+                let (t, p, w) = (column(&states.dry_bulb)?, column(&states.pressure)?, column(&states.humidity_ratio)?);
+                let status = column::array(py, states.status.clone(), &[states.status.len()])?;
+                (code, shape, t, p, w, status).into_pyobject(py)?
+            }
+        };
+        Ok((restore, parts))
+    }
+
+    /// ``MoistAir[float]`` and ``MoistAir[numpy.ndarray]``, for annotations.
+    #[classmethod]
+    fn __class_getitem__<'py>(cls: &Bound<'py, PyType>, item: Bound<'py, PyAny>) -> PyResult<Bound<'py, PyAny>> {
+        cls.py().import("types")?.getattr("GenericAlias")?.call1((cls, item))
+    }
+}
+
+impl From<Content> for MoistAir {
+    fn from(content: Content) -> Self {
+        Self { content }
+    }
+}
+
+impl MoistAir {
+    fn value<'py>(&self, py: Python<'py>, quantity: Quantity) -> PyResult<Bound<'py, PyAny>> {
+        match &self.content {
+            Content::One(air) => {
+                let value = air.value(quantity).map_err(|error| exception(py, &error))?;
+                Ok(value.into_pyobject(py)?.into_any())
+            }
+            Content::Many(states) => {
+                let column =
+                    states.properties(py, &[quantity])?.pop().ok_or_else(|| internal("one column expected"))?;
+                column::array(py, column, &states.shape)
+            }
+        }
+    }
+
+    fn formulation_(&self) -> Formulation {
+        match &self.content {
+            Content::One(air) => air.formulation(),
+            Content::Many(states) => states.formulation,
+        }
+    }
+
+    fn shape_(&self) -> &[usize] {
+        match &self.content {
+            Content::One(_) => &[],
+            Content::Many(states) => &states.shape,
+        }
+    }
+
+    /// What makes two states equal: the same formulation, shape and numbers. A row without a state equals its like.
+    fn key(&self) -> (i32, &[usize], Vec<u64>, &[i32]) {
+        // Adding zero makes −0 plain zero.
+        let bits = |value: f64| if value.is_nan() { NAN.to_bits() } else { (value + 0.0).to_bits() };
+        let code = self.formulation_().code();
+        match &self.content {
+            Content::One(air) => {
+                let ratio = air.humidity_ratio().kilograms_per_kilogram();
+                let numbers = [air.dry_bulb().celsius(), air.pressure().pascals(), ratio];
+                (code, &[], numbers.map(bits).to_vec(), &[])
+            }
+            Content::Many(states) => {
+                let columns = [&states.dry_bulb, &states.pressure, &states.humidity_ratio];
+                let numbers = columns.iter().flat_map(|column| column.iter().copied().map(bits)).collect();
+                (code, &states.shape, numbers, &states.status)
+            }
+        }
+    }
+}
+
+impl States {
+    /// Makes the states of `rows` rows.
+    pub fn compute(py: Python<'_>, shape: Vec<usize>, rows: usize, inputs: StateColumns<'_>) -> PyResult<Self> {
+        let [mut dry_bulb, mut pressure, mut humidity_ratio] =
+            [column::blank(rows, NAN)?, column::blank(rows, NAN)?, column::blank(rows, NAN)?];
+        let mut status = column::blank(rows, 0)?;
+        let report = py.detach(|| {
+            inputs.compute(
+                rows,
+                &[Quantity::DryBulb, Quantity::Pressure, Quantity::HumidityRatio],
+                &mut [&mut dry_bulb, &mut pressure, &mut humidity_ratio],
+                Some(&mut status),
+            )
+        });
+        let failed = report.map_err(internal)?.failed;
+        Ok(Self { formulation: inputs.formulation, shape, dry_bulb, pressure, humidity_ratio, status, failed })
+    }
+
+    fn inputs(&self) -> StateColumns<'_> {
+        StateColumns {
+            dry_bulb: Column::new(&self.dry_bulb),
+            property: Quantity::HumidityRatio,
+            second: Column::new(&self.humidity_ratio),
+            pressure: Column::new(&self.pressure),
+            formulation: self.formulation,
+        }
+    }
+
+    fn write(&self, py: Python<'_>, quantities: &[Quantity], outputs: &mut [&mut [f64]]) -> PyResult<()> {
+        let report = py.detach(|| self.inputs().compute(self.status.len(), quantities, outputs, None));
+        report.map(|_| ()).map_err(internal)
+    }
+
+    fn properties(&self, py: Python<'_>, quantities: &[Quantity]) -> PyResult<Vec<Vec<f64>>> {
+        let mut columns =
+            quantities.iter().map(|_| column::blank(self.status.len(), NAN)).collect::<PyResult<Vec<_>>>()?;
+        let mut outputs: Vec<&mut [f64]> = columns.iter_mut().map(Vec::as_mut_slice).collect();
+        self.write(py, quantities, &mut outputs)?;
+        Ok(columns)
+    }
+
+    fn properties_into<'py>(
+        &self,
+        py: Python<'py>,
+        names: &[Bound<'py, PyString>],
+        quantities: &[Quantity],
+        out: &Bound<'py, PyDict>,
+    ) -> PyResult<()> {
+        let mut targets =
+            names.iter().map(|name| Target::read(out, name, &self.shape)).collect::<PyResult<Vec<_>>>()?;
+        let mut outputs = targets.iter_mut().map(Target::memory).collect::<PyResult<Vec<_>>>()?;
+        self.write(py, quantities, &mut outputs)?;
+        targets.into_iter().try_for_each(|target| target.finish(py, &self.shape))
+    }
+}
+
+/// Where a property is written to: an array of the caller, or memory of our own that is copied to it in the end.
+enum Target<'py> {
+    Direct(PyReadwriteArrayDyn<'py, f64>),
+    Copied(Bound<'py, PyAny>, Vec<f64>),
+}
+
+impl<'py> Target<'py> {
+    fn read(out: &Bound<'py, PyDict>, name: &Bound<'py, PyString>, shape: &[usize]) -> PyResult<Self> {
+        let array = out.get_item(name)?.ok_or_else(|| PyValueError::new_err(format!("out has no array for {name}")))?;
+        let untyped = array
+            .cast::<numpy::PyUntypedArray>()
+            .map_err(|_| PyTypeError::new_err(format!("out[{name:?}] must be a NumPy array")))?;
+        if untyped.shape() != shape {
+            return Err(PyValueError::new_err(format!(
+                "shapes do not match: out[{name:?}] {:?}, states {shape:?}",
+                untyped.shape()
+            )));
+        }
+        match array.cast::<PyArrayDyn<f64>>() {
+            Ok(typed) if typed.is_c_contiguous() && typed.is_aligned() => {
+                Ok(Self::Direct(typed.try_readwrite().map_err(column::in_use)?))
+            }
+            _ => Ok(Self::Copied(array.clone(), column::blank(shape.iter().product(), NAN)?)),
+        }
+    }
+
+    fn memory(&mut self) -> PyResult<&mut [f64]> {
+        match self {
+            Self::Direct(array) => Ok(array.as_slice_mut()?),
+            Self::Copied(_, column) => Ok(column),
+        }
+    }
+
+    fn finish(self, py: Python<'py>, shape: &[usize]) -> PyResult<()> {
+        if let Self::Copied(array, column) = self {
+            static COPY: PyOnceLock<Py<PyAny>> = PyOnceLock::new();
+            let source = column::array(py, column, shape)?;
+            COPY.import(py, "moistair._columns", "copy_to")?.call1((array, source))?;
+        }
+        Ok(())
+    }
+}
+
+/// The one second property that is given.
+fn only_one<'py>(given: [Option<Bound<'py, PyAny>>; 16]) -> PyResult<(Quantity, Bound<'py, PyAny>)> {
+    let mut found = None;
+    for (quantity, value) in SECOND.into_iter().zip(given) {
+        if let Some(value) = value {
+            if let Some((first, _)) = found {
+                let (first, second) = (identifier(first), identifier(quantity));
+                return Err(PyTypeError::new_err(format!(
+                    "exactly one property beside dry_bulb and pressure fixes a state; {first} and {second} are given"
+                )));
+            }
+            found = Some((quantity, value));
+        }
+    }
+    found.ok_or_else(|| {
+        let names = SECOND.map(identifier).join(", ");
+        PyTypeError::new_err(format!("one property beside dry_bulb and pressure is needed, one of: {names}"))
+    })
+}
+
+fn one(py: Python<'_>, t: f64, quantity: Quantity, x: f64, p: f64, formulation: Formulation) -> PyResult<MoistAir> {
+    match air(t, quantity, x, p, formulation) {
+        Ok(air) => Ok(Content::One(air).into()),
+        Err(error) => Err(exception(py, &error)),
+    }
+}
+
+fn air(t: f64, quantity: Quantity, x: f64, p: f64, formulation: Formulation) -> Result<Air, Error> {
+    let basis = Basis::new(Pressure::from_pascals(p), formulation);
+    Air::from_dry_bulb_and(Temperature::from_celsius(t), quantity, x, basis)
+}
+
+fn properties_of_one<'py>(
+    py: Python<'py>,
+    air: &Air,
+    names: &[Bound<'py, PyString>],
+    quantities: Vec<Quantity>,
+) -> PyResult<Bound<'py, PyDict>> {
+    let mut values = Vec::with_capacity(quantities.len());
+    air.values(quantities, |_, value| values.push(value));
+    let result = PyDict::new(py);
+    for (name, value) in names.iter().zip(values) {
+        result.set_item(name, value.map_err(|error| exception(py, &error))?)?;
+    }
+    Ok(result)
+}
+
+/// The property that an attribute names.
+fn property_named(name: &str) -> Option<Quantity> {
+    let same = |quantity: &&Quantity| {
+        let words = quantity.name().bytes().map(|byte| if byte == b' ' { b'_' } else { byte });
+        quantity.is_property() && words.eq(name.bytes())
+    };
+    Quantity::ALL.iter().find(same).copied()
+}
+
+pub fn formulation_named(name: &str) -> PyResult<Formulation> {
+    match name {
+        "real_gas" => Ok(Formulation::RealGas),
+        "ideal_gas" => Ok(Formulation::IdealGas),
+        _ => Err(PyValueError::new_err(format!("formulation must be 'real_gas' or 'ideal_gas', not {name:?}"))),
+    }
+}
+
+fn formulation_name(formulation: Formulation) -> &'static str {
+    match formulation {
+        Formulation::RealGas => "real_gas",
+        Formulation::IdealGas => "ideal_gas",
+    }
+}
+
+/// A state from what fixes it, for pickle.
+#[pyfunction]
+pub fn restore_state(
+    py: Python<'_>,
+    formulation: i32,
+    shape: Vec<usize>,
+    dry_bulb: Bound<'_, PyAny>,
+    pressure: Bound<'_, PyAny>,
+    humidity_ratio: Bound<'_, PyAny>,
+    status: Bound<'_, PyAny>,
+) -> PyResult<MoistAir> {
+    let formulation =
+        Formulation::from_code(formulation).ok_or_else(|| PyValueError::new_err("no such formulation"))?;
+    if shape.is_empty() {
+        let (t, w, p) = (dry_bulb.extract()?, humidity_ratio.extract()?, pressure.extract()?);
+        return one(py, t, Quantity::HumidityRatio, w, p, formulation);
+    }
+    let column = |value: Bound<'_, PyAny>| -> PyResult<Vec<f64>> { Ok(value.cast::<PyArray1<f64>>()?.to_vec()?) };
+    let (dry_bulb, pressure, ratio) = (column(dry_bulb)?, column(pressure)?, column(humidity_ratio)?);
+    let status = status.cast::<PyArray1<i32>>()?.to_vec()?;
+    let rows = shape.iter().try_fold(1_usize, |rows, length| rows.checked_mul(*length));
+    if [dry_bulb.len(), pressure.len(), ratio.len(), status.len()].iter().any(|length| Some(*length) != rows) {
+        return Err(PyValueError::new_err("columns of a state differ in length"));
+    }
+    let failed = status.iter().filter(|code| **code != 0).count();
+    Ok(Content::Many(States { formulation, shape, dry_bulb, pressure, humidity_ratio: ratio, status, failed }).into())
+}
+
+/// Pressure of the standard atmosphere (ISO 2533:1975) at an elevation.
+///
+/// A measured pressure is always better: weather moves it by ±3 %. A reading reduced to sea level is not the station's.
+///
+/// Parameters
+/// ----------
+/// elevation : float or array_like
+///     Above mean sea level, m, −5000 to 11 000.
+/// geometric : bool
+///     Whether the elevation is geometric and is to be converted to geopotential altitude; by default it is taken as the latter,
+///     as the handbook does (0.05 % less at 5 km).
+///
+/// Returns
+/// -------
+/// float or numpy.ndarray
+///     Pa; NaN where a row of an array is out of range.
+///
+/// Raises
+/// ------
+/// NotFiniteError, OutOfRangeError
+///     A single elevation that has no value.
+///
+/// Examples
+/// --------
+/// >>> import moistair
+/// >>> round(moistair.pressure_at_elevation(1600.0))
+/// 83524
+/// >>> moistair.pressure_at_elevation([0.0, 1600.0]).round()
+/// array([101325.,  83524.])
+#[pyfunction]
+#[pyo3(signature = (elevation, *, geometric=false))]
+pub fn pressure_at_elevation<'py>(
+    py: Python<'py>,
+    elevation: Bound<'py, PyAny>,
+    geometric: bool,
+) -> PyResult<Bound<'py, PyAny>> {
+    let pressure = |meters| {
+        let length = Length::from_meters(meters);
+        let result = if geometric { Pressure::at_geometric_elevation(length) } else { Pressure::at_elevation(length) };
+        result.map(Pressure::pascals)
+    };
+    let scalar = |meters| match pressure(meters) {
+        Ok(pascals) => Ok(PyFloat::new(py, pascals).into_any()),
+        Err(error) => Err(exception(py, &error)),
+    };
+    if let Some(meters) = plain_number(&elevation) {
+        return scalar(meters?);
+    }
+    let arguments = Arguments::read(py, &["elevation"], &[elevation])?;
+    let columns = arguments.columns()?;
+    let meters = |row| columns.iter().find_map(|column| column.get(row)).unwrap_or(NAN);
+    if arguments.shape.is_empty() {
+        return scalar(meters(0));
+    }
+    let mut result = column::blank(arguments.rows, NAN)?;
+    py.detach(|| {
+        for (row, place) in result.iter_mut().enumerate() {
+            *place = pressure(meters(row)).unwrap_or(NAN);
+        }
+    });
+    column::array(py, result, &arguments.shape)
+}
+
+/// Every quantity as (name, code, unit, minimum, maximum, whether it is a property of a state).
+#[pyfunction]
+pub fn quantity_table() -> Vec<(String, i32, &'static str, f64, f64, bool)> {
+    let row = |quantity: &Quantity| {
+        let (minimum, maximum) = quantity.limits();
+        (identifier(*quantity), quantity.code(), quantity.unit(), minimum, maximum, quantity.is_property())
+    };
+    Quantity::ALL.iter().map(row).collect()
+}
