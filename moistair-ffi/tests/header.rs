@@ -1,0 +1,165 @@
+//! The committed header is what the sources say, both compilers take it without a warning, and it declares what the library exports.
+//!
+//! After a change of the interface, write it anew with `MOISTAIR_WRITE_HEADER=1 cargo test -p moistair-ffi --test header`.
+
+use std::collections::BTreeSet;
+use std::path::{Path, PathBuf};
+use std::process::Command;
+use std::{env, fs};
+
+use moistair_core::Quantity;
+
+fn here() -> &'static Path {
+    Path::new(env!("CARGO_MANIFEST_DIR"))
+}
+
+fn committed() -> String {
+    fs::read_to_string(here().join("include/moistair.h")).unwrap()
+}
+
+/// Macros that follow from Cargo.toml or have arguments.
+fn macros() -> String {
+    let [major, minor, patch] =
+        [env!("CARGO_PKG_VERSION_MAJOR"), env!("CARGO_PKG_VERSION_MINOR"), env!("CARGO_PKG_VERSION_PATCH")];
+    format!(
+        "
+/* Version of this header. */
+#define MOISTAIR_VERSION_MAJOR {major}
+#define MOISTAIR_VERSION_MINOR {minor}
+#define MOISTAIR_VERSION_PATCH {patch}
+#define MOISTAIR_VERSION (1000000 * MOISTAIR_VERSION_MAJOR + 1000 * MOISTAIR_VERSION_MINOR + MOISTAIR_VERSION_PATCH)
+
+/* The bit of a property in a mask. */
+#define MOISTAIR_BIT(property) ((uint64_t)1 << (property))"
+    )
+}
+
+/// The head of the header: the conventions, from the documentation of the crate.
+fn preamble() -> String {
+    let source = fs::read_to_string(here().join("src/lib.rs")).unwrap();
+    let lines = source.lines().map_while(|line| line.strip_prefix("//!"));
+    let lines = lines.filter(|line| !line.contains("# Safety"));
+    let text: String = lines.map(|line| format!(" *{line}\n")).collect();
+    let text = text.replace("[`MOISTAIR_OK`](status::MOISTAIR_OK)", "MOISTAIR_OK");
+    format!("/*\n{text} *\n * Made from the sources; do not edit. MIT OR Apache-2.0\n */")
+}
+
+fn rendered() -> String {
+    let mut config = cbindgen::Config::from_file(here().join("cbindgen.toml")).unwrap();
+    config.header = Some(preamble());
+    config.after_includes = Some(macros());
+    let mut builder = cbindgen::Builder::new().with_config(config);
+    for file in ["version", "status", "quantity", "state", "columns"] {
+        builder = builder.with_src(here().join(format!("src/{file}.rs")));
+    }
+    let mut bytes = Vec::new();
+    builder.generate().unwrap().write(&mut bytes);
+    String::from_utf8(bytes).unwrap()
+}
+
+#[test]
+fn committed_header_is_up_to_date() {
+    let path = here().join("include/moistair.h");
+    let text = rendered();
+    if env::var_os("MOISTAIR_WRITE_HEADER").is_some() {
+        fs::write(&path, &text).unwrap();
+    }
+    assert!(
+        text == committed(),
+        "include/moistair.h is stale: MOISTAIR_WRITE_HEADER=1 cargo test -p moistair-ffi --test header"
+    );
+}
+
+#[test]
+fn every_quantity_has_its_selector() {
+    let header = committed();
+    for quantity in Quantity::ALL {
+        let name = quantity.name().to_uppercase().replace([' ', '-'], "_");
+        let line = format!("#define MOISTAIR_{name} {}\n", quantity.code());
+        assert!(header.contains(&line), "{line}");
+    }
+}
+
+/// Names of the functions that the header declares.
+fn declared() -> BTreeSet<String> {
+    let header = committed();
+    let code = header.split("*/").filter_map(|part| part.split("/*").next());
+    let words = code.flat_map(|part| part.split(|c: char| !c.is_alphanumeric() && c != '_' && c != '('));
+    words
+        .filter(|word| word.starts_with("moistair_"))
+        .filter_map(|word| word.split_once('('))
+        .map(|(name, _)| name.into())
+        .collect()
+}
+
+/// The library that cargo built beside this test.
+fn library(name: &str) -> PathBuf {
+    let path = env::current_exe().unwrap().with_file_name(name);
+    assert!(path.exists(), "{} is missing", path.display());
+    path
+}
+
+#[test]
+fn exports_are_the_declarations() {
+    for (library, arguments) in
+        [(library("libmoistair.so"), ["-D", "--defined-only"]), (library("libmoistair.a"), ["-g", "--defined-only"])]
+    {
+        let output = Command::new("nm").args(arguments).arg(&library).output().unwrap();
+        let text = String::from_utf8(output.stdout).unwrap();
+        let symbols = text.lines().filter_map(|line| line.split_once(" T ")).map(|(_, name)| name.trim().to_string());
+        let exports: BTreeSet<_> = symbols.filter(|name| name.starts_with("moistair_")).collect();
+        assert!(exports.len() > 10, "{text}");
+        assert_eq!(exports, declared(), "{}", library.display());
+    }
+}
+
+fn run(command: &mut Command) -> String {
+    let output = command.output().unwrap();
+    let text = String::from_utf8_lossy(&output.stdout).into_owned() + &String::from_utf8_lossy(&output.stderr);
+    assert!(output.status.success(), "{command:?}\n{text}");
+    text
+}
+
+const STRICT: [&str; 5] = ["-Wall", "-Wextra", "-Werror", "-pedantic", "-Wstrict-prototypes"];
+
+fn compiler(program: &str, standard: &str) -> Command {
+    let mut command = Command::new(program);
+    let warnings = STRICT.into_iter().filter(|flag| program != "g++" || *flag != "-Wstrict-prototypes");
+    command.arg(format!("-std={standard}")).args(warnings).arg("-I").arg(here().join("include"));
+    command
+}
+
+#[test]
+fn header_compiles_strictly() {
+    for (program, standard, language) in [
+        ("gcc", "c99", "c"),
+        ("gcc", "c11", "c"),
+        ("gcc", "c17", "c"),
+        ("g++", "c++17", "c++"),
+        ("g++", "c++20", "c++"),
+    ] {
+        let header = here().join("include/moistair.h");
+        run(compiler(program, standard).args(["-fsyntax-only", "-x", language]).arg(header));
+    }
+}
+
+/// Compiles a C file against the static library, without any library but the C library, and returns what it prints.
+fn compiled_and_run(source: &str) -> String {
+    let name = Path::new(source).file_stem().unwrap().to_str().unwrap();
+    let program = env::current_exe().unwrap().with_file_name(format!("moistair-{name}"));
+    let mut command = compiler("gcc", if source.starts_with("tests") { "c11" } else { "c99" });
+    run(command.arg(here().join(source)).arg(library("libmoistair.a")).arg("-o").arg(&program));
+    run(&mut Command::new(program))
+}
+
+#[test]
+fn c_sees_the_same_layout_and_version() {
+    let printed = compiled_and_run("tests/layout.c");
+    assert!(printed.contains("layout and version agree"), "{printed}");
+}
+
+#[test]
+fn examples_run() {
+    let printed = compiled_and_run("examples/states.c");
+    assert!(printed.contains("wet bulb"), "{printed}");
+}

@@ -1,0 +1,43 @@
+/* Layout of the structures as C sees them, and agreement of header and library. */
+#include <stddef.h>
+#include <stdio.h>
+#include <string.h>
+
+#include "moistair.h"
+
+_Static_assert(sizeof(moistair_error) == 32, "moistair_error");
+_Static_assert(offsetof(moistair_error, code) == 24, "moistair_error");
+_Static_assert(offsetof(moistair_error, quantity) == 28, "moistair_error");
+_Static_assert(sizeof(moistair_basis) == 16, "moistair_basis");
+_Static_assert(offsetof(moistair_basis, formulation) == 8, "moistair_basis");
+_Static_assert(sizeof(moistair_state) == 104, "moistair_state");
+_Static_assert(offsetof(moistair_state, compressibility_factor) == 88, "moistair_state");
+_Static_assert(offsetof(moistair_state, formulation) == 96, "moistair_state");
+_Static_assert(sizeof(moistair_column) == 2 * sizeof(void *), "moistair_column");
+_Static_assert(sizeof(moistair_limits) == 16, "moistair_limits");
+
+static int check(int condition, const char *text)
+{
+    if (!condition)
+        printf("FAILED: %s\n", text);
+    return !condition;
+}
+
+int main(void)
+{
+    int failed = 0;
+    failed += check(moistair_abi_version() == MOISTAIR_ABI_VERSION, "interface version");
+    failed += check(moistair_version() == MOISTAIR_VERSION, "library version");
+    failed += check(moistair_version() / 1000000 == MOISTAIR_VERSION_MAJOR, "major version");
+    failed += check(moistair_version() / 1000 % 1000 == MOISTAIR_VERSION_MINOR, "minor version");
+    failed += check(moistair_version() % 1000 == MOISTAIR_VERSION_PATCH, "patch version");
+    failed += check(moistair_numerics_version() >= 1, "numerics version");
+    failed += check(strcmp(moistair_quantity_name(MOISTAIR_DRY_AIR_MASS_FLOW), "dry_air_mass_flow") == 0, "name");
+    failed += check(strcmp(moistair_quantity_unit(MOISTAIR_HUMIDITY_RATIO), "kg/kg") == 0, "unit");
+    failed += check(strcmp(moistair_quantity_name(31), "") == 0, "no name");
+    failed += check(strcmp(moistair_status_text(0), "success") == 0, "text of success");
+    failed += check(strcmp(moistair_status_text(-7), "unknown status") == 0, "text of no status");
+    if (failed == 0)
+        printf("layout and version agree\n");
+    return failed;
+}
