@@ -9,7 +9,7 @@
 
 use super::{Gas, Mixture, Saturation};
 use crate::quantity::ZERO_CELSIUS;
-use crate::real::{Mask, Real, k};
+use crate::real::{Choose, Real, k};
 use crate::saturation::{Surface, hyland_wexler_ice, hyland_wexler_liquid};
 use crate::substance::liquid_water::Condensed;
 use crate::substance::{Jet, dry_air, ice, liquid_water, water_vapor};
@@ -147,7 +147,7 @@ pub fn cross_third_virial_water<R: Real>(kelvins: R) -> Jet<R> {
 
 impl<R: Real> RealGas<R> {
     /// Between these, °C, ice and liquid are compared; the melting temperature lies between −0.08 and 0.01 °C up to 1.1 MPa.
-    const BOTH_PHASES: (f64, f64) = (-40.0, 0.02);
+    const BOTH_PHASES: (f64, f64) = (-0.2, 0.02);
 
     fn pressure(&self, air: R, water: R) -> Pressure<R> {
         let (air_value, air_slope) = self.air.pressure(air);
@@ -206,17 +206,15 @@ impl<R: Real> RealGas<R> {
             Surface::Liquid => liquid_water::at(celsius, pressure),
             Surface::Ice => ice::at(celsius, pressure),
             Surface::Stable => {
-                let (liquid, ice) = (liquid_water::at(celsius, pressure), ice::at(celsius, pressure));
-                // The lower chemical potential, where both equations hold; ice below, liquid above.
-                let frozen = celsius
-                    .lt(k(Self::BOTH_PHASES.0))
-                    .or(celsius.lt(k(Self::BOTH_PHASES.1)).and(ice.gibbs.lt(liquid.gibbs)));
-                let pick = |a: R, b: R| R::select(frozen, a, b);
-                Condensed {
-                    gibbs: pick(ice.gibbs, liquid.gibbs),
-                    enthalpy: pick(ice.enthalpy, liquid.enthalpy),
-                    volume: pick(ice.volume, liquid.volume),
-                }
+                // The lower chemical potential; far from the melting temperature it is known without asking.
+                let liquid = || liquid_water::at(celsius, pressure);
+                let ice = || ice::at(celsius, pressure);
+                let lower = || {
+                    let (liquid, ice) = (liquid(), ice());
+                    Condensed::choose(ice.gibbs.lt(liquid.gibbs), ice, liquid)
+                };
+                let (cold, warm) = Self::BOTH_PHASES;
+                R::pick(celsius.lt(k(cold)), ice, || R::pick(k::<R>(warm).lt(celsius), liquid, lower))
             }
         }
     }
@@ -364,10 +362,10 @@ impl<R: Real> Mixture<R> for RealGas<R> {
     fn pure_saturation_pressure(&self, pressure: R, surface: Surface) -> R {
         let over = |surface| self.water.pressure(self.steam_density(surface)).0 * self.kelvins;
         match surface {
-            Surface::Stable => R::select(
+            Surface::Stable => R::pick(
                 self.celsius.lt(Self::melting_temperature(pressure)),
-                over(Surface::Ice),
-                over(Surface::Liquid),
+                || over(Surface::Ice),
+                || over(Surface::Liquid),
             ),
             surface => over(surface),
         }

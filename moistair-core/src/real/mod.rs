@@ -14,6 +14,7 @@ mod tests;
 
 use core::ops::{Add, Div, Mul, Neg, Sub};
 
+#[allow(unused_imports, reason = "so far only the tests run formulas on lanes")]
 pub use lanes::Lanes;
 pub use scalar::Scalar;
 
@@ -54,6 +55,12 @@ pub trait Real:
     /// `a` where the mask holds, `b` elsewhere.
     fn select(mask: Self::Mask, a: Self, b: Self) -> Self;
 
+    /// `select` of two costly values: a single number evaluates only the one it takes, lanes evaluate both; the bits are the same.
+    #[inline(always)]
+    fn pick<T: Choose<Self>>(mask: Self::Mask, a: impl FnOnce() -> T, b: impl FnOnce() -> T) -> T {
+        T::choose(mask, a(), b())
+    }
+
     /// The smaller; `self` where they cannot be compared.
     #[inline(always)]
     fn at_most(self, limit: Self) -> Self {
@@ -64,6 +71,19 @@ pub trait Real:
     #[inline(always)]
     fn at_least(self, limit: Self) -> Self {
         Self::select(self.lt(limit), limit, self)
+    }
+}
+
+/// Values that can be chosen between lane by lane: a number, or a structure of numbers.
+pub trait Choose<R: Real>: Sized {
+    /// `a` where the mask holds, `b` elsewhere.
+    fn choose(mask: R::Mask, a: Self, b: Self) -> Self;
+}
+
+impl<R: Real> Choose<R> for R {
+    #[inline(always)]
+    fn choose(mask: R::Mask, a: Self, b: Self) -> Self {
+        R::select(mask, a, b)
     }
 }
 

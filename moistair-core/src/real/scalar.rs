@@ -1,6 +1,6 @@
 //! `f64` and `f32` as [`Real`], and the public bound [`Scalar`].
 
-use super::{Mask, Real, elementary};
+use super::{Choose, Mask, Real, elementary};
 
 impl Mask for bool {
     const NONE: Self = false;
@@ -65,6 +65,10 @@ macro_rules! scalar {
             #[inline(always)]
             fn select(mask: bool, a: Self, b: Self) -> Self {
                 if mask { a } else { b }
+            }
+            #[inline(always)]
+            fn pick<T: Choose<Self>>(mask: bool, a: impl FnOnce() -> T, b: impl FnOnce() -> T) -> T {
+                if mask { a() } else { b() }
             }
         }
 

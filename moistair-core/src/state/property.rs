@@ -108,7 +108,11 @@ pub(super) fn stable_wet_bulb<M: Mixture<R>, R: Real>(celsius: R, pressure: R, h
     let melting = M::melting_temperature(pressure);
     let (at_melting, _) = saturation_deficit::<M, R>(melting, pressure, humidity_ratio, enthalpy, Surface::Liquid);
     let over = |surface| wet_bulb::<M, R, WET_BULB_STEPS>(celsius, pressure, humidity_ratio, enthalpy, surface);
-    R::select(k::<R>(0.0).le(at_melting), over(Surface::Liquid).at_least(melting), over(Surface::Ice).at_most(melting))
+    R::pick(
+        k::<R>(0.0).le(at_melting),
+        || over(Surface::Liquid).at_least(melting),
+        || over(Surface::Ice).at_most(melting),
+    )
 }
 
 /// Whether a saturation exists in the gas phase.

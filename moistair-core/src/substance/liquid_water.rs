@@ -2,7 +2,7 @@
 
 use super::{water, water_vapor};
 use crate::quantity::ZERO_CELSIUS;
-use crate::real::{Real, k, polynomial};
+use crate::real::{Choose, Real, k, polynomial};
 
 /// Liquid water is evaluated between these, °C; outside, at the nearer end.
 pub const RANGE: (f64, f64) = (-45.0, 205.0);
@@ -24,6 +24,16 @@ pub struct Condensed<R> {
     pub volume: R,
 }
 
+impl<R: Real> Choose<R> for Condensed<R> {
+    fn choose(mask: R::Mask, a: Self, b: Self) -> Self {
+        Self {
+            gibbs: R::select(mask, a.gibbs, b.gibbs),
+            enthalpy: R::select(mask, a.enthalpy, b.enthalpy),
+            volume: R::select(mask, a.volume, b.volume),
+        }
+    }
+}
+
 /// Liquid water at `celsius`, `pascals`.
 pub fn at<R: Real>(celsius: R, pascals: R) -> Condensed<R> {
     at_after::<R, DENSITY_STEPS>(celsius, pascals)
@@ -40,16 +50,17 @@ fn equation<R: Real, const STEPS: usize>(celsius: R, pascals: R) -> Condensed<R>
     let kelvins = celsius + k(ZERO_CELSIUS);
     let rt = kelvins * k(water::GAS_CONSTANT);
     let tau = k::<R>(water::CRITICAL_TEMPERATURE) / kelvins;
+    let amplitudes = water::amplitudes(tau);
     let mut delta = density_start(celsius, pascals);
     for _ in 0..STEPS {
         // p = ρ R T (1 + δφʳ_δ) and its slope in density: R6-95 Table 3.
-        let residual = water::residual(delta, tau);
+        let residual = water::residual(delta, &amplitudes);
         let pressure = delta * rt * (residual.density_first + k(1.0)) * k(water::CRITICAL_DENSITY);
         let slope =
             rt * (residual.density_first * k(2.0) + residual.density_second + k(1.0)) * k(water::CRITICAL_DENSITY);
         delta = delta - (pressure - pascals) / slope;
     }
-    let residual = water::residual(delta, tau);
+    let residual = water::residual(delta, &amplitudes);
     let ideal = water_vapor::ideal(kelvins);
     let volume = k::<R>(1.0) / (delta * k(water::CRITICAL_DENSITY));
     let helmholtz = rt * (delta.ln() + ideal.value + residual.value);
@@ -82,41 +93,4 @@ fn density_start<R: Real>(celsius: R, pascals: R) -> R {
 }
 
 #[cfg(test)]
-mod probe {
-    #[test]
-    fn print_density() {
-        for i in 0..=250 {
-            let t = -45.0 + i as f64;
-            let c = super::at_after::<f64, 14>(t, 101325.0);
-            std::println!("FIT {t} {:.15}", 1.0 / c.volume / 322.0);
-        }
-        for (t, dt) in [(-37.0, 0.01), (-36.0, 0.01), (-35.0, 0.01), (-30.0, 0.01), (0.0, 0.01)] {
-            let h = |t| super::equation::<f64, 20>(t, 101325.0).enthalpy;
-            std::println!("CP {t} {}", (h(t + dt) - h(t - dt)) / (2.0 * dt));
-        }
-        let (mut wg, mut wv) = ([0.0f64; 6], [0.0f64; 6]);
-        for i in 0..=242 {
-            for p in [20e3, 101325.0, 1.1e6, 1.6e6] {
-                let t = -37.0 + i as f64;
-                let e = super::equation::<f64, 20>(t, p);
-                let c = [
-                    super::equation::<f64, 0>(t, p),
-                    super::equation::<f64, 1>(t, p),
-                    super::equation::<f64, 2>(t, p),
-                    super::equation::<f64, 3>(t, p),
-                    super::equation::<f64, 4>(t, p),
-                ];
-                for k in 0..5 {
-                    wg[k] = wg[k].max((c[k].gibbs - e.gibbs).abs() / (461.5 * (t + 273.15)));
-                    wv[k] = wv[k].max((c[k].enthalpy - e.enthalpy).abs());
-                }
-            }
-        }
-        std::println!("worst g/RT {wg:?} h {wv:?}");
-        let c = super::at_after::<f64, 14>(26.85, 101325.0);
-        std::println!("{c:?}");
-        for t in [-20.0f64, -70.0, 0.0] {
-            std::println!("{:?}", super::super::ice::at(t, 101325.0));
-        }
-    }
-}
+mod tests;

@@ -117,8 +117,13 @@ pub fn density_series<R: Real, const N: usize, const L: usize>(
         }
         let jet = Jet::power((ln_tau * k(term.t)).exp(), term.t, term.n);
         for (sum, weight) in series.iter_mut().zip(weights) {
-            *sum = sum.plus(jet.times(k(*weight)));
+            if weight.to_bits() != 0 {
+                *sum = sum.plus(jet.times(k(*weight)));
+            }
         }
     }
     series
 }
+
+#[cfg(test)]
+mod tests;

@@ -77,16 +77,22 @@ pub struct Residual<R> {
     pub temperature_first: R,
 }
 
-pub fn residual<R: Real>(delta: R, tau: R) -> Residual<R> {
-    let (ln_delta, ln_tau) = (delta.ln(), tau.ln());
+/// `n τᵗ` of every term: what a search for density need not repeat.
+pub fn amplitudes<R: Real>(tau: R) -> [R; TERMS.len()] {
+    let ln_tau = tau.ln();
+    TERMS.map(|term| (ln_tau * k(term.t)).exp() * k(term.n))
+}
+
+pub fn residual<R: Real>(delta: R, amplitudes: &[R; TERMS.len()]) -> Residual<R> {
     let mut sum = Residual { value: k(0.0), density_first: k(0.0), density_second: k(0.0), temperature_first: k(0.0) };
-    let mut previous = (0, k::<R>(0.0)); // δᶜ is shared by runs of terms
-    for term in &TERMS {
-        if term.c != previous.0 {
-            previous = (term.c, power(delta, term.c));
+    let mut run = (0, k::<R>(0.0), k::<R>(1.0)); // c, δᶜ and exp(−δᶜ), shared by runs of terms
+    for (term, amplitude) in TERMS.iter().zip(amplitudes) {
+        if term.c != run.0 {
+            let cutoff = power(delta, term.c);
+            run = (term.c, cutoff, (-cutoff).exp());
         }
-        let cutoff = previous.1;
-        let value = (ln_delta * k(f64::from(term.d)) + ln_tau * k(term.t) - cutoff).exp() * k(term.n);
+        let (_, cutoff, decay) = run;
+        let value = *amplitude * power(delta, term.d) * decay;
         let slope = k::<R>(f64::from(term.d)) - cutoff * k(f64::from(term.c));
         let curvature = slope * (slope - k(1.0)) - cutoff * k(f64::from(term.c * term.c));
         sum.value = sum.value + value;
