@@ -1,4 +1,5 @@
 //! A row of `f64` that moves through a formula together; the compiler turns it into vector instructions.
+#![cfg_attr(not(test), allow(dead_code, reason = "so far only the tests run formulas on lanes"))]
 #![allow(
     clippy::indexing_slicing,
     clippy::needless_range_loop,
