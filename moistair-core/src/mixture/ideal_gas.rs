@@ -21,8 +21,8 @@ const CP_LIQUID: f64 = 4_186.0;
 /// h_i = −333.4 + 2.1 t
 const H_ICE: f64 = -333_400.0;
 const CP_ICE: f64 = 2_100.0;
-/// Where the two saturation curves cross, °C.
-const MELTING: f64 = 0.01;
+/// Where the two saturation curves cross, °C: the root of Eq. (5) less Eq. (6), computed with 50 digits.
+const MELTING: f64 = 0.010000597211848596;
 
 #[derive(Clone, Copy, Debug)]
 pub struct IdealGas<R> {
@@ -104,3 +104,6 @@ impl<R: Real> Mixture<R> for IdealGas<R> {
         Self::at(celsius).condensed(surface)
     }
 }
+
+#[cfg(test)]
+mod tests;

@@ -16,9 +16,9 @@ use crate::substance::{Jet, dry_air, ice, liquid_water, water_vapor};
 
 /// Newton steps for the density at given temperature, pressure and composition; for saturation; for pure saturation; for
 /// the melting temperature. The test of this module shows each to be enough and none to be idle.
-const DENSITY_STEPS: usize = 4;
-const SATURATION_STEPS: usize = 5;
-const PURE_STEPS: usize = 4;
+const DENSITY_STEPS: usize = 3;
+const SATURATION_STEPS: usize = 3;
+const PURE_STEPS: usize = 3;
 const MELTING_STEPS: usize = 2;
 
 /// 2R / (M_a M_w) with R = 8.314472 J/(mol K): G8-10 Eq. (2) and Table 2.
@@ -291,6 +291,19 @@ impl<R: Real> RealGas<R> {
     }
 }
 
+/// The melting temperature, °C. Start: the slope of the melting curve at the triple point. Then equal chemical potentials, with
+/// dg/dT = −s of either phase.
+fn melting<R: Real, const STEPS: usize>(pressure: R) -> R {
+    let mut celsius = k::<R>(0.01) - pressure * k(7.4e-8);
+    for _ in 0..STEPS {
+        let (liquid, ice) = (liquid_water::at(celsius, pressure), ice::at(celsius, pressure));
+        let kelvins = celsius + k(ZERO_CELSIUS);
+        let fusion = (liquid.enthalpy - ice.enthalpy - liquid.gibbs + ice.gibbs) / kelvins;
+        celsius = celsius + (liquid.gibbs - ice.gibbs) / fusion;
+    }
+    celsius
+}
+
 /// Solves `aᵢ x + bᵢ y = cᵢ`.
 fn solve_pair<R: Real>(first: (R, R, R), second: (R, R, R)) -> (R, R) {
     let determinant = first.0 * second.1 - first.1 * second.0;
@@ -372,18 +385,13 @@ impl<R: Real> Mixture<R> for RealGas<R> {
     }
 
     fn melting_temperature(pressure: R) -> R {
-        // Start: the slope of the melting curve at the triple point. Then equal chemical potentials; dg/dT = s_ice − s_liquid… = −Δs.
-        let mut celsius = k::<R>(0.01) - pressure * k(7.4e-8);
-        for _ in 0..MELTING_STEPS {
-            let (liquid, ice) = (liquid_water::at(celsius, pressure), ice::at(celsius, pressure));
-            let kelvins = celsius + k(ZERO_CELSIUS);
-            let fusion = (liquid.enthalpy - ice.enthalpy - liquid.gibbs + ice.gibbs) / kelvins;
-            celsius = celsius + (liquid.gibbs - ice.gibbs) / fusion;
-        }
-        celsius
+        melting::<R, MELTING_STEPS>(pressure)
     }
 
     fn condensed_enthalpy(celsius: R, pressure: R, surface: Surface) -> R {
         Self::condensed(celsius, pressure, surface).enthalpy
     }
 }
+
+#[cfg(test)]
+mod tests;

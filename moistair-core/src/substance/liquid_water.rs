@@ -82,7 +82,7 @@ fn colder<R: Real>(at_limit: Condensed<R>, limit: R, celsius: R) -> Condensed<R>
     }
 }
 
-/// δ near 0.1 MPa, within 5e-5, by a polynomial in √(t + 41 °C) that this project fitted to R6-95 itself (the root follows
+/// δ near 0.1 MPa, within 6e-5, by a polynomial in √(t + 41 °C) that this project fitted to R6-95 itself (the root follows
 /// the density into the stability limit); a mean compressibility does for the pressure.
 fn density_start<R: Real>(celsius: R, pascals: R) -> R {
     const FIT: [f64; 8] =
