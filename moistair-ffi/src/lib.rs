@@ -20,6 +20,7 @@
 
 pub mod columns;
 mod memory;
+pub mod process;
 pub mod quantity;
 pub mod state;
 pub mod status;
@@ -27,6 +28,7 @@ mod text;
 pub mod version;
 
 pub use columns::*;
+pub use process::*;
 pub use quantity::*;
 pub use state::*;
 pub use status::*;

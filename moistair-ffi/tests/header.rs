@@ -49,7 +49,7 @@ fn rendered() -> String {
     config.header = Some(preamble());
     config.after_includes = Some(macros());
     let mut builder = cbindgen::Builder::new().with_config(config);
-    for file in ["version", "status", "quantity", "state", "columns"] {
+    for file in ["version", "status", "quantity", "state", "columns", "process"] {
         builder = builder.with_src(here().join(format!("src/{file}.rs")));
     }
     let mut bytes = Vec::new();
