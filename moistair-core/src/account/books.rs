@@ -1,6 +1,7 @@
 //! How well the books close.
 
 use super::Sum;
+use crate::process::books::Books;
 
 /// The residuals of one book over many samples; owned by the caller, zeroed at first.
 #[repr(C)]
@@ -64,6 +65,12 @@ impl Residuals {
         self.largest_relative
     }
 
+    /// The same in units of the rounding of numbers, 2⁻⁵²: a book of a few terms that closes leaves a few of them.
+    #[must_use]
+    pub fn largest_in_epsilons(&self) -> f64 {
+        self.largest_relative / f64::EPSILON
+    }
+
     /// The sum of the absolute residuals relative to the sum of the scales; 0 when that is zero.
     #[must_use]
     pub fn relative(&self) -> f64 {
@@ -101,9 +108,39 @@ impl Residuals {
 pub struct BooksTotal {
     heat: Residuals,
     water: Residuals,
+    closed: u64,
 }
 
 impl BooksTotal {
+    /// Adds the books of a process, and counts them if they [close](Books::close). False when either was refused.
+    ///
+    /// ```
+    /// use moistair_core::*;
+    /// use moistair_core::account::BooksTotal;
+    /// use moistair_core::process::{AirStream, books, sensible};
+    /// let site: Pressure = Pressure::from_kilopascals(101.325);
+    /// let air = MoistAir::from_dry_bulb(Temperature::from_celsius(15.0), RelativeHumidity::from_percent(60.0), site)?;
+    /// let entering = AirStream::new(air, MassFlow::from_kilograms_per_second(5.0))?;
+    /// let heater = sensible::to_temperature(&entering, Temperature::from_celsius(22.0))?;
+    /// let mut total = BooksTotal::default();
+    /// assert!(total.record(&books::balance(&[entering.into()], &heater.leaving.into(), &heater.exchange)));
+    /// // Heat that nobody supplied.
+    /// assert!(total.record(&books::balance(&[entering.into()], &heater.leaving.into(), &process::Exchange::none())));
+    /// assert_eq!((total.heat().samples(), total.closed()), (2, 1));
+    /// assert!(total.heat().largest_in_epsilons() > 8.0);
+    /// # Ok::<(), Error>(())
+    /// ```
+    pub fn record(&mut self, books: &Books) -> bool {
+        let taken = self.add(
+            books.heat_residual.watts(),
+            books.heat_scale.watts(),
+            books.water_residual.kilograms_per_second(),
+            books.water_scale.kilograms_per_second(),
+        );
+        self.closed = self.closed.saturating_add((taken && books.close()).into());
+        taken
+    }
+
     /// Adds one closed pair of books, each with its scale: W and kg/s, or J and kg. False when either was refused.
     pub fn add(&mut self, heat: f64, heat_scale: f64, water: f64, water_scale: f64) -> bool {
         let heat = self.heat.add(heat, heat_scale);
@@ -116,6 +153,7 @@ impl BooksTotal {
         let mut merged = *self;
         let fits = merged.heat.merge(&other.heat) && merged.water.merge(&other.water);
         if fits {
+            merged.closed = self.closed.saturating_add(other.closed);
             *self = merged;
         }
         fits
@@ -125,6 +163,12 @@ impl BooksTotal {
     #[must_use]
     pub const fn heat(&self) -> &Residuals {
         &self.heat
+    }
+
+    /// How many of the [recorded](Self::record) books closed to rounding.
+    #[must_use]
+    pub const fn closed(&self) -> u64 {
+        self.closed
     }
 
     /// The water book.

@@ -6,6 +6,7 @@
 
 mod books;
 mod counts;
+mod deviation;
 mod periods;
 mod sum;
 mod total;
@@ -15,6 +16,7 @@ mod tests;
 
 pub use books::{BooksTotal, Residuals};
 pub use counts::{Counts, QUALITY_SLOTS, REASON_SLOTS};
+pub use deviation::Deviation;
 pub use periods::{Period, Periods, SHORTEST_PERIOD};
 pub use sum::Sum;
 pub use total::{Added, Rule, Total};

@@ -77,6 +77,28 @@ impl Periods {
         }
     }
 
+    /// The period that is not finished yet, as if nothing more came: what is left of it passes without being counted.
+    /// `None` when no time of it has passed.
+    ///
+    /// ```
+    /// use moistair_core::{account::{Periods, Rule, Total}, signal::Quality};
+    /// let mut hours = Periods::new(3600.0, Total::new(Rule::Step, 1800.0));
+    /// assert!(hours.unfinished().is_none());
+    /// hours.add(3600.0, 10.0, Quality::Good);
+    /// assert!(hours.unfinished().is_none());
+    /// hours.add(4500.0, 10.0, Quality::Good);
+    /// let last = hours.unfinished().unwrap();
+    /// assert_eq!((last.start, last.total.total(), last.total.coverage()), (3600.0, 9000.0, 0.25));
+    /// ```
+    #[must_use]
+    pub fn unfinished(&self) -> Option<Period> {
+        let mut period = self.finished();
+        let now = period.total.clock().now();
+        let begun = period.total.elapsed_seconds() > 0.0;
+        period.total.pause(self.start.saturating_add(self.length).saturating_sub(now));
+        begun.then_some(period)
+    }
+
     /// The total of the period that is not finished yet.
     #[must_use]
     pub const fn current(&self) -> &Total {

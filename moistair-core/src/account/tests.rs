@@ -159,10 +159,42 @@ fn books_keep_the_worst_and_the_sum() {
 }
 
 #[test]
+fn deviations_merge() {
+    let mut whole = Deviation::default();
+    assert_eq!((whole.mean(), whole.root_mean_square(), whole.lowest(), whole.highest()), (None, None, None, None));
+    let mut halves = [whole; 2];
+    for (i, (measured, computed)) in
+        [(1.0, 2.0), (5.0, 2.0), (-2.0, -2.0), (f64::MAX, -1.0), (0.5, f64::INFINITY)].into_iter().enumerate()
+    {
+        whole.add(measured, computed);
+        halves[i % 2].add(measured, computed);
+    }
+    let [mut merged, other] = halves;
+    assert!(merged.merge(&other) && merged.merge(&Deviation::default()));
+    assert_eq!(merged, whole);
+    assert_eq!((whole.samples(), whole.refused(), whole.lowest(), whole.highest()), (3, 2, Some(-1.0), Some(3.0)));
+    assert_eq!((whole.mean(), whole.root_mean_square()), (Some(2.0 / 3.0), Some((10.0_f64 / 3.0).sqrt())));
+    assert!(!Deviation::default().add(1e200, 0.0));
+}
+
+#[test]
+fn an_unfinished_period_is_padded() {
+    let mut hours = Periods::new(3600.0, Total::new(Rule::Step, 60.0));
+    assert_eq!(hours.unfinished(), None);
+    hours.add(7200.0 + 3540.0, 1.0, Quality::Good);
+    hours.add(7200.0 + 3599.0, 1.0, Quality::Good);
+    let last = hours.unfinished().unwrap();
+    assert_eq!((last.start, last.total.covered_seconds(), last.total.elapsed_seconds()), (7200.0, 59.0, 3600.0));
+    assert_eq!(hours.current().elapsed_seconds(), 3599.0);
+}
+
+#[test]
 fn no_padding() {
     assert_eq!(size_of::<Total>(), 2 * 16 + 4 * 8 + 3 * 8 + 24 + 8);
     assert_eq!(size_of::<Periods>(), size_of::<Total>() + 16);
     assert_eq!(size_of::<Residuals>(), 32 + 24);
+    assert_eq!(size_of::<BooksTotal>(), 2 * size_of::<Residuals>() + 8);
+    assert_eq!(size_of::<Deviation>(), 2 * 16 + 2 * 8 + 2 * 8);
     assert_eq!(size_of::<Counts>(), 8 * (QUALITY_SLOTS + 2 * REASON_SLOTS + 1));
 }
 

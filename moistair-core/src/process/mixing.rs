@@ -1,12 +1,13 @@
 //! Adiabatic mixing of any number of streams, with fog and ice where they form.
 
-use super::{Exchange, WetStream};
+use super::{AirStream, Exchange, WetStream};
 use crate::basis::Basis;
-use crate::error::Error;
-use crate::quantity::{HumidityRatio, Pressure, SpecificEnthalpy};
+use crate::bounds::Quantity;
+use crate::error::{Error, checked};
+use crate::quantity::{HumidityRatio, MassFlow, Pressure, SpecificEnthalpy};
 use crate::real::{Scalar, k};
 use crate::state::condensate::checked_pressure;
-use crate::state::{AirWithCondensate, Freezing};
+use crate::state::{AirWithCondensate, Freezing, MoistAir};
 
 /// What mixing gave.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -79,6 +80,34 @@ pub fn adiabatic_at<S: Scalar>(
         )?
     };
     Ok(Mixed { leaving: WetStream { air, dry_air_flow: flow }, exchange: Exchange::none() })
+}
+
+/// The stream of `air` that is left of a total dry-air flow when `part` of it is known: the recirculated air, where the flows of outdoor
+/// and supply air are measured.
+///
+/// # Errors
+/// [`Error::Infeasible`] when the part is more than the total; [`Error::NotFinite`], [`Error::OutOfRange`] for the total.
+///
+/// ```
+/// use moistair_core::*;
+/// use moistair_core::process::{AirStream, mixing};
+/// let site: Pressure = Pressure::from_kilopascals(101.325);
+/// let state = |t, rh| MoistAir::from_dry_bulb(Temperature::from_celsius(t), RelativeHumidity::from_percent(rh), site);
+/// let flow = MassFlow::from_kilograms_per_second;
+/// let outdoor = AirStream::new(state(32.0, 45.0)?, flow(1.5))?;
+/// let recirculated = mixing::remainder(flow(6.0), &outdoor, state(24.0, 50.0)?)?;
+/// assert_eq!(recirculated.dry_air_flow(), flow(4.5));
+/// assert!(mixing::remainder(flow(1.0), &outdoor, state(24.0, 50.0)?).is_err());
+/// # Ok::<(), Error>(())
+/// ```
+pub fn remainder<S: Scalar>(total: MassFlow<S>, part: &AirStream<S>, air: MoistAir<S>) -> Result<AirStream<S>, Error> {
+    let total = checked(Quantity::DryAirFlow, total.kilograms_per_second())?;
+    let rest = total - part.dry_air_flow;
+    if rest < k(0.0) {
+        let (value, max) = (part.dry_air_flow.to_f64(), total.to_f64());
+        return Err(Error::Infeasible { quantity: Quantity::DryAirFlow, value, min: 0.0, max });
+    }
+    AirStream::new(air, MassFlow::from_kilograms_per_second(rest))
 }
 
 fn flowing<S: Scalar>(streams: &[WetStream<S>]) -> impl Iterator<Item = &WetStream<S>> {

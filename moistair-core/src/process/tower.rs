@@ -124,11 +124,30 @@ pub fn water_use<S: Scalar>(
 }
 
 /// Balance with a known air flow: the air is taken to leave saturated, which over-predicts evaporation by up to 10 %
-/// when it does not.
+/// when it does not. Without water the air leaves as it came: a tower at rest, whatever its thermometers read.
 ///
 /// # Errors
 /// [`Error::Infeasible`] when the water is not cooled, or the air cannot take the heat within the range of states; [`Error::NoFlow`],
 /// [`Error::OutOfRange`], [`Error::NotFinite`].
+///
+/// ```
+/// use moistair_core::*;
+/// use moistair_core::process::{AirStream, tower::{TowerWater, WaterTreatment, with_air_flow}};
+/// let site: Pressure = Pressure::from_kilopascals(101.325);
+/// let outdoor = MoistAir::from_dry_bulb(Temperature::from_celsius(30.0), RelativeHumidity::from_percent(50.0), site)?;
+/// let entering = AirStream::from_volume_flow(outdoor, VolumeFlow::from_cubic_meters_per_second(10.0))?;
+/// let treatment = WaterTreatment { drift_fraction: 0.0001, cycles_of_concentration: 4.0 };
+/// let (flow, celsius) = (MassFlow::from_kilograms_per_second, Temperature::from_celsius);
+/// let water = TowerWater { flow: flow(12.0), hot: celsius(32.0), cold: celsius(27.0) };
+/// let running = with_air_flow(&entering, water, treatment)?;
+/// assert!((running.heat_rejected.kilowatts() - 251.0).abs() < 1.0);
+/// assert!((running.water.evaporation.kilograms_per_second() - 0.109).abs() < 0.002);
+/// let still = with_air_flow(&entering, TowerWater { flow: flow(0.0), ..water }, treatment)?;
+/// assert_eq!((still.leaving, still.water.make_up), (entering, flow(0.0)));
+/// let calm = AirStream::new(outdoor, flow(0.0))?;
+/// assert_eq!(with_air_flow(&calm, water, treatment), Err(Error::NoFlow));
+/// # Ok::<(), Error>(())
+/// ```
 pub fn with_air_flow<S: Scalar>(
     entering: &AirStream<S>,
     water: TowerWater<S>,
@@ -136,6 +155,9 @@ pub fn with_air_flow<S: Scalar>(
 ) -> Result<TowerBalance<S>, Error> {
     let air = entering.air();
     let side = WaterSide::new(&air, water)?;
+    if water.flow.kilograms_per_second() == k(0.0) {
+        return side.balance(entering, air, treatment);
+    }
     let flow = entering.flow()?;
     let pressure = air.pressure().pascals();
     let (h1, w1) = parts(&air);
@@ -213,7 +235,7 @@ impl<S: Scalar> WaterSide<S> {
         let flow = checked(Quantity::WaterFlow, water.flow.kilograms_per_second())?;
         let hot = checked(Quantity::WaterTemperature, water.hot.celsius())?;
         let cold = checked(Quantity::WaterTemperature, water.cold.celsius())?;
-        if hot < cold {
+        if hot < cold && flow > k(0.0) {
             let (min, max) = Quantity::TowerRange.limits();
             return Err(Error::Infeasible { quantity: Quantity::TowerRange, value: (hot - cold).to_f64(), min, max });
         }

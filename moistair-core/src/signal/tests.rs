@@ -49,10 +49,26 @@ fn units_convert() {
         (Unit::PoundPerHour, 1.0, 1.259979e-4, PRINTED),
         (Unit::GramPerKilogram, 8.0, 0.008, 0.0),
         (Unit::Kilowatt, 1.5, 1500.0, 0.0),
+        (Unit::Minute, 2.0, 120.0, 0.0),
+        (Unit::Hour, 24.0, 86_400.0, 0.0),
+        (Unit::KilowattHour, 2.5, 9e6, 0.0),
+        (Unit::KilojoulePerKilogram, 50.3, 50_300.0, 0.0),
     ];
     for (unit, raw, expected, relative) in cases {
         let value = unit.to_core(raw);
         assert!((value - expected).abs() <= relative * expected.abs(), "{raw} {unit}: {value}");
+    }
+}
+
+#[test]
+fn units_convert_back() {
+    for unit in Unit::ALL {
+        for value in [0.0, 0.45, -17.7, 21.3, 101_325.0, 9e6] {
+            // Zeros of the scales are some hundreds: a few of their units in the last place.
+            let back = unit.to_core(unit.from_core(value));
+            assert!((back - value).abs() <= 4.0 * f64::EPSILON * (value.abs() + 300.0), "{value} {unit}: {back}");
+        }
+        assert_eq!(unit.from_core(-0.0).is_sign_negative(), false, "{unit}");
     }
 }
 

@@ -23,11 +23,17 @@ coded_enum! {
         HumidityRatio = 8, "humidity ratio";
         /// A heat flow or an electric power, W.
         Power = 9, "power";
+        /// A time or a duration, s.
+        Time = 10, "time";
+        /// An amount of heat or of electric energy, J.
+        Energy = 11, "energy";
+        /// An enthalpy per mass of dry air, J/kg.
+        SpecificEnthalpy = 12, "specific enthalpy";
     }
 }
 
 coded_enum! {
-    /// The unit of a raw signal.
+    /// The unit of a raw signal, or of a value that is shown.
     Unit {
         /// °C
         Celsius = 1, "°C";
@@ -73,6 +79,20 @@ coded_enum! {
         Watt = 21, "W";
         /// kW
         Kilowatt = 22, "kW";
+        /// s
+        Second = 23, "s";
+        /// min
+        Minute = 24, "min";
+        /// h
+        Hour = 25, "h";
+        /// J
+        Joule = 26, "J";
+        /// kWh
+        KilowattHour = 27, "kWh";
+        /// J/kg
+        JoulePerKilogram = 28, "J/kg";
+        /// kJ/kg
+        KilojoulePerKilogram = 29, "kJ/kg";
     }
 }
 
@@ -93,10 +113,13 @@ impl Unit {
             Kind::MassFlow => matches!(self, KilogramPerSecond | KilogramPerHour | PoundPerHour),
             Kind::HumidityRatio => matches!(self, KilogramPerKilogram | GramPerKilogram),
             Kind::Power => matches!(self, Watt | Kilowatt),
+            Kind::Time => matches!(self, Second | Minute | Hour),
+            Kind::Energy => matches!(self, Joule | KilowattHour),
+            Kind::SpecificEnthalpy => matches!(self, JoulePerKilogram | KilojoulePerKilogram),
         }
     }
 
-    /// A raw reading in the unit of the core: °C, fraction, Pa, m³/s, kg/s, kg/kg, W.
+    /// A raw reading in the unit of the core: °C, fraction, Pa, m³/s, kg/s, kg/kg, W, s, J, J/kg.
     ///
     /// A reading that is in that unit already comes back bit for bit, except that −0 becomes 0; the decimal multiples
     /// are rounded once.
@@ -113,6 +136,22 @@ impl Unit {
         (raw - zero) * factor / divisor + 0.0
     }
 
+    /// A value in the unit of the core, in this unit: for display, logs and controllers.
+    ///
+    /// A value that is in this unit already comes back bit for bit, except that −0 becomes 0.
+    ///
+    /// ```
+    /// use moistair_core::signal::Unit;
+    /// assert_eq!(Unit::KilowattHour.from_core(9e6), 2.5);
+    /// assert_eq!(Unit::Fahrenheit.from_core(100.0), 212.0);
+    /// assert!(Unit::Kelvin.from_core(f64::NAN).is_nan());
+    /// ```
+    #[must_use]
+    pub const fn from_core(self, value: f64) -> f64 {
+        let (zero, factor, divisor) = self.conversion();
+        value * divisor / factor + zero + 0.0
+    }
+
     /// `(zero, factor, divisor)` of `(raw − zero) · factor / divisor`; all exact by definition but the inch of mercury.
     const fn conversion(self) -> (f64, f64, f64) {
         match self {
@@ -122,12 +161,18 @@ impl Unit {
             | Unit::CubicMeterPerSecond
             | Unit::KilogramPerSecond
             | Unit::KilogramPerKilogram
-            | Unit::Watt => (0.0, 1.0, 1.0),
+            | Unit::Watt
+            | Unit::Second
+            | Unit::Joule
+            | Unit::JoulePerKilogram => (0.0, 1.0, 1.0),
             Unit::Fahrenheit => (32.0, 5.0, 9.0),
             Unit::Kelvin => (273.15, 1.0, 1.0),
             Unit::Percent => (0.0, 1.0, 100.0),
             Unit::Hectopascal => (0.0, 100.0, 1.0),
-            Unit::Kilopascal | Unit::Kilowatt => (0.0, 1000.0, 1.0),
+            Unit::Kilopascal | Unit::Kilowatt | Unit::KilojoulePerKilogram => (0.0, 1000.0, 1.0),
+            Unit::Minute => (0.0, 60.0, 1.0),
+            Unit::Hour => (0.0, 3600.0, 1.0),
+            Unit::KilowattHour => (0.0, 3.6e6, 1.0),
             Unit::Bar => (0.0, 1e5, 1.0),
             // One pound-force on the square of 0.0254 m.
             Unit::PoundPerSquareInch => (0.0, 4.4482216152605, 0.00064516),
