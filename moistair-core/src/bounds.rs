@@ -117,8 +117,9 @@ quantities! {
     WaterFlow = 36, "water flow", "kg/s", 0.0, 1.0e6;
     /// Temperature of liquid water.
     WaterTemperature = 37, "water temperature", "°C", 0.0, 200.0;
-    /// Specific enthalpy of steam, on the datum of liquid water at the triple point (0 °C for the ideal gas).
-    SteamEnthalpy = 38, "steam enthalpy", "J/kg", 0.0, 4_000_000.0;
+    /// Specific enthalpy of steam, on the datum of liquid water at the triple point (0 °C for the ideal gas); at least that of
+    /// water boiling at 20 kPa.
+    SteamEnthalpy = 38, "steam enthalpy", "J/kg", 251_000.0, 4_000_000.0;
     /// Temperature that a process is to leave.
     LeavingTemperature = 39, "leaving temperature", "°C", -80.0, 150.0;
     /// Apparatus dew point of a coil.

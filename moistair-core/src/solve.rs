@@ -2,21 +2,35 @@
 
 use crate::real::{Scalar, k};
 
-/// Evaluations at most. Halving alone exhausts the bits of an `f64` interval in fewer; Newton usually takes under ten.
+/// Evaluations at most. Halving an interval of states down to the resolution of an `f64` takes 56, Newton usually under ten;
+/// a sweep over all processes prints the most that any took.
 pub const ITERATION_CAP: u32 = 80;
+
+/// Of a temperature in °C: a quarter of a unit in the last place at 273.15 K, below which no state changes.
+pub fn temperature_resolution<S: Scalar>() -> S {
+    S::epsilon() * k(64.0)
+}
 
 /// The root of an increasing function in `[low, high]`, by Newton where its step stays inside what is known to hold the root,
 /// by halving elsewhere. `f` returns value and slope; a NaN value counts as positive (beyond the root).
 ///
-/// Ends when the interval or the step no longer changes `x`; the value returned is then within a few units in the last
-/// place of the root, or of the end of the bracket nearest to it.
-pub fn increasing<S: Scalar>(low: S, high: S, f: impl Fn(S) -> (S, S)) -> S {
+/// Ends when the interval is no wider than the resolution, or the step no longer changes `x`; the value returned is then
+/// within a few units in the last place of the root, or of the end of the bracket nearest to it.
+pub fn increasing<S: Scalar>(low: S, high: S, resolution: S, f: impl Fn(S) -> (S, S)) -> S {
+    let (x, _evaluations) = search(low, high, resolution, f);
+    #[cfg(test)]
+    tests::MOST_EVALUATIONS.with(|most| most.set(most.get().max(_evaluations)));
+    x
+}
+
+/// The root and the evaluations that it took.
+fn search<S: Scalar>(low: S, high: S, resolution: S, f: impl Fn(S) -> (S, S)) -> (S, u32) {
     let (mut low, mut high) = (low, high);
     let mut x = high;
-    for _ in 0..ITERATION_CAP {
+    for evaluations in 1..=ITERATION_CAP {
         let (value, slope) = f(x);
         if value == k(0.0) {
-            return x;
+            return (x, evaluations);
         }
         if value < k(0.0) {
             low = x;
@@ -25,32 +39,42 @@ pub fn increasing<S: Scalar>(low: S, high: S, f: impl Fn(S) -> (S, S)) -> S {
         }
         let newton = x - value / slope;
         let next = if low < newton && newton < high { newton } else { low + (high - low) * k(0.5) };
-        if next == x || !(low < next && next < high) {
-            return x;
+        if next == x || high - low <= resolution || !(low < next && next < high) {
+            return (x, evaluations);
         }
         x = next;
     }
-    x
+    (x, ITERATION_CAP)
 }
 
 #[cfg(test)]
-mod tests {
+pub(crate) mod tests {
     use super::*;
+    use core::cell::Cell;
 
-    /// Hostile shapes: flat then steep, infinite slope, NaN to the right, root at an end.
+    std::thread_local! {
+        /// The most evaluations of one search on this thread.
+        pub(crate) static MOST_EVALUATIONS: Cell<u32> = const { Cell::new(0) };
+    }
+
+    /// Hostile shapes: flat then steep, NaN to the right, no slope, roots at and beyond the ends, a root at zero.
     #[test]
     fn finds_roots_of_hostile_shapes() {
-        let cube = increasing(-1.0, 2.0, |x: f64| (x * x * x - 1e-3, 3.0 * x * x));
-        assert!((cube - 0.1).abs() < 1e-15, "{cube}");
-        let beyond = increasing(0.0, 10.0, |x: f64| if x > 3.0 { (f64::NAN, f64::NAN) } else { (x - 2.5, 1.0) });
+        let root = |low, high, f: fn(f64) -> (f64, f64)| increasing(low, high, 0.0, f);
+        assert!((root(-1.0, 2.0, |x| (x * x * x - 1e-3, 3.0 * x * x)) - 0.1).abs() < 1e-15);
+        let beyond = root(0.0, 10.0, |x| if x > 3.0 { (f64::NAN, f64::NAN) } else { (x - 2.5, 1.0) });
         assert!((beyond - 2.5).abs() < 1e-15, "{beyond}");
-        let zero_slope = increasing(0.0, 1.0, |x: f64| (x - 0.3, 0.0));
-        assert!((zero_slope - 0.3).abs() < 1e-15, "{zero_slope}");
-        assert_eq!(
-            increasing(0.0, 1.0, |x: f64| (x + 1.0, 1.0)),
-            f64::from_bits(increasing(0.0, 1.0, |x: f64| (x + 1.0, 1.0)).to_bits())
-        );
-        assert!(increasing(0.0, 1.0, |x: f64| (x + 1.0, 1.0)) < 1e-15);
-        assert!((increasing(0.0, 1.0, |x: f64| (x - 7.0, 1.0)) - 1.0).abs() < 1e-15);
+        assert!((root(0.0, 1.0, |x| (x - 0.3, 0.0)) - 0.3).abs() < 1e-15);
+        assert!(root(0.0, 1.0, |x| (x + 1.0, 1.0)) < 1e-15);
+        assert!((root(0.0, 1.0, |x| (x - 7.0, 1.0)) - 1.0).abs() < 1e-15);
+    }
+
+    /// A step at zero, where relative halving would go on to the subnormals.
+    #[test]
+    fn ends_at_the_resolution() {
+        let step = |x: f64| (if x < 0.0 { -1.0 } else { 1.0 }, 0.0);
+        let (at_zero, evaluations) = search(-100.0, 173.0, temperature_resolution(), step);
+        assert!(at_zero.abs() < 1e-13 && evaluations == 56, "{at_zero} {evaluations}");
+        assert_eq!(search(-100.0, 173.0, 0.0, step).1, ITERATION_CAP);
     }
 }

@@ -3,7 +3,7 @@
 use super::{Exchange, WetStream};
 use crate::quantity::{HeatFlow, MassFlow};
 use crate::real::{Scalar, k};
-use crate::state::MoistAir;
+use crate::state::{AirWithCondensate, MoistAir};
 
 /// The two books of a process: what is left over, and what it is measured against.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -69,13 +69,14 @@ impl<S: Scalar> Sum<S> {
         let at = |ratio| enthalpy(&air, ratio);
         let ratio = air.humidity_ratio().kilograms_per_kilogram();
         let (sensible, total) = (at(k(0.0)), at(ratio));
-        let condensate = wet.specific_enthalpy().joules_per_kilogram() - air.specific_enthalpy().joules_per_kilogram();
+        let condensate =
+            AirWithCondensate::carrying(air, wet.liquid().kilograms_per_kilogram(), wet.ice().kilograms_per_kilogram())
+                .condensate_enthalpy();
         let water = wet.total_water().kilograms_per_kilogram();
         self.heat = self.heat + sign * flow * (total + condensate);
         self.heat_scale =
             self.heat_scale + flow * (magnitude(sensible) + magnitude(total - sensible) + magnitude(condensate));
-        self.resolution =
-            self.resolution + flow * S::epsilon() * air.dry_bulb().kelvins() * wet_heat_capacity(stream);
+        self.resolution = self.resolution + flow * S::epsilon() * air.dry_bulb().kelvins() * wet_heat_capacity(stream);
         self.water = self.water + sign * flow * water;
         self.water_scale = self.water_scale + flow * water;
     }

@@ -1,6 +1,6 @@
 //! Cooling coils: to a given leaving state, by bypass factor, and between two measured states.
 
-use super::{AirStream, Exchange, parts, same_formulation};
+use super::{AirStream, Exchange, infeasible, parts, same_formulation};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
@@ -164,11 +164,13 @@ pub fn by_bypass_factor<S: Scalar>(
     Ok(cooling)
 }
 
-/// The coil between two measured states. Differences of humidity ratio within `dead_band` are noise of the sensors: the coil then counts
-/// as dry, with the mean humidity ratio on both sides, so that noise does not add up to condensate.
+/// The coil between two measured states. Differences of humidity ratio within `dead_band` are noise of the sensors: the coil then
+/// counts as dry and the air keeps the humidity ratio that it enters with, so that noise does not add up to condensate. Only what
+/// the leaving air cannot hold at its temperature still condenses.
 ///
 /// # Errors
-/// [`Error::MixedFormulations`]; [`Error::OutOfRange`], [`Error::NotFinite`] for the dead band.
+/// [`Error::Infeasible`] when the leaving air is moister by more than the dead band; [`Error::MixedFormulations`];
+/// [`Error::OutOfRange`], [`Error::NotFinite`] for the dead band.
 pub fn between<S: Scalar>(
     entering: &AirStream<S>,
     leaving: &MoistAir<S>,
@@ -178,15 +180,16 @@ pub fn between<S: Scalar>(
     same_formulation(&entering.air(), leaving)?;
     let dead_band = checked(Quantity::HumidityRatio, dead_band.kilograms_per_kilogram())?;
     let ((_, before), (_, after)) = (parts(&entering.air()), parts(leaving));
-    let drain = drain_temperature(condensate, leaving.dry_bulb().celsius(), None)?;
+    let (celsius, pressure) = (leaving.dry_bulb().celsius(), leaving.pressure().pascals());
+    let drain = drain_temperature(condensate, celsius, None)?;
     if before - after > dead_band {
         return Ok(account(entering, leaving, drain));
     }
-    let mean = (before + after) * k(0.5);
-    let at_mean = |air: &MoistAir<S>| {
-        MoistAir::assemble(air.dry_bulb().celsius(), air.pressure().pascals(), mean, air.formulation())
-    };
-    Ok(account(&entering.with_air(at_mean(&entering.air())), &at_mean(leaving), drain))
+    if after - before > dead_band {
+        return Err(infeasible(Quantity::HumidityRatio, after, k(0.0), before + dead_band));
+    }
+    let held = before.at_most(super::capacity(leaving, celsius));
+    Ok(account(entering, &MoistAir::assemble(celsius, pressure, held, leaving.formulation()), drain))
 }
 
 fn account<S: Scalar>(entering: &AirStream<S>, leaving: &MoistAir<S>, drain: S) -> Cooling<S> {
@@ -237,8 +240,4 @@ fn drain_temperature<S: Scalar>(
 fn freezes<S: Scalar>(air: &MoistAir<S>, celsius: S) -> bool {
     let pressure = air.pressure().pascals();
     with_mixture!(air.formulation(), S, M => celsius < <M<S> as Mixture<S>>::melting_temperature(pressure))
-}
-
-fn infeasible<S: Scalar>(quantity: Quantity, value: S, min: S, max: S) -> Error {
-    Error::Infeasible { quantity, value: value.to_f64(), min: min.to_f64(), max: max.to_f64() }
 }

@@ -3,7 +3,7 @@
 //! Water systems can grow and spread *Legionella*; steam burns and stands under pressure; droplets and condensate in ducts grow
 //! mould: hygiene rules and local codes govern design and operation.
 
-use super::{AirStream, Exchange, WetStream, parts};
+use super::{AirStream, Exchange, WetStream, infeasible, parts};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
@@ -13,7 +13,8 @@ use crate::real::{Scalar, k};
 use crate::saturation::Surface;
 use crate::solve;
 use crate::state::condensate::{condensed_enthalpy, temperature_of_enthalpy};
-use crate::state::construct::{greatest_humidity_ratio, search_ratio};
+use crate::state::construct::{SATURATION_TOLERANCE, greatest_humidity_ratio, search_ratio};
+use crate::state::property::saturates;
 use crate::state::{AirWithCondensate, Freezing, MoistAir};
 
 /// What a humidifier did.
@@ -24,7 +25,7 @@ pub struct Humidified<S = f64> {
     pub leaving: WetStream<S>,
     /// Water into the air and the enthalpy that came with it; no heat.
     pub exchange: Exchange<S>,
-    /// Water that became vapor.
+    /// Water that became vapor; negative where cold water condensed vapor of the air.
     pub evaporated: MassFlow<S>,
     /// Water that is carried as droplets or ice: condensed steam, or spray that did not evaporate.
     pub carried: MassFlow<S>,
@@ -75,8 +76,9 @@ pub enum Absorption<S = f64> {
 /// let steam = SpecificEnthalpy::from_kilojoules_per_kilogram(2691.07); // saturated at 110 °C
 /// let done = humidify::steam(&entering, MassFlow::from_kilograms_per_second(0.015), steam)?;
 /// assert!((done.leaving.air().air().dry_bulb().celsius() - 21.0).abs() < 0.5);
-/// // An enthalpy in kilojoules is refused.
-/// assert!(humidify::steam(&entering, MassFlow::from_kilograms_per_second(-0.015), steam).is_err());
+/// // Kilojoules where joules are meant: that would be cold water, not steam.
+/// let slip = SpecificEnthalpy::from_joules_per_kilogram(2691.07);
+/// assert!(humidify::steam(&entering, MassFlow::from_kilograms_per_second(0.015), slip).is_err());
 /// # Ok::<(), Error>(())
 /// ```
 pub fn steam<S: Scalar>(
@@ -100,13 +102,8 @@ pub fn steam_to_humidity_ratio<S: Scalar>(
     let target = checked(Quantity::HumidityRatio, target.kilograms_per_kilogram())?;
     let (_, ratio) = parts(&entering.air());
     if target < ratio {
-        let (value, min) = (target.to_f64(), ratio.to_f64());
-        return Err(Error::Infeasible {
-            quantity: Quantity::HumidityRatio,
-            value,
-            min,
-            max: Quantity::HumidityRatio.limits().1,
-        });
+        let (_, most) = Quantity::HumidityRatio.limits();
+        return Err(infeasible(Quantity::HumidityRatio, target, ratio, k(most)));
     }
     let flow = entering.flow()?;
     steam(entering, MassFlow::from_kilograms_per_second(flow * (target - ratio)), enthalpy)
@@ -121,16 +118,11 @@ pub fn steam_to_relative_humidity<S: Scalar>(
     target: RelativeHumidity<S>,
     enthalpy: SpecificEnthalpy<S>,
 ) -> Result<Humidified<S>, Error> {
-    let fraction = checked(Quantity::RelativeHumidityOverLiquid, target.fraction())?;
+    let fraction = checked(Quantity::RelativeHumidity, target.fraction())?;
     let steam_enthalpy = checked(Quantity::SteamEnthalpy, enthalpy.joules_per_kilogram())?;
     let present = entering.air().relative_humidity()?.fraction();
-    let out_of_reach = || Error::Infeasible {
-        quantity: Quantity::RelativeHumidity,
-        value: fraction.to_f64(),
-        min: present.to_f64(),
-        max: 1.0,
-    };
-    if fraction < present {
+    let out_of_reach = || infeasible(Quantity::RelativeHumidity, fraction, present, k(1.0));
+    if !(present <= fraction && fraction <= k(1.0)) {
         return Err(out_of_reach());
     }
     let per_air = first_crossing(&entering.air(), steam_enthalpy, fraction).ok_or_else(out_of_reach)?;
@@ -171,7 +163,9 @@ fn first_crossing<S: Scalar>(air: &MoistAir<S>, enthalpy: S, fraction: S) -> Opt
                 return None;
             }
             let saturated = M::<S>::at(celsius).saturation(pressure, Surface::Stable).mole_fraction;
-            Some(<M<S> as Mixture<S>>::mole_fraction(ratio) - fraction * saturated)
+            // Where nothing saturates there is no relative humidity to reach.
+            let excess = <M<S> as Mixture<S>>::mole_fraction(ratio) - fraction * saturated;
+            Some(S::select(saturates(saturated), excess, k(-1.0)))
         };
         if excess(k(0.0))? >= k(0.0) {
             return Some(k(0.0));
@@ -182,7 +176,7 @@ fn first_crossing<S: Scalar>(air: &MoistAir<S>, enthalpy: S, fraction: S) -> Opt
         for _ in 0..=CROSSING_GRID {
             if excess(s)? >= k(0.0) {
                 // Zero slope: pure halving, the function has no simple one.
-                return Some(solve::increasing(below, s, |s| (excess(s).unwrap_or(k(1.0)), k(0.0))));
+                return Some(solve::increasing(below, s, k(0.0), |s| (excess(s).unwrap_or(k(1.0)), k(0.0))));
             }
             below = s;
             s = s * step;
@@ -193,8 +187,8 @@ fn first_crossing<S: Scalar>(air: &MoistAir<S>, enthalpy: S, fraction: S) -> Opt
 
 /// Sprays liquid water of any temperature into the air; what equilibrium does not evaporate is carried as droplets.
 ///
-/// h₂ = h₁ + s h_w: nearly along the wet-bulb line. Water colder than the dew point would dry the air: a washer of many times
-/// this water, not modelled here.
+/// h₂ = h₁ + s h_w: nearly along the wet-bulb line. All of the water comes to equilibrium with all of the air; a washer, which
+/// circulates many times more, is not modelled here.
 ///
 /// # Errors
 /// As [`steam`].
@@ -220,7 +214,8 @@ pub enum EvaporatingWater<S = f64> {
 /// Wetted media or full spray of a stated saturation effectiveness ε = (t₁ − t₂) / (t₁ − t*); the water follows from the heat book.
 ///
 /// # Errors
-/// [`Error::Infeasible`] for a wet bulb below the melting temperature (the water would freeze); [`Error::OutOfRange`], [`Error::NotFinite`].
+/// [`Error::Infeasible`] for a wet bulb below the melting temperature (the water would freeze), and for water so hot that this
+/// effectiveness would need more vapor than the leaving air holds; [`Error::NoFlow`], [`Error::OutOfRange`], [`Error::NotFinite`].
 pub fn evaporative<S: Scalar>(
     entering: &AirStream<S>,
     saturation_effectiveness: S,
@@ -232,29 +227,32 @@ pub fn evaporative<S: Scalar>(
     let wet_bulb = air.wet_bulb()?.celsius();
     let melting = with_mixture!(air.formulation(), S, M => <M<S> as Mixture<S>>::melting_temperature(pressure));
     if wet_bulb < melting {
-        return Err(Error::Infeasible {
-            quantity: Quantity::WetBulb,
-            value: wet_bulb.to_f64(),
-            min: melting.to_f64(),
-            max: Quantity::WetBulb.limits().1,
-        });
+        let (_, warmest) = Quantity::WetBulb.limits();
+        return Err(infeasible(Quantity::WetBulb, wet_bulb, melting, k(warmest)));
     }
     let water = match water {
         EvaporatingWater::AtWetBulb => condensed_enthalpy(air.formulation(), wet_bulb, pressure, Surface::Liquid),
         EvaporatingWater::Given(temperature) => water_enthalpy(&air, temperature)?,
     };
+    if effectiveness == k(0.0) {
+        return add_water(entering, MassFlow::from_kilograms_per_second(effectiveness), water);
+    }
     let (h1, w1) = parts(&air);
     let leaving = celsius - effectiveness * (celsius - wet_bulb);
     // h(t₂, W₂) − W₂ h_w = h₁ − W₁ h_w
-    let ratio = with_mixture!(air.formulation(), S, M => {
+    let (ratio, limit) = with_mixture!(air.formulation(), S, M => {
         let mixture = M::<S>::at(leaving);
         let limit = greatest_humidity_ratio(&mixture, leaving, pressure);
-        search_ratio(&mixture, pressure, limit, |w, gas| {
+        let ratio = search_ratio(&mixture, pressure, limit, |w, gas| {
             ((gas.enthalpy - h1) - (w - w1) * water, gas.enthalpy_of_water - water)
-        })
+        });
+        (ratio, limit)
     });
+    if ratio > limit + limit * k::<S>(SATURATION_TOLERANCE).at_least(S::epsilon() * k(64.0)) {
+        return Err(infeasible(Quantity::HumidityRatio, ratio, w1, limit));
+    }
     let evaporated = (ratio - w1).at_least(k(0.0));
-    add_water(entering, MassFlow::from_kilograms_per_second(entering.dry_air_flow * evaporated), water)
+    add_water(entering, MassFlow::from_kilograms_per_second(entering.flow()? * evaporated), water)
 }
 
 fn water_enthalpy<S: Scalar>(air: &MoistAir<S>, temperature: Temperature<S>) -> Result<S, Error> {

@@ -17,10 +17,13 @@ pub mod reheat;
 pub mod sensible;
 pub mod tower;
 
+use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
+use crate::mixture::Mixture;
 use crate::quantity::{Density, HeatFlow, MassFlow, VolumeFlow};
 use crate::real::{Scalar, k};
+use crate::state::construct::greatest_humidity_ratio;
 use crate::state::{AirWithCondensate, MoistAir};
 
 /// Moist air with its dry-air mass flow.
@@ -46,7 +49,7 @@ impl<S: Scalar> AirStream<S> {
     /// As [`AirStream::new`].
     pub fn from_volume_flow(air: MoistAir<S>, flow: VolumeFlow<S>) -> Result<Self, Error> {
         let flow = checked(Quantity::VolumeFlow, flow.cubic_meters_per_second())?;
-        Ok(Self { air, dry_air_flow: flow / air.specific_volume().cubic_meters_per_kilogram() })
+        Self::new(air, MassFlow::from_kilograms_per_second(flow / air.specific_volume().cubic_meters_per_kilogram()))
     }
 
     /// From a standard volume flow: that of the dry air at a stated reference density, such as 1.2 kg/m³.
@@ -60,7 +63,7 @@ impl<S: Scalar> AirStream<S> {
     ) -> Result<Self, Error> {
         let flow = checked(Quantity::VolumeFlow, flow.cubic_meters_per_second())?;
         let density = checked(Quantity::StandardDensity, reference.kilograms_per_cubic_meter())?;
-        Ok(Self { air, dry_air_flow: flow * density })
+        Self::new(air, MassFlow::from_kilograms_per_second(flow * density))
     }
 
     /// State of the air.
@@ -163,4 +166,14 @@ fn parts<S: Scalar>(air: &MoistAir<S>) -> (S, S) {
 
 fn same_formulation<S: Scalar>(a: &MoistAir<S>, b: &MoistAir<S>) -> Result<(), Error> {
     if a.formulation() == b.formulation() { Ok(()) } else { Err(Error::MixedFormulations) }
+}
+
+fn infeasible<S: Scalar>(quantity: Quantity, value: S, min: S, max: S) -> Error {
+    Error::Infeasible { quantity, value: value.to_f64(), min: min.to_f64(), max: max.to_f64() }
+}
+
+/// The most vapor that air of this pressure and formulation holds at another temperature.
+fn capacity<S: Scalar>(air: &MoistAir<S>, celsius: S) -> S {
+    let pressure = air.pressure().pascals();
+    with_mixture!(air.formulation(), S, M => greatest_humidity_ratio(&M::<S>::at(celsius), celsius, pressure))
 }

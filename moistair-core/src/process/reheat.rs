@@ -2,7 +2,7 @@
 
 use super::coil::{self, CondensateTemperature, Cooling};
 use super::sensible::{self, Sensible};
-use super::{AirStream, same_formulation};
+use super::{AirStream, infeasible, same_formulation};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
@@ -10,6 +10,7 @@ use crate::mixture::Mixture;
 use crate::quantity::{HeatFlow, RelativeHumidity};
 use crate::real::{Scalar, k};
 use crate::saturation::Surface;
+use crate::solve;
 use crate::state::MoistAir;
 use crate::state::property::{DEW_POINT_STEPS, dew_point};
 
@@ -52,35 +53,46 @@ pub fn to_state<S: Scalar>(
     condensate: CondensateTemperature<S>,
 ) -> Result<Reheat<S>, Error> {
     same_formulation(&entering.air(), target)?;
-    let (lowest, one) = (k::<S>(0.2), k::<S>(1.0));
+    let least = k::<S>(0.2);
     let fraction = checked(Quantity::RelativeHumidity, coil_leaving.fraction())?;
-    if fraction < lowest || fraction > one {
-        return Err(Error::Infeasible {
-            quantity: Quantity::RelativeHumidity,
-            value: fraction.to_f64(),
-            min: lowest.to_f64(),
-            max: one.to_f64(),
-        });
+    if fraction < least || fraction > k(1.0) {
+        return Err(infeasible(Quantity::RelativeHumidity, fraction, least, k(1.0)));
+    }
+    let reached = target.dry_bulb().celsius();
+    let celsius = off_coil_temperature(&entering.air(), target, fraction)?;
+    // A target on the coil's own curve needs no reheat; the solve may place it a rounding above.
+    let rounding = solve::temperature_resolution::<S>() * k(32.0);
+    if celsius > reached + rounding {
+        let (_, warmest) = Quantity::LeavingTemperature.limits();
+        return Err(infeasible(Quantity::LeavingTemperature, reached, celsius, k(warmest)));
     }
     let ratio = target.humidity_ratio().kilograms_per_kilogram();
-    let pressure = target.pressure().pascals();
-    let celsius = with_mixture!(target.formulation(), S, M => {
-        let saturated = <M<S> as Mixture<S>>::mole_fraction(ratio) / fraction;
-        let over = |surface| dew_point::<M<S>, S, DEW_POINT_STEPS>(saturated, pressure, surface);
-        let liquid = over(Surface::Liquid);
-        if liquid < <M<S> as Mixture<S>>::melting_temperature(pressure) { over(Surface::Ice) } else { liquid }
-    });
-    let reached = target.dry_bulb().celsius();
-    if !(celsius <= reached) {
-        return Err(Error::Infeasible {
-            quantity: Quantity::LeavingTemperature,
-            value: reached.to_f64(),
-            min: celsius.to_f64(),
-            max: Quantity::LeavingTemperature.limits().1,
-        });
-    }
-    let off_coil = MoistAir::assemble(celsius, pressure, ratio, target.formulation());
+    let off_coil =
+        MoistAir::assemble(celsius.at_most(reached), target.pressure().pascals(), ratio, target.formulation());
     let cooling = coil::to_state(entering, &off_coil, condensate)?;
     let heating = sensible::to_temperature(&cooling.leaving, target.dry_bulb())?;
     Ok(Reheat { cooling, heating })
+}
+
+/// Temperature at which the water of the target is at a fraction of saturation over the stable surface.
+fn off_coil_temperature<S: Scalar>(entering: &MoistAir<S>, target: &MoistAir<S>, fraction: S) -> Result<S, Error> {
+    let ratio = target.humidity_ratio().kilograms_per_kilogram();
+    let pressure = target.pressure().pascals();
+    with_mixture!(target.formulation(), S, M => {
+        let coldest = k::<S>(Quantity::LeavingTemperature.limits().0);
+        let driest = M::<S>::at(coldest).saturation(pressure, Surface::Ice).mole_fraction * fraction;
+        let mole_fraction = <M<S> as Mixture<S>>::mole_fraction(ratio);
+        if mole_fraction < driest {
+            let most = entering.humidity_ratio().kilograms_per_kilogram();
+            return Err(infeasible(Quantity::HumidityRatio, ratio, <M<S> as Mixture<S>>::humidity_ratio(driest), most));
+        }
+        let saturated = mole_fraction / fraction;
+        if saturated > k(Quantity::WaterMoleFraction.limits().1) {
+            return Err(infeasible(Quantity::RelativeHumidity, fraction, mole_fraction, k(1.0)));
+        }
+        let over = |surface| dew_point::<M<S>, S, DEW_POINT_STEPS>(saturated, pressure, surface);
+        let melting = <M<S> as Mixture<S>>::melting_temperature(pressure);
+        let at_melting = M::<S>::at(melting).saturation(pressure, Surface::Liquid).mole_fraction;
+        Ok(if saturated < at_melting { over(Surface::Ice).at_most(melting) } else { over(Surface::Liquid) })
+    })
 }

@@ -1,6 +1,6 @@
 //! Heating and cooling at constant humidity ratio.
 
-use super::{AirStream, Exchange, parts};
+use super::{AirStream, Exchange, capacity, parts};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
@@ -8,7 +8,6 @@ use crate::quantity::{HeatFlow, Temperature};
 use crate::real::{Scalar, k};
 use crate::state::MoistAir;
 use crate::state::condensate::temperature_of_enthalpy;
-use crate::state::construct::greatest_humidity_ratio;
 
 /// Leaving stream and exchange of a process without water.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -58,8 +57,11 @@ pub fn with_heat<S: Scalar>(entering: &AirStream<S>, heat: HeatFlow<S>) -> Resul
     let air = entering.air();
     let (enthalpy, ratio) = parts(&air);
     let target = enthalpy + watts / entering.flow()?;
-    let celsius = with_mixture!(air.formulation(), S, M =>
+    let solved = with_mixture!(air.formulation(), S, M =>
         temperature_of_enthalpy::<M<S>, S>(target, air.pressure().pascals(), ratio));
+    // Rounding never turns a little heat into cooling, nor saturated air into fog.
+    let start = air.dry_bulb().celsius();
+    let celsius = if watts > k(0.0) { solved.at_least(start) } else { solved.at_most(start) };
     Ok(Sensible { leaving: entering.with_air(at_same_ratio(&air, celsius)?), exchange })
 }
 
@@ -69,7 +71,7 @@ pub(super) fn at_same_ratio<S: Scalar>(air: &MoistAir<S>, celsius: S) -> Result<
     let pressure = air.pressure().pascals();
     let (coldest, warmest) = Quantity::LeavingTemperature.limits();
     let in_range = k::<S>(coldest) <= celsius && celsius <= k(warmest);
-    if in_range && celsius >= air.dry_bulb().celsius() || in_range && ratio <= capacity(air, celsius, pressure) {
+    if in_range && celsius >= air.dry_bulb().celsius() || in_range && ratio <= capacity(air, celsius) {
         return Ok(MoistAir::assemble(celsius, pressure, ratio, air.formulation()));
     }
     Err(Error::Infeasible {
@@ -78,11 +80,6 @@ pub(super) fn at_same_ratio<S: Scalar>(air: &MoistAir<S>, celsius: S) -> Result<
         min: coldest_without_condensate(air).unwrap_or(coldest),
         max: warmest,
     })
-}
-
-fn capacity<S: Scalar>(air: &MoistAir<S>, celsius: S, pressure: S) -> S {
-    use crate::mixture::Mixture;
-    with_mixture!(air.formulation(), S, M => greatest_humidity_ratio(&M::<S>::at(celsius), celsius, pressure))
 }
 
 fn coldest_without_condensate<S: Scalar>(air: &MoistAir<S>) -> Option<f64> {

@@ -6,7 +6,7 @@
 //! Towers spread *Legionella* if they are not treated, cleaned and fitted with drift eliminators: national hygiene rules and licensed
 //! practice govern. Not modelled: natural draft, by-pass, freezing basins.
 
-use super::{AirStream, Exchange, WetStream, parts};
+use super::{AirStream, Exchange, WetStream, infeasible, parts};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
@@ -127,7 +127,7 @@ pub fn water_use<S: Scalar>(
 /// when it does not. Without water the air leaves as it came: a tower at rest, whatever its thermometers read.
 ///
 /// # Errors
-/// [`Error::Infeasible`] when the water is not cooled, or the air cannot take the heat within the range of states; [`Error::NoFlow`],
+/// [`Error::Infeasible`] when the water is not cooled, or so little air would leave warmer than the hot water; [`Error::NoFlow`],
 /// [`Error::OutOfRange`], [`Error::NotFinite`].
 ///
 /// ```
@@ -170,7 +170,7 @@ pub fn with_air_flow<S: Scalar>(
             let saturation = mixture.saturation(pressure, Surface::Liquid);
             (saturation, mixture.gas(pressure, saturation.humidity_ratio))
         };
-        let celsius = solve::increasing(lowest, warmest, |celsius| {
+        let celsius = solve::increasing(lowest, warmest, solve::temperature_resolution(), |celsius| {
             let (saturation, gas) = saturated(celsius);
             if !saturates(saturation.mole_fraction) {
                 return (S::infinity(), k(0.0));
@@ -184,14 +184,9 @@ pub fn with_air_flow<S: Scalar>(
         (celsius, saturated(celsius).0.humidity_ratio)
     });
     let most = k::<S>(Quantity::HumidityRatio.limits().1);
-    if !(w1 <= ratio && ratio <= most && celsius < warmest) {
-        let (_, max) = Quantity::DryBulb.limits();
-        return Err(Error::Infeasible {
-            quantity: Quantity::LeavingTemperature,
-            value: celsius.to_f64(),
-            min: air.dry_bulb().celsius().to_f64(),
-            max,
-        });
+    let hot = water.hot.celsius().at_most(warmest);
+    if !(w1 <= ratio && ratio <= most && celsius <= hot && celsius < warmest) {
+        return Err(infeasible(Quantity::LeavingTemperature, celsius, air.dry_bulb().celsius().at_most(hot), hot));
     }
     side.balance(entering, MoistAir::assemble(celsius, pressure, ratio, air.formulation()), treatment)
 }

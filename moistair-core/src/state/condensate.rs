@@ -10,7 +10,7 @@ use crate::saturation::Surface;
 use crate::solve;
 
 use super::MoistAir;
-use super::property::{DEW_POINT_STEPS, dew_point};
+use super::property::{DEW_POINT_STEPS, condensed_heat_capacity, dew_point};
 
 /// Newton steps for the temperature that goes with an enthalpy; see the test of this module.
 pub(crate) const TEMPERATURE_STEPS: usize = 4;
@@ -81,17 +81,34 @@ impl<S: Scalar> AirWithCondensate<S> {
         )
     }
 
-    /// Saturated air that carries stated amounts of liquid and ice at its temperature.
+    /// Air that carries stated amounts of liquid and ice at its own temperature, in equilibrium with it or not (such as the
+    /// carry-over of a spray).
     ///
     /// # Errors
-    /// [`Error::OutOfRange`] or [`Error::NotFinite`] for an amount.
+    /// [`Error::OutOfRange`] or [`Error::NotFinite`] for an amount; [`Error::Infeasible`] for liquid below −40 °C or ice above the
+    /// melting temperature, neither of which lasts.
     pub fn new(air: MoistAir<S>, liquid: HumidityRatio<S>, ice: HumidityRatio<S>) -> Result<Self, Error> {
         let liquid = checked(Quantity::TotalWater, liquid.kilograms_per_kilogram())?;
         let ice = checked(Quantity::TotalWater, ice.kilograms_per_kilogram())?;
+        let celsius = air.dry_bulb().celsius();
+        let melting = with_mixture!(air.formulation(), S, M =>
+            <M<S> as Mixture<S>>::melting_temperature(air.pressure().pascals()));
+        let (coldest, warmest) = Quantity::DryBulb.limits();
+        let min = if liquid > k(0.0) { k(Quantity::DewPoint.limits().0) } else { k(coldest) };
+        let max = if ice > k(0.0) { melting } else { k(warmest) };
+        if celsius < min || celsius > max {
+            let (value, min, max) = (celsius.to_f64(), min.to_f64(), max.to_f64());
+            return Err(Error::Infeasible { quantity: Quantity::DryBulb, value, min, max });
+        }
         Ok(Self::carrying(air, liquid, ice))
     }
 
-    fn carrying(air: MoistAir<S>, liquid: S, ice: S) -> Self {
+    /// Enthalpy of the condensate, per mass of dry air.
+    pub(crate) fn condensate_enthalpy(&self) -> S {
+        self.condensate_enthalpy
+    }
+
+    pub(crate) fn carrying(air: MoistAir<S>, liquid: S, ice: S) -> Self {
         let (celsius, pressure) = (air.dry_bulb().celsius(), air.pressure().pascals());
         let enthalpy = |surface| condensed_enthalpy(air.formulation(), celsius, pressure, surface);
         // An absent phase adds nothing, and may have no equation here.
@@ -149,6 +166,35 @@ pub(crate) fn temperature_of_enthalpy<M: Mixture<S>, S: Scalar>(enthalpy: S, pre
     celsius
 }
 
+/// Saturated air with the rest of a given water condensed, at a trial temperature.
+struct Wet<S> {
+    humidity_ratio: S,
+    surplus: S,
+    /// Of air and condensate.
+    enthalpy: S,
+    /// d(enthalpy)/dT.
+    slope: S,
+}
+
+impl<S: Scalar> Wet<S> {
+    fn at<M: Mixture<S>>(celsius: S, pressure: S, water: S, surface: Surface) -> Self {
+        let mixture = M::at(celsius);
+        let saturation = mixture.saturation(pressure, surface);
+        let (humidity_ratio, condensed) = (saturation.humidity_ratio, saturation.condensed_enthalpy);
+        let gas = mixture.gas(pressure, humidity_ratio);
+        let surplus = water - humidity_ratio;
+        let ratio_slope = humidity_ratio * saturation.log_slope;
+        Self {
+            humidity_ratio,
+            surplus,
+            enthalpy: gas.enthalpy + surplus * condensed,
+            slope: gas.specific_heat
+                + ratio_slope * (gas.enthalpy_of_water - condensed)
+                + surplus * k(condensed_heat_capacity(surface)),
+        }
+    }
+}
+
 fn equilibrium<M: Mixture<S>, S: Scalar>(
     enthalpy: S,
     water: S,
@@ -157,81 +203,72 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
     formulation: Formulation,
 ) -> Result<AirWithCondensate<S>, Error> {
     let state = |celsius, ratio| MoistAir::assemble(celsius, pressure, ratio, formulation);
-    let surface = match freezing {
-        Freezing::Equilibrium => Surface::Stable,
-        Freezing::Supercooled => Surface::Liquid,
-    };
     let (coldest, warmest) = Quantity::DryBulb.limits();
     let in_range = |celsius: S| k::<S>(coldest) <= celsius && celsius <= k(warmest);
     let dry_bulb = temperature_of_enthalpy::<M, S>(enthalpy, pressure, water);
-    if in_range(dry_bulb) && water <= capacity::<M, S>(dry_bulb, pressure, surface) {
+    if in_range(dry_bulb) && water <= capacity::<M, S>(dry_bulb, pressure, freezing) {
         return Ok(state(dry_bulb, water).into());
     }
-    // Wet: saturated air and condensate between the coldest state and the dew point of all the water.
+    // Wet: saturated air and condensate, warmer than the gas alone would be and no warmer than the dew point of all the water.
+    // One curve is followed, chosen by the side of the melting temperature on which the result lies.
     let melting = M::melting_temperature(pressure);
-    let wet = |celsius: S, surface| {
-        let mixture = M::at(celsius);
-        let saturation = mixture.saturation(pressure, surface);
-        let gas = mixture.gas(pressure, saturation.humidity_ratio);
-        (saturation, gas)
-    };
-    if freezing == Freezing::Equilibrium {
-        let (saturation, gas) = wet(melting, Surface::Liquid);
-        let surplus = water - saturation.humidity_ratio;
-        let liquid = M::condensed_enthalpy(melting, pressure, Surface::Liquid);
-        let ice = M::condensed_enthalpy(melting, pressure, Surface::Ice);
-        let (all_liquid, all_ice) = (gas.enthalpy + surplus * liquid, gas.enthalpy + surplus * ice);
-        if surplus > k(0.0) && all_ice <= enthalpy && enthalpy <= all_liquid {
-            let frozen = (all_liquid - enthalpy) / (liquid - ice);
-            let air = state(melting, saturation.humidity_ratio);
-            return Ok(AirWithCondensate::carrying(air, (surplus - frozen).at_least(k(0.0)), frozen));
-        }
-    }
+    let wet = |celsius, surface| Wet::at::<M>(celsius, pressure, water, surface);
     let mole_fraction = M::mole_fraction(water);
     let dew = |surface| dew_point::<M, S, DEW_POINT_STEPS>(mole_fraction, pressure, surface);
-    // One curve is followed, chosen by the side of the melting temperature on which the result lies.
-    let melted = freezing == Freezing::Supercooled || {
-        let (saturation, gas) = wet(melting, Surface::Liquid);
-        let surplus = water - saturation.humidity_ratio;
-        surplus > k(0.0)
-            && enthalpy > gas.enthalpy + surplus * M::condensed_enthalpy(melting, pressure, Surface::Liquid)
+    let (curve, low, high) = match freezing {
+        Freezing::Supercooled => (Surface::Liquid, k(Quantity::DewPoint.limits().0), dew(Surface::Liquid)),
+        Freezing::Equilibrium => {
+            let melted = wet(melting, Surface::Liquid);
+            let fusion = M::condensed_enthalpy(melting, pressure, Surface::Liquid)
+                - M::condensed_enthalpy(melting, pressure, Surface::Ice);
+            let frozen = (melted.enthalpy - enthalpy) / fusion;
+            if melted.surplus > k(0.0) && k::<S>(0.0) <= frozen && frozen <= melted.surplus {
+                let air = state(melting, melted.humidity_ratio);
+                return Ok(AirWithCondensate::carrying(air, melted.surplus - frozen, frozen));
+            }
+            if melted.surplus > k(0.0) && melted.enthalpy < enthalpy {
+                (Surface::Liquid, melting, dew(Surface::Liquid).at_least(melting))
+            } else {
+                (Surface::Ice, k(coldest), dew(Surface::Ice).at_most(melting))
+            }
+        }
     };
-    let (curve, low, high) = match (melted, freezing) {
-        (true, Freezing::Supercooled) => (Surface::Liquid, k(Quantity::DewPoint.limits().0), dew(Surface::Liquid)),
-        (true, Freezing::Equilibrium) => (Surface::Liquid, melting, dew(Surface::Liquid)),
-        (false, _) => (Surface::Ice, k(coldest), dew(Surface::Ice).at_most(melting)),
+    let floor = wet(low, curve);
+    let above_floor = k::<S>(0.0) <= floor.surplus && floor.enthalpy <= enthalpy && !(dry_bulb > k(warmest));
+    let celsius = if above_floor {
+        solve::increasing(low, high, solve::temperature_resolution(), |celsius| {
+            let trial = wet(celsius, curve);
+            (trial.enthalpy - enthalpy, trial.slope)
+        })
+    } else {
+        S::nan()
     };
-    let celsius = solve::increasing(low, high, |celsius| {
-        let (saturation, gas) = wet(celsius, curve);
-        let surplus = water - saturation.humidity_ratio;
-        let ratio_slope = saturation.humidity_ratio * saturation.log_slope;
-        (
-            gas.enthalpy + surplus * saturation.condensed_enthalpy - enthalpy,
-            gas.specific_heat + ratio_slope * (gas.enthalpy_of_water - saturation.condensed_enthalpy),
-        )
-    });
-    let ratio = wet(celsius, curve).0.humidity_ratio;
-    let surplus = water - ratio;
-    let reached = surplus >= -(water * k(1e-9)) && in_range(celsius) && celsius > low;
-    if !reached {
-        let reach = |celsius: S, ratio: S| state(celsius, ratio).specific_enthalpy().joules_per_kilogram().to_f64();
+    if !in_range(celsius) {
+        let saturated = capacity::<M, S>(k(warmest), pressure, freezing).at_most(water);
+        let liquid = (water - saturated) * M::condensed_enthalpy(k(warmest), pressure, Surface::Liquid);
+        let least = state(low, floor.humidity_ratio.at_most(water)).specific_enthalpy().joules_per_kilogram();
         return Err(Error::Infeasible {
             quantity: Quantity::LeavingEnthalpy,
             value: enthalpy.to_f64(),
-            min: reach(k(coldest), k(0.0)),
-            max: reach(k(warmest), water),
+            min: floor.enthalpy.at_most(least).to_f64(),
+            max: (state(k(warmest), saturated).specific_enthalpy().joules_per_kilogram() + liquid).to_f64(),
         });
     }
-    let air = state(celsius, ratio.at_most(water));
-    let surplus = surplus.at_least(k(0.0));
+    let ratio = wet(celsius, curve).humidity_ratio.at_most(water);
+    let (air, surplus) = (state(celsius, ratio), water - ratio);
     Ok(match curve {
         Surface::Ice => AirWithCondensate::carrying(air, k(0.0), surplus),
         _ => AirWithCondensate::carrying(air, surplus, k(0.0)),
     })
 }
 
-/// Humidity ratio that the gas can hold in equilibrium; without limit where nothing saturates.
-fn capacity<M: Mixture<S>, S: Scalar>(celsius: S, pressure: S, surface: Surface) -> S {
+/// Humidity ratio that the gas can hold in equilibrium; without limit where nothing saturates. Supercooled liquid lasts down to
+/// −40 °C, below which there is ice.
+fn capacity<M: Mixture<S>, S: Scalar>(celsius: S, pressure: S, freezing: Freezing) -> S {
+    let surface = match freezing {
+        Freezing::Supercooled if celsius >= k(Quantity::DewPoint.limits().0) => Surface::Liquid,
+        _ => Surface::Stable,
+    };
     let saturation = M::at(celsius).saturation(pressure, surface);
     if super::property::saturates(saturation.mole_fraction) { saturation.humidity_ratio } else { S::infinity() }
 }

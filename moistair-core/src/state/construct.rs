@@ -15,7 +15,7 @@ use super::property::{View, saturates};
 pub(super) const RATIO_STEPS: usize = 3;
 
 /// A value this close beyond saturation, relative in the humidity ratio, counts as saturated: it is rounding.
-const SATURATION_TOLERANCE: f64 = 1e-9;
+pub(crate) const SATURATION_TOLERANCE: f64 = 1e-9;
 
 /// A property that fixes a state together with dry bulb and pressure, by its own type. Sealed.
 pub trait SecondProperty<S: Scalar>: Copy + sealed::Sealed {

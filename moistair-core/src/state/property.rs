@@ -74,7 +74,7 @@ pub(super) fn saturation_deficit<M: Mixture<R>, R: Real>(
 }
 
 /// Near enough for a slope, J/(kg K).
-const fn condensed_heat_capacity(surface: Surface) -> f64 {
+pub(super) const fn condensed_heat_capacity(surface: Surface) -> f64 {
     match surface {
         Surface::Ice => 2_100.0,
         Surface::Liquid | Surface::Stable => 4_200.0,
