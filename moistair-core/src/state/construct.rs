@@ -2,7 +2,7 @@
 
 use crate::basis::{Basis, with_mixture};
 use crate::bounds::Quantity;
-use crate::error::{Error, checked};
+use crate::error::{Error, NoValue, checked};
 use crate::mixture::{Gas, Mixture};
 use crate::quantity::*;
 use crate::real::{Real, Scalar, k};
@@ -69,7 +69,8 @@ impl<S: Scalar> MoistAir<S> {
     /// bit for bit. A second property within 1e-9 beyond saturation is taken as saturated.
     ///
     /// # Errors
-    /// [`Error::NotFinite`], [`Error::OutOfRange`] for a value outside its declared range, [`Error::Unattainable`] where no state has it.
+    /// [`Error::NotFinite`], [`Error::OutOfRange`] for a value outside its declared range, [`Error::Unattainable`] where no state has it,
+    /// [`Error::NoValue`] where the property means nothing: relative humidity above boiling, over liquid below −40 °C, frost above melting.
     ///
     /// ```
     /// use moistair_core::{Length, MoistAir, Pressure, RelativeHumidity, Temperature};
@@ -109,7 +110,24 @@ impl<S: Scalar> MoistAir<S> {
         let value = checked(quantity, value)?;
         with_mixture!(basis.formulation(), S, M => {
             let mixture = M::<S>::at(celsius);
-            let limit = greatest_humidity_ratio(&mixture, celsius, pressure);
+            let (limit, saturated) = capacity(&mixture, celsius, pressure);
+            let over_surface = |reason| Err(Error::NoValue { quantity, reason });
+            match quantity {
+                Quantity::RelativeHumidity | Quantity::RelativeHumidityOverLiquid | Quantity::DegreeOfSaturation
+                    if !saturated =>
+                {
+                    return over_surface(NoValue::AboveBoiling);
+                }
+                Quantity::RelativeHumidityOverLiquid if !has_liquid(celsius) => {
+                    return over_surface(NoValue::BelowSurfaceRange);
+                }
+                Quantity::FrostPoint | Quantity::WetBulbOverIce
+                    if value > <M<S> as Mixture<S>>::melting_temperature(pressure) =>
+                {
+                    return over_surface(NoValue::AboveSurfaceRange);
+                }
+                _ => {}
+            }
             let ratio = humidity_ratio(&mixture, pressure, quantity, value, limit)
                 .ok_or(Error::UnknownSelector { code: quantity.code() })?;
             let inside = |humidity_ratio: S| {
@@ -163,12 +181,23 @@ fn settle<S: Scalar>(ratio: S, limit: S) -> Option<S> {
     Some(ratio.at_least(k(0.0)).at_most(limit))
 }
 
+/// Whether liquid water, supercooled if need be, exists at a temperature, °C.
+fn has_liquid<R: Real>(celsius: R) -> R::Mask {
+    k::<R>(Quantity::DewPoint.limits().0).le(celsius)
+}
+
 /// The humidity ratio at saturation over liquid (over ice below −40 °C), or the greatest declared where nothing saturates.
 pub(crate) fn greatest_humidity_ratio<M: Mixture<S>, S: Scalar>(mixture: &M, celsius: S, pressure: S) -> S {
-    let surface = if celsius.lt(k(Quantity::DewPoint.limits().0)) { Surface::Ice } else { Surface::Liquid };
+    capacity(mixture, celsius, pressure).0
+}
+
+/// The same, and whether it is a saturation.
+fn capacity<M: Mixture<S>, S: Scalar>(mixture: &M, celsius: S, pressure: S) -> (S, bool) {
+    let surface = if has_liquid(celsius) { Surface::Liquid } else { Surface::Ice };
     let saturation = mixture.saturation(pressure, surface);
     let declared = k(Quantity::HumidityRatio.limits().1);
-    S::select(saturates(saturation.mole_fraction), saturation.humidity_ratio, declared).at_most(declared)
+    let saturated = saturates(saturation.mole_fraction);
+    (S::select(saturated, saturation.humidity_ratio, declared).at_most(declared), saturated)
 }
 
 /// The humidity ratio that goes with a second property; may lie outside what the air can hold. `None` if the quantity does not
