@@ -40,6 +40,8 @@ pub enum CoilRegime {
 #[derive(Clone, Copy, Debug, PartialEq)]
 #[must_use]
 pub struct Cooling<S = f64> {
+    /// The air that enters, as the books have it: [`between`] may have taken a mean humidity ratio.
+    pub entering: AirStream<S>,
     /// The air that leaves.
     pub leaving: AirStream<S>,
     /// Heat and water into the air, both negative here.
@@ -212,6 +214,7 @@ fn account<S: Scalar>(entering: &AirStream<S>, leaving: &MoistAir<S>, drain: S) 
         CoilRegime::Wet
     };
     Cooling {
+        entering: *entering,
         leaving: entering.with_air(*leaving),
         exchange: Exchange::new(heat, -condensate, -drained),
         cooling_load: HeatFlow::from_watts(-heat),
