@@ -33,537 +33,914 @@
 /* The bit of a property in a mask. */
 #define MOISTAIR_BIT(property) ((uint64_t)1 << (property))
 
-/*
- Version of the interface in this header: changes when a program has to be compiled anew.
- */
+// Version of the interface in this header: changes when a program has to be compiled anew.
 #define MOISTAIR_ABI_VERSION 1
 
-/*
- Success.
- */
+// Success.
 #define MOISTAIR_OK 0
 
-/*
- A pointer is null that may not be.
- */
+// A pointer is null that may not be.
 #define MOISTAIR_NULL_POINTER 101
 
-/*
- A selector that names nothing, or nothing that fits here.
- */
+// A selector that names nothing, or nothing that fits here.
 #define MOISTAIR_UNKNOWN_SELECTOR 102
 
-/*
- A pointer is not aligned for its type.
- */
+// A pointer is not aligned for its type.
 #define MOISTAIR_MISALIGNED 103
 
-/*
- Memory to be written overlaps other memory of the call.
- */
+// Memory to be written overlaps other memory of the call.
 #define MOISTAIR_OVERLAPPING 104
 
-/*
- A count or a stride reaches beyond the address space.
- */
+// A count or a stride reaches beyond the address space.
 #define MOISTAIR_TOO_LONG 105
 
-/*
- A value is NaN or infinite.
- */
+// A structure holds what the library cannot have written.
+#define MOISTAIR_DAMAGED 106
+
+// A value is NaN or infinite.
 #define MOISTAIR_NOT_FINITE 201
 
-/*
- A value lies outside the declared range of its quantity.
- */
+// A value lies outside the declared range of its quantity.
 #define MOISTAIR_OUT_OF_RANGE 202
 
-/*
- No state has this value at this dry bulb and pressure.
- */
+// No state has this value at this dry bulb and pressure.
 #define MOISTAIR_UNATTAINABLE 203
 
-/*
- The result would hold more vapor than saturation allows.
- */
+// The result would hold more vapor than saturation allows.
 #define MOISTAIR_SUPERSATURATED 204
 
-/*
- States of different formulations in one process.
- */
+// States of different formulations in one process.
 #define MOISTAIR_MIXED_FORMULATIONS 205
 
-/*
- Streams at different pressures where one pressure is needed.
- */
+// Streams at different pressures where one pressure is needed.
 #define MOISTAIR_MIXED_PRESSURES 206
 
-/*
- A process on no air at all.
- */
+// A process on no air at all.
 #define MOISTAIR_NO_FLOW 207
 
-/*
- The process cannot reach what was asked.
- */
+// A channel makes no sense: limits that are not in order, or a unit of another kind.
+#define MOISTAIR_INVALID_CHANNEL 208
+
+// The process cannot reach what was asked.
 #define MOISTAIR_INFEASIBLE 301
 
-/*
- No value: there is no water vapor.
- */
+// A sum would not be finite. Nothing was added.
+#define MOISTAIR_OVERFLOW 302
+
+// No value: there is no water vapor.
 #define MOISTAIR_NO_VALUE_DRY_AIR 310
 
-/*
- No value: the saturation pressure exceeds the total pressure.
- */
+// No value: the saturation pressure exceeds the total pressure.
 #define MOISTAIR_NO_VALUE_ABOVE_BOILING 311
 
-/*
- No value: it would lie below the range of saturation over this surface.
- */
+// No value: it would lie below the range of saturation over this surface.
 #define MOISTAIR_NO_VALUE_BELOW_SURFACE_RANGE 312
 
-/*
- No value: it would lie above the range of saturation over this surface.
- */
+// No value: it would lie above the range of saturation over this surface.
 #define MOISTAIR_NO_VALUE_ABOVE_SURFACE_RANGE 313
 
-/*
- A fault of the library: a result was not a finite number. Nothing was written.
- */
+// A fault of the library: a result was not a finite number. Nothing was written.
 #define MOISTAIR_INTERNAL 901
 
-/*
- Number of property selectors: they run from 0 to one less. Later versions may add to them.
- */
+// Number of property selectors: they run from 0 to one less. Later versions may add to them.
 #define MOISTAIR_PROPERTY_COUNT 23
 
-/*
- Dry-bulb temperature. The range of states; the formulations themselves reach 193.15 to 473.15 K (IAPWS G8-10) [°C].
- */
+// Dry-bulb temperature. The range of states; the formulations themselves reach 193.15 to 473.15 K (IAPWS G8-10) [°C].
 #define MOISTAIR_DRY_BULB 0
 
-/*
- Absolute total pressure [Pa].
- */
+// Absolute total pressure [Pa].
 #define MOISTAIR_PRESSURE 1
 
-/*
- Mass of water vapor per mass of dry air [kg/kg].
- */
+// Mass of water vapor per mass of dry air [kg/kg].
 #define MOISTAIR_HUMIDITY_RATIO 2
 
-/*
- Moles of water vapor per mole of moist air [1].
- */
+// Moles of water vapor per mole of moist air [1].
 #define MOISTAIR_WATER_MOLE_FRACTION 3
 
-/*
- Water mole fraction times total pressure [Pa].
- */
+// Water mole fraction times total pressure [Pa].
 #define MOISTAIR_VAPOR_PRESSURE 4
 
-/*
- Mass of water vapor per mass of moist air [kg/kg].
- */
+// Mass of water vapor per mass of moist air [kg/kg].
 #define MOISTAIR_SPECIFIC_HUMIDITY 5
 
-/*
- Mass of water vapor per volume of moist air [kg/m³].
- */
+// Mass of water vapor per volume of moist air [kg/m³].
 #define MOISTAIR_ABSOLUTE_HUMIDITY 6
 
-/*
- Enthalpy per mass of dry air [J/kg].
- */
+// Enthalpy per mass of dry air [J/kg].
 #define MOISTAIR_SPECIFIC_ENTHALPY 7
 
-/*
- Volume per mass of dry air [m³/kg].
- */
+// Volume per mass of dry air [m³/kg].
 #define MOISTAIR_SPECIFIC_VOLUME 8
 
-/*
- Mass of moist air per volume [kg/m³].
- */
+// Mass of moist air per volume [kg/m³].
 #define MOISTAIR_DENSITY 9
 
-/*
- Isobaric heat capacity per mass of dry air, at constant humidity ratio [J/(kg K)].
- */
+// Isobaric heat capacity per mass of dry air, at constant humidity ratio [J/(kg K)].
 #define MOISTAIR_SPECIFIC_HEAT 10
 
-/*
- p v / (R T) of the mixture [1].
- */
+// p v / (R T) of the mixture [1].
 #define MOISTAIR_COMPRESSIBILITY_FACTOR 11
 
-/*
- x_w / x_ws over the stable surface: ice below the melting temperature, liquid above. Over ice it may exceed one [1].
- */
+// x_w / x_ws over the stable surface: ice below the melting temperature, liquid above. Over ice it may exceed one [1].
 #define MOISTAIR_RELATIVE_HUMIDITY 12
 
-/*
- x_w / x_ws over liquid water, supercooled below the melting temperature (WMO convention) [1].
- */
+// x_w / x_ws over liquid water, supercooled below the melting temperature (WMO convention) [1].
 #define MOISTAIR_RELATIVE_HUMIDITY_OVER_LIQUID 13
 
-/*
- W / W_s over the stable surface [1].
- */
+// W / W_s over the stable surface [1].
 #define MOISTAIR_DEGREE_OF_SATURATION 14
 
-/*
- (x_ws − x_w) p over the stable surface [Pa].
- */
+// (x_ws − x_w) p over the stable surface [Pa].
 #define MOISTAIR_VAPOR_PRESSURE_DEFICIT 15
 
-/*
- Saturation pressure of pure water over the stable surface [Pa].
- */
+// Saturation pressure of pure water over the stable surface [Pa].
 #define MOISTAIR_SATURATION_PRESSURE 16
 
-/*
- x_ws p over the saturation pressure of pure water [1].
- */
+// x_ws p over the saturation pressure of pure water [1].
 #define MOISTAIR_ENHANCEMENT_FACTOR 17
 
-/*
- Thermodynamic wet bulb (adiabatic saturation), over liquid at or above the melting temperature, over ice below [°C].
- */
+// Thermodynamic wet bulb (adiabatic saturation), over liquid at or above the melting temperature, over ice below [°C].
 #define MOISTAIR_WET_BULB 18
 
-/*
- Thermodynamic wet bulb over liquid water, supercooled below the melting temperature [°C].
- */
+// Thermodynamic wet bulb over liquid water, supercooled below the melting temperature [°C].
 #define MOISTAIR_WET_BULB_OVER_LIQUID 19
 
-/*
- Thermodynamic wet bulb over ice [°C].
- */
+// Thermodynamic wet bulb over ice [°C].
 #define MOISTAIR_WET_BULB_OVER_ICE 20
 
-/*
- Temperature of saturation over liquid water at the same pressure and composition [°C].
- */
+// Temperature of saturation over liquid water at the same pressure and composition [°C].
 #define MOISTAIR_DEW_POINT 21
 
-/*
- Temperature of saturation over ice at the same pressure and composition [°C].
- */
+// Temperature of saturation over ice at the same pressure and composition [°C].
 #define MOISTAIR_FROST_POINT 22
 
-/*
- Dry-air mass flow [kg/s].
- */
+// Dry-air mass flow [kg/s].
 #define MOISTAIR_DRY_AIR_MASS_FLOW 32
 
-/*
- Volume flow at a stated state [m³/s].
- */
+// Volume flow at a stated state [m³/s].
 #define MOISTAIR_VOLUME_FLOW 33
 
-/*
- Reference density of a standard volume flow [kg/m³].
- */
+// Reference density of a standard volume flow [kg/m³].
 #define MOISTAIR_STANDARD_DENSITY 34
 
-/*
- Heat flow, positive into the air [W].
- */
+// Heat flow, positive into the air [W].
 #define MOISTAIR_HEAT_FLOW 35
 
-/*
- Flow of liquid water or steam [kg/s].
- */
+// Flow of liquid water or steam [kg/s].
 #define MOISTAIR_WATER_FLOW 36
 
-/*
- Temperature of liquid water [°C].
- */
+// Temperature of liquid water [°C].
 #define MOISTAIR_WATER_TEMPERATURE 37
 
-/*
- Specific enthalpy of steam, on the datum of liquid water at the triple point (0 °C for the ideal gas) [J/kg].
- */
+// Specific enthalpy of steam, on the datum of liquid water at the triple point (0 °C for the ideal gas) [J/kg].
 #define MOISTAIR_STEAM_ENTHALPY 38
 
-/*
- Temperature that a process is to leave [°C].
- */
+// Temperature that a process is to leave [°C].
 #define MOISTAIR_LEAVING_TEMPERATURE 39
 
-/*
- Apparatus dew point of a coil [°C].
- */
+// Apparatus dew point of a coil [°C].
 #define MOISTAIR_APPARATUS_DEW_POINT 40
 
-/*
- Bypass factor of a coil [1].
- */
+// Bypass factor of a coil [1].
 #define MOISTAIR_BYPASS_FACTOR 41
 
-/*
- Saturation effectiveness of a humidifier [1].
- */
+// Saturation effectiveness of a humidifier [1].
 #define MOISTAIR_SATURATION_EFFECTIVENESS 42
 
-/*
- Temperature at which condensate leaves [°C].
- */
+// Temperature at which condensate leaves [°C].
 #define MOISTAIR_CONDENSATE_TEMPERATURE 43
 
-/*
- Elevation above mean sea level, range of the standard atmosphere's lowest layer (ISO 2533) [m].
- */
+// Elevation above mean sea level, range of the standard atmosphere's lowest layer (ISO 2533) [m].
 #define MOISTAIR_ELEVATION 44
 
-/*
- Drift of a tower as a fraction of the circulating water [1].
- */
+// Drift of a tower as a fraction of the circulating water [1].
 #define MOISTAIR_DRIFT_FRACTION 45
 
-/*
- Concentration of the circulating water over that of the make-up [1].
- */
+// Concentration of the circulating water over that of the make-up [1].
 #define MOISTAIR_CYCLES_OF_CONCENTRATION 46
 
-/*
- Temperature range of the water in a tower [K].
- */
+// Temperature range of the water in a tower [K].
 #define MOISTAIR_TOWER_RANGE 47
 
-/*
- Total water per dry air, vapor and condensate [kg/kg].
- */
+// Total water per dry air, vapor and condensate [kg/kg].
 #define MOISTAIR_TOTAL_WATER 48
 
-/*
- Specific enthalpy that a process leaves, with its condensate [J/kg].
- */
+// Specific enthalpy that a process leaves, with its condensate [J/kg].
 #define MOISTAIR_LEAVING_ENTHALPY 49
 
-/*
- Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
- */
+// Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
 #define MOISTAIR_REAL_GAS 0
 
-/*
- The perfect-gas relations of the ASHRAE handbook, for reproducing contract and textbook numbers.
- */
+// The perfect-gas relations of the ASHRAE handbook, for reproducing contract and textbook numbers.
 #define MOISTAIR_IDEAL_GAS 1
 
-/*
- Limits of a quantity as an input, both included.
- */
+// Water below the melting temperature freezes.
+#define MOISTAIR_FREEZING_EQUILIBRIUM 0
+
+// Water stays liquid, supercooled, down to -40 °C.
+#define MOISTAIR_FREEZING_SUPERCOOLED 1
+
+// Condensate leaves at the temperature of the leaving air.
+#define MOISTAIR_CONDENSATE_AT_LEAVING_AIR 0
+
+// Condensate leaves at the apparatus dew point (moistair_coil_by_bypass_factor only).
+#define MOISTAIR_CONDENSATE_AT_APPARATUS 1
+
+// Condensate leaves at a given temperature.
+#define MOISTAIR_CONDENSATE_AT_GIVEN 2
+
+// No water condensed.
+#define MOISTAIR_COIL_DRY 0
+
+// Water condensed as liquid.
+#define MOISTAIR_COIL_WET 1
+
+// The coil is cold enough for frost.
+#define MOISTAIR_COIL_FROST 2
+
+// A wetted medium evaporates water at the wet bulb, where recirculated water settles.
+#define MOISTAIR_WATER_AT_WET_BULB 0
+
+// A wetted medium evaporates water of a given temperature.
+#define MOISTAIR_WATER_AT_GIVEN 1
+
+// Most streams that one call takes.
+#define MOISTAIR_MOST_STREAMS 16
+
+// A temperature, °C.
+#define MOISTAIR_KIND_TEMPERATURE 1
+
+// A relative humidity, fraction.
+#define MOISTAIR_KIND_RELATIVE_HUMIDITY 2
+
+// An absolute pressure, Pa.
+#define MOISTAIR_KIND_PRESSURE 3
+
+// A difference of pressures, Pa.
+#define MOISTAIR_KIND_PRESSURE_DIFFERENCE 4
+
+// A volume flow, m³/s.
+#define MOISTAIR_KIND_VOLUME_FLOW 5
+
+// A mass flow, kg/s.
+#define MOISTAIR_KIND_MASS_FLOW 6
+
+// A command, a position, a share: fraction.
+#define MOISTAIR_KIND_FRACTION 7
+
+// A humidity ratio, kg/kg.
+#define MOISTAIR_KIND_HUMIDITY_RATIO 8
+
+// A heat flow or an electric power, W.
+#define MOISTAIR_KIND_POWER 9
+
+// A time or a duration, s.
+#define MOISTAIR_KIND_TIME 10
+
+// An amount of heat or of electric energy, J.
+#define MOISTAIR_KIND_ENERGY 11
+
+// An enthalpy per mass of dry air, J/kg.
+#define MOISTAIR_KIND_SPECIFIC_ENTHALPY 12
+
+// °C.
+#define MOISTAIR_UNIT_CELSIUS 1
+
+// °F.
+#define MOISTAIR_UNIT_FAHRENHEIT 2
+
+// K.
+#define MOISTAIR_UNIT_KELVIN 3
+
+// 1.
+#define MOISTAIR_UNIT_FRACTION 4
+
+// %.
+#define MOISTAIR_UNIT_PERCENT 5
+
+// Pa.
+#define MOISTAIR_UNIT_PASCAL 6
+
+// hPa, the same as mbar.
+#define MOISTAIR_UNIT_HECTOPASCAL 7
+
+// kPa.
+#define MOISTAIR_UNIT_KILOPASCAL 8
+
+// bar.
+#define MOISTAIR_UNIT_BAR 9
+
+// lbf/in².
+#define MOISTAIR_UNIT_POUND_PER_SQUARE_INCH 10
+
+// Inch of mercury at 32 °F: 3386.389 Pa
+#define MOISTAIR_UNIT_INCH_OF_MERCURY 11
+
+// m³/s.
+#define MOISTAIR_UNIT_CUBIC_METER_PER_SECOND 12
+
+// m³/h.
+#define MOISTAIR_UNIT_CUBIC_METER_PER_HOUR 13
+
+// L/s.
+#define MOISTAIR_UNIT_LITER_PER_SECOND 14
+
+// ft³/min.
+#define MOISTAIR_UNIT_CUBIC_FOOT_PER_MINUTE 15
+
+// kg/s.
+#define MOISTAIR_UNIT_KILOGRAM_PER_SECOND 16
+
+// kg/h.
+#define MOISTAIR_UNIT_KILOGRAM_PER_HOUR 17
+
+// lb/h.
+#define MOISTAIR_UNIT_POUND_PER_HOUR 18
+
+// kg/kg.
+#define MOISTAIR_UNIT_KILOGRAM_PER_KILOGRAM 19
+
+// g/kg.
+#define MOISTAIR_UNIT_GRAM_PER_KILOGRAM 20
+
+// W.
+#define MOISTAIR_UNIT_WATT 21
+
+// kW.
+#define MOISTAIR_UNIT_KILOWATT 22
+
+// s.
+#define MOISTAIR_UNIT_SECOND 23
+
+// min.
+#define MOISTAIR_UNIT_MINUTE 24
+
+// h.
+#define MOISTAIR_UNIT_HOUR 25
+
+// J.
+#define MOISTAIR_UNIT_JOULE 26
+
+// kWh.
+#define MOISTAIR_UNIT_KILOWATT_HOUR 27
+
+// J/kg.
+#define MOISTAIR_UNIT_JOULE_PER_KILOGRAM 28
+
+// kJ/kg.
+#define MOISTAIR_UNIT_KILOJOULE_PER_KILOGRAM 29
+
+// The reading as it came, converted to the unit of the core.
+#define MOISTAIR_QUALITY_GOOD 0
+
+// A usable value that is not quite the reading: clipped to saturation, or the last good value held.
+#define MOISTAIR_QUALITY_REPAIRED 1
+
+// No value.
+#define MOISTAIR_QUALITY_REFUSED 2
+
+// Nothing to remark.
+#define MOISTAIR_REASON_OK 0
+
+// No reading: NaN.
+#define MOISTAIR_REASON_MISSING 1
+
+// Below the lowest value that the channel allows.
+#define MOISTAIR_REASON_BELOW_RANGE 2
+
+// Above the highest value that the channel allows, for a relative humidity above 1.03.
+#define MOISTAIR_REASON_ABOVE_RANGE 3
+
+// A relative humidity slightly above one, taken as exactly one.
+#define MOISTAIR_REASON_ABOVE_SATURATION 4
+
+// Unchanged for longer than a living signal would be.
+#define MOISTAIR_REASON_STUCK 5
+
+// A good reading after a pause: nothing may be integrated across the pause. A total judges that once more, by the longest step that it bridges.
+#define MOISTAIR_REASON_GAP 6
+
+// The time is not later than the time before.
+#define MOISTAIR_REASON_TIME_NOT_INCREASING 7
+
+// The time is no number or beyond 1e11 s.
+#define MOISTAIR_REASON_TIME_INVALID 8
+
+// Refused, and filled with the last good value; cause(super::cause) keeps what was wrong.
+#define MOISTAIR_REASON_HELD 9
+
+// The channel itself makes no sense: limits the wrong way round, a unit of another quantity.
+#define MOISTAIR_REASON_CHANNEL_INVALID 10
+
+// In degrees Celsius the reading would be in range.
+#define MOISTAIR_REASON_LOOKS_LIKE_CELSIUS 11
+
+// In degrees Fahrenheit the reading would be in range.
+#define MOISTAIR_REASON_LOOKS_LIKE_FAHRENHEIT 12
+
+// In kelvin the reading would be in range.
+#define MOISTAIR_REASON_LOOKS_LIKE_KELVIN 13
+
+// A channel in percent that delivers fractions.
+#define MOISTAIR_REASON_LOOKS_LIKE_FRACTION 14
+
+// A channel in fractions that delivers percent.
+#define MOISTAIR_REASON_LOOKS_LIKE_PERCENT 15
+
+// In pascal the reading would be in range.
+#define MOISTAIR_REASON_LOOKS_LIKE_PASCAL 16
+
+// In hectopascal (millibar) the reading would be in range.
+#define MOISTAIR_REASON_LOOKS_LIKE_HECTOPASCAL 17
+
+// In kilopascal the reading would be in range.
+#define MOISTAIR_REASON_LOOKS_LIKE_KILOPASCAL 18
+
+// In bar the reading would be in range.
+#define MOISTAIR_REASON_LOOKS_LIKE_BAR 19
+
+// In pounds per square inch the reading would be in range.
+#define MOISTAIR_REASON_LOOKS_LIKE_POUND_PER_SQUARE_INCH 20
+
+// In inches of mercury the reading would be in range.
+#define MOISTAIR_REASON_LOOKS_LIKE_INCH_OF_MERCURY 21
+
+// In a unit without a reason of its own, or in each of several units, the reading would be in range.
+#define MOISTAIR_REASON_LOOKS_LIKE_OTHER_UNIT 22
+
+// It holds until the next sample: records on change of value, commands, counters.
+#define MOISTAIR_RULE_STEP 0
+
+// It runs straight to the next sample: densely sampled, smooth signals.
+#define MOISTAIR_RULE_TRAPEZOID 1
+
+// The first sample: there is no time before it.
+#define MOISTAIR_ADDED_STARTED 0
+
+// Counted.
+#define MOISTAIR_ADDED_COUNTED 1
+
+// Not counted: the rate that would have to cover it was refused.
+#define MOISTAIR_ADDED_HOLE 2
+
+// Not counted: longer than the longest step, or the clock was set back.
+#define MOISTAIR_ADDED_GAP 3
+
+// The sample's time is not usable; the sample is ignored.
+#define MOISTAIR_ADDED_TIME_REFUSED 4
+
+// Not counted: the total would not be finite.
+#define MOISTAIR_ADDED_OVERFLOW 5
+
+// Places for counts by quality; the code of a quality is its place.
+#define MOISTAIR_QUALITY_SLOTS 4
+
+// Places for counts by reason; the code of a reason is its place.
+#define MOISTAIR_REASON_SLOTS 32
+
+// Limits of a quantity as an input, both included.
 typedef struct {
-    /*
-     The least value allowed.
-     */
+    // The least value allowed.
     double min;
-    /*
-     The greatest value allowed; infinite for a property that is only read.
-     */
+    // The greatest value allowed; infinite for a property that is only read.
     double max;
 } moistair_limits;
 
-/*
- The detail of an error. Written whenever a place for it is given; after a success code is 0 and quantity is -1.
- */
+// The detail of an error. Written whenever a place for it is given; after a success code is 0 and quantity is -1.
 typedef struct {
-    /*
-     The offending value in the unit of its quantity; NaN where there is none.
-     */
+    // The offending value in the unit of its quantity; NaN where there is none.
     double value;
-    /*
-     The least value allowed; NaN where there is none.
-     */
+    // The least value allowed; NaN where there is none.
     double min;
-    /*
-     The greatest value allowed; NaN where there is none.
-     */
+    // The greatest value allowed; NaN where there is none.
     double max;
-    /*
-     The status that the function returns.
-     */
+    // The status that the function returns.
     int32_t code;
-    /*
-     The selector of the quantity at fault; -1 where there is none. For MOISTAIR_UNKNOWN_SELECTOR the selector given.
-     */
+    // The selector of the quantity at fault; -1 where there is none. For MOISTAIR_UNKNOWN_SELECTOR the selector given.
     int32_t quantity;
 } moistair_error;
 
-/*
- On what a state stands.
- */
+// On what a state stands.
 typedef struct {
-    /*
-     Absolute pressure [Pa], 20000 to 1100000.
-     */
+    // Absolute pressure [Pa], 20000 to 1100000.
     double pressure;
-    /*
-     MOISTAIR_REAL_GAS or MOISTAIR_IDEAL_GAS.
-     */
+    // MOISTAIR_REAL_GAS or MOISTAIR_IDEAL_GAS.
     int32_t formulation;
-    /*
-     Set to 0; not read.
-     */
+    // Set to 0; not read.
     int32_t reserved;
 } moistair_basis;
 
-/*
- A state of moist air: what defines it (dry_bulb, pressure, humidity_ratio, formulation) and what always has a value.
- As an input only what defines it is read, and checked; the rest is computed anew.
- */
+// A state of moist air: what defines it (dry_bulb, pressure, humidity_ratio, formulation) and what always has a value.
+// As an input only what defines it is read, and checked; the rest is computed anew.
 typedef struct {
-    /*
-     Dry-bulb temperature [°C].
-     */
+    // Dry-bulb temperature [°C].
     double dry_bulb;
-    /*
-     Absolute pressure [Pa].
-     */
+    // Absolute pressure [Pa].
     double pressure;
-    /*
-     Mass of water vapor per mass of dry air [kg/kg].
-     */
+    // Mass of water vapor per mass of dry air [kg/kg].
     double humidity_ratio;
-    /*
-     Moles of water vapor per mole of moist air [1].
-     */
+    // Moles of water vapor per mole of moist air [1].
     double water_mole_fraction;
-    /*
-     Water mole fraction times pressure [Pa].
-     */
+    // Water mole fraction times pressure [Pa].
     double vapor_pressure;
-    /*
-     Mass of water vapor per mass of moist air [kg/kg].
-     */
+    // Mass of water vapor per mass of moist air [kg/kg].
     double specific_humidity;
-    /*
-     Mass of water vapor per volume [kg/m³].
-     */
+    // Mass of water vapor per volume [kg/m³].
     double absolute_humidity;
-    /*
-     Enthalpy per mass of dry air [J/kg].
-     */
+    // Enthalpy per mass of dry air [J/kg].
     double specific_enthalpy;
-    /*
-     Volume per mass of dry air [m³/kg].
-     */
+    // Volume per mass of dry air [m³/kg].
     double specific_volume;
-    /*
-     Mass of moist air per volume [kg/m³].
-     */
+    // Mass of moist air per volume [kg/m³].
     double density;
-    /*
-     Isobaric heat capacity per mass of dry air [J/(kg K)].
-     */
+    // Isobaric heat capacity per mass of dry air [J/(kg K)].
     double specific_heat;
-    /*
-     p v / (R T) of the mixture [1].
-     */
+    // p v / (R T) of the mixture [1].
     double compressibility_factor;
-    /*
-     MOISTAIR_REAL_GAS or MOISTAIR_IDEAL_GAS.
-     */
+    // MOISTAIR_REAL_GAS or MOISTAIR_IDEAL_GAS.
     int32_t formulation;
-    /*
-     0.
-     */
+    // 0.
     int32_t reserved;
 } moistair_state;
 
-/*
- An input column: the value of row i is values[i * stride]. Stride 1 is a plain array, stride 0 one value for every row, a larger one reads
- a field of an array of records that are a whole number of doubles apart.
- */
+// An input column: the value of row i is values[i * stride]. Stride 1 is a plain array, stride 0 one value for every row, a larger one reads
+// a field of an array of records that are a whole number of doubles apart.
 typedef struct {
-    /*
-     The value of row 0; may be null when there are no rows.
-     */
+    // The value of row 0; may be null when there are no rows.
     const double *values;
-    /*
-     Distance from row to row in doubles.
-     */
+    // Distance from row to row in doubles.
     size_t stride;
 } moistair_column;
 
-/*
- How a column call went.
- */
+// How a column call went.
 typedef struct {
-    /*
-     Rows that have no state, or no value for a property that was asked for.
-     */
+    // Rows that have no state, or no value for a property that was asked for.
     size_t failed;
-    /*
-     The first of them, from 0; the number of rows when there is none.
-     */
+    // The first of them, from 0; the number of rows when there is none.
     size_t first_failed;
 } moistair_column_report;
+
+// Moist air with its dry-air mass flow.
+typedef struct {
+    // State of the air.
+    moistair_state air;
+    // Dry-air mass flow [kg/s].
+    double dry_air_flow;
+} moistair_stream;
+
+// Moist air with the liquid water and ice that it carries.
+// As an input air, liquid and ice are read, and checked; the rest is computed anew.
+typedef struct {
+    // State of the gas.
+    moistair_state air;
+    // Liquid water per mass of dry air [kg/kg].
+    double liquid;
+    // Ice per mass of dry air [kg/kg].
+    double ice;
+    // Vapor, liquid and ice per mass of dry air [kg/kg].
+    double total_water;
+    // Enthalpy of gas and condensate per mass of dry air [J/kg].
+    double specific_enthalpy;
+} moistair_air_with_condensate;
+
+// Air that may carry condensate, with its dry-air mass flow. The stream of its gas alone is {mixture.air, dry_air_flow}.
+typedef struct {
+    // Gas and condensate.
+    moistair_air_with_condensate mixture;
+    // Dry-air mass flow [kg/s].
+    double dry_air_flow;
+} moistair_wet_stream;
+
+// What a process gave to the air.
+typedef struct {
+    // Heat through a surface, into the air [W].
+    double heat;
+    // Water into the air [kg/s]; negative for condensate.
+    double water;
+    // Enthalpy that came with that water [W].
+    double water_enthalpy_flow;
+} moistair_exchange;
+
+// What a heater or a dry cooler did.
+typedef struct {
+    // The air that leaves.
+    moistair_stream leaving;
+    // Heat into the air, no water.
+    moistair_exchange exchange;
+} moistair_sensible;
+
+// What a cooling coil did.
+typedef struct {
+    // The air that leaves.
+    moistair_stream leaving;
+    // Heat and water into the air, both negative for a wet coil.
+    moistair_exchange exchange;
+    // Heat taken from the air, positive [W].
+    double cooling_load;
+    // Sensible part of the load [W].
+    double sensible;
+    // Latent part of the load [W].
+    double latent;
+    // Condensate, positive [kg/s].
+    double condensate;
+    // Sensible part over the load [1]; NaN without a load.
+    double sensible_heat_ratio;
+    // MOISTAIR_COIL_DRY, MOISTAIR_COIL_WET or MOISTAIR_COIL_FROST.
+    int32_t regime;
+    // 0.
+    int32_t reserved;
+} moistair_cooling;
+
+// What a coil and the heater behind it did.
+typedef struct {
+    // The coil.
+    moistair_cooling cooling;
+    // The heater.
+    moistair_sensible heating;
+    // Heat of the heater over the cooling load [1]; NaN without a load.
+    double reheat_fraction;
+} moistair_reheat;
+
+// What a humidifier did.
+typedef struct {
+    // The air that leaves, with what it could not take up.
+    moistair_wet_stream leaving;
+    // Water into the air and its enthalpy, no heat.
+    moistair_exchange exchange;
+    // Water that became vapor [kg/s].
+    double evaporated;
+    // Water carried as droplets or ice [kg/s].
+    double carried;
+} moistair_humidified;
+
+// Whether heat and water close over a process.
+typedef struct {
+    // Heat out less heat in less heat exchanged [W].
+    double heat_residual;
+    // Sum of the magnitudes of all heat terms [W].
+    double heat_scale;
+    // What the last place of the temperatures is worth [W].
+    double heat_resolution;
+    // Water out less water in less water exchanged [kg/s].
+    double water_residual;
+    // Sum of the magnitudes of all water terms [kg/s].
+    double water_scale;
+    // 1 if both close to rounding, else 0.
+    int32_t close;
+    // 0.
+    int32_t reserved;
+} moistair_books;
+
+// How a tower loses and renews water besides evaporation.
+typedef struct {
+    // Drift over the circulating flow [1], 0 to 0.05.
+    double drift_fraction;
+    // Concentration of the circulating water over that of the make-up [1], above 1.
+    double cycles_of_concentration;
+} moistair_water_treatment;
+
+// Evaporation, drift, blowdown and what makes up for them, all positive.
+typedef struct {
+    // Evaporation [kg/s].
+    double evaporation;
+    // Drift [kg/s].
+    double drift;
+    // Blowdown [kg/s].
+    double blowdown;
+    // Make-up [kg/s].
+    double make_up;
+    // 1 if drift alone keeps the concentration below the one wanted, so that there is no blowdown; else 0.
+    int32_t limited_by_drift;
+    // 0.
+    int32_t reserved;
+} moistair_water_use;
+
+// The water that a tower cools.
+typedef struct {
+    // Flow that enters hot [kg/s].
+    double flow;
+    // Temperature of the hot water [°C], 0 to 200.
+    double hot;
+    // Temperature of the cold water [°C], 0 to 200.
+    double cold;
+} moistair_tower_water;
+
+// The overall balance of a cooling tower.
+typedef struct {
+    // The air that leaves.
+    moistair_stream leaving;
+    // Heat and water into the air.
+    moistair_exchange exchange;
+    // Water use.
+    moistair_water_use water;
+    // Heat that the water gives up, positive [W].
+    double heat_rejected;
+    // Hot less cold water temperature [K].
+    double range;
+    // Cold water over the wet bulb of the entering air [K].
+    double approach;
+    // Range over range and approach [1]; NaN without either.
+    double effectiveness;
+} moistair_tower_balance;
+
+// What is known about a channel before its first sample. Limits and resolutions are in the unit of the core, which the kinds name.
+// Make one with moistair_channel_new, then set what differs.
+typedef struct {
+    // The lowest value allowed.
+    double min;
+    // The highest value allowed.
+    double max;
+    // Samples within this of each other count as unchanged. Below the smallest step of the signal.
+    double resolution;
+    // How far the reference of moistair_channel_check_beside must move to show that the plant is not simply steady.
+    double reference_resolution;
+    // How old the last good value may be to stand in for a refused one [s]; 0: never.
+    double hold;
+    // Nominal sample interval [s]; a step longer than 1.5 of it is a gap; 0: no step is.
+    double interval;
+    // What the channel carries, MOISTAIR_KIND_…
+    int32_t kind;
+    // The unit of the raw readings, MOISTAIR_UNIT_…
+    int32_t unit;
+    // Unchanged samples in a row that are taken as stuck; 0: no such rule.
+    uint32_t stuck_samples;
+    // Samples after which a channel in percent that delivers fractions is refused; 0: never.
+    uint32_t slip_samples;
+} moistair_channel;
+
+// What a channel remembers from sample to sample. Zeroed at first; may be copied and stored, not looked into.
+typedef struct {
+    // Zero at first.
+    uint64_t words[12];
+} moistair_channel_state;
+
+// A checked sample.
+typedef struct {
+    // The value in the unit of the core; NaN when refused.
+    double value;
+    // How far it can be trusted, MOISTAIR_QUALITY_…
+    int32_t quality;
+    // Why, MOISTAIR_REASON_…
+    int32_t reason;
+    // What was wrong with the reading: the reason, unless that is MOISTAIR_REASON_HELD.
+    int32_t cause;
+    // 1 if a gap lies before this sample, so that nothing may be integrated across it; else 0.
+    int32_t after_gap;
+} moistair_checked;
+
+// Counts of checked samples by quality and by reason. Zeroed at first.
+typedef struct {
+    // Samples of each quality.
+    uint64_t by_quality[MOISTAIR_QUALITY_SLOTS];
+    // Samples with each reason.
+    uint64_t by_reason[MOISTAIR_REASON_SLOTS];
+    // Samples that were filled with the last good value, by what was wrong with the reading.
+    uint64_t held_by_cause[MOISTAIR_REASON_SLOTS];
+    // Gaps.
+    uint64_t after_gap;
+} moistair_counts;
+
+// The total over time of a rate. Made by moistair_total_new; may be copied and stored, not looked into.
+typedef struct {
+    // Made by moistair_total_new.
+    uint64_t words[15];
+} moistair_total;
+
+// What a total has come to. The unit is that of the rate times s; means and extremes have the unit of the rate.
+typedef struct {
+    // The total.
+    double total;
+    // The part with a positive rate.
+    double positive;
+    // The part with a negative rate, not above 0.
+    double negative;
+    // Mean rate over the covered time; NaN while nothing is covered.
+    double mean;
+    // Lowest rate in the covered time; NaN while nothing is covered.
+    double lowest;
+    // Highest rate in the covered time; NaN while nothing is covered.
+    double highest;
+    // The time that the total stands for [s].
+    double covered_seconds;
+    // The part of it that rests on repaired samples [s].
+    double repaired_seconds;
+    // The time from the first to the last sample, gaps included [s].
+    double elapsed_seconds;
+    // Covered over elapsed time, 0 to 1; 0 while no time has passed.
+    double coverage;
+} moistair_total_values;
+
+// A total that is cut at the multiples of a period. Made by moistair_periods_new; may be copied and stored, not looked into.
+typedef struct {
+    // Made by moistair_periods_new.
+    uint64_t words[17];
+} moistair_periods;
+
+// A finished period.
+typedef struct {
+    // When it began [s].
+    double start;
+    // Its total.
+    moistair_total total;
+} moistair_period;
+
+// How the books of a process or plant closed over time. Zeroed at first; may be copied and stored, not looked into.
+typedef struct {
+    // Zero at first.
+    uint64_t words[15];
+} moistair_books_total;
+
+// The residuals of one book.
+typedef struct {
+    // Sum of the absolute residuals, in the unit of the book.
+    double sum_of_residuals;
+    // Sum of the scales, in the unit of the book.
+    double sum_of_scales;
+    // Largest residual relative to its own scale.
+    double largest_relative;
+    // Sum of residuals over sum of scales; 0 without scales.
+    double relative;
+    // Residuals that were added.
+    uint64_t samples;
+    // Residuals that were refused.
+    uint64_t refused;
+} moistair_residuals;
+
+// What the books have come to.
+typedef struct {
+    // The heat book [W].
+    moistair_residuals heat;
+    // The water book [kg/s].
+    moistair_residuals water;
+    // Books that closed to rounding.
+    uint64_t closed;
+} moistair_books_total_values;
+
+// Measured less computed over many samples. Zeroed at first; may be copied and stored, not looked into.
+typedef struct {
+    // Zero at first.
+    uint64_t words[8];
+} moistair_deviation;
+
+// What a deviation has come to, in the unit of the values; NaN without samples.
+typedef struct {
+    // Mean, the bias of the measurement.
+    double mean;
+    // Root of the mean square.
+    double root_mean_square;
+    // Lowest, with its sign.
+    double lowest;
+    // Highest, with its sign.
+    double highest;
+    // Pairs that were taken.
+    uint64_t samples;
+    // Pairs that were refused.
+    uint64_t refused;
+} moistair_deviation_values;
 
 #ifdef __cplusplus
 extern "C" {
 #endif // __cplusplus
 
-/*
- The MOISTAIR_ABI_VERSION that the library was built with. A program that finds another one than its header says must not go on.
- */
+// The MOISTAIR_ABI_VERSION that the library was built with. A program that finds another one than its header says must not go on.
 int32_t moistair_abi_version(void);
 
-/*
- The version of the library as 1000000 major + 1000 minor + patch, as MOISTAIR_VERSION is of the header.
- */
+// The version of the library as 1000000 major + 1000 minor + patch, as MOISTAIR_VERSION is of the header.
 int32_t moistair_version(void);
 
-/*
- Changes when any result of any function changes in any bit.
- */
+// Changes when any result of any function changes in any bit.
 int32_t moistair_numerics_version(void);
 
-/*
- A status in words: English, lower case, static. Unknown codes read "unknown status".
- */
+// A status in words: English, lower case, static. Unknown codes read "unknown status".
 const char *moistair_status_text(int32_t code);
 
-/*
- The name of a quantity, such as "dry_bulb": static, lower case, words joined by underscores. Empty for an unknown selector.
- */
+// The name of a quantity, such as "dry_bulb": static, lower case, words joined by underscores. Empty for an unknown selector.
 const char *moistair_quantity_name(int32_t quantity);
 
-/*
- The unit of a quantity, such as "kg/kg": static, UTF-8. Empty for an unknown selector.
- */
+// The unit of a quantity, such as "kg/kg": static, UTF-8. Empty for an unknown selector.
 const char *moistair_quantity_unit(int32_t quantity);
 
-/*
- The limits of a quantity as an input, in its unit.
-
- quantity: selector of any quantity; limits: output; error: may be null.
- Returns 0, 101, 102, 103.
- */
+// The limits of a quantity as an input, in its unit.
+//
+// quantity: selector of any quantity; limits: output; error: may be null.
+// Returns 0, 101, 102, 103.
 int32_t moistair_quantity_limits(int32_t quantity, moistair_limits *limits, moistair_error *error);
 
-/*
- Pressure of the standard atmosphere (ISO 2533) at an elevation, taken as geopotential altitude. A measured pressure is better: weather
- moves it by 3 % either way.
-
- elevation: [m] above mean sea level, -5000 to 11000; pressure: output [Pa]; error: may be null.
- Returns 0, 101, 103, 201, 202.
- */
+// Pressure of the standard atmosphere (ISO 2533) at an elevation, taken as geopotential altitude. A measured pressure is better: weather
+// moves it by 3 % either way.
+//
+// elevation: [m] above mean sea level, -5000 to 11000; pressure: output [Pa]; error: may be null.
+// Returns 0, 101, 103, 201, 202.
 int32_t moistair_pressure_at_elevation(double elevation,
                                        double *pressure,
                                        moistair_error *error);
 
-/*
- A state from its dry bulb and any second property.
-
- dry_bulb: [°C], -80 to 150; property: selector of the second property, one that fixes a state (humidity ratio, relative humidity,
- wet bulb, dew point, specific enthalpy, …); value: its value in its unit; basis: pressure and formulation; state: output; error: may
- be null.
- Returns 0, 101, 102, 103, 201, 202, 203 (no state has the value here; the error holds the limits).
- */
+// A state from its dry bulb and any second property.
+//
+// dry_bulb: [°C], -80 to 150; property: selector of the second property, one that fixes a state (humidity ratio, relative humidity,
+// wet bulb, dew point, specific enthalpy, …); value: its value in its unit; basis: pressure and formulation; state: output; error: may
+// be null.
+// Returns 0, 101, 102, 103, 201, 202, 203 (no state has the value here; the error holds the limits).
 int32_t moistair_from_dry_bulb(double dry_bulb,
                                int32_t property,
                                double value,
@@ -571,42 +948,36 @@ int32_t moistair_from_dry_bulb(double dry_bulb,
                                moistair_state *state,
                                moistair_error *error);
 
-/*
- One property of a state.
-
- state: a state; property: selector below MOISTAIR_PROPERTY_COUNT; value: output in the unit of the property; error: may be null.
- Returns 0, 101, 102, 103, 31x (the property has no value at this state), 201, 202, 203 (the state is none).
- */
+// One property of a state.
+//
+// state: a state; property: selector below MOISTAIR_PROPERTY_COUNT; value: output in the unit of the property; error: may be null.
+// Returns 0, 101, 102, 103, 31x (the property has no value at this state), 201, 202, 203 (the state is none).
 int32_t moistair_property(const moistair_state *state,
                           int32_t property,
                           double *value,
                           moistair_error *error);
 
-/*
- Several properties of a state at once, cheaper than one by one.
-
- state: a state; mask: which properties, the bit 1 << selector for each; values: output, each property at the place of its selector in its
- unit, NaN where it has no value; places not asked for are left alone; have: output, the bits of mask that have a value, may be null;
- error: may be null.
- Returns 0 (also when a property has no value), 101, 102 (a bit that is no property), 103, 201, 202, 203 (the state is none).
- */
+// Several properties of a state at once, cheaper than one by one.
+//
+// state: a state; mask: which properties, the bit 1 << selector for each; values: output, each property at the place of its selector in its
+// unit, NaN where it has no value; places not asked for are left alone; have: output, the bits of mask that have a value, may be null;
+// error: may be null.
+// Returns 0 (also when a property has no value), 101, 102 (a bit that is no property), 103, 201, 202, 203 (the state is none).
 int32_t moistair_properties(const moistair_state *state,
                             uint64_t mask,
                             double *values,
                             uint64_t *have,
                             moistair_error *error);
 
-/*
- Properties of many states at once: row by row the same results, bit for bit, as the calls for one state. A bad row costs only itself.
-
- rows: number of rows, 0 allowed; dry_bulb: [°C]; property: selector of the second property; second: its values; pressure: [Pa]; formulation: of
- all rows; mask: which properties, the bit 1 << selector for each; outputs: array with the output column of each property at the place
- of its selector (places not in mask are not read), each with room for rows doubles, NaN where there is no value; status: room for the
- status of each row, may be null; report: output, may be null; error: the detail of the first row that failed, may be null.
- Columns to be written may not overlap with any other memory of the call.
- Returns 0 when every row is good, else the status of the first row that is not (2xx, 3xx; all outputs are written then as well); 101, 102,
- 103, 104, 105 when an argument is wrong (nothing is written).
- */
+// Properties of many states at once: row by row the same results, bit for bit, as the calls for one state. A bad row costs only itself.
+//
+// rows: number of rows, 0 allowed; dry_bulb: [°C]; property: selector of the second property; second: its values; pressure: [Pa]; formulation: of
+// all rows; mask: which properties, the bit 1 << selector for each; outputs: array with the output column of each property at the place
+// of its selector (places not in mask are not read), each with room for rows doubles, NaN where there is no value; status: room for the
+// status of each row, may be null; report: output, may be null; error: the detail of the first row that failed, may be null.
+// Columns to be written may not overlap with any other memory of the call.
+// Returns 0 when every row is good, else the status of the first row that is not (2xx, 3xx; all outputs are written then as well); 101, 102,
+// 103, 104, 105 when an argument is wrong (nothing is written).
 int32_t moistair_state_columns(size_t rows,
                                moistair_column dry_bulb,
                                int32_t property,
@@ -618,6 +989,477 @@ int32_t moistair_state_columns(size_t rows,
                                int32_t *status,
                                moistair_column_report *report,
                                moistair_error *error);
+
+// A stream from its dry-air mass flow.
+//
+// air: a state; dry_air_flow: [kg/s], 0 to 1e6; stream: output; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_stream_from_mass_flow(const moistair_state *air,
+                                       double dry_air_flow,
+                                       moistair_stream *stream,
+                                       moistair_error *error);
+
+// A stream from its volume flow at the state of the air.
+//
+// air: a state; volume_flow: [m³/s], 0 to 1e6; stream: output; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_stream_from_volume_flow(const moistair_state *air,
+                                         double volume_flow,
+                                         moistair_stream *stream,
+                                         moistair_error *error);
+
+// A stream from a standard volume flow: that of its dry air at a reference density.
+//
+// air: a state; volume_flow: [m³/s], 0 to 1e6; reference_density: [kg/m³] of dry air, such as 1.2; 0.5 to 2; stream: output; error: may be
+// null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_stream_from_standard_volume_flow(const moistair_state *air,
+                                                  double volume_flow,
+                                                  double reference_density,
+                                                  moistair_stream *stream,
+                                                  moistair_error *error);
+
+// A stream that carries liquid water and ice.
+//
+// stream: the gas; liquid: [kg/kg] of dry air, 0 to 10; ice: [kg/kg] of dry air, 0 to 10; wet_stream: output; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_wet_stream_from_stream(const moistair_stream *stream,
+                                        double liquid,
+                                        double ice,
+                                        moistair_wet_stream *wet_stream,
+                                        moistair_error *error);
+
+// Vapor, liquid and ice in equilibrium, from the enthalpy and the water of all phases together.
+//
+// specific_enthalpy: [J/kg] of dry air; total_water: [kg/kg] of dry air, 0 to 10; freezing: MOISTAIR_FREEZING_EQUILIBRIUM or
+// MOISTAIR_FREEZING_SUPERCOOLED; basis: pressure and formulation; mixture: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (outside the range of states).
+int32_t moistair_from_enthalpy_and_water(double specific_enthalpy,
+                                         double total_water,
+                                         int32_t freezing,
+                                         moistair_basis basis,
+                                         moistair_air_with_condensate *mixture,
+                                         moistair_error *error);
+
+// Specific enthalpy of liquid water on the datum of a basis.
+//
+// temperature: [°C], 0 to 200; basis: pressure and formulation; specific_enthalpy: output [J/kg]; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_liquid_water_enthalpy(double temperature,
+                                       moistair_basis basis,
+                                       double *specific_enthalpy,
+                                       moistair_error *error);
+
+// Heats or cools to a temperature at constant humidity ratio.
+//
+// entering: the stream that enters; leaving_temperature: [°C]; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (saturation would be crossed: use a coil).
+int32_t moistair_sensible_to_temperature(const moistair_stream *entering,
+                                         double leaving_temperature,
+                                         moistair_sensible *done,
+                                         moistair_error *error);
+
+// Heats or cools by a heat flow at constant humidity ratio.
+//
+// entering: the stream that enters; heat: [W], positive into the air; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207 (heat into no air), 301 (saturation or the range of states would be crossed).
+int32_t moistair_sensible_with_heat(const moistair_stream *entering,
+                                    double heat,
+                                    moistair_sensible *done,
+                                    moistair_error *error);
+
+// A cooling coil that leaves a given state.
+//
+// entering: the stream that enters; leaving: the state that leaves; condensate: where the condensate temperature comes from,
+// MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only; done: output; error: may
+// be null.
+// Returns 0, 1xx, 2xx, 301 (the leaving air is warmer or moister).
+int32_t moistair_coil_to_state(const moistair_stream *entering,
+                               const moistair_state *leaving,
+                               int32_t condensate,
+                               double condensate_temperature,
+                               moistair_cooling *done,
+                               moistair_error *error);
+
+// A cooling coil known by its apparatus dew point and bypass factor.
+//
+// entering: the stream that enters; apparatus_dew_point: [°C], -40 to 150; bypass_factor: [1], 0 to 1; condensate: where the condensate
+// temperature comes from, MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only;
+// done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (the apparatus is warmer than the air).
+int32_t moistair_coil_by_bypass_factor(const moistair_stream *entering,
+                                       double apparatus_dew_point,
+                                       double bypass_factor,
+                                       int32_t condensate,
+                                       double condensate_temperature,
+                                       moistair_cooling *done,
+                                       moistair_error *error);
+
+// The coil between two measured states; differences of humidity ratio within a dead band count as noise of the sensors.
+//
+// entering: the stream that enters; leaving: the state that leaves; condensate: where the condensate temperature comes from,
+// MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only; dead_band: [kg/kg], 0 to
+// 10; done: output; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_coil_between(const moistair_stream *entering,
+                              const moistair_state *leaving,
+                              int32_t condensate,
+                              double condensate_temperature,
+                              double dead_band,
+                              moistair_cooling *done,
+                              moistair_error *error);
+
+// Reaches a state by cooling to its humidity ratio, then heating. Codes restrict simultaneous heating and cooling.
+//
+// entering: the stream that enters; target: the state to reach; coil_leaving_relative_humidity: [1] of the air between coil and heater,
+// 0.2 to 1; condensate: where the condensate temperature comes from, MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150,
+// read for MOISTAIR_CONDENSATE_AT_GIVEN only; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (the target is moister, or cooler than the coil would leave).
+int32_t moistair_reheat_to_state(const moistair_stream *entering,
+                                 const moistair_state *target,
+                                 double coil_leaving_relative_humidity,
+                                 int32_t condensate,
+                                 double condensate_temperature,
+                                 moistair_reheat *done,
+                                 moistair_error *error);
+
+// Specific enthalpy of saturated steam, IAPWS-95, on the datum of liquid water at the triple point.
+//
+// temperature: [°C], 0 to 200; specific_enthalpy: output [J/kg]; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_saturated_steam_enthalpy(double temperature,
+                                          double *specific_enthalpy,
+                                          moistair_error *error);
+
+// Adds steam; what the air cannot take up is carried.
+//
+// entering: the stream that enters; steam: [kg/s], 0 to 1e6; steam_enthalpy: specific enthalpy of the steam [J/kg], 0 to 4e6; done:
+// output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301.
+int32_t moistair_humidify_with_steam(const moistair_stream *entering,
+                                     double steam,
+                                     double steam_enthalpy,
+                                     moistair_humidified *done,
+                                     moistair_error *error);
+
+// Adds steam up to a humidity ratio.
+//
+// entering: the stream that enters; humidity_ratio: [kg/kg]; steam_enthalpy: specific enthalpy of the steam [J/kg], 0 to 4e6; done:
+// output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301 (below what enters).
+int32_t moistair_humidify_with_steam_to_humidity_ratio(const moistair_stream *entering,
+                                                       double humidity_ratio,
+                                                       double steam_enthalpy,
+                                                       moistair_humidified *done,
+                                                       moistair_error *error);
+
+// Adds steam up to a relative humidity over the stable surface.
+//
+// entering: the stream that enters; relative_humidity: [1], 0 to 1; steam_enthalpy: specific enthalpy of the steam [J/kg], 0 to 4e6; done:
+// output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301 (below what enters, or never reached).
+int32_t moistair_humidify_with_steam_to_relative_humidity(const moistair_stream *entering,
+                                                          double relative_humidity,
+                                                          double steam_enthalpy,
+                                                          moistair_humidified *done,
+                                                          moistair_error *error);
+
+// The steam flow at which the air first saturates.
+//
+// entering: the stream that enters; steam_enthalpy: specific enthalpy of the steam [J/kg], 0 to 4e6; limit: output [kg/s], infinite if
+// there is none; error: may be null.
+// Returns 0, 1xx, 2xx, 207.
+int32_t moistair_humidify_steam_limit(const moistair_stream *entering,
+                                      double steam_enthalpy,
+                                      double *limit,
+                                      moistair_error *error);
+
+// Sprays liquid water; what equilibrium does not evaporate is carried.
+//
+// entering: the stream that enters; water: [kg/s], 0 to 1e6; water_temperature: [°C], 0 to 200; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301.
+int32_t moistair_humidify_with_spray(const moistair_stream *entering,
+                                     double water,
+                                     double water_temperature,
+                                     moistair_humidified *done,
+                                     moistair_error *error);
+
+// A wetted medium or full spray of a known saturation effectiveness.
+//
+// entering: the stream that enters; saturation_effectiveness: [1], 0 to 1; water: MOISTAIR_WATER_AT_WET_BULB or MOISTAIR_WATER_AT_GIVEN;
+// water_temperature: [°C], 0 to 200, read for MOISTAIR_WATER_AT_GIVEN only; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (the wet bulb is below freezing), 31x.
+int32_t moistair_humidify_with_medium(const moistair_stream *entering,
+                                      double saturation_effectiveness,
+                                      int32_t water,
+                                      double water_temperature,
+                                      moistair_humidified *done,
+                                      moistair_error *error);
+
+// Mixes streams at one pressure adiabatically, with all condensate, then phase equilibrium.
+//
+// streams: the streams that enter; those without flow take no part; count: number of streams, to MOISTAIR_MOST_STREAMS; leaving: output;
+// error: may be null.
+// Returns 0, 1xx, 2xx, 205, 206, 207, 301.
+int32_t moistair_mix(const moistair_wet_stream *streams,
+                     size_t count,
+                     moistair_wet_stream *leaving,
+                     moistair_error *error);
+
+// Mixes streams adiabatically at a given outlet pressure.
+//
+// streams: the streams that enter; those without flow take no part; count: number of streams, to MOISTAIR_MOST_STREAMS; pressure: of the
+// outlet [Pa]; freezing: MOISTAIR_FREEZING_EQUILIBRIUM or MOISTAIR_FREEZING_SUPERCOOLED; leaving: output; error: may be null.
+// Returns 0, 1xx, 2xx, 205, 207, 301.
+int32_t moistair_mix_at(const moistair_wet_stream *streams,
+                        size_t count,
+                        double pressure,
+                        int32_t freezing,
+                        moistair_wet_stream *leaving,
+                        moistair_error *error);
+
+// The stream of air that is left of a total flow when a part of it is known: the recirculated air behind measured outdoor and supply air.
+//
+// total_dry_air_flow: [kg/s]; part: the known stream; air: state of the rest; rest: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (the part is more than the total).
+int32_t moistair_stream_remainder(double total_dry_air_flow,
+                                  const moistair_stream *part,
+                                  const moistair_state *air,
+                                  moistair_stream *rest,
+                                  moistair_error *error);
+
+// Whether heat and water close between streams that enter, one that leaves and what was exchanged.
+//
+// streams: the streams that enter; those without flow take no part; count: number of streams, to MOISTAIR_MOST_STREAMS; leaving: the
+// stream that leaves; exchange: what was exchanged; books: output; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_balance(const moistair_wet_stream *streams,
+                         size_t count,
+                         const moistair_wet_stream *leaving,
+                         const moistair_exchange *exchange,
+                         moistair_books *books,
+                         moistair_error *error);
+
+// Blowdown and make-up for an evaporation; also for humidifiers with bleed.
+//
+// evaporation: [kg/s], 0 to 1e6; circulating: circulating water [kg/s], 0 to 1e6; treatment: drift and concentration; water: output;
+// error: may be null.
+// Returns 0, 1xx, 2xx, 301 (one cycle of concentration).
+int32_t moistair_tower_water_use(double evaporation,
+                                 double circulating,
+                                 moistair_water_treatment treatment,
+                                 moistair_water_use *water,
+                                 moistair_error *error);
+
+// Balance of a tower with a known air flow; the air is taken to leave saturated.
+//
+// entering: the air that enters; water: the water that is cooled; treatment: drift and concentration; balance: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301.
+int32_t moistair_tower_with_air_flow(const moistair_stream *entering,
+                                     moistair_tower_water water,
+                                     moistair_water_treatment treatment,
+                                     moistair_tower_balance *balance,
+                                     moistair_error *error);
+
+// Balance of a tower with a known leaving state: the dry-air flow that it takes.
+//
+// entering: the state that enters; leaving: the state that leaves; water: the water that is cooled; treatment: drift and concentration;
+// balance: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301.
+int32_t moistair_tower_with_leaving_air(const moistair_state *entering,
+                                        const moistair_state *leaving,
+                                        moistair_tower_water water,
+                                        moistair_water_treatment treatment,
+                                        moistair_tower_balance *balance,
+                                        moistair_error *error);
+
+// A channel of a kind in a raw unit, with no stuck rule, no hold, no gap rule.
+//
+// kind: MOISTAIR_KIND_…; unit: MOISTAIR_UNIT_…; min, max: limits in the unit of the core; channel: output; error: may be null.
+// Returns 0, 101, 102, 103, 208.
+int32_t moistair_channel_new(int32_t kind,
+                             int32_t unit,
+                             double min,
+                             double max,
+                             moistair_channel *channel,
+                             moistair_error *error);
+
+// Checks one sample and remembers it.
+//
+// channel: a channel; state: its memory, read and written; time: [s] since any fixed instant; raw: the reading in the unit of the channel, NaN
+// if there is none; checked: output; error: may be null.
+// Returns 0 (also for a refused sample), 101, 102, 103.
+int32_t moistair_channel_check(const moistair_channel *channel,
+                               moistair_channel_state *state,
+                               double time,
+                               double raw,
+                               moistair_checked *checked,
+                               moistair_error *error);
+
+// Checks one sample beside a reference: a sample counts as unchanged only when the reference has moved since the last one.
+//
+// channel: a channel; state: its memory, read and written; time: [s] since any fixed instant; raw: the reading in the unit of the channel, NaN
+// if there is none; reference: in its own unit; checked: output; error: may be null.
+// Returns 0 (also for a refused sample), 101, 102, 103.
+int32_t moistair_channel_check_beside(const moistair_channel *channel,
+                                      moistair_channel_state *state,
+                                      double time,
+                                      double raw,
+                                      double reference,
+                                      moistair_checked *checked,
+                                      moistair_error *error);
+
+// A reading in a raw unit, in the unit of the core.
+//
+// unit: MOISTAIR_UNIT_…; raw: the reading; value: output; error: may be null.
+// Returns 0, 101, 102, 103, 201.
+int32_t moistair_unit_to_core(int32_t unit, double raw, double *value, moistair_error *error);
+
+// A value in the unit of the core, in another unit: for display, logs and controllers.
+//
+// unit: MOISTAIR_UNIT_…; value: in the unit of the core; converted: output; error: may be null.
+// Returns 0, 101, 102, 103, 201.
+int32_t moistair_unit_from_core(int32_t unit, double value, double *converted, moistair_error *error);
+
+// The symbol of a unit, such as "kPa": static, UTF-8. Empty for an unknown code.
+const char *moistair_unit_text(int32_t unit);
+
+// A quality in words: static, lower case. Empty for an unknown code.
+const char *moistair_quality_text(int32_t quality);
+
+// A reason in words: static, lower case. Empty for an unknown code.
+const char *moistair_reason_text(int32_t reason);
+
+// Counts a checked sample.
+//
+// counts: read and written; checked: the sample; error: may be null.
+// Returns 0, 101, 102, 103, 106.
+int32_t moistair_counts_record(moistair_counts *counts,
+                               const moistair_checked *checked,
+                               moistair_error *error);
+
+// Adds the counts of another time or channel.
+//
+// counts: read and written; other: what is added; error: may be null.
+// Returns 0, 101, 103.
+int32_t moistair_counts_merge(moistair_counts *counts, const moistair_counts *other, moistair_error *error);
+
+// An empty total.
+//
+// rule: what the rate does between two samples, MOISTAIR_RULE_…; longest_step: the longest time between samples that is bridged [s],
+// infinity bridges all; total: output; error: may be null.
+// Returns 0, 101, 102, 103, 201.
+int32_t moistair_total_new(int32_t rule,
+                           double longest_step,
+                           moistair_total *total,
+                           moistair_error *error);
+
+// Adds the next sample of a rate. A rate that is refused or not finite leaves a hole, none of it counted as zero.
+//
+// total: read and written; time: [s] since any fixed instant; rate: in any unit; quality: how far it can be trusted, MOISTAIR_QUALITY_…; added:
+// output, what became of the time before the sample, MOISTAIR_ADDED_…, may be null; error: may be null.
+// Returns 0, 101, 102, 103.
+int32_t moistair_total_add(moistair_total *total,
+                           double time,
+                           double rate,
+                           int32_t quality,
+                           int32_t *added,
+                           moistair_error *error);
+
+// Adds a total of another time or place: hours into a day.
+//
+// total: read and written; other: what is added; error: may be null.
+// Returns 0, 101, 103, 302.
+int32_t moistair_total_merge(moistair_total *total, const moistair_total *other, moistair_error *error);
+
+// What a total has come to.
+//
+// total: a total; values: output; error: may be null.
+// Returns 0, 101, 103, 106.
+int32_t moistair_total_read(const moistair_total *total,
+                            moistair_total_values *values,
+                            moistair_error *error);
+
+// Periods of a length, each beginning at a multiple of it, so that hours of Unix time are hours of UTC.
+//
+// length: [s], 0.001 to 1e11; rule, longest_step: as for moistair_total_new; periods: output; error: may be null.
+// Returns 0, 101, 102, 103, 201.
+int32_t moistair_periods_new(double length,
+                             int32_t rule,
+                             double longest_step,
+                             moistair_periods *periods,
+                             moistair_error *error);
+
+// Adds the next sample of a rate, as moistair_total_add does.
+//
+// periods: read and written; time: [s]; rate: in any unit; quality: MOISTAIR_QUALITY_…; period: output, the finished period when this sample
+// is the first beyond it, else left alone; finished: output, 1 if there is one, else 0; error: may be null.
+// Returns 0, 101, 102, 103.
+int32_t moistair_periods_add(moistair_periods *periods,
+                             double time,
+                             double rate,
+                             int32_t quality,
+                             moistair_period *period,
+                             int32_t *finished,
+                             moistair_error *error);
+
+// The period that is not finished yet, as if it ended without another sample.
+//
+// periods: the periods; period: output, left alone if no time has passed in it; begun: output, 1 if some has, else 0; error: may be null.
+// Returns 0, 101, 103.
+int32_t moistair_periods_unfinished(const moistair_periods *periods,
+                                    moistair_period *period,
+                                    int32_t *begun,
+                                    moistair_error *error);
+
+// Adds the books of a process; books that are not finite are only counted as refused.
+//
+// total: read and written; books: from moistair_balance; error: may be null.
+// Returns 0, 101, 103.
+int32_t moistair_books_total_record(moistair_books_total *total,
+                                    const moistair_books *books,
+                                    moistair_error *error);
+
+// Adds the books of another time or place.
+//
+// total: read and written; other: what is added; error: may be null.
+// Returns 0, 101, 103, 302.
+int32_t moistair_books_total_merge(moistair_books_total *total,
+                                   const moistair_books_total *other,
+                                   moistair_error *error);
+
+// What the books have come to.
+//
+// total: the books; values: output; error: may be null.
+// Returns 0, 101, 103, 106.
+int32_t moistair_books_total_read(const moistair_books_total *total,
+                                  moistair_books_total_values *values,
+                                  moistair_error *error);
+
+// Takes a measured and a computed value in one unit; a pair that is not finite is only counted as refused.
+//
+// deviation: read and written; measured, computed: the pair; error: may be null.
+// Returns 0, 101, 103.
+int32_t moistair_deviation_add(moistair_deviation *deviation,
+                               double measured,
+                               double computed,
+                               moistair_error *error);
+
+// Adds the deviations of another time.
+//
+// deviation: read and written; other: what is added; error: may be null.
+// Returns 0, 101, 103, 302.
+int32_t moistair_deviation_merge(moistair_deviation *deviation,
+                                 const moistair_deviation *other,
+                                 moistair_error *error);
+
+// What a deviation has come to.
+//
+// deviation: the deviation; values: output; error: may be null.
+// Returns 0, 101, 103, 106.
+int32_t moistair_deviation_read(const moistair_deviation *deviation,
+                                moistair_deviation_values *values,
+                                moistair_error *error);
 
 #ifdef __cplusplus
 }  // extern "C"

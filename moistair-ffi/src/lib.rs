@@ -18,18 +18,22 @@
 #![allow(non_camel_case_types, reason = "the types carry their names in C")]
 #![allow(clippy::missing_safety_doc, reason = "the contract is one for all functions, at the top of the crate")]
 
+pub mod account;
 pub mod columns;
 mod memory;
 pub mod process;
 pub mod quantity;
+pub mod signal;
 pub mod state;
 pub mod status;
 mod text;
 pub mod version;
 
+pub use account::*;
 pub use columns::*;
 pub use process::*;
 pub use quantity::*;
+pub use signal::*;
 pub use state::*;
 pub use status::*;
 pub use version::*;

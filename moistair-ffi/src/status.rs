@@ -17,6 +17,8 @@ pub const MOISTAIR_MISALIGNED: i32 = 103;
 pub const MOISTAIR_OVERLAPPING: i32 = 104;
 /// A count or a stride reaches beyond the address space.
 pub const MOISTAIR_TOO_LONG: i32 = 105;
+/// A structure holds what the library cannot have written.
+pub const MOISTAIR_DAMAGED: i32 = 106;
 /// A value is NaN or infinite.
 pub const MOISTAIR_NOT_FINITE: i32 = 201;
 /// A value lies outside the declared range of its quantity.
@@ -31,8 +33,12 @@ pub const MOISTAIR_MIXED_FORMULATIONS: i32 = 205;
 pub const MOISTAIR_MIXED_PRESSURES: i32 = 206;
 /// A process on no air at all.
 pub const MOISTAIR_NO_FLOW: i32 = 207;
+/// A channel makes no sense: limits that are not in order, or a unit of another kind.
+pub const MOISTAIR_INVALID_CHANNEL: i32 = 208;
 /// The process cannot reach what was asked.
 pub const MOISTAIR_INFEASIBLE: i32 = 301;
+/// A sum would not be finite. Nothing was added.
+pub const MOISTAIR_OVERFLOW: i32 = 302;
 /// No value: there is no water vapor.
 pub const MOISTAIR_NO_VALUE_DRY_AIR: i32 = 310;
 /// No value: the saturation pressure exceeds the total pressure.
@@ -72,6 +78,10 @@ pub(crate) enum Failure {
     Overlapping,
     TooLong,
     UnknownSelector(i32),
+    Damaged,
+    NotFinite,
+    InvalidChannel,
+    Overflow,
     Internal,
     Core(Error),
 }
@@ -99,6 +109,10 @@ impl From<Failure> for moistair_error {
             Failure::Misaligned => plain(MOISTAIR_MISALIGNED),
             Failure::Overlapping => plain(MOISTAIR_OVERLAPPING),
             Failure::TooLong => plain(MOISTAIR_TOO_LONG),
+            Failure::Damaged => plain(MOISTAIR_DAMAGED),
+            Failure::NotFinite => plain(MOISTAIR_NOT_FINITE),
+            Failure::InvalidChannel => plain(MOISTAIR_INVALID_CHANNEL),
+            Failure::Overflow => plain(MOISTAIR_OVERFLOW),
             Failure::Internal => plain(MOISTAIR_INTERNAL),
             Failure::UnknownSelector(quantity) | Failure::Core(Error::UnknownSelector { code: quantity }) => {
                 Self { quantity, ..plain(MOISTAIR_UNKNOWN_SELECTOR) }
@@ -128,6 +142,7 @@ pub fn text(code: i32) -> Option<&'static CStr> {
         MOISTAIR_MISALIGNED => c"a pointer is not aligned for its type",
         MOISTAIR_OVERLAPPING => c"memory to be written overlaps other memory of the call",
         MOISTAIR_TOO_LONG => c"a count or a stride reaches beyond the address space",
+        MOISTAIR_DAMAGED => c"a structure holds what the library cannot have written",
         MOISTAIR_NOT_FINITE => c"a value is not a finite number",
         MOISTAIR_OUT_OF_RANGE => c"a value is outside the range of its quantity",
         MOISTAIR_UNATTAINABLE => c"no state has this value at this dry bulb and pressure",
@@ -135,6 +150,8 @@ pub fn text(code: i32) -> Option<&'static CStr> {
         MOISTAIR_MIXED_FORMULATIONS => c"states of different formulations cannot be combined",
         MOISTAIR_MIXED_PRESSURES => c"states at different pressures need the pressure of the outlet",
         MOISTAIR_NO_FLOW => c"the dry-air mass flow is zero",
+        MOISTAIR_INVALID_CHANNEL => c"the limits of a channel are not in order, or its unit is of another kind",
+        MOISTAIR_OVERFLOW => c"a sum would not be finite",
         MOISTAIR_INFEASIBLE => c"the process cannot reach what was asked",
         MOISTAIR_NO_VALUE_DRY_AIR => c"no value: there is no water vapor",
         MOISTAIR_NO_VALUE_ABOVE_BOILING => c"no value: the saturation pressure exceeds the total pressure",

@@ -7,7 +7,9 @@ use std::path::{Path, PathBuf};
 use std::process::Command;
 use std::{env, fs};
 
-use moistair_core::Quantity;
+use moistair_core::account::{Added, Rule};
+use moistair_core::signal::{Kind, Quality, Reason, Unit};
+use moistair_core::{Error, Quantity};
 
 fn here() -> &'static Path {
     Path::new(env!("CARGO_MANIFEST_DIR"))
@@ -49,7 +51,22 @@ fn rendered() -> String {
     config.header = Some(preamble());
     config.after_includes = Some(macros());
     let mut builder = cbindgen::Builder::new().with_config(config);
-    for file in ["version", "status", "quantity", "state", "columns", "process"] {
+    for file in [
+        "version",
+        "status",
+        "quantity",
+        "state",
+        "columns",
+        "process/stream",
+        "process/sensible",
+        "process/coil",
+        "process/reheat",
+        "process/humidify",
+        "process/mixing",
+        "process/tower",
+        "signal",
+        "account",
+    ] {
         builder = builder.with_src(here().join(format!("src/{file}.rs")));
     }
     let mut bytes = Vec::new();
@@ -70,20 +87,57 @@ fn committed_header_is_up_to_date() {
     );
 }
 
+fn upper_snake(variant: &str) -> String {
+    let mut name = String::new();
+    for c in variant.chars() {
+        if c.is_uppercase() && !name.is_empty() {
+            name.push('_');
+        }
+        name.push(c.to_ascii_uppercase());
+    }
+    name
+}
+
+fn assert_defined(header: &str, name: &str, code: i32) {
+    let line = format!("#define MOISTAIR_{name} {code}\n");
+    assert!(header.contains(&line), "{line}");
+}
+
 #[test]
-fn every_quantity_has_its_selector() {
+fn every_code_of_the_core_has_its_constant() {
     let header = committed();
     for quantity in Quantity::ALL {
         let name = quantity.name().to_uppercase().replace([' ', '-'], "_");
-        let line = format!("#define MOISTAIR_{name} {}\n", quantity.code());
-        assert!(header.contains(&line), "{line}");
+        assert_defined(&header, &name, quantity.code());
     }
+    macro_rules! enumeration {
+        ($($type:ty: $prefix:literal),*) => {$(
+            for one in <$type>::ALL {
+                assert_defined(&header, &format!("{}_{}", $prefix, upper_snake(&format!("{one:?}"))), one.code());
+            }
+        )*};
+    }
+    enumeration!(Kind: "KIND", Unit: "UNIT", Quality: "QUALITY", Reason: "REASON", Rule: "RULE", Added: "ADDED");
+}
+
+/// Every status of the header has a text, and so has every error of the core.
+#[test]
+fn every_status_has_a_text() {
+    let header = committed();
+    let codes = header.lines().filter_map(|line| line.strip_prefix("#define MOISTAIR_")?.split_once(' '));
+    let codes: Vec<i32> = codes.filter_map(|(_, value)| value.parse().ok()).filter(|code| *code >= 100).collect();
+    assert!(codes.len() > 15);
+    let error = Error::Infeasible { quantity: Quantity::DewPoint, value: 0.0, min: 0.0, max: 0.0 };
+    for code in codes.into_iter().chain([error.code(), 0]) {
+        assert!(moistair::text(code).is_some(), "{code}");
+    }
+    assert!(moistair::text(1).is_none());
 }
 
 /// Names of the functions that the header declares.
 fn declared() -> BTreeSet<String> {
     let header = committed();
-    let code = header.split("*/").filter_map(|part| part.split("/*").next());
+    let code = header.lines().filter(|line| !line.starts_with("//") && !line.starts_with(" *"));
     let words = code.flat_map(|part| part.split(|c: char| !c.is_alphanumeric() && c != '_' && c != '('));
     words
         .filter(|word| word.starts_with("moistair_"))

@@ -1,0 +1,168 @@
+//! Cooling coils.
+
+use moistair_core::columns::NAN;
+use moistair_core::process::coil::{self, CoilRegime, CondensateTemperature, Cooling};
+
+use super::stream::{moistair_exchange, moistair_stream};
+use super::{celsius, finite, ratio};
+use crate::memory::{Answer, answer, read};
+use crate::state::moistair_state;
+use crate::status::{Failure, moistair_error};
+
+/// Condensate leaves at the temperature of the leaving air.
+pub const MOISTAIR_CONDENSATE_AT_LEAVING_AIR: i32 = 0;
+/// Condensate leaves at the apparatus dew point (moistair_coil_by_bypass_factor only).
+pub const MOISTAIR_CONDENSATE_AT_APPARATUS: i32 = 1;
+/// Condensate leaves at a given temperature.
+pub const MOISTAIR_CONDENSATE_AT_GIVEN: i32 = 2;
+
+/// No water condensed.
+pub const MOISTAIR_COIL_DRY: i32 = 0;
+/// Water condensed as liquid.
+pub const MOISTAIR_COIL_WET: i32 = 1;
+/// The coil is cold enough for frost.
+pub const MOISTAIR_COIL_FROST: i32 = 2;
+
+/// What a cooling coil did.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_cooling {
+    /// The air that leaves.
+    pub leaving: moistair_stream,
+    /// Heat and water into the air, both negative for a wet coil.
+    pub exchange: moistair_exchange,
+    /// Heat taken from the air, positive [W].
+    pub cooling_load: f64,
+    /// Sensible part of the load [W].
+    pub sensible: f64,
+    /// Latent part of the load [W].
+    pub latent: f64,
+    /// Condensate, positive [kg/s].
+    pub condensate: f64,
+    /// Sensible part over the load [1]; NaN without a load.
+    pub sensible_heat_ratio: f64,
+    /// MOISTAIR_COIL_DRY, MOISTAIR_COIL_WET or MOISTAIR_COIL_FROST.
+    pub regime: i32,
+    /// 0.
+    pub reserved: i32,
+}
+
+impl From<Cooling> for moistair_cooling {
+    fn from(done: Cooling) -> Self {
+        Self {
+            leaving: done.leaving.into(),
+            exchange: done.exchange.into(),
+            cooling_load: done.cooling_load.watts(),
+            sensible: done.sensible.watts(),
+            latent: done.latent.watts(),
+            condensate: done.condensate.kilograms_per_second(),
+            sensible_heat_ratio: done.sensible_heat_ratio().unwrap_or(NAN),
+            regime: done.regime as i32,
+            reserved: 0,
+        }
+    }
+}
+
+impl Answer for moistair_cooling {
+    fn is_finite(&self) -> bool {
+        let parts = [self.cooling_load, self.sensible, self.latent, self.condensate];
+        self.leaving.is_finite() && self.exchange.is_finite() && finite(parts)
+    }
+}
+
+pub(super) fn condensate(selector: i32, temperature: f64) -> Result<CondensateTemperature, Failure> {
+    match selector {
+        MOISTAIR_CONDENSATE_AT_LEAVING_AIR => Ok(CondensateTemperature::LeavingAir),
+        MOISTAIR_CONDENSATE_AT_APPARATUS => Ok(CondensateTemperature::Apparatus),
+        MOISTAIR_CONDENSATE_AT_GIVEN => Ok(CondensateTemperature::Given(celsius(temperature))),
+        _ => Err(Failure::UnknownSelector(selector)),
+    }
+}
+
+/// A cooling coil that leaves a given state.
+///
+/// entering: the stream that enters; leaving: the state that leaves; condensate: where the condensate temperature comes from,
+/// MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only; done: output; error: may
+/// be null.
+/// Returns 0, 1xx, 2xx, 301 (the leaving air is warmer or moister).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_coil_to_state(
+    entering: *const moistair_stream,
+    leaving: *const moistair_state,
+    condensate: i32,
+    condensate_temperature: f64,
+    done: *mut moistair_cooling,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        let condensate = self::condensate(condensate, condensate_temperature)?;
+        // SAFETY: the caller's pointers.
+        Ok(coil::to_state(&unsafe { read(entering) }?.to_core()?, &unsafe { read(leaving) }?.to_core()?, condensate)?
+            .into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(done, error, call) }
+}
+
+/// A cooling coil known by its apparatus dew point and bypass factor.
+///
+/// entering: the stream that enters; apparatus_dew_point: [°C], -40 to 150; bypass_factor: [1], 0 to 1; condensate: where the condensate
+/// temperature comes from, MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only;
+/// done: output; error: may be null.
+/// Returns 0, 1xx, 2xx, 301 (the apparatus is warmer than the air).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_coil_by_bypass_factor(
+    entering: *const moistair_stream,
+    apparatus_dew_point: f64,
+    bypass_factor: f64,
+    condensate: i32,
+    condensate_temperature: f64,
+    done: *mut moistair_cooling,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        // SAFETY: the caller's pointers.
+        let (entering, condensate) =
+            (unsafe { read(entering) }?.to_core()?, self::condensate(condensate, condensate_temperature)?);
+        Ok(coil::by_bypass_factor(&entering, celsius(apparatus_dew_point), bypass_factor, condensate)?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(done, error, call) }
+}
+
+/// The coil between two measured states; differences of humidity ratio within a dead band count as noise of the sensors.
+///
+/// entering: the stream that enters; leaving: the state that leaves; condensate: where the condensate temperature comes from,
+/// MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only; dead_band: [kg/kg], 0 to
+/// 10; done: output; error: may be null.
+/// Returns 0, 1xx, 2xx.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_coil_between(
+    entering: *const moistair_stream,
+    leaving: *const moistair_state,
+    condensate: i32,
+    condensate_temperature: f64,
+    dead_band: f64,
+    done: *mut moistair_cooling,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        let condensate = self::condensate(condensate, condensate_temperature)?;
+        // SAFETY: the caller's pointers.
+        Ok(coil::between(
+            &unsafe { read(entering) }?.to_core()?,
+            &unsafe { read(leaving) }?.to_core()?,
+            condensate,
+            ratio(dead_band),
+        )?
+        .into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(done, error, call) }
+}
+
+const _: () = {
+    assert!(size_of::<moistair_cooling>() == 184 && core::mem::offset_of!(moistair_cooling, regime) == 176);
+    assert!(CoilRegime::Dry as i32 == MOISTAIR_COIL_DRY && CoilRegime::Frost as i32 == MOISTAIR_COIL_FROST);
+    assert!(CoilRegime::Wet as i32 == MOISTAIR_COIL_WET);
+};

@@ -1,0 +1,42 @@
+//! What air-handling plant does to moist air.
+//!
+//! Results are estimates for engineering, not a safety function. Wet surfaces grow mould, water systems spread Legionella, coils freeze, steam
+//! burns: local codes and licensed practice govern.
+
+pub mod coil;
+pub mod humidify;
+pub mod mixing;
+pub mod reheat;
+pub mod sensible;
+pub mod stream;
+pub mod tower;
+
+pub use coil::*;
+pub use humidify::*;
+pub use mixing::*;
+pub use reheat::*;
+pub use sensible::*;
+pub use stream::*;
+pub use tower::*;
+
+use moistair_core::{HumidityRatio, MassFlow, SpecificEnthalpy, Temperature};
+
+fn finite<const N: usize>(numbers: [f64; N]) -> bool {
+    numbers.iter().all(|number| number.is_finite())
+}
+
+fn celsius(value: f64) -> Temperature {
+    Temperature::from_celsius(value)
+}
+
+fn mass_flow(value: f64) -> MassFlow {
+    MassFlow::from_kilograms_per_second(value)
+}
+
+fn ratio(value: f64) -> HumidityRatio {
+    HumidityRatio::from_kilograms_per_kilogram(value)
+}
+
+fn enthalpy(value: f64) -> SpecificEnthalpy {
+    SpecificEnthalpy::from_joules_per_kilogram(value)
+}

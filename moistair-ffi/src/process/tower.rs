@@ -1,0 +1,189 @@
+//! Wet cooling towers.
+
+use moistair_core::columns::NAN;
+use moistair_core::process::tower::{self, TowerBalance, TowerWater, WaterTreatment, WaterUse};
+
+use super::stream::{moistair_exchange, moistair_stream};
+use super::{celsius, finite, mass_flow};
+use crate::memory::{Answer, answer, read};
+use crate::state::moistair_state;
+use crate::status::moistair_error;
+
+/// The water that a tower cools.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_tower_water {
+    /// Flow that enters hot [kg/s].
+    pub flow: f64,
+    /// Temperature of the hot water [°C], 0 to 200.
+    pub hot: f64,
+    /// Temperature of the cold water [°C], 0 to 200.
+    pub cold: f64,
+}
+
+/// How a tower loses and renews water besides evaporation.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_water_treatment {
+    /// Drift over the circulating flow [1], 0 to 0.05.
+    pub drift_fraction: f64,
+    /// Concentration of the circulating water over that of the make-up [1], above 1.
+    pub cycles_of_concentration: f64,
+}
+
+/// Evaporation, drift, blowdown and what makes up for them, all positive.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_water_use {
+    /// Evaporation [kg/s].
+    pub evaporation: f64,
+    /// Drift [kg/s].
+    pub drift: f64,
+    /// Blowdown [kg/s].
+    pub blowdown: f64,
+    /// Make-up [kg/s].
+    pub make_up: f64,
+    /// 1 if drift alone keeps the concentration below the one wanted, so that there is no blowdown; else 0.
+    pub limited_by_drift: i32,
+    /// 0.
+    pub reserved: i32,
+}
+
+/// The overall balance of a cooling tower.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_tower_balance {
+    /// The air that leaves.
+    pub leaving: moistair_stream,
+    /// Heat and water into the air.
+    pub exchange: moistair_exchange,
+    /// Water use.
+    pub water: moistair_water_use,
+    /// Heat that the water gives up, positive [W].
+    pub heat_rejected: f64,
+    /// Hot less cold water temperature [K].
+    pub range: f64,
+    /// Cold water over the wet bulb of the entering air [K].
+    pub approach: f64,
+    /// Range over range and approach [1]; NaN without either.
+    pub effectiveness: f64,
+}
+
+impl From<WaterUse> for moistair_water_use {
+    fn from(water: WaterUse) -> Self {
+        Self {
+            evaporation: water.evaporation.kilograms_per_second(),
+            drift: water.drift.kilograms_per_second(),
+            blowdown: water.blowdown.kilograms_per_second(),
+            make_up: water.make_up.kilograms_per_second(),
+            limited_by_drift: water.limited_by_drift.into(),
+            reserved: 0,
+        }
+    }
+}
+
+impl From<TowerBalance> for moistair_tower_balance {
+    fn from(balance: TowerBalance) -> Self {
+        Self {
+            leaving: balance.leaving.into(),
+            exchange: balance.exchange.into(),
+            water: balance.water.into(),
+            heat_rejected: balance.heat_rejected.watts(),
+            range: balance.range.kelvins(),
+            approach: balance.approach.kelvins(),
+            effectiveness: balance.effectiveness().unwrap_or(NAN),
+        }
+    }
+}
+
+impl moistair_tower_water {
+    fn to_core(self) -> TowerWater {
+        TowerWater { flow: mass_flow(self.flow), hot: celsius(self.hot), cold: celsius(self.cold) }
+    }
+}
+
+impl moistair_water_treatment {
+    fn to_core(self) -> WaterTreatment {
+        let Self { drift_fraction, cycles_of_concentration } = self;
+        WaterTreatment { drift_fraction, cycles_of_concentration }
+    }
+}
+
+impl Answer for moistair_water_use {
+    fn is_finite(&self) -> bool {
+        finite([self.evaporation, self.drift, self.blowdown, self.make_up])
+    }
+}
+
+impl Answer for moistair_tower_balance {
+    fn is_finite(&self) -> bool {
+        let own = [self.heat_rejected, self.range, self.approach];
+        self.leaving.is_finite() && self.exchange.is_finite() && self.water.is_finite() && finite(own)
+    }
+}
+
+/// Blowdown and make-up for an evaporation; also for humidifiers with bleed.
+///
+/// evaporation: [kg/s], 0 to 1e6; circulating: circulating water [kg/s], 0 to 1e6; treatment: drift and concentration; water: output;
+/// error: may be null.
+/// Returns 0, 1xx, 2xx, 301 (one cycle of concentration).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_tower_water_use(
+    evaporation: f64,
+    circulating: f64,
+    treatment: moistair_water_treatment,
+    water: *mut moistair_water_use,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || Ok(tower::water_use(mass_flow(evaporation), mass_flow(circulating), treatment.to_core())?.into());
+    // SAFETY: the caller's pointers.
+    unsafe { answer(water, error, call) }
+}
+
+/// Balance of a tower with a known air flow; the air is taken to leave saturated.
+///
+/// entering: the air that enters; water: the water that is cooled; treatment: drift and concentration; balance: output; error: may be null.
+/// Returns 0, 1xx, 2xx, 207, 301.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_tower_with_air_flow(
+    entering: *const moistair_stream,
+    water: moistair_tower_water,
+    treatment: moistair_water_treatment,
+    balance: *mut moistair_tower_balance,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        // SAFETY: the caller's pointers.
+        Ok(tower::with_air_flow(&unsafe { read(entering) }?.to_core()?, water.to_core(), treatment.to_core())?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(balance, error, call) }
+}
+
+/// Balance of a tower with a known leaving state: the dry-air flow that it takes.
+///
+/// entering: the state that enters; leaving: the state that leaves; water: the water that is cooled; treatment: drift and concentration;
+/// balance: output; error: may be null.
+/// Returns 0, 1xx, 2xx, 301.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_tower_with_leaving_air(
+    entering: *const moistair_state,
+    leaving: *const moistair_state,
+    water: moistair_tower_water,
+    treatment: moistair_water_treatment,
+    balance: *mut moistair_tower_balance,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        // SAFETY: the caller's pointers.
+        let (entering, leaving) = (unsafe { read(entering) }?.to_core()?, unsafe { read(leaving) }?.to_core()?);
+        Ok(tower::with_leaving_air(&entering, &leaving, water.to_core(), treatment.to_core())?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(balance, error, call) }
+}
+
+const _: () = {
+    assert!(size_of::<moistair_tower_water>() == 24 && size_of::<moistair_water_treatment>() == 16);
+    assert!(size_of::<moistair_water_use>() == 40 && size_of::<moistair_tower_balance>() == 208);
+};
