@@ -156,8 +156,12 @@ pub(crate) fn condensed_enthalpy<S: Scalar>(formulation: Formulation, celsius: S
 
 /// Dry bulb, °C, of air with a given enthalpy, pressure and humidity ratio.
 pub(crate) fn temperature_of_enthalpy<M: Mixture<S>, S: Scalar>(enthalpy: S, pressure: S, humidity_ratio: S) -> S {
+    temperature_after::<M, S, TEMPERATURE_STEPS>(enthalpy, pressure, humidity_ratio)
+}
+
+fn temperature_after<M: Mixture<S>, S: Scalar, const STEPS: usize>(enthalpy: S, pressure: S, humidity_ratio: S) -> S {
     let mut celsius = (enthalpy - humidity_ratio * k(2_501_000.0)) / (humidity_ratio * k(1_860.0) + k(1_006.0));
-    for _ in 0..TEMPERATURE_STEPS {
+    for _ in 0..STEPS {
         // An enthalpy far outside leads far outside the equations; the caller checks the range.
         celsius = celsius.at_least(k(-120.0)).at_most(k(200.0));
         let gas = M::at(celsius).gas(pressure, humidity_ratio);
@@ -291,4 +295,33 @@ pub fn liquid_water_enthalpy<S: Scalar>(
     let pressure = checked_pressure(basis.pressure())?;
     let enthalpy = condensed_enthalpy(basis.formulation(), celsius, pressure, Surface::Liquid);
     Ok(SpecificEnthalpy::from_joules_per_kilogram(enthalpy))
+}
+
+#[cfg(test)]
+mod steps {
+    use std::println;
+
+    use super::*;
+    use crate::mixture::{IdealGas, RealGas};
+    use crate::state::property::tests::states;
+
+    fn left_over<const STEPS: usize>() -> f64 {
+        fn of<M: Mixture<f64>, const STEPS: usize>() -> f64 {
+            let error = |(celsius, pressure, w, gas): (f64, f64, f64, crate::mixture::Gas<f64>)| {
+                (temperature_after::<M, f64, STEPS>(gas.enthalpy, pressure, w) - celsius).abs()
+            };
+            states::<M>().map(error).fold(0.0, |most, error| if error <= most { most } else { error })
+        }
+        let (real, ideal) = (of::<RealGas<f64>, STEPS>(), of::<IdealGas<f64>, STEPS>());
+        println!("temperature of an enthalpy after {STEPS} steps: real gas {real:e} K, ideal gas {ideal:e} K");
+        real.max(ideal)
+    }
+
+    /// The constant passes the bound and one step fewer does not.
+    #[test]
+    fn temperature_steps_are_enough_and_none_is_idle() {
+        const BOUND: f64 = 1e-11;
+        assert!(left_over::<TEMPERATURE_STEPS>() <= BOUND);
+        assert!(left_over::<{ TEMPERATURE_STEPS - 1 }>() > BOUND, "one step fewer does as well: the constant is stale");
+    }
 }

@@ -209,6 +209,16 @@ pub(super) fn humidity_ratio<M: Mixture<R>, R: Real>(
     value: R,
     limit: R,
 ) -> Option<R> {
+    humidity_ratio_after::<RATIO_STEPS, M, R>(mixture, pressure, quantity, value, limit)
+}
+
+fn humidity_ratio_after<const STEPS: usize, M: Mixture<R>, R: Real>(
+    mixture: &M,
+    pressure: R,
+    quantity: Quantity,
+    value: R,
+    limit: R,
+) -> Option<R> {
     let one = k::<R>(1.0);
     let of_saturation = |surface| mixture.saturation(pressure, surface).mole_fraction;
     let at_temperature = |surface| M::at(value).saturation(pressure, surface).mole_fraction;
@@ -218,7 +228,7 @@ pub(super) fn humidity_ratio<M: Mixture<R>, R: Real>(
         let saturated = wet.gas(pressure, saturation.humidity_ratio);
         let condensed = saturation.condensed_enthalpy;
         let target = saturated.enthalpy - saturation.humidity_ratio * condensed;
-        Some(search_ratio(mixture, pressure, limit, move |w, gas| {
+        Some(search_ratio_after::<STEPS, M, R>(mixture, pressure, limit, move |w, gas| {
             (gas.enthalpy - w * condensed - target, gas.enthalpy_of_water - condensed)
         }))
     };
@@ -235,16 +245,16 @@ pub(super) fn humidity_ratio<M: Mixture<R>, R: Real>(
         Quantity::WetBulb => wet_bulb(Surface::Stable),
         Quantity::WetBulbOverLiquid => wet_bulb(Surface::Liquid),
         Quantity::WetBulbOverIce => wet_bulb(Surface::Ice),
-        Quantity::SpecificEnthalpy => {
-            Some(search_ratio(mixture, pressure, limit, |_, gas| (gas.enthalpy - value, gas.enthalpy_of_water)))
-        }
-        Quantity::SpecificVolume => {
-            Some(search_ratio(mixture, pressure, limit, |_, gas| (gas.volume - value, gas.volume_of_water)))
-        }
-        Quantity::Density => Some(search_ratio(mixture, pressure, limit, |w, gas| {
+        Quantity::SpecificEnthalpy => Some(search_ratio_after::<STEPS, M, R>(mixture, pressure, limit, |_, gas| {
+            (gas.enthalpy - value, gas.enthalpy_of_water)
+        })),
+        Quantity::SpecificVolume => Some(search_ratio_after::<STEPS, M, R>(mixture, pressure, limit, |_, gas| {
+            (gas.volume - value, gas.volume_of_water)
+        })),
+        Quantity::Density => Some(search_ratio_after::<STEPS, M, R>(mixture, pressure, limit, |w, gas| {
             (value * gas.volume - one - w, value * gas.volume_of_water - one)
         })),
-        Quantity::AbsoluteHumidity => Some(search_ratio(mixture, pressure, limit, |w, gas| {
+        Quantity::AbsoluteHumidity => Some(search_ratio_after::<STEPS, M, R>(mixture, pressure, limit, |w, gas| {
             (value * gas.volume - w, value * gas.volume_of_water - one)
         })),
         _ => None,
@@ -258,6 +268,15 @@ pub(crate) fn search_ratio<M: Mixture<R>, R: Real>(
     limit: R,
     f: impl Fn(R, &Gas<R>) -> (R, R),
 ) -> R {
+    search_ratio_after::<RATIO_STEPS, M, R>(mixture, pressure, limit, f)
+}
+
+fn search_ratio_after<const STEPS: usize, M: Mixture<R>, R: Real>(
+    mixture: &M,
+    pressure: R,
+    limit: R,
+    f: impl Fn(R, &Gas<R>) -> (R, R),
+) -> R {
     let at = |w| f(w, &mixture.gas(pressure, w));
     let margin = limit * k(0.01);
     let near = |w: R| w.at_least(-margin).at_most(limit + margin);
@@ -266,9 +285,12 @@ pub(crate) fn search_ratio<M: Mixture<R>, R: Real>(
     let chord = (saturated - dry.0) / limit;
     let slope = R::select(limit.lt(k(1e-6)), dry.1, chord);
     let mut w = near(-(dry.0 / slope));
-    for _ in 0..RATIO_STEPS {
+    for _ in 0..STEPS {
         let (value, slope) = at(w);
         w = near(w - value / slope);
     }
     w
 }
+
+#[cfg(test)]
+mod tests;

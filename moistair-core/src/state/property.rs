@@ -11,8 +11,8 @@ use crate::saturation::{Magnus, Surface};
 use super::MoistAir;
 
 /// Newton steps, constant so that the work is; the tests of this module show each count to be enough and none to be idle.
-pub(crate) const DEW_POINT_STEPS: usize = 4;
-pub(super) const WET_BULB_STEPS: usize = 5;
+pub(crate) const DEW_POINT_STEPS: usize = 3;
+pub(super) const WET_BULB_STEPS: usize = 3;
 const WET_BULB_HALVINGS: usize = 8;
 
 /// Temperature, °C, at which a water mole fraction saturates over a surface.
@@ -44,7 +44,17 @@ pub(super) fn wet_bulb<M: Mixture<R>, R: Real, const STEPS: usize>(
     enthalpy: R,
     surface: Surface,
 ) -> R {
-    let mut x = wet_bulb_start(celsius, pressure, humidity_ratio, surface);
+    wet_bulb_after::<M, R, WET_BULB_HALVINGS, STEPS>(celsius, pressure, humidity_ratio, enthalpy, surface)
+}
+
+fn wet_bulb_after<M: Mixture<R>, R: Real, const HALVINGS: usize, const STEPS: usize>(
+    celsius: R,
+    pressure: R,
+    humidity_ratio: R,
+    enthalpy: R,
+    surface: Surface,
+) -> R {
+    let mut x = wet_bulb_start::<R, HALVINGS>(celsius, pressure, humidity_ratio, surface);
     for _ in 0..STEPS {
         let (deficit, slope) = saturation_deficit::<M, R>(x, pressure, humidity_ratio, enthalpy, surface);
         x = x - deficit / slope;
@@ -52,7 +62,8 @@ pub(super) fn wet_bulb<M: Mixture<R>, R: Real, const STEPS: usize>(
     x
 }
 
-/// h + (W_s − W) h_c − h_s at a trial temperature x, and its slope in x: falling and concave, positive left of the wet bulb.
+/// h + (W_s − W) h_c − h_s at a trial temperature x, positive left of the wet bulb, and the slope for Newton: that of the
+/// deficit times (1 − x_ws), over (1 − x_ws). The deficit has a pole where water boils; the product passes it smoothly.
 pub(super) fn saturation_deficit<M: Mixture<R>, R: Real>(
     x: R,
     pressure: R,
@@ -65,12 +76,12 @@ pub(super) fn saturation_deficit<M: Mixture<R>, R: Real>(
     let saturated = mixture.gas(pressure, saturation.humidity_ratio);
     let missing = saturation.humidity_ratio - humidity_ratio;
     let ratio_slope = saturation.humidity_ratio * saturation.log_slope;
-    (
-        enthalpy + missing * saturation.condensed_enthalpy - saturated.enthalpy,
-        ratio_slope * (saturation.condensed_enthalpy - saturated.enthalpy_of_water)
-            + missing * k(condensed_heat_capacity(surface))
-            - saturated.specific_heat,
-    )
+    let deficit = enthalpy + missing * saturation.condensed_enthalpy - saturated.enthalpy;
+    let slope = ratio_slope * (saturation.condensed_enthalpy - saturated.enthalpy_of_water)
+        + missing * k(condensed_heat_capacity(surface))
+        - saturated.specific_heat;
+    // d ln(1 − x_ws)/dT = −x_ws d ln W_s/dT
+    (deficit, slope - deficit * saturation.mole_fraction * saturation.log_slope)
 }
 
 /// Near enough for a slope, J/(kg K).
@@ -81,15 +92,15 @@ pub(super) const fn condensed_heat_capacity(surface: Surface) -> f64 {
     }
 }
 
-/// A wet bulb within 1.5 K on the warm side, by halving the interval of possible ones under rounded perfect-gas constants.
-fn wet_bulb_start<R: Real>(celsius: R, pressure: R, humidity_ratio: R, surface: Surface) -> R {
+/// A wet bulb within 2.2 K (the worst in hot steam), by halving the interval of possible ones under rounded perfect-gas constants.
+fn wet_bulb_start<R: Real, const HALVINGS: usize>(celsius: R, pressure: R, humidity_ratio: R, surface: Surface) -> R {
     let curve = Magnus::over(surface);
     let (coldest, latent_at_zero, heat_capacity) = match surface {
         Surface::Ice => (-105.0, 2_834_000.0, 2_100.0),
         Surface::Liquid | Surface::Stable => (-45.0, 2_501_000.0, 4_200.0),
     };
     let (mut cold, mut warm) = (k::<R>(coldest), celsius + k(2.0));
-    for _ in 0..WET_BULB_HALVINGS {
+    for _ in 0..HALVINGS {
         let x = (cold + warm) * k(0.5);
         let saturated = curve.pressure(x);
         let latent = k::<R>(latent_at_zero) + x * k(1_860.0 - heat_capacity);
@@ -206,9 +217,11 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
                 self.saturation(quantity, Surface::Stable)? * self.pressure
                     / self.mixture.pure_saturation_pressure(self.pressure, Surface::Stable)
             }
-            Quantity::WetBulb => {
-                self.within(quantity, stable_wet_bulb::<M, S>(self.celsius, self.pressure, w, self.gas.enthalpy))?
-            }
+            Quantity::WetBulb => self.within_surface(
+                quantity,
+                stable_wet_bulb::<M, S>(self.celsius, self.pressure, w, self.gas.enthalpy),
+                Surface::Stable,
+            )?,
             Quantity::WetBulbOverLiquid => self.wet_bulb_over(quantity, Surface::Liquid)?,
             Quantity::WetBulbOverIce => self.wet_bulb_over(quantity, Surface::Ice)?,
             Quantity::DewPoint => self.saturation_temperature(quantity, Surface::Liquid)?,
@@ -228,6 +241,15 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
     }
 
     fn wet_bulb_over(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
+        if surface == Surface::Ice {
+            // The solve means nothing where the wet bulb would be warmer than ice can be.
+            let melting = M::melting_temperature(self.pressure);
+            let (at_melting, slope) =
+                saturation_deficit::<M, S>(melting, self.pressure, self.humidity_ratio, self.gas.enthalpy, surface);
+            if rounding::<S>().lt(-(at_melting / slope)) {
+                return Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange });
+            }
+        }
         let value = wet_bulb::<M, S, WET_BULB_STEPS>(
             self.celsius,
             self.pressure,
@@ -247,23 +269,26 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
     }
 
     fn within_surface(&self, quantity: Quantity, value: S, surface: Surface) -> Result<S, Error> {
-        if surface == Surface::Ice && M::melting_temperature(self.pressure).lt(value) {
-            return Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange });
-        }
-        self.within(quantity, value)
-    }
-
-    /// The value, if it lies in the range of its quantity.
-    fn within(&self, quantity: Quantity, value: S) -> Result<S, Error> {
         let (min, max) = quantity.limits();
-        let wide = value.to_f64();
-        if min <= wide && wide <= max {
-            Ok(value)
-        } else if wide > max {
-            Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange })
-        } else {
-            Err(Error::NoValue { quantity, reason: NoValue::BelowSurfaceRange })
-        }
+        let max = k::<S>(max);
+        let max = if surface == Surface::Ice { M::melting_temperature(self.pressure).at_most(max) } else { max };
+        within(quantity, value, k(min), max)
+    }
+}
+
+/// What a solved temperature may be off, K.
+fn rounding<S: Scalar>() -> S {
+    k::<S>(1e-9).at_least(S::epsilon() * k(512.0))
+}
+
+/// A temperature, if it lies between two; rounding that carried it past an end is taken back.
+fn within<S: Scalar>(quantity: Quantity, value: S, min: S, max: S) -> Result<S, Error> {
+    if (min - rounding()).le(value) && value.le(max + rounding()) {
+        Ok(value.at_least(min).at_most(max))
+    } else if max.lt(value) {
+        Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange })
+    } else {
+        Err(Error::NoValue { quantity, reason: NoValue::BelowSurfaceRange })
     }
 }
 
@@ -316,3 +341,6 @@ impl<S: Scalar> MoistAir<S> {
         self.value(Quantity::EnhancementFactor)
     }
 }
+
+#[cfg(test)]
+pub(super) mod tests;

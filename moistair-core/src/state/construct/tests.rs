@@ -1,0 +1,150 @@
+//! How many steps the search for a humidity ratio needs; scalar and lanes alike.
+
+use std::println;
+use std::vec::Vec;
+
+use super::*;
+use crate::checks::Random;
+use crate::mixture::{IdealGas, RealGas};
+use crate::real::Lanes;
+use crate::state::property::tests::states;
+use crate::state::property::{DEW_POINT_STEPS, WET_BULB_STEPS, dew_point, stable_wet_bulb, wet_bulb};
+
+/// The quantities whose humidity ratio is searched for.
+const SEARCHED: [Quantity; 7] = [
+    Quantity::SpecificEnthalpy,
+    Quantity::SpecificVolume,
+    Quantity::Density,
+    Quantity::AbsoluteHumidity,
+    Quantity::WetBulb,
+    Quantity::WetBulbOverLiquid,
+    Quantity::WetBulbOverIce,
+];
+
+/// Error of the humidity ratio over W + 1e-4, for every searched quantity at every state that has it.
+fn left_over<const STEPS: usize>() -> f64 {
+    fn of<M: Mixture<f64>, const STEPS: usize>(quantity: Quantity) -> f64 {
+        let mut most = 0.0;
+        for (celsius, pressure, w, gas) in states::<M>() {
+            let mixture = M::at(celsius);
+            let limit = greatest_humidity_ratio(&mixture, celsius, pressure);
+            let Ok(value) = (View { mixture, celsius, pressure, humidity_ratio: w, gas }).value(quantity) else {
+                continue;
+            };
+            let exact = humidity_ratio_after::<12, M, f64>(&mixture, pressure, quantity, value, limit).unwrap();
+            let solved = humidity_ratio_after::<STEPS, M, f64>(&mixture, pressure, quantity, value, limit).unwrap();
+            let error = (solved - exact).abs() / (exact.abs() + 1e-4);
+            most = if error <= most { most } else { error };
+        }
+        most
+    }
+    SEARCHED.iter().fold(0.0, |most, &quantity| {
+        let (real, ideal) = (of::<RealGas<f64>, STEPS>(quantity), of::<IdealGas<f64>, STEPS>(quantity));
+        println!("W from {quantity:?} after {STEPS} steps: real gas {real:e}, ideal gas {ideal:e}");
+        most.max(real).max(ideal)
+    })
+}
+
+/// The constant passes the bound and one step fewer does not. The bound leaves room for what the density's last bit
+/// is worth in W.
+#[test]
+fn ratio_steps_are_enough_and_none_is_idle() {
+    const BOUND: f64 = 1e-10;
+    assert!(left_over::<RATIO_STEPS>() <= BOUND);
+    assert!(left_over::<{ RATIO_STEPS - 1 }>() > BOUND, "one step fewer does as well: the constant is stale");
+}
+
+/// Every kernel at one point: what columns compute in lanes and states compute alone.
+fn kernels<M: Mixture<R>, R: Real>(celsius: R, pressure: R, share: R) -> Vec<R> {
+    let mixture = M::at(celsius);
+    let liquid = mixture.saturation(pressure, Surface::Liquid);
+    let declared = k::<R>(Quantity::HumidityRatio.limits().1);
+    let limit = R::select(saturates(liquid.mole_fraction), liquid.humidity_ratio, declared).at_most(declared);
+    let w = share * limit;
+    let gas = mixture.gas(pressure, w);
+    let mut all = std::vec![
+        w,
+        gas.volume,
+        gas.enthalpy,
+        gas.specific_heat,
+        gas.compressibility,
+        gas.volume_of_water,
+        gas.enthalpy_of_water,
+        M::melting_temperature(pressure),
+        stable_wet_bulb::<M, R>(celsius, pressure, w, gas.enthalpy),
+    ];
+    for surface in [Surface::Stable, Surface::Liquid, Surface::Ice] {
+        let saturation = mixture.saturation(pressure, surface);
+        all.extend([
+            saturation.mole_fraction,
+            saturation.humidity_ratio,
+            saturation.log_slope,
+            saturation.condensed_enthalpy,
+            mixture.pure_saturation_pressure(pressure, surface),
+            M::condensed_enthalpy(celsius, pressure, surface),
+            dew_point::<M, R, DEW_POINT_STEPS>(M::mole_fraction(w), pressure, surface),
+            wet_bulb::<M, R, WET_BULB_STEPS>(celsius, pressure, w, gas.enthalpy, surface),
+        ]);
+    }
+    let density = (w + k(1.0)) / gas.volume;
+    let trial = celsius - (k::<R>(1.0) - share) * k(20.0);
+    for (quantity, value) in [
+        (Quantity::HumidityRatio, w),
+        (Quantity::WaterMoleFraction, M::mole_fraction(w)),
+        (Quantity::VaporPressure, M::mole_fraction(w) * pressure),
+        (Quantity::SpecificHumidity, w / (w + k(1.0))),
+        (Quantity::RelativeHumidity, share),
+        (Quantity::RelativeHumidityOverLiquid, share),
+        (Quantity::DegreeOfSaturation, share),
+        (Quantity::SpecificEnthalpy, gas.enthalpy),
+        (Quantity::SpecificVolume, gas.volume),
+        (Quantity::Density, density),
+        (Quantity::AbsoluteHumidity, w / gas.volume),
+        (Quantity::WetBulb, trial),
+        (Quantity::WetBulbOverLiquid, trial),
+        (Quantity::WetBulbOverIce, trial),
+        (Quantity::DewPoint, trial),
+        (Quantity::FrostPoint, trial),
+    ] {
+        all.push(humidity_ratio::<M, R>(&mixture, pressure, quantity, value, limit).unwrap());
+    }
+    all
+}
+
+/// Scalar, 8 and 32 lanes give the same bits (a NaN is a NaN) in every kernel, at 1024 seeded points of the domain and a little
+/// beyond it on all sides.
+#[test]
+fn lanes_have_the_bits_of_scalars() {
+    fn lanes<M: Mixture<Lanes<f64, N>>, const N: usize>(points: &[(f64, f64, f64)]) -> Vec<Vec<f64>> {
+        let mut all = Vec::new();
+        for chunk in points.chunks_exact(N) {
+            let pack = |part: fn(&(f64, f64, f64)) -> f64| Lanes(core::array::from_fn(|i| part(&chunk[i])));
+            let values = kernels::<M, Lanes<f64, N>>(pack(|p| p.0), pack(|p| p.1), pack(|p| p.2));
+            all.extend((0..N).map(|i| values.iter().map(|value| value.0[i]).collect::<Vec<_>>()));
+        }
+        all
+    }
+    let mut random = Random(0x6d6f697374616972);
+    let points: Vec<_> = (0..1024)
+        .map(|_| (random.between(-90.0, 160.0), random.between(15e3, 1.2e6), random.between(-0.01, 1.02)))
+        .collect();
+    let mut compared = 0;
+    let mut compare = |name: &str, scalar: Vec<Vec<f64>>, others: [Vec<Vec<f64>>; 2]| {
+        for other in others {
+            assert_eq!(scalar.len(), other.len());
+            for (point, (a, b)) in points.iter().zip(scalar.iter().zip(&other)) {
+                for (i, (a, b)) in a.iter().zip(b).enumerate() {
+                    let same = a.to_bits() == b.to_bits() || (a.is_nan() && b.is_nan());
+                    assert!(same, "{name}, kernel {i} at {point:?}: {a:e} {b:e}");
+                    compared += 1;
+                }
+            }
+        }
+    };
+    let scalar: Vec<_> = points.iter().map(|&(t, p, s)| kernels::<RealGas<f64>, f64>(t, p, s)).collect();
+    compare("real gas", scalar, [lanes::<RealGas<_>, 8>(&points), lanes::<RealGas<_>, 32>(&points)]);
+    let scalar: Vec<_> = points.iter().map(|&(t, p, s)| kernels::<IdealGas<f64>, f64>(t, p, s)).collect();
+    compare("ideal gas", scalar, [lanes::<IdealGas<_>, 8>(&points), lanes::<IdealGas<_>, 32>(&points)]);
+    println!("{compared} values compared");
+    assert!(compared >= 4 * 1024 * 49);
+}
