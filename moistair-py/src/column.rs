@@ -1,6 +1,6 @@
 //! Numbers and arrays that come from Python, and arrays that go back.
 
-use moistair_core::columns::Column;
+use moistair_core::columns::{Column, NAN};
 use numpy::{Element, PyArray1, PyArrayMethods, PyReadonlyArray1};
 use pyo3::exceptions::{PyMemoryError, PyOverflowError};
 use pyo3::prelude::*;
@@ -81,4 +81,25 @@ pub fn blank<T: Copy>(rows: usize, value: T) -> PyResult<Vec<T>> {
 pub fn array<'py, T: Element>(py: Python<'py>, column: Vec<T>, shape: &[usize]) -> PyResult<Bound<'py, PyAny>> {
     let flat = PyArray1::from_vec(py, column);
     if shape.len() == 1 { Ok(flat.into_any()) } else { Ok(flat.reshape(shape.to_vec())?.into_any()) }
+}
+
+/// A function of one number on a number or on each of an array.
+pub fn map<'py>(
+    py: Python<'py>,
+    name: &str,
+    value: Bound<'py, PyAny>,
+    function: impl Fn(f64) -> f64 + Sync,
+) -> PyResult<Bound<'py, PyAny>> {
+    if let Some(number) = plain_number(&value) {
+        return Ok(PyFloat::new(py, function(number?)).into_any());
+    }
+    let arguments = Arguments::read(py, &[name], &[value])?;
+    let columns = arguments.columns()?;
+    let at = |row| columns.iter().find_map(|column| column.get(row)).unwrap_or(NAN);
+    if arguments.shape.is_empty() {
+        return Ok(PyFloat::new(py, function(at(0))).into_any());
+    }
+    let mut result = blank(arguments.rows, NAN)?;
+    py.detach(|| result.iter_mut().enumerate().for_each(|(row, place)| *place = function(at(row))));
+    array(py, result, &arguments.shape)
 }

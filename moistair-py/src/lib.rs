@@ -1,7 +1,12 @@
 //! The Python face: arguments in, results out, no formula.
 
+mod account;
 mod column;
 mod error;
+mod memory;
+mod owned;
+mod process;
+mod signal;
 mod state;
 
 use pyo3::prelude::*;
@@ -11,6 +16,16 @@ use pyo3::prelude::*;
 mod _core {
     use pyo3::prelude::*;
 
+    #[pymodule_export]
+    use crate::account::{
+        BooksTotal, Counts, Deviation, Period, Periods, Residuals, Sum, Total, restore_owned, restore_period,
+    };
+    #[pymodule_export]
+    use crate::process::run;
+    #[pymodule_export]
+    use crate::signal::{
+        Channel, ChannelState, Checked, CheckedColumns, code_table, from_core, restore_checked, to_core,
+    };
     #[pymodule_export]
     use crate::state::{MoistAir, pressure_at_elevation, quantity_table, restore_state};
 

@@ -4,7 +4,9 @@ use core::hash::{Hash, Hasher};
 use std::hash::DefaultHasher;
 
 use moistair_core::columns::{Column, NAN, StateColumns};
-use moistair_core::{Basis, Error, Formulation, Length, MoistAir as Air, Pressure, Quantity, Temperature};
+use moistair_core::{
+    Basis, Error, Formulation, HumidityRatio, Length, MoistAir as Air, Pressure, Quantity, Temperature,
+};
 use numpy::{PyArray1, PyArrayDyn, PyArrayMethods, PyReadwriteArrayDyn, PyUntypedArrayMethods};
 use pyo3::exceptions::{PyTypeError, PyValueError};
 use pyo3::prelude::*;
@@ -23,6 +25,9 @@ pub struct States {
     pub humidity_ratio: Vec<f64>,
     pub status: Vec<i32>,
     pub failed: usize,
+    /// Made by the constructor: a column call on the humidity ratio gives the same states again. What a process leaves may lie beyond
+    /// saturation by a rounding, and is restored row by row.
+    pub settled: bool,
 }
 
 pub enum Content {
@@ -503,6 +508,10 @@ impl From<Content> for MoistAir {
 }
 
 impl MoistAir {
+    pub fn content(&self) -> &Content {
+        &self.content
+    }
+
     fn value<'py>(&self, py: Python<'py>, quantity: Quantity) -> PyResult<Bound<'py, PyAny>> {
         match &self.content {
             Content::One(air) => {
@@ -566,7 +575,16 @@ impl States {
             )
         });
         let failed = report.map_err(internal)?.failed;
-        Ok(Self { formulation: inputs.formulation, shape, dry_bulb, pressure, humidity_ratio, status, failed })
+        Ok(Self {
+            formulation: inputs.formulation,
+            shape,
+            dry_bulb,
+            pressure,
+            humidity_ratio,
+            status,
+            failed,
+            settled: true,
+        })
     }
 
     fn inputs(&self) -> StateColumns<'_> {
@@ -580,8 +598,32 @@ impl States {
     }
 
     fn write(&self, py: Python<'_>, quantities: &[Quantity], outputs: &mut [&mut [f64]]) -> PyResult<()> {
-        let report = py.detach(|| self.inputs().compute(self.status.len(), quantities, outputs, None));
-        report.map(|_| ()).map_err(internal)
+        if self.settled {
+            let report = py.detach(|| self.inputs().compute(self.status.len(), quantities, outputs, None));
+            return report.map(|_| ()).map_err(internal);
+        }
+        py.detach(|| {
+            for row in 0..self.status.len() {
+                let mut places = outputs.iter_mut().map(|output| output.get_mut(row));
+                let mut put = |value| {
+                    if let Some(Some(place)) = places.next() {
+                        *place = value;
+                    }
+                };
+                match self.row(row) {
+                    Some(air) => air.values(quantities.iter().copied(), |_, value| put(value.unwrap_or(NAN))),
+                    None => quantities.iter().for_each(|_| put(NAN)),
+                }
+            }
+        });
+        Ok(())
+    }
+
+    /// The state of a row, if there is one.
+    pub fn row(&self, row: usize) -> Option<Air> {
+        let read = |column: &Vec<f64>| column.get(row).copied();
+        let (t, w, p) = (read(&self.dry_bulb)?, read(&self.humidity_ratio)?, read(&self.pressure)?);
+        restore(t, w, p, self.formulation).ok()
     }
 
     fn properties(&self, py: Python<'_>, quantities: &[Quantity]) -> PyResult<Vec<Vec<f64>>> {
@@ -670,6 +712,12 @@ fn only_one<'py>(given: [Option<Bound<'py, PyAny>>; 16]) -> PyResult<(Quantity, 
     })
 }
 
+/// A state from the numbers of one that was made before, bit for bit.
+pub fn restore(t: f64, w: f64, p: f64, formulation: Formulation) -> Result<Air, Error> {
+    let basis = Basis::new(Pressure::from_pascals(p), formulation);
+    Air::restore(Temperature::from_celsius(t), HumidityRatio::from_kilograms_per_kilogram(w), basis)
+}
+
 fn one(py: Python<'_>, t: f64, quantity: Quantity, x: f64, p: f64, formulation: Formulation) -> PyResult<MoistAir> {
     match air(t, quantity, x, p, formulation) {
         Ok(air) => Ok(Content::One(air).into()),
@@ -736,7 +784,8 @@ pub fn restore_state(
         Formulation::from_code(formulation).ok_or_else(|| PyValueError::new_err("no such formulation"))?;
     if shape.is_empty() {
         let (t, w, p) = (dry_bulb.extract()?, humidity_ratio.extract()?, pressure.extract()?);
-        return one(py, t, Quantity::HumidityRatio, w, p, formulation);
+        let air = restore(t, w, p, formulation).map_err(|error| exception(py, &error))?;
+        return Ok(Content::One(air).into());
     }
     let column = |value: Bound<'_, PyAny>| -> PyResult<Vec<f64>> { Ok(value.cast::<PyArray1<f64>>()?.to_vec()?) };
     let (dry_bulb, pressure, ratio) = (column(dry_bulb)?, column(pressure)?, column(humidity_ratio)?);
@@ -746,7 +795,17 @@ pub fn restore_state(
         return Err(PyValueError::new_err("columns of a state differ in length"));
     }
     let failed = status.iter().filter(|code| **code != 0).count();
-    Ok(Content::Many(States { formulation, shape, dry_bulb, pressure, humidity_ratio: ratio, status, failed }).into())
+    Ok(Content::Many(States {
+        formulation,
+        shape,
+        dry_bulb,
+        pressure,
+        humidity_ratio: ratio,
+        status,
+        failed,
+        settled: false,
+    })
+    .into())
 }
 
 /// Pressure of the standard atmosphere (ISO 2533:1975) at an elevation.
@@ -797,19 +856,13 @@ pub fn pressure_at_elevation<'py>(
     if let Some(meters) = plain_number(&elevation) {
         return scalar(meters?);
     }
-    let arguments = Arguments::read(py, &["elevation"], &[elevation])?;
-    let columns = arguments.columns()?;
-    let meters = |row| columns.iter().find_map(|column| column.get(row)).unwrap_or(NAN);
-    if arguments.shape.is_empty() {
-        return scalar(meters(0));
+    // The rows of an array cannot raise; a single number comes back to the scalar call.
+    let result = column::map(py, "elevation", elevation.clone(), |meters| pressure(meters).unwrap_or(NAN))?;
+    if result.is_instance_of::<PyFloat>() {
+        scalar(elevation.call_method0("__float__")?.extract()?)
+    } else {
+        Ok(result)
     }
-    let mut result = column::blank(arguments.rows, NAN)?;
-    py.detach(|| {
-        for (row, place) in result.iter_mut().enumerate() {
-            *place = pressure(meters(row)).unwrap_or(NAN);
-        }
-    });
-    column::array(py, result, &arguments.shape)
 }
 
 /// Every quantity as (name, code, unit, minimum, maximum, whether it is a property of a state).

@@ -11,6 +11,7 @@ dry air. Numbers and NumPy arrays go through the same calls.
 21.99
 """
 
+from . import account, process, signal
 from ._core import NUMERICS_VERSION, MoistAir, __version__, pressure_at_elevation
 from ._errors import (
     InfeasibleError,
@@ -41,5 +42,8 @@ __all__ = [
     "UnattainableError",
     "UnknownNameError",
     "__version__",
+    "account",
     "pressure_at_elevation",
+    "process",
+    "signal",
 ]
