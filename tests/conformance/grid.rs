@@ -146,13 +146,18 @@ pub fn compare(face: &str, bytes: &[u8]) {
     assert_eq!(bytes.len(), expected.len(), "{face}: as many results as the core gives");
     let width = RESULTS * 8;
     let rows = rows();
-    let differing: Vec<_> = (0..ROWS).filter(|i| bytes[i * width..][..width] != expected[i * width..][..width]).collect();
-    let shown: Vec<_> = differing.iter().take(3).map(|&i| {
-        let words = |bytes: &[u8]| -> Vec<f64> {
-            bytes[i * width..][..width].chunks(8).map(|word| f64::from_le_bytes(word.try_into().unwrap())).collect()
-        };
-        format!("row {i} {:?}\n  core {:?}\n  {face} {:?}", rows[i], words(expected), words(bytes))
-    }).collect();
+    let differing: Vec<_> =
+        (0..ROWS).filter(|i| bytes[i * width..][..width] != expected[i * width..][..width]).collect();
+    let shown: Vec<_> = differing
+        .iter()
+        .take(3)
+        .map(|&i| {
+            let words = |bytes: &[u8]| -> Vec<f64> {
+                bytes[i * width..][..width].chunks(8).map(|word| f64::from_le_bytes(word.try_into().unwrap())).collect()
+            };
+            format!("row {i} {:?}\n  core {:?}\n  {face} {:?}", rows[i], words(expected), words(bytes))
+        })
+        .collect();
     assert!(differing.is_empty(), "{} of {ROWS} rows differ\n{}", differing.len(), shown.join("\n"));
     println!("{face}: {ROWS} rows, {} values, the same bits", ROWS * RESULTS);
 }

@@ -4,20 +4,24 @@ mod digest;
 mod grid;
 mod plant_day;
 mod python;
+mod readme;
 
 use std::path::{Path, PathBuf};
 use std::process::{Command, ExitCode};
 use std::{fs, panic};
 
 use libtest_mimic::{Arguments, Failed, Trial};
-use moistair_tests::toolchain::{
-    Face, Linking, c_library, compile_c, python_command, root, run, skipped, workshop,
-};
+use moistair_tests::toolchain::{Face, Linking, c_library, compile_c, python_command, root, run, skipped, workshop};
 
 fn main() -> ExitCode {
     let arguments = Arguments::from_args();
     let trials = vec![
         trial("digest_of_the_seeded_grid", &[], digest::committed),
+        trial("readme_shows_the_examples", &[], readme::code),
+        trial("readme_states_the_limits", &[], readme::limits),
+        trial("readme_tour_in_rust", &[], readme::rust_tour),
+        trial("readme_tour_in_c", &[Face::C], readme::c_tour),
+        trial("readme_tour_in_python", &[Face::Python], readme::python_tour),
         trial("c_examples_link_both_ways", &[Face::C], c_examples),
         trial("c_and_core_give_the_same_bits", &[Face::C], c_grid),
         trial("python_and_core_give_the_same_bits", &[Face::Python], python_grid),

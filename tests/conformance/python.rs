@@ -15,7 +15,16 @@ pub fn own_tests() {
         .arg("--rootdir")
         .arg(&package)
         .arg(package.join("tests"))));
-    printed(&run(python_command().args(["-m", "pytest", "-q", "-p", "no:cacheprovider", "--doctest-modules", "--pyargs", "moistair"])));
+    printed(&run(python_command().args([
+        "-m",
+        "pytest",
+        "-q",
+        "-p",
+        "no:cacheprovider",
+        "--doctest-modules",
+        "--pyargs",
+        "moistair",
+    ])));
 }
 
 /// The stubs say what the module holds.
