@@ -58,6 +58,9 @@ pub unsafe extern "C" fn moistair_state_columns(
     let call = || {
         let (property, formulation) = (quantity(property)?, self::formulation(formulation)?);
         check_mask(mask)?;
+        if rows > isize::MAX as usize / size_of::<f64>() {
+            return Err(Failure::TooLong);
+        }
         // SAFETY: the caller's array of output columns.
         let selected = unsafe { Selected::new(rows, mask, outputs) }?;
         let reads = [dry_bulb.extent(rows)?, second.extent(rows)?, pressure.extent(rows)?, selected.array];

@@ -1,0 +1,649 @@
+//! Every export with every class of number, selector, structure and pointer, drawn from a seeded generator: a status comes back, nothing
+//! panics (a panic in an `extern "C"` function ends the process), nothing is written but on success, no NaN comes back where a value is
+//! promised, every state that comes back is accepted again and means the same.
+//!
+//! `MOISTAIR_HOSTILE_CALLS=10000000 cargo test --release -p moistair-ffi --test hostile` takes longer and sees more.
+
+use std::cell::{Cell, RefCell};
+use std::collections::{BTreeMap, BTreeSet};
+use std::{env, fs};
+
+use moistair::*;
+
+const SENTINEL: u64 = 0xA5A5_5A5A_A5A5_5A5A;
+const NAN_BITS: u64 = 0x7FF8_0000_0000_0000;
+
+/// A structure of the interface as 8-byte words.
+trait Words: Copy {
+    /// Words that hold integers, or what the library keeps to itself.
+    const INTEGERS: &'static [usize] = &[];
+    /// Words that may be NaN on success.
+    const OPTIONAL: &'static [usize] = &[];
+    /// Words at which a state begins.
+    const STATES: &'static [usize] = &[];
+
+    fn words(self) -> Vec<u64> {
+        assert_eq!(size_of::<Self>() % 8, 0);
+        let mut words = vec![0; size_of::<Self>() / 8];
+        // SAFETY: structures of numbers without padding, of this size.
+        unsafe { words.as_mut_ptr().cast::<Self>().write_unaligned(self) };
+        words
+    }
+
+    fn from_words(words: &[u64]) -> Self {
+        assert_eq!(size_of::<Self>(), 8 * words.len());
+        // SAFETY: structures of numbers, any bits are one.
+        unsafe { words.as_ptr().cast::<Self>().read_unaligned() }
+    }
+}
+
+macro_rules! words {
+    ($($name:ty, $integers:expr, $optional:expr, $states:expr;)*) => {$(
+        impl Words for $name {
+            const INTEGERS: &'static [usize] = &$integers;
+            const OPTIONAL: &'static [usize] = &$optional;
+            const STATES: &'static [usize] = &$states;
+        }
+    )*};
+}
+
+words! {
+    f64, [], [], [];
+    u64, [0], [], [];
+    moistair_limits, [], [], [];
+    moistair_basis, [1], [], [];
+    moistair_state, [12], [], [0];
+    moistair_stream, [12], [], [0];
+    moistair_air_with_condensate, [12], [], [0];
+    moistair_wet_stream, [12], [], [0];
+    moistair_exchange, [], [], [];
+    moistair_sensible, [12], [], [0];
+    moistair_cooling, [12, 22], [21], [0];
+    moistair_reheat, [12, 22, 23 + 12], [21, 40], [0, 23];
+    moistair_humidified, [12], [], [0];
+    moistair_books, [5], [], [];
+    moistair_tower_water, [], [], [];
+    moistair_water_treatment, [], [], [];
+    moistair_water_use, [4], [], [];
+    moistair_tower_balance, [12, 21], [25], [0];
+    moistair_channel, [6, 7], [0, 1, 2, 3, 4, 5], [];
+    moistair_channel_state, [0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11], [], [];
+    moistair_checked, [1, 2], [0], [];
+    moistair_total, [0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14], [], [];
+    moistair_total_values, [], [3, 4, 5], [];
+    moistair_period, [1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15], [], [];
+    moistair_periods, [0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15, 16], [], [];
+    moistair_books_total, [0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14], [], [];
+    moistair_books_total_values, [4, 5, 10, 11, 12], [], [];
+    moistair_deviation, [0, 1, 2, 3, 4, 5, 6, 7], [], [];
+    moistair_deviation_values, [4, 5], [0, 1, 2, 3], [];
+}
+
+impl Words for moistair_counts {}
+
+/// Draws what a hostile, a careless or a careful caller hands over.
+struct Caller {
+    seed: Cell<u64>,
+    /// A required pointer of this call is null or misaligned.
+    broken: Cell<bool>,
+    /// Structures that came back.
+    known: RefCell<BTreeMap<usize, Vec<Vec<u64>>>>,
+}
+
+impl Caller {
+    /// splitmix64 (Steele, Lea and Flood 2014, OOPSLA '14, 453–472).
+    fn bits(&self) -> u64 {
+        self.seed.set(self.seed.get().wrapping_add(0x9E37_79B9_7F4A_7C15));
+        let mut z = self.seed.get();
+        z = (z ^ (z >> 30)).wrapping_mul(0xBF58_476D_1CE4_E5B9);
+        z = (z ^ (z >> 27)).wrapping_mul(0x94D0_49BB_1331_11EB);
+        z ^ (z >> 31)
+    }
+
+    fn below(&self, n: u64) -> u64 {
+        self.bits() % n
+    }
+
+    fn unit(&self) -> f64 {
+        (self.bits() >> 11) as f64 / (1_u64 << 53) as f64
+    }
+
+    fn special(&self) -> f64 {
+        let all = [
+            f64::NAN,
+            -f64::NAN,
+            f64::from_bits(0x7FF0_0000_0000_0001),
+            f64::INFINITY,
+            f64::NEG_INFINITY,
+            0.0,
+            -0.0,
+            f64::from_bits(1),
+            -f64::MIN_POSITIVE,
+            f64::MAX,
+            f64::MIN,
+            f64::EPSILON,
+            1.0,
+            -1.0,
+        ];
+        all[self.below(all.len() as u64) as usize]
+    }
+
+    /// An end of a declared range, or the next number to it.
+    fn edge(&self) -> f64 {
+        let all = moistair_core::Quantity::ALL;
+        let (min, max) = all[self.below(all.len() as u64) as usize].limits();
+        let end = if self.below(2) == 0 { min } else { max };
+        match self.below(3) {
+            0 => end,
+            1 => f64::from_bits(end.to_bits().wrapping_add(1)),
+            _ => f64::from_bits(end.to_bits().wrapping_sub(1)),
+        }
+    }
+
+    /// Any class of number.
+    fn wild(&self) -> f64 {
+        match self.below(4) {
+            0 => self.special(),
+            1 => f64::from_bits(self.bits()),
+            2 => self.edge(),
+            _ => 10_f64.powf(self.unit() * 640.0 - 330.0) * if self.below(2) == 0 { 1.0 } else { -1.0 },
+        }
+    }
+
+    /// Mostly in a range.
+    fn number(&self, low: f64, high: f64) -> f64 {
+        if self.below(8) == 0 { self.wild() } else { low + (high - low) * self.unit() }
+    }
+
+    /// Mostly a selector below a count.
+    fn selector(&self, count: i32) -> i32 {
+        match self.below(16) {
+            0 => self.bits() as i32,
+            1 => [-1, i32::MIN, i32::MAX, count][self.below(4) as usize],
+            _ => self.below(count as u64) as i32,
+        }
+    }
+
+    fn mask(&self) -> u64 {
+        match self.below(8) {
+            0 => self.bits(),
+            1 => (1 << MOISTAIR_PROPERTY_COUNT) - 1,
+            _ => 1 << self.selector(MOISTAIR_PROPERTY_COUNT).rem_euclid(64),
+        }
+    }
+
+    /// A second property in its own range.
+    fn second(&self) -> (i32, f64) {
+        let selector = self.selector(MOISTAIR_PROPERTY_COUNT);
+        let (low, high) = match selector {
+            MOISTAIR_HUMIDITY_RATIO | MOISTAIR_SPECIFIC_HUMIDITY | MOISTAIR_ABSOLUTE_HUMIDITY => (0.0, 0.03),
+            MOISTAIR_WATER_MOLE_FRACTION => (0.0, 0.05),
+            MOISTAIR_VAPOR_PRESSURE => (0.0, 5e3),
+            MOISTAIR_SPECIFIC_ENTHALPY => (-2e4, 1e5),
+            MOISTAIR_SPECIFIC_VOLUME | MOISTAIR_DENSITY => (0.8, 1.3),
+            MOISTAIR_RELATIVE_HUMIDITY | MOISTAIR_RELATIVE_HUMIDITY_OVER_LIQUID | MOISTAIR_DEGREE_OF_SATURATION => {
+                (0.0, 1.02)
+            }
+            _ => (-30.0, 40.0),
+        };
+        (selector, self.number(low, high))
+    }
+
+    /// A structure that the library made; or that with a word changed; or any bits.
+    fn structure<T: Words>(&self, fresh: T) -> T {
+        let mut words = fresh.words();
+        if self.below(2) == 0 {
+            if let Some(known) = self.known.borrow().get(&Self::key::<T>()) {
+                words.clone_from(&known[self.below(known.len() as u64) as usize]);
+            }
+        }
+        match self.below(16) {
+            0 => words.iter_mut().for_each(|word| *word = self.bits()),
+            1..=3 => {
+                let place = self.below(words.len() as u64) as usize;
+                let small = self.below(4) | (self.below(4) << 32);
+                words[place] = [self.wild().to_bits(), self.bits(), small][self.below(3) as usize];
+            }
+            _ => {}
+        }
+        T::from_words(&words)
+    }
+
+    fn key<T>() -> usize {
+        // The name's address would do, the size and the name's hash are stable.
+        std::any::type_name::<T>().bytes().fold(size_of::<T>(), |sum, byte| sum.wrapping_mul(31) + usize::from(byte))
+    }
+
+    fn keep<T: Words>(&self, value: &T) {
+        let mut known = self.known.borrow_mut();
+        let kept = known.entry(Self::key::<T>()).or_default();
+        if kept.len() < 64 {
+            kept.push(value.words());
+        } else {
+            let place = self.below(64) as usize;
+            kept[place] = value.words();
+        }
+    }
+
+    fn state(&self) -> moistair_state {
+        // Half of the states come from the whole range, half from where plant works.
+        let wide = self.below(2) == 0;
+        let pressure = if wide { self.number(2e4, 1.1e6) } else { self.number(7e4, 1.1e5) };
+        let basis = moistair_basis { pressure, formulation: self.selector(2), reserved: self.bits() as i32 };
+        let mut state = moistair_state::from_words(&[0; 13]);
+        let humidity = self.number(0.0, 1.0);
+        // SAFETY: valid places.
+        unsafe {
+            let dry_bulb = if wide { self.number(-80.0, 150.0) } else { self.number(-40.0, 60.0) };
+            moistair_from_dry_bulb(
+                dry_bulb,
+                MOISTAIR_RELATIVE_HUMIDITY,
+                humidity,
+                basis,
+                &mut state,
+                std::ptr::null_mut(),
+            );
+        }
+        self.structure(state)
+    }
+
+    fn basis(&self) -> moistair_basis {
+        let pressure = self.number(2e4, 1.1e6);
+        self.structure(moistair_basis { pressure, formulation: self.selector(2), reserved: 0 })
+    }
+
+    fn stream(&self) -> moistair_stream {
+        self.structure(moistair_stream { air: self.state(), dry_air_flow: self.number(0.0, 10.0) })
+    }
+
+    fn wet_stream(&self) -> moistair_wet_stream {
+        let (liquid, ice) = (self.number(0.0, 0.001), self.number(0.0, 0.001));
+        let total_water = 0.0;
+        let mixture =
+            moistair_air_with_condensate { air: self.state(), liquid, ice, total_water, specific_enthalpy: 0.0 };
+        self.structure(moistair_wet_stream { mixture, dry_air_flow: self.number(0.0, 10.0) })
+    }
+
+    /// A zeroed structure, or one that came back.
+    fn kept<T: Words>(&self) -> T {
+        self.structure(T::from_words(&vec![0; size_of::<T>() / 8]))
+    }
+
+    /// The pointer, or now and then null or a misaligned one.
+    fn pointer<T>(&self, value: &T) -> *const T {
+        let pointer = std::ptr::from_ref(value);
+        match self.below(96) {
+            0 => {
+                self.broken.set(true);
+                std::ptr::null()
+            }
+            1 if align_of::<T>() > 1 => {
+                self.broken.set(true);
+                pointer.wrapping_byte_add(1)
+            }
+            _ => pointer,
+        }
+    }
+
+    fn place<T>(&self, value: &mut T) -> *mut T {
+        let pointer = std::ptr::from_mut(value);
+        let shift = self.pointer(value).addr();
+        if shift == 0 { std::ptr::null_mut() } else { pointer.wrapping_byte_add(shift - pointer.addr()) }
+    }
+
+    /// Null now and then, which an optional place may be.
+    fn optional<T>(&self, value: &mut T) -> *mut T {
+        if self.below(4) == 0 { std::ptr::null_mut() } else { std::ptr::from_mut(value) }
+    }
+}
+
+/// What is the same for every call.
+fn verdict(caller: &Caller, name: &str, status: i32, error: Option<&moistair_error>) {
+    assert!(text(status).is_some() && status != MOISTAIR_INTERNAL, "{name}: status {status}");
+    assert!(!caller.broken.get() || status != MOISTAIR_OK, "{name}: a bad pointer was taken");
+    if let Some(error) = error {
+        assert_eq!(error.code, status, "{name}");
+        for number in [error.value, error.min, error.max] {
+            assert!(!number.is_nan() || number.to_bits() == NAN_BITS, "{name}: {:x}", number.to_bits());
+        }
+    }
+}
+
+/// The structure means the same when it comes back to the library.
+fn accepted_again(name: &str, words: &[u64]) {
+    let state = moistair_state::from_words(words);
+    let mut values = [f64::NAN; MOISTAIR_PROPERTY_COUNT as usize];
+    let (mut have, always) = (0, 0xFFF);
+    // SAFETY: valid places.
+    let status = unsafe { moistair_properties(&state, always, values.as_mut_ptr(), &mut have, std::ptr::null_mut()) };
+    assert_eq!((status, have), (MOISTAIR_OK, always), "{name}: {state:?}");
+    for (value, word) in values.iter().zip(&words[..12]) {
+        assert_eq!(value.to_bits(), *word, "{name}: {state:?} {values:?}");
+    }
+}
+
+/// Calls an export with one output many times.
+fn exercise<T: Words>(
+    successes: &mut BTreeMap<&'static str, (u64, u64)>,
+    name: &'static str,
+    calls: u64,
+    caller: &Caller,
+    call: impl Fn(&Caller, *mut T, *mut moistair_error) -> i32,
+) {
+    let mut good = 0;
+    for _ in 0..calls {
+        caller.broken.set(false);
+        let empty = vec![SENTINEL; size_of::<T>() / 8];
+        let (mut output, mut error) =
+            (T::from_words(&empty), moistair_error { value: 1.0, min: 1.0, max: 1.0, code: -1, quantity: 0 });
+        let place = caller.place(&mut output);
+        let detail = caller.optional(&mut error);
+        let status = call(caller, place, detail);
+        verdict(caller, name, status, (!detail.is_null()).then_some(&error));
+        let words = output.words();
+        if status != MOISTAIR_OK {
+            assert_eq!(words, empty, "{name}: written although it failed with {status}");
+            continue;
+        }
+        good += 1;
+        for (place, word) in words.iter().enumerate().filter(|(place, _)| !T::INTEGERS.contains(place)) {
+            let number = f64::from_bits(*word);
+            assert!(
+                !number.is_nan() || T::OPTIONAL.contains(&place) && *word == NAN_BITS,
+                "{name}: word {place} {number}"
+            );
+        }
+        T::STATES.iter().for_each(|start| accepted_again(name, &words[*start..start + 13]));
+        caller.keep(&output);
+    }
+    successes.insert(name, (good, calls));
+}
+
+/// Calls an export that changes a structure many times.
+fn change<T: Words>(
+    successes: &mut BTreeMap<&'static str, (u64, u64)>,
+    name: &'static str,
+    calls: u64,
+    caller: &Caller,
+    call: impl Fn(&Caller, *mut T, *mut moistair_error) -> i32,
+) {
+    let mut good = 0;
+    for _ in 0..calls {
+        caller.broken.set(false);
+        let mut kept = caller.kept::<T>();
+        let before = kept.words();
+        let mut error = moistair_error { value: 1.0, min: 1.0, max: 1.0, code: -1, quantity: 0 };
+        let (place, detail) = (caller.place(&mut kept), caller.optional(&mut error));
+        let status = call(caller, place, detail);
+        verdict(caller, name, status, (!detail.is_null()).then_some(&error));
+        if status == MOISTAIR_OK {
+            good += 1;
+            caller.keep(&kept);
+        } else {
+            assert_eq!(kept.words(), before, "{name}: changed although it failed with {status}");
+        }
+    }
+    successes.insert(name, (good, calls));
+}
+
+fn calls() -> u64 {
+    env::var("MOISTAIR_HOSTILE_CALLS").map_or(10_000, |text| text.parse().unwrap())
+}
+
+#[test]
+fn no_argument_upsets_an_export() {
+    let seed = env::var("MOISTAIR_HOSTILE_SEED").map_or(1, |text| text.parse().unwrap());
+    let caller = &Caller { seed: Cell::new(seed), broken: Cell::new(false), known: RefCell::default() };
+    let mut successes = BTreeMap::new();
+    let n = calls();
+
+    /// `run!(how name: |c, output, error| arguments…)`: one export by its name.
+    macro_rules! run {
+        ($how:ident $name:ident: |$c:ident, $out:ident, $error:ident| $(let $before:pat = $value:expr;)* ($($argument:expr),*)) => {
+            $how(&mut successes, stringify!($name), n, caller, |$c, $out, $error| {
+                $(let $before = $value;)*
+                // SAFETY: pointers are valid, null or misaligned.
+                unsafe { $name($($argument),*) }
+            });
+        };
+    }
+
+    run!(exercise moistair_quantity_limits: |c, out, e| (c.selector(50), out, e));
+    run!(exercise moistair_pressure_at_elevation: |c, out, e| (c.number(-5e3, 1.1e4), out, e));
+    run!(exercise moistair_from_dry_bulb: |c, out, e| let (property, value) = c.second();
+        (c.number(-80.0, 150.0), property, value, c.basis(), out, e));
+    run!(exercise moistair_property: |c, out, e| let state = c.state(); (c.pointer(&state), c.selector(23), out, e));
+    run!(exercise moistair_stream_from_mass_flow: |c, out, e| let air = c.state();
+        (c.pointer(&air), c.number(0.0, 10.0), out, e));
+    run!(exercise moistair_stream_from_volume_flow: |c, out, e| let air = c.state();
+        (c.pointer(&air), c.number(0.0, 10.0), out, e));
+    run!(exercise moistair_stream_from_standard_volume_flow: |c, out, e| let air = c.state();
+        (c.pointer(&air), c.number(0.0, 10.0), c.number(1.0, 1.3), out, e));
+    run!(exercise moistair_stream_remainder: |c, out, e| let part = c.stream(); let air = c.state();
+        (c.number(5.0, 20.0), c.pointer(&part), c.pointer(&air), out, e));
+    run!(exercise moistair_wet_stream_from_stream: |c, out, e| let gas = c.stream();
+        (c.pointer(&gas), c.number(0.0, 0.01), c.number(0.0, 0.01), out, e));
+    run!(exercise moistair_from_enthalpy_and_water: |c, out, e|
+        (c.number(-4e4, 2e5), c.number(0.0, 0.05), c.selector(2), c.basis(), out, e));
+    run!(exercise moistair_liquid_water_enthalpy: |c, out, e| (c.number(0.0, 200.0), c.basis(), out, e));
+    run!(exercise moistair_saturated_steam_enthalpy: |c, out, e| (c.number(0.0, 200.0), out, e));
+    run!(exercise moistair_sensible_to_temperature: |c, out, e| let s = c.stream();
+        (c.pointer(&s), c.number(-20.0, 60.0), out, e));
+    run!(exercise moistair_sensible_with_heat: |c, out, e| let s = c.stream();
+        (c.pointer(&s), c.number(-2e4, 2e5), out, e));
+    run!(exercise moistair_coil_to_state: |c, out, e| let s = c.stream(); let leaving = c.state();
+        (c.pointer(&s), c.pointer(&leaving), c.selector(3), c.number(-5.0, 20.0), out, e));
+    run!(exercise moistair_coil_by_bypass_factor: |c, out, e| let s = c.stream();
+        (c.pointer(&s), c.number(-10.0, 30.0), c.number(0.0, 1.0), c.selector(3), c.number(-5.0, 20.0), out, e));
+    run!(exercise moistair_coil_between: |c, out, e| let s = c.stream(); let leaving = c.state();
+        (c.pointer(&s), c.pointer(&leaving), c.selector(3), c.number(-5.0, 20.0), c.number(0.0, 0.001), out, e));
+    run!(exercise moistair_reheat_to_state: |c, out, e| let s = c.stream(); let target = c.state();
+        (c.pointer(&s), c.pointer(&target), c.number(0.2, 1.0), c.selector(3), c.number(-5.0, 20.0), out, e));
+    run!(exercise moistair_humidify_with_steam: |c, out, e| let s = c.stream();
+        (c.pointer(&s), c.number(0.0, 0.05), c.number(2.5e6, 2.8e6), out, e));
+    run!(exercise moistair_humidify_with_steam_to_humidity_ratio: |c, out, e| let s = c.stream();
+        (c.pointer(&s), c.number(0.0, 0.05), c.number(2.5e6, 2.8e6), out, e));
+    run!(exercise moistair_humidify_with_steam_to_relative_humidity: |c, out, e| let s = c.stream();
+        (c.pointer(&s), c.number(0.0, 1.0), c.number(2.5e6, 2.8e6), out, e));
+    run!(exercise moistair_humidify_steam_limit: |c, out, e| let s = c.stream();
+        (c.pointer(&s), c.number(2.5e6, 2.8e6), out, e));
+    run!(exercise moistair_humidify_with_spray: |c, out, e| let s = c.stream();
+        (c.pointer(&s), c.number(0.0, 0.05), c.number(0.0, 90.0), out, e));
+    run!(exercise moistair_humidify_with_medium: |c, out, e| let s = c.stream();
+        (c.pointer(&s), c.number(0.0, 1.0), c.selector(2), c.number(0.0, 90.0), out, e));
+    run!(exercise moistair_mix: |c, out, e| let s = [c.wet_stream(), c.wet_stream()];
+        (c.pointer(&s).cast(), [1, 2, 2, usize::MAX][c.below(4) as usize], out, e));
+    run!(exercise moistair_mix_at: |c, out, e| let s = [c.wet_stream(), c.wet_stream()];
+        (c.pointer(&s).cast(), 1 + c.below(2) as usize, c.number(8e4, 1.1e5), c.selector(2), out, e));
+    run!(exercise moistair_balance: |c, out, e|
+        let s = [c.wet_stream(), c.wet_stream()]; let leaving = c.wet_stream(); let exchange = c.kept::<moistair_exchange>();
+        (c.pointer(&s).cast(), 1 + c.below(2) as usize, c.pointer(&leaving), c.pointer(&exchange), out, e));
+    let treatment = |c: &Caller| moistair_water_treatment {
+        drift_fraction: c.number(0.0, 0.01),
+        cycles_of_concentration: c.number(1.0, 8.0),
+    };
+    let water = |c: &Caller| moistair_tower_water {
+        flow: c.number(0.0, 20.0),
+        hot: c.number(25.0, 45.0),
+        cold: c.number(15.0, 30.0),
+    };
+    run!(exercise moistair_tower_water_use: |c, out, e| (c.number(0.0, 1.0), c.number(0.0, 20.0), treatment(c), out, e));
+    run!(exercise moistair_tower_with_air_flow: |c, out, e| let s = c.stream();
+        (c.pointer(&s), water(c), treatment(c), out, e));
+    run!(exercise moistair_tower_with_leaving_air: |c, out, e| let entering = c.state(); let leaving = c.state();
+        (c.pointer(&entering), c.pointer(&leaving), water(c), treatment(c), out, e));
+    run!(exercise moistair_channel_new: |c, out, e|
+        let (kind, unit) = if c.below(2) == 0 { (1, 1) } else { (c.selector(13), c.selector(30)) };
+        (kind, unit, c.number(-50.0, 0.0), c.number(1.0, 60.0), out, e));
+    run!(exercise moistair_channel_check: |c, out, e|
+        let channel = c.kept::<moistair_channel>(); let mut state = c.kept::<moistair_channel_state>();
+        (c.pointer(&channel), c.place(&mut state), c.number(0.0, 1e5), c.number(-60.0, 110.0), out, e));
+    run!(exercise moistair_channel_check_beside: |c, out, e|
+        let channel = c.kept::<moistair_channel>(); let mut state = c.kept::<moistair_channel_state>();
+        (c.pointer(&channel), c.place(&mut state), c.number(0.0, 1e5), c.number(-60.0, 110.0), c.number(0.0, 1.0), out, e));
+    run!(exercise moistair_unit_to_core: |c, out, e| (c.selector(30), c.number(-60.0, 110.0), out, e));
+    run!(exercise moistair_unit_from_core: |c, out, e| (c.selector(30), c.number(-60.0, 110.0), out, e));
+    run!(exercise moistair_total_new: |c, out, e| (c.selector(2), c.number(0.0, 1e4), out, e));
+    run!(change moistair_total_add: |c, total, e| let mut added = 0;
+        (total, c.number(0.0, 1e5), c.number(-1e4, 1e4), c.selector(3), c.optional(&mut added), e));
+    run!(change moistair_total_merge: |c, total, e| let other = c.kept(); (total, c.pointer(&other), e));
+    run!(exercise moistair_total_read: |c, out, e| let total = c.kept(); (c.pointer(&total), out, e));
+    run!(exercise moistair_periods_new: |c, out, e| (c.number(60.0, 3600.0), c.selector(2), c.number(0.0, 1e4), out, e));
+    run!(change moistair_periods_add: |c, periods, e| let mut period = c.kept(); let mut finished = 0;
+        (periods, c.number(0.0, 1e5), c.number(-1e4, 1e4), c.selector(3), c.place(&mut period), c.place(&mut finished), e));
+    run!(change moistair_books_total_record: |c, total, e| let books = c.kept(); (total, c.pointer(&books), e));
+    run!(change moistair_books_total_merge: |c, total, e| let other = c.kept(); (total, c.pointer(&other), e));
+    run!(exercise moistair_books_total_read: |c, out, e| let total = c.kept(); (c.pointer(&total), out, e));
+    run!(change moistair_deviation_add: |c, deviation, e| (deviation, c.number(-60.0, 60.0), c.number(-60.0, 60.0), e));
+    run!(change moistair_deviation_merge: |c, deviation, e| let other = c.kept(); (deviation, c.pointer(&other), e));
+    run!(exercise moistair_deviation_read: |c, out, e| let deviation = c.kept(); (c.pointer(&deviation), out, e));
+    run!(change moistair_counts_record: |c, counts, e| let checked = c.kept(); (counts, c.pointer(&checked), e));
+    run!(change moistair_counts_merge: |c, counts, e| let other = c.kept(); (counts, c.pointer(&other), e));
+    several_outputs(caller, n, &mut successes);
+    texts(caller, n, &mut successes);
+
+    for (name, (good, calls)) in &successes {
+        println!("{name}: {good} of {calls} calls succeeded");
+    }
+    for (name, (good, calls)) in &successes {
+        // Otherwise the test would see refusals only.
+        assert!(50 * good >= *calls, "{name}: only {good} of {calls} calls succeeded");
+    }
+    let covered: BTreeSet<String> = successes.keys().map(|name| name.to_string()).collect();
+    let header = fs::read_to_string(concat!(env!("CARGO_MANIFEST_DIR"), "/include/moistair.h")).unwrap();
+    let declared =
+        header.lines().filter(|line| !line.starts_with("//") && !line.starts_with(" *") && line.contains('('));
+    for line in declared.filter_map(|line| line.split_once('(')).map(|(head, _)| head) {
+        let name = head_name(line);
+        assert!(!name.starts_with("moistair_") || covered.contains(name), "{name} is not exercised");
+    }
+}
+
+fn head_name(head: &str) -> &str {
+    head.rsplit([' ', '*']).next().unwrap_or_default()
+}
+
+/// Exports with more than one output, or none.
+fn several_outputs(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static str, (u64, u64)>) {
+    let (mut read, mut columned, mut unfinished) = (0, 0, 0);
+    for _ in 0..n {
+        caller.broken.set(false);
+        let (state, mask) = (caller.state(), caller.mask());
+        let mut values = [f64::from_bits(SENTINEL); MOISTAIR_PROPERTY_COUNT as usize];
+        let mut have = SENTINEL;
+        let place = caller.place(&mut values).cast();
+        let (pointer, bits) = (caller.pointer(&state), caller.optional(&mut have));
+        // SAFETY: pointers are valid, null or misaligned.
+        let status = unsafe { moistair_properties(pointer, mask, place, bits, std::ptr::null_mut()) };
+        verdict(caller, "moistair_properties", status, None);
+        for (code, value) in values.iter().enumerate() {
+            let (asked, found) = (status == MOISTAIR_OK && mask >> code & 1 == 1, have >> code & 1 == 1);
+            match (asked, found && !bits.is_null()) {
+                (false, _) => assert_eq!(value.to_bits(), SENTINEL, "moistair_properties: {code}"),
+                (true, true) => assert!(value.is_finite(), "moistair_properties: {code} {value}"),
+                (true, false) if bits.is_null() => assert!(!value.is_nan() || value.to_bits() == NAN_BITS),
+                (true, false) => assert_eq!(value.to_bits(), NAN_BITS, "moistair_properties: {code}"),
+            }
+        }
+        read += u64::from(status == MOISTAIR_OK);
+        columned += u64::from(columns(caller) != 0);
+        caller.broken.set(false);
+        let (periods, mut period, mut begun) = (caller.kept(), caller.kept::<moistair_period>(), 0);
+        let (periods, period, begun) = (caller.pointer(&periods), caller.place(&mut period), caller.place(&mut begun));
+        // SAFETY: pointers are valid, null or misaligned.
+        let status = unsafe { moistair_periods_unfinished(periods, period, begun, std::ptr::null_mut()) };
+        verdict(caller, "moistair_periods_unfinished", status, None);
+        unfinished += u64::from(status == MOISTAIR_OK);
+    }
+    successes.insert("moistair_properties", (read, n));
+    successes.insert("moistair_state_columns", (columned, n));
+    successes.insert("moistair_periods_unfinished", (unfinished, n));
+}
+
+/// A column call; how many rows had every value.
+fn columns(caller: &Caller) -> usize {
+    const MOST: usize = 5;
+    let rows =
+        if caller.below(16) == 0 { usize::MAX >> caller.below(3) } else { caller.below(MOST as u64 + 1) as usize };
+    let (property, _) = caller.second();
+    let mut inputs = [[0.0; 3 * MOST]; 3];
+    for i in 0..3 * MOST {
+        inputs[0][i] = caller.number(-40.0, 60.0);
+        inputs[1][i] = if property == MOISTAIR_RELATIVE_HUMIDITY { caller.unit() } else { caller.number(0.0, 0.02) };
+        inputs[2][i] = caller.number(7e4, 1.1e5);
+    }
+    let column = |input: &[f64; 3 * MOST]| {
+        let stride = if caller.below(16) == 0 { usize::MAX / 4 } else { caller.below(4) as usize };
+        // A stride that large reaches no second row.
+        let stride = if rows > 1 || stride < 4 { stride } else { 1 };
+        moistair_column { values: input.as_ptr(), stride }
+    };
+    let [dry_bulb, second, pressure] = [column(&inputs[0]), column(&inputs[1]), column(&inputs[2])];
+    let mask = caller.mask();
+    let mut memory = [[f64::from_bits(SENTINEL); MOST]; MOISTAIR_PROPERTY_COUNT as usize];
+    let outputs: Vec<*mut f64> = memory.iter_mut().map(|column| column.as_mut_ptr()).collect();
+    let mut status = [77; MOST];
+    let mut report = moistair_column_report { failed: 77, first_failed: 77 };
+    let mut error = moistair_error { value: 0.0, min: 0.0, max: 0.0, code: -1, quantity: -1 };
+    let formulation = caller.selector(2);
+    // SAFETY: valid memory for as many rows, or more rows than the library takes.
+    let first = unsafe {
+        moistair_state_columns(
+            rows,
+            dry_bulb,
+            property,
+            second,
+            pressure,
+            formulation,
+            mask,
+            outputs.as_ptr(),
+            status.as_mut_ptr(),
+            &mut report,
+            &mut error,
+        )
+    };
+    caller.broken.set(false);
+    verdict(caller, "moistair_state_columns", first, Some(&error));
+    let begun = first == MOISTAIR_OK || first >= 200;
+    if !begun {
+        assert!(memory.iter().flatten().all(|value| value.to_bits() == SENTINEL) && report.failed == 77);
+        return 0;
+    }
+    assert_eq!(report.failed, status.iter().take(rows).filter(|status| **status != 0).count());
+    assert_eq!(first, if report.first_failed < rows { status[report.first_failed] } else { 0 });
+    for (code, column) in memory.iter().enumerate() {
+        for (row, value) in column.iter().enumerate() {
+            match (mask >> code & 1 == 1 && row < rows, status[row]) {
+                (false, _) => assert_eq!(value.to_bits(), SENTINEL),
+                (true, 0) => assert!(value.is_finite(), "{value}"),
+                (true, _) => assert!(value.is_finite() || value.to_bits() == NAN_BITS, "{:x}", value.to_bits()),
+            }
+        }
+    }
+    1 + rows - report.failed
+}
+
+/// Texts are terminated and static whatever the code.
+fn texts(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static str, (u64, u64)>) {
+    type Text = extern "C" fn(i32) -> *const core::ffi::c_char;
+    let all: [(&str, Text); 6] = [
+        ("moistair_status_text", moistair_status_text),
+        ("moistair_quantity_name", moistair_quantity_name),
+        ("moistair_quantity_unit", moistair_quantity_unit),
+        ("moistair_unit_text", moistair_unit_text),
+        ("moistair_quality_text", moistair_quality_text),
+        ("moistair_reason_text", moistair_reason_text),
+    ];
+    for (name, function) in all {
+        for _ in 0..n {
+            // SAFETY: a static text.
+            let text = unsafe { std::ffi::CStr::from_ptr(function(caller.selector(400))) };
+            assert!(text.to_str().unwrap().len() < 100, "{name}");
+        }
+        successes.insert(name, (n, n));
+    }
+    assert!(moistair_version() > 0 && moistair_abi_version() > 0 && moistair_numerics_version() > 0);
+    for name in ["moistair_version", "moistair_abi_version", "moistair_numerics_version"] {
+        successes.insert(name, (1, 1));
+    }
+}
