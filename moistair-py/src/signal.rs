@@ -52,8 +52,8 @@ const MODULE: &str = "moistair.signal";
 /// >>> day = channel.check(ChannelState(), time=[0.0, 60.0, 120.0], raw=[45.0, 101.2, 150.0])
 /// >>> day.value
 /// array([0.45, 1.  , 1.  ])
-/// >>> [quality for quality in day.quality]
-/// [0, 1, 1]
+/// >>> day.quality
+/// array([0, 1, 1], dtype=int32)
 #[pyclass(frozen, module = "moistair.signal")]
 pub struct Channel {
     channel: signal::Channel,

@@ -95,10 +95,10 @@ pub enum Content {
 /// >>> import moistair
 /// >>> air = moistair.MoistAir(dry_bulb=34.0, relative_humidity=0.38, pressure=83_500.0)
 /// >>> f"{air.wet_bulb:.1f} °C, {air.specific_enthalpy / 1000:.1f} kJ/kg"
-/// '22.0 °C, 73.6 kJ/kg'
+/// '22.1 °C, 74.0 kJ/kg'
 /// >>> column = moistair.MoistAir(dry_bulb=[20.0, 25.0, 900.0], relative_humidity=0.5, pressure=101_325.0)
 /// >>> column.dew_point.round(2)
-/// array([ 9.26, 13.86,   nan])
+/// array([ 9.27, 13.87,   nan])
 /// >>> column.status
 /// array([  0,   0, 202], dtype=int32)
 #[pyclass(frozen, weakref, module = "moistair")]
@@ -405,7 +405,7 @@ impl MoistAir {
     /// >>> day = moistair.MoistAir(dry_bulb=[10.0, 20.0], dew_point=[5.0, 12.0], pressure=101_325.0)
     /// >>> columns = day.properties("relative_humidity", "wet_bulb")
     /// >>> columns["wet_bulb"].round(2)
-    /// array([ 7.49, 15.02])
+    /// array([ 7.49, 15.13])
     /// >>> again = day.properties("relative_humidity", "wet_bulb", out=columns)
     /// >>> again is columns
     /// True

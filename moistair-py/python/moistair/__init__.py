@@ -8,7 +8,7 @@ dry air. Numbers and NumPy arrays go through the same calls.
 ...     dry_bulb=34.0, relative_humidity=0.38, pressure=moistair.pressure_at_elevation(1600.0)
 ... )
 >>> round(outdoor.wet_bulb, 2)
-21.99
+22.1
 """
 
 from . import account, process, signal

@@ -14,7 +14,7 @@ Column = Union[float, NDArray[np.float64]]
 def numbers(name: str, value: Any) -> NDArray[np.float64]:
     """`value` as an aligned, C-contiguous float64 array; the same memory where it is one already. Masked is missing."""
     if isinstance(value, np.ma.MaskedArray):
-        value = value.astype(np.float64).filled(np.nan)
+        value = np.ma.filled(value.astype(np.float64), np.nan)
     try:
         array = np.asarray(value)
     except ValueError as error:  # rows of different lengths
@@ -22,7 +22,7 @@ def numbers(name: str, value: Any) -> NDArray[np.float64]:
     if array.dtype.kind not in "fiub":
         raise TypeError(f"{name} must be a number or an array of numbers, not {type(value).__name__} ({array.dtype})")
     # A view of the base class: a subclass could give `reshape` another meaning.
-    return np.require(array.view(np.ndarray), np.float64, "CA")
+    return np.require(array.view(np.ndarray), np.float64, ["C", "A"])
 
 
 def broadcast(names: Sequence[str], values: Sequence[Any]) -> tuple[tuple[int, ...], list[Column]]:

@@ -52,8 +52,6 @@ class Record:
         ours, theirs = self.__dict__, other.__dict__
         return ours.keys() == theirs.keys() and all(_same(ours[name], theirs[name]) for name in ours)
 
-    __hash__ = None  # type: ignore[assignment]
-
     def __setstate__(self, state: dict[str, Any]) -> None:
         for value in state.values():
             _freeze(value)
@@ -94,7 +92,8 @@ def run(process: str, result: type[R], *arguments: tuple[str, Any]) -> R:
     values: list[Any] = []
     for label, value in arguments:
         _flatten(label, value, labels, values)
-    results, status = _core.run(process, _layout(result), labels, values)
+    kind: Any = result
+    results, status = _core.run(process, _layout(kind), labels, values)
     _freeze(status)
     built: R = _build(result, iter(results), status)
     return built
@@ -102,7 +101,7 @@ def run(process: str, result: type[R], *arguments: tuple[str, Any]) -> R:
 
 def _flatten(label: str, value: Any, labels: list[str], values: list[Any]) -> None:
     if isinstance(value, Record):
-        for name in value._inputs or tuple(_fields(type(value))):
+        for name in value._inputs or tuple(value.__dataclass_fields__):  # type: ignore[attr-defined]
             _flatten(f"{label}.{name}", getattr(value, name), labels, values)
     else:
         labels.append(label)
@@ -110,10 +109,9 @@ def _flatten(label: str, value: Any, labels: list[str], values: list[Any]) -> No
 
 
 @lru_cache(maxsize=None)
-def _fields(record: type[Record]) -> dict[str, Any]:
+def _fields(record: Any) -> dict[str, Any]:
     hints = get_type_hints(record)
-    names = record.__dataclass_fields__  # type: ignore[attr-defined]
-    return {name: _kind(hints[name]) for name in names}
+    return {name: _kind(hints[name]) for name in record.__dataclass_fields__}
 
 
 def _kind(hint: Any) -> Any:

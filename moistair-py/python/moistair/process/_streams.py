@@ -152,7 +152,7 @@ class AirWithCondensate(Record, Generic[T]):
     ...     specific_enthalpy=42_900.0, total_water=0.01284, pressure=101_325.0, formulation="ideal_gas"
     ... )
     >>> fog.is_wet, round(fog.air.dry_bulb, 1)
-    (True, 15.2)
+    (True, 15.3)
     """
 
     air: MoistAir[T]

@@ -118,7 +118,7 @@ def to_state(
 
     Examples
     --------
-    ASHRAE Fundamentals 2021 ch. 1, Example 3: 5 m³/s from 30 °C, 50 % to saturation at 10 °C.
+    5 m³/s from 30 °C, 50 % to saturation at 10 °C, as in ASHRAE Fundamentals 2021 ch. 1, Example 3.
 
     >>> from moistair import MoistAir
     >>> from moistair.process import AirStream, coil
@@ -126,8 +126,8 @@ def to_state(
     >>> entering = AirStream.from_volume_flow(air, volume_flow=5.0)
     >>> leaving = MoistAir(dry_bulb=10.0, relative_humidity=1.0, pressure=101_325.0)
     >>> cooling = coil.to_state(entering, leaving=leaving)
-    >>> abs(cooling.cooling_load - 197e3) < 1e3, cooling.regime.name
-    (True, 'WET')
+    >>> round(cooling.cooling_load / 1000.0), cooling.regime.name
+    (198, 'WET')
     """
     expect(entering, AirStream, "entering")
     expect(leaving, MoistAir, "leaving")
