@@ -154,20 +154,24 @@ fn first_crossing<S: Scalar>(air: &MoistAir<S>, enthalpy: S, fraction: S) -> Opt
     let (h1, w1) = parts(air);
     let pressure = air.pressure().pascals();
     with_mixture!(air.formulation(), S, M => {
-        // x − φ x_ws after adding s: negative while the air can take more. `None` beyond the range of states.
+        // x − φ x_ws after adding s: negative while the air can take more. `None` where the air gets too hot.
         let excess = |s: S| {
             let ratio = w1 + s;
             let celsius = temperature_of_enthalpy::<M<S>, S>(h1 + s * enthalpy, pressure, ratio);
             let (coldest, warmest) = Quantity::DryBulb.limits();
-            if !(k::<S>(coldest) <= celsius && celsius <= k(warmest)) {
+            if !(celsius <= k(warmest)) {
                 return None;
             }
-            let saturated = M::<S>::at(celsius).saturation(pressure, Surface::Stable).mole_fraction;
+            let saturated = M::<S>::at(celsius.at_least(k(coldest))).saturation(pressure, Surface::Stable).mole_fraction;
             // Where nothing saturates there is no relative humidity to reach.
             let excess = <M<S> as Mixture<S>>::mole_fraction(ratio) - fraction * saturated;
             Some(S::select(saturates(saturated), excess, k(-1.0)))
         };
-        if excess(k(0.0))? >= k(0.0) {
+        let start = air.dry_bulb().celsius();
+        let saturated = M::<S>::at(start).saturation(pressure, Surface::Stable).mole_fraction;
+        // To rounding: saturated air takes none.
+        let close = k::<S>(1.0) - S::epsilon() * k(64.0);
+        if saturates(saturated) && <M<S> as Mixture<S>>::mole_fraction(w1) >= fraction * saturated * close {
             return Some(k(0.0));
         }
         let most = k::<S>(Quantity::HumidityRatio.limits().1) - w1;

@@ -177,3 +177,6 @@ fn capacity<S: Scalar>(air: &MoistAir<S>, celsius: S) -> S {
     let pressure = air.pressure().pascals();
     with_mixture!(air.formulation(), S, M => greatest_humidity_ratio(&M::<S>::at(celsius), celsius, pressure))
 }
+
+#[cfg(test)]
+mod tests;

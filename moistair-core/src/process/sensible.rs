@@ -1,6 +1,6 @@
 //! Heating and cooling at constant humidity ratio.
 
-use super::{AirStream, Exchange, capacity, parts};
+use super::{AirStream, Exchange, capacity, infeasible, parts};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
@@ -62,7 +62,14 @@ pub fn with_heat<S: Scalar>(entering: &AirStream<S>, heat: HeatFlow<S>) -> Resul
     // Rounding never turns a little heat into cooling, nor saturated air into fog.
     let start = air.dry_bulb().celsius();
     let celsius = if watts > k(0.0) { solved.at_least(start) } else { solved.at_most(start) };
-    Ok(Sensible { leaving: entering.with_air(at_same_ratio(&air, celsius)?), exchange })
+    at_same_ratio(&air, celsius).map(|air| Sensible { leaving: entering.with_air(air), exchange }).map_err(|_| {
+        let (coldest, warmest) = (coldest_without_condensate(&air), Quantity::LeavingTemperature.limits().1);
+        let heat_to = |celsius: f64| {
+            let end = MoistAir::assemble(k(celsius), air.pressure().pascals(), ratio, air.formulation());
+            entering.dry_air_flow * (parts(&end).0 - enthalpy)
+        };
+        infeasible(Quantity::HeatFlow, watts, heat_to(coldest), heat_to(warmest))
+    })
 }
 
 /// The air at another temperature and the same humidity ratio, refused beyond saturation.
@@ -77,12 +84,14 @@ pub(super) fn at_same_ratio<S: Scalar>(air: &MoistAir<S>, celsius: S) -> Result<
     Err(Error::Infeasible {
         quantity: Quantity::LeavingTemperature,
         value: celsius.to_f64(),
-        min: coldest_without_condensate(air).unwrap_or(coldest),
+        min: coldest_without_condensate(air),
         max: warmest,
     })
 }
 
-fn coldest_without_condensate<S: Scalar>(air: &MoistAir<S>) -> Option<f64> {
-    let dew_point = air.dew_point().map(|dew| dew.celsius().to_f64());
-    dew_point.or_else(|_| air.frost_point().map(|frost| frost.celsius().to_f64())).ok()
+/// The dew point, the frost point below −40 °C, the end of the range below that.
+fn coldest_without_condensate<S: Scalar>(air: &MoistAir<S>) -> f64 {
+    let dew_point = air.dew_point().map(|dew| dew.celsius());
+    let coldest = dew_point.or_else(|_| air.frost_point().map(|frost| frost.celsius()));
+    coldest.map_or(f64::NEG_INFINITY, Scalar::to_f64).max(Quantity::LeavingTemperature.limits().0)
 }

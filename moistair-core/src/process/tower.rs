@@ -163,31 +163,38 @@ pub fn with_air_flow<S: Scalar>(
     let (h1, w1) = parts(&air);
     // h₂ − W₂ h_w2 that the leaving air must have.
     let target = (h1 - w1 * side.cold) + side.heat / flow;
-    let (lowest, warmest) = (k::<S>(Quantity::DewPoint.limits().0), k::<S>(Quantity::DryBulb.limits().1));
-    let (celsius, ratio) = with_mixture!(air.formulation(), S, M => {
+    // It leaves no warmer than the hot water.
+    let (coldest, warmest) = (k::<S>(Quantity::DewPoint.limits().0), k::<S>(Quantity::DryBulb.limits().1));
+    let warmest = warmest.at_most(water.hot.celsius());
+    let leaving = with_mixture!(air.formulation(), S, M => {
+        // What saturated air has beyond the target, the slope of that, and the humidity ratio that is left without it.
         let saturated = |celsius: S| {
             let mixture = M::<S>::at(celsius);
             let saturation = mixture.saturation(pressure, Surface::Liquid);
-            (saturation, mixture.gas(pressure, saturation.humidity_ratio))
+            let ratio = saturation.humidity_ratio;
+            let gas = mixture.gas(pressure, ratio);
+            let latent = gas.enthalpy_of_water - side.cold;
+            let beyond = S::select(
+                saturates(saturation.mole_fraction),
+                gas.enthalpy - ratio * side.cold - target,
+                S::infinity(),
+            );
+            (beyond, gas.specific_heat + ratio * saturation.log_slope * latent, ratio - beyond / latent)
         };
-        let celsius = solve::increasing(lowest, warmest, solve::temperature_resolution(), |celsius| {
-            let (saturation, gas) = saturated(celsius);
-            if !saturates(saturation.mole_fraction) {
-                return (S::infinity(), k(0.0));
-            }
-            let slope = saturation.humidity_ratio * saturation.log_slope;
-            (
-                gas.enthalpy - saturation.humidity_ratio * side.cold - target,
-                gas.specific_heat + slope * (gas.enthalpy_of_water - side.cold),
-            )
-        });
-        (celsius, saturated(celsius).0.humidity_ratio)
+        let within = saturated(coldest).0 <= k(0.0) && saturated(warmest).0 >= k(0.0);
+        within.then(|| {
+            let celsius = solve::increasing(coldest, warmest, solve::temperature_resolution(), |celsius| {
+                let (beyond, slope, _) = saturated(celsius);
+                (beyond, slope)
+            });
+            // What the last unit of the temperature leaves over goes into the vapor, so that the books close.
+            (celsius, saturated(celsius).2)
+        })
     });
     let most = k::<S>(Quantity::HumidityRatio.limits().1);
-    let hot = water.hot.celsius().at_most(warmest);
-    if !(w1 <= ratio && ratio <= most && celsius <= hot && celsius < warmest) {
-        return Err(infeasible(Quantity::LeavingTemperature, celsius, air.dry_bulb().celsius().at_most(hot), hot));
-    }
+    let Some((celsius, ratio)) = leaving.filter(|&(_, ratio)| w1 <= ratio && ratio <= most) else {
+        return Err(infeasible(Quantity::HeatFlow, side.heat, k(0.0), k(Quantity::HeatFlow.limits().1)));
+    };
     side.balance(entering, MoistAir::assemble(celsius, pressure, ratio, air.formulation()), treatment)
 }
 

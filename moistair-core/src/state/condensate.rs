@@ -13,7 +13,10 @@ use super::MoistAir;
 use super::property::{DEW_POINT_STEPS, condensed_heat_capacity, dew_point};
 
 /// Newton steps for the temperature that goes with an enthalpy; see the test of this module.
-pub(crate) const TEMPERATURE_STEPS: usize = 4;
+const TEMPERATURE_STEPS: usize = 4;
+
+/// K. A last step below this has found the temperature: the next would be its square.
+const SETTLED: f64 = 1e-3;
 
 /// Moist air with the liquid water and ice that it carries, each per mass of dry air.
 ///
@@ -154,20 +157,45 @@ pub(crate) fn condensed_enthalpy<S: Scalar>(formulation: Formulation, celsius: S
     with_mixture!(formulation, S, M => <M<S> as Mixture<S>>::condensed_enthalpy(celsius, pressure, surface))
 }
 
-/// Dry bulb, °C, of air with a given enthalpy, pressure and humidity ratio.
+/// Dry bulb, °C, of air with a given enthalpy, pressure and humidity ratio; NaN where the search found none.
+///
+/// Far beyond saturation the equation of the real gas has no meaning, nor has what Newton finds there: its last step tells.
 pub(crate) fn temperature_of_enthalpy<M: Mixture<S>, S: Scalar>(enthalpy: S, pressure: S, humidity_ratio: S) -> S {
-    temperature_after::<M, S, TEMPERATURE_STEPS>(enthalpy, pressure, humidity_ratio)
+    let (celsius, last_step) = search_temperature::<M, S, TEMPERATURE_STEPS>(enthalpy, pressure, humidity_ratio);
+    let settled = k::<S>(SETTLED);
+    if -settled < last_step && last_step < settled { within_states(celsius) } else { S::nan() }
 }
 
-fn temperature_after<M: Mixture<S>, S: Scalar, const STEPS: usize>(enthalpy: S, pressure: S, humidity_ratio: S) -> S {
+/// The temperature after some steps, and the last of them.
+fn search_temperature<M: Mixture<S>, S: Scalar, const STEPS: usize>(
+    enthalpy: S,
+    pressure: S,
+    humidity_ratio: S,
+) -> (S, S) {
     let mut celsius = (enthalpy - humidity_ratio * k(2_501_000.0)) / (humidity_ratio * k(1_860.0) + k(1_006.0));
+    let mut step = S::infinity();
     for _ in 0..STEPS {
         // An enthalpy far outside leads far outside the equations; the caller checks the range.
         celsius = celsius.at_least(k(-120.0)).at_most(k(200.0));
         let gas = M::at(celsius).gas(pressure, humidity_ratio);
-        celsius = celsius - (gas.enthalpy - enthalpy) / gas.specific_heat;
+        step = (gas.enthalpy - enthalpy) / gas.specific_heat;
+        celsius = celsius - step;
     }
-    celsius
+    (celsius, step)
+}
+
+/// The temperature, at an end of the range of states where rounding carried it past.
+fn within_states<S: Scalar>(celsius: S) -> S {
+    let (coldest, warmest) = Quantity::DryBulb.limits();
+    let rounding = solve::temperature_resolution::<S>() * k(32.0);
+    let near = |end: S| end - rounding <= celsius && celsius <= end + rounding;
+    if near(k(coldest)) {
+        k(coldest)
+    } else if near(k(warmest)) {
+        k(warmest)
+    } else {
+        celsius
+    }
 }
 
 /// Saturated air with the rest of a given water condensed, at a trial temperature.
@@ -178,6 +206,8 @@ struct Wet<S> {
     enthalpy: S,
     /// d(enthalpy)/dT.
     slope: S,
+    /// Enthalpy of vapor over that of condensate.
+    latent: S,
 }
 
 impl<S: Scalar> Wet<S> {
@@ -187,14 +217,15 @@ impl<S: Scalar> Wet<S> {
         let (humidity_ratio, condensed) = (saturation.humidity_ratio, saturation.condensed_enthalpy);
         let gas = mixture.gas(pressure, humidity_ratio);
         let surplus = water - humidity_ratio;
-        let ratio_slope = humidity_ratio * saturation.log_slope;
+        let latent = gas.enthalpy_of_water - condensed;
         Self {
             humidity_ratio,
             surplus,
             enthalpy: gas.enthalpy + surplus * condensed,
             slope: gas.specific_heat
-                + ratio_slope * (gas.enthalpy_of_water - condensed)
+                + humidity_ratio * saturation.log_slope * latent
                 + surplus * k(condensed_heat_capacity(surface)),
+            latent,
         }
     }
 }
@@ -210,7 +241,9 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
     let (coldest, warmest) = Quantity::DryBulb.limits();
     let in_range = |celsius: S| k::<S>(coldest) <= celsius && celsius <= k(warmest);
     let dry_bulb = temperature_of_enthalpy::<M, S>(enthalpy, pressure, water);
-    if in_range(dry_bulb) && water <= capacity::<M, S>(dry_bulb, pressure, freezing) {
+    // Saturated to rounding is not fog.
+    let rounding = S::epsilon() * k(1024.0);
+    if in_range(dry_bulb) && water <= capacity::<M, S>(dry_bulb, pressure, freezing) * (rounding + k(1.0)) {
         return Ok(state(dry_bulb, water).into());
     }
     // Wet: saturated air and condensate, warmer than the gas alone would be and no warmer than the dew point of all the water.
@@ -238,27 +271,28 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
         }
     };
     let floor = wet(low, curve);
-    let above_floor = k::<S>(0.0) <= floor.surplus && floor.enthalpy <= enthalpy && !(dry_bulb > k(warmest));
-    let celsius = if above_floor {
-        solve::increasing(low, high, solve::temperature_resolution(), |celsius| {
-            let trial = wet(celsius, curve);
-            (trial.enthalpy - enthalpy, trial.slope)
-        })
-    } else {
-        S::nan()
-    };
-    if !in_range(celsius) {
-        let saturated = capacity::<M, S>(k(warmest), pressure, freezing).at_most(water);
-        let liquid = (water - saturated) * M::condensed_enthalpy(k(warmest), pressure, Surface::Liquid);
-        let least = state(low, floor.humidity_ratio.at_most(water)).specific_enthalpy().joules_per_kilogram();
+    let warmest = k::<S>(warmest);
+    let held = capacity::<M, S>(warmest, pressure, freezing).at_most(water);
+    let liquid = (water - held) * M::condensed_enthalpy(warmest, pressure, Surface::Liquid);
+    let ceiling = state(warmest, held).specific_enthalpy().joules_per_kilogram() + liquid;
+    if !(k::<S>(0.0) <= floor.surplus && floor.enthalpy <= enthalpy && enthalpy <= ceiling) {
+        let dry = state(low, floor.humidity_ratio.at_most(water)).specific_enthalpy().joules_per_kilogram();
         return Err(Error::Infeasible {
             quantity: Quantity::LeavingEnthalpy,
             value: enthalpy.to_f64(),
-            min: floor.enthalpy.at_most(least).to_f64(),
-            max: (state(k(warmest), saturated).specific_enthalpy().joules_per_kilogram() + liquid).to_f64(),
+            min: floor.enthalpy.at_most(dry).to_f64(),
+            max: ceiling.to_f64(),
         });
     }
-    let ratio = wet(celsius, curve).humidity_ratio.at_most(water);
+    let celsius = solve::increasing(low, high, solve::temperature_resolution(), |celsius| {
+        let trial = wet(celsius, curve);
+        (trial.enthalpy - enthalpy, trial.slope)
+    });
+    // What the last unit of the temperature leaves over goes into the vapor, as far as that is rounding, so that the books close.
+    let reached = wet(celsius, curve);
+    let most = reached.humidity_ratio * rounding;
+    let over = ((reached.enthalpy - enthalpy) / reached.latent).at_least(-most).at_most(most);
+    let ratio = (reached.humidity_ratio - over).at_most(water);
     let (air, surplus) = (state(celsius, ratio), water - ratio);
     Ok(match curve {
         Surface::Ice => AirWithCondensate::carrying(air, k(0.0), surplus),
@@ -308,7 +342,7 @@ mod steps {
     fn left_over<const STEPS: usize>() -> f64 {
         fn of<M: Mixture<f64>, const STEPS: usize>() -> f64 {
             let error = |(celsius, pressure, w, gas): (f64, f64, f64, crate::mixture::Gas<f64>)| {
-                (temperature_after::<M, f64, STEPS>(gas.enthalpy, pressure, w) - celsius).abs()
+                (search_temperature::<M, f64, STEPS>(gas.enthalpy, pressure, w).0 - celsius).abs()
             };
             states::<M>().map(error).fold(0.0, |most, error| if error <= most { most } else { error })
         }
@@ -323,5 +357,18 @@ mod steps {
         const BOUND: f64 = 1e-11;
         assert!(left_over::<TEMPERATURE_STEPS>() <= BOUND);
         assert!(left_over::<{ TEMPERATURE_STEPS - 1 }>() > BOUND, "one step fewer does as well: the constant is stale");
+    }
+
+    /// No state is taken for one that the search did not find.
+    #[test]
+    fn every_state_is_found() {
+        fn longest<M: Mixture<f64>>() -> f64 {
+            states::<M>().fold(0.0, |most, (_, pressure, w, gas)| {
+                most.max(search_temperature::<M, f64, TEMPERATURE_STEPS>(gas.enthalpy, pressure, w).1.abs())
+            })
+        }
+        let (real, ideal) = (longest::<RealGas<f64>>(), longest::<IdealGas<f64>>());
+        println!("last step of the temperature: real gas {real:e} K, ideal gas {ideal:e} K");
+        assert!(real.max(ideal) < 0.1 * SETTLED);
     }
 }

@@ -1,0 +1,13 @@
+//! Processes: worked examples with their sources, laws that hold everywhere, facts of the trade, hostile inputs.
+//!
+//! `MOISTAIR_CASES` sets how many random cases each law is tried on (the full form is 10000).
+#![allow(missing_docs)]
+
+#[path = "../../moistair-core/src/checks.rs"]
+#[allow(dead_code)]
+mod checks;
+mod facts;
+mod hostile;
+mod laws;
+mod support;
+mod worked_examples;
