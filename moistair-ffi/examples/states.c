@@ -14,7 +14,7 @@ static int failed(const char *what, int32_t status, const moistair_error *error)
 {
     printf("%s: %s", what, moistair_status_text(status));
     if (error->quantity >= 0)
-        printf(" (%s %g %s, allowed %g to %g)", moistair_quantity_name(error->quantity), error->value,
+        printf(" (%s %g [%s], allowed %g to %g)", moistair_quantity_name(error->quantity), error->value,
                moistair_quantity_unit(error->quantity), error->min, error->max);
     printf("\n");
     return 1;

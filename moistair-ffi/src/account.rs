@@ -122,6 +122,8 @@ pub struct moistair_residuals {
     pub sum_of_scales: f64,
     /// Largest residual relative to its own scale.
     pub largest_relative: f64,
+    /// The same in units of the rounding of numbers, 2^-52: a book of a few terms that closes leaves a few of them.
+    pub largest_in_epsilons: f64,
     /// Sum of residuals over sum of scales; 0 without scales.
     pub relative: f64,
     /// Residuals that were added.
@@ -243,6 +245,7 @@ impl From<&Residuals> for moistair_residuals {
             sum_of_residuals: book.sum_of_residuals(),
             sum_of_scales: book.sum_of_scales(),
             largest_relative: book.largest_relative(),
+            largest_in_epsilons: book.largest_in_epsilons(),
             relative: book.relative(),
             samples: book.samples(),
             refused: book.refused(),
@@ -439,6 +442,28 @@ pub unsafe extern "C" fn moistair_total_read(
     unsafe { answer(values, error, call) }
 }
 
+/// Covered time over a duration that the caller knows: a day, of which a total may have seen a part.
+///
+/// total: a total; duration: [s]; coverage: output [1], 0 for a duration that is not above zero; error: may be null.
+/// Returns 0, 101, 103, 201.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_total_coverage_of(
+    total: *const moistair_total,
+    duration: f64,
+    coverage: *mut f64,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        if !duration.is_finite() {
+            return Err(Failure::NotFinite);
+        }
+        // SAFETY: the caller's pointer.
+        Ok(unsafe { read(total) }?.to_core().coverage_of(duration))
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(coverage, error, call) }
+}
+
 /// Periods of a length, each beginning at a multiple of it, so that hours of Unix time are hours of UTC.
 ///
 /// length: [s], 0.001 to 1e11; rule, longest_step: as for moistair_total_new; periods: output; error: may be null.
@@ -571,7 +596,7 @@ pub unsafe extern "C" fn moistair_books_total_read(
         let total = unsafe { read(total) }?.to_core();
         let (heat, water) = (moistair_residuals::from(total.heat()), moistair_residuals::from(total.water()));
         let of = |book: moistair_residuals| {
-            [book.sum_of_residuals, book.sum_of_scales, book.largest_relative, book.relative]
+            [book.sum_of_residuals, book.sum_of_scales, book.largest_in_epsilons, book.relative]
         };
         let values = moistair_books_total_values { heat, water, closed: total.closed() };
         sound(values, &of(heat), &of(water), true)
@@ -644,5 +669,5 @@ pub unsafe extern "C" fn moistair_deviation_read(
 const _: () = {
     assert!(MOISTAIR_QUALITY_SLOTS == QUALITY_SLOTS && MOISTAIR_REASON_SLOTS == REASON_SLOTS);
     assert!(Quality::ALL.len() <= QUALITY_SLOTS);
-    assert!(core::mem::offset_of!(moistair_period, total) == 8 && size_of::<moistair_residuals>() == 48);
+    assert!(core::mem::offset_of!(moistair_period, total) == 8 && size_of::<moistair_residuals>() == 56);
 };

@@ -27,6 +27,8 @@ pub const MOISTAIR_COIL_FROST: i32 = 2;
 #[repr(C)]
 #[derive(Clone, Copy, Debug)]
 pub struct moistair_cooling {
+    /// The air that enters, as the books have it: moistair_coil_between may have taken a mean humidity ratio.
+    pub entering: moistair_stream,
     /// The air that leaves.
     pub leaving: moistair_stream,
     /// Heat and water into the air, both negative for a wet coil.
@@ -50,6 +52,7 @@ pub struct moistair_cooling {
 impl From<Cooling> for moistair_cooling {
     fn from(done: Cooling) -> Self {
         Self {
+            entering: done.entering.into(),
             leaving: done.leaving.into(),
             exchange: done.exchange.into(),
             cooling_load: done.cooling_load.watts(),
@@ -66,7 +69,7 @@ impl From<Cooling> for moistair_cooling {
 impl Answer for moistair_cooling {
     fn is_finite(&self) -> bool {
         let parts = [self.cooling_load, self.sensible, self.latent, self.condensate];
-        self.leaving.is_finite() && self.exchange.is_finite() && finite(parts)
+        self.entering.is_finite() && self.leaving.is_finite() && self.exchange.is_finite() && finite(parts)
     }
 }
 

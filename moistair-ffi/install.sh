@@ -1,0 +1,24 @@
+#!/bin/sh
+# Builds the C library and installs library, header, pkg-config and CMake files below a prefix.
+#
+#     moistair-ffi/install.sh PREFIX
+set -eu
+
+[ $# -eq 1 ] || { echo "usage: $0 PREFIX" >&2; exit 2; }
+mkdir -p "$1"
+prefix=$(cd "$1" && pwd)
+cd "$(dirname "$0")"
+target=${CARGO_TARGET_DIR:-../target}
+
+cargo build --release -p moistair-ffi --target-dir "$target"
+version=$(sed -n 's/^#define MOISTAIR_VERSION_\(MAJOR\|MINOR\|PATCH\) //p' include/moistair.h | paste -sd.)
+
+mkdir -p "$prefix/include" "$prefix/lib/pkgconfig" "$prefix/lib/cmake/moistair"
+install -m 644 include/moistair.h "$prefix/include/"
+install -m 644 "$target/release/libmoistair.a" "$prefix/lib/"
+install -m 755 "$target/release/libmoistair.so" "$prefix/lib/"
+install -m 644 packaging/moistair-config.cmake "$prefix/lib/cmake/moistair/"
+fill() { sed -e "s|@PREFIX@|$prefix|" -e "s|@VERSION@|$version|" "$1"; }
+fill packaging/moistair.pc.in > "$prefix/lib/pkgconfig/moistair.pc"
+fill packaging/moistair-config-version.cmake.in > "$prefix/lib/cmake/moistair/moistair-config-version.cmake"
+echo "moistair $version installed below $prefix"
