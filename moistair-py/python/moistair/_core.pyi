@@ -11,13 +11,41 @@ from .account import Added, Rule
 from .process.books import Books
 from .signal import Kind, Quality, Reason, Unit
 
+__all__ = [
+    "BooksTotal",
+    "Channel",
+    "ChannelState",
+    "Checked",
+    "CheckedColumns",
+    "Counts",
+    "Deviation",
+    "MoistAir",
+    "NUMERICS_VERSION",
+    "Period",
+    "Periods",
+    "Residuals",
+    "Sum",
+    "Total",
+    "__version__",
+    "code_table",
+    "from_core",
+    "pressure_at_elevation",
+    "quantity_table",
+    "restore_checked",
+    "restore_owned",
+    "restore_period",
+    "restore_state",
+    "run",
+    "to_core",
+]
+
 NUMERICS_VERSION: int
 __version__: str
 
 _Array = NDArray[np.float64]
 _Codes = NDArray[np.int32]
 _T = TypeVar("_T", covariant=True)
-_Formulation = Literal["real_gas", "ideal_gas"]
+_Formulation = Union[Literal["real_gas"], Literal["ideal_gas"]]
 
 @final
 class MoistAir(Generic[_T]):

@@ -4,7 +4,6 @@ from __future__ import annotations
 
 import enum
 from collections.abc import Iterator
-from functools import lru_cache
 from typing import Any, TypeVar, Union, get_args, get_origin, get_type_hints
 
 import numpy as np
@@ -108,10 +107,16 @@ def _flatten(label: str, value: Any, labels: list[str], values: list[Any]) -> No
         values.append(value)
 
 
-@lru_cache(maxsize=None)
 def _fields(record: Any) -> dict[str, Any]:
-    hints = get_type_hints(record)
-    return {name: _kind(hints[name]) for name in record.__dataclass_fields__}
+    """What each field of a class of records is, read from its annotations once."""
+    if record not in _FIELDS:
+        hints = get_type_hints(record)
+        _FIELDS[record] = {name: _kind(hints[name]) for name in record.__dataclass_fields__}
+    return _FIELDS[record]
+
+
+_FIELDS: dict[Any, dict[str, Any]] = {}
+_LAYOUTS: dict[Any, str] = {}
 
 
 def _kind(hint: Any) -> Any:
@@ -122,13 +127,15 @@ def _kind(hint: Any) -> Any:
     return get_args(hint)[0] if origin is Union else origin or hint
 
 
-@lru_cache(maxsize=None)
 def _layout(kind: Any) -> str:
+    """A letter for each number and each state, in the order of the core."""
     if kind is _core.MoistAir:
         return "S"
-    if isinstance(kind, type) and issubclass(kind, Record):
-        return "".join(_layout(field) for field in _fields(kind).values())
-    return "N"
+    if not issubclass(kind, Record):
+        return "N"
+    if kind not in _LAYOUTS:
+        _LAYOUTS[kind] = "".join(_layout(field) for field in _fields(kind).values())
+    return _LAYOUTS[kind]
 
 
 def _build(kind: Any, values: Iterator[Any], status: Status) -> Any:

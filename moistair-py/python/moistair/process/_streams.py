@@ -13,8 +13,8 @@ from .._rows import Array, Record, T, expect, run
 
 __all__ = ["AirStream", "AirWithCondensate", "Exchange", "WetStream", "liquid_water_enthalpy"]
 
-Freezing = Literal["equilibrium", "supercooled"]
-Formulation = Literal["real_gas", "ideal_gas"]
+Freezing = Union[Literal["equilibrium"], Literal["supercooled"]]
+Formulation = Union[Literal["real_gas"], Literal["ideal_gas"]]
 
 _FREEZING = {"equilibrium": 0, "supercooled": 1}
 _FORMULATION = {"real_gas": 0, "ideal_gas": 1}

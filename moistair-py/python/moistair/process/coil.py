@@ -16,7 +16,7 @@ from ._streams import AirStream, Exchange
 __all__ = ["CoilRegime", "Cooling", "between", "by_bypass_factor", "to_state"]
 
 #: What stands for the temperature at which condensate leaves: an assumption that moves the load by 0.5 to 1 %.
-CondensateTemperature = Literal["leaving_air", "apparatus"]
+CondensateTemperature = Union[Literal["leaving_air"], Literal["apparatus"]]
 
 
 def condensate_choice(value: Any) -> tuple[tuple[str, Any], tuple[str, Any]]:
