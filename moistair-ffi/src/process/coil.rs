@@ -165,7 +165,7 @@ pub unsafe extern "C" fn moistair_coil_between(
 }
 
 const _: () = {
-    assert!(size_of::<moistair_cooling>() == 184 && core::mem::offset_of!(moistair_cooling, regime) == 176);
+    assert!(size_of::<moistair_cooling>() == 296 && core::mem::offset_of!(moistair_cooling, regime) == 288);
     assert!(CoilRegime::Dry as i32 == MOISTAIR_COIL_DRY && CoilRegime::Frost as i32 == MOISTAIR_COIL_FROST);
     assert!(CoilRegime::Wet as i32 == MOISTAIR_COIL_WET);
 };

@@ -62,4 +62,4 @@ pub unsafe extern "C" fn moistair_reheat_to_state(
     unsafe { answer(done, error, call) }
 }
 
-const _: () = assert!(size_of::<moistair_reheat>() == 328);
+const _: () = assert!(size_of::<moistair_reheat>() == 440);
