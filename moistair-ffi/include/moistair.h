@@ -631,6 +631,8 @@ typedef struct {
 
 // What a cooling coil did.
 typedef struct {
+    // The air that enters, as the books have it: moistair_coil_between may have taken a mean humidity ratio.
+    moistair_stream entering;
     // The air that leaves.
     moistair_stream leaving;
     // Heat and water into the air, both negative for a wet coil.
@@ -858,6 +860,8 @@ typedef struct {
     double sum_of_scales;
     // Largest residual relative to its own scale.
     double largest_relative;
+    // The same in units of the rounding of numbers, 2^-52: a book of a few terms that closes leaves a few of them.
+    double largest_in_epsilons;
     // Sum of residuals over sum of scales; 0 without scales.
     double relative;
     // Residuals that were added.
@@ -1379,6 +1383,15 @@ int32_t moistair_total_merge(moistair_total *total, const moistair_total *other,
 int32_t moistair_total_read(const moistair_total *total,
                             moistair_total_values *values,
                             moistair_error *error);
+
+// Covered time over a duration that the caller knows: a day, of which a total may have seen a part.
+//
+// total: a total; duration: [s]; coverage: output [1], 0 for a duration that is not above zero; error: may be null.
+// Returns 0, 101, 103, 201 (duration or result not finite).
+int32_t moistair_total_coverage_of(const moistair_total *total,
+                                   double duration,
+                                   double *coverage,
+                                   moistair_error *error);
 
 // Periods of a length, each beginning at a multiple of it, so that hours of Unix time are hours of UTC.
 //

@@ -445,7 +445,7 @@ pub unsafe extern "C" fn moistair_total_read(
 /// Covered time over a duration that the caller knows: a day, of which a total may have seen a part.
 ///
 /// total: a total; duration: [s]; coverage: output [1], 0 for a duration that is not above zero; error: may be null.
-/// Returns 0, 101, 103, 201.
+/// Returns 0, 101, 103, 201 (duration or result not finite).
 #[unsafe(no_mangle)]
 pub unsafe extern "C" fn moistair_total_coverage_of(
     total: *const moistair_total,
@@ -454,11 +454,9 @@ pub unsafe extern "C" fn moistair_total_coverage_of(
     error: *mut moistair_error,
 ) -> i32 {
     let call = || {
-        if !duration.is_finite() {
-            return Err(Failure::NotFinite);
-        }
         // SAFETY: the caller's pointer.
-        Ok(unsafe { read(total) }?.to_core().coverage_of(duration))
+        let coverage = unsafe { read(total) }?.to_core().coverage_of(duration);
+        if duration.is_finite() && coverage.is_finite() { Ok(coverage) } else { Err(Failure::NotFinite) }
     };
     // SAFETY: the caller's pointers.
     unsafe { answer(coverage, error, call) }

@@ -58,8 +58,8 @@ words! {
     moistair_wet_stream, [12], [], [0];
     moistair_exchange, [], [], [];
     moistair_sensible, [12], [], [0];
-    moistair_cooling, [12, 22], [21], [0];
-    moistair_reheat, [12, 22, 23 + 12], [21, 40], [0, 23];
+    moistair_cooling, [12, 26, 36], [35], [0, 14];
+    moistair_reheat, [12, 26, 36, 49], [35, 54], [0, 14, 37];
     moistair_humidified, [12], [], [0];
     moistair_books, [5], [], [];
     moistair_tower_water, [], [], [];
@@ -74,7 +74,7 @@ words! {
     moistair_period, [1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15], [], [];
     moistair_periods, [0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15, 16], [], [];
     moistair_books_total, [0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14], [], [];
-    moistair_books_total_values, [4, 5, 10, 11, 12], [], [];
+    moistair_books_total_values, [5, 6, 12, 13, 14], [], [];
     moistair_deviation, [0, 1, 2, 3, 4, 5, 6, 7], [], [];
     moistair_deviation_values, [4, 5], [0, 1, 2, 3], [];
 }
@@ -488,6 +488,8 @@ fn no_argument_upsets_an_export() {
         (total, c.number(0.0, 1e5), c.number(-1e4, 1e4), c.selector(3), c.optional(&mut added), e));
     run!(change moistair_total_merge: |c, total, e| let other = c.kept(); (total, c.pointer(&other), e));
     run!(exercise moistair_total_read: |c, out, e| let total = c.kept(); (c.pointer(&total), out, e));
+    run!(exercise moistair_total_coverage_of: |c, out, e| let total = c.kept();
+        (c.pointer(&total), c.number(0.0, 1e5), out, e));
     run!(exercise moistair_periods_new: |c, out, e| (c.number(60.0, 3600.0), c.selector(2), c.number(0.0, 1e4), out, e));
     run!(change moistair_periods_add: |c, periods, e| let mut period = c.kept(); let mut finished = 0;
         (periods, c.number(0.0, 1e5), c.number(-1e4, 1e4), c.selector(3), c.place(&mut period), c.place(&mut finished), e));
