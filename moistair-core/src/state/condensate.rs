@@ -241,9 +241,10 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
     let (coldest, warmest) = Quantity::DryBulb.limits();
     let in_range = |celsius: S| k::<S>(coldest) <= celsius && celsius <= k(warmest);
     let dry_bulb = temperature_of_enthalpy::<M, S>(enthalpy, pressure, water);
-    // Saturated to rounding is not fog.
-    let rounding = S::epsilon() * k(1024.0);
-    if in_range(dry_bulb) && water <= capacity::<M, S>(dry_bulb, pressure, freezing) * (rounding + k(1.0)) {
+    // Saturated to rounding is not fog. As much in the mole fraction is more in the humidity ratio where there is little air.
+    let rounding = |ratio: S| ratio * (ratio * k(1.6) + k(1.0)) * S::epsilon() * k(1024.0);
+    let held = capacity::<M, S>(dry_bulb, pressure, freezing);
+    if in_range(dry_bulb) && water <= held + rounding(held) {
         return Ok(state(dry_bulb, water).into());
     }
     // Wet: saturated air and condensate, warmer than the gas alone would be and no warmer than the dew point of all the water.
@@ -290,7 +291,7 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
     });
     // What the last unit of the temperature leaves over goes into the vapor, as far as that is rounding, so that the books close.
     let reached = wet(celsius, curve);
-    let most = reached.humidity_ratio * rounding;
+    let most = rounding(reached.humidity_ratio);
     let over = ((reached.enthalpy - enthalpy) / reached.latent).at_least(-most).at_most(most);
     let ratio = (reached.humidity_ratio - over).at_most(water);
     let (air, surplus) = (state(celsius, ratio), water - ratio);
