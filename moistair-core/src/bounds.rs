@@ -85,7 +85,7 @@ quantities! {
     /// x_w / x_ws over the stable surface: ice below the melting temperature, liquid above. Over ice it may exceed one.
     RelativeHumidity = 12, "relative humidity", "1", 0.0, 1.6;
     /// x_w / x_ws over liquid water, supercooled below the melting temperature (WMO convention).
-    RelativeHumidityOverLiquid = 13, "relative humidity over liquid", "1", 0.0, 1.0;
+    RelativeHumidityOverLiquid = 13, "relative humidity over liquid", "1", 0.0, 1.03;
     /// W / W_s over the stable surface.
     DegreeOfSaturation = 14, "degree of saturation", "1", 0.0, 1.6;
     /// (x_ws − x_w) p over the stable surface.
@@ -175,7 +175,7 @@ impl Quantity {
         )
     }
 
-    /// What a value outside the range looks like, where one slip of the unit is common.
+    /// What a value outside the range, or without a state, looks like, where one slip of the unit is common.
     #[must_use]
     pub fn likely_slip(self, value: f64) -> &'static str {
         match self {
@@ -184,13 +184,15 @@ impl Quantity {
             {
                 "; a percentage? a fraction is expected"
             }
-            Self::HumidityRatio if value > 10.0 => "; grams? kilograms per kilogram of dry air are expected",
+            Self::HumidityRatio if value > 1.0 => "; grams? kilograms per kilogram of dry air are expected",
             Self::Pressure if (80.0..=1_100.0).contains(&value) => {
                 "; kilopascals or hectopascals? pascals are expected"
             }
             Self::Pressure if (2.0..=32.0).contains(&value) => "; bar, psi or inches of mercury? pascals are expected",
             Self::DryBulb if (190.0..=425.0).contains(&value) => "; kelvins? degrees Celsius are expected",
-            Self::SpecificEnthalpy => "; kilojoules? joules per kilogram of dry air are expected",
+            Self::SpecificEnthalpy if value.abs() <= 3_000.0 => {
+                "; kilojoules? joules per kilogram of dry air are expected"
+            }
             _ => "",
         }
     }

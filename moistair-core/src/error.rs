@@ -25,7 +25,7 @@ pub enum Error {
         max: f64,
     },
     /// A value is in its declared range, but no state has it at this dry bulb and pressure.
-    #[error("{} {value} {} has no state here: at this dry bulb and pressure it lies between {min} and {max} {}", .quantity.name(), .quantity.unit(), .quantity.unit())]
+    #[error("{} {value} {} has no state here: at this dry bulb and pressure it lies between {min} and {max} {}{}", .quantity.name(), .quantity.unit(), .quantity.unit(), .quantity.likely_slip(*.value))]
     Unattainable {
         /// Which input.
         quantity: Quantity,

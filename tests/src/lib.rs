@@ -1,4 +1,7 @@
 //! What the tests share. The tests themselves stand in the folders beside: `published/` (check values with their sources),
 //! `properties/`, `process/`, `conformance/` (three faces, same bits), `embedded/`.
 
+#[path = "../../moistair-core/src/checks.rs"]
+pub mod checks;
+pub mod helmholtz_reference;
 pub mod toolchain;

@@ -137,12 +137,22 @@ impl<S: Scalar> MoistAir<S> {
             match settle(ratio, limit) {
                 Some(humidity_ratio) => Ok(inside(humidity_ratio)),
                 None => {
-                    let end = |humidity_ratio: S, missing: f64| {
-                        let view = View { mixture, celsius, pressure, humidity_ratio, gas: mixture.gas(pressure, humidity_ratio) };
-                        view.value(quantity).map_or(missing, Scalar::to_f64)
+                    let end = |humidity_ratio: S| {
+                        View { mixture, celsius, pressure, humidity_ratio, gas: mixture.gas(pressure, humidity_ratio) }
+                            .value(quantity)
+                            .map(Scalar::to_f64)
                     };
                     let (least, most) = quantity.limits();
-                    let (a, b) = (end(k(0.0), least), end(limit, most));
+                    // What has no value rises with the vapor: into its range from below, out of it above. If it is past its range at
+                    // the dry end, or short of it at the other, no state here has it.
+                    let a = match end(k(0.0)) {
+                        Err(Error::NoValue { reason: NoValue::DryAir | NoValue::BelowSurfaceRange, .. }) => least,
+                        other => other?,
+                    };
+                    let b = match end(limit) {
+                        Err(Error::NoValue { reason: NoValue::AboveSurfaceRange, .. }) => most,
+                        other => other?,
+                    };
                     Err(Error::Unattainable { quantity, value: value.to_f64(), min: a.min(b), max: a.max(b) })
                 }
             }
@@ -173,8 +183,10 @@ impl<S: Scalar> MoistAir<S> {
 
 /// The ratio if it lies between dry and saturated, snapped to the ends when rounding carried it past them.
 fn settle<S: Scalar>(ratio: S, limit: S) -> Option<S> {
-    // f32 cannot resolve the tolerance; a few of its own units then stand for it.
-    let tolerance = limit * k::<S>(SATURATION_TOLERANCE).at_least(S::epsilon() * k(8.0));
+    // f32 cannot resolve the tolerance; a few of its own units then stand for it. In very dry air the last bits of a density or an
+    // enthalpy are worth more vapor than that.
+    let bits = S::epsilon() * k(8.0);
+    let tolerance = limit * k::<S>(SATURATION_TOLERANCE).at_least(bits) + bits;
     if !((-tolerance).le(ratio) && ratio.le(limit + tolerance)) {
         return None;
     }

@@ -5,7 +5,7 @@ use std::collections::BTreeMap;
 use std::println;
 
 use super::*;
-use crate::checks::{Row, Table, Tally, half_of_last_decimal};
+use crate::checks::{Table, Tally, half_of_last_decimal};
 
 const MOIST_AIR: &str = include_str!("../../../../tests/published/g8_10_tables13_14_15.csv");
 const VIRIALS: &str = include_str!("../../../../tests/published/g11_15_virial_fugacity.csv");

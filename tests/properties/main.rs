@@ -1,0 +1,8 @@
+//! Laws that states keep over the whole declared domain.
+#![allow(clippy::disallowed_methods, reason = "tests may use the platform's functions")]
+
+mod errors;
+mod hostile;
+mod order;
+mod round_trip;
+mod support;
