@@ -631,7 +631,7 @@ typedef struct {
 
 // What a cooling coil did.
 typedef struct {
-    // The air that enters, as the books have it: moistair_coil_between may have taken a mean humidity ratio.
+    // The air that enters, as the books have it.
     moistair_stream entering;
     // The air that leaves.
     moistair_stream leaving;
@@ -1099,12 +1099,13 @@ int32_t moistair_coil_by_bypass_factor(const moistair_stream *entering,
                                        moistair_cooling *done,
                                        moistair_error *error);
 
-// The coil between two measured states; differences of humidity ratio within a dead band count as noise of the sensors.
+// The coil between two measured states. Differences of humidity ratio within a dead band count as noise of the sensors: the air then keeps
+// the humidity ratio that it enters with, and only what it cannot hold at the leaving temperature condenses.
 //
 // entering: the stream that enters; leaving: the state that leaves; condensate: where the condensate temperature comes from,
 // MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only; dead_band: [kg/kg], 0 to
 // 10; done: output; error: may be null.
-// Returns 0, 1xx, 2xx.
+// Returns 0, 1xx, 2xx, 301 (the leaving air is moister by more than the dead band).
 int32_t moistair_coil_between(const moistair_stream *entering,
                               const moistair_state *leaving,
                               int32_t condensate,

@@ -1,6 +1,8 @@
 //! Columns through C: the same bits as the calls for one state, strides, and what is refused before anything is written.
 
-use std::ptr::{null, null_mut};
+#![allow(clippy::unwrap_used, clippy::indexing_slicing, clippy::float_cmp, reason = "a test")]
+
+use core::ptr::{null, null_mut};
 
 use moistair::*;
 
@@ -9,7 +11,7 @@ const MOST: usize = MOISTAIR_PROPERTY_COUNT as usize;
 const SITE: f64 = 95_000.0;
 
 fn records() -> [[f64; 3]; ROWS] {
-    std::array::from_fn(|i| {
+    core::array::from_fn(|i| {
         let share = i as f64 / ROWS as f64;
         // Every eighth record is damaged.
         [i as f64, 50.0 - 100.0 * share, if i % 8 == 7 { f64::NAN } else { 0.02 + 0.95 * share }]
@@ -77,7 +79,7 @@ fn columns_have_the_bits_of_single_states() {
     let mut good = 0;
     for (row, record) in records.iter().enumerate() {
         let basis = moistair_basis { pressure: SITE, formulation: MOISTAIR_REAL_GAS, reserved: 0 };
-        let mut state = std::mem::MaybeUninit::uninit();
+        let mut state = core::mem::MaybeUninit::uninit();
         let mut single = [f64::NAN; MOST];
         // SAFETY: valid places.
         let code = unsafe {
@@ -168,7 +170,7 @@ fn no_rows_need_no_memory() {
     assert_eq!(call.run(null()), MOISTAIR_OK);
     assert_eq!((report.failed, report.first_failed), (0, 0));
     // No streams either.
-    let mut leaving = std::mem::MaybeUninit::uninit();
+    let mut leaving = core::mem::MaybeUninit::uninit();
     // SAFETY: a valid place.
     assert_eq!(unsafe { moistair_mix(null(), 0, leaving.as_mut_ptr(), null_mut()) }, MOISTAIR_NO_FLOW);
 }

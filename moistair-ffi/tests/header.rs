@@ -2,6 +2,8 @@
 //!
 //! After a change of the interface, write it anew with `MOISTAIR_WRITE_HEADER=1 cargo test -p moistair-ffi --test header`.
 
+#![allow(clippy::unwrap_used, clippy::indexing_slicing, reason = "a test")]
+
 use std::collections::BTreeSet;
 use std::path::{Path, PathBuf};
 use std::process::Command;

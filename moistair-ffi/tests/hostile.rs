@@ -4,7 +4,9 @@
 //!
 //! `MOISTAIR_HOSTILE_CALLS=10000000 cargo test --release -p moistair-ffi --test hostile` takes longer and sees more.
 
-use std::cell::{Cell, RefCell};
+#![allow(clippy::unwrap_used, clippy::indexing_slicing, reason = "a test")]
+
+use core::cell::{Cell, RefCell};
 use std::collections::{BTreeMap, BTreeSet};
 use std::{env, fs};
 
@@ -146,7 +148,8 @@ impl Caller {
             0 => self.special(),
             1 => f64::from_bits(self.bits()),
             2 => self.edge(),
-            _ => 10_f64.powf(self.unit() * 640.0 - 330.0) * if self.below(2) == 0 { 1.0 } else { -1.0 },
+            // Every order of magnitude alike, either sign.
+            _ => f64::from_bits(self.bits() & 0x800F_FFFF_FFFF_FFFF | self.below(0x7FF) << 52),
         }
     }
 
@@ -211,7 +214,7 @@ impl Caller {
 
     fn key<T>() -> usize {
         // The name's address would do, the size and the name's hash are stable.
-        std::any::type_name::<T>().bytes().fold(size_of::<T>(), |sum, byte| sum.wrapping_mul(31) + usize::from(byte))
+        core::any::type_name::<T>().bytes().fold(size_of::<T>(), |sum, byte| sum.wrapping_mul(31) + usize::from(byte))
     }
 
     fn keep<T: Words>(&self, value: &T) {
@@ -241,7 +244,7 @@ impl Caller {
                 humidity,
                 basis,
                 &mut state,
-                std::ptr::null_mut(),
+                core::ptr::null_mut(),
             );
         }
         self.structure(state)
@@ -271,11 +274,11 @@ impl Caller {
 
     /// The pointer, or now and then null or a misaligned one.
     fn pointer<T>(&self, value: &T) -> *const T {
-        let pointer = std::ptr::from_ref(value);
+        let pointer = core::ptr::from_ref(value);
         match self.below(96) {
             0 => {
                 self.broken.set(true);
-                std::ptr::null()
+                core::ptr::null()
             }
             1 if align_of::<T>() > 1 => {
                 self.broken.set(true);
@@ -286,14 +289,14 @@ impl Caller {
     }
 
     fn place<T>(&self, value: &mut T) -> *mut T {
-        let pointer = std::ptr::from_mut(value);
+        let pointer = core::ptr::from_mut(value);
         let shift = self.pointer(value).addr();
-        if shift == 0 { std::ptr::null_mut() } else { pointer.wrapping_byte_add(shift - pointer.addr()) }
+        if shift == 0 { core::ptr::null_mut() } else { pointer.wrapping_byte_add(shift - pointer.addr()) }
     }
 
     /// Null now and then, which an optional place may be.
     fn optional<T>(&self, value: &mut T) -> *mut T {
-        if self.below(4) == 0 { std::ptr::null_mut() } else { std::ptr::from_mut(value) }
+        if self.below(4) == 0 { core::ptr::null_mut() } else { core::ptr::from_mut(value) }
     }
 }
 
@@ -315,7 +318,7 @@ fn accepted_again(name: &str, words: &[u64]) {
     let mut values = [f64::NAN; MOISTAIR_PROPERTY_COUNT as usize];
     let (mut have, always) = (0, 0xFFF);
     // SAFETY: valid places.
-    let status = unsafe { moistair_properties(&state, always, values.as_mut_ptr(), &mut have, std::ptr::null_mut()) };
+    let status = unsafe { moistair_properties(&state, always, values.as_mut_ptr(), &mut have, core::ptr::null_mut()) };
     assert_eq!((status, have), (MOISTAIR_OK, always), "{name}: {state:?}");
     for (value, word) in values.iter().zip(&words[..12]) {
         assert_eq!(value.to_bits(), *word, "{name}: {state:?} {values:?}");
@@ -536,7 +539,7 @@ fn several_outputs(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static st
         let place = caller.place(&mut values).cast();
         let (pointer, bits) = (caller.pointer(&state), caller.optional(&mut have));
         // SAFETY: pointers are valid, null or misaligned.
-        let status = unsafe { moistair_properties(pointer, mask, place, bits, std::ptr::null_mut()) };
+        let status = unsafe { moistair_properties(pointer, mask, place, bits, core::ptr::null_mut()) };
         verdict(caller, "moistair_properties", status, None);
         for (code, value) in values.iter().enumerate() {
             let (asked, found) = (status == MOISTAIR_OK && mask >> code & 1 == 1, have >> code & 1 == 1);
@@ -553,7 +556,7 @@ fn several_outputs(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static st
         let (periods, mut period, mut begun) = (caller.kept(), caller.kept::<moistair_period>(), 0);
         let (periods, period, begun) = (caller.pointer(&periods), caller.place(&mut period), caller.place(&mut begun));
         // SAFETY: pointers are valid, null or misaligned.
-        let status = unsafe { moistair_periods_unfinished(periods, period, begun, std::ptr::null_mut()) };
+        let status = unsafe { moistair_periods_unfinished(periods, period, begun, core::ptr::null_mut()) };
         verdict(caller, "moistair_periods_unfinished", status, None);
         unfinished += u64::from(status == MOISTAIR_OK);
     }
@@ -568,12 +571,9 @@ fn columns(caller: &Caller) -> usize {
     let rows =
         if caller.below(16) == 0 { usize::MAX >> caller.below(3) } else { caller.below(MOST as u64 + 1) as usize };
     let (property, _) = caller.second();
-    let mut inputs = [[0.0; 3 * MOST]; 3];
-    for i in 0..3 * MOST {
-        inputs[0][i] = caller.number(-40.0, 60.0);
-        inputs[1][i] = if property == MOISTAIR_RELATIVE_HUMIDITY { caller.unit() } else { caller.number(0.0, 0.02) };
-        inputs[2][i] = caller.number(7e4, 1.1e5);
-    }
+    let humidity = if property == MOISTAIR_RELATIVE_HUMIDITY { 1.0 } else { 0.02 };
+    let draw = |low, high| -> [f64; 3 * MOST] { core::array::from_fn(|_| caller.number(low, high)) };
+    let inputs = [draw(-40.0, 60.0), draw(0.0, humidity), draw(7e4, 1.1e5)];
     let column = |input: &[f64; 3 * MOST]| {
         let stride = if caller.below(16) == 0 { usize::MAX / 4 } else { caller.below(4) as usize };
         // A stride that large reaches no second row.
@@ -639,7 +639,7 @@ fn texts(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static str, (u64, u
     for (name, function) in all {
         for _ in 0..n {
             // SAFETY: a static text.
-            let text = unsafe { std::ffi::CStr::from_ptr(function(caller.selector(400))) };
+            let text = unsafe { core::ffi::CStr::from_ptr(function(caller.selector(400))) };
             assert!(text.to_str().unwrap().len() < 100, "{name}");
         }
         successes.insert(name, (n, n));

@@ -27,7 +27,7 @@ pub const MOISTAIR_COIL_FROST: i32 = 2;
 #[repr(C)]
 #[derive(Clone, Copy, Debug)]
 pub struct moistair_cooling {
-    /// The air that enters, as the books have it: moistair_coil_between may have taken a mean humidity ratio.
+    /// The air that enters, as the books have it.
     pub entering: moistair_stream,
     /// The air that leaves.
     pub leaving: moistair_stream,
@@ -133,12 +133,13 @@ pub unsafe extern "C" fn moistair_coil_by_bypass_factor(
     unsafe { answer(done, error, call) }
 }
 
-/// The coil between two measured states; differences of humidity ratio within a dead band count as noise of the sensors.
+/// The coil between two measured states. Differences of humidity ratio within a dead band count as noise of the sensors: the air then keeps
+/// the humidity ratio that it enters with, and only what it cannot hold at the leaving temperature condenses.
 ///
 /// entering: the stream that enters; leaving: the state that leaves; condensate: where the condensate temperature comes from,
 /// MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only; dead_band: [kg/kg], 0 to
 /// 10; done: output; error: may be null.
-/// Returns 0, 1xx, 2xx.
+/// Returns 0, 1xx, 2xx, 301 (the leaving air is moister by more than the dead band).
 #[unsafe(no_mangle)]
 pub unsafe extern "C" fn moistair_coil_between(
     entering: *const moistair_stream,
