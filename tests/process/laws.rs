@@ -21,6 +21,7 @@ macro_rules! feasible {
 fn drains() -> impl Strategy<Value = CondensateTemperature> {
     prop_oneof![
         Just(CondensateTemperature::LeavingAir),
+        Just(CondensateTemperature::Apparatus),
         (0.0..30.0).prop_map(|t| CondensateTemperature::Given(celsius(t)))
     ]
 }
@@ -474,5 +475,30 @@ fn monotone() {
             prop_assert!(a < b, "evaporation grows with the range");
         }
         Ok(())
+    });
+}
+
+/// The inverse of the coil by its bypass factor.
+#[test]
+fn apparatus_dew_point_is_found() {
+    check((streams(), -35.0..40.0_f64, 0.0..0.95_f64), |(entering, apparatus, bypass)| {
+        let drain = CondensateTemperature::Apparatus;
+        let done = feasible!(coil::by_bypass_factor(&entering, celsius(apparatus), bypass, drain));
+        if done.condensate.kilograms_per_second() <= 1e-6 * entering.dry_air_flow().kilograms_per_second() {
+            return Err(TestCaseError::reject("a nearly dry coil"));
+        }
+        let leaving = done.leaving.air();
+        let found = coil::apparatus_dew_point(&entering.air(), &leaving).unwrap();
+        let t = found.dew_point.celsius();
+        // A line may meet saturation twice, or drop droplets on its way; the coil's is then the warmer.
+        prop_assert!(t >= apparatus - 1e-6, "{found:?}");
+        if (t - apparatus).abs() < 1e-6 {
+            prop_assert!((found.bypass_factor - bypass).abs() < 1e-6, "{found:?}");
+        }
+        // It leads there again.
+        let again = coil::by_bypass_factor(&entering, found.dew_point, found.bypass_factor, drain).unwrap();
+        let (a, b) = (numbers(&again.leaving.air()), numbers(&leaving));
+        prop_assert!((a.0 - b.0).abs() < 1e-6 && (a.1 / b.1 - 1.0).abs() < 1e-7, "{a:?} {b:?}");
+        holds(&[entering.into()], &again.leaving.into(), &again.exchange)
     });
 }

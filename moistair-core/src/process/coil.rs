@@ -1,5 +1,9 @@
 //! Cooling coils: to a given leaving state, by bypass factor, and between two measured states.
 
+mod apparatus;
+
+pub use apparatus::{Apparatus, apparatus_dew_point};
+
 use super::{AirStream, Exchange, infeasible, parts, same_formulation};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
@@ -18,7 +22,7 @@ pub enum CondensateTemperature<S = f64> {
     /// That of the leaving air, as the handbook's examples take it.
     #[default]
     LeavingAir,
-    /// The apparatus dew point; for a coil known by its bypass factor only.
+    /// The apparatus dew point: the stated one, or that of the line between the states.
     Apparatus,
     /// A stated one.
     Given(Temperature<S>),
@@ -40,7 +44,7 @@ pub enum CoilRegime {
 #[derive(Clone, Copy, Debug, PartialEq)]
 #[must_use]
 pub struct Cooling<S = f64> {
-    /// The air that enters, as the books have it: [`between`] may have taken a mean humidity ratio.
+    /// The air that enters.
     pub entering: AirStream<S>,
     /// The air that leaves.
     pub leaving: AirStream<S>,
@@ -71,7 +75,7 @@ impl<S: Scalar> Cooling<S> {
 ///
 /// # Errors
 /// [`Error::Infeasible`] when the leaving air is moister or warmer than the entering; [`Error::MixedFormulations`];
-/// [`Error::UnknownSelector`] for [`CondensateTemperature::Apparatus`], which this coil has not.
+/// as [`apparatus_dew_point`] for [`CondensateTemperature::Apparatus`].
 ///
 /// ```
 /// use moistair_core::*;
@@ -104,7 +108,7 @@ pub fn to_state<S: Scalar>(
     if ratio > most {
         return Err(infeasible(Quantity::HumidityRatio, ratio, k(0.0), most));
     }
-    let drain = drain_temperature(condensate, celsius, None)?;
+    let drain = drain_between(entering, leaving, condensate)?;
     Ok(account(entering, leaving, drain))
 }
 
@@ -133,7 +137,7 @@ pub fn by_bypass_factor<S: Scalar>(
         ));
     }
     if bypass == k(1.0) {
-        return Ok(account(entering, &air, drain_temperature(condensate, warmest, Some(apparatus))?));
+        return Ok(account(entering, &air, drain_temperature(condensate, warmest, apparatus)?));
     }
     let pressure = air.pressure().pascals();
     let (enthalpy, ratio) = parts(&air);
@@ -158,7 +162,7 @@ pub fn by_bypass_factor<S: Scalar>(
         )?
         .air()
     };
-    let drain = drain_temperature(condensate, leaving.dry_bulb().celsius(), Some(apparatus))?;
+    let drain = drain_temperature(condensate, leaving.dry_bulb().celsius(), apparatus)?;
     let mut cooling = account(entering, &leaving, drain);
     if cooling.regime == CoilRegime::Wet && freezes(&air, apparatus) {
         cooling.regime = CoilRegime::Frost;
@@ -171,7 +175,7 @@ pub fn by_bypass_factor<S: Scalar>(
 /// the leaving air cannot hold at its temperature still condenses.
 ///
 /// # Errors
-/// [`Error::Infeasible`] when the leaving air is moister by more than the dead band; [`Error::MixedFormulations`];
+/// [`Error::Infeasible`] when the leaving air is moister by more than the dead band, and as [`to_state`]; [`Error::MixedFormulations`];
 /// [`Error::OutOfRange`], [`Error::NotFinite`] for the dead band.
 pub fn between<S: Scalar>(
     entering: &AirStream<S>,
@@ -183,15 +187,15 @@ pub fn between<S: Scalar>(
     let dead_band = checked(Quantity::HumidityRatio, dead_band.kilograms_per_kilogram())?;
     let ((_, before), (_, after)) = (parts(&entering.air()), parts(leaving));
     let (celsius, pressure) = (leaving.dry_bulb().celsius(), leaving.pressure().pascals());
-    let drain = drain_temperature(condensate, celsius, None)?;
     if before - after > dead_band {
-        return Ok(account(entering, leaving, drain));
+        return Ok(account(entering, leaving, drain_between(entering, leaving, condensate)?));
     }
     if after - before > dead_band {
         return Err(infeasible(Quantity::HumidityRatio, after, k(0.0), before + dead_band));
     }
-    let held = before.at_most(super::capacity(leaving, celsius));
-    Ok(account(entering, &MoistAir::assemble(celsius, pressure, held, leaving.formulation()), drain))
+    let held =
+        MoistAir::assemble(celsius, pressure, before.at_most(super::capacity(leaving, celsius)), leaving.formulation());
+    Ok(account(entering, &held, drain_between(entering, &held, condensate)?))
 }
 
 fn account<S: Scalar>(entering: &AirStream<S>, leaving: &MoistAir<S>, drain: S) -> Cooling<S> {
@@ -225,18 +229,26 @@ fn account<S: Scalar>(entering: &AirStream<S>, leaving: &MoistAir<S>, drain: S) 
     }
 }
 
-fn drain_temperature<S: Scalar>(
+/// Where condensate leaves a coil between two states; of no matter where there is none.
+fn drain_between<S: Scalar>(
+    entering: &AirStream<S>,
+    leaving: &MoistAir<S>,
     choice: CondensateTemperature<S>,
-    leaving: S,
-    apparatus: Option<S>,
 ) -> Result<S, Error> {
-    match (choice, apparatus) {
-        (CondensateTemperature::LeavingAir, _) => Ok(leaving),
-        (CondensateTemperature::Apparatus, Some(apparatus)) => Ok(apparatus),
-        (CondensateTemperature::Apparatus, None) => Err(Error::UnknownSelector { code: 1 }),
-        (CondensateTemperature::Given(temperature), _) => {
-            checked(Quantity::CondensateTemperature, temperature.celsius())
-        }
+    let celsius = leaving.dry_bulb().celsius();
+    let apparatus = if choice == CondensateTemperature::Apparatus && parts(leaving).1 < parts(&entering.air()).1 {
+        apparatus_dew_point(&entering.air(), leaving)?.dew_point.celsius()
+    } else {
+        celsius
+    };
+    drain_temperature(choice, celsius, apparatus)
+}
+
+fn drain_temperature<S: Scalar>(choice: CondensateTemperature<S>, leaving: S, apparatus: S) -> Result<S, Error> {
+    match choice {
+        CondensateTemperature::LeavingAir => Ok(leaving),
+        CondensateTemperature::Apparatus => Ok(apparatus),
+        CondensateTemperature::Given(temperature) => checked(Quantity::CondensateTemperature, temperature.celsius()),
     }
 }
 
