@@ -537,7 +537,7 @@ and what the last bit of the temperatures is worth. No result: a reading was ref
 const CHANNELS_HEAD: &str = "
 5  Readings
 
-channel              unit  samples    good repaired refused gaps  why
+channel              unit     good repaired refused gaps  why
 ";
 
 /// A value, its width, its decimals.
@@ -758,15 +758,15 @@ fn print_channels(summary: &Summary) {
     print!("{CHANNELS_HEAD}");
     for ((name, channel), counts) in channels().iter().zip(&summary.counts) {
         let unit = channel.unit().map_or("", Unit::text);
-        print!("{name:<20} {unit:<5}{:>8}{:>8}", counts.samples(), counts.quality(Quality::Good));
-        print!("{:>9}{:>8}", counts.quality(Quality::Repaired), counts.quality(Quality::Refused));
-        print!("{:>5}", counts.gaps());
+        let quality = |quality| counts.quality(quality);
+        print!("{name:<20} {unit:<5}{:>8}{:>9}", quality(Quality::Good), quality(Quality::Repaired));
+        print!("{:>8}{:>5}", quality(Quality::Refused), counts.gaps());
         print_reasons(counts);
     }
 }
 
 /// Where the reasons begin after the first.
-const INDENT: usize = 64;
+const INDENT: usize = 56;
 
 /// Every reason on a line of its own, the first on the line of the channel.
 fn print_reasons(counts: &Counts) {
