@@ -507,10 +507,7 @@ owned!(BooksTotal, {
         let columns = arguments.columns()?;
         let columns: [Column<'_>; 5] = columns.try_into().map_err(|_| internal("five columns expected"))?;
         let rows = arguments.rows;
-        Ok(py.detach(|| {
-            (0..rows)
-                .fold(true, |all, row| record(&mut self.0, columns.map(|column| column.get(row).unwrap_or(NAN))) && all)
-        }))
+        Ok(py.detach(|| every(rows, &columns, |numbers| record(&mut self.0, numbers))))
     }
 
     /// Adds one closed pair of books, each with its scale: W and kg/s, or J and kg. False when either was refused. Columns are added
@@ -531,12 +528,7 @@ owned!(BooksTotal, {
         };
         let columns: [Column<'_>; 4] = samples.columns()?;
         let rows = samples.len();
-        Ok(py.detach(|| {
-            (0..rows).fold(true, |all, row| {
-                let [heat, heat_scale, water, water_scale] = columns.map(|column| column.get(row).unwrap_or(NAN));
-                self.0.add(heat, heat_scale, water, water_scale) && all
-            })
-        }))
+        Ok(py.detach(|| every(rows, &columns, |[a, b, c, d]| self.0.add(a, b, c, d))))
     }
 
     /// Adds the books of another time or place; False, and nothing changes, when a sum is not finite.
@@ -598,12 +590,7 @@ owned!(Deviation, {
         };
         let columns: [Column<'_>; 2] = samples.columns()?;
         let rows = samples.len();
-        Ok(py.detach(|| {
-            (0..rows).fold(true, |all, row| {
-                let [measured, computed] = columns.map(|column| column.get(row).unwrap_or(NAN));
-                self.0.add(measured, computed) && all
-            })
-        }))
+        Ok(py.detach(|| every(rows, &columns, |[measured, computed]| self.0.add(measured, computed))))
     }
 
     /// Adds the deviations of another time; False, and nothing changes, when a sum is not finite.
@@ -661,6 +648,12 @@ pub fn restore_owned<'py>(py: Python<'py>, class: &str, byte_order: &str, bytes:
         };
     }
     restore!(ChannelState, Sum, Total, Periods, Counts, Residuals, BooksTotal, Deviation)
+}
+
+/// Does something with each row, whatever became of the others; whether all of it was taken.
+fn every<const N: usize>(rows: usize, columns: &[Column<'_>; N], mut add: impl FnMut([f64; N]) -> bool) -> bool {
+    let refused = (0..rows).filter(|row| !add(columns.map(|column| column.get(*row).unwrap_or(NAN)))).count();
+    refused == 0
 }
 
 const NAMES: [&str; 3] = ["time", "rate", "quality"];

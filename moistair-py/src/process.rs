@@ -6,7 +6,7 @@ use moistair_core::{
     AirWithCondensate, Basis, Density, Error, Formulation, Freezing, HeatFlow, HumidityRatio, MassFlow,
     MoistAir as Air, Pressure, RelativeHumidity, SpecificEnthalpy, Temperature, VolumeFlow, liquid_water_enthalpy,
 };
-use process::coil::{CondensateTemperature, Cooling};
+use process::coil::{Apparatus, CondensateTemperature, Cooling};
 use process::humidify::{Absorption, EvaporatingWater, Humidified};
 use process::sensible::Sensible;
 use process::tower::{TowerBalance, TowerWater, WaterTreatment, WaterUse};
@@ -215,6 +215,7 @@ emit_number!(
     VolumeFlow.cubic_meters_per_second,
     HumidityRatio.kilograms_per_kilogram,
     SpecificEnthalpy.joules_per_kilogram,
+    Temperature.celsius,
     TemperatureDifference.kelvins
 );
 
@@ -236,6 +237,7 @@ emit_fields! {
     Sensible, |x| x.leaving, x.exchange;
     Cooling, |x| x.entering, x.leaving, x.exchange, x.cooling_load, x.sensible, x.latent, x.condensate, f64::from(x.regime as i32),
         x.sensible_heat_ratio();
+    Apparatus, |x| x.dew_point, x.bypass_factor;
     reheat::Reheat, |x| x.cooling, x.heating, x.reheat(), x.reheat_fraction();
     mixing::Mixed, |x| x.leaving, x.exchange;
     Humidified, |x| x.leaving, x.exchange, x.evaporated, x.carried;
@@ -294,6 +296,7 @@ processes! {
     "coil.by_bypass_factor", |r| {
         coil::by_bypass_factor(&r.stream()?, r.temperature()?, r.number()?, r.condensate_temperature()?)?
     };
+    "coil.apparatus_dew_point", |r| coil::apparatus_dew_point(&r.air()?, &r.air()?)?;
     "coil.between", |r| coil::between(&r.stream()?, &r.air()?, r.condensate_temperature()?, r.humidity_ratio()?)?;
     "reheat.to_state", |r| {
         reheat::to_state(&r.stream()?, &r.air()?, r.relative_humidity()?, r.condensate_temperature()?)?

@@ -87,8 +87,9 @@ pub enum Content {
 ///     Not exactly one second property, or something that is not a number.
 /// ValueError
 ///     Shapes that do not match, an unknown formulation.
-/// NotFiniteError, OutOfRangeError, UnattainableError
-///     One state that cannot be made.
+/// NotFiniteError, OutOfRangeError, UnattainableError, NoValueError
+///     One state that cannot be made: an argument that is no number, is out of range, is beyond what the air can hold, or has no
+///     meaning there, as a relative humidity above boiling.
 ///
 /// Examples
 /// --------

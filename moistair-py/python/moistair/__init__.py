@@ -20,7 +20,6 @@ from ._errors import (
     NoValueError,
     OutOfRangeError,
     ProcessError,
-    SupersaturatedError,
     UnattainableError,
     UnknownNameError,
 )
@@ -38,7 +37,6 @@ __all__ = [
     "OutOfRangeError",
     "ProcessError",
     "Quantity",
-    "SupersaturatedError",
     "UnattainableError",
     "UnknownNameError",
     "__version__",

@@ -30,7 +30,7 @@ def broadcast(names: Sequence[str], values: Sequence[Any]) -> tuple[tuple[int, .
     arrays = [numbers(name, value) for name, value in zip(names, values)]
     try:
         shape = np.broadcast_shapes(*(array.shape for array in arrays))
-    except ValueError:
+    except (ValueError, RuntimeError):  # the latter beyond the dimensions that NumPy broadcasts
         shapes = ", ".join(f"{name} {array.shape}" for name, array in zip(names, arrays) if array.ndim)
         raise ValueError(f"shapes do not match: {shapes}") from None
     return shape, [_spread(array, shape) for array in arrays]

@@ -11,7 +11,6 @@ __all__ = [
     "NotFiniteError",
     "OutOfRangeError",
     "ProcessError",
-    "SupersaturatedError",
     "UnattainableError",
     "UnknownNameError",
 ]
@@ -84,10 +83,6 @@ class UnattainableError(MoistAirError):
     """An input is in its range, but no state has it at this dry bulb and pressure."""
 
 
-class SupersaturatedError(MoistAirError):
-    """The result would hold more vapor than saturation allows."""
-
-
 class NoValueError(MoistAirError):
     """The state is valid, but this property has no meaning there."""
 
@@ -105,7 +100,6 @@ _CLASSES: dict[int, type[MoistAirError]] = {
     201: NotFiniteError,
     202: OutOfRangeError,
     203: UnattainableError,
-    204: SupersaturatedError,
     205: ProcessError,
     206: ProcessError,
     207: ProcessError,

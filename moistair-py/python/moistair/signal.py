@@ -8,7 +8,7 @@ from __future__ import annotations
 
 import enum
 
-from ._core import Channel, ChannelState, Checked, CheckedColumns, from_core, to_core
+from ._core import Channel, ChannelState, Checked, CheckedColumns, code_table, from_core, to_core
 
 __all__ = [
     "Channel",
@@ -24,7 +24,19 @@ __all__ = [
 ]
 
 
-class Kind(enum.IntEnum):
+_TEXTS = {(kind, code): text for kind, _, code, text in code_table()}
+
+
+class _Coded(enum.IntEnum):
+    """A code of the core."""
+
+    @property
+    def text(self) -> str:
+        """In words, lower case; the symbol of a unit."""
+        return _TEXTS[type(self).__name__, int(self)]
+
+
+class Kind(_Coded):
     """What a channel carries; the value that leaves a check is in the unit of the core, named with each."""
 
     TEMPERATURE = 1
@@ -53,7 +65,7 @@ class Kind(enum.IntEnum):
     """Specific enthalpy."""
 
 
-class Unit(enum.IntEnum):
+class Unit(_Coded):
     """The unit of a raw signal, or of a value that is shown."""
 
     CELSIUS = 1
@@ -116,7 +128,7 @@ class Unit(enum.IntEnum):
     """kJ/kg"""
 
 
-class Quality(enum.IntEnum):
+class Quality(_Coded):
     """How far a sample can be trusted. The order is the order of severity."""
 
     GOOD = 0
@@ -127,7 +139,7 @@ class Quality(enum.IntEnum):
     """Refused."""
 
 
-class Reason(enum.IntEnum):
+class Reason(_Coded):
     """Why a sample has the quality that it has.
 
     Those that begin with LOOKS_LIKE are a hint about the wiring or the configuration: the sample is refused, never

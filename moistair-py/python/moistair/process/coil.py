@@ -13,7 +13,7 @@ from .._core import MoistAir
 from .._rows import Array, Record, T, choice, expect, run
 from ._streams import AirStream, Exchange
 
-__all__ = ["CoilRegime", "Cooling", "between", "by_bypass_factor", "to_state"]
+__all__ = ["Apparatus", "CoilRegime", "Cooling", "apparatus_dew_point", "between", "by_bypass_factor", "to_state"]
 
 #: What stands for the temperature at which condensate leaves: an assumption that moves the load by 0.5 to 1 %.
 CondensateTemperature = Union[Literal["leaving_air"], Literal["apparatus"]]
@@ -99,9 +99,9 @@ def to_state(
         The air that enters.
     leaving : MoistAir
         State that leaves.
-    condensate_temperature : 'leaving_air', float or array_like
+    condensate_temperature : 'leaving_air', 'apparatus', float or array_like
         Temperature at which the condensate leaves, °C; that of the leaving air by default, as the handbook's examples
-        take it.
+        take it. That of the apparatus is the one of `apparatus_dew_point`.
 
     Returns
     -------
@@ -110,7 +110,7 @@ def to_state(
     Raises
     ------
     InfeasibleError
-        The leaving air is moister or warmer than the entering.
+        The leaving air is moister or warmer than the entering, or has no apparatus dew point where that is asked for.
     ProcessError
         States of different formulations.
     NotFiniteError, OutOfRangeError
@@ -196,6 +196,63 @@ def by_bypass_factor(
     )
 
 
+@dataclass(frozen=True, eq=False, init=False)
+class Apparatus(Record, Generic[T]):
+    """A coil by its bypass.
+
+    Attributes
+    ----------
+    dew_point : float or numpy.ndarray
+        Where the line from the entering through the leaving air meets saturation, °C.
+    bypass_factor : float or numpy.ndarray
+        The share of the air that seems to pass untouched; 0 for air that leaves saturated.
+    """
+
+    dew_point: T
+    bypass_factor: T
+
+
+@overload
+def apparatus_dew_point(entering: MoistAir[float], *, leaving: MoistAir[float]) -> Apparatus[float]: ...
+@overload
+def apparatus_dew_point(entering: MoistAir[Any], *, leaving: MoistAir[Any]) -> Apparatus[Array]: ...
+def apparatus_dew_point(entering: MoistAir[Any], *, leaving: MoistAir[Any]) -> Apparatus[Any]:
+    """The apparatus dew point and bypass factor that take the entering to the leaving air, the inverse of `by_bypass_factor`.
+
+    The line is straight in enthalpy and humidity ratio. It meets the saturation curve once, twice or not at all; the warmer
+    meeting is the coil's.
+
+    Parameters
+    ----------
+    entering, leaving : MoistAir
+        The air on both sides.
+
+    Returns
+    -------
+    Apparatus
+
+    Raises
+    ------
+    InfeasibleError
+        Nothing condenses, the air leaves warmer, or the line misses saturation, as lines of much dehumidifying do: such a
+        state takes a coil and reheat.
+    ProcessError
+        States of different formulations.
+
+    Examples
+    --------
+    >>> from moistair import MoistAir
+    >>> from moistair.process import coil
+    >>> entering = MoistAir(dry_bulb=27.0, relative_humidity=0.5, pressure=101_325.0)
+    >>> leaving = MoistAir(dry_bulb=13.0, relative_humidity=0.95, pressure=101_325.0)
+    >>> round(coil.apparatus_dew_point(entering, leaving=leaving).dew_point, 1)
+    11.9
+    """
+    expect(entering, MoistAir, "entering")
+    expect(leaving, MoistAir, "leaving")
+    return run("coil.apparatus_dew_point", Apparatus, ("entering", entering), ("leaving", leaving))
+
+
 @overload
 def between(
     entering: AirStream[float],
@@ -233,7 +290,7 @@ def between(
         The air that leaves, as measured.
     dead_band : float or array_like
         kg/kg.
-    condensate_temperature : 'leaving_air', float or array_like
+    condensate_temperature : 'leaving_air', 'apparatus', float or array_like
         Temperature at which the condensate leaves, °C.
 
     Returns

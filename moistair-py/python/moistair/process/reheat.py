@@ -73,7 +73,7 @@ def to_state(
         State to be reached.
     coil_leaving_relative_humidity : float or array_like
         Fraction, 0.2 to 1; 1 for full contact, 0.90 to 0.95 is common practice (no source).
-    condensate_temperature : 'leaving_air', float or array_like
+    condensate_temperature : 'leaving_air', 'apparatus', float or array_like
         Temperature at which the condensate leaves, °C.
 
     Returns

@@ -1,0 +1,149 @@
+"""Odd numbers in every argument of every call: an error of this package or a defined result, never a crash or a panic.
+
+A panic of the core would come as a `BaseException`, which nothing here expects. MOISTAIR_FUZZ is the number of calls of each kind.
+"""
+
+import inspect
+
+import moistair
+import numpy as np
+import pytest
+from moistair import MoistAir, account, signal
+from moistair.process import AirStream, AirWithCondensate, WetStream, books, coil, humidify, mixing, reheat, sensible, tower
+from moistair.process import liquid_water_enthalpy
+from support import FORMULATIONS, FUZZ, SEA_LEVEL, SECOND, odd_numbers, random
+
+
+def check_state(air):
+    for name in moistair.PROPERTIES:
+        try:
+            value = getattr(air, name)
+        except moistair.NoValueError:
+            continue
+        assert np.isfinite(value), (air, name, value)
+
+
+@pytest.mark.parametrize("formulation", FORMULATIONS)
+@pytest.mark.parametrize("name", SECOND)
+def test_states(name, formulation):
+    rng = random(31)
+    near = {"dry_bulb": 20.0, "pressure": SEA_LEVEL}
+    for _ in range(FUZZ // 4):
+        t, x, p = (float(number) for number in odd_numbers(rng, 3))
+        # Two ordinary arguments get a call past the first checks.
+        t, p = (t, near["pressure"]) if rng.random() < 0.5 else (near["dry_bulb"], p)
+        try:
+            air = MoistAir(dry_bulb=t, pressure=p, formulation=formulation, **{name: x})
+        except moistair.MoistAirError as error:
+            assert error.code in (201, 202, 203, 310, 311, 312, 313)
+            continue
+        check_state(air)
+    t, x, p = (odd_numbers(rng, FUZZ) for _ in range(3))
+    t, p = np.where(rng.random(FUZZ) < 0.7, 20.0, t), np.where(rng.random(FUZZ) < 0.7, SEA_LEVEL, p)
+    many = MoistAir(dry_bulb=t, pressure=p, formulation=formulation, **{name: x})
+    good = many.status == 0
+    assert many.failed == np.count_nonzero(~good)
+    for values in many.properties(*moistair.PROPERTIES).values():
+        assert np.isnan(values[~good]).all() and not np.isinf(values).any()
+
+
+def streams(rng, count):
+    t, rh = rng.uniform(-60.0, 120.0, count), rng.uniform(0.0, 0.9, count)
+    flow = np.abs(odd_numbers(rng, count))
+    return AirStream(MoistAir(dry_bulb=t, relative_humidity_over_liquid=rh, pressure=SEA_LEVEL), dry_air_flow=flow)
+
+
+def arguments(function, rng, count):
+    """Odd numbers for the numbers of a process, states and streams for the rest."""
+    positional, keywords = [], {}
+    state_names = {"leaving", "target", "air"}
+    for name, parameter in inspect.signature(function).parameters.items():
+        if parameter.kind is inspect.Parameter.VAR_POSITIONAL:
+            positional.extend(streams(rng, count) for _ in range(3))
+        elif name == "entering":
+            whole = streams(rng, count)
+            positional.append(whole.air if function in (tower.with_leaving_air, coil.apparatus_dew_point) else whole)
+        elif name == "part":
+            keywords[name] = streams(rng, count)
+        elif name in state_names:
+            keywords[name] = streams(rng, count).air
+        elif name in ("freezing", "formulation"):
+            continue
+        else:
+            keywords[name] = odd_numbers(rng, count)
+    return positional, keywords
+
+
+PROCESSES = [
+    getattr(module, name)
+    for module in (coil, humidify, mixing, reheat, sensible, tower)
+    for name in module.__all__
+    if name[0].islower()
+]
+PROCESSES += [liquid_water_enthalpy, AirWithCondensate.from_enthalpy_and_water]
+
+
+@pytest.mark.parametrize("function", PROCESSES, ids=lambda function: f"{function.__module__}.{function.__name__}")
+def test_processes(function):
+    rng = random(32)
+    positional, keywords = arguments(function, rng, FUZZ)
+    many = function(*positional, **keywords)
+    if isinstance(many, np.ndarray):
+        assert many.shape == (FUZZ,)
+        return
+    assert many.status.shape == (FUZZ,)
+    allowed = {0, 102, 201, 202, 203, 204, 205, 206, 207, 301, 310, 311, 312, 313}
+    assert set(np.unique(many.status).tolist()) <= allowed
+    assert many.failed == np.count_nonzero(many.status)
+
+
+def test_books_of_anything():
+    rng = random(33)
+    entering, leaving = streams(rng, FUZZ), streams(rng, FUZZ)
+    exchange = sensible.with_heat(streams(rng, FUZZ), heat=odd_numbers(rng, FUZZ)).exchange
+    assert books.balance([entering], leaving=leaving, exchange=exchange).close.shape == (FUZZ,)
+
+
+def test_wet_streams_of_anything():
+    rng = random(34)
+    air = streams(rng, FUZZ).air
+    wet = AirWithCondensate(air, liquid=odd_numbers(rng, FUZZ), ice=odd_numbers(rng, FUZZ))
+    mixed = mixing.adiabatic(WetStream(wet, dry_air_flow=odd_numbers(rng, FUZZ)), streams(rng, FUZZ))
+    assert mixed.status.shape == (FUZZ,)
+
+
+def test_signals_and_totals():
+    rng = random(35)
+    for _ in range(max(FUZZ // 10, 3)):
+        numbers = [float(number) for number in odd_numbers(rng, 6)]
+        channel = signal.Channel(
+            kind=int(rng.integers(1, 10)),
+            unit=int(rng.integers(1, 23)),
+            minimum=numbers[0],
+            maximum=numbers[1],
+            interval=numbers[2],
+            hold=numbers[3],
+            stuck_samples=int(rng.integers(0, 5)),
+            stuck_resolution=numbers[4],
+            reference_resolution=numbers[5],
+        )
+        time, raw, rate = (odd_numbers(rng, 200) for _ in range(3))
+        checked = channel.check(signal.ChannelState(), time=time, raw=raw, reference=rate)
+        used = checked.quality != signal.Quality.REFUSED
+        assert np.isfinite(checked.value[used]).all() and np.isnan(checked.value[~used]).all()
+        total = account.Total(rule=int(rng.integers(0, 2)), longest_step=numbers[2])
+        total.add(time=time, rate=rate, quality=checked.quality)
+        assert np.isfinite([total.total, total.positive, total.negative, total.coverage]).all()
+        periods = account.Periods(length=numbers[3], rule=0, longest_step=numbers[4])
+        periods.add(time=time, rate=rate, quality=checked.quality)
+        counts = account.Counts()
+        counts.record(checked)
+        assert counts.samples == 200
+        signal.to_core(raw, unit=channel.unit)
+        signal.from_core(raw, unit=channel.unit)
+        moistair.pressure_at_elevation(raw)
+        for value in raw[:20].tolist():
+            try:
+                moistair.pressure_at_elevation(value)
+            except moistair.MoistAirError as error:
+                assert error.code in (201, 202)

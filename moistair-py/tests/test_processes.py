@@ -1,0 +1,280 @@
+"""Processes: one row and many, the books, choices, and objects."""
+
+import dataclasses
+import pickle
+
+import moistair
+import numpy as np
+import pytest
+from moistair import MoistAir
+from moistair.process import (
+    AirStream,
+    AirWithCondensate,
+    WetStream,
+    books,
+    coil,
+    humidify,
+    liquid_water_enthalpy,
+    mixing,
+    reheat,
+    sensible,
+    tower,
+)
+from moistair._rows import Record
+from support import SEA_LEVEL, same_bits
+
+RNG = np.random.default_rng(7)
+ROWS = 12
+STEAM = 2_691_070.0
+
+
+def stream(t, rh, flow, **more):
+    return AirStream(MoistAir(dry_bulb=t, relative_humidity=rh, pressure=SEA_LEVEL, **more), dry_air_flow=flow)
+
+
+def state(t, rh, **more):
+    return MoistAir(dry_bulb=t, relative_humidity=rh, pressure=SEA_LEVEL, **more)
+
+
+WATER = {"hot_water": 35.0, "cold_water": 27.0, "drift_fraction": 1e-4, "cycles_of_concentration": 4.0}
+
+#: Each process as a function of three columns: dry bulb, relative humidity, and a share between 0 and 1.
+CASES = {
+    "stream": lambda t, rh, x: stream(t, rh, 1.0 + x),
+    "stream.volume": lambda t, rh, x: AirStream.from_volume_flow(state(t, rh), volume_flow=1.0 + x),
+    "stream.standard": lambda t, rh, x: AirStream.from_standard_volume_flow(
+        state(t, rh), volume_flow=1.0 + x, reference_density=1.2
+    ),
+    "wet_air": lambda t, rh, x: AirWithCondensate(state(t, rh), liquid=x * 1e-3),
+    "wet_stream": lambda t, rh, x: WetStream(state(t, rh), dry_air_flow=1.0 + x),
+    "wet_air.equilibrium": lambda t, rh, x: AirWithCondensate.from_enthalpy_and_water(
+        specific_enthalpy=state(t, rh).specific_enthalpy, total_water=0.02 + 0.01 * x, pressure=SEA_LEVEL
+    ),
+    "liquid_water_enthalpy": lambda t, rh, x: liquid_water_enthalpy(water_temperature=t + 0.0 * rh, pressure=SEA_LEVEL + x),
+    "sensible.to_temperature": lambda t, rh, x: sensible.to_temperature(stream(t, rh, 1.0), leaving_temperature=t + 10 * x),
+    "sensible.with_heat": lambda t, rh, x: sensible.with_heat(stream(t, rh, 1.0 + x), heat=5e3 * x),
+    "coil.to_state": lambda t, rh, x: coil.to_state(stream(t, rh, 1.0 + x), leaving=state(5.0, 0.9)),
+    "coil.to_state.given": lambda t, rh, x: coil.to_state(
+        stream(t, rh, 2.0), leaving=state(5.0, 0.9), condensate_temperature=3.0 + x
+    ),
+    "coil.by_bypass_factor": lambda t, rh, x: coil.by_bypass_factor(
+        stream(t, rh, 2.0), apparatus_dew_point=6.0, bypass_factor=x, condensate_temperature="apparatus"
+    ),
+    "coil.apparatus_dew_point": lambda t, rh, x: coil.apparatus_dew_point(state(t, rh), leaving=state(12.0 + x, 0.95)),
+    "coil.between": lambda t, rh, x: coil.between(stream(t, rh, 2.0 + x), leaving=state(5.0, 0.9), dead_band=1e-4),
+    "reheat.to_state": lambda t, rh, x: reheat.to_state(
+        stream(t, rh, 2.0), target=state(18.0, 0.3), coil_leaving_relative_humidity=0.9 + 0.1 * x
+    ),
+    "mixing.adiabatic": lambda t, rh, x: mixing.adiabatic(stream(t, rh, 1.0), stream(-10.0, 0.8, 0.1 + x), stream(5.0, 0.5, 1.0)),
+    "mixing.adiabatic_at": lambda t, rh, x: mixing.adiabatic_at(
+        stream(t, rh, 1.0), stream(-25.0, 0.8, 2.0 + x), pressure=100e3, freezing="supercooled"
+    ),
+    "mixing.remainder": lambda t, rh, x: mixing.remainder(total_flow=2.0, part=stream(t, rh, x), air=state(20.0, 0.5)),
+    "humidify.saturated_steam_enthalpy": lambda t, rh, x: humidify.saturated_steam_enthalpy(
+        steam_temperature=100.0 + x + 0 * (t + rh)
+    ),
+    "humidify.steam": lambda t, rh, x: humidify.steam(stream(t, rh, 1.0), steam_flow=0.02 * x, steam_enthalpy=STEAM),
+    "humidify.steam_to_humidity_ratio": lambda t, rh, x: humidify.steam_to_humidity_ratio(
+        stream(t, rh, 1.0), humidity_ratio=0.03 + 0.01 * x, steam_enthalpy=STEAM
+    ),
+    "humidify.steam_to_relative_humidity": lambda t, rh, x: humidify.steam_to_relative_humidity(
+        stream(t, rh, 1.0), relative_humidity=0.9 + 0.1 * x, steam_enthalpy=STEAM
+    ),
+    "humidify.steam_limit": lambda t, rh, x: humidify.steam_limit(stream(t, rh, 1.0 + x), steam_enthalpy=STEAM),
+    "humidify.spray": lambda t, rh, x: humidify.spray(stream(t, rh, 1.0), water_flow=0.01 * x, water_temperature=15.0),
+    "humidify.evaporative": lambda t, rh, x: humidify.evaporative(stream(t, rh, 1.0), saturation_effectiveness=0.9 * x),
+    "humidify.evaporative.given": lambda t, rh, x: humidify.evaporative(
+        stream(t, rh, 1.0), saturation_effectiveness=0.5, water_temperature=10.0 + x
+    ),
+    "tower.water_use": lambda t, rh, x: tower.water_use(
+        evaporation=x + 0 * (t + rh), circulating_flow=20.0, drift_fraction=1e-4, cycles_of_concentration=4.0
+    ),
+    "tower.with_air_flow": lambda t, rh, x: tower.with_air_flow(stream(t, rh, 15.0), water_flow=10.0 + x, **WATER),
+    "tower.with_leaving_air": lambda t, rh, x: tower.with_leaving_air(
+        state(t, rh), leaving=state(45.0, 1.0), water_flow=10.0 + x, **WATER
+    ),
+    "books.balance": lambda t, rh, x: books.balance(
+        [stream(t, rh, 1.0 + x)],
+        leaving=sensible.with_heat(stream(t, rh, 1.0 + x), heat=1e3).leaving,
+        exchange=sensible.with_heat(stream(t, rh, 1.0 + x), heat=1e3).exchange,
+    ),
+}
+
+COLUMNS = RNG.uniform(22.0, 38.0, ROWS), RNG.uniform(0.3, 0.6, ROWS), RNG.uniform(0.0, 0.9, ROWS)
+
+
+def leaves(result, path=""):
+    """Every number of a result, states and records taken apart."""
+    if isinstance(result, Record):
+        for field in dataclasses.fields(result):
+            yield from leaves(getattr(result, field.name), f"{path}.{field.name}")
+    elif isinstance(result, MoistAir):
+        for name in ("dry_bulb", "pressure", "humidity_ratio", "specific_enthalpy", "specific_volume"):
+            yield f"{path}.{name}", getattr(result, name)
+    else:
+        yield path, result
+
+
+@pytest.mark.parametrize("name", CASES)
+def test_rows_are_scalar_calls_bit_for_bit(name):
+    case = CASES[name]
+    columns = case(*COLUMNS)
+    many = dict(leaves(columns))
+    compared = 0
+    for row, (t, rh, x) in enumerate(zip(*COLUMNS)):
+        try:
+            one = dict(leaves(case(float(t), float(rh), float(x))))
+        except moistair.MoistAirError as error:
+            assert columns.status[row] == error.code
+            continue
+        assert one.keys() == many.keys()
+        for path, value in one.items():
+            assert isinstance(value, (float, bool, coil.CoilRegime)), path
+            assert np.shape(many[path]) == (ROWS,)
+            assert same_bits(float(many[path][row]), float(value)), (path, row)
+            compared += 1
+    assert compared >= ROWS // 2
+
+
+def test_every_process_is_covered():
+    public = {
+        f"{module.__name__.rpartition('.')[2]}.{name}"
+        for module in (books, coil, humidify, mixing, reheat, sensible, tower)
+        for name in module.__all__
+        if name[0].islower()
+    }
+    assert public <= set(CASES)
+
+
+@pytest.mark.parametrize("formulation", ["real_gas", "ideal_gas"])
+def test_books_close(formulation):
+    t, rh, x = COLUMNS
+    entering = stream(t, rh, 1.0 + x, formulation=formulation)
+    outdoor = stream(-5.0, 0.8, 1.0, formulation=formulation)
+    cold = state(8.0, 0.95, formulation=formulation)
+    for result in (
+        sensible.with_heat(entering, heat=3e3 * x),
+        coil.to_state(entering, leaving=cold),
+        humidify.steam(entering, steam_flow=0.01 * x, steam_enthalpy=STEAM),
+        humidify.spray(entering, water_flow=0.01 * x, water_temperature=20.0),
+    ):
+        book = books.balance([entering], leaving=result.leaving, exchange=result.exchange)
+        assert book.close.dtype == np.bool_ and book.close.all()
+    mixed = mixing.adiabatic(entering, outdoor)
+    assert books.balance([entering, outdoor], leaving=mixed.leaving, exchange=mixed.exchange).close.all()
+    # A book that lacks what was exchanged does not close.
+    heated = sensible.with_heat(entering, heat=1e3)
+    assert not books.balance([entering], leaving=heated.leaving, exchange=mixed.exchange).close.any()
+
+
+def test_a_bad_row_costs_only_itself():
+    t = np.array([30.0, np.nan, 30.0, 30.0])
+    flow = np.array([1.0, 1.0, -1.0, 0.0])
+    entering = stream(t, 0.5, flow)
+    assert entering.status.tolist() == [0, 201, 202, 0] and entering.failed == 2
+    heated = sensible.with_heat(entering, heat=1e3)
+    assert heated.status.tolist() == [0, 201, 202, 207]
+    assert heated.leaving.air.status.tolist() == [0, 201, 202, 207]
+    assert np.isnan(heated.exchange.heat).tolist() == [False, True, True, True]
+    cooled = coil.to_state(entering, leaving=state(10.0, 0.9))
+    assert cooled.regime.tolist() == [1, -1, -1, 0] and cooled.regime.dtype == np.int32
+
+
+def test_nothing_is_fine():
+    none = sensible.with_heat(stream(np.zeros((0, 2)), 0.5, 1.0), heat=1.0)
+    assert none.leaving.air.shape == (0, 2) and none.exchange.heat.shape == (0, 2) and none.failed == 0
+
+
+def test_broadcasting():
+    entering = stream(np.linspace(25.0, 35.0, 3)[:, None], 0.5, 1.0)
+    result = sensible.with_heat(entering, heat=np.array([0.0, 1e3]))
+    assert result.leaving.air.shape == (3, 2) and result.exchange.heat.shape == (3, 2)
+    with pytest.raises(ValueError, match="shapes do not match"):
+        sensible.with_heat(entering, heat=np.zeros((4, 1)))
+
+
+def test_choices():
+    entering, leaving = stream(30.0, 0.5, 1.0), state(10.0, 0.95)
+    with pytest.raises(ValueError, match="condensate_temperature must be 'leaving_air' or 'apparatus'"):
+        coil.to_state(entering, leaving=leaving, condensate_temperature="cold")
+    with pytest.raises(ValueError, match="freezing"):
+        mixing.adiabatic_at(entering, pressure=SEA_LEVEL, freezing="never")
+    with pytest.raises(ValueError, match="water_temperature"):
+        humidify.evaporative(entering, saturation_effectiveness=0.5, water_temperature="warm")
+    default = coil.to_state(entering, leaving=leaving)
+    assert default == coil.to_state(entering, leaving=leaving, condensate_temperature=10.0)
+    assert default != coil.to_state(entering, leaving=leaving, condensate_temperature=5.0)
+    apparatus = coil.apparatus_dew_point(entering.air, leaving=leaving).dew_point
+    drained = coil.to_state(entering, leaving=leaving, condensate_temperature="apparatus")
+    assert drained == coil.to_state(entering, leaving=leaving, condensate_temperature=apparatus)
+
+
+def test_arguments_of_another_class():
+    entering = stream(30.0, 0.5, 1.0)
+    for call in (
+        lambda: sensible.with_heat(entering.air, heat=1.0),
+        lambda: sensible.with_heat(entering, heat=entering),
+        lambda: sensible.with_heat(entering, heat="1"),
+        lambda: sensible.with_heat(entering, heat=None),
+        lambda: sensible.with_heat(entering, heat=entering.air),
+        lambda: coil.to_state(entering, leaving=3.0),
+        lambda: mixing.adiabatic(entering, 1.0),
+        lambda: AirStream(3.0, dry_air_flow=1.0),
+        lambda: WetStream(3.0, dry_air_flow=1.0),
+        lambda: books.balance([entering], leaving=entering, exchange=3.0),
+    ):
+        with pytest.raises(TypeError):
+            call()
+
+
+def test_the_engine_refuses_what_no_wrapper_sends():
+    run = moistair._core.run
+    air = state(20.0, 0.5)
+    with pytest.raises(RuntimeError):
+        run("none", "N", [], [])
+    for many in (1.0, np.ones(3)):
+        with pytest.raises(TypeError):
+            run("sensible.with_heat", "SNNNNN", ["a", "b"], [air, many])
+        with pytest.raises((TypeError, RuntimeError)):
+            run("stream", "N", ["a", "b"], [air, many])
+        with pytest.raises(TypeError):
+            run("wet_air.from_enthalpy_and_water", "SNNNNN", list("abcde"), [4e4, 0.01, 0.5, 1e5, many])
+
+
+def test_records_do_not_change():
+    one, many = stream(30.0, 0.5, 1.0), stream(np.array([30.0, 31.0]), 0.5, 1.0)
+    with pytest.raises(dataclasses.FrozenInstanceError):
+        one.dry_air_flow = 3.0
+    with pytest.raises(ValueError):
+        many.dry_air_flow[0] = 3.0
+    for record in (one, many, coil.to_state(many, leaving=state(10.0, 0.9)), coil.to_state(one, leaving=state(10.0, 0.9))):
+        again = pickle.loads(pickle.dumps(record))
+        assert again == record and repr(record).startswith(type(record).__name__)
+        with pytest.raises(TypeError):
+            hash(record)
+    with pytest.raises(ValueError):
+        again = pickle.loads(pickle.dumps(many))
+        again.dry_air_flow[0] = 3.0
+    assert one != many and one != 3
+
+
+def test_wet_streams_lead_on():
+    fog = mixing.adiabatic(stream(30.0, 0.9, 1.0), stream(-10.0, 0.8, 1.0)).leaving
+    assert fog.air.is_wet is True and fog.air.liquid > 0.0
+    gas = fog.without_condensate
+    assert isinstance(gas, AirStream) and gas.dry_air_flow == 2.0
+    again = mixing.adiabatic(fog)
+    assert again.leaving == fog  # a single stream leaves as it came
+    many = mixing.adiabatic(stream(np.array([30.0, 20.0]), 0.9, 1.0), stream(-10.0, 0.8, 1.0)).leaving
+    assert many.air.is_wet.dtype == np.bool_
+    assert mixing.adiabatic(many, stream(20.0, 0.5, 0.0)).leaving.air.liquid.shape == (2,)
+
+
+def test_outlets_beyond_saturation_by_a_rounding_keep_their_bits():
+    """What saturates at an outlet solved for, read again, pickled, and led on."""
+    t = np.linspace(5.0, 45.0, 400)
+    fog = mixing.adiabatic(stream(t, 0.95, 1.0), stream(-20.0, 0.8, 1.0)).leaving.air
+    again = pickle.loads(pickle.dumps(fog.air))
+    for name in ("humidity_ratio", "specific_enthalpy", "relative_humidity"):
+        assert same_bits(getattr(again, name), getattr(fog.air, name))
+    assert fog.air.failed == 0
