@@ -176,11 +176,12 @@ fn first_crossing<S: Scalar>(air: &MoistAir<S>, enthalpy: S, fraction: S) -> Opt
         }
         let most = k::<S>(Quantity::HumidityRatio.limits().1) - w1;
         let step = ((most / k(CROSSING_LEAST)).ln() / k(f64::from(CROSSING_GRID))).exp();
+        let resolution = S::epsilon() * k(CROSSING_LEAST);
         let (mut below, mut s) = (k::<S>(0.0), k::<S>(CROSSING_LEAST));
         for _ in 0..=CROSSING_GRID {
             if excess(s)? >= k(0.0) {
                 // Zero slope: pure halving, the function has no simple one.
-                return Some(solve::increasing(below, s, k(0.0), |s| (excess(s).unwrap_or(k(1.0)), k(0.0))));
+                return Some(solve::increasing(below, s, resolution, |s| (excess(s).unwrap_or(k(1.0)), k(0.0))));
             }
             below = s;
             s = s * step;

@@ -4,6 +4,7 @@ use super::*;
 use crate::basis::Formulation;
 use crate::checks::Random;
 use crate::mixture::{IdealGas, RealGas};
+use crate::saturation::Surface;
 use std::println;
 
 /// How far, in units of ε T c_p, the enthalpy of a formulation strays from a smooth function of temperature, beyond the 8 ε of its
@@ -37,4 +38,158 @@ fn roughness_of_enthalpy() {
     let (for_real, for_ideal) = (books::resolution(Formulation::RealGas), books::resolution(Formulation::IdealGas));
     assert!(real <= for_real && real > for_real / 2.0, "the allowance is too small, or stale");
     assert!(ideal <= for_ideal);
+}
+
+/// The enthalpy of condensate, J/kg: rougher than that of air, most of all next to the limit of stability of the supercooled liquid.
+#[test]
+fn roughness_of_condensate() {
+    let mut random = Random(2);
+    let ranges = [(Surface::Liquid, -37.0, -20.0), (Surface::Liquid, -20.0, 150.0), (Surface::Ice, -80.0, 0.0)];
+    let rough = ranges.map(|(surface, low, high)| {
+        let mut worst = 0.0_f64;
+        for _ in 0..3_000 {
+            let (celsius, pressure) = (random.between(low, high), random.between(2e4, 1.1e6));
+            let enthalpy = |celsius| <RealGas<f64> as Mixture<f64>>::condensed_enthalpy(celsius, pressure, surface);
+            for step in 1..8 {
+                // 10^-12 K is worth 4e-9 J/kg and hides nothing here.
+                let further = celsius + f64::from(step) * 2.0_f64.powi(-44);
+                worst = worst.max((enthalpy(further) - enthalpy(celsius)).abs() - 4e-9);
+            }
+        }
+        worst
+    });
+    println!("enthalpy of supercooled, cold and warm, ice is rough by {rough:?} J/kg");
+    assert!(rough[0] < 1e-6 && rough[1] < 2e-7 && rough[2] < 1e-8);
+}
+
+/// The most evaluations of one search, over every process and the whole range of states: the published cap is never reached.
+#[test]
+fn evaluations_stay_below_the_cap() {
+    use crate::process::tower::{TowerWater, WaterTreatment};
+    use crate::quantity::{HumidityRatio, SpecificEnthalpy, Temperature};
+    use crate::solve::{ITERATION_CAP, tests::MOST_EVALUATIONS};
+    use crate::state::Freezing;
+
+    MOST_EVALUATIONS.set(0);
+    let mut random = Random(3);
+    let mut worst = [("", 0); 5];
+    let mut note = |slot: usize, name: &'static str| {
+        let taken = MOST_EVALUATIONS.replace(0);
+        if taken > worst[slot].1 {
+            worst[slot] = (name, taken);
+        }
+    };
+    let cases = std::env::var("MOISTAIR_CASES").map_or(1_500, |cases| cases.parse().unwrap());
+    for _ in 0..cases {
+        let formulation = if random.bits() & 1 == 0 { Formulation::RealGas } else { Formulation::IdealGas };
+        let pressure = random.between(2e4_f64.ln(), 1.1e6_f64.ln()).exp();
+        let mut air = || {
+            // Round numbers too: a root at 0 °C is the hardest to halve down to.
+            let celsius = if random.bits() % 4 == 0 { 0.0 } else { random.between(-80.0, 150.0) };
+            let limit = with_mixture!(formulation, f64, M => greatest_humidity_ratio(&M::<f64>::at(celsius), celsius, pressure));
+            let share = random.between(0.0, 1.2).min(1.0);
+            (MoistAir::assemble(celsius, pressure, limit * share, formulation), random.between(0.0, 1.0))
+        };
+        let ((first, x), (second, y)) = (air(), air());
+        let stream = AirStream { air: first, dry_air_flow: 1.0 };
+        let (enthalpy, water) = (parts(&first).0, parts(&first).1 + 0.1 * x * x * x);
+        for freezing in [Freezing::Equilibrium, Freezing::Supercooled] {
+            let _ = AirWithCondensate::from_enthalpy_and_water(
+                SpecificEnthalpy::from_joules_per_kilogram(enthalpy),
+                HumidityRatio::from_kilograms_per_kilogram(water.min(10.0)),
+                freezing,
+                first.basis(),
+            );
+        }
+        note(0, "equilibrium");
+        let _ = mixing::adiabatic(&[stream.into(), AirStream { air: second, dry_air_flow: y }.into()]);
+        note(1, "mixing");
+        let steam = SpecificEnthalpy::from_joules_per_kilogram(1e6 + 2.5e6 * x);
+        let _ = humidify::steam_limit(&stream, steam);
+        let _ = humidify::steam(&stream, MassFlow::from_kilograms_per_second(0.05 * y), steam);
+        note(2, "steam");
+        let _ = coil::apparatus_dew_point(&first, &second);
+        let _ = coil::by_bypass_factor(
+            &stream,
+            Temperature::from_celsius(60.0 * y - 20.0),
+            x,
+            coil::CondensateTemperature::Apparatus,
+        );
+        note(3, "coil");
+        let cold = 50.0 * y;
+        let water = TowerWater {
+            flow: MassFlow::from_kilograms_per_second(3.0 * x),
+            hot: Temperature::from_celsius(cold + 30.0 * x),
+            cold: Temperature::from_celsius(cold),
+        };
+        let _ =
+            tower::with_air_flow(&stream, water, WaterTreatment { drift_fraction: 0.0, cycles_of_concentration: 3.0 });
+        note(4, "tower");
+    }
+    println!("most evaluations of one search, of {ITERATION_CAP}: {worst:?}");
+    assert!(worst.iter().all(|&(_, taken)| taken > 0 && taken < ITERATION_CAP));
+}
+
+/// The same text in single precision: near the double results, as far as seven digits go.
+#[test]
+fn single_precision() {
+    use crate::basis::Basis;
+    use crate::process::coil::CondensateTemperature;
+    use crate::process::humidify::EvaporatingWater;
+    use crate::process::tower::{TowerWater, WaterTreatment};
+    use crate::quantity::{HumidityRatio, Pressure, RelativeHumidity, SpecificEnthalpy, Temperature};
+    use std::vec::Vec;
+
+    fn results<S: Scalar>(formulation: Formulation) -> Vec<f64> {
+        let s = |x: f64| k::<S>(x);
+        let t = |x: f64| Temperature::from_celsius(s(x));
+        let site = Basis::new(Pressure::from_pascals(s(101_325.0)), formulation);
+        let air = |x: f64, humidity: f64| {
+            MoistAir::from_dry_bulb(t(x), RelativeHumidity::from_fraction(s(humidity)), site).unwrap()
+        };
+        let stream = |x: f64, humidity: f64| {
+            AirStream::new(air(x, humidity), MassFlow::from_kilograms_per_second(s(2.0))).unwrap()
+        };
+        let steam = SpecificEnthalpy::from_joules_per_kilogram(s(2.7e6));
+        let (warm, cold, dry) = (stream(30.0, 0.5), stream(-5.0, 0.8), stream(35.0, 0.2));
+        let drain = CondensateTemperature::LeavingAir;
+        let heated = sensible::with_heat(&cold, HeatFlow::from_watts(s(4e4))).unwrap();
+        let by_bypass = coil::by_bypass_factor(&warm, t(8.0), s(0.15), drain).unwrap();
+        let apparatus = coil::apparatus_dew_point(&warm.air(), &by_bypass.leaving.air()).unwrap();
+        let held =
+            coil::between(&warm, &air(12.0, 0.95), drain, HumidityRatio::from_grams_per_kilogram(s(0.1))).unwrap();
+        let reheated =
+            reheat::to_state(&warm, &air(22.0, 0.5), RelativeHumidity::from_fraction(s(0.95)), drain).unwrap();
+        let fog = mixing::adiabatic(&[stream(30.0, 0.9).into(), stream(-10.0, 0.8).into()]).unwrap();
+        let steamed = humidify::steam(&dry, MassFlow::from_kilograms_per_second(s(0.01)), steam).unwrap();
+        let to_half =
+            humidify::steam_to_relative_humidity(&dry, RelativeHumidity::from_fraction(s(0.5)), steam).unwrap();
+        let wetted = humidify::evaporative(&dry, s(0.85), EvaporatingWater::AtWetBulb).unwrap();
+        let water = TowerWater { flow: MassFlow::from_kilograms_per_second(s(2.0)), hot: t(38.0), cold: t(28.0) };
+        let treatment = WaterTreatment { drift_fraction: s(1e-4), cycles_of_concentration: s(3.0) };
+        let cooled = tower::with_air_flow(&warm, water, treatment).unwrap();
+        [
+            heated.leaving.air().dry_bulb().celsius(),
+            by_bypass.cooling_load.kilowatts(),
+            apparatus.dew_point.celsius(),
+            held.cooling_load.kilowatts(),
+            reheated.reheat().kilowatts(),
+            fog.leaving.air().air().dry_bulb().celsius(),
+            fog.leaving.air().liquid().grams_per_kilogram(),
+            steamed.leaving.air().air().dry_bulb().celsius(),
+            to_half.evaporated.kilograms_per_second() * s(1e3),
+            wetted.evaporated.kilograms_per_second() * s(1e3),
+            wetted.leaving.air().air().dry_bulb().celsius(),
+            cooled.water.make_up.kilograms_per_second() * s(1e3),
+            cooled.leaving.air().dry_bulb().celsius(),
+        ]
+        .map(Scalar::to_f64)
+        .to_vec()
+    }
+    for formulation in [Formulation::RealGas, Formulation::IdealGas] {
+        let (single, double) = (results::<f32>(formulation), results::<f64>(formulation));
+        let off: Vec<f64> = single.iter().zip(&double).map(|(a, b)| (a / b - 1.0).abs()).collect();
+        println!("{formulation:?}, single against double precision, relative: {off:.7?}");
+        assert!(off.iter().all(|&off| off < 3e-3), "{single:?}\n{double:?}");
+    }
 }

@@ -10,6 +10,7 @@ use crate::saturation::Surface;
 use crate::solve;
 
 use super::MoistAir;
+use super::construct::SATURATION_TOLERANCE;
 use super::property::{DEW_POINT_STEPS, condensed_heat_capacity, dew_point};
 
 /// Newton steps for the temperature that goes with an enthalpy; see the test of this module.
@@ -289,9 +290,11 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
         let trial = wet(celsius, curve);
         (trial.enthalpy - enthalpy, trial.slope)
     });
-    // What the last unit of the temperature leaves over goes into the vapor, as far as that is rounding, so that the books close.
+    // What the last unit of the temperature leaves over goes into the vapor, well within the tolerance of saturation, so that the
+    // books close: the enthalpy of much liquid is rougher than that of the air.
     let reached = wet(celsius, curve);
-    let most = rounding(reached.humidity_ratio);
+    let tenth = reached.humidity_ratio * k(SATURATION_TOLERANCE * 0.1);
+    let most = rounding(reached.humidity_ratio).at_least(tenth);
     let over = ((reached.enthalpy - enthalpy) / reached.latent).at_least(-most).at_most(most);
     let ratio = (reached.humidity_ratio - over).at_most(water);
     let (air, surplus) = (state(celsius, ratio), water - ratio);
