@@ -1,6 +1,6 @@
 /*
- * A day of an air handler and its cooling tower from a log of one-minute readings: states, loads, water, and how far all of it
- * can be trusted. It prints the same bytes as moistair-core/examples/plant_day.rs, which also says how the log was made.
+ * A day of an air handler and its cooling tower from a log of one-minute readings: states, loads, water, and how far
+ * all of it can be trusted. It prints the same bytes as moistair-core/examples/plant_day.rs.
  *
  *     cargo build --release -p moistair-ffi
  *     gcc -std=c99 -I moistair-ffi/include moistair-ffi/examples/plant_day.c target/release/libmoistair.a -o plant_day
@@ -294,7 +294,7 @@ static struct stream cool(struct moment *moment, const struct state *mixed, cons
     return leaving;
 }
 
-/* Fan and heater, up to the temperature measured behind them. Their heat counts as reheat while the coil valve is open. */
+/* Fan and heater, up to the temperature measured behind them. Heat counts as reheat while the valve is open. */
 static struct stream heat(struct moment *moment, const struct stream *entering)
 {
     struct stream leaving = {0};
