@@ -1,1 +1,240 @@
+//! Any bits in any argument: a result of finite numbers that is a state, or an error that says why; never a panic, never endless.
 
+use crate::checks::Random;
+use crate::support::*;
+use moistair_core::process::coil::{self, CondensateTemperature};
+use moistair_core::process::humidify::{self, Absorption, EvaporatingWater};
+use moistair_core::process::tower::{self, TowerWater, WaterTreatment};
+use moistair_core::process::{AirStream, Exchange, WetStream, mixing, reheat, sensible};
+use moistair_core::*;
+use std::collections::BTreeMap;
+
+/// Every class of `f64`, limits of quantities and their neighbors, common slips of units, and random bits.
+fn number(random: &mut Random) -> f64 {
+    const CLASSES: [f64; 42] = [
+        f64::NAN,
+        f64::INFINITY,
+        f64::NEG_INFINITY,
+        0.0,
+        -0.0,
+        5e-324,
+        -5e-324,
+        1e-310,
+        f64::MIN_POSITIVE,
+        f64::EPSILON,
+        f64::MAX,
+        f64::MIN,
+        1e-12,
+        -1e-12,
+        1.0,
+        0.999_999_999_999_999_9,
+        1.000_000_000_000_000_2,
+        0.5,
+        -1.0,
+        2.0,
+        0.02,
+        10.0,
+        50.0,
+        100.0,
+        -40.0,
+        -80.0,
+        0.01,
+        150.0,
+        99.97,
+        200.0,
+        374.0,
+        -100.0,
+        293.15,
+        101.325,
+        1_013.25,
+        20_000.0,
+        101_325.0,
+        1.1e6,
+        251_000.0,
+        2.7e6,
+        4e6,
+        1e9,
+    ];
+    match random.bits() % 4 {
+        0 => f64::from_bits(random.bits()),
+        1 => {
+            let limits = Quantity::ALL[(random.bits() % Quantity::ALL.len() as u64) as usize].limits();
+            let end = if random.bits() & 1 == 0 { limits.0 } else { limits.1 };
+            f64::from_bits(end.to_bits().wrapping_add(random.bits() % 3).wrapping_sub(1))
+        }
+        2 => random.between(-1.0, 60.0),
+        _ => CLASSES[(random.bits() % CLASSES.len() as u64) as usize],
+    }
+}
+
+fn any_air(random: &mut Random) -> MoistAir {
+    loop {
+        let formulation = BOTH[(random.bits() & 1) as usize];
+        let pressure = if random.bits() & 1 == 0 { 101_325.0 } else { number(random) };
+        let basis = Basis::new(Pressure::from_pascals(pressure), formulation);
+        let quantity = Quantity::ALL[(random.bits() % Quantity::ALL.len() as u64) as usize];
+        let t = if random.bits() & 1 == 0 { number(random) } else { random.between(-80.0, 150.0) };
+        let made = MoistAir::from_dry_bulb_and(celsius(t), quantity, number(random), basis).or_else(|_| {
+            MoistAir::from_dry_bulb_and(celsius(t), Quantity::RelativeHumidity, random.between(0.0, 1.0), basis)
+        });
+        if let Ok(air) = made {
+            return air;
+        }
+    }
+}
+
+/// Calls made, results given, and errors by their code.
+#[derive(Default)]
+struct Seen(BTreeMap<&'static str, (u32, BTreeMap<i32, u32>)>);
+
+impl Seen {
+    fn take<T>(&mut self, process: &'static str, result: Result<T, Error>, check: impl FnOnce(&T)) {
+        let (given, errors) = self.0.entry(process).or_default();
+        match result {
+            Ok(done) => {
+                *given += 1;
+                check(&done);
+            }
+            Err(error) => {
+                *errors.entry(error.code()).or_default() += 1;
+                assert!(!error.to_string().is_empty());
+                if let Some((value, min, max)) = error.value_and_limits() {
+                    assert!(!value.is_nan() && !min.is_nan() && !max.is_nan(), "{process}: {error:?}");
+                }
+            }
+        }
+    }
+}
+
+fn finite(numbers: &[f64]) {
+    assert!(numbers.iter().all(|x| x.is_finite()), "{numbers:?}");
+}
+
+fn outlet(leaving: &WetStream, exchange: &Exchange) {
+    sound(leaving).unwrap_or_else(|error| panic!("{error}"));
+    let water = exchange.water.kilograms_per_second();
+    finite(&[
+        exchange.heat.watts(),
+        water,
+        exchange.water_enthalpy_flow.watts(),
+        leaving.dry_air_flow().kilograms_per_second(),
+    ]);
+}
+
+#[test]
+fn no_argument_breaks_a_process() {
+    let mut random = Random(11);
+    let mut seen = Seen::default();
+    let cases = std::env::var("MOISTAIR_CASES").map_or(2_000, |cases| cases.parse().unwrap());
+    for _ in 0..cases {
+        let (first, second) = (any_air(&mut random), any_air(&mut random));
+        let second = if random.bits() % 4 == 0 {
+            second
+        } else {
+            MoistAir::restore(second.dry_bulb(), second.humidity_ratio(), first.basis()).unwrap_or(second)
+        };
+        let mut x = || number(&mut random);
+        let volume = VolumeFlow::from_cubic_meters_per_second(x());
+        seen.take("volume flow", AirStream::from_volume_flow(first, volume), |s| {
+            finite(&[s.dry_air_flow().kilograms_per_second()])
+        });
+        let standard =
+            AirStream::from_standard_volume_flow(first, volume, Density::from_kilograms_per_cubic_meter(x()));
+        seen.take("standard volume flow", standard, |s| finite(&[s.dry_air_flow().kilograms_per_second()]));
+        let asked = AirStream::new(first, flow(x()));
+        let entering = asked.unwrap_or_else(|_| stream(first, 1.0));
+        seen.take("dry-air flow", asked, |s| finite(&[s.volume_flow().cubic_meters_per_second()]));
+
+        let to = sensible::to_temperature(&entering, celsius(x()));
+        seen.take("heater to temperature", to, |done| outlet(&done.leaving.into(), &done.exchange));
+        let with = sensible::with_heat(&entering, HeatFlow::from_watts(x()));
+        seen.take("heater with heat", with, |done| outlet(&done.leaving.into(), &done.exchange));
+
+        for choice in [
+            CondensateTemperature::LeavingAir,
+            CondensateTemperature::Apparatus,
+            CondensateTemperature::Given(celsius(x())),
+        ] {
+            let cooled = |done: &coil::Cooling| {
+                outlet(&done.leaving.into(), &done.exchange);
+                finite(&[done.cooling_load.watts(), done.sensible.watts(), done.latent.watts()]);
+                assert!(done.condensate.kilograms_per_second() >= 0.0);
+            };
+            seen.take("coil to state", coil::to_state(&entering, &second, choice), cooled);
+            seen.take("coil between", coil::between(&entering, &second, choice, ratio(x())), cooled);
+            seen.take("coil by bypass", coil::by_bypass_factor(&entering, celsius(x()), x(), choice), cooled);
+            let off = RelativeHumidity::from_fraction(x());
+            seen.take("reheat", reheat::to_state(&entering, &second, off, choice), |done| {
+                cooled(&done.cooling);
+                outlet(&done.heating.leaving.into(), &done.heating.exchange);
+            });
+        }
+        seen.take("apparatus dew point", coil::apparatus_dew_point(&first, &second), |found| {
+            finite(&[found.dew_point.celsius(), found.bypass_factor]);
+            assert!((0.0..=1.0).contains(&found.bypass_factor), "{found:?}");
+        });
+
+        let carried = AirWithCondensate::new(second, ratio(x()), ratio(x()));
+        seen.take("carried water", carried, |wet| finite(&[wet.specific_enthalpy().joules_per_kilogram()]));
+        let other = WetStream::new(carried.unwrap_or_else(|_| second.into()), flow(x()));
+        seen.take("wet stream", other, |s| finite(&[s.dry_air_flow().kilograms_per_second()]));
+        let other = other.unwrap_or_else(|_| stream(second, 1.0).into());
+        seen.take("mixing", mixing::adiabatic(&[entering.into(), other]), |done| outlet(&done.leaving, &done.exchange));
+        for freezing in [Freezing::Equilibrium, Freezing::Supercooled] {
+            let at = mixing::adiabatic_at(&[other, entering.into()], Pressure::from_pascals(x()), freezing);
+            seen.take("mixing at a pressure", at, |done| outlet(&done.leaving, &done.exchange));
+            let made = AirWithCondensate::from_enthalpy_and_water(joules(x()), ratio(x()), freezing, first.basis());
+            seen.take("equilibrium", made, |wet| outlet(&WetStream::new(*wet, flow(1.0)).unwrap(), &Exchange::none()));
+        }
+
+        let humid = |done: &humidify::Humidified| {
+            outlet(&done.leaving, &done.exchange);
+            finite(&[done.evaporated.kilograms_per_second()]);
+            assert!(done.carried.kilograms_per_second() >= 0.0);
+        };
+        let steam = if x() < 1.0 { joules(x()) } else { joules(2.7e6) };
+        seen.take("steam", humidify::steam(&entering, flow(x()), steam), humid);
+        seen.take("steam to humidity ratio", humidify::steam_to_humidity_ratio(&entering, ratio(x()), steam), humid);
+        let wanted = RelativeHumidity::from_fraction(x());
+        seen.take("steam to relative humidity", humidify::steam_to_relative_humidity(&entering, wanted, steam), humid);
+        seen.take("limit of steam", humidify::steam_limit(&entering, steam), |limit| {
+            if let Absorption::UpTo(most) = limit {
+                assert!(most.kilograms_per_second() >= 0.0 && most.kilograms_per_second().is_finite());
+            }
+        });
+        seen.take("enthalpy of steam", humidify::saturated_steam_enthalpy(celsius(x())), |h| {
+            finite(&[h.joules_per_kilogram()])
+        });
+        seen.take("enthalpy of water", liquid_water_enthalpy(celsius(x()), first.basis()), |h| {
+            finite(&[h.joules_per_kilogram()])
+        });
+        seen.take("spray", humidify::spray(&entering, flow(x()), celsius(x())), humid);
+        for water in [EvaporatingWater::AtWetBulb, EvaporatingWater::Given(celsius(x()))] {
+            seen.take("wetted media", humidify::evaporative(&entering, x(), water), humid);
+        }
+
+        let treatment = WaterTreatment { drift_fraction: x(), cycles_of_concentration: x() };
+        seen.take("water use", tower::water_use(flow(x()), flow(x()), treatment), |used| {
+            finite(&[used.make_up.kilograms_per_second()])
+        });
+        let treatment =
+            if x() < 1.0 { treatment } else { WaterTreatment { drift_fraction: 1e-4, cycles_of_concentration: 3.0 } };
+        let water = TowerWater { flow: flow(x()), hot: celsius(x()), cold: celsius(x()) };
+        let cooled = |done: &tower::TowerBalance| {
+            outlet(&done.leaving.into(), &done.exchange);
+            finite(&[
+                done.heat_rejected.watts(),
+                done.water.make_up.kilograms_per_second(),
+                done.range.kelvins(),
+                done.approach.kelvins(),
+            ]);
+        };
+        seen.take("tower with air flow", tower::with_air_flow(&entering, water, treatment), cooled);
+        seen.take("tower with leaving air", tower::with_leaving_air(&first, &second, water, treatment), cooled);
+    }
+    for (process, (given, errors)) in &seen.0 {
+        println!("{process}: {given} results, errors by code {errors:?}");
+        assert!(*given > 0, "{process} never gave a result: nothing was tried");
+        assert!(!errors.is_empty(), "{process} never refused: nothing was tried");
+    }
+}
