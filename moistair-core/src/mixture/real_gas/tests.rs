@@ -8,6 +8,7 @@ use super::*;
 use crate::checks::{Table, Tally, half_of_last_decimal};
 
 const MOIST_AIR: &str = include_str!("../../../../tests/published/g8_10_tables13_14_15.csv");
+const DRY_AIR: &str = include_str!("../../../../tests/published/lemmon2000_dry_air.csv");
 const VIRIALS: &str = include_str!("../../../../tests/published/g11_15_virial_fugacity.csv");
 const WATER: &str = include_str!("../../../../tests/published/r6_95_iapws95.csv");
 const SATURATION: &str = include_str!("../../../../tests/published/sublimation_saturation_melting.csv");
@@ -125,6 +126,33 @@ fn moist_air_of_g8_10() {
         tally.row(row, computed);
     }
     tally.finish(144);
+}
+
+/// Lemmon et al. 2000 Table A2, dry air as a gas of low density: 100 K, 130 K and 500 K.
+#[test]
+fn dry_air_of_lemmon_2000() {
+    let table = Table::read(DRY_AIR);
+    let mut tally = Tally::new("Lemmon et al. 2000 Table A2");
+    let single_phase = |row: &crate::checks::Row<'_>| row.text("inputs").contains("p_MPa") && row.input("p_MPa") < 2.0;
+    for row in table.rows().filter(single_phase) {
+        let (kelvins, pascals) = (row.input("T_K"), row.input("p_MPa") * 1e6);
+        let mixture = at_kelvins(kelvins);
+        let density = mixture.air_density::<10>(pascals, 0.0);
+        let part = mixture.air.alone(kelvins, density);
+        let (p_rho, p_t) =
+            (density * density * part["f_rhorho"] + 2.0 * density * part["f_rho"], density * density * part["f_Trho"]);
+        let cv = -kelvins * part["f_TT"];
+        let cp = cv + kelvins * p_t * p_t / (density * density * p_rho);
+        let computed = match row.text("quantity") {
+            "rho molar" => density / dry_air::MOLAR_MASS / 1e3,
+            "cv molar" => cv * dry_air::MOLAR_MASS,
+            "cp molar" => cp * dry_air::MOLAR_MASS,
+            "w" => (p_rho * cp / cv).sqrt(),
+            name => panic!("{name}"),
+        };
+        tally.row(row, computed);
+    }
+    tally.finish(12);
 }
 
 /// Molar second and third virial coefficients: B = a₁/ρ*, C = 2 a₂/ρ*² of a component, the cross ones as they are.
