@@ -35,10 +35,11 @@ undefined() {
     nm -u "$work/all.so" | awk '{ print $NF }'
 }
 
-# Why: the functions that lead to the marker, as the relocations tell.
+# Why: the functions that call the panics that are left.
 callers() {
-    objdump -dr --no-show-raw-insn "$1" 2>/dev/null |
-        awk -v marker="panic" '/^[0-9a-f]+ <.*>:$/ { name = $2 } $0 ~ /R_X86_64|R_AARCH64/ && $0 ~ marker { print name, $NF }' |
+    objdump -d --no-show-raw-insn "$1" | c++filt |
+        awk '/^[0-9a-f]+ <.*>:$/ { $1 = ""; name = $0 }
+             /(call|jmp|bl|b) .*<core\[?[0-9a-f]*\]?::(panicking|option|result|slice|str)/ { sub(/.*</, "<"); print name, "->", $0 }' |
         sort | uniq -c | sort -rn | head -40
 }
 

@@ -166,6 +166,15 @@ impl<S: Scalar> MoistAir<S> {
     ///
     /// # Errors
     /// As [`MoistAir::from_dry_bulb`]: whatever the numbers are, what comes back is a state.
+    ///
+    /// ```
+    /// use moistair_core::{HumidityRatio, MoistAir, Pressure, RelativeHumidity, Temperature};
+    /// let site = Pressure::from_kilopascals(95.0);
+    /// let air = MoistAir::from_dry_bulb(Temperature::from_celsius(21.0), RelativeHumidity::from_percent(100.0), site)?;
+    /// assert_eq!(MoistAir::restore(air.dry_bulb(), air.humidity_ratio(), air.basis())?, air);
+    /// assert!(MoistAir::restore(air.dry_bulb(), HumidityRatio::from_grams_per_kilogram(20.0), site).is_err());
+    /// # Ok::<(), moistair_core::Error>(())
+    /// ```
     pub fn restore(
         dry_bulb: Temperature<S>,
         humidity_ratio: HumidityRatio<S>,
