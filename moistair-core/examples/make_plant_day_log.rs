@@ -1,20 +1,21 @@
 //! Makes the log that `plant_day` reads: `cargo run --release --example make_plant_day_log > plant_day.csv`.
 //!
-//! One invented summer day, minute by minute, of an invented archive with reading rooms in an inland plain: a clear night with fog at
-//! dawn, a warm moist afternoon. Its air handler mixes outdoor with recirculated air and holds 21.5 °C and 8 g/kg: steam at
-//! night, a cooling coil with reheat in the afternoon, the heat of which a cooling tower rejects. The plant is computed with this
-//! library, so that the log is coherent; sensors add offset, noise and their resolution, and the logger its faults: lost rows, a
-//! row twice, empty fields, a stuck sensor, an hour in degrees Fahrenheit, values out of range.
+//! One invented summer day, minute by minute, of an invented archive with reading rooms in an inland plain: a clear night
+//! with fog at dawn, a warm moist afternoon. Its air handler mixes outdoor with recirculated air and holds 21.5 °C and
+//! 8 g/kg: steam at night, a cooling coil with reheat in the afternoon, the heat of which a cooling tower rejects. The
+//! plant is computed with this library, so that the log is coherent; sensors add offset, noise and their resolution, and
+//! the logger its faults: lost rows, a row twice, empty fields, a stuck sensor, an hour in degrees Fahrenheit, values out
+//! of range.
 //!
-//! The parameters are invented in the range of what such plants have (common practice, no source). Nothing here depends on the
-//! machine: the same file comes out everywhere.
+//! The parameters are invented, of the size that such plants have (common practice, no source). Nothing here depends on
+//! the machine: the same file comes out everywhere.
 use moistair_core::process::coil::{self, CondensateTemperature, Cooling};
 use moistair_core::process::{AirStream, humidify, mixing, sensible};
 use moistair_core::*;
 
 /// The columns of the log, each with its unit.
-pub const HEADER: &str = "time_s,pressure_hPa,outdoor_degC,outdoor_rh_%,mixed_degC,mixed_rh_%,coil_degC,coil_rh_%,heater_degC,\
-    supply_degC,supply_rh_%,return_degC,return_rh_%,supply_m3/h,outdoor_m3/h,valve_%,steam_kg/h,\
+pub const HEADER: &str = "time_s,pressure_hPa,outdoor_degC,outdoor_rh_%,mixed_degC,mixed_rh_%,\
+    coil_degC,coil_rh_%,heater_degC,supply_degC,supply_rh_%,return_degC,return_rh_%,supply_m3/h,outdoor_m3/h,valve_%,steam_kg/h,\
     tower_water_kg/s,tower_hot_degC,tower_cold_degC,tower_air_m3/h";
 
 /// Columns by their place after the time.
@@ -135,7 +136,7 @@ impl Truth {
         let mut sensors = self.0.iter().zip(SENSORS);
         core::array::from_fn(|_| {
             let Some((truth, (offset, spread, decimals))) = sensors.next() else { return String::new() };
-            // Drawn also where it is not used, so that one column does not shift the others. What stands still reads zero.
+            // Drawn also where it is not used, so that no column shifts the others. What stands still reads zero.
             let error = offset + spread * noise.bell();
             let value = if *truth > 0.0 { (truth + error).max(0.0) } else { 0.0 };
             format!("{value:.decimals$}")
@@ -143,7 +144,7 @@ impl Truth {
     }
 }
 
-/// A generator of pseudo-random numbers: Steele, Lea, Flood 2014, "Fast splittable pseudorandom number generators" (SplitMix64).
+/// Pseudo-random numbers: SplitMix64 (Steele, Lea and Flood 2014, OOPSLA '14, 453–472).
 struct Noise(u64);
 
 impl Noise {

@@ -1,8 +1,8 @@
-//! A day of an air handler and its cooling tower from a log of one-minute readings: states, loads, water, and how far all of it
-//! can be trusted. `cargo run --release --example plant_day [LOG.csv]`
+//! A day of an air handler and its cooling tower from a log of one-minute readings: states, loads, water, and how far
+//! all of it can be trusted. `cargo run --release --example plant_day [LOG.csv]`
 //!
 //! The program reads, calls the library, and prints. `moistair-ffi/examples/plant_day.c` and
-//! `moistair-py/examples/plant_day.py` print the same bytes.
+//! `moistair-py/examples/plant_day.py` print the same bytes. `make_plant_day_log.rs` made the log and tells its story.
 #![allow(clippy::indexing_slicing, reason = "every place is a constant below the length of its array")]
 use std::error::Error;
 use std::fs::File;
@@ -317,7 +317,7 @@ impl Moment {
         Some(coil.leaving)
     }
 
-    /// Fan and heater, up to the temperature measured behind them. Their heat counts as reheat while the coil valve is open.
+    /// Fan and heater, up to the temperature measured behind them. Heat counts as reheat while the valve is open.
     fn heat(&mut self, entering: Option<AirStream>) -> Option<AirStream> {
         let heating = || {
             let leaving = Temperature::from_celsius(self.value(channel::HEATER)?);
