@@ -159,7 +159,8 @@ fn first_crossing<S: Scalar>(air: &MoistAir<S>, enthalpy: S, fraction: S) -> Opt
             let ratio = w1 + s;
             let celsius = temperature_of_enthalpy::<M<S>, S>(h1 + s * enthalpy, pressure, ratio);
             let (coldest, warmest) = Quantity::DryBulb.limits();
-            if !(celsius <= k(warmest)) {
+            let cool_enough = celsius <= k(warmest);
+            if !cool_enough {
                 return None;
             }
             let saturated = M::<S>::at(celsius.at_least(k(coldest))).saturation(pressure, Surface::Stable).mole_fraction;

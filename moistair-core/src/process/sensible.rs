@@ -78,7 +78,7 @@ pub(super) fn at_same_ratio<S: Scalar>(air: &MoistAir<S>, celsius: S) -> Result<
     let pressure = air.pressure().pascals();
     let (coldest, warmest) = Quantity::LeavingTemperature.limits();
     let in_range = k::<S>(coldest) <= celsius && celsius <= k(warmest);
-    if in_range && celsius >= air.dry_bulb().celsius() || in_range && ratio <= capacity(air, celsius) {
+    if in_range && (celsius >= air.dry_bulb().celsius() || ratio <= capacity(air, celsius)) {
         return Ok(MoistAir::assemble(celsius, pressure, ratio, air.formulation()));
     }
     Err(Error::Infeasible {

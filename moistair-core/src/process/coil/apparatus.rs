@@ -51,7 +51,7 @@ pub fn apparatus_dew_point<S: Scalar>(entering: &MoistAir<S>, leaving: &MoistAir
     let (drop, dried) = (h1 - h2, w1 - w2);
     let (start, end) = (leaving.dry_bulb().celsius(), entering.dry_bulb().celsius());
     let coldest = k::<S>(Quantity::ApparatusDewPoint.limits().0);
-    if !(dried > k(0.0)) {
+    if dried <= k(0.0) {
         return Err(infeasible(Quantity::HumidityRatio, w2, k(0.0), w1));
     }
     if start > end {
