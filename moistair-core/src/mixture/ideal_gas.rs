@@ -58,6 +58,8 @@ impl<R: Real> IdealGas<R> {
 }
 
 impl<R: Real> Mixture<R> for IdealGas<R> {
+    #[cfg(test)]
+    const FORMULATION: crate::Formulation = crate::Formulation::IdealGas;
     const MOLAR_MASS_RATIO: f64 = 0.621945;
 
     #[inline(always)]

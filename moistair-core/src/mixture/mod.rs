@@ -43,6 +43,10 @@ pub struct Saturation<R> {
 
 /// A formulation. `Self` holds what depends on temperature alone.
 pub trait Mixture<R: Real>: Copy {
+    /// Which formulation it is.
+    #[cfg(test)]
+    const FORMULATION: crate::Formulation;
+
     /// Molar mass of water over that of dry air.
     const MOLAR_MASS_RATIO: f64;
 

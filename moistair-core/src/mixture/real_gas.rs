@@ -311,6 +311,8 @@ fn solve_pair<R: Real>(first: (R, R, R), second: (R, R, R)) -> (R, R) {
 }
 
 impl<R: Real> Mixture<R> for RealGas<R> {
+    #[cfg(test)]
+    const FORMULATION: crate::Formulation = crate::Formulation::RealGas;
     const MOLAR_MASS_RATIO: f64 = water_vapor::MOLAR_MASS / dry_air::MOLAR_MASS;
 
     fn at(celsius: R) -> Self {

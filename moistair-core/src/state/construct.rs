@@ -138,9 +138,7 @@ impl<S: Scalar> MoistAir<S> {
                 Some(humidity_ratio) => Ok(inside(humidity_ratio)),
                 None => {
                     let end = |humidity_ratio: S| {
-                        View { mixture, celsius, pressure, humidity_ratio, gas: mixture.gas(pressure, humidity_ratio) }
-                            .value(quantity)
-                            .map(Scalar::to_f64)
+                        View { mixture, air: inside(humidity_ratio) }.value(quantity).map(Scalar::to_f64)
                     };
                     let (least, most) = quantity.limits();
                     // What has no value rises with the vapor: into its range from below, out of it above. If it is past its range at

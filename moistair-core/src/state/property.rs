@@ -3,7 +3,7 @@
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, NoValue};
-use crate::mixture::{Gas, Mixture};
+use crate::mixture::Mixture;
 use crate::quantity::ZERO_CELSIUS;
 use crate::real::{Mask, Real, Scalar, k};
 use crate::saturation::{Magnus, Surface};
@@ -131,13 +131,10 @@ pub(crate) fn saturates<R: Real>(mole_fraction: R) -> R::Mask {
     k::<R>(0.0).lt(mole_fraction).and(mole_fraction.lt(k(1.0)))
 }
 
-/// A state as its numbers, with the temperature functions of its mixture at hand.
+/// A state with the temperature functions of its mixture at hand.
 pub(super) struct View<M, S> {
     pub mixture: M,
-    pub celsius: S,
-    pub pressure: S,
-    pub humidity_ratio: S,
-    pub gas: Gas<S>,
+    pub air: MoistAir<S>,
 }
 
 impl<S: Scalar> MoistAir<S> {
@@ -156,7 +153,10 @@ impl<S: Scalar> MoistAir<S> {
     /// # Ok::<(), Error>(())
     /// ```
     pub fn value(&self, quantity: Quantity) -> Result<S, Error> {
-        with_mixture!(self.formulation, S, M => self.view::<M<S>>().value(quantity))
+        if let Some(value) = self.plain(quantity) {
+            return Ok(value);
+        }
+        with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).value(quantity))
     }
 
     /// Many properties at once: calls `take` for each with its value or the reason why there is none.
@@ -166,60 +166,64 @@ impl<S: Scalar> MoistAir<S> {
         mut take: impl FnMut(Quantity, Result<S, Error>),
     ) {
         with_mixture!(self.formulation, S, M => {
-            let view = self.view::<M<S>>();
+            let view = View::<M<S>, S>::of(*self);
             for quantity in quantities {
                 take(quantity, view.value(quantity));
             }
         });
     }
 
-    fn view<M: Mixture<S>>(&self) -> View<M, S> {
-        View {
-            mixture: M::at(self.celsius),
-            celsius: self.celsius,
-            pressure: self.pascals,
-            humidity_ratio: self.humidity_ratio,
-            gas: self.gas,
-        }
+    /// A property that every state has.
+    fn plain(&self, quantity: Quantity) -> Option<S> {
+        Some(match quantity {
+            Quantity::DryBulb => self.celsius,
+            Quantity::Pressure => self.pascals,
+            Quantity::HumidityRatio => self.humidity_ratio,
+            Quantity::WaterMoleFraction => self.water_mole_fraction().fraction(),
+            Quantity::VaporPressure => self.vapor_pressure().pascals(),
+            Quantity::SpecificHumidity => self.specific_humidity().kilograms_per_kilogram(),
+            Quantity::AbsoluteHumidity => self.absolute_humidity().kilograms_per_cubic_meter(),
+            Quantity::SpecificEnthalpy => self.gas.enthalpy,
+            Quantity::SpecificVolume => self.gas.volume,
+            Quantity::Density => self.density().kilograms_per_cubic_meter(),
+            Quantity::SpecificHeat => self.gas.specific_heat,
+            Quantity::CompressibilityFactor => self.gas.compressibility,
+            _ => return None,
+        })
     }
 }
 
 impl<M: Mixture<S>, S: Scalar> View<M, S> {
-    pub fn mole_fraction(&self) -> S {
-        M::mole_fraction(self.humidity_ratio)
+    pub fn of(air: MoistAir<S>) -> Self {
+        Self { mixture: M::at(air.celsius), air }
+    }
+
+    fn mole_fraction(&self) -> S {
+        M::mole_fraction(self.air.humidity_ratio)
     }
 
     pub fn value(&self, quantity: Quantity) -> Result<S, Error> {
-        let (one, w) = (k::<S>(1.0), self.humidity_ratio);
+        if let Some(value) = self.air.plain(quantity) {
+            return Ok(value);
+        }
+        let w = self.air.humidity_ratio;
         Ok(match quantity {
-            Quantity::DryBulb => self.celsius,
-            Quantity::Pressure => self.pressure,
-            Quantity::HumidityRatio => w,
-            Quantity::WaterMoleFraction => self.mole_fraction(),
-            Quantity::VaporPressure => self.mole_fraction() * self.pressure,
-            Quantity::SpecificHumidity => w / (one + w),
-            Quantity::AbsoluteHumidity => w / self.gas.volume,
-            Quantity::SpecificEnthalpy => self.gas.enthalpy,
-            Quantity::SpecificVolume => self.gas.volume,
-            Quantity::Density => (one + w) / self.gas.volume,
-            Quantity::SpecificHeat => self.gas.specific_heat,
-            Quantity::CompressibilityFactor => self.gas.compressibility,
             Quantity::RelativeHumidity => self.mole_fraction() / self.saturation(quantity, Surface::Stable)?,
             Quantity::RelativeHumidityOverLiquid => {
                 self.mole_fraction() / self.saturation(quantity, Surface::Liquid)?
             }
             Quantity::DegreeOfSaturation => w / M::humidity_ratio(self.saturation(quantity, Surface::Stable)?),
             Quantity::VaporPressureDeficit => {
-                (self.saturation(quantity, Surface::Stable)? - self.mole_fraction()) * self.pressure
+                (self.saturation(quantity, Surface::Stable)? - self.mole_fraction()) * self.air.pascals
             }
-            Quantity::SaturationPressure => self.mixture.pure_saturation_pressure(self.pressure, Surface::Stable),
+            Quantity::SaturationPressure => self.mixture.pure_saturation_pressure(self.air.pascals, Surface::Stable),
             Quantity::EnhancementFactor => {
-                self.saturation(quantity, Surface::Stable)? * self.pressure
-                    / self.mixture.pure_saturation_pressure(self.pressure, Surface::Stable)
+                self.saturation(quantity, Surface::Stable)? * self.air.pascals
+                    / self.mixture.pure_saturation_pressure(self.air.pascals, Surface::Stable)
             }
             Quantity::WetBulb => self.within_surface(
                 quantity,
-                stable_wet_bulb::<M, S>(self.celsius, self.pressure, w, self.gas.enthalpy),
+                stable_wet_bulb::<M, S>(self.air.celsius, self.air.pascals, w, self.air.gas.enthalpy),
                 Surface::Stable,
             )?,
             Quantity::WetBulbOverLiquid => self.wet_bulb_over(quantity, Surface::Liquid)?,
@@ -233,45 +237,50 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
     /// Saturation mole fraction at this temperature and pressure.
     fn saturation(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
         let no_value = |reason| Err(Error::NoValue { quantity, reason });
-        if surface == Surface::Liquid && self.celsius.lt(k(Quantity::DewPoint.limits().0)) {
+        if surface == Surface::Liquid && self.air.celsius.lt(k(Quantity::DewPoint.limits().0)) {
             return no_value(NoValue::BelowSurfaceRange);
         }
-        let mole_fraction = self.mixture.saturation(self.pressure, surface).mole_fraction;
+        let mole_fraction = self.mixture.saturation(self.air.pascals, surface).mole_fraction;
         if saturates(mole_fraction) { Ok(mole_fraction) } else { no_value(NoValue::AboveBoiling) }
     }
 
     fn wet_bulb_over(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
         if surface == Surface::Ice {
             // The solve means nothing where the wet bulb would be warmer than ice can be.
-            let melting = M::melting_temperature(self.pressure);
-            let (at_melting, slope) =
-                saturation_deficit::<M, S>(melting, self.pressure, self.humidity_ratio, self.gas.enthalpy, surface);
+            let melting = M::melting_temperature(self.air.pascals);
+            let (at_melting, slope) = saturation_deficit::<M, S>(
+                melting,
+                self.air.pascals,
+                self.air.humidity_ratio,
+                self.air.gas.enthalpy,
+                surface,
+            );
             if rounding::<S>().lt(-(at_melting / slope)) {
                 return Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange });
             }
         }
         let value = wet_bulb::<M, S, WET_BULB_STEPS>(
-            self.celsius,
-            self.pressure,
-            self.humidity_ratio,
-            self.gas.enthalpy,
+            self.air.celsius,
+            self.air.pascals,
+            self.air.humidity_ratio,
+            self.air.gas.enthalpy,
             surface,
         );
         self.within_surface(quantity, value, surface)
     }
 
     fn saturation_temperature(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
-        if !k::<S>(0.0).lt(self.humidity_ratio) {
+        if !k::<S>(0.0).lt(self.air.humidity_ratio) {
             return Err(Error::NoValue { quantity, reason: NoValue::DryAir });
         }
-        let value = dew_point::<M, S, DEW_POINT_STEPS>(self.mole_fraction(), self.pressure, surface);
+        let value = dew_point::<M, S, DEW_POINT_STEPS>(self.mole_fraction(), self.air.pascals, surface);
         self.within_surface(quantity, value, surface)
     }
 
     fn within_surface(&self, quantity: Quantity, value: S, surface: Surface) -> Result<S, Error> {
         let (min, max) = quantity.limits();
         let max = k::<S>(max);
-        let max = if surface == Surface::Ice { M::melting_temperature(self.pressure).at_most(max) } else { max };
+        let max = if surface == Surface::Ice { M::melting_temperature(self.air.pascals).at_most(max) } else { max };
         within(quantity, value, k(min), max)
     }
 }

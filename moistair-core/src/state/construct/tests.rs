@@ -7,7 +7,7 @@ use super::*;
 use crate::checks::Random;
 use crate::mixture::{IdealGas, RealGas};
 use crate::real::Lanes;
-use crate::state::property::tests::states;
+use crate::state::property::tests::{state, states};
 use crate::state::property::{DEW_POINT_STEPS, WET_BULB_STEPS, dew_point, stable_wet_bulb, wet_bulb};
 
 /// The quantities whose humidity ratio is searched for.
@@ -28,7 +28,7 @@ fn left_over<const STEPS: usize>() -> f64 {
         for (celsius, pressure, w, gas) in states::<M>() {
             let mixture = M::at(celsius);
             let limit = greatest_humidity_ratio(&mixture, celsius, pressure);
-            let Ok(value) = (View { mixture, celsius, pressure, humidity_ratio: w, gas }).value(quantity) else {
+            let Ok(value) = View { mixture, air: state::<M>(celsius, pressure, w, gas) }.value(quantity) else {
                 continue;
             };
             let exact = humidity_ratio_after::<12, M, f64>(&mixture, pressure, quantity, value, limit).unwrap();

@@ -3,7 +3,7 @@
 use std::println;
 
 use super::*;
-use crate::mixture::{IdealGas, RealGas};
+use crate::mixture::{Gas, IdealGas, RealGas};
 use crate::state::construct::greatest_humidity_ratio;
 
 /// Dry bulb, pressure, humidity ratio and gas over the declared domain, from nearly dry to the most vapor that a state holds.
@@ -17,6 +17,11 @@ pub fn states<M: Mixture<f64>>() -> impl Iterator<Item = (f64, f64, f64, Gas<f64
             shares.map(|share| (t, p, share * limit, mixture.gas(p, share * limit)))
         })
     })
+}
+
+/// The state of these numbers.
+pub fn state<M: Mixture<f64>>(celsius: f64, pascals: f64, humidity_ratio: f64, gas: Gas<f64>) -> MoistAir<f64> {
+    MoistAir { celsius, pascals, humidity_ratio, gas, formulation: M::FORMULATION }
 }
 
 /// Where a solve over a surface has a meaning.
@@ -106,7 +111,7 @@ fn what_is_read_solves_its_equation() {
             read += 1;
         };
         for (celsius, pressure, w, gas) in states::<M>() {
-            let view = View { mixture: M::at(celsius), celsius, pressure, humidity_ratio: w, gas };
+            let view = View::<M, f64>::of(state::<M>(celsius, pressure, w, gas));
             let at = (celsius, pressure, w);
             let deficit = |x, surface| saturation_deficit::<M, f64>(x, pressure, w, gas.enthalpy, surface);
             for (quantity, surface) in
