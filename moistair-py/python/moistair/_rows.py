@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 import enum
-from collections.abc import Iterator
+from collections.abc import Callable, Iterator
 from typing import Any, TypeVar, Union, get_args, get_origin, get_type_hints
 
 import numpy as np
@@ -64,7 +64,7 @@ def _same(a: Any, b: Any) -> bool:
 
 
 def _freeze(value: Any) -> Any:
-    if isinstance(value, np.ndarray):
+    if type(value) is np.ndarray:
         value.flags.writeable = False
     return value
 
@@ -90,36 +90,65 @@ def run(process: str, result: type[R], *arguments: tuple[str, Any]) -> R:
     labels: list[str] = []
     values: list[Any] = []
     for label, value in arguments:
-        _flatten(label, value, labels, values)
-    kind: Any = result
-    results, status = _core.run(process, _layout(kind), labels, values)
-    _freeze(status)
-    built: R = _build(result, iter(results), status)
+        if isinstance(value, Record):
+            _take_apart(label, value, labels, values)
+        else:
+            labels.append(label)
+            values.append(value)
+    layout, build = _plan(result)
+    results, status = _core.run(process, layout, labels, values)
+    built: R = build(iter(results), _freeze(status))
     return built
 
 
-def _flatten(label: str, value: Any, labels: list[str], values: list[Any]) -> None:
-    if isinstance(value, Record):
-        for name in value._inputs or tuple(value.__dataclass_fields__):  # type: ignore[attr-defined]
-            _flatten(f"{label}.{name}", getattr(value, name), labels, values)
-    else:
-        labels.append(label)
-        values.append(value)
+def _take_apart(label: str, record: Any, labels: list[str], values: list[Any]) -> None:
+    for name in record._inputs or record.__dataclass_fields__:
+        value = getattr(record, name)
+        if isinstance(value, Record):
+            _take_apart(f"{label}.{name}", value, labels, values)
+        else:
+            labels.append(f"{label}.{name}")
+            values.append(value)
 
 
-def _fields(record: Any) -> dict[str, Any]:
-    """What each field of a class of records is, read from its annotations once."""
-    if record not in _FIELDS:
-        hints = get_type_hints(record)
-        _FIELDS[record] = {name: _kind(hints[name]) for name in record.__dataclass_fields__}
-    return _FIELDS[record]
+# How a result is built from the values of the core: a letter for each of them, and a function that takes as many.
+Build = Callable[[Iterator[Any], Status], Any]
+_PLANS: dict[Any, tuple[str, Build]] = {}
 
 
-_FIELDS: dict[Any, dict[str, Any]] = {}
-_LAYOUTS: dict[Any, str] = {}
+def _plan(kind: Any) -> tuple[str, Build]:
+    if kind not in _PLANS:
+        _PLANS[kind] = _make_plan(kind)
+    return _PLANS[kind]
+
+
+def _make_plan(kind: Any) -> tuple[str, Build]:
+    if kind is _core.MoistAir:
+        return "S", lambda values, _: next(values)
+    if kind is bool:
+        return "N", lambda values, _: _truth(next(values))
+    if issubclass(kind, enum.IntEnum):
+        return "N", lambda values, _: _member(kind, next(values))
+    if not issubclass(kind, Record):
+        return "N", lambda values, _: _freeze(next(values))
+    record: Any = kind
+    hints = get_type_hints(record)
+    plans = {name: _plan(_kind(hints[name])) for name in record.__dataclass_fields__}
+    fields = [(name, build) for name, (_, build) in plans.items()]
+
+    def build(values: Iterator[Any], status: Status) -> Any:
+        made = object.__new__(record)
+        parts = made.__dict__
+        for name, part in fields:
+            parts[name] = part(values, status)
+        parts["_status"] = status
+        return made
+
+    return "".join(layout for layout, _ in plans.values()), build
 
 
 def _kind(hint: Any) -> Any:
+    """What an annotation of a field stands for."""
     if isinstance(hint, TypeVar):
         return float
     origin = get_origin(hint)
@@ -127,29 +156,12 @@ def _kind(hint: Any) -> Any:
     return get_args(hint)[0] if origin is Union else origin or hint
 
 
-def _layout(kind: Any) -> str:
-    """A letter for each number and each state, in the order of the core."""
-    if kind is _core.MoistAir:
-        return "S"
-    if not issubclass(kind, Record):
-        return "N"
-    if kind not in _LAYOUTS:
-        _LAYOUTS[kind] = "".join(_layout(field) for field in _fields(kind).values())
-    return _LAYOUTS[kind]
+def _truth(value: Any) -> Any:
+    return value == 1.0 if isinstance(value, float) else _freeze(value == 1.0)
 
 
-def _build(kind: Any, values: Iterator[Any], status: Status) -> Any:
-    if issubclass(kind, Record):
-        record = object.__new__(kind)
-        parts = {name: _build(field, values, status) for name, field in _fields(kind).items()}
-        record.__dict__.update(parts, _status=status)
-        return record
-    value = next(values)
-    if kind is bool:
-        return bool(value) if isinstance(value, float) else _freeze(value == 1.0)
-    if issubclass(kind, enum.IntEnum):
-        return kind(int(value)) if isinstance(value, float) else _freeze(_codes(value))
-    return _freeze(value)
+def _member(kind: Any, value: Any) -> Any:
+    return kind(int(value)) if isinstance(value, float) else _freeze(_codes(value))
 
 
 def _codes(values: Array) -> NDArray[np.int32]:
