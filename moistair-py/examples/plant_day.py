@@ -296,8 +296,9 @@ def read(path: Path) -> Summary:
     day = Span(0.0, DAY, {}, Checks())
     for hour in hours:
         day.merge(hour)
-    not_in_time, unreadable = np.count_nonzero(~in_time), sum(len(line) != len(COLUMNS) for line in lines)
-    return Summary(len(lines), int(not_in_time), unreadable, log, counts, hours, day)
+    not_in_time = int(np.count_nonzero(~in_time))
+    unreadable = len([line for line in lines if len(line) != len(COLUMNS)])
+    return Summary(len(lines), not_in_time, unreadable, log, counts, hours, day)
 
 
 def spans(time: Array, readings: dict[str, CheckedColumns]) -> Iterator[Span]:

@@ -1,6 +1,7 @@
 //! The faces against each other: what C and Python say is what the core says, bit for bit, from the linked library and the installed wheel.
 
 mod digest;
+mod examples_only_print;
 mod grid;
 mod plant_day;
 mod python;
@@ -17,6 +18,8 @@ fn main() -> ExitCode {
     let arguments = Arguments::from_args();
     let trials = vec![
         trial("digest_of_the_seeded_grid", &[], digest::committed),
+        trial("plant_day_only_reads_calls_and_prints", &[], examples_only_print::no_arithmetic),
+        trial("arithmetic_in_an_example_is_found", &[], examples_only_print::finds_arithmetic),
         trial("readme_shows_the_examples", &[], readme::code),
         trial("readme_states_the_limits", &[], readme::limits),
         trial("readme_tour_in_rust", &[], readme::rust_tour),
