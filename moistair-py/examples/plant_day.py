@@ -11,6 +11,7 @@ The program reads, calls the library, and prints.
 from __future__ import annotations
 
 import sys
+from collections import defaultdict
 from collections.abc import Iterable, Iterator, Sequence
 from dataclasses import dataclass, field
 from pathlib import Path
@@ -239,7 +240,7 @@ class Span:
 
     def merge(self, other: Span) -> None:
         for rate, total in other.totals.items():
-            self.totals.setdefault(rate, empty_total()).merge(total)
+            self.totals[rate].merge(total)
         self.checks.merge(other.checks)
 
 
@@ -293,7 +294,7 @@ def read(path: Path) -> Summary:
         count.record(readings[key])
 
     hours = list(spans(time, readings))
-    day = Span(0.0, DAY, {}, Checks())
+    day = Span(0.0, DAY, defaultdict(empty_total), Checks())
     for hour in hours:
         day.merge(hour)
     not_in_time = int(np.count_nonzero(~in_time))
@@ -306,16 +307,15 @@ def spans(time: Array, readings: dict[str, CheckedColumns]) -> Iterator[Span]:
     clock = empty_periods()
     starts = [row for row, instant in enumerate(time.tolist()) if clock.add(time=instant, rate=1.0)]
     edges = [0, *starts, len(time)]
-    periods: dict[str, Periods] = {}
+    periods: dict[str, Periods] = defaultdict(empty_periods)
     checks = Checks()
     for start, end in zip(edges, edges[1:]):
         rows = Rows(readings, slice(start, end))
         rows.evaluate()
         finished = {}
         for rate, (value, quality) in rows.rates.items():
-            running = periods.setdefault(rate, empty_periods())
             # The first row of an hour finishes the hour before.
-            finished[rate] = running.add(time=time[start:end], rate=value, quality=quality)
+            finished[rate] = periods[rate].add(time=time[start:end], rate=value, quality=quality)
         if all(finished.values()):
             yield span({rate: ended[0] for rate, ended in finished.items()}, checks)
         checks = rows.checks
