@@ -337,7 +337,7 @@ pub fn run<'py>(
     py: Python<'py>,
     name: &str,
     layout: &str,
-    labels: Vec<String>,
+    labels: Bound<'py, PyAny>,
     values: Vec<Bound<'py, PyAny>>,
 ) -> PyResult<(Bound<'py, PyList>, Bound<'py, PyAny>)> {
     let process = process_named(name).ok_or_else(|| internal(format!("no process {name:?}")))?;
@@ -345,7 +345,7 @@ pub fn run<'py>(
     if let Some(items) = plain {
         return run_once(py, process, layout, &items?);
     }
-    let (sources, names, flat) = flatten(py, &labels, &values)?;
+    let (sources, names, flat) = flatten(py, &labels.extract::<Vec<String>>()?, &values)?;
     let names: Vec<&str> = names.iter().map(String::as_str).collect();
     let arguments = Arguments::read(py, &names, &flat)?;
     let table = Table { sources, columns: arguments.columns()? };
