@@ -4,7 +4,7 @@
 //! The program reads, calls the library, and prints. `moistair-ffi/examples/plant_day.c` and
 //! `moistair-py/examples/plant_day.py` print the same bytes. `make_plant_day_log.rs` made the log and tells its story.
 #![allow(clippy::indexing_slicing, reason = "every place is a constant below the length of its array")]
-use std::error::Error;
+use core::error::Error;
 use std::fs::File;
 use std::io::{BufRead, BufReader};
 
