@@ -1,7 +1,7 @@
 //! A short tour: a state of moist air, what can be read from it, and a coil that cools it.
 
-use moistair_core::process::coil::{self, CondensateTemperature};
 use moistair_core::process::AirStream;
+use moistair_core::process::coil::{self, CondensateTemperature};
 use moistair_core::{Error, Length, MoistAir, Pressure, RelativeHumidity, Temperature, VolumeFlow};
 
 fn main() -> Result<(), Error> {

@@ -140,8 +140,8 @@ quantities! {
     TowerRange = 47, "tower range", "K", 0.0, 200.0;
     /// Total water per dry air, vapor and condensate.
     TotalWater = 48, "total water", "kg/kg", 0.0, 10.0;
-    /// Specific enthalpy that a process leaves, with its condensate.
-    LeavingEnthalpy = 49, "leaving enthalpy", "J/kg", -90_000.0, 30_000_000.0;
+    /// Specific enthalpy that a process leaves, with its condensate: down to that of ten times as much ice as dry air.
+    LeavingEnthalpy = 49, "leaving enthalpy", "J/kg", -5_200_000.0, 30_000_000.0;
 }
 
 impl Quantity {

@@ -36,16 +36,6 @@ pub enum Error {
         /// The value at saturation, or at the other end.
         max: f64,
     },
-    /// The result would hold more vapor than saturation allows; the surplus would condense.
-    #[error("{} {value} {} crosses saturation: at most {max} {} here", .quantity.name(), .quantity.unit(), .quantity.unit())]
-    Supersaturated {
-        /// What was asked for.
-        quantity: Quantity,
-        /// Its value.
-        value: f64,
-        /// Its value at saturation.
-        max: f64,
-    },
     /// The state is valid, but this property has no meaning there.
     #[error("{} has no value at this state: {}", .quantity.name(), .reason.text())]
     NoValue {
@@ -120,7 +110,6 @@ impl Error {
             Self::NotFinite { .. } => 201,
             Self::OutOfRange { .. } => 202,
             Self::Unattainable { .. } => 203,
-            Self::Supersaturated { .. } => 204,
             Self::MixedFormulations => 205,
             Self::MixedPressures => 206,
             Self::NoFlow => 207,
@@ -136,7 +125,6 @@ impl Error {
             Self::NotFinite { quantity }
             | Self::OutOfRange { quantity, .. }
             | Self::Unattainable { quantity, .. }
-            | Self::Supersaturated { quantity, .. }
             | Self::Infeasible { quantity, .. }
             | Self::NoValue { quantity, .. } => Some(quantity),
             _ => None,
@@ -150,7 +138,6 @@ impl Error {
             Self::OutOfRange { value, min, max, .. }
             | Self::Unattainable { value, min, max, .. }
             | Self::Infeasible { value, min, max, .. } => Some((value, min, max)),
-            Self::Supersaturated { value, max, .. } => Some((value, 0.0, max)),
             _ => None,
         }
     }

@@ -66,9 +66,6 @@
 // No state has this value at this dry bulb and pressure.
 #define MOISTAIR_UNATTAINABLE 203
 
-// The result would hold more vapor than saturation allows.
-#define MOISTAIR_SUPERSATURATED 204
-
 // States of different formulations in one process.
 #define MOISTAIR_MIXED_FORMULATIONS 205
 

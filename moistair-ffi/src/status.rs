@@ -25,8 +25,6 @@ pub const MOISTAIR_NOT_FINITE: i32 = 201;
 pub const MOISTAIR_OUT_OF_RANGE: i32 = 202;
 /// No state has this value at this dry bulb and pressure.
 pub const MOISTAIR_UNATTAINABLE: i32 = 203;
-/// The result would hold more vapor than saturation allows.
-pub const MOISTAIR_SUPERSATURATED: i32 = 204;
 /// States of different formulations in one process.
 pub const MOISTAIR_MIXED_FORMULATIONS: i32 = 205;
 /// Streams at different pressures where one pressure is needed.
@@ -146,7 +144,6 @@ pub fn text(code: i32) -> Option<&'static CStr> {
         MOISTAIR_NOT_FINITE => c"a value is not a finite number",
         MOISTAIR_OUT_OF_RANGE => c"a value is outside the range of its quantity",
         MOISTAIR_UNATTAINABLE => c"no state has this value at this dry bulb and pressure",
-        MOISTAIR_SUPERSATURATED => c"the result would cross saturation",
         MOISTAIR_MIXED_FORMULATIONS => c"states of different formulations cannot be combined",
         MOISTAIR_MIXED_PRESSURES => c"states at different pressures need the pressure of the outlet",
         MOISTAIR_NO_FLOW => c"the dry-air mass flow is zero",

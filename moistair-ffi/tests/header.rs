@@ -44,7 +44,7 @@ fn preamble() -> String {
     let lines = source.lines().map_while(|line| line.strip_prefix("//!"));
     let lines = lines.filter(|line| !line.contains("# Safety"));
     let text: String = lines.map(|line| format!(" *{line}\n")).collect();
-    let text = text.replace("[`MOISTAIR_OK`](status::MOISTAIR_OK)", "MOISTAIR_OK");
+    let text = text.replace("`MOISTAIR_OK`", "MOISTAIR_OK");
     format!("/*\n{text} *\n * Made from the sources; do not edit. MIT OR Apache-2.0\n */")
 }
 

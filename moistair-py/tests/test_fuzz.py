@@ -92,7 +92,7 @@ def test_processes(function):
         assert many.shape == (FUZZ,)
         return
     assert many.status.shape == (FUZZ,)
-    allowed = {0, 102, 201, 202, 203, 204, 205, 206, 207, 301, 310, 311, 312, 313}
+    allowed = {0, 102, 201, 202, 203, 205, 206, 207, 301, 310, 311, 312, 313}
     assert set(np.unique(many.status).tolist()) <= allowed
     assert many.failed == np.count_nonzero(many.status)
 

@@ -70,7 +70,7 @@ pub fn rows() -> Vec<Row> {
 fn row(i: usize, sequence: &mut Sequence) -> Row {
     let quantity = SECOND[i % SECOND.len()];
     // Blocks of one formulation, so that the column calls get long runs.
-    let formulation = if (i / SECOND.len()) % 2 == 0 { Formulation::RealGas } else { Formulation::IdealGas };
+    let formulation = if (i / SECOND.len()).is_multiple_of(2) { Formulation::RealGas } else { Formulation::IdealGas };
     // Half of the rows where people live, half anywhere.
     let everyday = sequence.unit() < 0.5;
     let (dry_bulb, pressure) = if everyday {

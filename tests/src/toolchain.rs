@@ -167,7 +167,8 @@ pub fn python() -> &'static Path {
             .arg(&wheels)
             .env("CARGO_TARGET_DIR", workshop().join("cargo"))
             .current_dir(root()));
-        let wheel = fs::read_dir(&wheels).unwrap().map(|entry| entry.unwrap().path()).next().expect("maturin made a wheel");
+        let wheel =
+            fs::read_dir(&wheels).unwrap().map(|entry| entry.unwrap().path()).next().expect("maturin made a wheel");
         run(pip(&interpreter).args(["--force-reinstall", "--no-deps"]).arg(wheel));
         interpreter
     })
