@@ -507,3 +507,40 @@ fn apparatus_dew_point_is_found() {
         holds(&[entering.into()], &again.leaving.into(), &again.exchange)
     });
 }
+
+/// Beyond the range of states the equilibrium is refused with the range in the error, and at both ends of it there is one.
+#[test]
+fn equilibrium_ends_with_the_range_of_states() {
+    check((bases(), 1e-4..0.5_f64, prop::bool::ANY), |(basis, total, freezes)| {
+        let freezing = if freezes { Freezing::Equilibrium } else { Freezing::Supercooled };
+        let make =
+            |enthalpy: f64| AirWithCondensate::from_enthalpy_and_water(joules(enthalpy), ratio(total), freezing, basis);
+        for far in [-5.1e6, 2.9e7] {
+            let Err(Error::Infeasible { quantity: Quantity::LeavingEnthalpy, value, min, max }) = make(far) else {
+                return Err(TestCaseError::fail(format!("{:?}", make(far))));
+            };
+            prop_assert!(value == far && (far < min || far > max), "{value} {min} {max}");
+            let warmest = feasible!(make(max - 1e-9 * max.abs())).air().dry_bulb().celsius();
+            prop_assert!((warmest - 150.0).abs() < 1e-3, "{warmest}");
+            prop_assert!(make(max + 1.0 + 1e-6 * max.abs()).is_err());
+            let coldest = make(min + 1e-9 * min.abs());
+            prop_assert!(coldest.is_ok() || !freezes, "{coldest:?}");
+            prop_assert!(make(min - 1.0 - 1e-6 * min.abs()).is_err());
+        }
+        Ok(())
+    });
+}
+
+/// Supercooled fog ends at −40 °C: what would be colder is ice or refused, never liquid.
+#[test]
+fn no_liquid_below_minus_forty() {
+    check((bases(), -70.0..-30.0_f64, 0.0..1e-3_f64), |(basis, t, surplus)| {
+        let (_, w, h) = numbers(&air_at(t, 1.0, basis));
+        let made =
+            AirWithCondensate::from_enthalpy_and_water(joules(h), ratio(w + surplus), Freezing::Supercooled, basis);
+        let made = feasible!(made);
+        sound(&WetStream::new(made, flow(1.0)).unwrap())?;
+        prop_assert!(!made.is_wet() || made.air().dry_bulb().celsius() >= -40.0);
+        Ok(())
+    });
+}

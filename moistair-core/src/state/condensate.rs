@@ -278,11 +278,18 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
     let liquid = (water - held) * M::condensed_enthalpy(warmest, pressure, Surface::Liquid);
     let ceiling = state(warmest, held).specific_enthalpy().joules_per_kilogram() + liquid;
     if !(k::<S>(0.0) <= floor.surplus && floor.enthalpy <= enthalpy && enthalpy <= ceiling) {
-        let dry = state(low, floor.humidity_ratio.at_most(water)).specific_enthalpy().joules_per_kilogram();
+        // The least of all, on whichever curve: with the surplus condensed, or down to the frost point without any.
+        let (low, curve) = if melting <= low { (k(coldest), Surface::Ice) } else { (low, curve) };
+        let least = wet(low, curve);
+        let least = if k::<S>(0.0) <= least.surplus {
+            least.enthalpy
+        } else {
+            state(dew(Surface::Ice).at_least(k(coldest)), water).specific_enthalpy().joules_per_kilogram()
+        };
         return Err(Error::Infeasible {
             quantity: Quantity::LeavingEnthalpy,
             value: enthalpy.to_f64(),
-            min: floor.enthalpy.at_most(dry).to_f64(),
+            min: least.to_f64(),
             max: ceiling.to_f64(),
         });
     }
