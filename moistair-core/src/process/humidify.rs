@@ -149,6 +149,9 @@ const CROSSING_GRID: u32 = 64;
 /// Smallest amount of steam on it, kg per kg of dry air.
 const CROSSING_LEAST: f64 = 1e-6;
 
+/// Steps of golden section: 4e-7 of the interval, and the maximum to the square of that.
+const GOLDEN_STEPS: u32 = 30;
+
 /// Steam per dry air at which the relative humidity first reaches a fraction.
 fn first_crossing<S: Scalar>(air: &MoistAir<S>, enthalpy: S, fraction: S) -> Option<S> {
     let (h1, w1) = parts(air);
@@ -178,17 +181,36 @@ fn first_crossing<S: Scalar>(air: &MoistAir<S>, enthalpy: S, fraction: S) -> Opt
         let most = k::<S>(Quantity::HumidityRatio.limits().1) - w1;
         let step = ((most / k(CROSSING_LEAST)).ln() / k(f64::from(CROSSING_GRID))).exp();
         let resolution = S::epsilon() * k(CROSSING_LEAST);
-        let (mut below, mut s) = (k::<S>(0.0), k::<S>(CROSSING_LEAST));
+        let reached = |s: S| excess(s).is_some_and(|excess| excess >= k(0.0));
+        let (mut older, mut below) = ((k::<S>(0.0), -S::infinity()), (k::<S>(0.0), -S::infinity()));
+        let mut s = k::<S>(CROSSING_LEAST);
         for _ in 0..=CROSSING_GRID {
-            if excess(s)? >= k(0.0) {
+            let value = excess(s).unwrap_or(-S::infinity());
+            // Between points the line may touch saturation and turn back.
+            let turned = older.1 <= below.1 && value < below.1;
+            let beyond = if turned { greatest(older.0, s, |s| excess(s).unwrap_or(-S::infinity())) } else { s };
+            if reached(beyond) {
                 // Zero slope: pure halving, the function has no simple one.
-                return Some(solve::increasing(below, s, resolution, |s| (excess(s).unwrap_or(k(1.0)), k(0.0))));
+                let excess = |s| (excess(s).unwrap_or(k(1.0)), k(0.0));
+                return Some(solve::increasing(older.0, beyond, resolution, excess));
             }
-            below = s;
-            s = s * step;
+            excess(s)?;
+            (older, below, s) = (below, (s, value), s * step);
         }
         None
     })
+}
+
+/// Where a function with one maximum between two points is greatest, by golden section.
+fn greatest<S: Scalar>(low: S, high: S, f: impl Fn(S) -> S) -> S {
+    const GOLDEN: f64 = 0.618_033_988_749_894_8;
+    let (mut low, mut high) = (low, high);
+    for _ in 0..GOLDEN_STEPS {
+        let reach = (high - low) * k(GOLDEN);
+        let (left, right) = (high - reach, low + reach);
+        if f(left) < f(right) { low = left } else { high = right }
+    }
+    (low + high) * k(0.5)
 }
 
 /// Sprays liquid water of any temperature into the air; what equilibrium does not evaporate is carried as droplets.

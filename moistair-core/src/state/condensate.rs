@@ -284,7 +284,7 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
         let least = if k::<S>(0.0) <= least.surplus {
             least.enthalpy
         } else {
-            state(dew(Surface::Ice).at_least(k(coldest)), water).specific_enthalpy().joules_per_kilogram()
+            state(k::<S>(coldest).at_least(dew(Surface::Ice)), water).specific_enthalpy().joules_per_kilogram()
         };
         return Err(Error::Infeasible {
             quantity: Quantity::LeavingEnthalpy,
