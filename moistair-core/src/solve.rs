@@ -2,9 +2,12 @@
 
 use crate::real::{Scalar, k};
 
-/// Evaluations at most. Halving an interval of states down to the resolution of an `f64` takes 56, Newton usually under ten;
-/// a sweep over all processes prints the most that any took.
+/// Evaluations at most. Halving an interval of states down to the resolution of an `f64` takes 56, after Newton has been tried; a
+/// sweep over all processes prints the most that any took.
 pub const ITERATION_CAP: u32 = 80;
+
+/// Newton usually ends in under ten. Where rounding makes a function rough it may wander; from here on only halving.
+const NEWTON_STEPS: u32 = 16;
 
 /// Of a temperature in °C: a quarter of a unit in the last place at 273.15 K, below which no state changes.
 pub fn temperature_resolution<S: Scalar>() -> S {
@@ -12,7 +15,7 @@ pub fn temperature_resolution<S: Scalar>() -> S {
 }
 
 /// The root of an increasing function in `[low, high]`, by Newton where its step stays inside what is known to hold the root,
-/// by halving elsewhere. `f` returns value and slope; a NaN value counts as positive (beyond the root).
+/// by halving elsewhere and after [`NEWTON_STEPS`]. `f` returns value and slope; a NaN value counts as positive (beyond the root).
 ///
 /// Ends when the interval is no wider than the resolution, or the step no longer changes `x`; the value returned is then
 /// within a few units in the last place of the root, or of the end of the bracket nearest to it.
@@ -38,7 +41,11 @@ fn search<S: Scalar>(low: S, high: S, resolution: S, f: impl Fn(S) -> (S, S)) ->
             high = x;
         }
         let newton = x - value / slope;
-        let next = if low < newton && newton < high { newton } else { low + (high - low) * k(0.5) };
+        let next = if evaluations <= NEWTON_STEPS && low < newton && newton < high {
+            newton
+        } else {
+            low + (high - low) * k(0.5)
+        };
         if next == x || high - low <= resolution || !(low < next && next < high) {
             return (x, evaluations);
         }

@@ -124,7 +124,7 @@ impl<S: Scalar> AirWithCondensate<S> {
     /// Vapor, liquid and ice in equilibrium, from the enthalpy and the water of all phases together, per mass of dry air.
     ///
     /// At the melting temperature all three phases coexist over a range of enthalpy. Bounded work: at most
-    /// 80 evaluations, usually under ten.
+    /// 80 evaluations, ten in the middle.
     ///
     /// # Errors
     /// [`Error::OutOfRange`], [`Error::NotFinite`], or [`Error::Infeasible`] where the result would leave the range of states.
