@@ -1,5 +1,7 @@
 //! What can be wrong, with the quantity, its value and its limits.
 
+use core::fmt;
+
 use crate::bounds::Quantity;
 
 /// Why a call gives no result. `Copy`, and formats its text only when asked to.
@@ -13,7 +15,7 @@ pub enum Error {
         quantity: Quantity,
     },
     /// A value lies outside the declared range of its quantity.
-    #[error("{} {value} {} is outside {min} to {max} {}{}", .quantity.name(), .quantity.unit(), .quantity.unit(), .quantity.likely_slip(*.value))]
+    #[error("{} {value}{} is outside {min} to {max}{}{}", .quantity.name(), Unit(*.quantity), Unit(*.quantity), .quantity.likely_slip(*.value))]
     OutOfRange {
         /// Which input.
         quantity: Quantity,
@@ -25,7 +27,7 @@ pub enum Error {
         max: f64,
     },
     /// A value is in its declared range, but no state has it at this dry bulb and pressure.
-    #[error("{} {value} {} has no state here: at this dry bulb and pressure it lies between {min} and {max} {}{}", .quantity.name(), .quantity.unit(), .quantity.unit(), .quantity.likely_slip(*.value))]
+    #[error("{} {value}{} has no state here: at this dry bulb and pressure it lies between {min} and {max}{}{}", .quantity.name(), Unit(*.quantity), Unit(*.quantity), .quantity.likely_slip(*.value))]
     Unattainable {
         /// Which input.
         quantity: Quantity,
@@ -54,7 +56,7 @@ pub enum Error {
     #[error("the dry-air mass flow is zero: heat or water would have nothing to go to")]
     NoFlow,
     /// A process cannot do what was asked; the value and the limits that bind it.
-    #[error("{} {value} {} cannot be reached by this process: {min} to {max} {}", .quantity.name(), .quantity.unit(), .quantity.unit())]
+    #[error("{} {value}{} cannot be reached by this process: {min} to {max}{}", .quantity.name(), Unit(*.quantity), Unit(*.quantity))]
     Infeasible {
         /// What was asked for.
         quantity: Quantity,
@@ -71,6 +73,18 @@ pub enum Error {
         /// The selector as given.
         code: i32,
     },
+}
+
+/// The unit behind a number, with the space between them; nothing for a quantity of unit one.
+struct Unit(Quantity);
+
+impl fmt::Display for Unit {
+    fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
+        match self.0.unit() {
+            "1" => Ok(()),
+            unit => write!(f, " {unit}"),
+        }
+    }
 }
 
 /// Why a property has no value at a valid state.

@@ -16,7 +16,7 @@ fn texts_name_quantity_value_and_limits() {
             Quantity::RelativeHumidity,
             50.0,
             101_325.0,
-            "relative humidity 50 1 is outside 0 to 1.6 1; a percentage? a fraction is expected",
+            "relative humidity 50 is outside 0 to 1.6; a percentage? a fraction is expected",
         ),
         (
             20.0,
