@@ -32,7 +32,14 @@ fn from_parts(py: Python<'_>, parts: Parts) -> PyErr {
 pub fn unknown_name(py: Python<'_>, name: &str) -> PyErr {
     from_parts(
         py,
-        (102, format!("{name} is no property of a state"), None::<String>, None::<f64>, None::<f64>, None::<f64>),
+        (
+            102,
+            format!("{name} is no property of a state; moistair.PROPERTIES lists them"),
+            None::<String>,
+            None::<f64>,
+            None::<f64>,
+            None::<f64>,
+        ),
     )
 }
 

@@ -8,6 +8,7 @@ use moistair_core::{
     Basis, Error, Formulation, HumidityRatio, Length, MoistAir as Air, Pressure, Quantity, Temperature,
 };
 use numpy::{PyArray1, PyArrayDyn, PyArrayMethods, PyReadwriteArrayDyn, PyUntypedArrayMethods};
+use pyo3::CastIntoError;
 use pyo3::exceptions::{PyTypeError, PyValueError};
 use pyo3::prelude::*;
 use pyo3::sync::PyOnceLock;
@@ -41,8 +42,12 @@ pub enum Content {
 /// make an array of states, whose attributes are float64 arrays of the common shape. Values come bit for bit the same
 /// either way. float32 columns are taken, and computed in float64: differences of enthalpies would lose their digits otherwise.
 ///
+/// Rows are paired by position. Columns of pandas are taken as arrays and must have equal labels; attributes are arrays in the
+/// order of the rows, so that ``log["wet_bulb"] = air.wet_bulb`` fits.
+///
 /// A state is immutable. One state raises where it cannot be made or where a property has no value. In an array a bad
-/// row costs only itself: NaN, with its code in `status`.
+/// row costs only itself: NaN, with its code in `status`; it warns of nothing, so look at `failed`. An attribute beyond what fixes
+/// the state is computed whenever it is read: keep it, or take several at once by `properties`.
 ///
 /// Parameters
 /// ----------
@@ -359,6 +364,10 @@ impl MoistAir {
     }
 
     /// Why a row has no state: 0 where it has one, else the code of the error. An int32 array; 0 for one state.
+    ///
+    /// 201 is what raises NotFiniteError for one state, 202 OutOfRangeError, 203 UnattainableError, 310 to 313 NoValueError.
+    /// Processes add 205 to 207 (ProcessError) and 301 (InfeasibleError). That a property has no value at a valid state is no
+    /// failure of the row: the property is NaN, its status 0.
     #[getter]
     fn status<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
         match &self.content {
@@ -418,7 +427,7 @@ impl MoistAir {
         out: Option<Bound<'py, PyDict>>,
     ) -> PyResult<Bound<'py, PyDict>> {
         let names: Vec<Bound<'py, PyString>> =
-            names.iter().map(|name| Ok(name.cast_into()?)).collect::<PyResult<_>>()?;
+            names.iter().map(|name| name.cast_into().map_err(not_a_name)).collect::<PyResult<_>>()?;
         let quantities = names
             .iter()
             .map(|name| property_named(&name.to_cow()?).ok_or_else(|| unknown_name(py, &name.to_string())))
@@ -709,6 +718,14 @@ impl<'py> Target<'py> {
         }
         Ok(())
     }
+}
+
+fn not_a_name(error: CastIntoError<'_>) -> PyErr {
+    let got = error.into_inner();
+    PyTypeError::new_err(format!(
+        "names of properties are strings, one argument each, as properties('wet_bulb', 'dew_point'); not {}",
+        got.get_type()
+    ))
 }
 
 /// The one second property that is given.

@@ -77,3 +77,15 @@ def test_process_errors():
         with pytest.raises(moistair.ProcessError) as caught:
             call()
         assert caught.value.code == code
+
+
+def test_fractions_are_told_without_a_unit():
+    with pytest.raises(moistair.OutOfRangeError, match="^relative humidity 38 is outside 0 to 1.6; "):
+        stream(rh=38.0)
+
+
+def test_names_of_properties_say_what_to_do():
+    with pytest.raises(moistair.UnknownNameError, match="warmth is no property of a state; moistair.PROPERTIES lists them"):
+        stream().air.properties("warmth")
+    with pytest.raises(TypeError, match=r"strings, one argument each, .* not <class 'list'>"):
+        stream().air.properties(["wet_bulb", "dew_point"])

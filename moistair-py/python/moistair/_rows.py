@@ -38,6 +38,7 @@ class Record:
 
     @property
     def status(self) -> Status:
+        """0 where the row has a result, else the code of the error: see `MoistAir.status`."""
         return self.__dict__.get("_status", 0)  # type: ignore[no-any-return]
 
     @property
