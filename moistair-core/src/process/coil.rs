@@ -172,7 +172,8 @@ pub fn by_bypass_factor<S: Scalar>(
 
 /// The coil between two measured states. Differences of humidity ratio within `dead_band` are noise of the sensors: the coil then
 /// counts as dry and the air keeps the humidity ratio that it enters with, so that noise does not add up to condensate. Only what
-/// the leaving air cannot hold at its temperature still condenses.
+/// the leaving air cannot hold at its temperature still condenses. Air that leaves warmer, by noise or by a heater, makes a
+/// negative load.
 ///
 /// # Errors
 /// [`Error::Infeasible`] when the leaving air is moister by more than the dead band, and as [`to_state`]; [`Error::MixedFormulations`];

@@ -47,7 +47,7 @@ class Cooling(Record, Generic[T]):
     exchange : Exchange
         Heat and water into the air, both negative here.
     cooling_load : float or numpy.ndarray
-        Heat taken out by the coil, W, positive.
+        Heat taken out by the coil, W, positive; negative only from `between`, where the leaving air reads warmer.
     sensible : float or numpy.ndarray
         ṁ (h(t₁, W₂) − h(t₂, W₂)), W.
     latent : float or numpy.ndarray
@@ -280,7 +280,7 @@ def between(
 
     Differences of humidity ratio within the dead band are noise of the sensors: the coil then counts as dry and the air
     keeps the humidity ratio that it enters with, so that noise does not add up to condensate. Only what the leaving air
-    cannot hold at its temperature still condenses.
+    cannot hold at its temperature still condenses. Air that leaves warmer, by noise or by a heater, makes a negative load.
 
     Parameters
     ----------
