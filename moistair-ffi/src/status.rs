@@ -117,6 +117,8 @@ impl From<Failure> for moistair_error {
             }
             Failure::Core(error) => {
                 let (value, min, max) = error.value_and_limits().unwrap_or((NAN, NAN, NAN));
+                // Every NaN that leaves the library is the same one.
+                let [value, min, max] = [value, min, max].map(|number| if number.is_nan() { NAN } else { number });
                 let quantity = error.quantity().map_or(-1, |quantity| quantity.code());
                 Self { value, min, max, code: error.code(), quantity }
             }
