@@ -68,7 +68,7 @@ fn units_convert_back() {
             let back = unit.to_core(unit.from_core(value));
             assert!((back - value).abs() <= 4.0 * f64::EPSILON * (value.abs() + 300.0), "{value} {unit}: {back}");
         }
-        assert_eq!(unit.from_core(-0.0).is_sign_negative(), false, "{unit}");
+        assert!(!unit.from_core(-0.0).is_sign_negative(), "{unit}");
     }
 }
 

@@ -281,7 +281,18 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
         let (min, max) = quantity.limits();
         let max = k::<S>(max);
         let max = if surface == Surface::Ice { M::melting_temperature(self.air.pascals).at_most(max) } else { max };
-        within(quantity, value, k(min), max)
+        within(quantity, self.not_above_dry_bulb(value, surface), k(min), max)
+    }
+
+    /// No state holds more vapor than liquid water allows: over liquid neither wet bulb nor dew point exceeds the dry bulb, though
+    /// the last bits of a solve may. Over ice they may exceed it truly.
+    fn not_above_dry_bulb(&self, value: S, surface: Surface) -> S {
+        let over_liquid = match surface {
+            Surface::Liquid => true,
+            Surface::Ice => false,
+            Surface::Stable => M::melting_temperature(self.air.pascals) <= value,
+        };
+        if over_liquid { value.at_most(self.air.celsius) } else { value }
     }
 }
 
