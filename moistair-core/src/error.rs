@@ -3,6 +3,7 @@
 use core::fmt;
 
 use crate::bounds::Quantity;
+use crate::real::k;
 
 /// Why a call gives no result. `Copy`, and formats its text only when asked to.
 #[derive(Clone, Copy, Debug, PartialEq, thiserror::Error)]
@@ -160,12 +161,12 @@ impl Error {
 /// `value` if it is finite and within the declared range of its quantity.
 pub(crate) fn checked<S: crate::Scalar>(quantity: Quantity, value: S) -> Result<S, Error> {
     let (min, max) = quantity.limits();
-    let wide = value.to_f64();
-    if !wide.is_finite() {
+    if !value.is_finite() {
         return Err(Error::NotFinite { quantity });
     }
-    if !(min <= wide && wide <= max) {
-        return Err(Error::OutOfRange { quantity, value: wide, min, max });
+    // In the arithmetic of the value: in single precision 0.05 lies above the limit 0.05, and is meant to lie on it.
+    if !(k::<S>(min) <= value && value <= k(max)) {
+        return Err(Error::OutOfRange { quantity, value: value.to_f64(), min, max });
     }
     Ok(value)
 }

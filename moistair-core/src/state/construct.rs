@@ -14,7 +14,8 @@ use super::property::{View, saturates};
 /// Newton steps for humidity ratio from enthalpy, volume or wet bulb; see the test of this module.
 pub(super) const RATIO_STEPS: usize = 3;
 
-/// A value this close beyond saturation, relative in the humidity ratio, counts as saturated: it is rounding.
+/// A value this close beyond saturation, relative in the humidity ratio, counts as saturated: it is rounding. In single
+/// precision it is [`saturation_rounding`].
 pub(crate) const SATURATION_TOLERANCE: f64 = 1e-9;
 
 /// A property that fixes a state together with dry bulb and pressure, by its own type. Sealed.
@@ -64,9 +65,10 @@ second_properties! {
 impl<S: Scalar> MoistAir<S> {
     /// A state from dry bulb, any second property by its type, and a basis (a pressure, or pressure and formulation).
     ///
-    /// Range: dry bulb −80 to 150 °C, 20 to 1100 kPa, water mole fraction to 0.95, vapor up to saturation over liquid water (over
+    /// Range: dry bulb −80 to 150 °C, 20 to 1100 kPa, humidity ratio to 10 kg/kg, vapor up to saturation over liquid water (over
     /// ice below −40 °C, where no liquid lasts). Vapor supersaturated over ice is a valid state. The dry bulb reads back
-    /// bit for bit. A second property within 1e-9 beyond saturation is taken as saturated.
+    /// bit for bit. A second property within 1e-9 beyond saturation in the humidity ratio is taken as saturated (in single precision
+    /// within 1.2e-4, and more where vapor outweighs the air).
     ///
     /// # Errors
     /// [`Error::NotFinite`], [`Error::OutOfRange`] for a value outside its declared range, [`Error::Unattainable`] where no state has it,
@@ -134,7 +136,7 @@ impl<S: Scalar> MoistAir<S> {
                 let gas = mixture.gas(pressure, humidity_ratio);
                 Self { celsius, pascals: pressure, humidity_ratio, gas, formulation: basis.formulation() }
             };
-            match settle(ratio, limit) {
+            match settle(ratio, limit, is_searched(quantity)) {
                 Some(humidity_ratio) => Ok(inside(humidity_ratio)),
                 None => {
                     let end = |humidity_ratio: S| {
@@ -189,15 +191,34 @@ impl<S: Scalar> MoistAir<S> {
 }
 
 /// The ratio if it lies between dry and saturated, snapped to the ends when rounding carried it past them.
-fn settle<S: Scalar>(ratio: S, limit: S) -> Option<S> {
-    // f32 cannot resolve the tolerance; a few of its own units then stand for it. In very dry air the last bits of a density or an
-    // enthalpy are worth more vapor than that.
-    let bits = S::epsilon() * k(8.0);
-    let tolerance = limit * k::<S>(SATURATION_TOLERANCE).at_least(bits) + bits;
+fn settle<S: Scalar>(ratio: S, limit: S, searched: bool) -> Option<S> {
+    // In very dry air the last bits of a density or an enthalpy are worth more vapor than any share of it.
+    let bits = if searched { S::epsilon() * k(8.0) } else { k(0.0) };
+    let tolerance = (limit * k(SATURATION_TOLERANCE)).at_least(saturation_rounding(limit)) + bits;
     if !((-tolerance).le(ratio) && ratio.le(limit + tolerance)) {
         return None;
     }
     Some(ratio.at_least(k(0.0)).at_most(limit))
+}
+
+/// What rounding may carry a saturated humidity ratio past saturation. As much in the mole fraction is more in the humidity
+/// ratio where there is little air: d ln W = d ln x / (1 − x).
+fn saturation_rounding<S: Scalar>(ratio: S) -> S {
+    ratio * (ratio * k(1.6) + k(1.0)) * S::epsilon() * k(1024.0)
+}
+
+/// Whether the humidity ratio that goes with a quantity is searched for, not computed.
+const fn is_searched(quantity: Quantity) -> bool {
+    matches!(
+        quantity,
+        Quantity::SpecificEnthalpy
+            | Quantity::SpecificVolume
+            | Quantity::Density
+            | Quantity::AbsoluteHumidity
+            | Quantity::WetBulb
+            | Quantity::WetBulbOverLiquid
+            | Quantity::WetBulbOverIce
+    )
 }
 
 /// Whether liquid water, supercooled if need be, exists at a temperature, °C.

@@ -4,6 +4,7 @@ use std::println;
 use std::vec::Vec;
 
 use super::*;
+use crate::Formulation;
 use crate::checks::Random;
 use crate::mixture::{IdealGas, RealGas};
 use crate::real::Lanes;
@@ -52,6 +53,49 @@ fn ratio_steps_are_enough_and_none_is_idle() {
     const BOUND: f64 = 1e-10;
     assert!(left_over::<RATIO_STEPS>() <= BOUND);
     assert!(left_over::<{ RATIO_STEPS - 1 }>() > BOUND, "one step fewer does as well: the constant is stale");
+}
+
+/// The list of what is searched for is the one that the constructor goes by.
+#[test]
+fn searched_quantities() {
+    for &quantity in Quantity::ALL {
+        assert_eq!(is_searched(quantity), SEARCHED.contains(&quantity), "{quantity:?}");
+    }
+}
+
+/// In single precision as in double: what is read from a state makes a state again, at dry, saturated and between, to the ends of
+/// every range; and vapor beyond saturation is refused, not cut off, also where there is hardly any.
+#[test]
+fn single_precision_closes_at_saturation() {
+    let mut made = 0;
+    for formulation in [Formulation::RealGas, Formulation::IdealGas] {
+        for (celsius, pascals) in (0..=115)
+            .flat_map(|i| [20e3_f32, 60e3, 101_325.0, 300e3, 1.1e6].map(|pascals| (-80.0 + 2.0 * i as f32, pascals)))
+        {
+            let basis = Basis::new(Pressure::from_pascals(pascals), formulation);
+            let by = |quantity, value| {
+                MoistAir::from_dry_bulb_and(Temperature::from_celsius(celsius), quantity, value, basis)
+            };
+            let (_, most) = Quantity::HumidityRatio.limits();
+            let limit = by(Quantity::HumidityRatio, most as f32).map_or_else(
+                |error| error.value_and_limits().unwrap().2 as f32,
+                |air| air.humidity_ratio().kilograms_per_kilogram(),
+            );
+            for share in [0.0, 0.5, 1.0] {
+                let air = by(Quantity::HumidityRatio, share * limit).unwrap();
+                for &quantity in Quantity::ALL.iter().filter(|quantity| quantity.fixes_state()) {
+                    let Ok(value) = air.value(quantity) else { continue };
+                    let again = by(quantity, value);
+                    assert!(again.is_ok(), "{formulation:?} {celsius} °C, {pascals} Pa, share {share}: {again:?}");
+                    made += 1;
+                }
+            }
+            let beyond = by(Quantity::HumidityRatio, limit * 1.05);
+            assert!(beyond.is_err(), "{formulation:?} {celsius} °C, {pascals} Pa: {beyond:?}");
+        }
+    }
+    println!("{made} states made again");
+    assert!(made > 40_000);
 }
 
 /// Every kernel at one point: what columns compute in lanes and states compute alone.
