@@ -197,3 +197,10 @@ impl Quantity {
         }
     }
 }
+
+/// Its name.
+impl core::fmt::Display for Quantity {
+    fn fmt(&self, f: &mut core::fmt::Formatter<'_>) -> core::fmt::Result {
+        f.pad(self.name())
+    }
+}

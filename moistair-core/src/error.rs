@@ -10,13 +10,13 @@ use crate::real::k;
 #[non_exhaustive]
 pub enum Error {
     /// A value is NaN or infinite.
-    #[error("{} is not a finite number", .quantity.name())]
+    #[error("{quantity} is not a finite number")]
     NotFinite {
         /// Which input.
         quantity: Quantity,
     },
     /// A value lies outside the declared range of its quantity.
-    #[error("{} {value}{} is outside {min} to {max}{}{}", .quantity.name(), Unit(*.quantity), Unit(*.quantity), .quantity.likely_slip(*.value))]
+    #[error("{quantity} {value}{} is outside {min} to {max}{}{}", Unit(*.quantity), Unit(*.quantity), .quantity.likely_slip(*.value))]
     OutOfRange {
         /// Which input.
         quantity: Quantity,
@@ -28,7 +28,7 @@ pub enum Error {
         max: f64,
     },
     /// A value is in its declared range, but no state has it at this dry bulb and pressure.
-    #[error("{} {value}{} has no state here: at this dry bulb and pressure it lies between {min} and {max}{}{}", .quantity.name(), Unit(*.quantity), Unit(*.quantity), .quantity.likely_slip(*.value))]
+    #[error("{quantity} {value}{} has no state here: at this dry bulb and pressure it lies between {min} and {max}{}{}", Unit(*.quantity), Unit(*.quantity), .quantity.likely_slip(*.value))]
     Unattainable {
         /// Which input.
         quantity: Quantity,
@@ -40,7 +40,7 @@ pub enum Error {
         max: f64,
     },
     /// The state is valid, but this property has no meaning there.
-    #[error("{} has no value at this state: {}", .quantity.name(), .reason.text())]
+    #[error("{quantity} has no value at this state: {reason}")]
     NoValue {
         /// Which property.
         quantity: Quantity,
@@ -57,7 +57,7 @@ pub enum Error {
     #[error("the dry-air mass flow is zero: heat or water would have nothing to go to")]
     NoFlow,
     /// A process cannot do what was asked; the value and the limits that bind it.
-    #[error("{} {value}{} cannot be reached by this process: {min} to {max}{}", .quantity.name(), Unit(*.quantity), Unit(*.quantity))]
+    #[error("{quantity} {value}{} cannot be reached by this process: {min} to {max}{}", Unit(*.quantity), Unit(*.quantity))]
     Infeasible {
         /// What was asked for.
         quantity: Quantity,
@@ -113,6 +113,12 @@ impl NoValue {
             Self::BelowSurfaceRange => "it would lie below the range of saturation over this surface",
             Self::AboveSurfaceRange => "it would lie above the range of saturation over this surface",
         }
+    }
+}
+
+impl core::fmt::Display for NoValue {
+    fn fmt(&self, f: &mut core::fmt::Formatter<'_>) -> core::fmt::Result {
+        f.pad(self.text())
     }
 }
 
