@@ -3,6 +3,8 @@
 use moistair_core::*;
 use proptest::prelude::*;
 
+use crate::support::cases;
+
 /// Any bits, and numbers near the domain.
 fn any_number(low: f64, high: f64) -> impl Strategy<Value = f64> {
     prop_oneof![
@@ -53,7 +55,7 @@ fn inspect(air: &MoistAir) -> Result<(), TestCaseError> {
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(20_000))]
+    #![proptest_config(cases(20_000))]
 
     #[test]
     fn any_bits((celsius, pascals, quantity, value, formulation) in any_argument()) {

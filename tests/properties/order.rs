@@ -3,13 +3,13 @@
 use moistair_core::*;
 use proptest::prelude::*;
 
-use crate::support::{from_ratio, greatest_ratio, place, ratio, state};
+use crate::support::{cases, from_ratio, greatest_ratio, place, ratio, state};
 
 /// Two solved temperatures may each be 1e-9 K off.
 const SOLVES: f64 = 2e-9;
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(2_000))]
+    #![proptest_config(cases(2_000))]
 
     /// Over liquid: dew point ≤ wet bulb ≤ dry bulb. Over ice the same, for air not supersaturated over it; the other way round for
     /// air that is.

@@ -5,9 +5,9 @@ use std::collections::BTreeMap;
 
 use moistair_core::*;
 use proptest::prelude::*;
-use proptest::test_runner::{Config, TestRunner};
+use proptest::test_runner::TestRunner;
 
-use crate::support::{from_ratio, greatest_ratio, ratio, state};
+use crate::support::{cases, from_ratio, greatest_ratio, ratio, state};
 
 /// What of a value rounding and its solve may have changed: of a wet bulb 5e-10 K, of a dew or frost point 5e-12 K (what their steps
 /// leave, as the core's own tests measure); of other values four units in the last place of what they are computed from
@@ -36,7 +36,7 @@ fn slope(quantity: Quantity, air: &MoistAir) -> Option<f64> {
 #[test]
 fn every_second_property() {
     let worst = RefCell::new(BTreeMap::<&str, (usize, f64)>::new());
-    let mut runner = TestRunner::new(Config { cases: 1_500, ..Config::default() });
+    let mut runner = TestRunner::new(cases(1_500));
     let law = |air: MoistAir| {
         let (w, celsius) = (ratio(&air), air.dry_bulb());
         for quantity in Quantity::ALL.iter().copied().filter(|quantity| quantity.fixes_state()) {

@@ -3,6 +3,11 @@
 use moistair_core::*;
 use proptest::prelude::*;
 
+/// How many cases a law is tried on: so many, or `MOISTAIR_CASES`.
+pub fn cases(usual: u32) -> ProptestConfig {
+    ProptestConfig::with_cases(std::env::var("MOISTAIR_CASES").map_or(usual, |cases| cases.parse().unwrap()))
+}
+
 /// Dry bulb, basis, and a share of the most vapor that a state there holds; corners often.
 pub fn place() -> impl Strategy<Value = (f64, Basis, f64)> {
     let celsius = prop_oneof![
