@@ -57,7 +57,7 @@ fn compile(source: &str, flags: &[&str], workshop: &Path) -> Result<Library, Str
     object_command.args(flags).args(always).arg("-I").arg(header).arg(folder().join(source));
     run(object_command.arg("-o").arg(&object))?;
     run(Command::new(&compiler).arg("-shared").arg(&object).arg("-o").arg(&shared).arg("-lm"))?;
-    // SAFETY: made a moment ago from a source of this folder, which has no initialisers.
+    // SAFETY: made a moment ago from a source of this folder, which has no initializers.
     unsafe { Library::new(&shared) }.map_err(|error| error.to_string())
 }
 

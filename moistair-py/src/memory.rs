@@ -42,7 +42,7 @@ plain! {
 
 /// The bytes of a structure.
 pub fn bytes<T: Plain>(value: &T) -> &[u8] {
-    // SAFETY: the structure has no padding, so that all its bytes are initialised; the slice lives no longer than it.
+    // SAFETY: the structure has no padding, so that all its bytes are initialized; the slice lives no longer than it.
     unsafe { core::slice::from_raw_parts(core::ptr::from_ref(value).cast(), size_of::<T>()) }
 }
 

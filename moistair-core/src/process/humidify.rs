@@ -216,7 +216,7 @@ fn greatest<S: Scalar>(low: S, high: S, f: impl Fn(S) -> S) -> S {
 /// Sprays liquid water of any temperature into the air; what equilibrium does not evaporate is carried as droplets.
 ///
 /// h₂ = h₁ + s h_w: nearly along the wet-bulb line. All of the water comes to equilibrium with all of the air; a washer, which
-/// circulates many times more, is not modelled here.
+/// circulates many times more, is not modeled here.
 ///
 /// # Errors
 /// As [`steam`].

@@ -4,7 +4,7 @@
 //! out of the cold end, and drift leaves with the enthalpy of the cold water.
 //!
 //! Towers spread *Legionella* if they are not treated, cleaned and fitted with drift eliminators: national hygiene rules and licensed
-//! practice govern. Not modelled: natural draft, by-pass, freezing basins.
+//! practice govern. Not modeled: natural draft, by-pass, freezing basins.
 
 use super::{AirStream, Exchange, WetStream, infeasible, parts};
 use crate::basis::with_mixture;

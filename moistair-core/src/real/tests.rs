@@ -264,7 +264,7 @@ fn bits_are_the_same_everywhere() {
 
 /// Among random arguments and on both sides of every seam between two reductions.
 #[test]
-fn neighbouring_arguments_do_not_fall() {
+fn neighboring_arguments_do_not_fall() {
     let ln_2 = core::f64::consts::LN_2;
     let exp_seams = (-1021..1024).map(|n| (f64::from(n) + 0.5) * ln_2);
     let ln_seams = (-200..200).map(|n| core::f64::consts::FRAC_1_SQRT_2 * unit(1.0, 1 - n, -1022));

@@ -227,7 +227,7 @@ def spray(entering: AirStream[Any], *, water_flow: ArrayLike, water_temperature:
     """Sprays liquid water of any temperature into the air; what equilibrium does not evaporate is carried as droplets.
 
     Nearly along the wet-bulb line. All of the water comes to equilibrium with all of the air; a washer, which circulates
-    many times more, is not modelled here.
+    many times more, is not modeled here.
 
     Parameters
     ----------

@@ -1,7 +1,7 @@
 """Wet cooling towers: the overall balance of heat and water, and the use of water.
 
 Towers spread Legionella if they are not treated, cleaned and fitted with drift eliminators: national hygiene rules and
-licensed practice govern. Not modelled: natural draft, by-pass, freezing basins.
+licensed practice govern. Not modeled: natural draft, by-pass, freezing basins.
 """
 
 from __future__ import annotations
