@@ -17,7 +17,10 @@
 #![cfg_attr(not(feature = "std"), no_std)]
 #![allow(non_camel_case_types, reason = "the types carry their names in C")]
 #![allow(clippy::missing_safety_doc, reason = "the contract is one for all functions, at the top of the crate")]
-#![allow(rustdoc::broken_intra_doc_links, reason = "[s] and the like are units, not links; the text goes to the header")]
+#![allow(
+    rustdoc::broken_intra_doc_links,
+    reason = "[s] and the like are units, not links; the text goes to the header"
+)]
 
 pub mod account;
 pub mod columns;
