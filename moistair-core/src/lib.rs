@@ -28,7 +28,6 @@ pub use bounds::{PROPERTY_COUNT, Quantity};
 pub use error::{Error, NoValue};
 pub use quantity::*;
 pub use real::Scalar;
-pub use saturation::Surface;
 pub use state::{AirWithCondensate, Freezing, MoistAir, SecondProperty, liquid_water_enthalpy};
 
 /// Changes when any result changes in any bit; the change log then states by how much.
