@@ -284,7 +284,9 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
         let least = if k::<S>(0.0) <= least.surplus {
             least.enthalpy
         } else {
-            state(k::<S>(coldest).at_least(dew(Surface::Ice)), water).specific_enthalpy().joules_per_kilogram()
+            // Hardly any water has a frost point far from all states, and none has none.
+            let frost = dew(Surface::Ice);
+            state(if in_range(frost) { frost } else { k(coldest) }, water).specific_enthalpy().joules_per_kilogram()
         };
         return Err(Error::Infeasible {
             quantity: Quantity::LeavingEnthalpy,
