@@ -157,14 +157,14 @@ fn library(name: &str) -> PathBuf {
 
 #[test]
 fn exports_are_the_declarations() {
-    for (library, arguments) in
-        [(library("libmoistair.so"), ["-D", "--defined-only"]), (library("libmoistair.a"), ["-g", "--defined-only"])]
-    {
-        let output = Command::new("nm").args(arguments).arg(&library).output().unwrap();
+    // Not nm: where it loads the plugin of another LLVM, it does not see into objects that carry bitcode.
+    for (library, table) in [(library("libmoistair.so"), "--dyn-syms"), (library("libmoistair.a"), "--syms")] {
+        let output = Command::new("readelf").args(["--wide", table]).arg(&library).output().unwrap();
         let text = String::from_utf8(output.stdout).unwrap();
-        let symbols = text.lines().filter_map(|line| line.split_once(" T ")).map(|(_, name)| name.trim().to_string());
-        let exports: BTreeSet<_> = symbols.filter(|name| name.starts_with("moistair_")).collect();
-        assert!(exports.len() > 10, "{text}");
+        let global = text.lines().filter(|line| line.contains(" FUNC ") && line.contains(" GLOBAL "));
+        let symbols = global.filter(|line| !line.contains(" UND ")).filter_map(|line| line.split_whitespace().last());
+        let exports: BTreeSet<String> = symbols.filter(|name| name.starts_with("moistair_")).map(Into::into).collect();
+        assert!(exports.len() > 10, "{}", String::from_utf8_lossy(&output.stderr));
         assert_eq!(exports, declared(), "{}", library.display());
     }
 }
