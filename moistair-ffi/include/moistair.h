@@ -240,7 +240,7 @@
 // Condensate leaves at the temperature of the leaving air.
 #define MOISTAIR_CONDENSATE_AT_LEAVING_AIR 0
 
-// Condensate leaves at the apparatus dew point (moistair_coil_by_bypass_factor only).
+// Condensate leaves at the apparatus dew point: the given one, or that of the line from the entering to the leaving air.
 #define MOISTAIR_CONDENSATE_AT_APPARATUS 1
 
 // Condensate leaves at a given temperature.
@@ -423,7 +423,7 @@
 // The time is no number or beyond 1e11 s.
 #define MOISTAIR_REASON_TIME_INVALID 8
 
-// Refused, and filled with the last good value; cause(super::cause) keeps what was wrong.
+// Refused, and filled with the last good value; the field cause of moistair_checked says what was wrong.
 #define MOISTAIR_REASON_HELD 9
 
 // The channel itself makes no sense: limits the wrong way round, a unit of another quantity.
@@ -505,7 +505,8 @@ typedef struct {
 
 // The detail of an error. Written whenever a place for it is given; after a success code is 0 and quantity is -1.
 typedef struct {
-    // The offending value in the unit of its quantity; NaN where there is none.
+    // The offending value in the unit of its quantity; NaN where there is none. For a selector of something else than a quantity
+    // (MOISTAIR_UNKNOWN_SELECTOR) the selector given.
     double value;
     // The least value allowed; NaN where there is none.
     double min;
@@ -513,7 +514,7 @@ typedef struct {
     double max;
     // The status that the function returns.
     int32_t code;
-    // The selector of the quantity at fault; -1 where there is none. For MOISTAIR_UNKNOWN_SELECTOR the selector given.
+    // The selector of the quantity at fault, also one that is not known or does not fit; -1 where there is none.
     int32_t quantity;
 } moistair_error;
 
@@ -649,6 +650,14 @@ typedef struct {
     // 0.
     int32_t reserved;
 } moistair_cooling;
+
+// A coil by its bypass.
+typedef struct {
+    // Where the line from the entering through the leaving air meets saturation [°C].
+    double dew_point;
+    // The share of the air that seems to pass untouched [1]; 0 for air that leaves saturated.
+    double bypass_factor;
+} moistair_apparatus;
 
 // What a coil and the heater behind it did.
 typedef struct {
@@ -1074,7 +1083,7 @@ int32_t moistair_sensible_with_heat(const moistair_stream *entering,
 // entering: the stream that enters; leaving: the state that leaves; condensate: where the condensate temperature comes from,
 // MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only; done: output; error: may
 // be null.
-// Returns 0, 1xx, 2xx, 301 (the leaving air is warmer or moister).
+// Returns 0, 1xx, 2xx, 301 (the leaving air is warmer or moister; no apparatus dew point for MOISTAIR_CONDENSATE_AT_APPARATUS).
 int32_t moistair_coil_to_state(const moistair_stream *entering,
                                const moistair_state *leaving,
                                int32_t condensate,
@@ -1102,7 +1111,8 @@ int32_t moistair_coil_by_bypass_factor(const moistair_stream *entering,
 // entering: the stream that enters; leaving: the state that leaves; condensate: where the condensate temperature comes from,
 // MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only; dead_band: [kg/kg], 0 to
 // 10; done: output; error: may be null.
-// Returns 0, 1xx, 2xx, 301 (the leaving air is moister by more than the dead band).
+// Returns 0, 1xx, 2xx, 301 (the leaving air is moister by more than the dead band; no apparatus dew point for
+// MOISTAIR_CONDENSATE_AT_APPARATUS).
 int32_t moistair_coil_between(const moistair_stream *entering,
                               const moistair_state *leaving,
                               int32_t condensate,
@@ -1110,6 +1120,16 @@ int32_t moistair_coil_between(const moistair_stream *entering,
                               double dead_band,
                               moistair_cooling *done,
                               moistair_error *error);
+
+// The apparatus dew point and bypass factor that take the entering to the leaving air: the inverse of moistair_coil_by_bypass_factor.
+//
+// entering: the state that enters; leaving: the state that leaves; apparatus: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (nothing condenses, the air leaves warmer, or the line misses saturation: such a state takes a coil and
+// reheat).
+int32_t moistair_coil_apparatus_dew_point(const moistair_state *entering,
+                                          const moistair_state *leaving,
+                                          moistair_apparatus *apparatus,
+                                          moistair_error *error);
 
 // Reaches a state by cooling to its humidity ratio, then heating. Codes restrict simultaneous heating and cooling.
 //

@@ -112,14 +112,14 @@ impl Answer for moistair_limits {
 
 /// The quantity with a selector.
 pub(crate) fn quantity(selector: i32) -> Result<Quantity, Failure> {
-    Quantity::from_code(selector).ok_or(Failure::UnknownSelector(selector))
+    Quantity::from_code(selector).ok_or(Failure::UnknownQuantity(selector))
 }
 
 /// The property with a selector.
 pub(crate) fn property(selector: i32) -> Result<Quantity, Failure> {
     quantity(selector).and_then(
         |found| {
-            if found.is_property() { Ok(found) } else { Err(Failure::UnknownSelector(selector)) }
+            if found.is_property() { Ok(found) } else { Err(Failure::UnknownQuantity(selector)) }
         },
     )
 }

@@ -119,7 +119,7 @@ pub const MOISTAIR_REASON_GAP: i32 = 6;
 pub const MOISTAIR_REASON_TIME_NOT_INCREASING: i32 = 7;
 /// The time is no number or beyond 1e11 s.
 pub const MOISTAIR_REASON_TIME_INVALID: i32 = 8;
-/// Refused, and filled with the last good value; cause(super::cause) keeps what was wrong.
+/// Refused, and filled with the last good value; the field cause of moistair_checked says what was wrong.
 pub const MOISTAIR_REASON_HELD: i32 = 9;
 /// The channel itself makes no sense: limits the wrong way round, a unit of another quantity.
 pub const MOISTAIR_REASON_CHANNEL_INVALID: i32 = 10;

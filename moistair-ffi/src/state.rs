@@ -206,7 +206,7 @@ pub(crate) fn check_mask(mask: u64) -> Result<(), Failure> {
     if others == 0 {
         return Ok(());
     }
-    Err(Failure::UnknownSelector(MOISTAIR_PROPERTY_COUNT + others.trailing_zeros() as i32))
+    Err(Failure::UnknownQuantity(MOISTAIR_PROPERTY_COUNT + others.trailing_zeros() as i32))
 }
 
 /// The properties of a mask, in the order of their selectors.

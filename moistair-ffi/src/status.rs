@@ -52,7 +52,8 @@ pub const MOISTAIR_INTERNAL: i32 = 901;
 #[repr(C)]
 #[derive(Clone, Copy, Debug)]
 pub struct moistair_error {
-    /// The offending value in the unit of its quantity; NaN where there is none.
+    /// The offending value in the unit of its quantity; NaN where there is none. For a selector of something else than a quantity
+    /// (MOISTAIR_UNKNOWN_SELECTOR) the selector given.
     pub value: f64,
     /// The least value allowed; NaN where there is none.
     pub min: f64,
@@ -60,7 +61,7 @@ pub struct moistair_error {
     pub max: f64,
     /// The status that the function returns.
     pub code: i32,
-    /// The selector of the quantity at fault; -1 where there is none. For MOISTAIR_UNKNOWN_SELECTOR the selector given.
+    /// The selector of the quantity at fault, also one that is not known or does not fit; -1 where there is none.
     pub quantity: i32,
 }
 
@@ -75,6 +76,9 @@ pub(crate) enum Failure {
     Misaligned,
     Overlapping,
     TooLong,
+    /// The selector of a quantity.
+    UnknownQuantity(i32),
+    /// A selector of anything else.
     UnknownSelector(i32),
     Damaged,
     NotFinite,
@@ -93,7 +97,7 @@ impl From<Error> for Failure {
 impl From<ColumnMismatch> for Failure {
     fn from(mismatch: ColumnMismatch) -> Self {
         match mismatch {
-            ColumnMismatch::UnknownSelector { code } => Self::UnknownSelector(code),
+            ColumnMismatch::UnknownSelector { code } => Self::UnknownQuantity(code),
             _ => Self::TooLong,
         }
     }
@@ -112,7 +116,10 @@ impl From<Failure> for moistair_error {
             Failure::InvalidChannel => plain(MOISTAIR_INVALID_CHANNEL),
             Failure::Overflow => plain(MOISTAIR_OVERFLOW),
             Failure::Internal => plain(MOISTAIR_INTERNAL),
-            Failure::UnknownSelector(quantity) | Failure::Core(Error::UnknownSelector { code: quantity }) => {
+            Failure::UnknownSelector(selector) => {
+                Self { value: f64::from(selector), ..plain(MOISTAIR_UNKNOWN_SELECTOR) }
+            }
+            Failure::UnknownQuantity(quantity) | Failure::Core(Error::UnknownSelector { code: quantity }) => {
                 Self { quantity, ..plain(MOISTAIR_UNKNOWN_SELECTOR) }
             }
             Failure::Core(error) => {

@@ -63,6 +63,7 @@ words! {
     moistair_cooling, [12, 26, 36], [35], [0, 14];
     moistair_reheat, [12, 26, 36, 49], [35, 54], [0, 14, 37];
     moistair_humidified, [12], [], [0];
+    moistair_apparatus, [], [], [];
     moistair_books, [5], [], [];
     moistair_tower_water, [], [], [];
     moistair_water_treatment, [], [], [];
@@ -440,6 +441,8 @@ fn no_argument_upsets_an_export() {
         (c.pointer(&s), c.number(-10.0, 30.0), c.number(0.0, 1.0), c.selector(3), c.number(-5.0, 20.0), out, e));
     run!(exercise moistair_coil_between: |c, out, e| let s = c.stream(); let leaving = c.state();
         (c.pointer(&s), c.pointer(&leaving), c.selector(3), c.number(-5.0, 20.0), c.number(0.0, 0.001), out, e));
+    run!(exercise moistair_coil_apparatus_dew_point: |c, out, e| let coil = c.kept::<moistair_cooling>();
+        (c.pointer(&coil.entering.air), c.pointer(&coil.leaving.air), out, e));
     run!(exercise moistair_reheat_to_state: |c, out, e| let s = c.stream(); let target = c.state();
         (c.pointer(&s), c.pointer(&target), c.number(0.2, 1.0), c.selector(3), c.number(-5.0, 20.0), out, e));
     run!(exercise moistair_humidify_with_steam: |c, out, e| let s = c.stream();

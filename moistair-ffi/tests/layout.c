@@ -22,6 +22,7 @@ _Static_assert(sizeof(moistair_exchange) == 24, "moistair_exchange");
 _Static_assert(sizeof(moistair_sensible) == 136, "moistair_sensible");
 _Static_assert(sizeof(moistair_cooling) == 296, "moistair_cooling");
 _Static_assert(offsetof(moistair_cooling, regime) == 288, "moistair_cooling");
+_Static_assert(sizeof(moistair_apparatus) == 16, "moistair_apparatus");
 _Static_assert(sizeof(moistair_reheat) == 440, "moistair_reheat");
 _Static_assert(sizeof(moistair_humidified) == 184, "moistair_humidified");
 _Static_assert(sizeof(moistair_books) == 48, "moistair_books");
@@ -44,6 +45,18 @@ _Static_assert(sizeof(moistair_deviation) == 64, "moistair_deviation");
 _Static_assert(sizeof(moistair_deviation_values) == 48, "moistair_deviation_values");
 _Static_assert(sizeof(moistair_limits) == 16, "moistair_limits");
 
+/* What a selector at fault leaves in the error: a quantity by its name, any other as a number without one. */
+static int selectors(void)
+{
+    moistair_basis basis = {101325.0, MOISTAIR_REAL_GAS, 0}, no_basis = {101325.0, 7, 0};
+    moistair_state state;
+    moistair_error error;
+    int32_t status = moistair_from_dry_bulb(20.0, MOISTAIR_SATURATION_PRESSURE, 2000.0, basis, &state, &error);
+    int good = status == MOISTAIR_UNKNOWN_SELECTOR && error.quantity == MOISTAIR_SATURATION_PRESSURE;
+    status = moistair_from_dry_bulb(20.0, MOISTAIR_RELATIVE_HUMIDITY, 0.5, no_basis, &state, &error);
+    return good && status == MOISTAIR_UNKNOWN_SELECTOR && error.quantity == -1 && error.value == 7.0;
+}
+
 static int check(int condition, const char *text)
 {
     if (!condition)
@@ -65,6 +78,7 @@ int main(void)
     failed += check(strcmp(moistair_quantity_name(31), "") == 0, "no name");
     failed += check(strcmp(moistair_status_text(0), "success") == 0, "text of success");
     failed += check(strcmp(moistair_status_text(-7), "unknown status") == 0, "text of no status");
+    failed += check(selectors(), "selectors at fault");
     if (failed == 0)
         printf("layout and version agree\n");
     return failed;

@@ -1,7 +1,7 @@
 //! Cooling coils.
 
 use moistair_core::columns::NAN;
-use moistair_core::process::coil::{self, CoilRegime, CondensateTemperature, Cooling};
+use moistair_core::process::coil::{self, Apparatus, CoilRegime, CondensateTemperature, Cooling};
 
 use super::stream::{moistair_exchange, moistair_stream};
 use super::{celsius, finite, ratio};
@@ -11,7 +11,7 @@ use crate::status::{Failure, moistair_error};
 
 /// Condensate leaves at the temperature of the leaving air.
 pub const MOISTAIR_CONDENSATE_AT_LEAVING_AIR: i32 = 0;
-/// Condensate leaves at the apparatus dew point (moistair_coil_by_bypass_factor only).
+/// Condensate leaves at the apparatus dew point: the given one, or that of the line from the entering to the leaving air.
 pub const MOISTAIR_CONDENSATE_AT_APPARATUS: i32 = 1;
 /// Condensate leaves at a given temperature.
 pub const MOISTAIR_CONDENSATE_AT_GIVEN: i32 = 2;
@@ -73,6 +73,28 @@ impl Answer for moistair_cooling {
     }
 }
 
+/// A coil by its bypass.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_apparatus {
+    /// Where the line from the entering through the leaving air meets saturation [°C].
+    pub dew_point: f64,
+    /// The share of the air that seems to pass untouched [1]; 0 for air that leaves saturated.
+    pub bypass_factor: f64,
+}
+
+impl From<Apparatus> for moistair_apparatus {
+    fn from(apparatus: Apparatus) -> Self {
+        Self { dew_point: apparatus.dew_point.celsius(), bypass_factor: apparatus.bypass_factor }
+    }
+}
+
+impl Answer for moistair_apparatus {
+    fn is_finite(&self) -> bool {
+        finite([self.dew_point, self.bypass_factor])
+    }
+}
+
 pub(super) fn condensate(selector: i32, temperature: f64) -> Result<CondensateTemperature, Failure> {
     match selector {
         MOISTAIR_CONDENSATE_AT_LEAVING_AIR => Ok(CondensateTemperature::LeavingAir),
@@ -87,7 +109,7 @@ pub(super) fn condensate(selector: i32, temperature: f64) -> Result<CondensateTe
 /// entering: the stream that enters; leaving: the state that leaves; condensate: where the condensate temperature comes from,
 /// MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only; done: output; error: may
 /// be null.
-/// Returns 0, 1xx, 2xx, 301 (the leaving air is warmer or moister).
+/// Returns 0, 1xx, 2xx, 301 (the leaving air is warmer or moister; no apparatus dew point for MOISTAIR_CONDENSATE_AT_APPARATUS).
 #[unsafe(no_mangle)]
 pub unsafe extern "C" fn moistair_coil_to_state(
     entering: *const moistair_stream,
@@ -139,7 +161,8 @@ pub unsafe extern "C" fn moistair_coil_by_bypass_factor(
 /// entering: the stream that enters; leaving: the state that leaves; condensate: where the condensate temperature comes from,
 /// MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only; dead_band: [kg/kg], 0 to
 /// 10; done: output; error: may be null.
-/// Returns 0, 1xx, 2xx, 301 (the leaving air is moister by more than the dead band).
+/// Returns 0, 1xx, 2xx, 301 (the leaving air is moister by more than the dead band; no apparatus dew point for
+/// MOISTAIR_CONDENSATE_AT_APPARATUS).
 #[unsafe(no_mangle)]
 pub unsafe extern "C" fn moistair_coil_between(
     entering: *const moistair_stream,
@@ -165,7 +188,29 @@ pub unsafe extern "C" fn moistair_coil_between(
     unsafe { answer(done, error, call) }
 }
 
+/// The apparatus dew point and bypass factor that take the entering to the leaving air: the inverse of moistair_coil_by_bypass_factor.
+///
+/// entering: the state that enters; leaving: the state that leaves; apparatus: output; error: may be null.
+/// Returns 0, 1xx, 2xx, 301 (nothing condenses, the air leaves warmer, or the line misses saturation: such a state takes a coil and
+/// reheat).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_coil_apparatus_dew_point(
+    entering: *const moistair_state,
+    leaving: *const moistair_state,
+    apparatus: *mut moistair_apparatus,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        // SAFETY: the caller's pointers.
+        Ok(coil::apparatus_dew_point(&unsafe { read(entering) }?.to_core()?, &unsafe { read(leaving) }?.to_core()?)?
+            .into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(apparatus, error, call) }
+}
+
 const _: () = {
+    assert!(size_of::<moistair_apparatus>() == 16);
     assert!(size_of::<moistair_cooling>() == 296 && core::mem::offset_of!(moistair_cooling, regime) == 288);
     assert!(CoilRegime::Dry as i32 == MOISTAIR_COIL_DRY && CoilRegime::Frost as i32 == MOISTAIR_COIL_FROST);
     assert!(CoilRegime::Wet as i32 == MOISTAIR_COIL_WET);
