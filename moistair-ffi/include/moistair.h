@@ -156,7 +156,8 @@
 // x_ws p over the saturation pressure of pure water [1].
 #define MOISTAIR_ENHANCEMENT_FACTOR 17
 
-// Thermodynamic wet bulb (adiabatic saturation), over liquid at or above the melting temperature, over ice below [°C].
+// Thermodynamic wet bulb (adiabatic saturation), over liquid at or above the melting temperature, over ice below. Above the
+// dry bulb where the vapor is supersaturated over ice [°C].
 #define MOISTAIR_WET_BULB 18
 
 // Thermodynamic wet bulb over liquid water, supercooled below the melting temperature [°C].

@@ -47,7 +47,8 @@ pub const MOISTAIR_VAPOR_PRESSURE_DEFICIT: i32 = 15;
 pub const MOISTAIR_SATURATION_PRESSURE: i32 = 16;
 /// x_ws p over the saturation pressure of pure water [1].
 pub const MOISTAIR_ENHANCEMENT_FACTOR: i32 = 17;
-/// Thermodynamic wet bulb (adiabatic saturation), over liquid at or above the melting temperature, over ice below [°C].
+/// Thermodynamic wet bulb (adiabatic saturation), over liquid at or above the melting temperature, over ice below. Above the
+/// dry bulb where the vapor is supersaturated over ice [°C].
 pub const MOISTAIR_WET_BULB: i32 = 18;
 /// Thermodynamic wet bulb over liquid water, supercooled below the melting temperature [°C].
 pub const MOISTAIR_WET_BULB_OVER_LIQUID: i32 = 19;
