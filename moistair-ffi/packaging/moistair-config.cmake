@@ -5,7 +5,6 @@ if(NOT TARGET moistair::moistair)
   add_library(moistair::moistair SHARED IMPORTED)
   set_target_properties(moistair::moistair PROPERTIES
     IMPORTED_LOCATION "${_moistair_prefix}/lib/${CMAKE_SHARED_LIBRARY_PREFIX}moistair${CMAKE_SHARED_LIBRARY_SUFFIX}"
-    IMPORTED_NO_SONAME TRUE
     INTERFACE_INCLUDE_DIRECTORIES "${_moistair_prefix}/include")
   add_library(moistair::static STATIC IMPORTED)
   set_target_properties(moistair::static PROPERTIES
