@@ -38,7 +38,7 @@ pub fn hyland_wexler_ice<R: Real>(kelvins: R) -> (R, R) {
 }
 
 /// A saturation pressure good to 0.5 % between −100 and 200 °C, as a start for solves only: the form of Magnus with the
-/// constants of WMO-No. 8 (from memory), e = a exp(b t / (c + t)), hPa.
+/// constants of WMO-No. 8 (from memory), e = a exp(b t / (c + t)), Pa.
 pub struct Magnus {
     b: f64,
     c: f64,

@@ -146,3 +146,29 @@ fn real_gas_against_g8_10() {
 fn reference_liquid(kelvins: f64, pascals: f64) -> f64 {
     if kelvins < 253.15 { f64::INFINITY } else { reference::liquid_potential(kelvins, pascals) }
 }
+
+/// Saturation pressure of pure water against the equilibrium of the same equations in full, R6-95 and R10-06. What is left is the
+/// order of density cut off, felt above 100 °C.
+#[test]
+fn pure_saturation_against_the_full_equations() {
+    let mut worst = [(0.0_f64, 0); 2];
+    for celsius in (-80..=150).filter(|&celsius| celsius != 0) {
+        let t = f64::from(celsius);
+        let air = MoistAir::from_dry_bulb(
+            Temperature::from_celsius(t),
+            HumidityRatio::from_kilograms_per_kilogram(0.0),
+            Pressure::from_kilopascals(101.325),
+        );
+        let ours = air.unwrap().saturation_pressure().unwrap().pascals();
+        let kelvins = t + 273.15;
+        let condensed = |p| {
+            if celsius < 0 { reference::ice_potential(kelvins, p) } else { reference::liquid_potential(kelvins, p) }
+        };
+        let error = (ours / reference::saturation_pressure(kelvins, condensed, ours) - 1.0).abs();
+        assert!(error.is_finite(), "{celsius}");
+        let slot = &mut worst[usize::from(celsius > 100)];
+        *slot = if error > slot.0 { (error, celsius) } else { *slot };
+    }
+    println!("saturation pressure, −80 to 100 °C and above: {worst:?}");
+    assert!(worst[0].0 < 1e-12 && worst[1].0 < 1e-11);
+}

@@ -351,6 +351,17 @@ pub fn saturation_ratio(kelvins: f64, pascals: f64, condensed: f64, start: f64) 
     secant(start.ln() - 2e-3, start.ln() + 3e-3, target).exp()
 }
 
+/// Pressure at which vapor and a condensed phase, whose Gibbs energy is given by the pressure, are in equilibrium; from a start near it.
+pub fn saturation_pressure(kelvins: f64, condensed: impl Fn(f64) -> f64, start: f64) -> f64 {
+    let pressure = |rho: f64| rho * rho * water(kelvins, rho).slopes[2];
+    let unequal = |ln_rho: f64| {
+        let rho = ln_rho.exp();
+        water(kelvins, rho).value + pressure(rho) / rho - condensed(pressure(rho))
+    };
+    let ideal = (start / (R_WATER * kelvins)).ln();
+    pressure(secant(ideal - 2e-3, ideal + 3e-3, unequal).exp())
+}
+
 /// Water mole fraction of a humidity ratio.
 pub fn mole_fraction(ratio: f64) -> f64 {
     ratio / (ratio + M_WATER / M_AIR)

@@ -16,7 +16,7 @@ use crate::state::condensate::{condensed_enthalpy, temperature_of_enthalpy};
 use crate::state::property::saturates;
 use crate::state::{AirWithCondensate, Freezing, MoistAir};
 
-/// At what temperature the condensate leaves: an assumption that moves the load by 0.5 to 1 %.
+/// At what temperature the condensate leaves: an assumption. In all it carries about 1 % of the load.
 #[derive(Clone, Copy, Debug, Default, PartialEq)]
 pub enum CondensateTemperature<S = f64> {
     /// That of the leaving air, as the handbook's examples take it.

@@ -15,7 +15,7 @@ from ._streams import AirStream, Exchange
 
 __all__ = ["Apparatus", "CoilRegime", "Cooling", "apparatus_dew_point", "between", "by_bypass_factor", "to_state"]
 
-#: What stands for the temperature at which condensate leaves: an assumption that moves the load by 0.5 to 1 %.
+#: What stands for the temperature at which condensate leaves: an assumption. In all it carries about 1 % of the load.
 CondensateTemperature = Union[Literal["leaving_air"], Literal["apparatus"]]
 
 
