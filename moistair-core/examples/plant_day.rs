@@ -506,7 +506,7 @@ hour     kg/s       kWh       K         K           kg      kg        kg        
 const TOWER_NOTE: [&str; 3] = [
     "
 Peaks in kW, K and kg/h. Range and approach: while water flows. The leaving air is taken as saturated, which
-over-predicts evaporation by up to 10 %. Drift ",
+over-predicts evaporation where it does not. Drift ",
     " % of the water, ",
     " cycles of concentration. Estimates: towers
 and humidifiers can spread Legionella; hygiene rules and licensed practice govern, not these numbers.

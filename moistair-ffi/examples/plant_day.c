@@ -579,7 +579,7 @@ static const char tower_head[] =
 static const char *const tower_note[] = {
     "\n"
     "Peaks in kW, K and kg/h. Range and approach: while water flows. The leaving air is taken as saturated, which\n"
-    "over-predicts evaporation by up to 10 %. Drift ",
+    "over-predicts evaporation where it does not. Drift ",
     " % of the water, ",
     " cycles of concentration. Estimates: towers\n"
     "and humidifiers can spread Legionella; hygiene rules and licensed practice govern, not these numbers.\n"};

@@ -384,7 +384,7 @@ TOWER_NOTE = (
     """\
 
 Peaks in kW, K and kg/h. Range and approach: while water flows. The leaving air is taken as saturated, which
-over-predicts evaporation by up to 10 %. Drift """,
+over-predicts evaporation where it does not. Drift """,
     """\
  % of the water, """,
     """\

@@ -202,7 +202,7 @@ fn worked_examples() {
     for row in table.rows() {
         tally.within(row.text("process"), row.text("id"), computed(row), row.value(), row.number("tolerance"));
     }
-    tally.finish(table.rows().count());
+    tally.finish(64);
 }
 
 /// Examples 1 to 5 and the steam of 6 of the handbook chapter as its text solves them, on both formulations: within half a unit of

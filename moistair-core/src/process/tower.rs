@@ -123,8 +123,8 @@ pub fn water_use<S: Scalar>(
     })
 }
 
-/// Balance with a known air flow: the air is taken to leave saturated, which over-predicts evaporation by up to 10 %
-/// when it does not. Without water the air leaves as it came: a tower at rest, whatever its thermometers read.
+/// Balance with a known air flow: the air is taken to leave saturated, which over-predicts evaporation where it does
+/// not (common practice, no source). Without water the air leaves as it came: a tower at rest, whatever its thermometers read.
 ///
 /// # Errors
 /// [`Error::Infeasible`] when the water is not cooled, or so little air would leave warmer than the hot water; [`Error::NoFlow`],

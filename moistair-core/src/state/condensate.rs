@@ -10,7 +10,7 @@ use crate::saturation::Surface;
 use crate::solve;
 
 use super::MoistAir;
-use super::construct::SATURATION_TOLERANCE;
+use super::construct::{SATURATION_TOLERANCE, saturation_rounding};
 use super::property::{DEW_POINT_STEPS, condensed_heat_capacity, dew_point};
 
 /// Newton steps for the temperature that goes with an enthalpy; see the test of this module.
@@ -242,10 +242,9 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
     let (coldest, warmest) = Quantity::DryBulb.limits();
     let in_range = |celsius: S| k::<S>(coldest) <= celsius && celsius <= k(warmest);
     let dry_bulb = temperature_of_enthalpy::<M, S>(enthalpy, pressure, water);
-    // Saturated to rounding is not fog. As much in the mole fraction is more in the humidity ratio where there is little air.
-    let rounding = |ratio: S| ratio * (ratio * k(1.6) + k(1.0)) * S::epsilon() * k(1024.0);
+    // Saturated to rounding is not fog.
     let held = capacity::<M, S>(dry_bulb, pressure, freezing);
-    if in_range(dry_bulb) && water <= held + rounding(held) {
+    if in_range(dry_bulb) && water <= held + saturation_rounding(held) {
         return Ok(state(dry_bulb, water).into());
     }
     // Wet: saturated air and condensate, warmer than the gas alone would be and no warmer than the dew point of all the water.
@@ -303,7 +302,7 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
     // books close: the enthalpy of much liquid is rougher than that of the air.
     let reached = wet(celsius, curve);
     let tenth = reached.humidity_ratio * k(SATURATION_TOLERANCE * 0.1);
-    let most = rounding(reached.humidity_ratio).at_least(tenth);
+    let most = saturation_rounding(reached.humidity_ratio).at_least(tenth);
     let over = ((reached.enthalpy - enthalpy) / reached.latent).at_least(-most).at_most(most);
     let ratio = (reached.humidity_ratio - over).at_most(water);
     let (air, surplus) = (state(celsius, ratio), water - ratio);

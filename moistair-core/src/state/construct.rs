@@ -203,7 +203,7 @@ fn settle<S: Scalar>(ratio: S, limit: S, searched: bool) -> Option<S> {
 
 /// What rounding may carry a saturated humidity ratio past saturation. As much in the mole fraction is more in the humidity
 /// ratio where there is little air: d ln W = d ln x / (1 − x).
-fn saturation_rounding<S: Scalar>(ratio: S) -> S {
+pub(crate) fn saturation_rounding<S: Scalar>(ratio: S) -> S {
     ratio * (ratio * k(1.6) + k(1.0)) * S::epsilon() * k(1024.0)
 }
 

@@ -160,8 +160,8 @@ def with_air_flow(
 ) -> TowerBalance[Any]:
     """Balance with a known air flow.
 
-    The air is taken to leave saturated, which over-predicts evaporation by up to 10 % when it does not. Without water the
-    air leaves as it came: a tower at rest, whatever its thermometers read.
+    The air is taken to leave saturated, which over-predicts evaporation where it does not. Without water the air
+    leaves as it came: a tower at rest, whatever its thermometers read.
 
     Parameters
     ----------
