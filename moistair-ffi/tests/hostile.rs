@@ -2,7 +2,7 @@
 //! panics (a panic in an `extern "C"` function ends the process), nothing is written but on success, no NaN comes back where a value is
 //! promised, every state that comes back is accepted again and means the same.
 //!
-//! `MOISTAIR_HOSTILE_CALLS=10000000 cargo test --release -p moistair-ffi --test hostile` takes longer and sees more.
+//! `MOISTAIR_CASES=10000000 cargo test --release -p moistair-ffi --test hostile` takes longer and sees more.
 
 #![allow(clippy::unwrap_used, clippy::indexing_slicing, reason = "a test")]
 
@@ -391,7 +391,7 @@ fn change<T: Words>(
 }
 
 fn calls() -> u64 {
-    env::var("MOISTAIR_HOSTILE_CALLS").map_or(10_000, |text| text.parse().unwrap())
+    env::var("MOISTAIR_CASES").map_or(10_000, |text| text.parse().unwrap())
 }
 
 #[test]

@@ -33,7 +33,7 @@ ODD = (0.0, -0.0, 1.0, -1.0, 0.5, 20.0, -40.0, 1.03, 101_325.0, 1e-300, 5e-324, 
 ODD += (float("nan"), float("inf"), float("-inf"), np.nextafter(1.0, 2.0), np.nextafter(150.0, 200.0), 150.0, -80.0)
 
 #: How many random calls a fuzz test makes of each kind.
-FUZZ = int(os.environ.get("MOISTAIR_FUZZ", "200"))
+FUZZ = int(os.environ.get("MOISTAIR_CASES", "200"))
 
 
 def random(seed: int) -> np.random.Generator:

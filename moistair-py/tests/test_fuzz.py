@@ -1,6 +1,6 @@
 """Odd numbers in every argument of every call: an error of this package or a defined result, never a crash or a panic.
 
-A panic of the core would come as a `BaseException`, which nothing here expects. MOISTAIR_FUZZ is the number of calls of each kind.
+A panic of the core would come as a `BaseException`, which nothing here expects. MOISTAIR_CASES is the number of calls of each kind.
 """
 
 import inspect
