@@ -76,8 +76,9 @@ static void one_run(const double *inputs, double *results, size_t rows, double *
     }
     for (row = 0; row < rows; ++row) {
         double *result = results + row * RESULTS;
-        /* A property without a value does not spoil the state. */
-        result[0] = status[row] < MOISTAIR_NO_VALUE_DRY_AIR ? (double)status[row] : 0.0;
+        double dry_bulb = columns[MOISTAIR_DRY_BULB][row];
+        /* A property without a value does not spoil the state; a row without a state has no dry bulb either. */
+        result[0] = dry_bulb == dry_bulb ? 0.0 : (double)status[row];
         for (i = 0; i < MOISTAIR_PROPERTY_COUNT; ++i) {
             result[1 + i] = columns[i][row];
         }
