@@ -200,7 +200,7 @@ static void record(struct moment *moment, int process, const moistair_wet_stream
                    const moistair_wet_stream *leaving, const moistair_exchange *exchange)
 {
     moistair_books books;
-    if (moistair_balance(entering, count, leaving, exchange, &books, NULL) == MOISTAIR_OK)
+    if (moistair_books_balance(entering, count, leaving, exchange, &books, NULL) == MOISTAIR_OK)
         moistair_books_total_record(&moment->checks.books[process], &books, NULL);
     else
         missing(moment, process);
@@ -251,12 +251,12 @@ static void mix(struct moment *moment, const struct stream *outdoor, const struc
     moistair_wet_stream entering[2], mixed;
     const moistair_exchange none = {0.0, 0.0, 0.0};
     int known = outdoor->known && room->known && supply->known &&
-                moistair_stream_remainder(supply->air.dry_air_flow, &outdoor->air, &room->air, &recirculated, NULL) ==
+                moistair_mixing_remainder(supply->air.dry_air_flow, &outdoor->air, &room->air, &recirculated, NULL) ==
                     MOISTAIR_OK;
     if (known) {
         entering[0] = wet(&outdoor->air);
         entering[1] = wet(&recirculated);
-        known = moistair_mix(entering, 2, &mixed, NULL) == MOISTAIR_OK;
+        known = moistair_mixing_adiabatic(entering, 2, &mixed, NULL) == MOISTAIR_OK;
     }
     if (!known) {
         missing(moment, P_MIXING);
@@ -324,7 +324,7 @@ static void humidify(struct moment *moment, const struct stream *entering, const
     moistair_wet_stream before;
     moistair_humidified humidified;
     if (!(entering->known && moistair_saturated_steam_enthalpy(steam_temperature, &enthalpy, NULL) == MOISTAIR_OK &&
-          moistair_humidify_with_steam(&entering->air, value(moment, STEAM), enthalpy, &humidified, NULL) ==
+          moistair_humidify_steam(&entering->air, value(moment, STEAM), enthalpy, &humidified, NULL) ==
               MOISTAIR_OK)) {
         missing(moment, P_HUMIDIFIER);
         return;

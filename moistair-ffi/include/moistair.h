@@ -1159,33 +1159,33 @@ int32_t moistair_saturated_steam_enthalpy(double temperature,
 // entering: the stream that enters; steam: [kg/s], 0 to 1e6; steam_enthalpy: specific enthalpy of the steam [J/kg], 0 to 4e6; done:
 // output; error: may be null.
 // Returns 0, 1xx, 2xx, 207, 301.
-int32_t moistair_humidify_with_steam(const moistair_stream *entering,
-                                     double steam,
-                                     double steam_enthalpy,
-                                     moistair_humidified *done,
-                                     moistair_error *error);
+int32_t moistair_humidify_steam(const moistair_stream *entering,
+                                double steam,
+                                double steam_enthalpy,
+                                moistair_humidified *done,
+                                moistair_error *error);
 
 // Adds steam up to a humidity ratio.
 //
 // entering: the stream that enters; humidity_ratio: [kg/kg]; steam_enthalpy: specific enthalpy of the steam [J/kg], 0 to 4e6; done:
 // output; error: may be null.
 // Returns 0, 1xx, 2xx, 207, 301 (below what enters).
-int32_t moistair_humidify_with_steam_to_humidity_ratio(const moistair_stream *entering,
-                                                       double humidity_ratio,
-                                                       double steam_enthalpy,
-                                                       moistair_humidified *done,
-                                                       moistair_error *error);
+int32_t moistair_humidify_steam_to_humidity_ratio(const moistair_stream *entering,
+                                                  double humidity_ratio,
+                                                  double steam_enthalpy,
+                                                  moistair_humidified *done,
+                                                  moistair_error *error);
 
 // Adds steam up to a relative humidity over the stable surface.
 //
 // entering: the stream that enters; relative_humidity: [1], 0 to 1; steam_enthalpy: specific enthalpy of the steam [J/kg], 0 to 4e6; done:
 // output; error: may be null.
 // Returns 0, 1xx, 2xx, 207, 301 (below what enters, or never reached).
-int32_t moistair_humidify_with_steam_to_relative_humidity(const moistair_stream *entering,
-                                                          double relative_humidity,
-                                                          double steam_enthalpy,
-                                                          moistair_humidified *done,
-                                                          moistair_error *error);
+int32_t moistair_humidify_steam_to_relative_humidity(const moistair_stream *entering,
+                                                     double relative_humidity,
+                                                     double steam_enthalpy,
+                                                     moistair_humidified *done,
+                                                     moistair_error *error);
 
 // The steam flow at which the air first saturates.
 //
@@ -1201,18 +1201,18 @@ int32_t moistair_humidify_steam_limit(const moistair_stream *entering,
 //
 // entering: the stream that enters; water: [kg/s], 0 to 1e6; water_temperature: [°C], 0 to 200; done: output; error: may be null.
 // Returns 0, 1xx, 2xx, 207, 301.
-int32_t moistair_humidify_with_spray(const moistair_stream *entering,
-                                     double water,
-                                     double water_temperature,
-                                     moistair_humidified *done,
-                                     moistair_error *error);
+int32_t moistair_humidify_spray(const moistair_stream *entering,
+                                double water,
+                                double water_temperature,
+                                moistair_humidified *done,
+                                moistair_error *error);
 
 // A wetted medium or full spray of a known saturation effectiveness.
 //
 // entering: the stream that enters; saturation_effectiveness: [1], 0 to 1; water: MOISTAIR_WATER_AT_WET_BULB or MOISTAIR_WATER_AT_GIVEN;
 // water_temperature: [°C], 0 to 200, read for MOISTAIR_WATER_AT_GIVEN only; done: output; error: may be null.
 // Returns 0, 1xx, 2xx, 301 (the wet bulb is below freezing), 31x.
-int32_t moistair_humidify_with_medium(const moistair_stream *entering,
+int32_t moistair_humidify_evaporative(const moistair_stream *entering,
                                       double saturation_effectiveness,
                                       int32_t water,
                                       double water_temperature,
@@ -1224,28 +1224,28 @@ int32_t moistair_humidify_with_medium(const moistair_stream *entering,
 // streams: the streams that enter; those without flow take no part; count: number of streams, to MOISTAIR_MOST_STREAMS; leaving: output;
 // error: may be null.
 // Returns 0, 1xx, 2xx, 205, 206, 207, 301.
-int32_t moistair_mix(const moistair_wet_stream *streams,
-                     size_t count,
-                     moistair_wet_stream *leaving,
-                     moistair_error *error);
+int32_t moistair_mixing_adiabatic(const moistair_wet_stream *streams,
+                                  size_t count,
+                                  moistair_wet_stream *leaving,
+                                  moistair_error *error);
 
 // Mixes streams adiabatically at a given outlet pressure.
 //
 // streams: the streams that enter; those without flow take no part; count: number of streams, to MOISTAIR_MOST_STREAMS; pressure: of the
 // outlet [Pa]; freezing: MOISTAIR_FREEZING_EQUILIBRIUM or MOISTAIR_FREEZING_SUPERCOOLED; leaving: output; error: may be null.
 // Returns 0, 1xx, 2xx, 205, 207, 301.
-int32_t moistair_mix_at(const moistair_wet_stream *streams,
-                        size_t count,
-                        double pressure,
-                        int32_t freezing,
-                        moistair_wet_stream *leaving,
-                        moistair_error *error);
+int32_t moistair_mixing_adiabatic_at(const moistair_wet_stream *streams,
+                                     size_t count,
+                                     double pressure,
+                                     int32_t freezing,
+                                     moistair_wet_stream *leaving,
+                                     moistair_error *error);
 
 // The stream of air that is left of a total flow when a part of it is known: the recirculated air behind measured outdoor and supply air.
 //
 // total_dry_air_flow: [kg/s]; part: the known stream; air: state of the rest; rest: output; error: may be null.
 // Returns 0, 1xx, 2xx, 301 (the part is more than the total).
-int32_t moistair_stream_remainder(double total_dry_air_flow,
+int32_t moistair_mixing_remainder(double total_dry_air_flow,
                                   const moistair_stream *part,
                                   const moistair_state *air,
                                   moistair_stream *rest,
@@ -1256,12 +1256,12 @@ int32_t moistair_stream_remainder(double total_dry_air_flow,
 // streams: the streams that enter; those without flow take no part; count: number of streams, to MOISTAIR_MOST_STREAMS; leaving: the
 // stream that leaves; exchange: what was exchanged; books: output; error: may be null.
 // Returns 0, 1xx, 2xx.
-int32_t moistair_balance(const moistair_wet_stream *streams,
-                         size_t count,
-                         const moistair_wet_stream *leaving,
-                         const moistair_exchange *exchange,
-                         moistair_books *books,
-                         moistair_error *error);
+int32_t moistair_books_balance(const moistair_wet_stream *streams,
+                               size_t count,
+                               const moistair_wet_stream *leaving,
+                               const moistair_exchange *exchange,
+                               moistair_books *books,
+                               moistair_error *error);
 
 // Blowdown and make-up for an evaporation; also for humidifiers with bleed.
 //
@@ -1446,7 +1446,7 @@ int32_t moistair_periods_unfinished(const moistair_periods *periods,
 
 // Adds the books of a process; books that are not finite are only counted as refused.
 //
-// total: read and written; books: from moistair_balance; error: may be null.
+// total: read and written; books: from moistair_books_balance; error: may be null.
 // Returns 0, 101, 103.
 int32_t moistair_books_total_record(moistair_books_total *total,
                                     const moistair_books *books,

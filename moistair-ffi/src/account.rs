@@ -543,7 +543,7 @@ pub unsafe extern "C" fn moistair_periods_unfinished(
 
 /// Adds the books of a process; books that are not finite are only counted as refused.
 ///
-/// total: read and written; books: from moistair_balance; error: may be null.
+/// total: read and written; books: from moistair_books_balance; error: may be null.
 /// Returns 0, 101, 103.
 #[unsafe(no_mangle)]
 pub unsafe extern "C" fn moistair_books_total_record(

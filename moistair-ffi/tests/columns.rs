@@ -172,5 +172,5 @@ fn no_rows_need_no_memory() {
     // No streams either.
     let mut leaving = core::mem::MaybeUninit::uninit();
     // SAFETY: a valid place.
-    assert_eq!(unsafe { moistair_mix(null(), 0, leaving.as_mut_ptr(), null_mut()) }, MOISTAIR_NO_FLOW);
+    assert_eq!(unsafe { moistair_mixing_adiabatic(null(), 0, leaving.as_mut_ptr(), null_mut()) }, MOISTAIR_NO_FLOW);
 }

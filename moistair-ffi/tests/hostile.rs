@@ -423,7 +423,7 @@ fn no_argument_upsets_an_export() {
         (c.pointer(&air), c.number(0.0, 10.0), out, e));
     run!(exercise moistair_stream_from_standard_volume_flow: |c, out, e| let air = c.state();
         (c.pointer(&air), c.number(0.0, 10.0), c.number(1.0, 1.3), out, e));
-    run!(exercise moistair_stream_remainder: |c, out, e| let part = c.stream(); let air = c.state();
+    run!(exercise moistair_mixing_remainder: |c, out, e| let part = c.stream(); let air = c.state();
         (c.number(5.0, 20.0), c.pointer(&part), c.pointer(&air), out, e));
     run!(exercise moistair_wet_stream_from_stream: |c, out, e| let gas = c.stream();
         (c.pointer(&gas), c.number(0.0, 0.01), c.number(0.0, 0.01), out, e));
@@ -445,23 +445,23 @@ fn no_argument_upsets_an_export() {
         (c.pointer(&coil.entering.air), c.pointer(&coil.leaving.air), out, e));
     run!(exercise moistair_reheat_to_state: |c, out, e| let s = c.stream(); let target = c.state();
         (c.pointer(&s), c.pointer(&target), c.number(0.2, 1.0), c.selector(3), c.number(-5.0, 20.0), out, e));
-    run!(exercise moistair_humidify_with_steam: |c, out, e| let s = c.stream();
+    run!(exercise moistair_humidify_steam: |c, out, e| let s = c.stream();
         (c.pointer(&s), c.number(0.0, 0.05), c.number(2.5e6, 2.8e6), out, e));
-    run!(exercise moistair_humidify_with_steam_to_humidity_ratio: |c, out, e| let s = c.stream();
+    run!(exercise moistair_humidify_steam_to_humidity_ratio: |c, out, e| let s = c.stream();
         (c.pointer(&s), c.number(0.0, 0.05), c.number(2.5e6, 2.8e6), out, e));
-    run!(exercise moistair_humidify_with_steam_to_relative_humidity: |c, out, e| let s = c.stream();
+    run!(exercise moistair_humidify_steam_to_relative_humidity: |c, out, e| let s = c.stream();
         (c.pointer(&s), c.number(0.0, 1.0), c.number(2.5e6, 2.8e6), out, e));
     run!(exercise moistair_humidify_steam_limit: |c, out, e| let s = c.stream();
         (c.pointer(&s), c.number(2.5e6, 2.8e6), out, e));
-    run!(exercise moistair_humidify_with_spray: |c, out, e| let s = c.stream();
+    run!(exercise moistair_humidify_spray: |c, out, e| let s = c.stream();
         (c.pointer(&s), c.number(0.0, 0.05), c.number(0.0, 90.0), out, e));
-    run!(exercise moistair_humidify_with_medium: |c, out, e| let s = c.stream();
+    run!(exercise moistair_humidify_evaporative: |c, out, e| let s = c.stream();
         (c.pointer(&s), c.number(0.0, 1.0), c.selector(2), c.number(0.0, 90.0), out, e));
-    run!(exercise moistair_mix: |c, out, e| let s = [c.wet_stream(), c.wet_stream()];
+    run!(exercise moistair_mixing_adiabatic: |c, out, e| let s = [c.wet_stream(), c.wet_stream()];
         (c.pointer(&s).cast(), [1, 2, 2, usize::MAX][c.below(4) as usize], out, e));
-    run!(exercise moistair_mix_at: |c, out, e| let s = [c.wet_stream(), c.wet_stream()];
+    run!(exercise moistair_mixing_adiabatic_at: |c, out, e| let s = [c.wet_stream(), c.wet_stream()];
         (c.pointer(&s).cast(), 1 + c.below(2) as usize, c.number(8e4, 1.1e5), c.selector(2), out, e));
-    run!(exercise moistair_balance: |c, out, e|
+    run!(exercise moistair_books_balance: |c, out, e|
         let s = [c.wet_stream(), c.wet_stream()]; let leaving = c.wet_stream(); let exchange = c.kept::<moistair_exchange>();
         (c.pointer(&s).cast(), 1 + c.below(2) as usize, c.pointer(&leaving), c.pointer(&exchange), out, e));
     let treatment = |c: &Caller| moistair_water_treatment {

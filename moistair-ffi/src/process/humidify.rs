@@ -76,7 +76,7 @@ pub unsafe extern "C" fn moistair_saturated_steam_enthalpy(
 /// output; error: may be null.
 /// Returns 0, 1xx, 2xx, 207, 301.
 #[unsafe(no_mangle)]
-pub unsafe extern "C" fn moistair_humidify_with_steam(
+pub unsafe extern "C" fn moistair_humidify_steam(
     entering: *const moistair_stream,
     steam: f64,
     steam_enthalpy: f64,
@@ -97,7 +97,7 @@ pub unsafe extern "C" fn moistair_humidify_with_steam(
 /// output; error: may be null.
 /// Returns 0, 1xx, 2xx, 207, 301 (below what enters).
 #[unsafe(no_mangle)]
-pub unsafe extern "C" fn moistair_humidify_with_steam_to_humidity_ratio(
+pub unsafe extern "C" fn moistair_humidify_steam_to_humidity_ratio(
     entering: *const moistair_stream,
     humidity_ratio: f64,
     steam_enthalpy: f64,
@@ -119,7 +119,7 @@ pub unsafe extern "C" fn moistair_humidify_with_steam_to_humidity_ratio(
 /// output; error: may be null.
 /// Returns 0, 1xx, 2xx, 207, 301 (below what enters, or never reached).
 #[unsafe(no_mangle)]
-pub unsafe extern "C" fn moistair_humidify_with_steam_to_relative_humidity(
+pub unsafe extern "C" fn moistair_humidify_steam_to_relative_humidity(
     entering: *const moistair_stream,
     relative_humidity: f64,
     steam_enthalpy: f64,
@@ -165,7 +165,7 @@ pub unsafe extern "C" fn moistair_humidify_steam_limit(
 /// entering: the stream that enters; water: [kg/s], 0 to 1e6; water_temperature: [°C], 0 to 200; done: output; error: may be null.
 /// Returns 0, 1xx, 2xx, 207, 301.
 #[unsafe(no_mangle)]
-pub unsafe extern "C" fn moistair_humidify_with_spray(
+pub unsafe extern "C" fn moistair_humidify_spray(
     entering: *const moistair_stream,
     water: f64,
     water_temperature: f64,
@@ -187,7 +187,7 @@ pub unsafe extern "C" fn moistair_humidify_with_spray(
 /// water_temperature: [°C], 0 to 200, read for MOISTAIR_WATER_AT_GIVEN only; done: output; error: may be null.
 /// Returns 0, 1xx, 2xx, 301 (the wet bulb is below freezing), 31x.
 #[unsafe(no_mangle)]
-pub unsafe extern "C" fn moistair_humidify_with_medium(
+pub unsafe extern "C" fn moistair_humidify_evaporative(
     entering: *const moistair_stream,
     saturation_effectiveness: f64,
     water: i32,

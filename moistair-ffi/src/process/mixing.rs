@@ -75,7 +75,7 @@ impl Streams {
 /// error: may be null.
 /// Returns 0, 1xx, 2xx, 205, 206, 207, 301.
 #[unsafe(no_mangle)]
-pub unsafe extern "C" fn moistair_mix(
+pub unsafe extern "C" fn moistair_mixing_adiabatic(
     streams: *const moistair_wet_stream,
     count: usize,
     leaving: *mut moistair_wet_stream,
@@ -97,7 +97,7 @@ pub unsafe extern "C" fn moistair_mix(
 /// outlet [Pa]; freezing: MOISTAIR_FREEZING_EQUILIBRIUM or MOISTAIR_FREEZING_SUPERCOOLED; leaving: output; error: may be null.
 /// Returns 0, 1xx, 2xx, 205, 207, 301.
 #[unsafe(no_mangle)]
-pub unsafe extern "C" fn moistair_mix_at(
+pub unsafe extern "C" fn moistair_mixing_adiabatic_at(
     streams: *const moistair_wet_stream,
     count: usize,
     pressure: f64,
@@ -122,7 +122,7 @@ pub unsafe extern "C" fn moistair_mix_at(
 /// total_dry_air_flow: [kg/s]; part: the known stream; air: state of the rest; rest: output; error: may be null.
 /// Returns 0, 1xx, 2xx, 301 (the part is more than the total).
 #[unsafe(no_mangle)]
-pub unsafe extern "C" fn moistair_stream_remainder(
+pub unsafe extern "C" fn moistair_mixing_remainder(
     total_dry_air_flow: f64,
     part: *const moistair_stream,
     air: *const moistair_state,
@@ -144,7 +144,7 @@ pub unsafe extern "C" fn moistair_stream_remainder(
 /// stream that leaves; exchange: what was exchanged; books: output; error: may be null.
 /// Returns 0, 1xx, 2xx.
 #[unsafe(no_mangle)]
-pub unsafe extern "C" fn moistair_balance(
+pub unsafe extern "C" fn moistair_books_balance(
     streams: *const moistair_wet_stream,
     count: usize,
     leaving: *const moistair_wet_stream,
