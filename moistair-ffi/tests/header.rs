@@ -2,16 +2,31 @@
 //!
 //! After a change of the interface, write it anew with `MOISTAIR_WRITE_HEADER=1 cargo test -p moistair-ffi --test header`.
 
-#![allow(clippy::unwrap_used, clippy::indexing_slicing, reason = "a test")]
+#![allow(clippy::unwrap_used, clippy::panic, clippy::indexing_slicing, reason = "a test")]
 
 use std::collections::BTreeSet;
 use std::path::{Path, PathBuf};
-use std::process::Command;
+use std::process::{Command, ExitCode};
 use std::{env, fs};
 
+use libtest_mimic::Arguments;
 use moistair_core::account::{Added, Rule};
 use moistair_core::signal::{Kind, Quality, Reason, Unit};
 use moistair_core::{Error, Quantity};
+use moistair_tests::toolchain::{Face, c_compiler, cpp_compiler, trial};
+
+fn main() -> ExitCode {
+    let trials = vec![
+        trial("committed_header_is_up_to_date", &[], committed_header_is_up_to_date),
+        trial("every_code_of_the_core_has_its_constant", &[], every_code_of_the_core_has_its_constant),
+        trial("every_status_has_a_text", &[], every_status_has_a_text),
+        trial("exports_are_the_declarations", &[Face::C], exports_are_the_declarations),
+        trial("header_compiles_strictly", &[Face::C], header_compiles_strictly),
+        trial("c_sees_the_same_layout_and_version", &[Face::C], c_sees_the_same_layout_and_version),
+        trial("examples_run", &[Face::C], examples_run),
+    ];
+    libtest_mimic::run(&Arguments::from_args(), trials).exit_code()
+}
 
 fn here() -> &'static Path {
     Path::new(env!("CARGO_MANIFEST_DIR"))
@@ -76,7 +91,6 @@ fn rendered() -> String {
     String::from_utf8(bytes).unwrap()
 }
 
-#[test]
 fn committed_header_is_up_to_date() {
     let path = here().join("include/moistair.h");
     let text = rendered();
@@ -105,7 +119,6 @@ fn assert_defined(header: &str, name: &str, code: i32) {
     assert!(header.contains(&line), "{line}");
 }
 
-#[test]
 fn every_code_of_the_core_has_its_constant() {
     let header = committed();
     for quantity in Quantity::ALL {
@@ -123,7 +136,6 @@ fn every_code_of_the_core_has_its_constant() {
 }
 
 /// Every status of the header has a text, and so has every error of the core.
-#[test]
 fn every_status_has_a_text() {
     let header = committed();
     let codes = header.lines().filter_map(|line| line.strip_prefix("#define MOISTAIR_")?.split_once(' '));
@@ -155,11 +167,11 @@ fn library(name: &str) -> PathBuf {
     path
 }
 
-#[test]
 fn exports_are_the_declarations() {
     // Not nm: where it loads the plugin of another LLVM, it does not see into objects that carry bitcode.
     for (library, table) in [(library("libmoistair.so"), "--dyn-syms"), (library("libmoistair.a"), "--syms")] {
-        let output = Command::new("readelf").args(["--wide", table]).arg(&library).output().unwrap();
+        let output = Command::new("readelf").args(["--wide", table]).arg(&library).output();
+        let output = output.unwrap_or_else(|error| panic!("no readelf ({error}): install binutils"));
         let text = String::from_utf8(output.stdout).unwrap();
         let global = text.lines().filter(|line| line.contains(" FUNC ") && line.contains(" GLOBAL "));
         let symbols = global.filter(|line| !line.contains(" UND ")).filter_map(|line| line.split_whitespace().last());
@@ -178,24 +190,18 @@ fn run(command: &mut Command) -> String {
 
 const STRICT: [&str; 5] = ["-Wall", "-Wextra", "-Werror", "-pedantic", "-Wstrict-prototypes"];
 
-fn compiler(program: &str, standard: &str) -> Command {
-    let mut command = Command::new(program);
-    let warnings = STRICT.into_iter().filter(|flag| program != "g++" || *flag != "-Wstrict-prototypes");
+fn compiler(standard: &str) -> Command {
+    let cpp = standard.starts_with("c++");
+    let mut command = Command::new(if cpp { cpp_compiler() } else { c_compiler() });
+    let warnings = STRICT.into_iter().filter(|flag| !cpp || *flag != "-Wstrict-prototypes");
     command.arg(format!("-std={standard}")).args(warnings).arg("-I").arg(here().join("include"));
     command
 }
 
-#[test]
 fn header_compiles_strictly() {
-    for (program, standard, language) in [
-        ("gcc", "c99", "c"),
-        ("gcc", "c11", "c"),
-        ("gcc", "c17", "c"),
-        ("g++", "c++17", "c++"),
-        ("g++", "c++20", "c++"),
-    ] {
+    for (standard, language) in [("c99", "c"), ("c11", "c"), ("c17", "c"), ("c++17", "c++"), ("c++20", "c++")] {
         let header = here().join("include/moistair.h");
-        run(compiler(program, standard).args(["-fsyntax-only", "-x", language]).arg(header));
+        run(compiler(standard).args(["-fsyntax-only", "-x", language]).arg(header));
     }
 }
 
@@ -203,18 +209,16 @@ fn header_compiles_strictly() {
 fn compiled_and_run(source: &str) -> String {
     let name = Path::new(source).file_stem().unwrap().to_str().unwrap();
     let program = env::current_exe().unwrap().with_file_name(format!("moistair-{name}"));
-    let mut command = compiler("gcc", if source.starts_with("tests") { "c11" } else { "c99" });
+    let mut command = compiler(if source.starts_with("tests") { "c11" } else { "c99" });
     run(command.arg(here().join(source)).arg(library("libmoistair.a")).arg("-o").arg(&program));
     run(&mut Command::new(program))
 }
 
-#[test]
 fn c_sees_the_same_layout_and_version() {
     let printed = compiled_and_run("tests/layout.c");
     assert!(printed.contains("layout and version agree"), "{printed}");
 }
 
-#[test]
 fn examples_run() {
     let printed = compiled_and_run("examples/states.c");
     assert!(printed.contains("wet bulb"), "{printed}");

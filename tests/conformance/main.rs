@@ -7,12 +7,12 @@ mod plant_day;
 mod python;
 mod readme;
 
+use std::fs;
 use std::path::{Path, PathBuf};
 use std::process::{Command, ExitCode};
-use std::{fs, panic};
 
-use libtest_mimic::{Arguments, Failed, Trial};
-use moistair_tests::toolchain::{Face, Linking, c_library, compile_c, python_command, root, run, skipped, workshop};
+use libtest_mimic::Arguments;
+use moistair_tests::toolchain::{Face, Linking, c_library, compile_c, python_command, root, run, trial, workshop};
 
 fn main() -> ExitCode {
     let arguments = Arguments::from_args();
@@ -35,19 +35,6 @@ fn main() -> ExitCode {
         trial("plant_day_prints_the_same_bytes_in_python", &[Face::Python], plant_day::in_python),
     ];
     libtest_mimic::run(&arguments, trials).exit_code()
-}
-
-/// A test that is shown as ignored where the caller allowed its face to be missing.
-fn trial(name: &'static str, faces: &[Face], test: fn()) -> Trial {
-    let ignored = faces.iter().any(|&face| skipped(face));
-    let guarded = move || {
-        panic::catch_unwind(test).map_err(|payload| {
-            let text = payload.downcast_ref::<String>().cloned();
-            let text = text.or_else(|| payload.downcast_ref::<&str>().map(|text| (*text).to_owned()));
-            Failed::from(text.unwrap_or_else(|| "panicked".to_owned()))
-        })
-    };
-    Trial::test(name, guarded).with_ignored_flag(ignored)
 }
 
 fn c_examples() {

@@ -7,7 +7,9 @@ use std::ffi::OsStr;
 use std::path::{Path, PathBuf};
 use std::process::Command;
 use std::sync::OnceLock;
-use std::{env, fs};
+use std::{env, fs, panic};
+
+use libtest_mimic::{Failed, Trial};
 
 /// A face that needs a tool of the system.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
@@ -67,6 +69,39 @@ fn first_that_answers(variable: &str, names: &[&str], missing: &str) -> PathBuf 
     panic!("{missing}")
 }
 
+/// The C compiler: `CC`, or the system's.
+#[must_use]
+pub fn c_compiler() -> PathBuf {
+    first_that_answers(
+        "CC",
+        &["cc", "gcc", "clang"],
+        "no C compiler: install one (Debian: apt-get install gcc g++), or set MOISTAIR_SKIP=c to go without",
+    )
+}
+
+/// The C++ compiler: `CXX`, or the system's.
+#[must_use]
+pub fn cpp_compiler() -> PathBuf {
+    first_that_answers(
+        "CXX",
+        &["c++", "g++", "clang++"],
+        "no C++ compiler: install one (Debian: apt-get install g++), or set MOISTAIR_SKIP=c to go without",
+    )
+}
+
+/// A test that is shown as ignored where the caller allowed its face to be missing.
+pub fn trial(name: &'static str, faces: &[Face], test: fn()) -> Trial {
+    let ignored = faces.iter().any(|&face| skipped(face));
+    let guarded = move || {
+        panic::catch_unwind(test).map_err(|payload| {
+            let text = payload.downcast_ref::<String>().cloned();
+            let text = text.or_else(|| payload.downcast_ref::<&str>().map(|text| (*text).to_owned()));
+            Failed::from(text.unwrap_or_else(|| "panicked".to_owned()))
+        })
+    };
+    Trial::test(name, guarded).with_ignored_flag(ignored)
+}
+
 /// A cargo command that shares nothing with the one that runs the tests.
 #[must_use]
 pub fn cargo() -> Command {
@@ -90,16 +125,7 @@ pub struct CLibrary {
 pub fn c_library() -> &'static CLibrary {
     static LIBRARY: OnceLock<CLibrary> = OnceLock::new();
     LIBRARY.get_or_init(|| {
-        let compiler = first_that_answers(
-            "CC",
-            &["cc", "gcc", "clang"],
-            "no C compiler: install one (Debian: apt-get install gcc g++), or set MOISTAIR_SKIP=c to go without",
-        );
-        let cpp_compiler = first_that_answers(
-            "CXX",
-            &["c++", "g++", "clang++"],
-            "no C++ compiler: install one (Debian: apt-get install g++), or set MOISTAIR_SKIP=c to go without",
-        );
+        let (compiler, cpp_compiler) = (c_compiler(), cpp_compiler());
         run(cargo().args(["build", "--release", "--package", "moistair-ffi"]));
         CLibrary { compiler, cpp_compiler, folder: workshop().join("cargo/release") }
     })
