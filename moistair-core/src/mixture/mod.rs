@@ -2,9 +2,11 @@
 //!
 //! Every property and every solve in `state/` is written once over [`Mixture`].
 
+#[cfg(test)]
+mod helmholtz;
 mod ideal_gas;
 mod real_gas;
-
+mod two_component;
 pub use ideal_gas::IdealGas;
 pub use real_gas::RealGas;
 

@@ -1,399 +1,43 @@
-//! Dry air and water vapor as a virial mixture: IAPWS G8-10 with its residuals expanded in powers of density.
-//!
-//! With the partial densities ρ_a, ρ_w of dry air and water, and Ψ = F/T the Helmholtz energy per volume over temperature,
-//!
-//! Ψ = ρ_a R_a (ln δ_a + α°ₐ + Σ aₖ δ_aᵏ) + ρ_w R_w (ln δ_w + φ°_w + Σ bₖ δ_wᵏ)
-//!   + κ ρ_a ρ_w (B_aw + ¾ (ρ_a C_aaw / M_a + ρ_w C_aww / M_w)),   κ = 2R / (M_a M_w)   (G8-10 Eq. (1), (2), (10)),
-//!
-//! everything else follows by differentiation: p/T = ρ_a Ψ_a + ρ_w Ψ_w − Ψ, μ_w/T = Ψ_w, and U/T = τΨ_τ.
+//! The default real gas: IAPWS G8-10 with the residuals of its components expanded in powers of density, so that a solve for density
+//! repeats no exponential.
 
-use super::{Gas, Mixture, Saturation};
-use crate::quantity::ZERO_CELSIUS;
-use crate::real::{Choose, Real, k};
-use crate::saturation::{Surface, hyland_wexler_ice, hyland_wexler_liquid};
-use crate::substance::liquid_water::Condensed;
-use crate::substance::{Jet, dry_air, ice, liquid_water, water_vapor};
+use super::two_component::{Component, HelmholtzMixture, Model};
+use crate::real::Real;
+use crate::substance::{Series, dry_air, water_vapor};
 
-/// Newton steps for the density at given temperature, pressure and composition; for saturation; for pure saturation; for
-/// the melting temperature. The test of this module shows each to be enough and none to be idle.
-const DENSITY_STEPS: usize = 3;
-const SATURATION_STEPS: usize = 3;
-const PURE_STEPS: usize = 3;
-const MELTING_STEPS: usize = 2;
+/// Moist air as a virial mixture.
+pub type RealGas<R> = HelmholtzMixture<R, Virial>;
 
-/// 2R / (M_a M_w) with R = 8.314472 J/(mol K): G8-10 Eq. (2) and Table 2.
-const KAPPA: f64 = 2.0 * 8.314472 / (dry_air::MOLAR_MASS * water_vapor::MOLAR_MASS);
-
-/// One component: gas constant, reducing density, ideal part, coefficients of powers of its reduced partial density.
+/// Virial series evaluated directly from the published equations.
 #[derive(Clone, Copy, Debug)]
-struct Component<R, const N: usize> {
-    gas_constant: f64,
-    reducing_density: f64,
-    ideal: Jet<R>,
-    residual: [Jet<R>; N],
-}
+pub struct Virial;
 
-/// `r = Σ aₖδᵏ` with `δ r_δ`, `δ² r_δδ`, and the same of `τ r_τ` as far as needed.
-struct Series<R> {
-    value: R,
-    first: R,
-    second: R,
-}
-
-impl<R: Real, const N: usize> Component<R, N> {
-    fn series(&self, density: R, part: impl Fn(&Jet<R>) -> R) -> Series<R> {
-        let delta = density / k(self.reducing_density);
-        let mut sum = Series { value: k(0.0), first: k(0.0), second: k(0.0) };
-        // Horner from the highest order: Σ wₖ aₖ δᵏ with weights 1, k, k(k−1).
-        for (i, jet) in self.residual.iter().enumerate().rev() {
-            let (order, a) = ((i + 1) as f64, part(jet));
-            sum.value = (sum.value + a) * delta;
-            sum.first = (sum.first + a * k(order)) * delta;
-            sum.second = (sum.second + a * k(order * (order - 1.0))) * delta;
-        }
-        sum
-    }
-
-    /// Pressure over temperature and its slope in density, of this component alone.
-    fn pressure(&self, density: R) -> (R, R) {
-        let series = self.series(density, |jet| jet.value);
-        let gas_constant = k::<R>(self.gas_constant);
-        (
-            density * gas_constant * (series.first + k(1.0)),
-            gas_constant * (series.second + series.first * k(2.0) + k(1.0)),
-        )
-    }
-
-    /// Ψ_ρ of this component alone; density times its slope is the slope of `pressure` (Gibbs–Duhem).
-    fn potential(&self, density: R) -> R {
-        let series = self.series(density, |jet| jet.value);
-        let ln_delta = (density / k(self.reducing_density)).ln();
-        (ln_delta + self.ideal.value + series.value + series.first + k(1.0)) * k(self.gas_constant)
-    }
-
-    fn thermal(&self, density: R) -> Thermal<R> {
-        let gas_constant = k::<R>(self.gas_constant);
-        let (first, second) = (self.series(density, |jet| jet.first), self.series(density, |jet| jet.second));
-        Thermal {
-            energy: density * gas_constant * (self.ideal.first + first.value),
-            energy_slope: gas_constant * (self.ideal.first + first.value + first.first),
-            heat: -(density * gas_constant * (self.ideal.second + second.value)),
-            pressure_first: density * gas_constant * first.first,
-        }
-    }
-}
-
-/// Temperature derivatives at given density: of one component, or of the mixture.
-struct Thermal<R> {
-    /// τΨ_τ = U/T
-    energy: R,
-    /// its slope in the density
-    energy_slope: R,
-    /// −τ²Ψ_ττ, heat capacity at constant volume
-    heat: R,
-    /// τ ∂(p/T)/∂τ
-    pressure_first: R,
-}
-
-/// p/T of the mixture with its slopes in the partial densities.
-struct Pressure<R> {
-    value: R,
-    of_air: R,
-    of_water: R,
-}
-
-/// The temperature functions of the mixture.
-#[derive(Clone, Copy, Debug)]
-pub struct RealGas<R> {
-    celsius: R,
-    kelvins: R,
-    air: Component<R, { dry_air::ORDERS }>,
-    water: Component<R, { water_vapor::ORDERS }>,
-    /// κ B_aw, κ ¾ C_aaw / M_a, κ ¾ C_aww / M_w.
-    pair: Jet<R>,
-    two_air: Jet<R>,
-    two_water: Jet<R>,
-}
-
-/// B_aw, m³/mol: Harvey & Huang 2007, G8-10 Eq. (11).
-pub fn cross_second_virial<R: Real>(kelvins: R) -> Jet<R> {
-    const TERMS: [(f64, f64); 3] = [(0.665687e2, -0.237), (-0.238834e3, -1.048), (-0.176755e3, -3.183)];
-    let ln_theta = (kelvins * k(0.01)).ln();
-    TERMS.iter().fold(Jet::zero(), |sum, &(c, d)| sum.plus(Jet::power((ln_theta * k(d)).exp(), -d, c * 1e-6)))
-}
-
-/// Σ cᵢ (T/100 K)⁻ⁱ.
-fn inverse_powers<R: Real, const N: usize>(kelvins: R, coefficients: [f64; N]) -> Jet<R> {
-    let inverse = k::<R>(100.0) / kelvins;
-    let (mut sum, mut power) = (Jet::zero(), k(1.0));
-    for (i, c) in coefficients.into_iter().enumerate() {
-        sum = sum.plus(Jet::power(power, i as f64, c));
-        power = power * inverse;
-    }
-    sum
-}
-
-/// C_aaw, m⁶/mol²: Nelson & Sauer 2002, G8-10 Eq. (12).
-pub fn cross_third_virial_air<R: Real>(kelvins: R) -> Jet<R> {
-    inverse_powers(kelvins, [0.482737e-3, 0.105678e-2, -0.656394e-2, 0.294442e-1, -0.319317e-1]).times(k(1e-6))
-}
-
-/// C_aww, m⁶/mol²: Hyland & Wexler 1983, G8-10 Eq. (13).
-pub fn cross_third_virial_water<R: Real>(kelvins: R) -> Jet<R> {
-    let exponent = inverse_powers(kelvins, [-0.10728876e2, 0.347802e2, -0.383383e2, 0.33406e2]);
-    let value = exponent.value.exp() * k(-1e-6);
-    Jet { value, first: value * exponent.first, second: value * (exponent.second + exponent.first * exponent.first) }
-}
-
-impl<R: Real> RealGas<R> {
-    /// Between these, °C, ice and liquid are compared; the melting temperature lies between −0.08 and 0.01 °C up to 1.1 MPa.
-    const BOTH_PHASES: (f64, f64) = (-0.2, 0.02);
-
-    fn pressure(&self, air: R, water: R) -> Pressure<R> {
-        let (air_value, air_slope) = self.air.pressure(air);
-        let (water_value, water_slope) = self.water.pressure(water);
-        let (two_air, two_water) = (air * self.two_air.value * k(2.0), water * self.two_water.value * k(2.0));
-        let inner = self.pair.value + two_air + two_water;
-        Pressure {
-            value: air_value + water_value + air * water * inner,
-            of_air: air_slope + water * (inner + two_air),
-            of_water: water_slope + air * (inner + two_water),
-        }
-    }
-
-    /// Ψ_w = μ_w / T with its slopes in the density of air and in the logarithm of the density of water.
-    fn potential(&self, air: R, water: R) -> (R, R, R) {
-        let (two_air, two_water) = (air * self.two_air.value, water * self.two_water.value * k(2.0));
-        let (_, slope) = self.water.pressure(water);
-        (
-            self.water.potential(water) + air * (self.pair.value + two_air + two_water),
-            self.pair.value + two_air * k(2.0) + two_water,
-            slope + air * two_water,
-        )
-    }
-
-    /// Temperature derivatives of the mixture; `energy_slope` is here that in the density of water.
-    fn thermal(&self, air: R, water: R) -> (Thermal<R>, R) {
-        let (of_air, of_water) = (self.air.thermal(air), self.water.thermal(water));
-        let cross = air * water;
-        let (two_air, two_water) = (air * self.two_air.first, water * self.two_water.first);
-        let inner = self.pair.first + two_air + two_water;
-        let curvature = self.pair.second + air * self.two_air.second + water * self.two_water.second;
-        let mixture = Thermal {
-            energy: of_air.energy + of_water.energy + cross * inner,
-            energy_slope: of_water.energy_slope + air * (inner + two_water),
-            heat: of_air.heat + of_water.heat - cross * curvature,
-            pressure_first: of_air.pressure_first + of_water.pressure_first + cross * (inner + two_air + two_water),
-        };
-        (mixture, of_air.energy_slope + water * (inner + two_air))
-    }
-
-    /// Dry-air density at a pressure and humidity ratio.
-    fn air_density<const STEPS: usize>(&self, pressure: R, humidity_ratio: R) -> R {
-        let target = pressure / self.kelvins;
-        let gas_constant = humidity_ratio * k(water_vapor::GAS_CONSTANT) + k(dry_air::GAS_CONSTANT);
-        let mut air = target / gas_constant;
-        for _ in 0..STEPS {
-            let p = self.pressure(air, air * humidity_ratio);
-            air = air + (target - p.value) / (p.of_air + humidity_ratio * p.of_water);
-        }
-        air
-    }
-
-    /// The condensed phase at this temperature.
-    fn condensed(celsius: R, pressure: R, surface: Surface) -> Condensed<R> {
-        match surface {
-            Surface::Liquid => liquid_water::at(celsius, pressure),
-            Surface::Ice => ice::at(celsius, pressure),
-            Surface::Stable => {
-                // The lower chemical potential; far from the melting temperature it is known without asking.
-                let liquid = || liquid_water::at(celsius, pressure);
-                let ice = || ice::at(celsius, pressure);
-                let lower = || {
-                    let (liquid, ice) = (liquid(), ice());
-                    Condensed::choose(ice.gibbs.lt(liquid.gibbs), ice, liquid)
-                };
-                let (cold, warm) = Self::BOTH_PHASES;
-                R::pick(celsius.lt(k(cold)), ice, || R::pick(k::<R>(warm).lt(celsius), liquid, lower))
-            }
-        }
-    }
-
-    /// Partial densities in equilibrium with a condensed phase: equal pressure, equal chemical potential of water.
-    fn saturated<const STEPS: usize>(&self, pressure: R, condensed: &Condensed<R>) -> (R, R) {
-        let (target, potential) = (pressure / self.kelvins, condensed.gibbs / self.kelvins);
-        // Start: water as an ideal gas, dry air for the rest of the pressure.
-        let ln_delta = potential / k(water_vapor::GAS_CONSTANT) - self.water.ideal.value - k(1.0);
-        let mut water = ln_delta.exp() * k(water_vapor::REDUCING_DENSITY);
-        let mut air = (target - water * k(water_vapor::GAS_CONSTANT)) / k(dry_air::GAS_CONSTANT);
-        for _ in 0..STEPS {
-            let p = self.pressure(air, water);
-            let (mu, mu_of_air, mu_of_ln_water) = self.potential(air, water);
-            let (air_step, water_step) = solve_pair(
-                (p.of_air, water * p.of_water, p.value - target),
-                (mu_of_air, mu_of_ln_water, mu - potential),
-            );
-            air = air - air_step;
-            // e^{−step} of the logarithm, near enough and positive.
-            water = water / (k::<R>(1.0) + water_step + water_step * water_step * k(0.5));
-        }
-        (air, water)
-    }
-
-    /// d ln(ρ_w / ρ_a) / dT along saturation at constant pressure.
-    fn saturation_slope(&self, pressure: R, condensed: &Condensed<R>, air: R, water: R) -> R {
-        let p = self.pressure(air, water);
-        let (_, mu_of_air, mu_of_ln_water) = self.potential(air, water);
-        let (thermal, _) = self.thermal(air, water);
-        let (air_step, water_step) = solve_pair(
-            (p.of_air, water * p.of_water, (thermal.pressure_first - pressure / self.kelvins) / self.kelvins),
-            (mu_of_air, mu_of_ln_water, (thermal.energy_slope - condensed.enthalpy / self.kelvins) / self.kelvins),
-        );
-        water_step - air_step / air
-    }
-
-    /// Density of pure water vapor in equilibrium with a condensed phase.
-    fn pure_density<const STEPS: usize>(&self, condensed: impl Fn(R) -> Condensed<R>, start: R) -> R {
-        let phase = condensed(start);
-        let mut water = start / (self.kelvins * k(water_vapor::GAS_CONSTANT));
-        for _ in 0..STEPS {
-            let (p, p_slope) = self.water.pressure(water);
-            let mu = self.water.potential(water);
-            let pressure = p * self.kelvins;
-            // The condensed phase is linear in the little pressure between the start and the result.
-            let error = mu * self.kelvins - phase.gibbs - phase.volume * (pressure - start);
-            let slope = p_slope * self.kelvins * (k::<R>(1.0) - phase.volume * water);
-            let step = error / slope;
-            water = water / (k::<R>(1.0) + step + step * step * k(0.5));
-        }
-        water
-    }
-
-    /// Density of saturated steam over liquid water, and over ice.
-    fn steam_density(&self, surface: Surface) -> R {
-        match surface {
-            Surface::Ice => {
-                let start = hyland_wexler_ice(self.kelvins).0.exp();
-                self.pure_density::<PURE_STEPS>(|p| ice::at(self.celsius, p), start)
-            }
-            Surface::Liquid | Surface::Stable => {
-                let start = hyland_wexler_liquid(self.kelvins).0.exp();
-                self.pure_density::<PURE_STEPS>(|p| liquid_water::at(self.celsius, p), start)
-            }
-        }
-    }
-
-    /// Enthalpy of saturated steam at this temperature, J/kg.
-    pub fn saturated_steam_enthalpy(&self) -> R {
-        let density = self.steam_density(Surface::Liquid);
-        let thermal = self.water.thermal(density);
-        (thermal.energy + self.water.pressure(density).0) * self.kelvins / density
-    }
-}
-
-/// The melting temperature, °C. Start: the slope of the melting curve at the triple point. Then equal chemical potentials, with
-/// dg/dT = −s of either phase.
-fn melting<R: Real, const STEPS: usize>(pressure: R) -> R {
-    let mut celsius = k::<R>(0.01) - pressure * k(7.4e-8);
-    for _ in 0..STEPS {
-        let (liquid, ice) = (liquid_water::at(celsius, pressure), ice::at(celsius, pressure));
-        let kelvins = celsius + k(ZERO_CELSIUS);
-        let fusion = (liquid.enthalpy - ice.enthalpy - liquid.gibbs + ice.gibbs) / kelvins;
-        celsius = celsius + (liquid.gibbs - ice.gibbs) / fusion;
-    }
-    celsius
-}
-
-/// Solves `aᵢ x + bᵢ y = cᵢ`.
-fn solve_pair<R: Real>(first: (R, R, R), second: (R, R, R)) -> (R, R) {
-    let determinant = first.0 * second.1 - first.1 * second.0;
-    ((first.2 * second.1 - first.1 * second.2) / determinant, (first.0 * second.2 - first.2 * second.0) / determinant)
-}
-
-impl<R: Real> Mixture<R> for RealGas<R> {
+impl<R: Real> Model<R> for Virial {
     #[cfg(test)]
     const FORMULATION: crate::Formulation = crate::Formulation::RealGas;
-    const MOLAR_MASS_RATIO: f64 = water_vapor::MOLAR_MASS / dry_air::MOLAR_MASS;
 
-    fn at(celsius: R) -> Self {
-        let kelvins = celsius + k(ZERO_CELSIUS);
-        Self {
-            celsius,
-            kelvins,
-            air: Component {
-                gas_constant: dry_air::GAS_CONSTANT,
-                reducing_density: dry_air::REDUCING_DENSITY,
-                ideal: dry_air::ideal(kelvins),
-                residual: dry_air::residual(kelvins),
-            },
-            water: Component {
-                gas_constant: water_vapor::GAS_CONSTANT,
-                reducing_density: water_vapor::REDUCING_DENSITY,
-                ideal: water_vapor::ideal(kelvins),
-                residual: water_vapor::residual(kelvins),
-            },
-            pair: cross_second_virial(kelvins).times(k(KAPPA)),
-            two_air: cross_third_virial_air(kelvins).times(k(KAPPA * 0.75 / dry_air::MOLAR_MASS)),
-            two_water: cross_third_virial_water(kelvins).times(k(KAPPA * 0.75 / water_vapor::MOLAR_MASS)),
+    type Air = Series<R, { dry_air::ORDERS }>;
+    type Water = Series<R, { water_vapor::ORDERS }>;
+
+    const DENSITY_STEPS: usize = 3;
+    const SATURATION_STEPS: usize = 3;
+    const PURE_STEPS: usize = 3;
+
+    fn air(kelvins: R) -> Component<R, Self::Air> {
+        Component {
+            gas_constant: dry_air::GAS_CONSTANT,
+            reducing_density: dry_air::REDUCING_DENSITY,
+            ideal: dry_air::ideal(kelvins),
+            residual: Series(dry_air::residual(kelvins)),
         }
     }
 
-    fn gas(&self, pressure: R, humidity_ratio: R) -> Gas<R> {
-        let air = self.air_density::<DENSITY_STEPS>(pressure, humidity_ratio);
-        let p = self.pressure(air, air * humidity_ratio);
-        let (thermal, energy_of_air) = self.thermal(air, air * humidity_ratio);
-        let volume = k::<R>(1.0) / air;
-        let gas_constant = humidity_ratio * k(water_vapor::GAS_CONSTANT) + k(dry_air::GAS_CONSTANT);
-        // ∂(p/T)/∂ ln ρ along constant W, and ∂p/∂T = p/T − τ ∂(p/T)/∂τ
-        let slope = air * (p.of_air + humidity_ratio * p.of_water);
-        let tension = p.value - thermal.pressure_first;
-        // Along constant T and p a change of W moves the densities: dρ_a = −ρ_a² p_w dW / (∂p/∂ ln ρ), dρ_w = ρ_a dW + W dρ_a.
-        let air_shift = -(air * air * p.of_water / slope);
-        let water_shift = air + humidity_ratio * air_shift;
-        let energy_shift = energy_of_air * air_shift + thermal.energy_slope * water_shift;
-        let enthalpy = (self.kelvins * thermal.energy + pressure) * volume;
-        Gas {
-            volume,
-            enthalpy,                                                           // H = T τΨ_τ + p
-            specific_heat: (thermal.heat + tension * tension / slope) * volume, // C_v + T p_T² / (ρ p_ρ)
-            compressibility: pressure * volume / (gas_constant * self.kelvins),
-            volume_of_water: -(air_shift * volume * volume),
-            enthalpy_of_water: (self.kelvins * energy_shift - enthalpy * air_shift) * volume,
+    fn water(kelvins: R) -> Component<R, Self::Water> {
+        Component {
+            gas_constant: water_vapor::GAS_CONSTANT,
+            reducing_density: water_vapor::REDUCING_DENSITY,
+            ideal: water_vapor::ideal(kelvins),
+            residual: Series(water_vapor::residual(kelvins)),
         }
-    }
-
-    fn saturation(&self, pressure: R, surface: Surface) -> Saturation<R> {
-        let condensed = Self::condensed(self.celsius, pressure, surface);
-        let (air, water) = self.saturated::<SATURATION_STEPS>(pressure, &condensed);
-        Saturation {
-            // from the densities, which stay regular where the air vanishes
-            mole_fraction: water / (water + air * k(<Self as Mixture<R>>::MOLAR_MASS_RATIO)),
-            humidity_ratio: water / air,
-            log_slope: self.saturation_slope(pressure, &condensed, air, water),
-            condensed_enthalpy: condensed.enthalpy,
-        }
-    }
-
-    fn pure_saturation_pressure(&self, pressure: R, surface: Surface) -> R {
-        let over = |surface| self.water.pressure(self.steam_density(surface)).0 * self.kelvins;
-        match surface {
-            Surface::Stable => R::pick(
-                self.celsius.lt(Self::melting_temperature(pressure)),
-                || over(Surface::Ice),
-                || over(Surface::Liquid),
-            ),
-            surface => over(surface),
-        }
-    }
-
-    fn melting_temperature(pressure: R) -> R {
-        melting::<R, MELTING_STEPS>(pressure)
-    }
-
-    fn condensed_enthalpy(celsius: R, pressure: R, surface: Surface) -> R {
-        Self::condensed(celsius, pressure, surface).enthalpy
     }
 }
-
-#[cfg(test)]
-mod tests;

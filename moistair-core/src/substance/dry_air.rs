@@ -9,7 +9,7 @@ pub const MOLAR_MASS: f64 = 0.02896546;
 /// Specific gas constant, J/(kg K): R = 8.31451 J/(mol K) of the publication over the molar mass.
 pub const GAS_CONSTANT: f64 = 8.31451 / MOLAR_MASS;
 /// Reducing temperature, K.
-pub(super) const REDUCING_TEMPERATURE: f64 = 132.6312;
+pub const REDUCING_TEMPERATURE: f64 = 132.6312;
 /// Reducing density, kg/m³: 10447.7 mol/m³.
 pub const REDUCING_DENSITY: f64 = 10447.7 * MOLAR_MASS;
 
@@ -18,7 +18,7 @@ pub const REDUCING_DENSITY: f64 = 10447.7 * MOLAR_MASS;
 pub const ORDERS: usize = 5;
 
 /// `n δⁱ τʲ exp(−δˡ)`, G8-10 Table 4.
-pub(super) const TERMS: [Term; 19] = [
+pub const TERMS: [Term; 19] = [
     Term::new(0, 1, 0.0, 0.118160747229),
     Term::new(0, 1, 0.33, 0.713116392079),
     Term::new(0, 1, 1.01, -0.161824192067e1),

@@ -1,6 +1,6 @@
 //! Liquid water: IAPWS R6-95(2018) at given temperature and pressure, supercooled and superheated included.
 
-use super::{water, water_vapor};
+use super::{Residual, TemperatureOrder, Terms, water, water_vapor};
 use crate::quantity::ZERO_CELSIUS;
 use crate::real::{Choose, Real, k, polynomial};
 
@@ -50,21 +50,21 @@ fn equation<R: Real, const STEPS: usize>(celsius: R, pascals: R) -> Condensed<R>
     let kelvins = celsius + k(ZERO_CELSIUS);
     let rt = kelvins * k(water::GAS_CONSTANT);
     let tau = k::<R>(water::CRITICAL_TEMPERATURE) / kelvins;
-    let amplitudes = water::amplitudes(tau);
+    let terms = Terms::at(&water::TERMS, tau);
     let mut delta = density_start(celsius, pascals);
     for _ in 0..STEPS {
         // p = ρ R T (1 + δφʳ_δ) and its slope in density: R6-95 Table 3.
-        let residual = water::residual(delta, &amplitudes);
-        let pressure = delta * rt * (residual.density_first + k(1.0)) * k(water::CRITICAL_DENSITY);
-        let slope =
-            rt * (residual.density_first * k(2.0) + residual.density_second + k(1.0)) * k(water::CRITICAL_DENSITY);
+        let residual = terms.derivatives(delta, TemperatureOrder::Value);
+        let pressure = delta * rt * (residual.first + k(1.0)) * k(water::CRITICAL_DENSITY);
+        let slope = rt * (residual.first * k(2.0) + residual.second + k(1.0)) * k(water::CRITICAL_DENSITY);
         delta = delta - (pressure - pascals) / slope;
     }
-    let residual = water::residual(delta, &amplitudes);
+    let residual = terms.derivatives(delta, TemperatureOrder::Value);
+    let thermal = terms.derivatives(delta, TemperatureOrder::First);
     let ideal = water_vapor::ideal(kelvins);
     let volume = k::<R>(1.0) / (delta * k(water::CRITICAL_DENSITY));
     let helmholtz = rt * (delta.ln() + ideal.value + residual.value);
-    let energy = rt * (ideal.first + residual.temperature_first);
+    let energy = rt * (ideal.first + thermal.value);
     // With p for ρRT(1 + δφʳ_δ), the Gibbs energy is stationary in what is left of the error of density.
     Condensed { gibbs: helmholtz + pascals * volume, enthalpy: energy + pascals * volume, volume }
 }

@@ -10,7 +10,7 @@ pub mod liquid_water;
 pub mod water;
 pub mod water_vapor;
 
-use crate::real::{Real, k};
+use crate::real::{Real, k, power};
 
 /// A function of temperature with its first two derivatives in the reduced form that Helmholtz equations use:
 /// `f`, `τ ∂f/∂τ`, `τ² ∂²f/∂τ²` (any τ ∝ 1/T gives the same).
@@ -123,6 +123,92 @@ pub fn density_series<R: Real, const N: usize, const L: usize>(
         }
     }
     series
+}
+
+/// Which derivative in temperature, in the reduced form of [`Jet`].
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum TemperatureOrder {
+    Value,
+    First,
+    Second,
+}
+
+/// `f` with `δ ∂f/∂δ` and `δ² ∂²f/∂δ²`.
+#[derive(Clone, Copy, Debug)]
+pub struct DensityDerivatives<R> {
+    pub value: R,
+    pub first: R,
+    pub second: R,
+}
+
+/// The residual Helmholtz energy of a pure fluid at one temperature, as a function of its reduced density.
+pub trait Residual<R>: Copy {
+    /// Density derivatives of φʳ, τφʳ_τ or τ²φʳ_ττ.
+    fn derivatives(&self, delta: R, of: TemperatureOrder) -> DensityDerivatives<R>;
+}
+
+/// The residual as published: a sum of terms, with their `n τᵗ` at this temperature.
+#[derive(Clone, Copy, Debug)]
+pub struct Terms<R, const L: usize> {
+    terms: &'static [Term; L],
+    amplitudes: [R; L],
+}
+
+impl<R: Real, const L: usize> Terms<R, L> {
+    pub fn at(terms: &'static [Term; L], tau: R) -> Self {
+        let ln_tau = tau.ln();
+        Self { terms, amplitudes: terms.map(|term| (ln_tau * k(term.t)).exp() * k(term.n)) }
+    }
+}
+
+impl<R: Real, const L: usize> Residual<R> for Terms<R, L> {
+    /// The derivatives of IAPWS R6-95 Table 5, for terms `n δᵈ τᵗ exp(−δᶜ)`.
+    fn derivatives(&self, delta: R, of: TemperatureOrder) -> DensityDerivatives<R> {
+        let mut sum = DensityDerivatives { value: k(0.0), first: k(0.0), second: k(0.0) };
+        let mut run = (0, k::<R>(0.0), k::<R>(1.0)); // c, δᶜ and exp(−δᶜ), shared by runs of terms
+        for (term, amplitude) in self.terms.iter().zip(&self.amplitudes) {
+            if term.c != run.0 {
+                let cutoff = power(delta, term.c);
+                run = (term.c, cutoff, (-cutoff).exp());
+            }
+            let (_, cutoff, decay) = run;
+            let factor = match of {
+                TemperatureOrder::Value => 1.0,
+                TemperatureOrder::First => term.t,
+                TemperatureOrder::Second => term.t * (term.t - 1.0),
+            };
+            let value = *amplitude * power(delta, term.d) * decay * k(factor);
+            let slope = k::<R>(f64::from(term.d)) - cutoff * k(f64::from(term.c));
+            let curvature = slope * (slope - k(1.0)) - cutoff * k(f64::from(term.c * term.c));
+            sum.value = sum.value + value;
+            sum.first = sum.first + value * slope;
+            sum.second = sum.second + value * curvature;
+        }
+        sum
+    }
+}
+
+/// The residual expanded in powers of density: coefficients of δ¹ to δᴺ.
+#[derive(Clone, Copy, Debug)]
+pub struct Series<R, const N: usize>(pub [Jet<R>; N]);
+
+impl<R: Real, const N: usize> Residual<R> for Series<R, N> {
+    fn derivatives(&self, delta: R, of: TemperatureOrder) -> DensityDerivatives<R> {
+        let mut sum = DensityDerivatives { value: k(0.0), first: k(0.0), second: k(0.0) };
+        // Horner from the highest order: Σ wₖ aₖ δᵏ with weights 1, k, k(k−1).
+        for (i, jet) in self.0.iter().enumerate().rev() {
+            let order = (i + 1) as f64;
+            let a = match of {
+                TemperatureOrder::Value => jet.value,
+                TemperatureOrder::First => jet.first,
+                TemperatureOrder::Second => jet.second,
+            };
+            sum.value = (sum.value + a) * delta;
+            sum.first = (sum.first + a * k(order)) * delta;
+            sum.second = (sum.second + a * k(order * (order - 1.0))) * delta;
+        }
+        sum
+    }
 }
 
 #[cfg(test)]

@@ -1,7 +1,6 @@
 //! The residual Helmholtz energy of water: IAPWS R6-95(2018), the terms of Table 2 that matter for vapor and liquid.
 
 use super::Term;
-use crate::real::{Real, k, power};
 
 /// Specific gas constant, J/(kg K): R6-95 Eq. (3).
 pub const GAS_CONSTANT: f64 = 461.51805;
@@ -68,38 +67,3 @@ pub const TERMS: [Term; 51] = [
     Term::new(6, 6, 46.0, 0.31777497330738),
     Term::new(6, 6, 50.0, -0.11841182425981),
 ];
-
-/// `φʳ` with the density derivatives `δ φʳ_δ`, `δ² φʳ_δδ` and the temperature derivative `τ φʳ_τ`: R6-95 Table 5.
-#[derive(Clone, Copy, Debug)]
-pub struct Residual<R> {
-    pub value: R,
-    pub density_first: R,
-    pub density_second: R,
-    pub temperature_first: R,
-}
-
-/// `n τᵗ` of every term: what a search for density need not repeat.
-pub fn amplitudes<R: Real>(tau: R) -> [R; TERMS.len()] {
-    let ln_tau = tau.ln();
-    TERMS.map(|term| (ln_tau * k(term.t)).exp() * k(term.n))
-}
-
-pub fn residual<R: Real>(delta: R, amplitudes: &[R; TERMS.len()]) -> Residual<R> {
-    let mut sum = Residual { value: k(0.0), density_first: k(0.0), density_second: k(0.0), temperature_first: k(0.0) };
-    let mut run = (0, k::<R>(0.0), k::<R>(1.0)); // c, δᶜ and exp(−δᶜ), shared by runs of terms
-    for (term, amplitude) in TERMS.iter().zip(amplitudes) {
-        if term.c != run.0 {
-            let cutoff = power(delta, term.c);
-            run = (term.c, cutoff, (-cutoff).exp());
-        }
-        let (_, cutoff, decay) = run;
-        let value = *amplitude * power(delta, term.d) * decay;
-        let slope = k::<R>(f64::from(term.d)) - cutoff * k(f64::from(term.c));
-        let curvature = slope * (slope - k(1.0)) - cutoff * k(f64::from(term.c * term.c));
-        sum.value = sum.value + value;
-        sum.density_first = sum.density_first + value * slope;
-        sum.density_second = sum.density_second + value * curvature;
-        sum.temperature_first = sum.temperature_first + value * k(term.t);
-    }
-    sum
-}

@@ -6,6 +6,9 @@ use std::println;
 
 use super::*;
 use crate::checks::{Table, Tally, half_of_last_decimal};
+use crate::mixture::RealGas;
+use crate::mixture::helmholtz::Published;
+use crate::mixture::real_gas::Virial;
 
 const MOIST_AIR: &str = include_str!("../../../../tests/published/g8_10_tables13_14_15.csv");
 const DRY_AIR: &str = include_str!("../../../../tests/published/lemmon2000_dry_air.csv");
@@ -19,14 +22,14 @@ fn at_kelvins(kelvins: f64) -> RealGas<f64> {
 }
 
 /// The interaction alone: both components weightless.
-fn interaction(mut mixture: RealGas<f64>) -> RealGas<f64> {
+fn interaction<M: Model<f64>>(mut mixture: HelmholtzMixture<f64, M>) -> HelmholtzMixture<f64, M> {
     mixture.air.gas_constant = 0.0;
     mixture.water.gas_constant = 0.0;
     mixture
 }
 
 /// f(A, T, ρ) with its derivatives and the properties of G8-10 Tables 2 and 3, from Ψ as the module computes it.
-fn helmholtz(mixture: &RealGas<f64>, a: f64, density: f64) -> BTreeMap<&'static str, f64> {
+fn helmholtz<M: Model<f64>>(mixture: &HelmholtzMixture<f64, M>, a: f64, density: f64) -> BTreeMap<&'static str, f64> {
     let (kelvins, air, water) = (mixture.kelvins, a * density, (1.0 - a) * density);
     let pressure = mixture.pressure(air, water);
     let (psi_w, psi_aw, of_ln_water) = mixture.potential(air, water);
@@ -66,10 +69,10 @@ fn helmholtz(mixture: &RealGas<f64>, a: f64, density: f64) -> BTreeMap<&'static 
     ])
 }
 
-impl<const N: usize> Component<f64, N> {
+impl<P: Residual<f64>> Component<f64, P> {
     /// Ψ of this component alone.
     fn helmholtz(&self, density: f64) -> f64 {
-        let series = self.series(density, |jet| jet.value);
+        let series = self.residual(density, TemperatureOrder::Value);
         density * self.gas_constant * ((density / self.reducing_density).ln() + self.ideal.value + series.value)
     }
 
@@ -102,11 +105,16 @@ fn in_temperature(jet: Jet<f64>, kelvins: f64, name: &str) -> f64 {
 /// G8-10 Tables 13 to 15, all of them: the state as a whole, its parts, the interaction and its virial coefficients.
 #[test]
 fn moist_air_of_g8_10() {
+    tables_of_g8_10::<Virial>("G8-10 Tables 13 to 15, series");
+    tables_of_g8_10::<Published>("G8-10 Tables 13 to 15, as published");
+}
+
+fn tables_of_g8_10<M: Model<f64>>(name: &'static str) {
     let table = Table::read(MOIST_AIR);
-    let mut tally = Tally::new("G8-10 Tables 13 to 15");
+    let mut tally = Tally::new(name);
     for row in table.rows() {
         let (a, kelvins, density) = (row.input("A"), row.input("T_K"), row.input("rho_kg_m3"));
-        let mixture = at_kelvins(kelvins);
+        let mixture = HelmholtzMixture::<f64, M>::at(kelvins - ZERO_CELSIUS);
         let (name, part) = row.text("quantity").split_once(" [").unwrap_or((row.text("quantity"), ""));
         let computed = match part.split(' ').next().unwrap() {
             "humid" => helmholtz(&mixture, a, density)[name],
@@ -137,7 +145,7 @@ fn dry_air_of_lemmon_2000() {
     for row in table.rows().filter(single_phase) {
         let (kelvins, pascals) = (row.input("T_K"), row.input("p_MPa") * 1e6);
         let mixture = at_kelvins(kelvins);
-        let density = mixture.air_density::<10>(pascals, 0.0);
+        let density = mixture.air_density(10, pascals, 0.0);
         let part = mixture.air.alone(kelvins, density);
         let (p_rho, p_t) =
             (density * density * part["f_rhorho"] + 2.0 * density * part["f_rho"], density * density * part["f_Trho"]);
@@ -214,7 +222,7 @@ fn fugacity_of_the_mixture() {
     let (kelvins, pascals, x) = (300.0, 10e3, 0.1);
     let mixture = at_kelvins(kelvins);
     let ratio = <RealGas<f64> as Mixture<f64>>::humidity_ratio(x);
-    let air = mixture.air_density::<10>(pascals, ratio);
+    let air = mixture.air_density(10, pascals, ratio);
     let r = water_vapor::GAS_CONSTANT;
     let ln_delta = (air * ratio / water_vapor::REDUCING_DENSITY).ln();
     let residual = mixture.potential(air, air * ratio).0 / r - ln_delta - mixture.water.ideal.value - 1.0;
@@ -379,30 +387,32 @@ fn worst(measure: impl Fn(f64, f64) -> f64) -> f64 {
 }
 
 /// The greatest humidity ratio of a state, as `state::construct` has it.
-fn greatest(celsius: f64, pascals: f64) -> f64 {
-    crate::state::construct::greatest_humidity_ratio(&RealGas::at(celsius), celsius, pascals)
+fn greatest<M: Model<f64>>(celsius: f64, pascals: f64) -> f64 {
+    crate::state::construct::greatest_humidity_ratio(&HelmholtzMixture::<f64, M>::at(celsius), celsius, pascals)
 }
 
-fn density_left_over<const STEPS: usize>() -> f64 {
+fn density_left_over<M: Model<f64>>(steps: usize) -> f64 {
     worst(|celsius, pascals| {
-        let (mixture, limit) = (RealGas::at(celsius), greatest(celsius, pascals));
+        let (mixture, limit) = (HelmholtzMixture::<f64, M>::at(celsius), greatest::<M>(celsius, pascals));
         let error = |share: f64| {
             let ratio = share * limit;
-            mixture.air_density::<STEPS>(pascals, ratio) / mixture.air_density::<12>(pascals, ratio) - 1.0
+            mixture.air_density(steps, pascals, ratio) / mixture.air_density(12, pascals, ratio) - 1.0
         };
         [0.0, 0.01, 0.1, 0.4, 0.7, 0.9, 1.0].map(|share| error(share).abs()).into_iter().fold(0.0, f64::max)
     })
 }
 
 /// Relative error of the saturation mole fraction over liquid and over ice.
-fn saturation_left_over<const STEPS: usize>() -> f64 {
+fn saturation_left_over<M: Model<f64>>(steps: usize) -> f64 {
     let measure = |celsius: f64, pascals: f64, surface| {
-        let (mixture, condensed) = (RealGas::at(celsius), RealGas::condensed(celsius, pascals, surface));
-        let fraction =
-            |(air, water): (f64, f64)| water / (water + air * <RealGas<f64> as Mixture<f64>>::MOLAR_MASS_RATIO);
-        let exact = fraction(mixture.saturated::<40>(pascals, &condensed));
+        let (mixture, condensed) =
+            (HelmholtzMixture::<f64, M>::at(celsius), HelmholtzMixture::<f64, M>::condensed(celsius, pascals, surface));
+        let fraction = |(air, water): (f64, f64)| {
+            water / (water + air * <HelmholtzMixture<f64, M> as Mixture<f64>>::MOLAR_MASS_RATIO)
+        };
+        let exact = fraction(mixture.saturated(40, pascals, &condensed));
         if exact > 0.0 && exact < 1.0 {
-            (fraction(mixture.saturated::<STEPS>(pascals, &condensed)) / exact - 1.0).abs()
+            (fraction(mixture.saturated(steps, pascals, &condensed)) / exact - 1.0).abs()
         } else {
             0.0
         }
@@ -413,29 +423,21 @@ fn saturation_left_over<const STEPS: usize>() -> f64 {
 }
 
 /// Over liquid, supercooled and superheated, and over ice: relative in the density.
-fn pure_left_over<const STEPS: usize>() -> f64 {
+fn pure_left_over<M: Model<f64>>(steps: usize) -> f64 {
     worst(|celsius, _| {
-        let mixture = RealGas::at(celsius);
-        let error = |condensed: &dyn Fn(f64) -> Condensed<f64>, start: f64| {
-            let few = mixture.pure_density::<STEPS>(condensed, start);
-            (few / mixture.pure_density::<12>(condensed, start) - 1.0).abs()
-        };
-        let (mut most, kelvins) = (0.0_f64, mixture.kelvins);
-        if celsius >= -45.0 {
-            most = error(&|p| liquid_water::at(celsius, p), hyland_wexler_liquid(kelvins).0.exp());
-        }
-        if celsius <= 0.02 {
-            most = most.max(error(&|p| ice::at(celsius, p), hyland_wexler_ice(kelvins).0.exp()));
-        }
-        most
+        let mixture = HelmholtzMixture::<f64, M>::at(celsius);
+        let error = |surface| mixture.pure_density(steps, surface) / mixture.pure_density(12, surface) - 1.0;
+        let liquid = if celsius >= -45.0 { error(Surface::Liquid).abs() } else { 0.0 };
+        let ice = if celsius <= 0.02 { error(Surface::Ice).abs() } else { 0.0 };
+        liquid.max(ice)
     })
 }
 
 /// In K; the melting temperature depends on pressure alone.
-fn melting_left_over<const STEPS: usize>() -> f64 {
-    (0..=120)
-        .map(|i| 20e3 + 9e3 * f64::from(i))
-        .fold(0.0, |most, pascals| most.max((melting::<f64, STEPS>(pascals) - melting::<f64, 12>(pascals)).abs()))
+fn melting_left_over(steps: usize) -> f64 {
+    (0..=120).map(|i| 20e3 + 9e3 * f64::from(i)).fold(0.0, |most, pascals| {
+        most.max((melting::<f64, Virial>(steps, pascals) - melting::<f64, Virial>(12, pascals)).abs())
+    })
 }
 
 /// The constants pass the bound and one step fewer does not. Bounds: what doubles resolve, with some room (the melting
@@ -447,14 +449,20 @@ fn steps_are_enough_and_none_is_idle() {
         assert!(with <= bound, "{name}: {with:e} is left over");
         assert!(fewer > bound, "{name}: one step fewer does as well, {fewer:e}: the constant is stale");
     };
-    const DENSITY: usize = DENSITY_STEPS - 1;
-    const SATURATION: usize = SATURATION_STEPS - 1;
-    const PURE: usize = PURE_STEPS - 1;
-    const MELTING: usize = MELTING_STEPS - 1;
-    check("density", 1e-13, density_left_over::<DENSITY_STEPS>(), density_left_over::<DENSITY>());
-    check("saturation", 1e-13, saturation_left_over::<SATURATION_STEPS>(), saturation_left_over::<SATURATION>());
-    check("pure saturation", 1e-13, pure_left_over::<PURE_STEPS>(), pure_left_over::<PURE>());
-    check("melting", 1e-10, melting_left_over::<MELTING_STEPS>(), melting_left_over::<MELTING>());
+    /// Name, bound, constant, what is left over after so many steps.
+    type Solve = (&'static str, f64, usize, fn(usize) -> f64);
+    fn of<M: Model<f64>>() -> [Solve; 3] {
+        [
+            ("density", 1e-13, M::DENSITY_STEPS, density_left_over::<M>),
+            ("saturation", 1e-13, M::SATURATION_STEPS, saturation_left_over::<M>),
+            ("pure saturation", 1e-13, M::PURE_STEPS, pure_left_over::<M>),
+        ]
+    }
+    let melting: [Solve; 1] = [("melting", 1e-10, MELTING_STEPS, melting_left_over)];
+    let solves = of::<Virial>().into_iter().chain(of::<Published>()).chain(melting);
+    for (name, bound, steps, left_over) in solves {
+        check(name, bound, left_over(steps), left_over(steps - 1));
+    }
 }
 
 /// Whether anything saturates is decided by the boiling temperature, at every temperature that a solve may try.
@@ -490,7 +498,7 @@ fn slopes_are_those_of_the_values() {
     let (mut saturation, mut heat, mut enthalpy, mut volume) = (0.0_f64, 0.0_f64, 0.0_f64, 0.0_f64);
     for (celsius, pascals) in domain() {
         let mixture = RealGas::at(celsius);
-        let limit = greatest(celsius, pascals);
+        let limit = greatest::<Virial>(celsius, pascals);
         let (dt, w) = (2e-3, 0.5 * limit);
         let dw = 1e-3 * w;
         let at = |t: f64, w: f64| RealGas::at(t).gas(pascals, w);
@@ -510,4 +518,38 @@ fn slopes_are_those_of_the_values() {
     println!("slopes: ln W_s {saturation:e}, c_p {heat:e}, ∂h/∂W {enthalpy:e}, ∂v/∂W {volume:e}");
     // What central differences can tell: their own error, and rounding over a humidity ratio of 1e-7 in the cold.
     assert!(saturation < 1e-6 && heat < 1e-8 && enthalpy < 1e-3 && volume < 1e-3);
+}
+
+/// How far the series is from the residuals as published: relative in volume, saturation mole fraction and heat capacity, in J/kg of dry air
+/// in enthalpy; below 60 °C and 120 kPa, and over the whole domain.
+#[test]
+fn series_against_the_residuals_as_published() {
+    type Full = HelmholtzMixture<f64, Published>;
+    let (mut everyday, mut anywhere) = ([0.0_f64; 4], [0.0_f64; 4]);
+    for (celsius, pascals) in domain() {
+        let (series, full) = (RealGas::at(celsius), Full::at(celsius));
+        let (x, exact) = (series.saturation(pascals, Surface::Stable), full.saturation(pascals, Surface::Stable));
+        let saturates = exact.mole_fraction > 0.0 && exact.mole_fraction < 1.0;
+        let saturation = if saturates { (x.mole_fraction / exact.mole_fraction - 1.0).abs() } else { 0.0 };
+        for share in [0.0, 0.3, 1.0] {
+            let ratio = share * greatest::<Virial>(celsius, pascals);
+            let (gas, truth) = (series.gas(pascals, ratio), full.gas(pascals, ratio));
+            let errors = [
+                (gas.volume / truth.volume - 1.0).abs(),
+                saturation,
+                (gas.specific_heat / truth.specific_heat - 1.0).abs(),
+                (gas.enthalpy - truth.enthalpy).abs(),
+            ];
+            let wider = |most: [f64; 4]| core::array::from_fn(|i| most[i].max(errors[i]));
+            anywhere = wider(anywhere);
+            if celsius <= 60.0 && pascals <= 120e3 {
+                everyday = wider(everyday);
+            }
+        }
+    }
+    println!("volume, x_ws, c_p, h: below 60 °C and 120 kPa {everyday:?}, anywhere {anywhere:?}");
+    let bounds = [(everyday, [2e-14, 2e-14, 5e-14, 2e-9]), (anywhere, [5e-8, 5e-8, 1.2e-7, 3.6e-3])];
+    for (errors, bounds) in bounds {
+        assert!(errors.iter().zip(bounds).all(|(error, bound)| *error <= bound), "{errors:?} against {bounds:?}");
+    }
 }
