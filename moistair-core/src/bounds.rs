@@ -53,7 +53,7 @@ macro_rules! quantities {
 }
 
 /// Codes below this number are properties of a state.
-pub const PROPERTY_COUNT: i32 = 23;
+pub const PROPERTY_COUNT: i32 = 25;
 
 const INFINITY: f64 = f64::INFINITY;
 
@@ -104,6 +104,10 @@ quantities! {
     DewPoint = 21, "dew point", "°C", -40.0, 200.0;
     /// Temperature of saturation over ice at the same pressure and composition.
     FrostPoint = 22, "frost point", "°C", -100.0, 0.01;
+    /// Entropy per mass of dry air.
+    SpecificEntropy = 23, "specific entropy", "J/(kg K)", -INFINITY, INFINITY;
+    /// Speed of sound at constant composition.
+    SpeedOfSound = 24, "speed of sound", "m/s", 0.0, INFINITY;
 
     /// Dry-air mass flow.
     DryAirFlow = 32, "dry-air mass flow", "kg/s", 0.0, 1.0e6;

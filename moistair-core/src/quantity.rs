@@ -185,6 +185,14 @@ quantity!(
     SpecificHeat: from_joules_per_kilogram_kelvin, joules_per_kilogram_kelvin
 );
 quantity!(
+    /// Entropy per mass of dry air.
+    SpecificEntropy: from_joules_per_kilogram_kelvin, joules_per_kilogram_kelvin
+);
+quantity!(
+    /// A speed, such as that of sound.
+    Speed: from_meters_per_second, meters_per_second
+);
+quantity!(
     /// Mass of moist air per volume.
     Density: from_kilograms_per_cubic_meter, kilograms_per_cubic_meter
 );

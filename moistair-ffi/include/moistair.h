@@ -100,7 +100,7 @@
 #define MOISTAIR_INTERNAL 901
 
 // Number of property selectors: they run from 0 to one less. Later versions may add to them.
-#define MOISTAIR_PROPERTY_COUNT 23
+#define MOISTAIR_PROPERTY_COUNT 25
 
 // Dry-bulb temperature. The range of states; the formulations themselves reach 193.15 to 473.15 K (IAPWS G8-10) [°C].
 #define MOISTAIR_DRY_BULB 0
@@ -171,6 +171,12 @@
 
 // Temperature of saturation over ice at the same pressure and composition [°C].
 #define MOISTAIR_FROST_POINT 22
+
+// Entropy per mass of dry air [J/(kg K)].
+#define MOISTAIR_SPECIFIC_ENTROPY 23
+
+// Speed of sound at constant composition [m/s].
+#define MOISTAIR_SPEED_OF_SOUND 24
 
 // Dry-air mass flow [kg/s].
 #define MOISTAIR_DRY_AIR_MASS_FLOW 32

@@ -9,7 +9,7 @@ use crate::status::{Failure, moistair_error};
 use crate::text::{Text, texts};
 
 /// Number of property selectors: they run from 0 to one less. Later versions may add to them.
-pub const MOISTAIR_PROPERTY_COUNT: i32 = 23;
+pub const MOISTAIR_PROPERTY_COUNT: i32 = 25;
 
 /// Dry-bulb temperature. The range of states; the formulations themselves reach 193.15 to 473.15 K (IAPWS G8-10) [°C].
 pub const MOISTAIR_DRY_BULB: i32 = 0;
@@ -58,6 +58,10 @@ pub const MOISTAIR_WET_BULB_OVER_ICE: i32 = 20;
 pub const MOISTAIR_DEW_POINT: i32 = 21;
 /// Temperature of saturation over ice at the same pressure and composition [°C].
 pub const MOISTAIR_FROST_POINT: i32 = 22;
+/// Entropy per mass of dry air [J/(kg K)].
+pub const MOISTAIR_SPECIFIC_ENTROPY: i32 = 23;
+/// Speed of sound at constant composition [m/s].
+pub const MOISTAIR_SPEED_OF_SOUND: i32 = 24;
 /// Dry-air mass flow [kg/s].
 pub const MOISTAIR_DRY_AIR_MASS_FLOW: i32 = 32;
 /// Volume flow at a stated state [m³/s].

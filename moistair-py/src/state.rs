@@ -270,6 +270,18 @@ impl MoistAir {
         self.value(py, Quantity::CompressibilityFactor)
     }
 
+    /// Specific entropy, J/K per kilogram of dry air. Zero: dry air at 0 °C and 101 325 Pa, liquid water at the triple point.
+    #[getter]
+    fn specific_entropy<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::SpecificEntropy)
+    }
+
+    /// Speed of sound, m/s, at constant composition.
+    #[getter]
+    fn speed_of_sound<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::SpeedOfSound)
+    }
+
     /// Relative humidity x_w / x_ws, a fraction, over the stable surface: ice below the melting temperature, liquid
     /// above. Over ice it may exceed one. No value above boiling.
     #[getter]

@@ -10,6 +10,10 @@ use crate::saturation::{Surface, hyland_wexler_ice, hyland_wexler_liquid};
 
 /// Gas constant of dry air, J/(kg K): text to Eq. (1).
 const R_DRY_AIR: f64 = 287.042;
+/// Gas constant of water vapor, J/(kg K): text to Eq. (2).
+const R_WATER: f64 = 461.524;
+/// Zero of the entropy of dry air, Pa.
+const STANDARD_PRESSURE: f64 = 101_325.0;
 /// Eq. (26): v = R T (1 + 1.607858 W) / p.
 const VOLUME_OF_WATER: f64 = 1.607858;
 /// Eq. (30): h = 1.006 t + W (2501 + 1.86 t), kJ.
@@ -78,6 +82,27 @@ impl<R: Real> Mixture<R> for IdealGas<R> {
             volume_of_water: dry * k(VOLUME_OF_WATER),
             enthalpy_of_water: self.vapor_enthalpy(),
         }
+    }
+
+    /// Dry air is zero at 0 °C and 101 325 Pa, liquid water at 0 °C: the perfect gas between, each at its partial pressure.
+    fn entropy(&self, pressure: R, humidity_ratio: R, _gas: &Gas<R>) -> R {
+        let water_fraction = Self::mole_fraction(humidity_ratio);
+        let zero = k::<R>(ZERO_CELSIUS);
+        let warming = (self.kelvins / zero).ln();
+        let air_pressure = pressure * (k::<R>(1.0) - water_fraction);
+        // Without water the logarithm is bounded and multiplies nothing.
+        let water_pressure = (pressure * water_fraction).at_least(k(1e-30));
+        let saturation = hyland_wexler_liquid(zero).0;
+        let air = warming * k(CP_DRY_AIR) - (air_pressure / k(STANDARD_PRESSURE)).ln() * k(R_DRY_AIR);
+        let vapor = warming * k(CP_VAPOR) - (water_pressure.ln() - saturation) * k(R_WATER);
+        air + humidity_ratio * (vapor + k(H_VAPOR / ZERO_CELSIUS))
+    }
+
+    /// √(γ R T) of the mixture.
+    fn speed_of_sound(&self, humidity_ratio: R, gas: &Gas<R>) -> R {
+        let gas_constant = (humidity_ratio * k(VOLUME_OF_WATER) + k(1.0)) * k(R_DRY_AIR);
+        let ratio = gas.specific_heat / (gas.specific_heat - gas_constant);
+        (ratio * gas_constant * self.kelvins / (humidity_ratio + k(1.0))).sqrt()
     }
 
     #[inline(always)]

@@ -58,6 +58,12 @@ pub trait Mixture<R: Real>: Copy {
     /// The gas at a pressure [Pa] and humidity ratio.
     fn gas(&self, pressure: R, humidity_ratio: R) -> Gas<R>;
 
+    /// Entropy per kilogram of dry air, J/(kg K), of the gas that [`Mixture::gas`] gave.
+    fn entropy(&self, pressure: R, humidity_ratio: R, gas: &Gas<R>) -> R;
+
+    /// Speed of sound of that gas at constant composition, m/s.
+    fn speed_of_sound(&self, humidity_ratio: R, gas: &Gas<R>) -> R;
+
     /// Equilibrium over a surface at a pressure.
     fn saturation(&self, pressure: R, surface: Surface) -> Saturation<R>;
 

@@ -99,6 +99,13 @@ impl<R: Real, P: Residual<R>> Component<R, P> {
         (ln_delta + self.ideal.value + series.value + series.first + k(1.0)) * k(self.gas_constant)
     }
 
+    /// Ψ of this component alone; nothing at vanishing density.
+    fn helmholtz(&self, density: R) -> R {
+        let residual = self.residual(density, TemperatureOrder::Value);
+        let ln_delta = (density / k(self.reducing_density)).at_least(k(1e-30)).ln();
+        density * k(self.gas_constant) * (ln_delta + self.ideal.value + residual.value)
+    }
+
     fn thermal(&self, density: R) -> Thermal<R> {
         let gas_constant = k::<R>(self.gas_constant);
         let (first, second) =
@@ -367,6 +374,25 @@ impl<R: Real, M: Model<R>> Mixture<R> for HelmholtzMixture<R, M> {
             volume_of_water: -(air_shift * volume * volume),
             enthalpy_of_water: (self.kelvins * energy_shift - enthalpy * air_shift) * volume,
         }
+    }
+
+    fn entropy(&self, _pressure: R, humidity_ratio: R, gas: &Gas<R>) -> R {
+        let air = k::<R>(1.0) / gas.volume;
+        let water = air * humidity_ratio;
+        let cross = air * water * (self.pair.value + air * self.two_air.value + water * self.two_water.value);
+        let psi = self.air.helmholtz(air) + self.water.helmholtz(water) + cross;
+        // S = τΨ_τ − Ψ
+        (self.thermal(air, water).0.energy - psi) * gas.volume
+    }
+
+    fn speed_of_sound(&self, humidity_ratio: R, gas: &Gas<R>) -> R {
+        let air = k::<R>(1.0) / gas.volume;
+        let p = self.pressure(air, air * humidity_ratio);
+        let (thermal, _) = self.thermal(air, air * humidity_ratio);
+        let slope = air * (p.of_air + humidity_ratio * p.of_water);
+        let tension = p.value - thermal.pressure_first;
+        // w² = (∂p/∂ρ)_T + T p_T² / (ρ² c_v)
+        (self.kelvins * (slope + tension * tension / thermal.heat) * gas.volume / (humidity_ratio + k(1.0))).sqrt()
     }
 
     fn saturation(&self, pressure: R, surface: Surface) -> Saturation<R> {

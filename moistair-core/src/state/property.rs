@@ -4,7 +4,7 @@ use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, NoValue};
 use crate::mixture::Mixture;
-use crate::quantity::ZERO_CELSIUS;
+use crate::quantity::{SpecificEntropy, Speed, ZERO_CELSIUS};
 use crate::real::{Mask, Real, Scalar, k};
 use crate::saturation::{Magnus, Surface};
 
@@ -216,6 +216,8 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
             Quantity::VaporPressureDeficit => {
                 (self.saturation(quantity, Surface::Stable)? - self.mole_fraction()) * self.air.pascals
             }
+            Quantity::SpecificEntropy => self.entropy(),
+            Quantity::SpeedOfSound => self.speed_of_sound(),
             Quantity::SaturationPressure => self.mixture.pure_saturation_pressure(self.air.pascals, Surface::Stable),
             Quantity::EnhancementFactor => {
                 self.saturation(quantity, Surface::Stable)? * self.air.pascals
@@ -232,6 +234,14 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
             Quantity::FrostPoint => self.saturation_temperature(quantity, Surface::Ice)?,
             _ => return Err(Error::UnknownSelector { code: quantity.code() }),
         })
+    }
+
+    fn entropy(&self) -> S {
+        self.mixture.entropy(self.air.pascals, self.air.humidity_ratio, &self.air.gas)
+    }
+
+    fn speed_of_sound(&self) -> S {
+        self.mixture.speed_of_sound(self.air.humidity_ratio, &self.air.gas)
     }
 
     /// Saturation mole fraction at this temperature and pressure.
@@ -353,6 +363,19 @@ readers! {
 }
 
 impl<S: Scalar> MoistAir<S> {
+    /// Specific entropy s per mass of dry air. Zero: dry air at 0 °C and 101 325 Pa, liquid water at the triple point (0 °C for the ideal
+    /// gas). Real gas: IAPWS G8-10.
+    pub fn specific_entropy(&self) -> SpecificEntropy<S> {
+        let value = with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).entropy());
+        SpecificEntropy::from_joules_per_kilogram_kelvin(value)
+    }
+
+    /// Speed of sound at constant composition. Real gas: IAPWS G8-10; ideal gas: √(γ R T).
+    pub fn speed_of_sound(&self) -> Speed<S> {
+        let value = with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).speed_of_sound());
+        Speed::from_meters_per_second(value)
+    }
+
     /// Enhancement factor: x_ws p over the saturation pressure of pure water, stable surface; 1 for the ideal gas.
     ///
     /// # Errors

@@ -5,10 +5,10 @@ use std::collections::BTreeMap;
 use std::println;
 
 use super::*;
-use crate::checks::{Table, Tally, half_of_last_decimal};
-use crate::mixture::RealGas;
+use crate::checks::{Row, Table, Tally, half_of_last_decimal};
 use crate::mixture::helmholtz::Published;
 use crate::mixture::real_gas::Virial;
+use crate::mixture::{IdealGas, RealGas};
 
 const MOIST_AIR: &str = include_str!("../../../../tests/published/g8_10_tables13_14_15.csv");
 const DRY_AIR: &str = include_str!("../../../../tests/published/lemmon2000_dry_air.csv");
@@ -70,12 +70,6 @@ fn helmholtz<M: Model<f64>>(mixture: &HelmholtzMixture<f64, M>, a: f64, density:
 }
 
 impl<P: Residual<f64>> Component<f64, P> {
-    /// Ψ of this component alone.
-    fn helmholtz(&self, density: f64) -> f64 {
-        let series = self.residual(density, TemperatureOrder::Value);
-        density * self.gas_constant * ((density / self.reducing_density).ln() + self.ideal.value + series.value)
-    }
-
     /// f and its derivatives of this component alone.
     fn alone(&self, kelvins: f64, density: f64) -> BTreeMap<&'static str, f64> {
         let ((p, p_rho), thermal) = (self.pressure(density), self.thermal(density));
@@ -552,4 +546,49 @@ fn series_against_the_residuals_as_published() {
     for (errors, bounds) in bounds {
         assert!(errors.iter().zip(bounds).all(|(error, bound)| *error <= bound), "{errors:?} against {bounds:?}");
     }
+}
+
+/// Entropy and speed of sound at given pressure against G8-10 Table 13: what a state reads.
+#[test]
+fn entropy_and_sound_of_g8_10() {
+    let table = Table::read(MOIST_AIR);
+    let mut tally = Tally::new("G8-10 Table 13, entropy and speed of sound of states");
+    let rows = || table.rows().filter(|row| row.text("quantity").ends_with("[humid air]"));
+    for row in rows() {
+        let (a, kelvins) = (row.input("A"), row.input("T_K"));
+        let same_state = |other: &Row<'_>| other.input("T_K").to_bits() == kelvins.to_bits();
+        let pascals = rows().filter(same_state).find(|other| other.text("quantity").starts_with("p ")).unwrap().value();
+        let (mixture, ratio) = (at_kelvins(kelvins), (1.0 - a) / a);
+        let gas = mixture.gas(pascals, ratio);
+        match row.text("quantity") {
+            "s [humid air]" => tally.row(row, a * mixture.entropy(pascals, ratio, &gas)),
+            "w [humid air]" => tally.row(row, mixture.speed_of_sound(ratio, &gas)),
+            _ => {}
+        }
+    }
+    tally.finish(6);
+}
+
+/// T ∂s/∂T = c_p and ∂s/∂p = −∂v/∂T at constant composition, on both formulations, dry and moist.
+#[test]
+fn entropy_follows_from_heat_and_volume() {
+    fn run<M: Mixture<f64>>(volume_bound: f64) {
+        for (celsius, pascals) in domain().filter(|(celsius, _)| *celsius > -79.0 && *celsius < 149.0) {
+            let ratio = 0.5 * greatest::<Virial>(celsius, pascals);
+            for w in [0.0, ratio] {
+                let s = |t: f64, p: f64| M::at(t).entropy(p, w, &M::at(t).gas(p, w));
+                let (dt, dp) = (1e-3, 1e-4 * pascals);
+                let of_temperature = (s(celsius + dt, pascals) - s(celsius - dt, pascals)) / (2.0 * dt);
+                let of_pressure = (s(celsius, pascals + dp) - s(celsius, pascals - dp)) / (2.0 * dp);
+                let gas = |t: f64| M::at(t).gas(pascals, w);
+                let heat = gas(celsius).specific_heat / (celsius + ZERO_CELSIUS);
+                let swelling = (gas(celsius + dt).volume - gas(celsius - dt).volume) / (2.0 * dt);
+                assert!((of_temperature / heat - 1.0).abs() < 1e-7, "{celsius} {pascals} {w}");
+                assert!((of_pressure / -swelling - 1.0).abs() < volume_bound, "{celsius} {pascals} {w}");
+            }
+        }
+    }
+    run::<RealGas<f64>>(1e-7);
+    // The handbook rounds its gas constants to six digits and 1/ε apart from ε.
+    run::<IdealGas<f64>>(2e-5);
 }
