@@ -41,10 +41,14 @@ fn table_2_moist_air() {
                 / 1e3
                 / (1.0 + air.humidity_ratio().kilograms_per_kilogram())
         };
+        let entropy = |air: MoistAir| air.specific_entropy().joules_per_kilogram_kelvin() / 1e3;
+        compare("s_da_kJ_kgK", entropy(dry), unit("s_da_kJ_kgK"));
+        // As far as the humidity ratio goes, at 9.15 kJ/(kg K) of vapor.
+        compare("s_s_kJ_kgdaK", entropy(saturated), unit("s_s_kJ_kgdaK") + 1.5e-4 * 9.15 * w);
         compare("cp_da_kJ_kgK", cp(dry), unit("cp_da_kJ_kgK"));
         compare("cp_s_kJ_kgK", cp(saturated), unit("cp_s_kJ_kgK") + 3e-3 * row.number("cp_s_kJ_kgK"));
     }
-    tally.finish(119);
+    tally.finish(153);
 }
 
 /// Table 1, the standard atmosphere. The chapter computes it by its Eq. (3), whose constants are rounded to five digits; the
