@@ -7,6 +7,7 @@ mod helmholtz;
 mod ideal_gas;
 mod real_gas;
 mod two_component;
+
 pub use ideal_gas::IdealGas;
 pub use real_gas::RealGas;
 
