@@ -110,42 +110,42 @@ quantities! {
     SpeedOfSound = 24, "speed of sound", "m/s", 0.0, INFINITY;
 
     /// Dry-air mass flow.
-    DryAirFlow = 32, "dry-air mass flow", "kg/s", 0.0, 1.0e6;
+    DryAirFlow = 64, "dry-air mass flow", "kg/s", 0.0, 1.0e6;
     /// Volume flow at a stated state.
-    VolumeFlow = 33, "volume flow", "m³/s", 0.0, 1.0e6;
+    VolumeFlow = 65, "volume flow", "m³/s", 0.0, 1.0e6;
     /// Reference density of a standard volume flow.
-    StandardDensity = 34, "standard density", "kg/m³", 0.5, 2.0;
+    StandardDensity = 66, "standard density", "kg/m³", 0.5, 2.0;
     /// Heat flow, positive into the air.
-    HeatFlow = 35, "heat flow", "W", -1.0e12, 1.0e12;
+    HeatFlow = 67, "heat flow", "W", -1.0e12, 1.0e12;
     /// Flow of liquid water or steam.
-    WaterFlow = 36, "water flow", "kg/s", 0.0, 1.0e6;
+    WaterFlow = 68, "water flow", "kg/s", 0.0, 1.0e6;
     /// Temperature of liquid water.
-    WaterTemperature = 37, "water temperature", "°C", 0.0, 200.0;
+    WaterTemperature = 69, "water temperature", "°C", 0.0, 200.0;
     /// Specific enthalpy of steam, on the datum of liquid water at the triple point (0 °C for the ideal gas); at least that of
     /// water boiling at 20 kPa.
-    SteamEnthalpy = 38, "steam enthalpy", "J/kg", 251_000.0, 4_000_000.0;
+    SteamEnthalpy = 70, "steam enthalpy", "J/kg", 251_000.0, 4_000_000.0;
     /// Temperature that a process is to leave.
-    LeavingTemperature = 39, "leaving temperature", "°C", -80.0, 150.0;
+    LeavingTemperature = 71, "leaving temperature", "°C", -80.0, 150.0;
     /// Apparatus dew point of a coil.
-    ApparatusDewPoint = 40, "apparatus dew point", "°C", -40.0, 150.0;
+    ApparatusDewPoint = 72, "apparatus dew point", "°C", -40.0, 150.0;
     /// Bypass factor of a coil.
-    BypassFactor = 41, "bypass factor", "1", 0.0, 1.0;
+    BypassFactor = 73, "bypass factor", "1", 0.0, 1.0;
     /// Saturation effectiveness of a humidifier.
-    SaturationEffectiveness = 42, "saturation effectiveness", "1", 0.0, 1.0;
+    SaturationEffectiveness = 74, "saturation effectiveness", "1", 0.0, 1.0;
     /// Temperature at which condensate leaves.
-    CondensateTemperature = 43, "condensate temperature", "°C", -40.0, 150.0;
+    CondensateTemperature = 75, "condensate temperature", "°C", -40.0, 150.0;
     /// Elevation above mean sea level, range of the standard atmosphere's lowest layer (ISO 2533).
-    Elevation = 44, "elevation", "m", -5_000.0, 11_000.0;
+    Elevation = 76, "elevation", "m", -5_000.0, 11_000.0;
     /// Drift of a tower as a fraction of the circulating water.
-    DriftFraction = 45, "drift fraction", "1", 0.0, 0.05;
+    DriftFraction = 77, "drift fraction", "1", 0.0, 0.05;
     /// Concentration of the circulating water over that of the make-up.
-    CyclesOfConcentration = 46, "cycles of concentration", "1", 1.0, 1_000.0;
+    CyclesOfConcentration = 78, "cycles of concentration", "1", 1.0, 1_000.0;
     /// Temperature range of the water in a tower.
-    TowerRange = 47, "tower range", "K", 0.0, 200.0;
+    TowerRange = 79, "tower range", "K", 0.0, 200.0;
     /// Total water per dry air, vapor and condensate.
-    TotalWater = 48, "total water", "kg/kg", 0.0, 10.0;
+    TotalWater = 80, "total water", "kg/kg", 0.0, 10.0;
     /// Specific enthalpy that a process leaves, with its condensate: down to that of ten times as much ice as dry air.
-    LeavingEnthalpy = 49, "leaving enthalpy", "J/kg", -5_200_000.0, 30_000_000.0;
+    LeavingEnthalpy = 81, "leaving enthalpy", "J/kg", -5_200_000.0, 30_000_000.0;
 }
 
 impl Quantity {

@@ -280,7 +280,7 @@ mod tests {
         assert_eq!(refused(&good, ROWS, &dew_point, Some(&mut [0; 2])), ColumnMismatch::OutputLength);
         assert_eq!(refused(&good, ROWS, &[], None), ColumnMismatch::OutputCount);
         let flow = refused(&good, ROWS, &[Quantity::HeatFlow], None);
-        assert_eq!(flow, ColumnMismatch::UnknownSelector { code: 35 });
+        assert_eq!(flow, ColumnMismatch::UnknownSelector { code: 67 });
         let twice = StateColumns { property: Quantity::DryBulb, ..good };
         assert_eq!(refused(&twice, ROWS, &dew_point, None), ColumnMismatch::UnknownSelector { code: 0 });
     }

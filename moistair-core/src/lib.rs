@@ -31,4 +31,4 @@ pub use real::Scalar;
 pub use state::{AirWithCondensate, Freezing, MoistAir, SecondProperty, liquid_water_enthalpy};
 
 /// Changes when any result changes in any bit; the change log then states by how much.
-pub const NUMERICS_VERSION: u32 = 1;
+pub const NUMERICS_VERSION: u32 = 2;

@@ -179,58 +179,58 @@
 #define MOISTAIR_SPEED_OF_SOUND 24
 
 // Dry-air mass flow [kg/s].
-#define MOISTAIR_DRY_AIR_MASS_FLOW 32
+#define MOISTAIR_DRY_AIR_MASS_FLOW 64
 
 // Volume flow at a stated state [m³/s].
-#define MOISTAIR_VOLUME_FLOW 33
+#define MOISTAIR_VOLUME_FLOW 65
 
 // Reference density of a standard volume flow [kg/m³].
-#define MOISTAIR_STANDARD_DENSITY 34
+#define MOISTAIR_STANDARD_DENSITY 66
 
 // Heat flow, positive into the air [W].
-#define MOISTAIR_HEAT_FLOW 35
+#define MOISTAIR_HEAT_FLOW 67
 
 // Flow of liquid water or steam [kg/s].
-#define MOISTAIR_WATER_FLOW 36
+#define MOISTAIR_WATER_FLOW 68
 
 // Temperature of liquid water [°C].
-#define MOISTAIR_WATER_TEMPERATURE 37
+#define MOISTAIR_WATER_TEMPERATURE 69
 
 // Specific enthalpy of steam, on the datum of liquid water at the triple point (0 °C for the ideal gas) [J/kg].
-#define MOISTAIR_STEAM_ENTHALPY 38
+#define MOISTAIR_STEAM_ENTHALPY 70
 
 // Temperature that a process is to leave [°C].
-#define MOISTAIR_LEAVING_TEMPERATURE 39
+#define MOISTAIR_LEAVING_TEMPERATURE 71
 
 // Apparatus dew point of a coil [°C].
-#define MOISTAIR_APPARATUS_DEW_POINT 40
+#define MOISTAIR_APPARATUS_DEW_POINT 72
 
 // Bypass factor of a coil [1].
-#define MOISTAIR_BYPASS_FACTOR 41
+#define MOISTAIR_BYPASS_FACTOR 73
 
 // Saturation effectiveness of a humidifier [1].
-#define MOISTAIR_SATURATION_EFFECTIVENESS 42
+#define MOISTAIR_SATURATION_EFFECTIVENESS 74
 
 // Temperature at which condensate leaves [°C].
-#define MOISTAIR_CONDENSATE_TEMPERATURE 43
+#define MOISTAIR_CONDENSATE_TEMPERATURE 75
 
 // Elevation above mean sea level, range of the standard atmosphere's lowest layer (ISO 2533) [m].
-#define MOISTAIR_ELEVATION 44
+#define MOISTAIR_ELEVATION 76
 
 // Drift of a tower as a fraction of the circulating water [1].
-#define MOISTAIR_DRIFT_FRACTION 45
+#define MOISTAIR_DRIFT_FRACTION 77
 
 // Concentration of the circulating water over that of the make-up [1].
-#define MOISTAIR_CYCLES_OF_CONCENTRATION 46
+#define MOISTAIR_CYCLES_OF_CONCENTRATION 78
 
 // Temperature range of the water in a tower [K].
-#define MOISTAIR_TOWER_RANGE 47
+#define MOISTAIR_TOWER_RANGE 79
 
 // Total water per dry air, vapor and condensate [kg/kg].
-#define MOISTAIR_TOTAL_WATER 48
+#define MOISTAIR_TOTAL_WATER 80
 
 // Specific enthalpy that a process leaves, with its condensate [J/kg].
-#define MOISTAIR_LEAVING_ENTHALPY 49
+#define MOISTAIR_LEAVING_ENTHALPY 81
 
 // Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
 #define MOISTAIR_REAL_GAS 0

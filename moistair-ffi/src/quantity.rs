@@ -63,41 +63,41 @@ pub const MOISTAIR_SPECIFIC_ENTROPY: i32 = 23;
 /// Speed of sound at constant composition [m/s].
 pub const MOISTAIR_SPEED_OF_SOUND: i32 = 24;
 /// Dry-air mass flow [kg/s].
-pub const MOISTAIR_DRY_AIR_MASS_FLOW: i32 = 32;
+pub const MOISTAIR_DRY_AIR_MASS_FLOW: i32 = 64;
 /// Volume flow at a stated state [m³/s].
-pub const MOISTAIR_VOLUME_FLOW: i32 = 33;
+pub const MOISTAIR_VOLUME_FLOW: i32 = 65;
 /// Reference density of a standard volume flow [kg/m³].
-pub const MOISTAIR_STANDARD_DENSITY: i32 = 34;
+pub const MOISTAIR_STANDARD_DENSITY: i32 = 66;
 /// Heat flow, positive into the air [W].
-pub const MOISTAIR_HEAT_FLOW: i32 = 35;
+pub const MOISTAIR_HEAT_FLOW: i32 = 67;
 /// Flow of liquid water or steam [kg/s].
-pub const MOISTAIR_WATER_FLOW: i32 = 36;
+pub const MOISTAIR_WATER_FLOW: i32 = 68;
 /// Temperature of liquid water [°C].
-pub const MOISTAIR_WATER_TEMPERATURE: i32 = 37;
+pub const MOISTAIR_WATER_TEMPERATURE: i32 = 69;
 /// Specific enthalpy of steam, on the datum of liquid water at the triple point (0 °C for the ideal gas) [J/kg].
-pub const MOISTAIR_STEAM_ENTHALPY: i32 = 38;
+pub const MOISTAIR_STEAM_ENTHALPY: i32 = 70;
 /// Temperature that a process is to leave [°C].
-pub const MOISTAIR_LEAVING_TEMPERATURE: i32 = 39;
+pub const MOISTAIR_LEAVING_TEMPERATURE: i32 = 71;
 /// Apparatus dew point of a coil [°C].
-pub const MOISTAIR_APPARATUS_DEW_POINT: i32 = 40;
+pub const MOISTAIR_APPARATUS_DEW_POINT: i32 = 72;
 /// Bypass factor of a coil [1].
-pub const MOISTAIR_BYPASS_FACTOR: i32 = 41;
+pub const MOISTAIR_BYPASS_FACTOR: i32 = 73;
 /// Saturation effectiveness of a humidifier [1].
-pub const MOISTAIR_SATURATION_EFFECTIVENESS: i32 = 42;
+pub const MOISTAIR_SATURATION_EFFECTIVENESS: i32 = 74;
 /// Temperature at which condensate leaves [°C].
-pub const MOISTAIR_CONDENSATE_TEMPERATURE: i32 = 43;
+pub const MOISTAIR_CONDENSATE_TEMPERATURE: i32 = 75;
 /// Elevation above mean sea level, range of the standard atmosphere's lowest layer (ISO 2533) [m].
-pub const MOISTAIR_ELEVATION: i32 = 44;
+pub const MOISTAIR_ELEVATION: i32 = 76;
 /// Drift of a tower as a fraction of the circulating water [1].
-pub const MOISTAIR_DRIFT_FRACTION: i32 = 45;
+pub const MOISTAIR_DRIFT_FRACTION: i32 = 77;
 /// Concentration of the circulating water over that of the make-up [1].
-pub const MOISTAIR_CYCLES_OF_CONCENTRATION: i32 = 46;
+pub const MOISTAIR_CYCLES_OF_CONCENTRATION: i32 = 78;
 /// Temperature range of the water in a tower [K].
-pub const MOISTAIR_TOWER_RANGE: i32 = 47;
+pub const MOISTAIR_TOWER_RANGE: i32 = 79;
 /// Total water per dry air, vapor and condensate [kg/kg].
-pub const MOISTAIR_TOTAL_WATER: i32 = 48;
+pub const MOISTAIR_TOTAL_WATER: i32 = 80;
 /// Specific enthalpy that a process leaves, with its condensate [J/kg].
-pub const MOISTAIR_LEAVING_ENTHALPY: i32 = 49;
+pub const MOISTAIR_LEAVING_ENTHALPY: i32 = 81;
 
 /// Limits of a quantity as an input, both included.
 #[repr(C)]
