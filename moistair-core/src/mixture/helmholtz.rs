@@ -1,7 +1,7 @@
 //! The published standard in full, IAPWS G8-10 with IAPWS-95 (R6-95) and dry air of Lemmon et al. 2000: the yardstick of the real gas
 //! in the tests.
 
-use super::two_component::{Component, Model};
+use super::two_component::{Model, Warmth};
 use crate::real::{Real, k};
 use crate::substance::{Terms, dry_air, water, water_vapor};
 
@@ -19,21 +19,13 @@ impl<R: Real> Model<R> for Published {
     const SATURATION_STEPS: usize = 3;
     const PURE_STEPS: usize = 3;
 
-    fn air(kelvins: R) -> Component<R, Self::Air> {
-        Component {
-            gas_constant: dry_air::GAS_CONSTANT,
-            reducing_density: dry_air::REDUCING_DENSITY,
-            ideal: dry_air::ideal(kelvins),
-            residual: Terms::at(&dry_air::TERMS, k::<R>(dry_air::REDUCING_TEMPERATURE) / kelvins),
-        }
+    fn air(at: &Warmth<R>) -> Self::Air {
+        let tau = k::<R>(dry_air::REDUCING_TEMPERATURE) / at.kelvins;
+        Terms::at(dry_air::ideal(at.kelvins), &dry_air::TERMS, tau)
     }
 
-    fn water(kelvins: R) -> Component<R, Self::Water> {
-        Component {
-            gas_constant: water_vapor::GAS_CONSTANT,
-            reducing_density: water_vapor::REDUCING_DENSITY,
-            ideal: water_vapor::ideal(kelvins),
-            residual: Terms::at(&water::TERMS, k::<R>(water::CRITICAL_TEMPERATURE) / kelvins),
-        }
+    fn water(at: &Warmth<R>) -> Self::Water {
+        let tau = k::<R>(water::CRITICAL_TEMPERATURE) / at.kelvins;
+        Terms::at(water_vapor::ideal(at.kelvins), &water::TERMS, tau)
     }
 }

@@ -1,7 +1,7 @@
 //! The default real gas: IAPWS G8-10 with the residuals of its components expanded in powers of density, so that a solve for density
 //! repeats no exponential.
 
-use super::two_component::{Component, HelmholtzMixture, Model};
+use super::two_component::{HelmholtzMixture, Model, Warmth};
 use crate::real::Real;
 use crate::substance::{Series, dry_air, water_vapor};
 
@@ -23,21 +23,11 @@ impl<R: Real> Model<R> for Virial {
     const SATURATION_STEPS: usize = 3;
     const PURE_STEPS: usize = 3;
 
-    fn air(kelvins: R) -> Component<R, Self::Air> {
-        Component {
-            gas_constant: dry_air::GAS_CONSTANT,
-            reducing_density: dry_air::REDUCING_DENSITY,
-            ideal: dry_air::ideal(kelvins),
-            residual: Series(dry_air::residual(kelvins)),
-        }
+    fn air(at: &Warmth<R>) -> Self::Air {
+        Series { ideal: dry_air::ideal(at.kelvins), residual: dry_air::residual(at.kelvins) }
     }
 
-    fn water(kelvins: R) -> Component<R, Self::Water> {
-        Component {
-            gas_constant: water_vapor::GAS_CONSTANT,
-            reducing_density: water_vapor::REDUCING_DENSITY,
-            ideal: water_vapor::ideal(kelvins),
-            residual: Series(water_vapor::residual(kelvins)),
-        }
+    fn water(at: &Warmth<R>) -> Self::Water {
+        Series { ideal: water_vapor::ideal(at.kelvins), residual: water_vapor::residual(at.kelvins) }
     }
 }

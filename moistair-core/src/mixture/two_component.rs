@@ -13,7 +13,7 @@ use crate::quantity::ZERO_CELSIUS;
 use crate::real::{Choose, Real, k};
 use crate::saturation::{Surface, hyland_wexler_ice, hyland_wexler_liquid};
 use crate::substance::liquid_water::Condensed;
-use crate::substance::{DensityDerivatives, Jet, Residual, TemperatureOrder, dry_air, ice, liquid_water, water_vapor};
+use crate::substance::{DensityDerivatives, Fluid, Jet, TemperatureOrder, dry_air, ice, liquid_water, water_vapor};
 
 /// Newton steps for the melting temperature; see the tests of the models.
 const MELTING_STEPS: usize = 2;
@@ -30,9 +30,9 @@ pub trait Model<R: Real>: Copy {
     #[cfg(test)]
     const FORMULATION: crate::Formulation;
 
-    /// Residual of dry air, of water vapor.
-    type Air: Residual<R>;
-    type Water: Residual<R>;
+    /// Dry air and water vapor, each alone.
+    type Air: Fluid<R>;
+    type Water: Fluid<R>;
 
     /// Newton steps for the density at given temperature, pressure and composition; for saturation; for pure saturation. The test of
     /// each model shows them to be enough and none to be idle.
@@ -40,50 +40,86 @@ pub trait Model<R: Real>: Copy {
     const SATURATION_STEPS: usize;
     const PURE_STEPS: usize;
 
-    fn air(kelvins: R) -> Component<R, Self::Air>;
-    fn water(kelvins: R) -> Component<R, Self::Water>;
+    fn air(at: &Warmth<R>) -> Self::Air;
+    fn water(at: &Warmth<R>) -> Self::Water;
 
-    fn cross(kelvins: R) -> Cross<R> {
-        Cross {
-            pair: cross_second_virial(kelvins),
-            two_air: cross_third_virial_air(kelvins),
-            two_water: cross_third_virial_water(kelvins),
+    fn cross_second_virial(at: &Warmth<R>) -> Jet<R> {
+        cross_second_virial(at.kelvins)
+    }
+
+    fn liquid(celsius: R, pressure: R) -> Phase<R> {
+        Phase::of(celsius, liquid_water::at(celsius, pressure))
+    }
+
+    fn ice(celsius: R, pressure: R) -> Phase<R> {
+        Phase::of(celsius, ice::at(celsius, pressure))
+    }
+}
+
+/// A temperature on both scales: the reading in °C keeps bits that its sum with 273.15 K loses.
+#[derive(Clone, Copy, Debug)]
+pub struct Warmth<R> {
+    pub celsius: R,
+    pub kelvins: R,
+}
+
+impl<R: Real> Warmth<R> {
+    pub fn of(celsius: R) -> Self {
+        Self { celsius, kelvins: celsius + k(ZERO_CELSIUS) }
+    }
+}
+
+/// A condensed phase as the gas beside it needs it.
+#[derive(Clone, Copy, Debug)]
+pub struct Phase<R> {
+    /// g / (R_w T) − φ° − 1: the logarithm of the reduced density at which water vapor would be in equilibrium, were it ideal.
+    pub potential: R,
+    /// J/kg
+    pub enthalpy: R,
+    /// m³/kg
+    pub volume: R,
+}
+
+impl<R: Real> Phase<R> {
+    fn of(celsius: R, condensed: Condensed<R>) -> Self {
+        let kelvins = celsius + k(ZERO_CELSIUS);
+        let reduced = condensed.gibbs / (kelvins * k(water_vapor::GAS_CONSTANT));
+        let potential = reduced - water_vapor::ideal(kelvins).value - k(1.0);
+        Self { potential, enthalpy: condensed.enthalpy, volume: condensed.volume }
+    }
+}
+
+impl<R: Real> Choose<R> for Phase<R> {
+    fn choose(mask: R::Mask, a: Self, b: Self) -> Self {
+        Self {
+            potential: R::select(mask, a.potential, b.potential),
+            enthalpy: R::select(mask, a.enthalpy, b.enthalpy),
+            volume: R::select(mask, a.volume, b.volume),
         }
     }
-
-    fn liquid(celsius: R, pressure: R) -> Condensed<R> {
-        liquid_water::at(celsius, pressure)
-    }
-
-    fn ice(celsius: R, pressure: R) -> Condensed<R> {
-        ice::at(celsius, pressure)
-    }
 }
 
-/// B_aw, C_aaw, C_aww.
+/// One component with what reduces it.
 #[derive(Clone, Copy, Debug)]
-pub struct Cross<R> {
-    pub pair: Jet<R>,
-    pub two_air: Jet<R>,
-    pub two_water: Jet<R>,
+pub struct Component<P> {
+    gas_constant: f64,
+    reducing_density: f64,
+    fluid: P,
 }
 
-/// One component: gas constant, reducing density, ideal part, residual as a function of its reduced partial density.
-#[derive(Clone, Copy, Debug)]
-pub struct Component<R, P> {
-    pub gas_constant: f64,
-    pub reducing_density: f64,
-    pub ideal: Jet<R>,
-    pub residual: P,
-}
-
-impl<R: Real, P: Residual<R>> Component<R, P> {
-    fn residual(&self, density: R, of: TemperatureOrder) -> DensityDerivatives<R> {
-        self.residual.derivatives(density / k(self.reducing_density), of)
+impl<P> Component<P> {
+    fn residual<R: Real>(&self, density: R, of: TemperatureOrder) -> DensityDerivatives<R>
+    where
+        P: Fluid<R>,
+    {
+        self.fluid.residual(density / k(self.reducing_density), of)
     }
 
     /// Pressure over temperature and its slope in density, of this component alone.
-    fn pressure(&self, density: R) -> (R, R) {
+    fn pressure<R: Real>(&self, density: R) -> (R, R)
+    where
+        P: Fluid<R>,
+    {
         let series = self.residual(density, TemperatureOrder::Value);
         let gas_constant = k::<R>(self.gas_constant);
         (
@@ -92,28 +128,38 @@ impl<R: Real, P: Residual<R>> Component<R, P> {
         )
     }
 
-    /// Ψ_ρ of this component alone; density times its slope is the slope of `pressure` (Gibbs–Duhem).
-    fn potential(&self, density: R) -> R {
+    /// Ψ_ρ of this component alone, less R (φ° + 1); density times its slope is the slope of `pressure` (Gibbs–Duhem).
+    fn potential<R: Real>(&self, density: R) -> R
+    where
+        P: Fluid<R>,
+    {
         let series = self.residual(density, TemperatureOrder::Value);
         let ln_delta = (density / k(self.reducing_density)).ln();
-        (ln_delta + self.ideal.value + series.value + series.first + k(1.0)) * k(self.gas_constant)
+        (ln_delta + series.value + series.first) * k(self.gas_constant)
     }
 
     /// Ψ of this component alone; nothing at vanishing density.
-    fn helmholtz(&self, density: R) -> R {
+    fn helmholtz<R: Real>(&self, density: R) -> R
+    where
+        P: Fluid<R>,
+    {
         let residual = self.residual(density, TemperatureOrder::Value);
         let ln_delta = (density / k(self.reducing_density)).at_least(k(1e-30)).ln();
-        density * k(self.gas_constant) * (ln_delta + self.ideal.value + residual.value)
+        density * k(self.gas_constant) * (ln_delta + self.fluid.ideal(TemperatureOrder::Value) + residual.value)
     }
 
-    fn thermal(&self, density: R) -> Thermal<R> {
+    fn thermal<R: Real>(&self, density: R) -> Thermal<R>
+    where
+        P: Fluid<R>,
+    {
         let gas_constant = k::<R>(self.gas_constant);
+        let ideal = self.fluid.ideal(TemperatureOrder::First);
         let (first, second) =
             (self.residual(density, TemperatureOrder::First), self.residual(density, TemperatureOrder::Second));
         Thermal {
-            energy: density * gas_constant * (self.ideal.first + first.value),
-            energy_slope: gas_constant * (self.ideal.first + first.value + first.first),
-            heat: -(density * gas_constant * (self.ideal.second + second.value)),
+            energy: density * gas_constant * (ideal + first.value),
+            energy_slope: gas_constant * (ideal + first.value + first.first),
+            heat: -(density * gas_constant * (self.fluid.ideal(TemperatureOrder::Second) + second.value)),
             pressure_first: density * gas_constant * first.first,
         }
     }
@@ -143,8 +189,8 @@ struct Pressure<R> {
 pub struct HelmholtzMixture<R: Real, M: Model<R>> {
     celsius: R,
     kelvins: R,
-    air: Component<R, M::Air>,
-    water: Component<R, M::Water>,
+    air: Component<M::Air>,
+    water: Component<M::Water>,
     /// κ B_aw, κ ¾ C_aaw / M_a, κ ¾ C_aww / M_w.
     pair: Jet<R>,
     two_air: Jet<R>,
@@ -194,7 +240,7 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
         }
     }
 
-    /// Ψ_w = μ_w / T with its slopes in the density of air and in the logarithm of the density of water.
+    /// Ψ_w = μ_w / T, less R_w (φ° + 1), with its slopes in the density of air and in the logarithm of the density of water.
     fn potential(&self, air: R, water: R) -> (R, R, R) {
         let (two_air, two_water) = (air * self.two_air.value, water * self.two_water.value * k(2.0));
         let (_, slope) = self.water.pressure(water);
@@ -234,7 +280,7 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
     }
 
     /// The condensed phase at a temperature, °C.
-    fn condensed(celsius: R, pressure: R, surface: Surface) -> Condensed<R> {
+    fn condensed(celsius: R, pressure: R, surface: Surface) -> Phase<R> {
         match surface {
             Surface::Liquid => M::liquid(celsius, pressure),
             Surface::Ice => M::ice(celsius, pressure),
@@ -244,7 +290,7 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
                 let ice = || M::ice(celsius, pressure);
                 let lower = || {
                     let (liquid, ice) = (liquid(), ice());
-                    Condensed::choose(ice.gibbs.lt(liquid.gibbs), ice, liquid)
+                    Phase::choose(ice.potential.lt(liquid.potential), ice, liquid)
                 };
                 let (cold, warm) = BOTH_PHASES;
                 R::pick(celsius.lt(k(cold)), ice, || R::pick(k::<R>(warm).lt(celsius), liquid, lower))
@@ -253,11 +299,10 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
     }
 
     /// Partial densities in equilibrium with a condensed phase: equal pressure, equal chemical potential of water.
-    fn saturated(&self, steps: usize, pressure: R, condensed: &Condensed<R>) -> (R, R) {
-        let (target, potential) = (pressure / self.kelvins, condensed.gibbs / self.kelvins);
+    fn saturated(&self, steps: usize, pressure: R, condensed: &Phase<R>) -> (R, R) {
+        let (target, potential) = (pressure / self.kelvins, condensed.potential * k(water_vapor::GAS_CONSTANT));
         // Start: water as an ideal gas, dry air for the rest of the pressure.
-        let ln_delta = potential / k(water_vapor::GAS_CONSTANT) - self.water.ideal.value - k(1.0);
-        let mut water = ln_delta.exp() * k(water_vapor::REDUCING_DENSITY);
+        let mut water = condensed.potential.exp() * k(water_vapor::REDUCING_DENSITY);
         let mut air = (target - water * k(water_vapor::GAS_CONSTANT)) / k(dry_air::GAS_CONSTANT);
         for _ in 0..steps {
             let p = self.pressure(air, water);
@@ -274,7 +319,7 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
     }
 
     /// d ln(ρ_w / ρ_a) / dT along saturation at constant pressure.
-    fn saturation_slope(&self, pressure: R, condensed: &Condensed<R>, air: R, water: R) -> R {
+    fn saturation_slope(&self, pressure: R, condensed: &Phase<R>, air: R, water: R) -> R {
         let p = self.pressure(air, water);
         let (_, mu_of_air, mu_of_ln_water) = self.potential(air, water);
         let (thermal, _) = self.thermal(air, water);
@@ -295,11 +340,10 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
         let mut water = start / (self.kelvins * k(water_vapor::GAS_CONSTANT));
         for _ in 0..steps {
             let (p, p_slope) = self.water.pressure(water);
-            let mu = self.water.potential(water);
-            let pressure = p * self.kelvins;
+            let potential = self.water.potential(water) - phase.potential * k(water_vapor::GAS_CONSTANT);
             // The condensed phase is linear in the little pressure between the start and the result.
-            let error = mu * self.kelvins - phase.gibbs - phase.volume * (pressure - start);
-            let slope = p_slope * self.kelvins * (k::<R>(1.0) - phase.volume * water);
+            let error = potential - phase.volume * (p - start / self.kelvins);
+            let slope = p_slope * (k::<R>(1.0) - phase.volume * water);
             let step = error / slope;
             water = water / (k::<R>(1.0) + step + step * step * k(0.5));
         }
@@ -314,15 +358,15 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
     }
 }
 
-/// The melting temperature, °C. Start: the slope of the melting curve at the triple point. Then equal chemical potentials, with
-/// dg/dT = −s of either phase.
+/// The melting temperature, °C. Start: the slope of the melting curve at the triple point. Then equal chemical potentials.
 fn melting<R: Real, M: Model<R>>(steps: usize, pressure: R) -> R {
     let mut celsius = k::<R>(0.01) - pressure * k(7.4e-8);
     for _ in 0..steps {
         let (liquid, ice) = (M::liquid(celsius, pressure), M::ice(celsius, pressure));
         let kelvins = celsius + k(ZERO_CELSIUS);
-        let fusion = (liquid.enthalpy - ice.enthalpy - liquid.gibbs + ice.gibbs) / kelvins;
-        celsius = celsius + (liquid.gibbs - ice.gibbs) / fusion;
+        // ∂(g/T)/∂T = −h/T²
+        let fusion = (liquid.enthalpy - ice.enthalpy) / (kelvins * kelvins * k(water_vapor::GAS_CONSTANT));
+        celsius = celsius + (liquid.potential - ice.potential) / fusion;
     }
     celsius
 }
@@ -339,16 +383,24 @@ impl<R: Real, M: Model<R>> Mixture<R> for HelmholtzMixture<R, M> {
     const MOLAR_MASS_RATIO: f64 = water_vapor::MOLAR_MASS / dry_air::MOLAR_MASS;
 
     fn at(celsius: R) -> Self {
-        let kelvins = celsius + k(ZERO_CELSIUS);
-        let cross = M::cross(kelvins);
+        let at = Warmth::of(celsius);
+        let (two_air, two_water) = (cross_third_virial_air(at.kelvins), cross_third_virial_water(at.kelvins));
         Self {
             celsius,
-            kelvins,
-            air: M::air(kelvins),
-            water: M::water(kelvins),
-            pair: cross.pair.times(k(KAPPA)),
-            two_air: cross.two_air.times(k(KAPPA * 0.75 / dry_air::MOLAR_MASS)),
-            two_water: cross.two_water.times(k(KAPPA * 0.75 / water_vapor::MOLAR_MASS)),
+            kelvins: at.kelvins,
+            air: Component {
+                gas_constant: dry_air::GAS_CONSTANT,
+                reducing_density: dry_air::REDUCING_DENSITY,
+                fluid: M::air(&at),
+            },
+            water: Component {
+                gas_constant: water_vapor::GAS_CONSTANT,
+                reducing_density: water_vapor::REDUCING_DENSITY,
+                fluid: M::water(&at),
+            },
+            pair: M::cross_second_virial(&at).times(k(KAPPA)),
+            two_air: two_air.times(k(KAPPA * 0.75 / dry_air::MOLAR_MASS)),
+            two_water: two_water.times(k(KAPPA * 0.75 / water_vapor::MOLAR_MASS)),
         }
     }
 

@@ -1,6 +1,6 @@
 //! Liquid water: IAPWS R6-95(2018) at given temperature and pressure, supercooled and superheated included.
 
-use super::{Residual, TemperatureOrder, Terms, water, water_vapor};
+use super::{Fluid, TemperatureOrder, Terms, water, water_vapor};
 use crate::quantity::ZERO_CELSIUS;
 use crate::real::{Choose, Real, k, polynomial};
 
@@ -50,21 +50,20 @@ fn equation<R: Real, const STEPS: usize>(celsius: R, pascals: R) -> Condensed<R>
     let kelvins = celsius + k(ZERO_CELSIUS);
     let rt = kelvins * k(water::GAS_CONSTANT);
     let tau = k::<R>(water::CRITICAL_TEMPERATURE) / kelvins;
-    let terms = Terms::at(&water::TERMS, tau);
+    let terms = Terms::at(water_vapor::ideal(kelvins), &water::TERMS, tau);
     let mut delta = density_start(celsius, pascals);
     for _ in 0..STEPS {
         // p = ρ R T (1 + δφʳ_δ) and its slope in density: R6-95 Table 3.
-        let residual = terms.derivatives(delta, TemperatureOrder::Value);
+        let residual = terms.residual(delta, TemperatureOrder::Value);
         let pressure = delta * rt * (residual.first + k(1.0)) * k(water::CRITICAL_DENSITY);
         let slope = rt * (residual.first * k(2.0) + residual.second + k(1.0)) * k(water::CRITICAL_DENSITY);
         delta = delta - (pressure - pascals) / slope;
     }
-    let residual = terms.derivatives(delta, TemperatureOrder::Value);
-    let thermal = terms.derivatives(delta, TemperatureOrder::First);
-    let ideal = water_vapor::ideal(kelvins);
+    let residual = terms.residual(delta, TemperatureOrder::Value);
+    let thermal = terms.residual(delta, TemperatureOrder::First);
     let volume = k::<R>(1.0) / (delta * k(water::CRITICAL_DENSITY));
-    let helmholtz = rt * (delta.ln() + ideal.value + residual.value);
-    let energy = rt * (ideal.first + thermal.value);
+    let helmholtz = rt * (delta.ln() + terms.ideal(TemperatureOrder::Value) + residual.value);
+    let energy = rt * (terms.ideal(TemperatureOrder::First) + thermal.value);
     // With p for ρRT(1 + δφʳ_δ), the Gibbs energy is stationary in what is left of the error of density.
     Condensed { gibbs: helmholtz + pascals * volume, enthalpy: energy + pascals * volume, volume }
 }

@@ -46,6 +46,14 @@ impl<R: Real> Jet<R> {
         Self { value: self.value + other.value, first: self.first + other.first, second: self.second + other.second }
     }
 
+    pub fn get(&self, of: TemperatureOrder) -> R {
+        match of {
+            TemperatureOrder::Value => self.value,
+            TemperatureOrder::First => self.first,
+            TemperatureOrder::Second => self.second,
+        }
+    }
+
     pub fn times(self, factor: R) -> Self {
         Self { value: self.value * factor, first: self.first * factor, second: self.second * factor }
     }
@@ -141,29 +149,37 @@ pub struct DensityDerivatives<R> {
     pub second: R,
 }
 
-/// The residual Helmholtz energy of a pure fluid at one temperature, as a function of its reduced density.
-pub trait Residual<R>: Copy {
+/// The reduced Helmholtz energy `ln δ + φ° + φʳ` of a pure fluid at one temperature.
+pub trait Fluid<R>: Copy {
+    /// φ°, τφ°_τ or τ²φ°_ττ, less ln δ.
+    fn ideal(&self, of: TemperatureOrder) -> R;
+
     /// Density derivatives of φʳ, τφʳ_τ or τ²φʳ_ττ.
-    fn derivatives(&self, delta: R, of: TemperatureOrder) -> DensityDerivatives<R>;
+    fn residual(&self, delta: R, of: TemperatureOrder) -> DensityDerivatives<R>;
 }
 
-/// The residual as published: a sum of terms, with their `n τᵗ` at this temperature.
+/// A fluid as published: its ideal part, and its residual as a sum of terms with their `n τᵗ` at this temperature.
 #[derive(Clone, Copy, Debug)]
 pub struct Terms<R, const L: usize> {
+    ideal: Jet<R>,
     terms: &'static [Term; L],
     amplitudes: [R; L],
 }
 
 impl<R: Real, const L: usize> Terms<R, L> {
-    pub fn at(terms: &'static [Term; L], tau: R) -> Self {
+    pub fn at(ideal: Jet<R>, terms: &'static [Term; L], tau: R) -> Self {
         let ln_tau = tau.ln();
-        Self { terms, amplitudes: terms.map(|term| (ln_tau * k(term.t)).exp() * k(term.n)) }
+        Self { ideal, terms, amplitudes: terms.map(|term| (ln_tau * k(term.t)).exp() * k(term.n)) }
     }
 }
 
-impl<R: Real, const L: usize> Residual<R> for Terms<R, L> {
+impl<R: Real, const L: usize> Fluid<R> for Terms<R, L> {
+    fn ideal(&self, of: TemperatureOrder) -> R {
+        self.ideal.get(of)
+    }
+
     /// The derivatives of IAPWS R6-95 Table 5, for terms `n δᵈ τᵗ exp(−δᶜ)`.
-    fn derivatives(&self, delta: R, of: TemperatureOrder) -> DensityDerivatives<R> {
+    fn residual(&self, delta: R, of: TemperatureOrder) -> DensityDerivatives<R> {
         let mut sum = DensityDerivatives { value: k(0.0), first: k(0.0), second: k(0.0) };
         let mut run = (0, k::<R>(0.0), k::<R>(1.0)); // c, δᶜ and exp(−δᶜ), shared by runs of terms
         for (term, amplitude) in self.terms.iter().zip(&self.amplitudes) {
@@ -188,27 +204,33 @@ impl<R: Real, const L: usize> Residual<R> for Terms<R, L> {
     }
 }
 
-/// The residual expanded in powers of density: coefficients of δ¹ to δᴺ.
+/// A fluid with its residual expanded in powers of density: coefficients of δ¹ to δᴺ.
 #[derive(Clone, Copy, Debug)]
-pub struct Series<R, const N: usize>(pub [Jet<R>; N]);
+pub struct Series<R, const N: usize> {
+    pub ideal: Jet<R>,
+    pub residual: [Jet<R>; N],
+}
 
-impl<R: Real, const N: usize> Residual<R> for Series<R, N> {
-    fn derivatives(&self, delta: R, of: TemperatureOrder) -> DensityDerivatives<R> {
-        let mut sum = DensityDerivatives { value: k(0.0), first: k(0.0), second: k(0.0) };
-        // Horner from the highest order: Σ wₖ aₖ δᵏ with weights 1, k, k(k−1).
-        for (i, jet) in self.0.iter().enumerate().rev() {
-            let order = (i + 1) as f64;
-            let a = match of {
-                TemperatureOrder::Value => jet.value,
-                TemperatureOrder::First => jet.first,
-                TemperatureOrder::Second => jet.second,
-            };
-            sum.value = (sum.value + a) * delta;
-            sum.first = (sum.first + a * k(order)) * delta;
-            sum.second = (sum.second + a * k(order * (order - 1.0))) * delta;
-        }
-        sum
+impl<R: Real, const N: usize> Fluid<R> for Series<R, N> {
+    fn ideal(&self, of: TemperatureOrder) -> R {
+        self.ideal.get(of)
     }
+
+    fn residual(&self, delta: R, of: TemperatureOrder) -> DensityDerivatives<R> {
+        density_polynomial(delta, self.residual.map(|jet| jet.get(of)))
+    }
+}
+
+/// `Σₖ aₖ δᵏ`, k = 1 … N, with its derivatives: by Horner's rule from the highest order, with weights 1, k, k(k−1).
+pub fn density_polynomial<R: Real, const N: usize>(delta: R, coefficients: [R; N]) -> DensityDerivatives<R> {
+    let mut sum = DensityDerivatives { value: k(0.0), first: k(0.0), second: k(0.0) };
+    for (i, a) in coefficients.into_iter().enumerate().rev() {
+        let order = (i + 1) as f64;
+        sum.value = (sum.value + a) * delta;
+        sum.first = (sum.first + a * k(order)) * delta;
+        sum.second = (sum.second + a * k(order * (order - 1.0))) * delta;
+    }
+    sum
 }
 
 #[cfg(test)]

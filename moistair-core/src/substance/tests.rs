@@ -40,9 +40,9 @@ fn property(name: &str, kelvins: f64, density: f64, (ideal, residual): ([f64; 6]
 
 /// φʳ, δφʳ_δ, δ²φʳ_δδ, τφʳ_τ, τ²φʳ_ττ, δτφʳ_δτ of water, terms 1 to 51.
 fn residual_of_water(delta: f64, tau: f64) -> [f64; 6] {
-    let terms = Terms::at(&water::TERMS, tau);
+    let terms = Terms::at(Jet::zero(), &water::TERMS, tau);
     let [value, first, second] = [TemperatureOrder::Value, TemperatureOrder::First, TemperatureOrder::Second]
-        .map(|order| terms.derivatives(delta, order));
+        .map(|order| terms.residual(delta, order));
     [value.value, value.first, value.second, first.value, second.value, first.first]
 }
 
