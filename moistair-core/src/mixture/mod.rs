@@ -7,6 +7,8 @@ mod helmholtz;
 mod ideal_gas;
 mod real_gas;
 mod two_component;
+#[cfg(test)]
+mod virial;
 
 pub use ideal_gas::IdealGas;
 pub use real_gas::RealGas;

@@ -81,7 +81,7 @@ pub struct Phase<R> {
 }
 
 impl<R: Real> Phase<R> {
-    fn of(celsius: R, condensed: Condensed<R>) -> Self {
+    pub fn of(celsius: R, condensed: Condensed<R>) -> Self {
         let kelvins = celsius + k(ZERO_CELSIUS);
         let reduced = condensed.gibbs / (kelvins * k(water_vapor::GAS_CONSTANT));
         let potential = reduced - water_vapor::ideal(kelvins).value - k(1.0);
