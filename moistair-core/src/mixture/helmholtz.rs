@@ -15,9 +15,9 @@ impl<R: Real> Model<R> for Published {
     type Air = Terms<R, { dry_air::TERMS.len() }>;
     type Water = Terms<R, { water::TERMS.len() }>;
 
-    const DENSITY_STEPS: usize = 3;
+    const DENSITY_STEPS: usize = 2;
     const SATURATION_STEPS: usize = 3;
-    const PURE_STEPS: usize = 3;
+    const PURE_STEPS: usize = 2;
 
     fn air(at: &Warmth<R>) -> Self::Air {
         let tau = k::<R>(dry_air::REDUCING_TEMPERATURE) / at.kelvins;

@@ -4,6 +4,7 @@
 //! 1/T. Each is interpolated by one polynomial in a variable linear in 1/T; derivatives in temperature are those of the polynomial, so
 //! that the thermodynamic identities hold whatever the fit is worth. `fit.rs` makes the coefficients and measures them.
 
+#[rustfmt::skip]
 mod coefficients;
 #[cfg(test)]
 mod fit;
@@ -135,6 +136,11 @@ impl<R: Real> Fluid<R> for Air<R> {
         };
         density_polynomial(delta, coefficients)
     }
+
+    fn second_virial(&self) -> R {
+        let [second, ..] = self.residual;
+        second
+    }
 }
 
 /// Water vapor.
@@ -170,6 +176,11 @@ impl<R: Real> Fluid<R> for Water<R> {
             _ => Self::residual_at(&self.place, &self.steep, of),
         };
         density_polynomial(delta, coefficients)
+    }
+
+    fn second_virial(&self) -> R {
+        let [second, ..] = self.residual;
+        second
     }
 }
 
@@ -258,9 +269,9 @@ impl<R: Real> Model<R> for Fitted {
     const FORMULATION: crate::Formulation = crate::Formulation::RealGas;
     type Air = Air<R>;
     type Water = Water<R>;
-    const DENSITY_STEPS: usize = 3;
-    const SATURATION_STEPS: usize = 3;
-    const PURE_STEPS: usize = 3;
+    const DENSITY_STEPS: usize = 2;
+    const SATURATION_STEPS: usize = 2;
+    const PURE_STEPS: usize = 2;
 
     fn air(at: &Warmth<R>) -> Self::Air {
         let place = GAS.at(at.celsius);

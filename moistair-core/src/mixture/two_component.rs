@@ -138,6 +138,14 @@ impl<P> Component<P> {
         (ln_delta + series.value + series.first) * k(self.gas_constant)
     }
 
+    /// Coefficient of the square of the density in p/T.
+    fn second_virial<R: Real>(&self) -> R
+    where
+        P: Fluid<R>,
+    {
+        self.fluid.second_virial() * k(self.gas_constant / self.reducing_density)
+    }
+
     /// Ψ of this component alone; nothing at vanishing density.
     fn helmholtz<R: Real>(&self, density: R) -> R
     where
@@ -271,7 +279,11 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
     fn air_density(&self, steps: usize, pressure: R, humidity_ratio: R) -> R {
         let target = pressure / self.kelvins;
         let gas_constant = humidity_ratio * k(water_vapor::GAS_CONSTANT) + k(dry_air::GAS_CONSTANT);
-        let mut air = target / gas_constant;
+        // Start: the second virial coefficient of the mixture.
+        let second =
+            self.air.second_virial() + humidity_ratio * (humidity_ratio * self.water.second_virial() + self.pair.value);
+        let ideal = target / gas_constant;
+        let mut air = ideal / (k::<R>(1.0) + ideal * second / gas_constant);
         for _ in 0..steps {
             let p = self.pressure(air, air * humidity_ratio);
             air = air + (target - p.value) / (p.of_air + humidity_ratio * p.of_water);
@@ -301,9 +313,14 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
     /// Partial densities in equilibrium with a condensed phase: equal pressure, equal chemical potential of water.
     fn saturated(&self, steps: usize, pressure: R, condensed: &Phase<R>) -> (R, R) {
         let (target, potential) = (pressure / self.kelvins, condensed.potential * k(water_vapor::GAS_CONSTANT));
-        // Start: water as an ideal gas, dry air for the rest of the pressure.
-        let mut water = condensed.potential.exp() * k(water_vapor::REDUCING_DENSITY);
-        let mut air = (target - water * k(water_vapor::GAS_CONSTANT)) / k(dry_air::GAS_CONSTANT);
+        // Start: water as an ideal gas, dry air for the rest of the pressure; then what their second virial coefficients make of it.
+        let ideal = condensed.potential.exp() * k(water_vapor::REDUCING_DENSITY);
+        let rest = (target - ideal * k(water_vapor::GAS_CONSTANT)) / k(dry_air::GAS_CONSTANT);
+        let (of_air, of_water) = (self.air.second_virial(), self.water.second_virial());
+        let step = (ideal * of_water * k(2.0) + rest * self.pair.value) / k(water_vapor::GAS_CONSTANT);
+        let mut water = ideal / (k::<R>(1.0) + step + step * step * k(0.5));
+        let interaction = water * (water * of_water + rest * self.pair.value) + rest * rest * of_air;
+        let mut air = (target - water * k(water_vapor::GAS_CONSTANT) - interaction) / k(dry_air::GAS_CONSTANT);
         for _ in 0..steps {
             let p = self.pressure(air, water);
             let (mu, mu_of_air, mu_of_ln_water) = self.potential(air, water);
@@ -337,7 +354,8 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
             Surface::Liquid | Surface::Stable => hyland_wexler_liquid(self.kelvins).0.exp(),
         };
         let phase = Self::condensed(self.celsius, start, surface);
-        let mut water = start / (self.kelvins * k(water_vapor::GAS_CONSTANT));
+        let ideal = start / (self.kelvins * k(water_vapor::GAS_CONSTANT));
+        let mut water = ideal / (k::<R>(1.0) + ideal * self.water.second_virial() / k(water_vapor::GAS_CONSTANT));
         for _ in 0..steps {
             let (p, p_slope) = self.water.pressure(water);
             let potential = self.water.potential(water) - phase.potential * k(water_vapor::GAS_CONSTANT);

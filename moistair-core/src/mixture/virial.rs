@@ -13,9 +13,9 @@ impl<R: Real> Model<R> for Virial {
     const FORMULATION: crate::Formulation = crate::Formulation::RealGas;
     type Air = Series<R, { dry_air::ORDERS }>;
     type Water = Series<R, { water_vapor::ORDERS }>;
-    const DENSITY_STEPS: usize = 3;
+    const DENSITY_STEPS: usize = 2;
     const SATURATION_STEPS: usize = 3;
-    const PURE_STEPS: usize = 3;
+    const PURE_STEPS: usize = 2;
 
     fn air(at: &Warmth<R>) -> Self::Air {
         Series { ideal: dry_air::ideal(at.kelvins), residual: dry_air::residual(at.kelvins) }

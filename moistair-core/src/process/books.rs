@@ -10,8 +10,7 @@ use crate::state::{AirWithCondensate, MoistAir};
 /// the real gas also sum enthalpies on that scale, and the roughness of the sum, measured in the tests, is part of the limit.
 pub(super) const fn resolution(formulation: Formulation) -> f64 {
     match formulation {
-        Formulation::RealGas => 8.0,
-        Formulation::IdealGas => 1.0,
+        Formulation::RealGas | Formulation::IdealGas => 1.0,
     }
 }
 

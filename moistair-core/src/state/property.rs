@@ -7,6 +7,7 @@ use crate::mixture::Mixture;
 use crate::quantity::{SpecificEntropy, Speed, ZERO_CELSIUS};
 use crate::real::{Mask, Real, Scalar, k};
 use crate::saturation::{Magnus, Surface};
+use crate::substance::{ice, liquid_water};
 
 use super::MoistAir;
 
@@ -14,6 +15,14 @@ use super::MoistAir;
 pub(crate) const DEW_POINT_STEPS: usize = 3;
 pub(super) const WET_BULB_STEPS: usize = 3;
 const WET_BULB_HALVINGS: usize = 8;
+
+/// °C. Below the ranges of dew and frost points by 5 K: in dry air a first step may lead to where no equation holds.
+const fn coldest_trial(surface: Surface) -> f64 {
+    match surface {
+        Surface::Ice => ice::RANGE.0,
+        Surface::Liquid | Surface::Stable => liquid_water::RANGE.0,
+    }
+}
 
 /// Temperature, °C, at which a water mole fraction saturates over a surface.
 ///
@@ -30,7 +39,8 @@ pub(crate) fn dew_point<M: Mixture<R>, R: Real, const STEPS: usize>(
         // d ln x / dT = (1 − x) d ln W / dT
         let slope = (k::<R>(1.0) - saturation.mole_fraction) * saturation.log_slope;
         let error = saturation.mole_fraction.ln() - target;
-        kelvins = kelvins / (k::<R>(1.0) + error / (slope * kelvins));
+        kelvins =
+            (kelvins / (k::<R>(1.0) + error / (slope * kelvins))).at_least(k(coldest_trial(surface) + ZERO_CELSIUS));
     }
     kelvins - k(ZERO_CELSIUS)
 }

@@ -156,6 +156,9 @@ pub trait Fluid<R>: Copy {
 
     /// Density derivatives of φʳ, τφʳ_τ or τ²φʳ_ττ.
     fn residual(&self, delta: R, of: TemperatureOrder) -> DensityDerivatives<R>;
+
+    /// Coefficient of δ in φʳ, the reduced second virial coefficient: for the starts of solves.
+    fn second_virial(&self) -> R;
 }
 
 /// A fluid as published: its ideal part, and its residual as a sum of terms with their `n τᵗ` at this temperature.
@@ -202,6 +205,11 @@ impl<R: Real, const L: usize> Fluid<R> for Terms<R, L> {
         }
         sum
     }
+
+    fn second_virial(&self) -> R {
+        let linear = self.terms.iter().zip(&self.amplitudes).filter(|(term, _)| term.d == 1);
+        linear.fold(k(0.0), |sum, (_, amplitude)| sum + *amplitude)
+    }
 }
 
 /// A fluid with its residual expanded in powers of density: coefficients of δ¹ to δᴺ.
@@ -218,6 +226,11 @@ impl<R: Real, const N: usize> Fluid<R> for Series<R, N> {
 
     fn residual(&self, delta: R, of: TemperatureOrder) -> DensityDerivatives<R> {
         density_polynomial(delta, self.residual.map(|jet| jet.get(of)))
+    }
+
+    fn second_virial(&self) -> R {
+        let [second, ..] = self.residual.as_slice() else { return k(0.0) };
+        second.value
     }
 }
 

@@ -109,7 +109,8 @@ fn phase(domain: Domain, phase: Condensed) -> [Target; 4] {
     let enthalpy = move |t: f64| at(t, REFERENCE_PRESSURE).enthalpy;
     // ∂g/∂p, not the volume itself: below the stability limit of the liquid that one is constant.
     let volume = move |t: f64| {
-        let [low, high] = [REFERENCE_PRESSURE - AROUND, REFERENCE_PRESSURE + AROUND].map(|pressure| at(t, pressure).gibbs);
+        let [low, high] =
+            [REFERENCE_PRESSURE - AROUND, REFERENCE_PRESSURE + AROUND].map(|pressure| at(t, pressure).gibbs);
         (high - low) / (2.0 * AROUND)
     };
     let compression = move |t: f64| {
