@@ -278,3 +278,53 @@ fn coefficients_are_those_of_the_fit() {
         assert!(text == COMMITTED, "coefficients.rs is not what fit.rs makes");
     }
 }
+
+/// One part in 10⁶ of a coefficient. The bits above tell of every one; the tolerances of those that a state would feel, among them
+/// the greatest of each function that matters at the density of room air.
+#[test]
+fn a_disturbed_coefficient_shows() {
+    let (mut total, mut felt) = (0, 0);
+    let phases = PHASES.into_iter().flat_map(|(_, domain, equation)| phase(domain, equation));
+    for target in fluids().into_iter().chain(phases) {
+        let (points, (fit, _)) = (target.points(), target.fit());
+        let shows = |i: usize| {
+            let mut disturbed = fit.clone();
+            disturbed[i] *= 1.0 + 1e-6;
+            assert!(format!("{disturbed:?}") != format!("{fit:?}"));
+            worst(&points, &disturbed) > 1.0
+        };
+        let outside = (0..fit.len()).filter(|&i| shows(i)).count();
+        println!("{:20} {outside} of {} are felt", target.name, fit.len());
+        let matters = ["IDEAL", "_1", "VIRIAL", "potential", "enthalpy", "volume"];
+        assert!(outside > 0 || !matters.iter().any(|name| target.name.ends_with(name)), "{}", target.name);
+        (total, felt) = (total + fit.len(), felt + outside);
+    }
+    println!("{felt} of {total} are felt");
+}
+
+/// Where two pieces of the liquid meet: no jump in potential, enthalpy [J/kg] and volume [1] that the limits of the real gas would feel.
+#[test]
+fn pieces_of_the_liquid_meet() {
+    let jumps = |pressures: &[f64]| {
+        let mut jumps = [0.0_f64; 3];
+        for border in [COLD_LIQUID.coldest, WARM_LIQUID.coldest] {
+            for &pascals in pressures {
+                let liquid = |celsius| <Fitted as Model<f64>>::liquid(celsius, pascals);
+                // The next number below the border.
+                let (below, above) = (liquid(f64::from_bits(border.to_bits() + 1)), liquid(border));
+                let jump = [
+                    below.potential - above.potential,
+                    below.enthalpy - above.enthalpy,
+                    below.volume / above.volume - 1.0,
+                ];
+                jumps = core::array::from_fn(|i| jumps[i].max(jump[i].abs()));
+            }
+        }
+        println!("jumps of the liquid up to {pressures:?}: {jumps:?}");
+        jumps
+    };
+    let [potential, enthalpy, volume] = jumps(&[20e3, 40e3, 101_325.0, 120e3]);
+    assert!(potential < 1e-8 && enthalpy < 0.05 && volume < 1e-6);
+    let [potential, enthalpy, volume] = jumps(&[500e3, 1.1e6]);
+    assert!(potential < 1e-8 && enthalpy < 0.5 && volume < 1e-6);
+}
