@@ -53,7 +53,7 @@ macro_rules! quantities {
 }
 
 /// Codes below this number are properties of a state.
-pub const PROPERTY_COUNT: i32 = 25;
+pub const PROPERTY_COUNT: i32 = 35;
 
 const INFINITY: f64 = f64::INFINITY;
 
@@ -108,6 +108,18 @@ quantities! {
     SpecificEntropy = 23, "specific entropy", "J/(kg K)", -INFINITY, INFINITY;
     /// Speed of sound at constant composition.
     SpeedOfSound = 24, "speed of sound", "m/s", 0.0, INFINITY;
+    /// Dynamic viscosity.
+    DynamicViscosity = 29, "dynamic viscosity", "Pa s", 0.0, INFINITY;
+    /// Thermal conductivity.
+    ThermalConductivity = 30, "thermal conductivity", "W/(m K)", 0.0, INFINITY;
+    /// Diffusivity of water vapor in air.
+    VaporDiffusivity = 31, "vapor diffusivity", "m²/s", 0.0, INFINITY;
+    /// c_p μ / λ, with the heat capacity per mass of moist air.
+    PrandtlNumber = 32, "prandtl number", "1", 0.0, INFINITY;
+    /// μ / (ρ D), of the vapor in the moist air.
+    SchmidtNumber = 33, "schmidt number", "1", 0.0, INFINITY;
+    /// Thermal diffusivity over the diffusivity of the vapor, λ / (ρ c_p D).
+    LewisNumber = 34, "lewis number", "1", 0.0, INFINITY;
 
     /// Dry-air mass flow.
     DryAirFlow = 64, "dry-air mass flow", "kg/s", 0.0, 1.0e6;

@@ -193,6 +193,18 @@ quantity!(
     Speed: from_meters_per_second, meters_per_second
 );
 quantity!(
+    /// Dynamic viscosity.
+    DynamicViscosity: from_pascal_seconds, pascal_seconds; from_micropascal_seconds, micropascal_seconds, 1e-6
+);
+quantity!(
+    /// Thermal conductivity.
+    ThermalConductivity: from_watts_per_meter_kelvin, watts_per_meter_kelvin; from_milliwatts_per_meter_kelvin, milliwatts_per_meter_kelvin, 1e-3
+);
+quantity!(
+    /// Diffusivity, of matter or of heat.
+    Diffusivity: from_square_meters_per_second, square_meters_per_second; from_square_millimeters_per_second, square_millimeters_per_second, 1e-6
+);
+quantity!(
     /// Mass of moist air per volume.
     Density: from_kilograms_per_cubic_meter, kilograms_per_cubic_meter
 );

@@ -100,7 +100,7 @@
 #define MOISTAIR_INTERNAL 901
 
 // Number of property selectors: they run from 0 to one less. Later versions may add to them.
-#define MOISTAIR_PROPERTY_COUNT 25
+#define MOISTAIR_PROPERTY_COUNT 35
 
 // Dry-bulb temperature. The range of states; the formulations themselves reach 193.15 to 473.15 K (IAPWS G8-10) [°C].
 #define MOISTAIR_DRY_BULB 0
@@ -177,6 +177,24 @@
 
 // Speed of sound at constant composition [m/s].
 #define MOISTAIR_SPEED_OF_SOUND 24
+
+// Dynamic viscosity [Pa s].
+#define MOISTAIR_DYNAMIC_VISCOSITY 29
+
+// Thermal conductivity [W/(m K)].
+#define MOISTAIR_THERMAL_CONDUCTIVITY 30
+
+// Diffusivity of water vapor in air [m²/s].
+#define MOISTAIR_VAPOR_DIFFUSIVITY 31
+
+// c_p μ / λ, with the heat capacity per mass of moist air [1].
+#define MOISTAIR_PRANDTL_NUMBER 32
+
+// μ / (ρ D), of the vapor in the moist air [1].
+#define MOISTAIR_SCHMIDT_NUMBER 33
+
+// Thermal diffusivity over the diffusivity of the vapor, λ / (ρ c_p D) [1].
+#define MOISTAIR_LEWIS_NUMBER 34
 
 // Dry-air mass flow [kg/s].
 #define MOISTAIR_DRY_AIR_MASS_FLOW 64

@@ -9,7 +9,7 @@ use crate::status::{Failure, moistair_error};
 use crate::text::{Text, texts};
 
 /// Number of property selectors: they run from 0 to one less. Later versions may add to them.
-pub const MOISTAIR_PROPERTY_COUNT: i32 = 25;
+pub const MOISTAIR_PROPERTY_COUNT: i32 = 35;
 
 /// Dry-bulb temperature. The range of states; the formulations themselves reach 193.15 to 473.15 K (IAPWS G8-10) [°C].
 pub const MOISTAIR_DRY_BULB: i32 = 0;
@@ -62,6 +62,18 @@ pub const MOISTAIR_FROST_POINT: i32 = 22;
 pub const MOISTAIR_SPECIFIC_ENTROPY: i32 = 23;
 /// Speed of sound at constant composition [m/s].
 pub const MOISTAIR_SPEED_OF_SOUND: i32 = 24;
+/// Dynamic viscosity [Pa s].
+pub const MOISTAIR_DYNAMIC_VISCOSITY: i32 = 29;
+/// Thermal conductivity [W/(m K)].
+pub const MOISTAIR_THERMAL_CONDUCTIVITY: i32 = 30;
+/// Diffusivity of water vapor in air [m²/s].
+pub const MOISTAIR_VAPOR_DIFFUSIVITY: i32 = 31;
+/// c_p μ / λ, with the heat capacity per mass of moist air [1].
+pub const MOISTAIR_PRANDTL_NUMBER: i32 = 32;
+/// μ / (ρ D), of the vapor in the moist air [1].
+pub const MOISTAIR_SCHMIDT_NUMBER: i32 = 33;
+/// Thermal diffusivity over the diffusivity of the vapor, λ / (ρ c_p D) [1].
+pub const MOISTAIR_LEWIS_NUMBER: i32 = 34;
 /// Dry-air mass flow [kg/s].
 pub const MOISTAIR_DRY_AIR_MASS_FLOW: i32 = 64;
 /// Volume flow at a stated state [m³/s].

@@ -202,11 +202,11 @@ pub unsafe extern "C" fn moistair_properties(
 
 /// Refuses bits that are no property; the lowest of them is the selector in the error.
 pub(crate) fn check_mask(mask: u64) -> Result<(), Failure> {
-    let others = mask >> MOISTAIR_PROPERTY_COUNT;
+    let others = properties(mask).fold(mask, |others, property| others & !(1 << property.code()));
     if others == 0 {
         return Ok(());
     }
-    Err(Failure::UnknownQuantity(MOISTAIR_PROPERTY_COUNT + others.trailing_zeros() as i32))
+    Err(Failure::UnknownQuantity(others.trailing_zeros() as i32))
 }
 
 /// The properties of a mask, in the order of their selectors.

@@ -282,6 +282,45 @@ impl MoistAir {
         self.value(py, Quantity::SpeedOfSound)
     }
 
+    /// Dynamic viscosity μ, Pa s. Dry air by Lemmon & Jacobsen 2004 (1 %), vapor by IAPWS R12-08 (2 %), mixed by Wilke's rule (a few
+    /// percent in hot and humid air). Below 0 °C the vapor's part extrapolates.
+    #[getter]
+    fn dynamic_viscosity<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::DynamicViscosity)
+    }
+
+    /// Thermal conductivity λ, W/(m K). Dry air by Lemmon & Jacobsen 2004 (2 %), vapor by IAPWS R15-11 (2 %), mixed by Wassiljewa's
+    /// rule with the weights of Mason & Saxena (a few percent in hot and humid air). Below 0 °C the vapor's part extrapolates.
+    #[getter]
+    fn thermal_conductivity<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::ThermalConductivity)
+    }
+
+    /// Diffusivity D of water vapor in air, m²/s: Massman 1998 (constants from memory), 0 to 100 °C near atmospheric pressure within
+    /// about 7 %; it extrapolates elsewhere.
+    #[getter]
+    fn vapor_diffusivity<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::VaporDiffusivity)
+    }
+
+    /// Prandtl number c_p μ / λ, the heat capacity per mass of moist air.
+    #[getter]
+    fn prandtl_number<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::PrandtlNumber)
+    }
+
+    /// Schmidt number μ / (ρ D) of the vapor in the moist air.
+    #[getter]
+    fn schmidt_number<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::SchmidtNumber)
+    }
+
+    /// Lewis number λ / (ρ c_p D): thermal diffusivity over the diffusivity of the vapor (some define the inverse).
+    #[getter]
+    fn lewis_number<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::LewisNumber)
+    }
+
     /// Relative humidity x_w / x_ws, a fraction, over the stable surface: ice below the melting temperature, liquid
     /// above. Over ice it may exceed one. No value above boiling.
     #[getter]

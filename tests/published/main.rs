@@ -8,3 +8,4 @@ mod airport_weather;
 mod atmosphere;
 mod handbook;
 mod helmholtz;
+mod transport;

@@ -6,6 +6,7 @@
 mod helmholtz;
 mod ideal_gas;
 mod real_gas;
+pub mod transport;
 mod two_component;
 #[cfg(test)]
 mod virial;

@@ -7,6 +7,7 @@
 pub mod dry_air;
 pub mod ice;
 pub mod liquid_water;
+pub mod transport;
 pub mod water;
 pub mod water_vapor;
 
