@@ -961,15 +961,6 @@ const char *moistair_quantity_unit(int32_t quantity);
 // Returns 0, 101, 102, 103.
 int32_t moistair_quantity_limits(int32_t quantity, moistair_limits *limits, moistair_error *error);
 
-// Pressure of the standard atmosphere (ISO 2533) at an elevation, taken as geopotential altitude. A measured pressure is better: weather
-// moves it by 3 % either way.
-//
-// elevation: [m] above mean sea level, -5000 to 11000; pressure: output [Pa]; error: may be null.
-// Returns 0, 101, 103, 201, 202.
-int32_t moistair_pressure_at_elevation(double elevation,
-                                       double *pressure,
-                                       moistair_error *error);
-
 // A state from its dry bulb and any second property.
 //
 // dry_bulb: [°C], -80 to 150; property: selector of the second property, one that fixes a state (humidity ratio, relative humidity,
@@ -1003,6 +994,54 @@ int32_t moistair_properties(const moistair_state *state,
                             double *values,
                             uint64_t *have,
                             moistair_error *error);
+
+// Pressure of the standard atmosphere (ISO 2533) at an elevation, taken as geopotential altitude. A measured pressure is better: weather
+// moves it by 3 % either way.
+//
+// elevation: [m] above mean sea level, -5000 to 11000; pressure: output [Pa]; error: may be null.
+// Returns 0, 101, 103, 201, 202.
+int32_t moistair_pressure_at_elevation(double elevation,
+                                       double *pressure,
+                                       moistair_error *error);
+
+// Pressure of the standard atmosphere (ISO 2533) at a geometric elevation.
+//
+// elevation: [m] above mean sea level, -5000 to 11000; pressure: output [Pa]; error: may be null.
+// Returns 0, 101, 103, 201, 202.
+int32_t moistair_pressure_at_geometric_elevation(double elevation, double *pressure, moistair_error *error);
+
+// Temperature of the standard atmosphere (ISO 2533) at an elevation, taken as geopotential altitude: a mean of middle latitudes.
+//
+// elevation: [m] above mean sea level, -5000 to 11000; temperature: output [°C]; error: may be null.
+// Returns 0, 101, 103, 201, 202.
+int32_t moistair_temperature_at_elevation(double elevation,
+                                          double *temperature,
+                                          moistair_error *error);
+
+// Temperature of the standard atmosphere (ISO 2533) at a geometric elevation.
+//
+// elevation: [m] above mean sea level, -5000 to 11000; temperature: output [°C]; error: may be null.
+// Returns 0, 101, 103, 201, 202.
+int32_t moistair_temperature_at_geometric_elevation(double elevation,
+                                                    double *temperature,
+                                                    moistair_error *error);
+
+// The elevation, as geopotential altitude, at which the standard atmosphere (ISO 2533) has a pressure: of a barometer, the pressure
+// altitude.
+//
+// pressure: [Pa], 22632 (11 km) to 177687 (-5 km); elevation: output [m] above mean sea level; error: may be null.
+// Returns 0, 101, 103, 201, 202.
+int32_t moistair_elevation_at_pressure(double pressure,
+                                       double *elevation,
+                                       moistair_error *error);
+
+// The geometric elevation at which the standard atmosphere (ISO 2533) has a pressure.
+//
+// pressure: [Pa], 22700 (11 km) to 177761 (-5 km); elevation: output [m] above mean sea level; error: may be null.
+// Returns 0, 101, 103, 201, 202.
+int32_t moistair_geometric_elevation_at_pressure(double pressure,
+                                                 double *elevation,
+                                                 moistair_error *error);
 
 // Properties of many states at once: row by row the same results, bit for bit, as the calls for one state. A bad row costs only itself.
 //

@@ -23,6 +23,7 @@
 )]
 
 pub mod account;
+pub mod atmosphere;
 pub mod columns;
 mod memory;
 pub mod process;
@@ -34,6 +35,7 @@ mod text;
 pub mod version;
 
 pub use account::*;
+pub use atmosphere::*;
 pub use columns::*;
 pub use process::*;
 pub use quantity::*;

@@ -1,7 +1,7 @@
 //! States of moist air and their properties.
 
 use moistair_core::columns::NAN;
-use moistair_core::{Basis, Formulation, HumidityRatio, Length, MoistAir, Pressure, Quantity, Temperature};
+use moistair_core::{Basis, Formulation, HumidityRatio, MoistAir, Pressure, Quantity, Temperature};
 
 use crate::memory::{Answer, answer, check, read, report, write};
 use crate::quantity::{MOISTAIR_PROPERTY_COUNT, property, quantity};
@@ -106,22 +106,6 @@ impl Answer for moistair_state {
 
 pub(crate) fn formulation(selector: i32) -> Result<Formulation, Failure> {
     Formulation::from_code(selector).ok_or(Failure::UnknownSelector(selector))
-}
-
-/// Pressure of the standard atmosphere (ISO 2533) at an elevation, taken as geopotential altitude. A measured pressure is better: weather
-/// moves it by 3 % either way.
-///
-/// elevation: [m] above mean sea level, -5000 to 11000; pressure: output [Pa]; error: may be null.
-/// Returns 0, 101, 103, 201, 202.
-#[unsafe(no_mangle)]
-pub unsafe extern "C" fn moistair_pressure_at_elevation(
-    elevation: f64,
-    pressure: *mut f64,
-    error: *mut moistair_error,
-) -> i32 {
-    let call = || Ok(Pressure::at_elevation(Length::from_meters(elevation))?.pascals());
-    // SAFETY: the caller's pointers.
-    unsafe { answer(pressure, error, call) }
 }
 
 /// A state from its dry bulb and any second property.

@@ -73,6 +73,7 @@ fn rendered() -> String {
         "status",
         "quantity",
         "state",
+        "atmosphere",
         "columns",
         "process/stream",
         "process/sensible",

@@ -414,6 +414,11 @@ fn no_argument_upsets_an_export() {
 
     run!(exercise moistair_quantity_limits: |c, out, e| (c.selector(50), out, e));
     run!(exercise moistair_pressure_at_elevation: |c, out, e| (c.number(-5e3, 1.1e4), out, e));
+    run!(exercise moistair_pressure_at_geometric_elevation: |c, out, e| (c.number(-5e3, 1.1e4), out, e));
+    run!(exercise moistair_temperature_at_elevation: |c, out, e| (c.number(-5e3, 1.1e4), out, e));
+    run!(exercise moistair_temperature_at_geometric_elevation: |c, out, e| (c.number(-5e3, 1.1e4), out, e));
+    run!(exercise moistair_elevation_at_pressure: |c, out, e| (c.number(2e4, 2e5), out, e));
+    run!(exercise moistair_geometric_elevation_at_pressure: |c, out, e| (c.number(2e4, 2e5), out, e));
     run!(exercise moistair_from_dry_bulb: |c, out, e| let (property, value) = c.second();
         (c.number(-80.0, 150.0), property, value, c.basis(), out, e));
     run!(exercise moistair_property: |c, out, e| let state = c.state(); (c.pointer(&state), c.selector(23), out, e));

@@ -1,6 +1,7 @@
 //! The Python face: arguments in, results out, no formula.
 
 mod account;
+mod atmosphere;
 mod column;
 mod error;
 mod memory;
@@ -21,13 +22,15 @@ mod _core {
         BooksTotal, Counts, Deviation, Period, Periods, Residuals, Sum, Total, restore_owned, restore_period,
     };
     #[pymodule_export]
+    use crate::atmosphere::{elevation_at_pressure, pressure_at_elevation, temperature_at_elevation};
+    #[pymodule_export]
     use crate::process::run;
     #[pymodule_export]
     use crate::signal::{
         Channel, ChannelState, Checked, CheckedColumns, code_table, from_core, restore_checked, to_core,
     };
     #[pymodule_export]
-    use crate::state::{MoistAir, pressure_at_elevation, quantity_table, restore_state};
+    use crate::state::{MoistAir, quantity_table, restore_state};
 
     #[pymodule_init]
     fn init(module: &Bound<'_, PyModule>) -> PyResult<()> {

@@ -4,15 +4,13 @@ use core::hash::{Hash, Hasher};
 use std::hash::DefaultHasher;
 
 use moistair_core::columns::{Column, NAN, StateColumns};
-use moistair_core::{
-    Basis, Error, Formulation, HumidityRatio, Length, MoistAir as Air, Pressure, Quantity, Temperature,
-};
+use moistair_core::{Basis, Error, Formulation, HumidityRatio, MoistAir as Air, Pressure, Quantity, Temperature};
 use numpy::{PyArray1, PyArrayDyn, PyArrayMethods, PyReadwriteArrayDyn, PyUntypedArrayMethods};
 use pyo3::CastIntoError;
 use pyo3::exceptions::{PyTypeError, PyValueError};
 use pyo3::prelude::*;
 use pyo3::sync::PyOnceLock;
-use pyo3::types::{PyDict, PyFloat, PyString, PyTuple, PyType};
+use pyo3::types::{PyDict, PyString, PyTuple, PyType};
 
 use crate::column::{self, Arguments, plain_number};
 use crate::error::{exception, identifier, internal, unknown_name};
@@ -893,63 +891,6 @@ pub fn restore_state(
         settled: false,
     })
     .into())
-}
-
-/// Pressure of the standard atmosphere (ISO 2533:1975) at an elevation.
-///
-/// A measured pressure is always better: weather moves it by ±3 %. A reading reduced to sea level is not the station's.
-///
-/// Parameters
-/// ----------
-/// elevation : float or array_like
-///     Above mean sea level, m, −5000 to 11 000.
-/// geometric : bool
-///     Whether the elevation is geometric and is to be converted to geopotential altitude; by default it is taken as the latter,
-///     as the handbook does (0.05 % less at 5 km).
-///
-/// Returns
-/// -------
-/// float or numpy.ndarray
-///     Pa; NaN where a row of an array is out of range.
-///
-/// Raises
-/// ------
-/// NotFiniteError, OutOfRangeError
-///     A single elevation that has no value.
-///
-/// Examples
-/// --------
-/// >>> import moistair
-/// >>> round(moistair.pressure_at_elevation(1600.0))
-/// 83524
-/// >>> moistair.pressure_at_elevation([0.0, 1600.0]).round()
-/// array([101325.,  83524.])
-#[pyfunction]
-#[pyo3(signature = (elevation, *, geometric=false))]
-pub fn pressure_at_elevation<'py>(
-    py: Python<'py>,
-    elevation: Bound<'py, PyAny>,
-    geometric: bool,
-) -> PyResult<Bound<'py, PyAny>> {
-    let pressure = |meters| {
-        let length = Length::from_meters(meters);
-        let result = if geometric { Pressure::at_geometric_elevation(length) } else { Pressure::at_elevation(length) };
-        result.map(Pressure::pascals)
-    };
-    let scalar = |meters| match pressure(meters) {
-        Ok(pascals) => Ok(PyFloat::new(py, pascals).into_any()),
-        Err(error) => Err(exception(py, &error)),
-    };
-    if let Some(meters) = plain_number(&elevation) {
-        return scalar(meters?);
-    }
-    // The rows of an array cannot raise; a single number comes back to the scalar call.
-    let result = column::map(py, "elevation", elevation.clone(), |meters| pressure(meters).unwrap_or(NAN))?;
-    if result.is_instance_of::<PyFloat>() {
-        scalar(elevation.call_method0("__float__")?.extract()?)
-    } else {
-        Ok(result)
-    }
 }
 
 /// Every quantity as (name, code, unit, minimum, maximum, whether it is a property of a state).

@@ -12,7 +12,14 @@ dry air. Numbers and NumPy arrays go through the same calls.
 """
 
 from . import account, process, signal
-from ._core import NUMERICS_VERSION, MoistAir, __version__, pressure_at_elevation
+from ._core import (
+    NUMERICS_VERSION,
+    MoistAir,
+    __version__,
+    elevation_at_pressure,
+    pressure_at_elevation,
+    temperature_at_elevation,
+)
 from ._errors import (
     InfeasibleError,
     MoistAirError,
@@ -41,7 +48,9 @@ __all__ = [
     "UnknownNameError",
     "__version__",
     "account",
+    "elevation_at_pressure",
     "pressure_at_elevation",
     "process",
     "signal",
+    "temperature_at_elevation",
 ]

@@ -28,6 +28,7 @@ __all__ = [
     "Total",
     "__version__",
     "code_table",
+    "elevation_at_pressure",
     "from_core",
     "pressure_at_elevation",
     "quantity_table",
@@ -36,6 +37,7 @@ __all__ = [
     "restore_period",
     "restore_state",
     "run",
+    "temperature_at_elevation",
     "to_core",
 ]
 
@@ -187,6 +189,14 @@ class MoistAir(Generic[_T]):
 def pressure_at_elevation(elevation: float, *, geometric: bool = False) -> float: ...
 @overload
 def pressure_at_elevation(elevation: ArrayLike, *, geometric: bool = False) -> _Array: ...
+@overload
+def temperature_at_elevation(elevation: float, *, geometric: bool = False) -> float: ...
+@overload
+def temperature_at_elevation(elevation: ArrayLike, *, geometric: bool = False) -> _Array: ...
+@overload
+def elevation_at_pressure(pressure: float, *, geometric: bool = False) -> float: ...
+@overload
+def elevation_at_pressure(pressure: ArrayLike, *, geometric: bool = False) -> _Array: ...
 def quantity_table() -> list[tuple[str, int, str, float, float, bool]]: ...
 def code_table() -> list[tuple[str, str, int, str]]: ...
 def run(name: str, layout: str, labels: list[str], values: list[Any]) -> tuple[list[Any], Union[int, _Codes]]: ...
