@@ -28,7 +28,10 @@ pub use bounds::{PROPERTY_COUNT, Quantity};
 pub use error::{Error, NoValue};
 pub use quantity::*;
 pub use real::Scalar;
-pub use state::{AirWithCondensate, Freezing, MoistAir, SecondProperty, liquid_water_enthalpy};
+pub use state::{
+    AirWithCondensate, Bulb, Freezing, MoistAir, Psychrometer, PsychrometerReading, SecondProperty,
+    liquid_water_enthalpy,
+};
 
 /// Changes when any result changes in any bit; the change log then states by how much.
 pub const NUMERICS_VERSION: u32 = 2;

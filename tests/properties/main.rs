@@ -4,5 +4,6 @@
 mod errors;
 mod hostile;
 mod order;
+mod psychrometer;
 mod round_trip;
 mod support;

@@ -191,7 +191,7 @@ impl<S: Scalar> MoistAir<S> {
 }
 
 /// The ratio if it lies between dry and saturated, snapped to the ends when rounding carried it past them.
-fn settle<S: Scalar>(ratio: S, limit: S, searched: bool) -> Option<S> {
+pub(super) fn settle<S: Scalar>(ratio: S, limit: S, searched: bool) -> Option<S> {
     // In very dry air the last bits of a density or an enthalpy are worth more vapor than any share of it.
     let bits = if searched { S::epsilon() * k(8.0) } else { k(0.0) };
     let tolerance = (limit * k(SATURATION_TOLERANCE)).at_least(saturation_rounding(limit)) + bits;

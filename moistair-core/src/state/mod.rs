@@ -3,6 +3,7 @@
 pub(crate) mod condensate;
 pub(crate) mod construct;
 pub(crate) mod property;
+mod psychrometer;
 
 use crate::basis::{Basis, Formulation};
 use crate::mixture::Gas;
@@ -11,6 +12,7 @@ use crate::real::{Scalar, k};
 
 pub use condensate::{AirWithCondensate, Freezing, liquid_water_enthalpy};
 pub use construct::SecondProperty;
+pub use psychrometer::{Bulb, Psychrometer, PsychrometerReading};
 
 /// Moist air without condensate, at a dry bulb, pressure and humidity ratio, on a stated formulation.
 ///

@@ -7,13 +7,13 @@ use std::println;
 use super::*;
 use crate::checks::{Table, Tally};
 use crate::substance::dry_air::{self as air, MOLAR_MASS, REDUCING_DENSITY, REDUCING_TEMPERATURE};
-use crate::substance::{DensityDerivatives, Residual, TemperatureOrder, Terms};
+use crate::substance::{DensityDerivatives, Fluid, TemperatureOrder, Terms};
 
 const AIR: &str = include_str!("../../../../tests/published/lemmon_jacobsen2004_air_transport.csv");
 const WATER: &str = include_str!("../../../../tests/published/r12_08_r15_11_water_transport.csv");
 
 fn residual(kelvins: f64, density: f64, of: TemperatureOrder) -> DensityDerivatives<f64> {
-    Terms::at(&air::TERMS, REDUCING_TEMPERATURE / kelvins).derivatives(density / REDUCING_DENSITY, of)
+    Terms::at(air::ideal(kelvins), &air::TERMS, REDUCING_TEMPERATURE / kelvins).residual(density / REDUCING_DENSITY, of)
 }
 
 /// (∂p/∂ρ)_T of dry air, J/kg.
