@@ -6,6 +6,7 @@
 #[path = "../../moistair-core/src/checks.rs"]
 #[allow(dead_code)]
 mod checks;
+mod compression;
 mod facts;
 mod hostile;
 mod laws;

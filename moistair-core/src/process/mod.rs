@@ -11,6 +11,7 @@
 
 pub mod books;
 pub mod coil;
+pub mod compression;
 pub mod humidify;
 pub mod mixing;
 pub mod reheat;

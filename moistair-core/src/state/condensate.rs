@@ -121,6 +121,54 @@ impl<S: Scalar> AirWithCondensate<S> {
         Self { air, liquid, ice, condensate_enthalpy }
     }
 
+    /// Vapor and condensate in equilibrium at a temperature, from the water of all phases together, per mass of dry air: as much vapor as the
+    /// air holds, the rest ice below the melting temperature and liquid from there on (liquid down to −40 °C if supercooled). No search.
+    ///
+    /// # Errors
+    /// [`Error::OutOfRange`], [`Error::NotFinite`].
+    ///
+    /// ```
+    /// use moistair_core::*;
+    /// let line = Basis::real_gas(Pressure::from_kilopascals(800.0));
+    /// let water = HumidityRatio::from_grams_per_kilogram(10.0);
+    /// let at = |t| AirWithCondensate::from_dry_bulb_and_water(
+    ///     Temperature::from_celsius(t), water, Freezing::Equilibrium, line);
+    /// assert!(!at(60.0)?.is_wet() && at(20.0)?.is_wet());
+    /// let ice: f64 = at(-10.0)?.ice().grams_per_kilogram();
+    /// assert!((9.5..10.0).contains(&ice));
+    /// assert!(at(500.0).is_err());
+    /// # Ok::<(), Error>(())
+    /// ```
+    pub fn from_dry_bulb_and_water(
+        dry_bulb: Temperature<S>,
+        total_water: HumidityRatio<S>,
+        freezing: Freezing,
+        basis: impl Into<Basis<S>>,
+    ) -> Result<Self, Error> {
+        let basis = basis.into();
+        let celsius = checked(Quantity::DryBulb, dry_bulb.celsius())?;
+        let water = checked(Quantity::TotalWater, total_water.kilograms_per_kilogram())?;
+        let pressure = checked(Quantity::Pressure, basis.pressure().pascals())?;
+        with_mixture!(basis.formulation(), S, M => {
+            let held = capacity::<M<S>, S>(celsius, pressure, freezing);
+            let state = |ratio| MoistAir::assemble(celsius, pressure, ratio, basis.formulation());
+            // Saturated to rounding is not fog.
+            if water <= held + saturation_rounding(held) {
+                return Ok(state(water).into());
+            }
+            let freezes_below = match freezing {
+                Freezing::Equilibrium => <M<S> as Mixture<S>>::melting_temperature(pressure),
+                Freezing::Supercooled => k(Quantity::DewPoint.limits().0),
+            };
+            let surplus = water - held;
+            Ok(if celsius < freezes_below {
+                Self::carrying(state(held), k(0.0), surplus)
+            } else {
+                Self::carrying(state(held), surplus, k(0.0))
+            })
+        })
+    }
+
     /// Vapor, liquid and ice in equilibrium, from the enthalpy and the water of all phases together, per mass of dry air.
     ///
     /// At the melting temperature all three phases coexist over a range of enthalpy. Bounded work: at most

@@ -1,5 +1,6 @@
 //! A state of moist air.
 
+mod at_pressure;
 pub(crate) mod condensate;
 pub(crate) mod construct;
 pub(crate) mod property;
@@ -10,6 +11,7 @@ use crate::mixture::Gas;
 use crate::quantity::*;
 use crate::real::{Scalar, k};
 
+pub use at_pressure::{SaturationPoint, saturation_point_after, saturation_temperature_after};
 pub use condensate::{AirWithCondensate, Freezing, liquid_water_enthalpy};
 pub use construct::SecondProperty;
 pub use psychrometer::{Bulb, Psychrometer, PsychrometerReading};

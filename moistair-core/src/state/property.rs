@@ -330,18 +330,13 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
     }
 
     fn saturation_temperature(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
-        if !k::<S>(0.0).lt(self.air.humidity_ratio) {
-            return Err(Error::NoValue { quantity, reason: NoValue::DryAir });
-        }
-        let value = dew_point::<M, S, DEW_POINT_STEPS>(self.mole_fraction(), self.air.pascals, surface);
-        self.within_surface(quantity, value, surface)
+        let value = saturation_point::<M, S>(quantity, self.mole_fraction(), self.air.pascals)?;
+        Ok(self.not_above_dry_bulb(value, surface))
     }
 
     fn within_surface(&self, quantity: Quantity, value: S, surface: Surface) -> Result<S, Error> {
-        let (min, max) = quantity.limits();
-        let max = k::<S>(max);
-        let max = if surface == Surface::Ice { M::melting_temperature(self.air.pascals).at_most(max) } else { max };
-        within(quantity, self.not_above_dry_bulb(value, surface), k(min), max)
+        let (min, max) = range::<M, S>(quantity, surface, self.air.pascals);
+        within(quantity, self.not_above_dry_bulb(value, surface), min, max)
     }
 
     /// No state holds more vapor than liquid water allows: over liquid neither wet bulb nor dew point exceeds the dry bulb, though
@@ -354,6 +349,28 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
         };
         if over_liquid { value.at_most(self.air.celsius) } else { value }
     }
+}
+
+/// Dew or frost point, °C, of a mole fraction at a pressure.
+pub(super) fn saturation_point<M: Mixture<S>, S: Scalar>(
+    quantity: Quantity,
+    mole_fraction: S,
+    pressure: S,
+) -> Result<S, Error> {
+    if !k::<S>(0.0).lt(mole_fraction) {
+        return Err(Error::NoValue { quantity, reason: NoValue::DryAir });
+    }
+    let surface = if quantity == Quantity::FrostPoint { Surface::Ice } else { Surface::Liquid };
+    let value = dew_point::<M, S, DEW_POINT_STEPS>(mole_fraction, pressure, surface);
+    let (min, max) = range::<M, S>(quantity, surface, pressure);
+    within(quantity, value, min, max)
+}
+
+/// Where a temperature over a surface has a meaning.
+fn range<M: Mixture<S>, S: Scalar>(quantity: Quantity, surface: Surface, pressure: S) -> (S, S) {
+    let (min, max) = quantity.limits();
+    let max = k::<S>(max);
+    (k(min), if surface == Surface::Ice { M::melting_temperature(pressure).at_most(max) } else { max })
 }
 
 /// What a solved temperature may be off, K.
