@@ -159,7 +159,7 @@ quantities! {
     /// Specific enthalpy that a process leaves, with its condensate: down to that of ten times as much ice as dry air.
     LeavingEnthalpy = 81, "leaving enthalpy", "J/kg", -5_200_000.0, 30_000_000.0;
     /// Wet bulb as a psychrometer reads it; over ice not above the melting temperature.
-    PsychrometerReading = 82, "psychrometer reading", "°C", -40.0, 100.0;
+    PsychrometerWetBulb = 82, "psychrometer wet bulb", "°C", -40.0, 100.0;
     /// Coefficient of a psychrometer, over water that at 0 °C.
     PsychrometerCoefficient = 83, "psychrometer coefficient", "1/K", 3e-4, 2e-3;
 }

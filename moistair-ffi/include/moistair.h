@@ -250,11 +250,29 @@
 // Specific enthalpy that a process leaves, with its condensate [J/kg].
 #define MOISTAIR_LEAVING_ENTHALPY 81
 
+// Wet bulb as a psychrometer reads it; over ice not above the melting temperature [°C].
+#define MOISTAIR_PSYCHROMETER_WET_BULB 82
+
+// Coefficient of a psychrometer, over water that at 0 °C [1/K].
+#define MOISTAIR_PSYCHROMETER_COEFFICIENT 83
+
 // Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
 #define MOISTAIR_REAL_GAS 0
 
 // The perfect-gas relations of the ASHRAE handbook, for reproducing contract and textbook numbers.
 #define MOISTAIR_IDEAL_GAS 1
+
+// The wetted bulb is covered with water, supercooled below the melting temperature.
+#define MOISTAIR_BULB_WATER 0
+
+// The wetted bulb is covered with ice.
+#define MOISTAIR_BULB_ICE 1
+
+// Coefficient of an aspirated psychrometer over water at 0 °C [1/K]: WMO-No. 8 (from memory). It holds for 3 to 5 m/s over shielded bulbs.
+#define MOISTAIR_ASPIRATED_OVER_WATER 6.53e-4
+
+// Coefficient of an aspirated psychrometer over ice [1/K]: WMO-No. 8 (from memory).
+#define MOISTAIR_ASPIRATED_OVER_ICE 5.75e-4
 
 // Water below the melting temperature freezes.
 #define MOISTAIR_FREEZING_EQUILIBRIUM 0
@@ -776,6 +794,17 @@ typedef struct {
     double effectiveness;
 } moistair_tower_balance;
 
+// Air that was brought to another pressure and temperature.
+typedef struct {
+    // Air and all its water at the new pressure and temperature, before a separator; after a perfect one the stream is
+    // {leaving.mixture.air, leaving.dry_air_flow}.
+    moistair_wet_stream leaving;
+    // Work of compression less the heat of cooling, into the air; no water.
+    moistair_exchange exchange;
+    // Liquid and ice in the leaving air, what a perfect separator drains [kg/s].
+    double condensate;
+} moistair_compressed;
+
 // What is known about a channel before its first sample. Limits and resolutions are in the unit of the core, which the kinds name.
 // Make one with moistair_channel_new, then set what differs.
 typedef struct {
@@ -1043,6 +1072,80 @@ int32_t moistair_geometric_elevation_at_pressure(double pressure,
                                                  double *elevation,
                                                  moistair_error *error);
 
+// A state from what a psychrometer shows, by the equation of WMO-No. 8, x_w p = x_ws(t_w) p - A p (t - t_w), over water with
+// A (1 + 0.000944 t_w), and the saturation of the formulation. Its wet bulb is not the thermodynamic one. An ice bulb may read above the dry
+// bulb, where the vapor is supersaturated over ice.
+//
+// dry_bulb: [°C], -80 to 150; wet_bulb: [°C], -40 to 100; bulb: MOISTAIR_BULB_WATER or MOISTAIR_BULB_ICE, one must look; coefficient: A [1/K],
+// 0.0003 to 0.002, MOISTAIR_ASPIRATED_OVER_WATER or MOISTAIR_ASPIRATED_OVER_ICE for an aspirated instrument; basis: pressure and formulation;
+// state: output; error: may be null.
+// Returns 0, 101, 102, 103, 201, 202, 203 (negative vapor, more than the air holds, ice above its melting temperature; the error holds the
+// limits here), 31x (no reading is possible: colder than -40 °C, or too warm for ice).
+int32_t moistair_from_psychrometer(double dry_bulb,
+                                   double wet_bulb,
+                                   int32_t bulb,
+                                   double coefficient,
+                                   moistair_basis basis,
+                                   moistair_state *state,
+                                   moistair_error *error);
+
+// What the wetted bulb of a psychrometer would show in a state: the inverse of moistair_from_psychrometer.
+//
+// state: a state; bulb: MOISTAIR_BULB_WATER or MOISTAIR_BULB_ICE; coefficient: [1/K], 0.0003 to 0.002; wet_bulb: output [°C]; error: may be
+// null.
+// Returns 0, 101, 102, 103, 201, 202, 203, 31x (the wet bulb would lie outside -40 to 100 °C, ice melt, or water boil).
+int32_t moistair_psychrometer_reading(const moistair_state *state,
+                                      int32_t bulb,
+                                      double coefficient,
+                                      double *wet_bulb,
+                                      moistair_error *error);
+
+// The same air, with the same humidity ratio, at another pressure and temperature.
+//
+// state: a state; dry_bulb: [°C], -80 to 150; pressure: absolute [Pa], 20000 to 1100000; changed: output, may be state itself; error: may be
+// null.
+// Returns 0, 101, 102, 103, 201, 202, 203 (water would condense; the error holds the humidity ratio at saturation there).
+int32_t moistair_at_temperature_and_pressure(const moistair_state *state,
+                                             double dry_bulb,
+                                             double pressure,
+                                             moistair_state *changed,
+                                             moistair_error *error);
+
+// The same air, with the same humidity ratio and temperature, at another pressure.
+//
+// state: a state; pressure: absolute [Pa], 20000 to 1100000; changed: output, may be state itself; error: may be null.
+// Returns 0, 101, 102, 103, 201, 202, 203 (water would condense; the error holds the humidity ratio at saturation there).
+int32_t moistair_at_pressure(const moistair_state *state,
+                             double pressure,
+                             moistair_state *changed,
+                             moistair_error *error);
+
+// Dew or frost point of the air of a state at another pressure: the pressure dew point of a line, or the atmospheric one of air in it. Above
+// the temperature there it says that water condenses.
+//
+// state: a state; property: MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; pressure: absolute [Pa], 20000 to 1100000; temperature: output [°C];
+// error: may be null.
+// Returns 0, 101, 102, 103, 201, 202, 203, 31x (dry air, or outside -40 to 200 °C over liquid, -100 °C to melting over ice).
+int32_t moistair_saturation_temperature_at(const moistair_state *state,
+                                           int32_t property,
+                                           double pressure,
+                                           double *temperature,
+                                           moistair_error *error);
+
+// Dew or frost point after a change of pressure: from a pressure dew point to the atmospheric one, or back.
+//
+// property: what is given, MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; value: its value [°C]; basis: pressure that it belongs to, and
+// formulation; wanted: MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; pressure: the other, absolute [Pa], 20000 to 1100000; temperature: output
+// [°C]; error: may be null.
+// Returns 0, 101, 102, 103, 201, 202, 31x (ice above its melting temperature, water above boiling, or the result out of its range).
+int32_t moistair_saturation_temperature_after(int32_t property,
+                                              double value,
+                                              moistair_basis basis,
+                                              int32_t wanted,
+                                              double pressure,
+                                              double *temperature,
+                                              moistair_error *error);
+
 // Properties of many states at once: row by row the same results, bit for bit, as the calls for one state. A bad row costs only itself.
 //
 // rows: number of rows, 0 allowed; dry_bulb: [°C]; property: selector of the second property; second: its values; pressure: [Pa]; formulation: of
@@ -1102,6 +1205,19 @@ int32_t moistair_wet_stream_from_stream(const moistair_stream *stream,
                                         double ice,
                                         moistair_wet_stream *wet_stream,
                                         moistair_error *error);
+
+// Vapor and condensate in equilibrium at a temperature, from the water of all phases together: as much vapor as the air holds, the rest ice
+// below the melting temperature and liquid from there on (liquid down to -40 °C if supercooled).
+//
+// dry_bulb: [°C], -80 to 150; total_water: [kg/kg] of dry air, 0 to 10; freezing: MOISTAIR_FREEZING_EQUILIBRIUM or
+// MOISTAIR_FREEZING_SUPERCOOLED; basis: pressure and formulation; mixture: output; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_from_dry_bulb_and_water(double dry_bulb,
+                                         double total_water,
+                                         int32_t freezing,
+                                         moistair_basis basis,
+                                         moistair_air_with_condensate *mixture,
+                                         moistair_error *error);
 
 // Vapor, liquid and ice in equilibrium, from the enthalpy and the water of all phases together.
 //
@@ -1358,6 +1474,19 @@ int32_t moistair_tower_with_leaving_air(const moistair_state *entering,
                                         moistair_water_treatment treatment,
                                         moistair_tower_balance *balance,
                                         moistair_error *error);
+
+// Brings air to a pressure and temperature, by whatever machine (compressor with aftercooler, dryer, expansion), and lets its water come to
+// equilibrium there; below the melting temperature what condenses is ice. Pressures are absolute. Vessels under pressure can burst, condensate
+// freezes: codes for pressure equipment and licensed practice govern, this is no safety function.
+//
+// entering: the stream that enters; pressure: absolute [Pa], 20000 to 1100000; leaving_temperature: [°C], -80 to 150; done: output; error: may
+// be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_compression_to_pressure(const moistair_wet_stream *entering,
+                                         double pressure,
+                                         double leaving_temperature,
+                                         moistair_compressed *done,
+                                         moistair_error *error);
 
 // A channel of a kind in a raw unit, with no stuck rule, no hold, no gap rule.
 //

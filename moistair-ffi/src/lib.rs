@@ -23,10 +23,12 @@
 )]
 
 pub mod account;
+pub mod at_pressure;
 pub mod atmosphere;
 pub mod columns;
 mod memory;
 pub mod process;
+pub mod psychrometer;
 pub mod quantity;
 pub mod signal;
 pub mod state;
@@ -35,9 +37,11 @@ mod text;
 pub mod version;
 
 pub use account::*;
+pub use at_pressure::*;
 pub use atmosphere::*;
 pub use columns::*;
 pub use process::*;
+pub use psychrometer::*;
 pub use quantity::*;
 pub use signal::*;
 pub use state::*;

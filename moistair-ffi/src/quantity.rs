@@ -110,6 +110,10 @@ pub const MOISTAIR_TOWER_RANGE: i32 = 79;
 pub const MOISTAIR_TOTAL_WATER: i32 = 80;
 /// Specific enthalpy that a process leaves, with its condensate [J/kg].
 pub const MOISTAIR_LEAVING_ENTHALPY: i32 = 81;
+/// Wet bulb as a psychrometer reads it; over ice not above the melting temperature [°C].
+pub const MOISTAIR_PSYCHROMETER_WET_BULB: i32 = 82;
+/// Coefficient of a psychrometer, over water that at 0 °C [1/K].
+pub const MOISTAIR_PSYCHROMETER_COEFFICIENT: i32 = 83;
 
 /// Limits of a quantity as an input, both included.
 #[repr(C)]

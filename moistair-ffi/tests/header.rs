@@ -74,6 +74,8 @@ fn rendered() -> String {
         "quantity",
         "state",
         "atmosphere",
+        "psychrometer",
+        "at_pressure",
         "columns",
         "process/stream",
         "process/sensible",
@@ -82,6 +84,7 @@ fn rendered() -> String {
         "process/humidify",
         "process/mixing",
         "process/tower",
+        "process/compression",
         "signal",
         "account",
     ] {

@@ -64,6 +64,7 @@ words! {
     moistair_reheat, [12, 26, 36, 49], [35, 54], [0, 14, 37];
     moistair_humidified, [12], [], [0];
     moistair_apparatus, [], [], [];
+    moistair_compressed, [12], [], [0];
     moistair_books, [5], [], [];
     moistair_tower_water, [], [], [];
     moistair_water_treatment, [], [], [];
@@ -421,7 +422,19 @@ fn no_argument_upsets_an_export() {
     run!(exercise moistair_geometric_elevation_at_pressure: |c, out, e| (c.number(2e4, 2e5), out, e));
     run!(exercise moistair_from_dry_bulb: |c, out, e| let (property, value) = c.second();
         (c.number(-80.0, 150.0), property, value, c.basis(), out, e));
-    run!(exercise moistair_property: |c, out, e| let state = c.state(); (c.pointer(&state), c.selector(23), out, e));
+    run!(exercise moistair_from_psychrometer: |c, out, e| let dry = c.number(-15.0, 40.0);
+        (dry, dry - c.number(0.0, 6.0), c.selector(2), c.number(3e-4, 2e-3), c.basis(), out, e));
+    run!(exercise moistair_psychrometer_reading: |c, out, e| let air = c.state();
+        (c.pointer(&air), c.selector(2), c.number(3e-4, 2e-3), out, e));
+    run!(exercise moistair_at_pressure: |c, out, e| let air = c.state(); (c.pointer(&air), c.number(2e4, 1.1e6), out, e));
+    run!(exercise moistair_at_temperature_and_pressure: |c, out, e| let air = c.state();
+        (c.pointer(&air), c.number(-80.0, 150.0), c.number(2e4, 1.1e6), out, e));
+    let point = |c: &Caller| [MOISTAIR_DEW_POINT, MOISTAIR_FROST_POINT, c.selector(90)][c.below(3) as usize];
+    run!(exercise moistair_saturation_temperature_at: |c, out, e| let air = c.state();
+        (c.pointer(&air), point(c), c.number(2e4, 1.1e6), out, e));
+    run!(exercise moistair_saturation_temperature_after: |c, out, e|
+        (point(c), c.number(-60.0, 60.0), c.basis(), point(c), c.number(2e4, 1.1e6), out, e));
+    run!(exercise moistair_property: |c, out, e| let state = c.state(); (c.pointer(&state), c.selector(MOISTAIR_PROPERTY_COUNT), out, e));
     run!(exercise moistair_stream_from_mass_flow: |c, out, e| let air = c.state();
         (c.pointer(&air), c.number(0.0, 10.0), out, e));
     run!(exercise moistair_stream_from_volume_flow: |c, out, e| let air = c.state();
@@ -434,6 +447,10 @@ fn no_argument_upsets_an_export() {
         (c.pointer(&gas), c.number(0.0, 0.01), c.number(0.0, 0.01), out, e));
     run!(exercise moistair_from_enthalpy_and_water: |c, out, e|
         (c.number(-4e4, 2e5), c.number(0.0, 0.05), c.selector(2), c.basis(), out, e));
+    run!(exercise moistair_from_dry_bulb_and_water: |c, out, e|
+        (c.number(-80.0, 150.0), c.number(0.0, 0.05), c.selector(2), c.basis(), out, e));
+    run!(exercise moistair_compression_to_pressure: |c, out, e| let s = c.wet_stream();
+        (c.pointer(&s), c.number(2e4, 1.1e6), c.number(-40.0, 60.0), out, e));
     run!(exercise moistair_liquid_water_enthalpy: |c, out, e| (c.number(0.0, 200.0), c.basis(), out, e));
     run!(exercise moistair_saturated_steam_enthalpy: |c, out, e| (c.number(0.0, 200.0), out, e));
     run!(exercise moistair_sensible_to_temperature: |c, out, e| let s = c.stream();

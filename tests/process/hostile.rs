@@ -3,6 +3,7 @@
 use crate::checks::Random;
 use crate::support::*;
 use moistair_core::process::coil::{self, CondensateTemperature};
+use moistair_core::process::compression;
 use moistair_core::process::humidify::{self, Absorption, EvaporatingWater};
 use moistair_core::process::tower::{self, TowerWater, WaterTreatment};
 use moistair_core::process::{AirStream, Exchange, WetStream, mixing, reheat, sensible};
@@ -186,6 +187,28 @@ fn no_argument_breaks_a_process() {
             let made = AirWithCondensate::from_enthalpy_and_water(joules(x()), ratio(x()), freezing, first.basis());
             seen.take("equilibrium", made, |wet| outlet(&WetStream::new(*wet, flow(1.0)).unwrap(), &Exchange::none()));
         }
+
+        let compressed = compression::to_pressure(&other, Pressure::from_pascals(x()), celsius(x()));
+        seen.take("compression", compressed, |done| {
+            outlet(&done.leaving, &done.exchange);
+            assert!(done.condensate.kilograms_per_second() >= 0.0);
+        });
+        let (target, water) = (Pressure::from_pascals(x()), ratio(x()));
+        for freezing in [Freezing::Equilibrium, Freezing::Supercooled] {
+            let basis = second.basis().at_pressure(target);
+            let made = AirWithCondensate::from_dry_bulb_and_water(celsius(x()), water, freezing, basis);
+            seen.take("condensate at a temperature", made, |wet| {
+                outlet(&WetStream::new(*wet, flow(1.0)).unwrap(), &Exchange::none());
+            });
+        }
+        seen.take("air at another pressure", first.at_temperature_and_pressure(celsius(x()), target), |air| {
+            outlet(&stream(*air, 1.0).into(), &Exchange::none());
+        });
+        let points = [Quantity::DewPoint, Quantity::FrostPoint, Quantity::WetBulb];
+        let (given, wanted) = (points[(x().to_bits() % 3) as usize], points[(x().to_bits() % 3) as usize]);
+        seen.take("point at another pressure", first.saturation_temperature_at(given, target), |t| finite(&[*t]));
+        let after = saturation_temperature_after(given, x(), first.basis(), wanted, Pressure::from_pascals(x()));
+        seen.take("point after a change of pressure", after, |t| finite(&[*t]));
 
         let humid = |done: &humidify::Humidified| {
             outlet(&done.leaving, &done.exchange);

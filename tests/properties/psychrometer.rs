@@ -110,7 +110,7 @@ fn refusals_name_their_limits() {
             (Bulb::Ice, -10.0, -8.0),  // more vapor than liquid allows
         ] {
             match air(bulb, dry, wet, site) {
-                Err(Error::Unattainable { quantity: Quantity::PsychrometerReading, value, min, max }) => {
+                Err(Error::Unattainable { quantity: Quantity::PsychrometerWetBulb, value, min, max }) => {
                     assert!(value == wet && !(min <= wet && wet <= max), "{bulb:?} {dry} {wet}: {min} {max}");
                     assert!(min < max && air(bulb, dry, min, site).is_ok() && air(bulb, dry, max, site).is_ok());
                     let vapor = air(bulb, dry, min, site).unwrap().vapor_pressure().pascals();
@@ -120,7 +120,7 @@ fn refusals_name_their_limits() {
             }
         }
         let none = |bulb, dry, wet| air(bulb, dry, wet, site).unwrap_err();
-        let reason = |reason| Error::NoValue { quantity: Quantity::PsychrometerReading, reason };
+        let reason = |reason| Error::NoValue { quantity: Quantity::PsychrometerWetBulb, reason };
         assert_eq!(none(Bulb::Water, -45.0, -40.0), reason(NoValue::BelowSurfaceRange));
         assert_eq!(none(Bulb::Ice, 40.0, -1.0), reason(NoValue::AboveSurfaceRange));
         assert_eq!(none(Bulb::Water, 20.0, f64::NAN).code(), 201);
@@ -141,7 +141,7 @@ proptest! {
         let bulb = if ice { Bulb::Ice } else { Bulb::Water };
         let psychrometer = Psychrometer::with_coefficient(bulb, coefficient).unwrap();
         match air.psychrometer_reading(psychrometer) {
-            Err(error) => prop_assert_eq!(error.quantity(), Some(Quantity::PsychrometerReading)),
+            Err(error) => prop_assert_eq!(error.quantity(), Some(Quantity::PsychrometerWetBulb)),
             Ok(shown) => {
                 let back = MoistAir::from_psychrometer(psychrometer, shown, air.basis());
                 let back = back.map_err(|error| TestCaseError::fail(format!("{air:?} {shown:?} {error}")))?;

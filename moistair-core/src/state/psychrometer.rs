@@ -152,7 +152,7 @@ impl<S: Scalar> Psychrometer<S> {
 
     /// Readings that the bulb can have.
     fn range<M: Mixture<S>>(&self, pressure: S) -> (S, S) {
-        let (coldest, warmest) = Quantity::PsychrometerReading.limits();
+        let (coldest, warmest) = Quantity::PsychrometerWetBulb.limits();
         let warmest = match self.bulb {
             Bulb::Water => k(warmest),
             Bulb::Ice => M::melting_temperature(pressure),
@@ -189,7 +189,7 @@ impl<S: Scalar> MoistAir<S> {
         reading: PsychrometerReading<S>,
         basis: impl Into<Basis<S>>,
     ) -> Result<Self, Error> {
-        const QUANTITY: Quantity = Quantity::PsychrometerReading;
+        const QUANTITY: Quantity = Quantity::PsychrometerWetBulb;
         let basis = basis.into();
         let celsius = checked(Quantity::DryBulb, reading.dry_bulb.celsius())?;
         let wet_bulb = checked(QUANTITY, reading.wet_bulb.celsius())?;
@@ -242,6 +242,6 @@ impl<S: Scalar> MoistAir<S> {
             dry_bulb: self.dry_bulb(),
             wet_bulb: Temperature::from_celsius(wet_bulb),
         })
-        .map_err(|(reason, _)| Error::NoValue { quantity: Quantity::PsychrometerReading, reason })
+        .map_err(|(reason, _)| Error::NoValue { quantity: Quantity::PsychrometerWetBulb, reason })
     }
 }

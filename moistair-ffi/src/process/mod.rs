@@ -4,6 +4,7 @@
 //! burns: local codes and licensed practice govern.
 
 pub mod coil;
+pub mod compression;
 pub mod humidify;
 pub mod mixing;
 pub mod reheat;
@@ -12,6 +13,7 @@ pub mod stream;
 pub mod tower;
 
 pub use coil::*;
+pub use compression::*;
 pub use humidify::*;
 pub use mixing::*;
 pub use reheat::*;

@@ -240,6 +240,30 @@ pub unsafe extern "C" fn moistair_wet_stream_from_stream(
     unsafe { answer(wet_stream, error, call) }
 }
 
+/// Vapor and condensate in equilibrium at a temperature, from the water of all phases together: as much vapor as the air holds, the rest ice
+/// below the melting temperature and liquid from there on (liquid down to -40 °C if supercooled).
+///
+/// dry_bulb: [°C], -80 to 150; total_water: [kg/kg] of dry air, 0 to 10; freezing: MOISTAIR_FREEZING_EQUILIBRIUM or
+/// MOISTAIR_FREEZING_SUPERCOOLED; basis: pressure and formulation; mixture: output; error: may be null.
+/// Returns 0, 1xx, 2xx.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_from_dry_bulb_and_water(
+    dry_bulb: f64,
+    total_water: f64,
+    freezing: i32,
+    basis: moistair_basis,
+    mixture: *mut moistair_air_with_condensate,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        let freezing = self::freezing(freezing)?;
+        let (dry_bulb, water) = (celsius(dry_bulb), ratio(total_water));
+        Ok(AirWithCondensate::from_dry_bulb_and_water(dry_bulb, water, freezing, basis.to_core()?)?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(mixture, error, call) }
+}
+
 /// Vapor, liquid and ice in equilibrium, from the enthalpy and the water of all phases together.
 ///
 /// specific_enthalpy: [J/kg] of dry air; total_water: [kg/kg] of dry air, 0 to 10; freezing: MOISTAIR_FREEZING_EQUILIBRIUM or
