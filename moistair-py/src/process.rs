@@ -3,14 +3,16 @@
 use moistair_core::columns::{Column, NAN};
 use moistair_core::process::{self, AirStream, Exchange, WetStream};
 use moistair_core::{
-    AirWithCondensate, Basis, Density, Error, Formulation, Freezing, HeatFlow, HumidityRatio, MassFlow,
-    MoistAir as Air, Pressure, RelativeHumidity, SpecificEnthalpy, Temperature, VolumeFlow, liquid_water_enthalpy,
+    AirWithCondensate, Basis, Bulb, Density, Error, Formulation, Freezing, HeatFlow, HumidityRatio, MassFlow,
+    MoistAir as Air, Pressure, Psychrometer, PsychrometerReading, Quantity, RelativeHumidity, SpecificEnthalpy,
+    Temperature, VolumeFlow, liquid_water_enthalpy, saturation_temperature_after,
 };
 use process::coil::{Apparatus, CondensateTemperature, Cooling};
+use process::compression::Compressed;
 use process::humidify::{Absorption, EvaporatingWater, Humidified};
 use process::sensible::Sensible;
 use process::tower::{TowerBalance, TowerWater, WaterTreatment, WaterUse};
-use process::{books, coil, humidify, mixing, reheat, sensible, tower};
+use process::{books, coil, compression, humidify, mixing, reheat, sensible, tower};
 use pyo3::exceptions::PyTypeError;
 use pyo3::prelude::*;
 use pyo3::types::PyList;
@@ -69,6 +71,19 @@ impl Row<'_> {
 
     fn formulation(&mut self) -> Outcome<Formulation> {
         Formulation::from_code(self.code()?).ok_or(Failure::Arguments)
+    }
+
+    fn basis(&mut self) -> Outcome<Basis> {
+        Ok(Basis::new(self.pressure()?, self.formulation()?))
+    }
+
+    fn quantity(&mut self) -> Outcome<Quantity> {
+        Quantity::from_code(self.code()?).ok_or(Failure::Arguments)
+    }
+
+    fn psychrometer(&mut self) -> Outcome<Psychrometer> {
+        let bulb = Bulb::from_code(self.code()?).ok_or(Failure::Arguments)?;
+        Ok(Psychrometer::with_coefficient(bulb, self.number()?)?)
     }
 
     fn temperature(&mut self) -> Outcome<Temperature> {
@@ -215,6 +230,8 @@ emit_number!(
     VolumeFlow.cubic_meters_per_second,
     HumidityRatio.kilograms_per_kilogram,
     SpecificEnthalpy.joules_per_kilogram,
+    DewPoint.celsius,
+    FrostPoint.celsius,
     Temperature.celsius,
     TemperatureDifference.kelvins
 );
@@ -238,6 +255,7 @@ emit_fields! {
     Cooling, |x| x.entering, x.leaving, x.exchange, x.cooling_load, x.sensible, x.latent, x.condensate, f64::from(x.regime as i32),
         x.sensible_heat_ratio();
     Apparatus, |x| x.dew_point, x.bypass_factor;
+    Compressed, |x| x.leaving, x.exchange, x.condensate;
     reheat::Reheat, |x| x.cooling, x.heating, x.reheat(), x.reheat_fraction();
     mixing::Mixed, |x| x.leaving, x.exchange;
     Humidified, |x| x.leaving, x.exchange, x.evaporated, x.carried;
@@ -285,10 +303,26 @@ processes! {
     "wet_air", |r| r.wet_air()?;
     "wet_air.from_enthalpy_and_water", |r| {
         let (enthalpy, water, freezing) = (r.specific_enthalpy()?, r.humidity_ratio()?, r.freezing()?);
-        AirWithCondensate::from_enthalpy_and_water(enthalpy, water, freezing, Basis::new(r.pressure()?, r.formulation()?))?
+        AirWithCondensate::from_enthalpy_and_water(enthalpy, water, freezing, r.basis()?)?
     };
+    "wet_air.from_dry_bulb_and_water", |r| {
+        AirWithCondensate::from_dry_bulb_and_water(r.temperature()?, r.humidity_ratio()?, r.freezing()?, r.basis()?)?
+    };
+    "air.from_psychrometer", |r| {
+        let reading = PsychrometerReading { dry_bulb: r.temperature()?, wet_bulb: r.temperature()? };
+        Air::from_psychrometer(r.psychrometer()?, reading, r.basis()?)?
+    };
+    "air.psychrometer_reading", |r| r.air()?.psychrometer_reading(r.psychrometer()?)?.wet_bulb;
+    "air.at_pressure", |r| r.air()?.at_pressure(r.pressure()?)?;
+    "air.at_temperature_and_pressure", |r| r.air()?.at_temperature_and_pressure(r.temperature()?, r.pressure()?)?;
+    "air.dew_point_at", |r| r.air()?.dew_point_at(r.pressure()?)?;
+    "air.frost_point_at", |r| r.air()?.frost_point_at(r.pressure()?)?;
+    "saturation_temperature_after", |r| {
+        saturation_temperature_after(r.quantity()?, r.number()?, r.basis()?, r.quantity()?, r.pressure()?)?
+    };
+    "compression.to_pressure", |r| compression::to_pressure(&r.wet_stream()?, r.pressure()?, r.temperature()?)?;
     "liquid_water_enthalpy", |r| {
-        liquid_water_enthalpy(r.temperature()?, Basis::new(r.pressure()?, r.formulation()?))?
+        liquid_water_enthalpy(r.temperature()?, r.basis()?)?
     };
     "sensible.to_temperature", |r| sensible::to_temperature(&r.stream()?, r.temperature()?)?;
     "sensible.with_heat", |r| sensible::with_heat(&r.stream()?, r.heat_flow()?)?;

@@ -4,16 +4,19 @@ use core::hash::{Hash, Hasher};
 use std::hash::DefaultHasher;
 
 use moistair_core::columns::{Column, NAN, StateColumns};
-use moistair_core::{Basis, Error, Formulation, HumidityRatio, MoistAir as Air, Pressure, Quantity, Temperature};
+use moistair_core::{
+    Basis, Bulb, Error, Formulation, HumidityRatio, MoistAir as Air, Pressure, Psychrometer, Quantity, Temperature,
+};
 use numpy::{PyArray1, PyArrayDyn, PyArrayMethods, PyReadwriteArrayDyn, PyUntypedArrayMethods};
 use pyo3::CastIntoError;
 use pyo3::exceptions::{PyTypeError, PyValueError};
 use pyo3::prelude::*;
 use pyo3::sync::PyOnceLock;
-use pyo3::types::{PyDict, PyString, PyTuple, PyType};
+use pyo3::types::{PyDict, PyList, PyString, PyTuple, PyType};
 
 use crate::column::{self, Arguments, plain_number};
 use crate::error::{exception, identifier, internal, unknown_name};
+use crate::process;
 
 /// What fixes a state, as columns of one length; rows without a state hold NaN.
 pub struct States {
@@ -193,6 +196,157 @@ impl MoistAir {
         }
         let inputs = StateColumns { dry_bulb, property: quantity, second, pressure, formulation };
         Ok(Content::Many(States::compute(py, arguments.shape.clone(), arguments.rows, inputs)?).into())
+    }
+
+    /// A state from what a psychrometer shows, by the equation of WMO-No. 8 (coefficients from memory),
+    /// x_w p = x_ws(t_w) p − A p (t − t_w), over water with A (1 + 0.000 944 t_w), and the saturation of the formulation.
+    ///
+    /// The wet bulb of a psychrometer is not the thermodynamic one, `wet_bulb`, though an aspirated instrument comes within a few tenths of
+    /// a kelvin of it. An ice bulb may read above the dry bulb, where the vapor is supersaturated over ice.
+    ///
+    /// Parameters
+    /// ----------
+    /// dry_bulb, wet_bulb : float or array_like
+    ///     Readings, °C; the wet bulb −40 to 100.
+    /// pressure : float or array_like
+    ///     Absolute pressure, Pa.
+    /// bulb : {'water', 'ice'}
+    ///     What the wetted bulb is covered with; below the melting temperature it may be either, one must look.
+    /// coefficient : float or array_like, optional
+    ///     A, 1/K, 3e-4 to 2e-3 (over water that at 0 °C). By default that of an aspirated instrument, 3 to 5 m/s over shielded bulbs:
+    ///     6.53e-4 over water, 5.75e-4 over ice. About 8e-4 in a naturally ventilated screen, 1.2e-3 in still air (common practice, no
+    ///     source).
+    /// formulation : {'real_gas', 'ideal_gas'}
+    ///     As in the constructor.
+    ///
+    /// Raises
+    /// ------
+    /// UnattainableError
+    ///     Negative vapor, more than the air holds, or ice above its melting temperature.
+    /// NoValueError
+    ///     No reading is possible: air colder than −40 °C, or too warm for ice.
+    /// NotFiniteError, OutOfRangeError
+    ///     An input.
+    ///
+    /// Examples
+    /// --------
+    /// >>> import moistair
+    /// >>> air = moistair.MoistAir.from_psychrometer(dry_bulb=20.0, wet_bulb=15.0, pressure=101_325.0)
+    /// >>> round(air.relative_humidity, 3)
+    /// 0.587
+    #[staticmethod]
+    #[pyo3(signature = (*, dry_bulb, wet_bulb, pressure, bulb="water", coefficient=None, formulation="real_gas"))]
+    fn from_psychrometer<'py>(
+        py: Python<'py>,
+        dry_bulb: Bound<'py, PyAny>,
+        wet_bulb: Bound<'py, PyAny>,
+        pressure: Bound<'py, PyAny>,
+        bulb: &str,
+        coefficient: Option<Bound<'py, PyAny>>,
+        formulation: &str,
+    ) -> PyResult<Bound<'py, PyAny>> {
+        let (bulb, coefficient) = psychrometer(py, bulb, coefficient)?;
+        let formulation = number(py, formulation_named(formulation)?.code())?;
+        let arguments = [
+            ("dry_bulb", dry_bulb),
+            ("wet_bulb", wet_bulb),
+            ("bulb", bulb),
+            ("coefficient", coefficient),
+            ("pressure", pressure),
+            ("formulation", formulation),
+        ];
+        only_result(py, "air.from_psychrometer", "S", arguments)
+    }
+
+    /// What the wetted bulb of a psychrometer would show in this air, °C: the inverse of `from_psychrometer`.
+    ///
+    /// Parameters
+    /// ----------
+    /// bulb : {'water', 'ice'}
+    ///     What the wetted bulb is covered with.
+    /// coefficient : float or array_like, optional
+    ///     As in `from_psychrometer`.
+    ///
+    /// Raises
+    /// ------
+    /// NoValueError
+    ///     The reading would lie outside −40 to 100 °C, ice melt, or water boil.
+    ///
+    /// Examples
+    /// --------
+    /// >>> import moistair
+    /// >>> air = moistair.MoistAir(dry_bulb=20.0, relative_humidity=0.5, pressure=101_325.0)
+    /// >>> round(air.psychrometer_reading(), 2), round(air.wet_bulb, 2)
+    /// (13.85, 13.78)
+    #[pyo3(signature = (*, bulb="water", coefficient=None))]
+    fn psychrometer_reading<'py>(
+        slf: Bound<'py, Self>,
+        bulb: &str,
+        coefficient: Option<Bound<'py, PyAny>>,
+    ) -> PyResult<Bound<'py, PyAny>> {
+        let py = slf.py();
+        let (bulb, coefficient) = psychrometer(py, bulb, coefficient)?;
+        let arguments = [("air", slf.into_any()), ("bulb", bulb), ("coefficient", coefficient)];
+        only_result(py, "air.psychrometer_reading", "N", arguments)
+    }
+
+    /// This air at another pressure, Pa, with the same temperature and humidity ratio.
+    ///
+    /// Raises
+    /// ------
+    /// UnattainableError
+    ///     Water would condense: see `moistair.process.compression`.
+    /// NotFiniteError, OutOfRangeError
+    ///     The pressure.
+    ///
+    /// Examples
+    /// --------
+    /// >>> import moistair
+    /// >>> room = moistair.MoistAir(dry_bulb=20.0, relative_humidity=0.1, pressure=100_000.0)
+    /// >>> round(room.at_pressure(700_000.0).relative_humidity, 2)
+    /// 0.69
+    fn at_pressure<'py>(slf: Bound<'py, Self>, pressure: Bound<'py, PyAny>) -> PyResult<Bound<'py, PyAny>> {
+        let py = slf.py();
+        only_result(py, "air.at_pressure", "S", [("air", slf.into_any()), ("pressure", pressure)])
+    }
+
+    /// This air at another temperature, °C, and pressure, Pa, with the same humidity ratio.
+    ///
+    /// Raises
+    /// ------
+    /// UnattainableError
+    ///     Water would condense: see `moistair.process.compression`.
+    /// NotFiniteError, OutOfRangeError
+    ///     The temperature or the pressure.
+    #[pyo3(signature = (*, dry_bulb, pressure))]
+    fn at_temperature_and_pressure<'py>(
+        slf: Bound<'py, Self>,
+        dry_bulb: Bound<'py, PyAny>,
+        pressure: Bound<'py, PyAny>,
+    ) -> PyResult<Bound<'py, PyAny>> {
+        let py = slf.py();
+        let arguments = [("air", slf.into_any()), ("dry_bulb", dry_bulb), ("pressure", pressure)];
+        only_result(py, "air.at_temperature_and_pressure", "S", arguments)
+    }
+
+    /// Dew point of this air at another pressure, Pa: the pressure dew point of a compressed-air line, or the atmospheric one of air in it.
+    /// Above the temperature there it says that water condenses. °C, −40 and above; no value for dry air.
+    ///
+    /// Examples
+    /// --------
+    /// >>> import moistair
+    /// >>> outdoor = moistair.MoistAir(dry_bulb=20.0, relative_humidity=0.5, pressure=100_000.0)
+    /// >>> round(outdoor.dew_point_at(800_000.0), 1)
+    /// 45.5
+    fn dew_point_at<'py>(slf: Bound<'py, Self>, pressure: Bound<'py, PyAny>) -> PyResult<Bound<'py, PyAny>> {
+        let py = slf.py();
+        only_result(py, "air.dew_point_at", "N", [("air", slf.into_any()), ("pressure", pressure)])
+    }
+
+    /// Frost point of this air at another pressure, Pa: °C, −100 to the melting temperature. No value for dry air.
+    fn frost_point_at<'py>(slf: Bound<'py, Self>, pressure: Bound<'py, PyAny>) -> PyResult<Bound<'py, PyAny>> {
+        let py = slf.py();
+        only_result(py, "air.frost_point_at", "N", [("air", slf.into_any()), ("pressure", pressure)])
     }
 
     /// Dry-bulb temperature, °C; bit for bit as given.
@@ -837,6 +991,36 @@ fn property_named(name: &str) -> Option<Quantity> {
         quantity.is_property() && words.eq(name.bytes())
     };
     Quantity::ALL.iter().find(same).copied()
+}
+
+/// The code of what covers the bulb, and the coefficient: of an aspirated instrument unless another is given.
+fn psychrometer<'py>(
+    py: Python<'py>,
+    bulb: &str,
+    coefficient: Option<Bound<'py, PyAny>>,
+) -> PyResult<(Bound<'py, PyAny>, Bound<'py, PyAny>)> {
+    let bulb = match bulb {
+        "water" => Bulb::Water,
+        "ice" => Bulb::Ice,
+        _ => return Err(PyValueError::new_err(format!("bulb must be 'water' or 'ice', not {bulb:?}"))),
+    };
+    let aspirated = || number(py, Psychrometer::<f64>::aspirated(bulb).coefficient());
+    Ok((number(py, bulb.code())?, coefficient.map_or_else(aspirated, Ok)?))
+}
+
+fn number(py: Python<'_>, value: impl Into<f64>) -> PyResult<Bound<'_, PyAny>> {
+    Ok(value.into().into_pyobject(py)?.into_any())
+}
+
+/// Runs a process with one result.
+fn only_result<'py, const N: usize>(
+    py: Python<'py>,
+    name: &str,
+    layout: &str,
+    arguments: [(&str, Bound<'py, PyAny>); N],
+) -> PyResult<Bound<'py, PyAny>> {
+    let (labels, values): (Vec<_>, Vec<_>) = arguments.into_iter().unzip();
+    process::run(py, name, layout, PyList::new(py, labels)?.into_any(), values)?.0.get_item(0)
 }
 
 pub fn formulation_named(name: &str) -> PyResult<Formulation> {

@@ -9,7 +9,7 @@ import moistair
 import numpy as np
 import pytest
 from moistair import MoistAir, account, signal
-from moistair.process import AirStream, AirWithCondensate, WetStream, books, coil, humidify, mixing, reheat, sensible, tower
+from moistair.process import AirStream, AirWithCondensate, WetStream, books, coil, compression, humidify, mixing, reheat, sensible, tower
 from moistair.process import liquid_water_enthalpy
 from support import FORMULATIONS, FUZZ, SEA_LEVEL, SECOND, odd_numbers, random
 
@@ -20,7 +20,8 @@ def check_state(air):
             value = getattr(air, name)
         except moistair.NoValueError:
             continue
-        assert np.isfinite(value), (air, name, value)
+        assert np.isfinite(value).all() or air.shape, (air, name, value)
+        assert not np.isinf(value).any()
 
 
 @pytest.mark.parametrize("formulation", FORMULATIONS)
@@ -76,11 +77,11 @@ def arguments(function, rng, count):
 
 PROCESSES = [
     getattr(module, name)
-    for module in (coil, humidify, mixing, reheat, sensible, tower)
+    for module in (coil, compression, humidify, mixing, reheat, sensible, tower)
     for name in module.__all__
     if name[0].islower()
 ]
-PROCESSES += [liquid_water_enthalpy, AirWithCondensate.from_enthalpy_and_water]
+PROCESSES += [liquid_water_enthalpy, AirWithCondensate.from_enthalpy_and_water, AirWithCondensate.from_dry_bulb_and_water]
 
 
 @pytest.mark.parametrize("function", PROCESSES, ids=lambda function: f"{function.__module__}.{function.__name__}")
@@ -95,6 +96,34 @@ def test_processes(function):
     allowed = {0, 102, 201, 202, 203, 205, 206, 207, 301, 310, 311, 312, 313}
     assert set(np.unique(many.status).tolist()) <= allowed
     assert many.failed == np.count_nonzero(many.status)
+
+
+@pytest.mark.parametrize("formulation", FORMULATIONS)
+@pytest.mark.parametrize("bulb", ("water", "ice"))
+def test_psychrometers(bulb, formulation):
+    rng = random(36)
+    t, x, p, a = (odd_numbers(rng, FUZZ) for _ in range(4))
+    t, p = np.where(rng.random(FUZZ) < 0.7, 5.0, t), np.where(rng.random(FUZZ) < 0.7, SEA_LEVEL, p)
+    a = np.where(rng.random(FUZZ) < 0.7, 6e-4, a)
+    settings = {"bulb": bulb, "coefficient": a}
+    many = MoistAir.from_psychrometer(dry_bulb=t, wet_bulb=x, pressure=p, formulation=formulation, **settings)
+    assert many.failed == np.count_nonzero(many.status) and many.shape == (FUZZ,)
+    assert set(np.unique(many.status).tolist()) <= {0, 201, 202, 203, 311, 312, 313}
+    check_state(many)
+    assert many.psychrometer_reading(**settings).shape == (FUZZ,)
+
+
+def test_other_pressures():
+    rng = random(37)
+    air = streams(rng, FUZZ).air
+    t, p, q = (odd_numbers(rng, FUZZ) for _ in range(3))
+    p = np.where(rng.random(FUZZ) < 0.5, 700e3, p)
+    for changed in (air.at_pressure(p), air.at_temperature_and_pressure(dry_bulb=t, pressure=p)):
+        assert set(np.unique(changed.status).tolist()) <= {0, 201, 202, 203}
+    for name, wanted in (("dew_point", "frost_point"), ("frost_point", "dew_point")):
+        after = moistair.saturation_temperature_after(pressure=p, new_pressure=q, wanted=wanted, **{name: t})
+        assert not np.isinf(after).any()
+    assert not np.isinf(air.dew_point_at(p)).any() and not np.isinf(air.frost_point_at(p)).any()
 
 
 def test_books_of_anything():
@@ -141,9 +170,10 @@ def test_signals_and_totals():
         assert counts.samples == 200
         signal.to_core(raw, unit=channel.unit)
         signal.from_core(raw, unit=channel.unit)
-        moistair.pressure_at_elevation(raw)
-        for value in raw[:20].tolist():
-            try:
-                moistair.pressure_at_elevation(value)
-            except moistair.MoistAirError as error:
-                assert error.code in (201, 202)
+        for function in (moistair.pressure_at_elevation, moistair.temperature_at_elevation, moistair.elevation_at_pressure):
+            function(raw)
+            for value in raw[:20].tolist():
+                try:
+                    function(value)
+                except moistair.MoistAirError as error:
+                    assert error.code in (201, 202)

@@ -13,6 +13,7 @@ from moistair.process import (
     WetStream,
     books,
     coil,
+    compression,
     humidify,
     liquid_water_enthalpy,
     mixing,
@@ -49,6 +50,17 @@ CASES = {
     "wet_stream": lambda t, rh, x: WetStream(state(t, rh), dry_air_flow=1.0 + x),
     "wet_air.equilibrium": lambda t, rh, x: AirWithCondensate.from_enthalpy_and_water(
         specific_enthalpy=state(t, rh).specific_enthalpy, total_water=0.02 + 0.01 * x, pressure=SEA_LEVEL
+    ),
+    "wet_air.at_temperature": lambda t, rh, x: AirWithCondensate.from_dry_bulb_and_water(
+        dry_bulb=t, total_water=0.02 * (rh + x), pressure=SEA_LEVEL
+    ),
+    "compression.to_pressure": lambda t, rh, x: compression.to_pressure(
+        stream(t, rh, 1.0), pressure=2e5 + 6e5 * x, leaving_temperature=t - 10.0
+    ),
+    "compression.wet": lambda t, rh, x: compression.to_pressure(
+        compression.to_pressure(stream(t, rh, 1.0), pressure=8e5, leaving_temperature=5.0).leaving,
+        pressure=SEA_LEVEL,
+        leaving_temperature=20.0 * x,
     ),
     "liquid_water_enthalpy": lambda t, rh, x: liquid_water_enthalpy(water_temperature=t + 0.0 * rh, pressure=SEA_LEVEL + x),
     "sensible.to_temperature": lambda t, rh, x: sensible.to_temperature(stream(t, rh, 1.0), leaving_temperature=t + 10 * x),

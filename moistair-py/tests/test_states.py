@@ -172,6 +172,87 @@ def test_standard_atmosphere():
         moistair.pressure_at_elevation(np.array(20_000.0))
 
 
+def test_elevation_and_temperature_of_the_standard_atmosphere():
+    """ISO 2533:1975 and the US Standard Atmosphere 1976, figures from memory; at 20 km there is no value."""
+    table = [row for row in rows("standard_atmosphere.csv") if row["quantity"] in ("T", "p") and "20000" not in row["id"]]
+    compared = 0
+    for row in table:
+        geometric = row["id"].startswith("US76")
+        altitude, value = float(row["inputs"].partition("=")[2]), float(row["value"])
+        unit = 0.5 * 10.0 ** (math.floor(math.log10(value)) - int(row["sig"]) + 1)
+        if row["quantity"] == "T":
+            assert abs(moistair.temperature_at_elevation(altitude, geometric=geometric) + 273.15 - value) <= 1.000001 * unit
+        else:
+            found = moistair.elevation_at_pressure(value, geometric=geometric)
+            # half a unit of the print, over the least slope of the layer, 3.6 Pa/m, and the gas constant's 1.1e-6
+            assert abs(found - altitude) <= (unit + 1.1e-6 * value) / 3.5
+        compared += 1
+    assert compared == 28
+    many = moistair.elevation_at_pressure([101_325.0, 84_556.0, 300_000.0])
+    assert many[1] == moistair.elevation_at_pressure(84_556.0) and np.isnan(many[2])
+    assert moistair.elevation_at_pressure(101_325.0) == 0.0
+    with pytest.raises(moistair.OutOfRangeError) as caught:
+        moistair.elevation_at_pressure(np.array(300_000.0))
+    assert caught.value.quantity == "pressure" and 177e3 < caught.value.maximum < 178e3
+
+
+@pytest.mark.parametrize("formulation", FORMULATIONS)
+def test_transport(formulation):
+    """Air at 300 K of vanishing density: Lemmon & Jacobsen 2004, Table V. Numbers of room air: common practice, no source."""
+    thin = MoistAir(dry_bulb=26.85, humidity_ratio=0.0, pressure=20_000.0, formulation=formulation)
+    assert thin.dynamic_viscosity == pytest.approx(18.5230e-6, rel=1e-3)
+    assert thin.thermal_conductivity == pytest.approx(26.3529e-3, rel=1e-3)
+    room = MoistAir(dry_bulb=20.0, relative_humidity=0.5, pressure=SEA_LEVEL, formulation=formulation)
+    assert room.prandtl_number == pytest.approx(0.71, abs=0.02) and room.lewis_number == pytest.approx(0.85, abs=0.03)
+    assert room.schmidt_number == pytest.approx(room.prandtl_number * room.lewis_number, rel=1e-14)
+    assert room.vapor_diffusivity == pytest.approx(21.78e-6 * (293.15 / 273.15) ** 1.81, rel=1e-12)
+
+
+@pytest.mark.parametrize("formulation", FORMULATIONS)
+@pytest.mark.parametrize(("bulb", "coefficient"), [("water", 6.53e-4), ("ice", 5.75e-4)])
+def test_psychrometer(bulb, coefficient, formulation):
+    cold = {"water": 0.0, "ice": -20.0}[bulb]
+    dry, wet = np.array([10.0, 12.0, 15.0]) + cold, np.array([9.0, 10.5, 11.0]) + cold
+    common = {"pressure": SEA_LEVEL, "bulb": bulb, "formulation": formulation}
+    many = MoistAir.from_psychrometer(dry_bulb=dry, wet_bulb=wet, **common)
+    over = {"dew_point": wet} if bulb == "water" else {"frost_point": wet}
+    saturated = MoistAir(dry_bulb=wet, pressure=SEA_LEVEL, formulation=formulation, **over)
+    rise = 1.0 + 0.000944 * wet if bulb == "water" else 1.0
+    expected = saturated.vapor_pressure - coefficient * rise * SEA_LEVEL * (dry - wet)
+    assert many.vapor_pressure == pytest.approx(expected, rel=1e-9)
+    assert many.psychrometer_reading(bulb=bulb) == pytest.approx(wet, abs=1e-9)
+    for row in range(3):
+        one = MoistAir.from_psychrometer(dry_bulb=float(dry[row]), wet_bulb=float(wet[row]), **common)
+        assert bits(one.humidity_ratio) == bits(many.humidity_ratio[row])
+        assert type(one.psychrometer_reading(bulb=bulb)) is float
+    screen = many.psychrometer_reading(bulb=bulb, coefficient=[8e-4, 8e-4, 5.0])
+    assert (screen[:2] > wet[:2]).all() and np.isnan(screen[2])
+    with pytest.raises(moistair.UnattainableError) as caught:
+        MoistAir.from_psychrometer(dry_bulb=10.0, wet_bulb=10.5, pressure=SEA_LEVEL, formulation=formulation)
+    assert (caught.value.quantity, caught.value.maximum) == ("psychrometer_wet_bulb", 10.0)
+    with pytest.raises(ValueError, match="'water' or 'ice'"):
+        many.psychrometer_reading(bulb="snow")
+
+
+def test_other_pressures():
+    outdoor = MoistAir(dry_bulb=20.0, relative_humidity=0.5, pressure=100e3)
+    line = outdoor.at_temperature_and_pressure(dry_bulb=80.0, pressure=800e3)
+    assert (line.humidity_ratio, line.pressure, line.dry_bulb) == (outdoor.humidity_ratio, 800e3, 80.0)
+    assert outdoor.dew_point_at(800e3) == pytest.approx(line.dew_point, abs=1e-9)
+    assert outdoor.at_pressure(100e3) == outdoor
+    with pytest.raises(moistair.UnattainableError):
+        outdoor.at_pressure(800e3)
+    many = outdoor.dew_point_at([100e3, 800e3, 1.0])
+    assert many[1] == outdoor.dew_point_at(800e3) and np.isnan(many[2])
+    after = moistair.saturation_temperature_after
+    there = after(frost_point=-40.0, pressure=800e3, wanted="frost_point", new_pressure=100e3)
+    assert after(frost_point=there, pressure=100e3, wanted="frost_point", new_pressure=800e3) == pytest.approx(-40.0, abs=1e-9)
+    with pytest.raises(TypeError, match="exactly one"):
+        after(dew_point=1.0, frost_point=0.0, pressure=800e3, new_pressure=100e3)
+    with pytest.raises(moistair.NoValueError):
+        after(dew_point=3.0, pressure=800e3, wanted="dew_point", new_pressure=20e3)
+
+
 def test_versions():
     assert isinstance(moistair.NUMERICS_VERSION, int) and moistair.NUMERICS_VERSION >= 1
     assert moistair.__version__.count(".") == 2

@@ -12,6 +12,7 @@ dry air. Numbers and NumPy arrays go through the same calls.
 """
 
 from . import account, process, signal
+from ._at_pressure import saturation_temperature_after
 from ._core import (
     NUMERICS_VERSION,
     MoistAir,
@@ -51,6 +52,7 @@ __all__ = [
     "elevation_at_pressure",
     "pressure_at_elevation",
     "process",
+    "saturation_temperature_after",
     "signal",
     "temperature_at_elevation",
 ]

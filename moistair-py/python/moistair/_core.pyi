@@ -47,6 +47,7 @@ __version__: str
 _Array = NDArray[np.float64]
 _Codes = NDArray[np.int32]
 _T = TypeVar("_T", covariant=True)
+_Bulb = Union[Literal["water"], Literal["ice"]]
 _Formulation = Union[Literal["real_gas"], Literal["ideal_gas"]]
 
 @final
@@ -99,6 +100,56 @@ class MoistAir(Generic[_T]):
         density: Union[ArrayLike, None] = None,
         formulation: _Formulation = "real_gas",
     ) -> MoistAir[_Array]: ...
+    @overload
+    @staticmethod
+    def from_psychrometer(
+        *,
+        dry_bulb: float,
+        wet_bulb: float,
+        pressure: float,
+        bulb: _Bulb = "water",
+        coefficient: Union[float, None] = None,
+        formulation: _Formulation = "real_gas",
+    ) -> MoistAir[float]: ...
+    @overload
+    @staticmethod
+    def from_psychrometer(
+        *,
+        dry_bulb: ArrayLike,
+        wet_bulb: ArrayLike,
+        pressure: ArrayLike,
+        bulb: _Bulb = "water",
+        coefficient: Union[ArrayLike, None] = None,
+        formulation: _Formulation = "real_gas",
+    ) -> MoistAir[_Array]: ...
+    @overload
+    def psychrometer_reading(
+        self: MoistAir[float], *, bulb: _Bulb = "water", coefficient: Union[float, None] = None
+    ) -> float: ...
+    @overload
+    def psychrometer_reading(
+        self: MoistAir[Any], *, bulb: _Bulb = "water", coefficient: Union[ArrayLike, None] = None
+    ) -> _Array: ...
+    @overload
+    def at_pressure(self: MoistAir[float], pressure: float) -> MoistAir[float]: ...
+    @overload
+    def at_pressure(self: MoistAir[Any], pressure: ArrayLike) -> MoistAir[_Array]: ...
+    @overload
+    def at_temperature_and_pressure(
+        self: MoistAir[float], *, dry_bulb: float, pressure: float
+    ) -> MoistAir[float]: ...
+    @overload
+    def at_temperature_and_pressure(
+        self: MoistAir[Any], *, dry_bulb: ArrayLike, pressure: ArrayLike
+    ) -> MoistAir[_Array]: ...
+    @overload
+    def dew_point_at(self: MoistAir[float], pressure: float) -> float: ...
+    @overload
+    def dew_point_at(self: MoistAir[Any], pressure: ArrayLike) -> _Array: ...
+    @overload
+    def frost_point_at(self: MoistAir[float], pressure: float) -> float: ...
+    @overload
+    def frost_point_at(self: MoistAir[Any], pressure: ArrayLike) -> _Array: ...
     @property
     def dry_bulb(self) -> _T: ...
     @property

@@ -12,7 +12,7 @@ Results are estimates for engineering; they are not a safety function. Towers, s
 Legionella, wet surfaces grow mould, cold coils freeze, steam burns: local codes and licensed practice govern.
 """
 
-from . import books, coil, humidify, mixing, reheat, sensible, tower
+from . import books, coil, compression, humidify, mixing, reheat, sensible, tower
 from ._streams import AirStream, AirWithCondensate, Exchange, WetStream, liquid_water_enthalpy
 
 __all__ = [
@@ -22,6 +22,7 @@ __all__ = [
     "WetStream",
     "books",
     "coil",
+    "compression",
     "humidify",
     "liquid_water_enthalpy",
     "mixing",

@@ -179,6 +179,68 @@ class AirWithCondensate(Record, Generic[T]):
 
     @overload
     @staticmethod
+    def from_dry_bulb_and_water(
+        *,
+        dry_bulb: float,
+        total_water: float,
+        pressure: float,
+        freezing: Freezing = ...,
+        formulation: Formulation = ...,
+    ) -> AirWithCondensate[float]: ...
+    @overload
+    @staticmethod
+    def from_dry_bulb_and_water(
+        *,
+        dry_bulb: ArrayLike,
+        total_water: ArrayLike,
+        pressure: ArrayLike,
+        freezing: Freezing = ...,
+        formulation: Formulation = ...,
+    ) -> AirWithCondensate[Array]: ...
+    @staticmethod
+    def from_dry_bulb_and_water(
+        *,
+        dry_bulb: ArrayLike,
+        total_water: ArrayLike,
+        pressure: ArrayLike,
+        freezing: Freezing = "equilibrium",
+        formulation: Formulation = "real_gas",
+    ) -> AirWithCondensate[Any]:
+        """Vapor and condensate in equilibrium at a temperature, from the water of all phases together.
+
+        As much vapor as the air holds; the rest is ice below the melting temperature and liquid from there on (liquid down to
+        −40 °C if supercooled).
+
+        Parameters
+        ----------
+        dry_bulb : float or array_like
+            °C.
+        total_water : float or array_like
+            kg per kg of dry air.
+        pressure : float or array_like
+            Pa.
+        freezing : {'equilibrium', 'supercooled'}
+            Whether condensate below the melting temperature is ice.
+        formulation : {'real_gas', 'ideal_gas'}
+            As in `MoistAir`.
+
+        Raises
+        ------
+        NotFiniteError, OutOfRangeError
+            An input.
+        """
+        return run(
+            "wet_air.from_dry_bulb_and_water",
+            AirWithCondensate,
+            ("dry_bulb", dry_bulb),
+            ("total_water", total_water),
+            freezing_code(freezing),
+            ("pressure", pressure),
+            code(_FORMULATION, formulation, "formulation"),
+        )
+
+    @overload
+    @staticmethod
     def from_enthalpy_and_water(
         *,
         specific_enthalpy: float,
