@@ -277,7 +277,7 @@ impl MoistAir {
     /// >>> import moistair
     /// >>> air = moistair.MoistAir(dry_bulb=20.0, relative_humidity=0.5, pressure=101_325.0)
     /// >>> round(air.psychrometer_reading(), 2), round(air.wet_bulb, 2)
-    /// (13.85, 13.78)
+    /// (13.83, 13.78)
     #[pyo3(signature = (*, bulb="water", coefficient=None))]
     fn psychrometer_reading<'py>(
         slf: Bound<'py, Self>,
@@ -337,7 +337,7 @@ impl MoistAir {
     /// >>> import moistair
     /// >>> outdoor = moistair.MoistAir(dry_bulb=20.0, relative_humidity=0.5, pressure=100_000.0)
     /// >>> round(outdoor.dew_point_at(800_000.0), 1)
-    /// 45.5
+    /// 44.2
     fn dew_point_at<'py>(slf: Bound<'py, Self>, pressure: Bound<'py, PyAny>) -> PyResult<Bound<'py, PyAny>> {
         let py = slf.py();
         only_result(py, "air.dew_point_at", "N", [("air", slf.into_any()), ("pressure", pressure)])

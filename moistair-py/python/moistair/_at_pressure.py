@@ -86,7 +86,7 @@ def saturation_temperature_after(
     ...     dew_point=3.0, pressure=800_000.0, wanted="frost_point", new_pressure=101_325.0
     ... )
     >>> round(free, 1)
-    -20.4
+    -20.5
     """
     points = {"dew_point": dew_point, "frost_point": frost_point}
     given = [name for name, value in points.items() if value is not None]
