@@ -153,6 +153,26 @@ proptest! {
         }
     }
 
+    /// The same in single precision: to 1e-3 K of what double precision reads, and there and back to what the bits of the reading are worth.
+    #[test]
+    fn in_single_precision(celsius in -20.0..45.0_f32, share in 0.05..0.95_f32, ice in any::<bool>()) {
+        let bulb = if ice { Bulb::Ice } else { Bulb::Water };
+        let site = Basis::real_gas(Pressure::from_pascals(95_000.0_f32));
+        let humidity = RelativeHumidityOverLiquid::from_fraction(share);
+        let air = MoistAir::from_dry_bulb(Temperature::from_celsius(celsius), humidity, site).unwrap();
+        let double = MoistAir::from_dry_bulb(
+            Temperature::from_celsius(f64::from(celsius)),
+            HumidityRatio::from_kilograms_per_kilogram(f64::from(air.humidity_ratio().kilograms_per_kilogram())),
+            Basis::real_gas(Pressure::from_pascals(95_000.0_f64)),
+        ).unwrap();
+        let read = (air.psychrometer_reading(Psychrometer::aspirated(bulb)), double.psychrometer_reading(Psychrometer::aspirated(bulb)));
+        let (Ok(single), Ok(double)) = read else { return Ok(()) };
+        prop_assert!((f64::from(single.wet_bulb.celsius()) - double.wet_bulb.celsius()).abs() < 1e-3, "{single:?} {double:?}");
+        let back = MoistAir::from_psychrometer(Psychrometer::aspirated(bulb), single, site).unwrap();
+        let error = back.vapor_pressure().pascals() - air.vapor_pressure().pascals();
+        prop_assert!(error.abs() < 0.1, "{air:?} {back:?}");
+    }
+
     /// Any bits: a state, or an error that names what is wrong.
     #[test]
     fn any_bits(bits in prop::array::uniform4(any::<u64>()), near in prop::array::uniform4(0.0..1.0_f64), wild in 0..16_u32, ice in any::<bool>(), real in any::<bool>()) {

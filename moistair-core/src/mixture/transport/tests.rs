@@ -6,6 +6,7 @@ use std::println;
 use super::*;
 use crate::checks::{Table, Tally};
 use crate::mixture::{IdealGas, Mixture, RealGas};
+use crate::real::Lanes;
 use crate::state::property::tests::states;
 
 const RULES: &str = include_str!("../../../../tests/published/transport_mixing_rules.csv");
@@ -71,4 +72,45 @@ fn states_lie_between_their_components() {
         compared
     }
     println!("states compared: {} and {}", run::<RealGas<f64>>(), run::<IdealGas<f64>>());
+}
+
+/// Lanes have the bits of single numbers, single precision has its digits.
+#[test]
+fn in_every_arithmetic() {
+    let all: std::vec::Vec<_> = states::<RealGas<f64>>().collect();
+    let (mut compared, mut worst) = (0, 0.0_f64);
+    for chunk in all.chunks_exact(8) {
+        let pack = |part: fn(f64, f64, f64, f64) -> f64| {
+            Lanes::<f64, 8>(core::array::from_fn(|i| part(chunk[i].0, chunk[i].1, chunk[i].2, chunk[i].3.volume)))
+        };
+        let lanes = Transport::of(
+            pack(|celsius, _, _, _| celsius + 273.15),
+            pack(|_, pressure, _, _| pressure),
+            pack(|_, _, w, _| <RealGas<f64> as Mixture<f64>>::mole_fraction(w)),
+            pack(|_, _, _, volume| 1.0 / volume),
+            pack(|_, _, w, volume| w / volume),
+        );
+        for (i, (celsius, pressure, w, gas)) in chunk.iter().enumerate() {
+            let (kelvins, x) = (celsius + 273.15, <RealGas<f64> as Mixture<f64>>::mole_fraction(*w));
+            let one = Transport::of(kelvins, *pressure, x, 1.0 / gas.volume, w / gas.volume);
+            let single = Transport::of(
+                kelvins as f32,
+                *pressure as f32,
+                x as f32,
+                (1.0 / gas.volume) as f32,
+                (w / gas.volume) as f32,
+            );
+            for (lane, one, single) in [
+                (lanes.viscosity, one.viscosity, single.viscosity),
+                (lanes.conductivity, one.conductivity, single.conductivity),
+                (lanes.diffusivity, one.diffusivity, single.diffusivity),
+            ] {
+                assert_eq!(lane.0[i].to_bits(), one.to_bits());
+                worst = worst.max((f64::from(single) / one - 1.0).abs());
+                compared += 1;
+            }
+        }
+    }
+    println!("{compared} values in lanes; single precision at worst {worst:e} off");
+    assert!(compared > 15_000 && worst < 5e-6);
 }

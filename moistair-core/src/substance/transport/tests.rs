@@ -7,29 +7,65 @@ use std::println;
 use super::*;
 use crate::checks::{Table, Tally};
 use crate::substance::dry_air::{self as air, MOLAR_MASS, REDUCING_DENSITY, REDUCING_TEMPERATURE};
-use crate::substance::{DensityDerivatives, Fluid, TemperatureOrder, Terms};
+use crate::substance::water_vapor as steam;
+use crate::substance::{DensityDerivatives, Fluid, Jet, TemperatureOrder, Term, Terms, water};
 
 const AIR: &str = include_str!("../../../../tests/published/lemmon_jacobsen2004_air_transport.csv");
 const WATER: &str = include_str!("../../../../tests/published/r12_08_r15_11_water_transport.csv");
 
-fn residual(kelvins: f64, density: f64, of: TemperatureOrder) -> DensityDerivatives<f64> {
-    Terms::at(air::ideal(kelvins), &air::TERMS, REDUCING_TEMPERATURE / kelvins).residual(density / REDUCING_DENSITY, of)
+/// A fluid as published, for what its critical enhancement needs.
+struct Equation {
+    gas_constant: f64,
+    reducing_density: f64,
+    at: fn(f64, f64) -> Derivatives,
 }
 
-/// (∂p/∂ρ)_T of dry air, J/kg.
-fn stiffness(kelvins: f64, density: f64) -> f64 {
-    let part = residual(kelvins, density, TemperatureOrder::Value);
-    air::GAS_CONSTANT * kelvins * (1.0 + 2.0 * part.first + part.second)
+/// Density derivatives of φʳ, τφʳ_τ and τ²φʳ_ττ, and τ²φ°_ττ.
+struct Derivatives {
+    value: DensityDerivatives<f64>,
+    first: DensityDerivatives<f64>,
+    second: DensityDerivatives<f64>,
+    ideal: f64,
 }
 
-/// c_v and c_p of dry air, J/(kg K).
-fn heat_capacities(kelvins: f64, density: f64) -> (f64, f64) {
-    let value = residual(kelvins, density, TemperatureOrder::Value);
-    let first = residual(kelvins, density, TemperatureOrder::First);
-    let second = residual(kelvins, density, TemperatureOrder::Second);
-    let cv = -air::GAS_CONSTANT * (air::ideal(kelvins).second + second.value);
-    let tension = 1.0 + value.first - first.first;
-    (cv, cv + air::GAS_CONSTANT * tension * tension / (1.0 + 2.0 * value.first + value.second))
+impl Derivatives {
+    fn of<const L: usize>(ideal: Jet<f64>, terms: &'static [Term; L], tau: f64, delta: f64) -> Self {
+        let terms = Terms::at(ideal, terms, tau);
+        let part = |of| terms.residual(delta, of);
+        let [value, first, second] =
+            [TemperatureOrder::Value, TemperatureOrder::First, TemperatureOrder::Second].map(part);
+        Self { value, first, second, ideal: ideal.second }
+    }
+}
+
+const DRY_AIR: Equation = Equation {
+    gas_constant: air::GAS_CONSTANT,
+    reducing_density: REDUCING_DENSITY,
+    at: |kelvins, delta| Derivatives::of(air::ideal(kelvins), &air::TERMS, REDUCING_TEMPERATURE / kelvins, delta),
+};
+
+const WATER_VAPOR: Equation = Equation {
+    gas_constant: water::GAS_CONSTANT,
+    reducing_density: water::CRITICAL_DENSITY,
+    at: |kelvins, delta| {
+        Derivatives::of(steam::ideal(kelvins), &water::TERMS, water::CRITICAL_TEMPERATURE / kelvins, delta)
+    },
+};
+
+impl Equation {
+    /// (∂p/∂ρ)_T, J/kg.
+    fn stiffness(&self, kelvins: f64, density: f64) -> f64 {
+        let part = (self.at)(kelvins, density / self.reducing_density).value;
+        self.gas_constant * kelvins * (1.0 + 2.0 * part.first + part.second)
+    }
+
+    /// c_v and c_p, J/(kg K).
+    fn heat_capacities(&self, kelvins: f64, density: f64) -> (f64, f64) {
+        let of = (self.at)(kelvins, density / self.reducing_density);
+        let cv = -self.gas_constant * (of.ideal + of.second.value);
+        let tension = 1.0 + of.value.first - of.first.first;
+        (cv, cv + self.gas_constant * tension * tension / (1.0 + 2.0 * of.value.first + of.value.second))
+    }
 }
 
 /// The critical enhancement of the conductivity, W/(m K): Lemmon & Jacobsen 2004 Eqs. (7) to (11). Their table takes 3.78502 MPa, the
@@ -41,15 +77,16 @@ fn critical_enhancement(kelvins: f64, density: f64) -> f64 {
     if density == 0.0 {
         return 0.0;
     }
-    let susceptibility =
-        |kelvins| CRITICAL_PRESSURE * density / (REDUCING_DENSITY * REDUCING_DENSITY * stiffness(kelvins, density));
+    let susceptibility = |kelvins| {
+        CRITICAL_PRESSURE * density / (REDUCING_DENSITY * REDUCING_DENSITY * DRY_AIR.stiffness(kelvins, density))
+    };
     let excess = susceptibility(kelvins) - susceptibility(REFERENCE) * REFERENCE / kelvins;
     if excess <= 0.0 {
         return 0.0;
     }
     let correlation_length = 0.11e-9 * (excess / 0.055).powf(0.63 / 1.2415);
     let y = correlation_length / 0.31e-9;
-    let (cv, cp) = heat_capacities(kelvins, density);
+    let (cv, cp) = DRY_AIR.heat_capacities(kelvins, density);
     let omega = 2.0 / PI * ((cp - cv) / cp * y.atan() + cv / cp * y);
     let dilution = REDUCING_DENSITY / density;
     let background = 2.0 / PI * (1.0 - (-1.0 / (1.0 / y + y * y * dilution * dilution / 3.0)).exp());
@@ -107,4 +144,30 @@ fn critical_enhancement_of_dry_air_is_as_small_as_said() {
     println!("critical enhancement of dry air: {atmospheric:e} at 101 kPa, {compressed:e} at 1.1 MPa");
     assert!((3e-6..5e-6).contains(&atmospheric) && (4e-4..6.5e-4).contains(&compressed));
     assert!((-7..=150).all(|celsius| share(f64::from(celsius), 1.1e6) == 0.0) && share(-8.0, 1.1e6) > 0.0);
+}
+
+/// The critical enhancement of the conductivity of water over its background: R15-11 Eqs. (18) to (24), constants of Table 3 from memory.
+fn share_of_water(kelvins: f64, density: f64) -> f64 {
+    const REFERENCE: f64 = 1.5 * water::CRITICAL_TEMPERATURE;
+    let (reduced, delta) = (kelvins / water::CRITICAL_TEMPERATURE, density / water::CRITICAL_DENSITY);
+    let susceptibility = |kelvins| 22.064e6 / water::CRITICAL_DENSITY / WATER_VAPOR.stiffness(kelvins, density);
+    let excess = delta * (susceptibility(kelvins) - susceptibility(REFERENCE) * REFERENCE / kelvins);
+    let y = 0.13 / 0.40 * (excess.max(0.0) / 0.06).powf(0.630 / 1.239);
+    let (cv, cp) = WATER_VAPOR.heat_capacities(kelvins, density);
+    let inner =
+        (1.0 - cv / cp) * y.atan() + cv / cp * y - 1.0 + (-1.0 / (1.0 / y + y * y / (3.0 * delta * delta))).exp();
+    let background = water_vapor::transport(kelvins, density);
+    let enhancement =
+        177.8514 * delta * cp / water::GAS_CONSTANT * reduced / (background.viscosity * 1e6) * 2.0 / (PI * y) * inner;
+    enhancement * 1e-3 / background.conductivity
+}
+
+/// What `water_vapor.rs` says of the enhancement that it leaves out: saturated steam, and that of IAPWS-95 to 1 % (3.670858e-4 at 150 °C,
+/// computed with the general-purpose iapws package).
+#[test]
+fn critical_enhancement_of_vapor_is_as_small_as_said() {
+    let saturated = [(20.0, 0.0173140), (60.0, 0.130424), (100.0, 0.598170), (120.0, 1.12207), (150.0, 2.54808)];
+    let shares = saturated.map(|(celsius, density)| share_of_water(celsius + 273.15, density));
+    println!("critical enhancement of saturated steam, 20 to 150 °C: {shares:?}");
+    assert!((shares[4] / 3.670858e-4 - 1.0).abs() < 0.01 && shares.iter().all(|share| (0.0..4e-4).contains(share)));
 }

@@ -1,0 +1,209 @@
+//! Calls of C beside the same calls of the core: the same bits, whatever goes through structures and selectors.
+
+#![allow(clippy::unwrap_used, clippy::float_cmp, reason = "a test")]
+
+use core::ptr::null_mut;
+
+use moistair::*;
+use moistair_core::process::{AirStream, compression};
+use moistair_core::{
+    AirWithCondensate, Bulb, DewPoint, Formulation, Freezing, FrostPoint, HumidityRatio, Length, MassFlow, MoistAir,
+    Pressure, Psychrometer, PsychrometerReading, Temperature, saturation_point_after,
+};
+
+const FORMULATIONS: [(i32, Formulation); 2] =
+    [(MOISTAIR_REAL_GAS, Formulation::RealGas), (MOISTAIR_IDEAL_GAS, Formulation::IdealGas)];
+
+fn celsius(value: f64) -> Temperature {
+    Temperature::from_celsius(value)
+}
+
+fn pascals(value: f64) -> Pressure {
+    Pressure::from_pascals(value)
+}
+
+/// The one output of a call that succeeds.
+fn output<T: Copy>(zero: T, call: impl FnOnce(*mut T) -> i32) -> T {
+    let mut output = zero;
+    assert_eq!(call(&mut output), MOISTAIR_OK);
+    output
+}
+
+fn number(call: impl FnOnce(*mut f64) -> i32) -> f64 {
+    output(f64::NAN, call)
+}
+
+/// A structure of numbers with nothing in it.
+fn blank<T: Copy>() -> T {
+    // SAFETY: structures of numbers.
+    unsafe { core::mem::zeroed() }
+}
+
+fn same(state: &moistair_state, air: &MoistAir) {
+    let numbers = (state.dry_bulb, state.pressure, state.humidity_ratio, state.specific_enthalpy);
+    let (t, p, w) = (air.dry_bulb(), air.pressure(), air.humidity_ratio());
+    let of_core = (t.celsius(), p.pascals(), w.kilograms_per_kilogram(), air.specific_enthalpy().joules_per_kilogram());
+    assert_eq!(numbers, of_core);
+    assert_eq!(state.formulation, air.formulation().code());
+}
+
+#[test]
+fn standard_atmosphere() {
+    type Call = unsafe extern "C" fn(f64, *mut f64, *mut moistair_error) -> i32;
+    // SAFETY: valid places.
+    let of = |call: Call, value| number(|out| unsafe { call(value, out, null_mut()) });
+    let (height, pressure) = (Length::from_meters(1_600.0), pascals(84_000.0));
+    let pairs: [(Call, f64, f64); 6] = [
+        (moistair_pressure_at_elevation, 1_600.0, Pressure::at_elevation(height).unwrap().pascals()),
+        (
+            moistair_pressure_at_geometric_elevation,
+            1_600.0,
+            Pressure::at_geometric_elevation(height).unwrap().pascals(),
+        ),
+        (moistair_temperature_at_elevation, 1_600.0, Temperature::at_elevation(height).unwrap().celsius()),
+        (
+            moistair_temperature_at_geometric_elevation,
+            1_600.0,
+            Temperature::at_geometric_elevation(height).unwrap().celsius(),
+        ),
+        (moistair_elevation_at_pressure, 84e3, Length::elevation_at_pressure(pressure).unwrap().meters()),
+        (
+            moistair_geometric_elevation_at_pressure,
+            84e3,
+            Length::geometric_elevation_at_pressure(pressure).unwrap().meters(),
+        ),
+    ];
+    for (call, value, expected) in pairs {
+        assert_eq!(of(call, value), expected);
+    }
+}
+
+#[test]
+fn psychrometer() {
+    for (code, formulation) in FORMULATIONS {
+        for (bulb, selector, coefficient, dry, wet) in [
+            (Bulb::Water, MOISTAIR_BULB_WATER, MOISTAIR_ASPIRATED_OVER_WATER, 20.0, 15.0),
+            (Bulb::Ice, MOISTAIR_BULB_ICE, MOISTAIR_ASPIRATED_OVER_ICE, -5.0, -7.0),
+        ] {
+            let basis = moistair_basis { pressure: 95e3, formulation: code, reserved: 0 };
+            let reading = PsychrometerReading { dry_bulb: celsius(dry), wet_bulb: celsius(wet) };
+            let of_core = moistair_core::Basis::new(pascals(95e3), formulation);
+            let air = MoistAir::from_psychrometer(Psychrometer::aspirated(bulb), reading, of_core).unwrap();
+            // SAFETY: valid places.
+            let state = output(blank::<moistair_state>(), |out| unsafe {
+                moistair_from_psychrometer(dry, wet, selector, coefficient, basis, out, null_mut())
+            });
+            same(&state, &air);
+            // SAFETY: valid places.
+            let shown =
+                number(|out| unsafe { moistair_psychrometer_reading(&state, selector, coefficient, out, null_mut()) });
+            assert_eq!(shown, air.psychrometer_reading(Psychrometer::aspirated(bulb)).unwrap().wet_bulb.celsius());
+        }
+    }
+    let mut error: moistair_error = blank();
+    let basis = moistair_basis { pressure: 95e3, formulation: MOISTAIR_REAL_GAS, reserved: 0 };
+    // SAFETY: valid places.
+    let status = unsafe {
+        let coefficient = MOISTAIR_ASPIRATED_OVER_WATER;
+        moistair_from_psychrometer(15.0, 20.0, MOISTAIR_BULB_WATER, coefficient, basis, &mut blank(), &mut error)
+    };
+    assert_eq!((status, error.quantity), (203, MOISTAIR_PSYCHROMETER_WET_BULB));
+    assert_eq!((error.value, error.max), (20.0, 15.0));
+}
+
+#[test]
+fn other_pressures() {
+    for (code, formulation) in FORMULATIONS {
+        let basis = moistair_basis { pressure: 101_325.0, formulation: code, reserved: 0 };
+        let of_core = moistair_core::Basis::new(pascals(101_325.0), formulation);
+        let ratio = HumidityRatio::from_kilograms_per_kilogram;
+        let air = MoistAir::from_dry_bulb(celsius(25.0), ratio(0.01), of_core).unwrap();
+        // SAFETY: valid places.
+        let state = output(blank::<moistair_state>(), |out| unsafe {
+            moistair_from_dry_bulb(25.0, MOISTAIR_HUMIDITY_RATIO, 0.01, basis, out, null_mut())
+        });
+        // SAFETY: valid places.
+        let compressed = output(blank::<moistair_state>(), |out| unsafe {
+            moistair_at_temperature_and_pressure(&state, 90.0, 8e5, out, null_mut())
+        });
+        same(&compressed, &air.at_temperature_and_pressure(celsius(90.0), pascals(8e5)).unwrap());
+        // SAFETY: valid places.
+        let thin =
+            output(blank::<moistair_state>(), |out| unsafe { moistair_at_pressure(&state, 5e4, out, null_mut()) });
+        same(&thin, &air.at_pressure(pascals(5e4)).unwrap());
+        // SAFETY: valid places.
+        let dew_point = number(|out| unsafe {
+            moistair_saturation_temperature_at(&state, MOISTAIR_DEW_POINT, 8e5, out, null_mut())
+        });
+        assert_eq!(dew_point, air.dew_point_at(pascals(8e5)).unwrap().celsius());
+        let line = of_core.at_pressure(pascals(8e5));
+        let free: FrostPoint = saturation_point_after(DewPoint::from_celsius(3.0), line, pascals(1e5)).unwrap();
+        // SAFETY: valid places.
+        let after = number(|out| unsafe {
+            let line = moistair_basis { pressure: 8e5, ..basis };
+            moistair_saturation_temperature_after(
+                MOISTAIR_DEW_POINT,
+                3.0,
+                line,
+                MOISTAIR_FROST_POINT,
+                1e5,
+                out,
+                null_mut(),
+            )
+        });
+        assert_eq!(after, free.celsius());
+
+        let wet =
+            AirWithCondensate::from_dry_bulb_and_water(celsius(-5.0), ratio(0.01), Freezing::Equilibrium, of_core)
+                .unwrap();
+        // SAFETY: valid places.
+        let mixture = output(blank::<moistair_air_with_condensate>(), |out| unsafe {
+            moistair_from_dry_bulb_and_water(-5.0, 0.01, MOISTAIR_FREEZING_EQUILIBRIUM, basis, out, null_mut())
+        });
+        same(&mixture.air, &wet.air());
+        assert_eq!((mixture.liquid, mixture.ice), (0.0, wet.ice().kilograms_per_kilogram()));
+
+        let intake = AirStream::new(air, MassFlow::from_kilograms_per_second(2.0)).unwrap();
+        let done = compression::to_pressure(&intake.into(), pascals(8e5), celsius(30.0)).unwrap();
+        let stream = moistair_stream { air: state, dry_air_flow: 2.0 };
+        // SAFETY: valid places.
+        let line = unsafe {
+            let entering = output(blank::<moistair_wet_stream>(), |out| {
+                moistair_wet_stream_from_stream(&stream, 0.0, 0.0, out, null_mut())
+            });
+            output(blank::<moistair_compressed>(), |out| {
+                moistair_compression_to_pressure(&entering, 8e5, 30.0, out, null_mut())
+            })
+        };
+        same(&line.leaving.mixture.air, &done.separated().air());
+        assert_eq!(line.condensate, done.condensate.kilograms_per_second());
+        assert_eq!(line.exchange.heat, done.exchange.heat.watts());
+        assert!(line.condensate > 0.0);
+    }
+}
+
+/// Each of the new properties by its selector, beside the typed reader of the core.
+#[test]
+fn transport() {
+    for (code, formulation) in FORMULATIONS {
+        let basis = moistair_core::Basis::new(pascals(101_325.0), formulation);
+        let air = MoistAir::from_dry_bulb(celsius(60.0), DewPoint::from_celsius(40.0), basis).unwrap();
+        let basis = moistair_basis { pressure: 101_325.0, formulation: code, reserved: 0 };
+        // SAFETY: valid places.
+        let state = output(blank::<moistair_state>(), |out| unsafe {
+            moistair_from_dry_bulb(60.0, MOISTAIR_DEW_POINT, 40.0, basis, out, null_mut())
+        });
+        for (selector, expected) in [
+            (MOISTAIR_DYNAMIC_VISCOSITY, air.dynamic_viscosity().pascal_seconds()),
+            (MOISTAIR_THERMAL_CONDUCTIVITY, air.thermal_conductivity().watts_per_meter_kelvin()),
+            (MOISTAIR_VAPOR_DIFFUSIVITY, air.vapor_diffusivity().square_meters_per_second()),
+            (MOISTAIR_PRANDTL_NUMBER, air.prandtl_number()),
+            (MOISTAIR_SCHMIDT_NUMBER, air.schmidt_number()),
+            (MOISTAIR_LEWIS_NUMBER, air.lewis_number()),
+        ] {
+            // SAFETY: valid places.
+            let value = number(|out| unsafe { moistair_property(&state, selector, out, null_mut()) });
+            assert_eq!(value, expected, "{selector}");
+        }
+    }
+}
