@@ -74,7 +74,7 @@ impl<S: Scalar> Temperature<S> {
 
 impl<S: Scalar> Length<S> {
     /// The elevation, as geopotential altitude, at which the standard atmosphere has a pressure: the inverse of [`Pressure::at_elevation`],
-    /// to 1e-10 of a meter or so. Of a barometer's reading it is the pressure altitude, off the true one by 300 m in strong weather.
+    /// to 1e-10 of a meter or so. Of a barometer's reading it is the pressure altitude, off the true one by 250 m in strong weather.
     ///
     /// # Errors
     /// [`Error::NotFinite`]; [`Error::OutOfRange`] outside 22.6 kPa (11 km) to 177.7 kPa (−5 km).

@@ -84,7 +84,7 @@ pub fn temperature_at_elevation<'py>(
 }
 
 /// The elevation at which the standard atmosphere (ISO 2533:1975) has a pressure: of a barometer, the pressure altitude, off the true
-/// one by 300 m in strong weather.
+/// one by 250 m in strong weather.
 ///
 /// Parameters
 /// ----------

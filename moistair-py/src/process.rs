@@ -379,7 +379,9 @@ pub fn run<'py>(
     if let Some(items) = plain {
         return run_once(py, process, layout, &items?);
     }
-    let (sources, names, flat) = flatten(py, &labels.extract::<Vec<String>>()?, &values)?;
+    let labels = labels.extract::<Vec<String>>()?;
+    let named = named_formulation(&labels, &values);
+    let (sources, names, flat) = flatten(py, &labels, &values)?;
     let names: Vec<&str> = names.iter().map(String::as_str).collect();
     let arguments = Arguments::read(py, &names, &flat)?;
     let table = Table { sources, columns: arguments.columns()? };
@@ -390,7 +392,13 @@ pub fn run<'py>(
     }
     let mut results = Results::new(layout, arguments.rows)?;
     py.detach(|| results.fill(process, &table));
-    results.finish(py, table.formulation(), &arguments.shape)
+    results.finish(py, table.formulation().or(named).unwrap_or_default(), &arguments.shape)
+}
+
+/// The formulation that is given by name, where none comes with a state.
+fn named_formulation(labels: &[String], values: &[Bound<'_, PyAny>]) -> Option<Formulation> {
+    let place = labels.iter().position(|label| label == "formulation")?;
+    values.get(place)?.extract::<f64>().ok().and_then(|code| Formulation::from_code(code as i32))
 }
 
 /// A plain number or one state; `None` for what holds an array.
@@ -506,13 +514,13 @@ impl Table<'_> {
     }
 
     /// Of the first state.
-    fn formulation(&self) -> Formulation {
+    fn formulation(&self) -> Option<Formulation> {
         let of = |source: &Source| match source {
             Source::Number => None,
             Source::One(air) => Some(air.formulation()),
             Source::Many(formulation) => Some(*formulation),
         };
-        self.sources.iter().find_map(of).unwrap_or_default()
+        self.sources.iter().find_map(of)
     }
 }
 

@@ -230,6 +230,8 @@ def test_psychrometer(bulb, coefficient, formulation):
     with pytest.raises(moistair.UnattainableError) as caught:
         MoistAir.from_psychrometer(dry_bulb=10.0, wet_bulb=10.5, pressure=SEA_LEVEL, formulation=formulation)
     assert (caught.value.quantity, caught.value.maximum) == ("psychrometer_wet_bulb", 10.0)
+    none = MoistAir.from_psychrometer(dry_bulb=[10.0], wet_bulb=[30.0], pressure=SEA_LEVEL, formulation=formulation)
+    assert (none.failed, none.formulation, none.status.tolist()) == (1, formulation, [203])
     with pytest.raises(ValueError, match="'water' or 'ice'"):
         many.psychrometer_reading(bulb="snow")
 

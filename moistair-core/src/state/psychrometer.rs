@@ -165,7 +165,7 @@ impl<S: Scalar> MoistAir<S> {
     /// A state from what a psychrometer shows, by the equation of WMO-No. 8 (coefficients from memory) with the saturation of this library.
     ///
     /// Range: wet bulb −40 to 100 °C; the coefficients are made for weather. Accuracy: that of the instrument, where 0.1 K in the wet
-    /// bulb are 1 % of relative humidity at 20 °C and 3 % at −10 °C. An ice bulb may read above the dry bulb, where the vapor is
+    /// bulb are 0.7 % of relative humidity at 20 °C and 3 % at −10 °C. An ice bulb may read above the dry bulb, where the vapor is
     /// supersaturated over ice.
     ///
     /// # Errors
