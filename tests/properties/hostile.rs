@@ -102,4 +102,23 @@ proptest! {
             }
         }
     }
+
+    /// The other way, and its temperature: an elevation of the layer, or an error that names the pressure.
+    #[test]
+    fn any_barometer(pascals in any_number(22_000.0, 180_000.0), meters in any_number(-5_000.0, 11_000.0)) {
+        let pressure = Pressure::from_pascals(pascals);
+        for elevation in [Length::elevation_at_pressure(pressure), Length::geometric_elevation_at_pressure(pressure)] {
+            match elevation {
+                Ok(elevation) => prop_assert!((-5e3..=11e3).contains(&elevation.meters())),
+                Err(error) => prop_assert!(error.quantity() == Some(Quantity::Pressure)),
+            }
+        }
+        let length = Length::from_meters(meters);
+        for temperature in [Temperature::at_elevation(length), Temperature::at_geometric_elevation(length)] {
+            match temperature {
+                Ok(temperature) => prop_assert!((-57.0..=48.0).contains(&temperature.celsius())),
+                Err(error) => prop_assert!(error.quantity() == Some(Quantity::Elevation)),
+            }
+        }
+    }
 }
