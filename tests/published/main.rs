@@ -8,4 +8,5 @@ mod airport_weather;
 mod atmosphere;
 mod handbook;
 mod helmholtz;
+mod publications;
 mod transport;

@@ -4,4 +4,5 @@
 #[path = "../../moistair-core/src/checks.rs"]
 pub mod checks;
 pub mod helmholtz_reference;
+pub mod publications;
 pub mod toolchain;
