@@ -1,6 +1,7 @@
 //! Publications beside those that the library stands on: each text against its own check values, then against one another.
 
-use moistair_tests::checks::{Table, Tally};
+use moistair_core::{Basis, HumidityRatio, MoistAir, Pressure, Temperature};
+use moistair_tests::checks::{Table, Tally, half_of_last_decimal};
 use moistair_tests::publications::{cipm_2007, comparisons, henry, saturation};
 
 /// G7-04 Table 6.
@@ -49,7 +50,7 @@ fn saturation_pressures_of_the_handbook() {
         let kelvins = row.number("t_C") + 273.15;
         let text =
             if row.text("condensed_phase") == "ice" { saturation::sublimation_pressure } else { saturation::region_4 };
-        let tolerance = moistair_tests::checks::half_of_last_decimal(row.text("p_ws_kPa"));
+        let tolerance = half_of_last_decimal(row.text("p_ws_kPa"));
         tally.within(
             row.text("condensed_phase"),
             row.text("t_C"),
@@ -100,4 +101,25 @@ fn publications_beside_each_other() {
         }
     }
     assert_eq!(wrong, 0, "claims that do not hold, or are stale");
+}
+
+/// The ideal gas saturates by Hyland and Wexler 1983: their equations here, in a text of their own, to rounding.
+#[test]
+fn ideal_gas_saturates_by_hyland_wexler() {
+    let basis: Basis = Basis::ideal_gas(Pressure::from_kilopascals(101.325));
+    let dry = HumidityRatio::from_kilograms_per_kilogram(0.0);
+    let mut tally = Tally::new("ideal gas, Hyland-Wexler 1983");
+    for celsius in (-80..=150).filter(|&celsius| celsius != 0) {
+        let t = f64::from(celsius);
+        let air = MoistAir::from_dry_bulb(Temperature::from_celsius(t), dry, basis).unwrap();
+        let (text, phase): (fn(f64) -> f64, _) = if celsius < 0 {
+            (saturation::hyland_wexler_over_ice, "over ice")
+        } else {
+            (saturation::hyland_wexler_over_liquid, "over liquid")
+        };
+        let expected = text(t + 273.15);
+        let computed = air.saturation_pressure().unwrap().pascals();
+        tally.within(phase, &celsius.to_string(), computed, expected, 1e-13 * expected);
+    }
+    tally.finish(230);
 }
