@@ -167,15 +167,29 @@ fn saturated(celsius: f64, pascals: f64, formulation: Formulation) -> MoistAir {
     air(celsius, pascals, DegreeOfSaturation::from_fraction(1.0), formulation)
 }
 
-/// Density of moist air, where CIPM-2007 holds.
+/// States of the real gas where CIPM-2007 holds.
+fn weighing(humidity: impl Iterator<Item = f64> + Clone) -> impl Iterator<Item = (Place, MoistAir)> {
+    pairs(half_degrees((15.0, 27.0)), steps((60e3, 110e3), 10)).flat_map(move |(t, p)| {
+        humidity.clone().map(move |humidity| {
+            let air = air(t, p, RelativeHumidity::from_fraction(humidity), Formulation::RealGas);
+            (Place::at(t).under(p).humid(humidity), air)
+        })
+    })
+}
+
+/// Density of moist air.
 fn density() -> Vec<Comparison> {
-    let grid = || {
-        pairs(half_degrees((15.0, 27.0)), steps((60e3, 110e3), 10))
-            .flat_map(|(t, p)| steps((0.0, 1.0), 10).map(move |humidity| (t, p, humidity)))
+    let humid = || steps((0.0, 1.0), 10);
+    let density = |air: &MoistAir| air.density().kilograms_per_cubic_meter();
+    let at_same_humidity = |(place, air): (Place, MoistAir)| {
+        let (t, p) = (air.dry_bulb().celsius(), air.pressure().pascals());
+        let humidity = air.relative_humidity().unwrap().fraction();
+        (place, relative(cipm_2007::density(t, p, humidity), density(&air)))
     };
-    let state = |(t, p, humidity)| air(t, p, RelativeHumidity::from_fraction(humidity), Formulation::RealGas);
-    let density = |air: MoistAir| air.density().kilograms_per_cubic_meter();
-    let place = |(t, p, humidity)| Place::at(t).under(p).humid(humidity);
+    let at_same_vapor = |(place, air): (Place, MoistAir)| {
+        let (t, p, x) = (air.dry_bulb().celsius(), air.pressure().pascals(), air.water_mole_fraction().fraction());
+        (place, relative(cipm_2007::density_at_mole_fraction(t, p, x), density(&air)))
+    };
     let heading = Heading {
         quantity: "density at the same relative humidity",
         publication: "CIPM-2007",
@@ -183,16 +197,12 @@ fn density() -> Vec<Comparison> {
         range: "15 to 27 °C, 60 to 110 kPa, dry to saturated",
         unit: Unit::Relative,
     };
-    let same_humidity =
-        grid().map(|at| (place(at), relative(cipm_2007::density(at.0, at.1, at.2), density(state(at)))));
-    let same_vapor = grid().map(|at| {
-        let air = state(at);
-        let x = air.water_mole_fraction().fraction();
-        (place(at), relative(cipm_2007::density_at_mole_fraction(at.0, at.1, x), density(air)))
-    });
+    let dry = Heading { quantity: "density of dry air", range: "15 to 27 °C, 60 to 110 kPa", ..heading };
     vec![
-        heading.over(2.2e-5, same_humidity),
-        Heading { quantity: "density at the same mole fraction of water", ..heading }.over(2.2e-5, same_vapor),
+        heading.over(2.2e-5, weighing(humid()).map(at_same_humidity)),
+        Heading { quantity: "density at the same mole fraction of water", ..heading }
+            .over(2.2e-5, weighing(humid()).map(at_same_vapor)),
+        dry.over(2e-5, weighing(std::iter::once(0.0)).map(at_same_vapor)),
     ]
 }
 

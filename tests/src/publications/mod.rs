@@ -7,4 +7,4 @@ pub mod henry;
 pub mod saturation;
 pub mod wmo;
 
-pub use comparisons::{Comparison, Place, comparisons};
+pub use comparisons::{Comparison, Place, Unit, comparisons};

@@ -1,5 +1,5 @@
 //! Humidity of the weather services: WMO-No. 8 (Guide to Instruments and Methods of Observation), part I, chapter 4, annex 4.B.
-//! All figures from memory.
+//! All figures from memory; no printed value is at hand: how near they come to IAPWS-95 is what checks them.
 
 /// Saturation pressure over liquid water, Pa; published for −45 to 60 °C.
 #[must_use]
