@@ -1,0 +1,157 @@
+//! ACCURACY.md: its sections, its text, and what it promises.
+
+use std::fmt::Write;
+
+use moistair_tests::publications::comparisons;
+
+use crate::sample::Point;
+use crate::tables;
+
+/// The published equations beside each other, differences that no computing makes smaller.
+fn publications() -> String {
+    let mut text = String::from(
+        "\n## Publications beside each other\n\n\
+         How far publications lie apart: no computing makes these smaller. The figures of CIPM-2007 and WMO-No. 8 are from memory.\n\n\
+         | quantity | publication | beside | range | largest difference | where | points |\n|---|---|---|---|---|---|---|\n",
+    );
+    for row in comparisons() {
+        let _ = writeln!(
+            text,
+            "| {} | {} | {} | {} | {:.2e} {} | {} | {} |",
+            row.quantity, row.publication, row.beside, row.range, row.largest, row.unit, row.place, row.points
+        );
+    }
+    text
+}
+
+/// One line of a table.
+#[derive(Clone, Debug)]
+pub struct Row {
+    /// The property.
+    pub name: String,
+    /// In what the error is told.
+    pub unit: &'static str,
+    /// The greatest error, and where.
+    pub worst: Option<(f64, Point)>,
+    /// What 99.9 % of the points do not exceed.
+    pub most_of: f64,
+    /// Points compared.
+    pub count: usize,
+    /// Points where one side has a value and the other has none, or takes the other surface.
+    pub unlike: usize,
+    /// What the greatest error must not exceed.
+    pub budget: Option<f64>,
+    /// Whatever else belongs to the line.
+    pub note: String,
+}
+
+/// One table.
+#[derive(Clone, Debug)]
+pub struct Section {
+    /// What against what, where.
+    pub title: String,
+    /// What it means.
+    pub text: String,
+    /// Its lines.
+    pub rows: Vec<Row>,
+}
+
+/// All of it.
+#[derive(Clone, Debug)]
+pub struct Page {
+    points: usize,
+    sections: Vec<Section>,
+}
+
+const HEAD: &str = "\
+# Accuracy
+
+Made by `tests/accuracy`; do not edit. Every figure is measured, none typed.
+
+**What is the truth?** IAPWS G8-10 in full (`Formulation::Helmholtz`), which reproduces the digits that the standard prints (`tests/published`, the unit
+tests of `moistair-core`). The published uncertainty of the standard itself is larger than anything in the first tables: see G8-10, section 5, and the
+last section here, where publications differ from each other.
+
+**How.** Points of low discrepancy (Halton): dry bulb evenly, pressure evenly in its logarithm, vapor from dry to saturated (over liquid; over ice below
+−40 °C; to a humidity ratio of 10 above boiling). *Greatest*: over all points, with the place (dry bulb, pressure, share of the vapor that saturates).
+*99.9 %*: what all but a thousandth of the points keep. *Unlike*: points where only one side has a value, or where the wet bulb is on the other side of its
+step at the melting temperature. Errors per mass of dry air up to a water mole fraction of 0.3, per mass of moist air above.
+";
+
+impl Page {
+    /// Measures everything.
+    pub fn measure(points: usize) -> Self {
+        Self { points, sections: tables::all(points) }
+    }
+
+    /// The page.
+    pub fn text(&self) -> String {
+        let mut text = format!("{HEAD}\nThis page: {} points for each table, fewer where said.\n", self.points);
+        for section in &self.sections {
+            let _ = write!(text, "\n## {}\n\n{}\n\n", section.title, section.text);
+            let noted = section.rows.iter().any(|row| !row.note.is_empty());
+            let budgeted = section.rows.iter().any(|row| row.budget.is_some());
+            let mut head = String::from("| property | in | greatest | where | 99.9 % | points | unlike |");
+            let mut line = String::from("|---|---|---|---|---|---|---|");
+            for (wanted, name) in [(budgeted, "budget"), (noted, "condition number")] {
+                if wanted {
+                    let _ = write!(head, " {name} |");
+                    line.push_str("---|");
+                }
+            }
+            let _ = writeln!(text, "{head}\n{line}");
+            for row in &section.rows {
+                let (greatest, place) = row
+                    .worst
+                    .map_or((String::from("–"), String::new()), |(worst, at)| (format!("{worst:.2e}"), at.to_string()));
+                let _ = write!(
+                    text,
+                    "| {} | {} | {greatest} | {place} | {:.1e} | {} | {} |",
+                    row.name, row.unit, row.most_of, row.count, row.unlike
+                );
+                if budgeted {
+                    let _ = write!(text, " {} |", row.budget.map_or(String::new(), |budget| format!("{budget:e}")));
+                }
+                if noted {
+                    let _ = write!(text, " {} |", row.note);
+                }
+                text.push('\n');
+            }
+        }
+        text.push_str(&publications());
+        text
+    }
+
+    /// No greatest error exceeds its budget, and every budget has been put to the test.
+    pub fn check_budgets(&self) {
+        let rows = self.sections.iter().flat_map(|section| section.rows.iter().map(move |row| (section, row)));
+        for (section, row) in rows {
+            if let Some(budget) = row.budget {
+                let (worst, at) = row.worst.expect("a budget is put to the test");
+                assert!(worst <= budget, "{}: {} is {worst:e} off at {at}, more than {budget:e}", section.title, row.name);
+            }
+        }
+    }
+
+    /// Nothing is worse than a committed page says, to the digits that it prints.
+    pub fn check_against(&self, committed: &str) {
+        for section in &self.sections {
+            let heading = format!("## {}", section.title);
+            let table = committed.split(&heading).nth(1).unwrap_or_else(|| panic!("ACCURACY.md has no “{heading}”"));
+            let table = table.split("\n## ").next().unwrap_or(table);
+            for row in &section.rows {
+                let Some((worst, at)) = row.worst else { continue };
+                let start = format!("| {} |", row.name);
+                let line = table.lines().find(|line| line.starts_with(&start));
+                let line = line.unwrap_or_else(|| panic!("ACCURACY.md: no {} under “{heading}”", row.name));
+                let printed: f64 = line.split('|').nth(3).and_then(|cell| cell.trim().parse().ok()).unwrap_or(0.0);
+                assert!(
+                    worst <= printed * 1.005,
+                    "{}: {} is {worst:e} off at {at}; ACCURACY.md says {printed:e}",
+                    section.title,
+                    row.name
+                );
+            }
+        }
+    }
+}
