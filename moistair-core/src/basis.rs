@@ -1,10 +1,12 @@
 //! On what a state stands: a pressure and a formulation.
 
 use crate::Scalar;
+use crate::bounds::Quantity;
 use crate::quantity::Pressure;
 
 /// How moist air is described.
 #[derive(Clone, Copy, Debug, Default, PartialEq, Eq, Hash)]
+#[non_exhaustive]
 #[repr(i32)]
 pub enum Formulation {
     /// Dry air and water vapor as a virial mixture in equilibrium with IAPWS-95 liquid or R10-06 ice, after IAPWS G8-10.
@@ -13,6 +15,11 @@ pub enum Formulation {
     /// The perfect-gas relations of ASHRAE Fundamentals, chapter 1, with Hyland–Wexler saturation: for reproducing
     /// contract and textbook numbers.
     IdealGas = 1,
+    /// IAPWS G8-10 as published: the Helmholtz energies of IAPWS-95 water and of dry air of Lemmon et al. 2000 with all their terms,
+    /// in equilibrium with IAPWS-95 liquid or R10-06 ice. Slower by an order of magnitude; −80 to 200 °C, 20 kPa to 5 MPa. The yardstick of
+    /// the real gas, and for compressed and for hot air. Only with the Cargo feature `helmholtz`, a default.
+    #[cfg(any(feature = "helmholtz", test))]
+    Helmholtz = 2,
 }
 
 impl Formulation {
@@ -28,7 +35,35 @@ impl Formulation {
         match code {
             0 => Some(Self::RealGas),
             1 => Some(Self::IdealGas),
+            #[cfg(any(feature = "helmholtz", test))]
+            2 => Some(Self::Helmholtz),
             _ => None,
+        }
+    }
+
+    /// The formulations of this build, in the order of their codes.
+    pub const ALL: &'static [Self] = &[
+        Self::RealGas,
+        Self::IdealGas,
+        #[cfg(any(feature = "helmholtz", test))]
+        Self::Helmholtz,
+    ];
+
+    /// The declared range of a quantity as an input with this formulation, both ends included: that of [`Quantity::limits`], and for the
+    /// Helmholtz formulation to 200 °C and 5 MPa.
+    ///
+    /// ```
+    /// # use moistair_core::{Formulation, Quantity};
+    /// assert_eq!(Formulation::RealGas.limits(Quantity::Pressure), (20e3, 1.1e6));
+    /// # #[cfg(feature = "helmholtz")]
+    /// assert_eq!(Formulation::Helmholtz.limits(Quantity::Pressure), (20e3, 5e6));
+    /// ```
+    #[must_use]
+    pub const fn limits(self, quantity: Quantity) -> (f64, f64) {
+        match self {
+            Self::RealGas | Self::IdealGas => quantity.limits(),
+            #[cfg(any(feature = "helmholtz", test))]
+            Self::Helmholtz => quantity.limits_of_helmholtz(),
         }
     }
 }
@@ -61,6 +96,12 @@ impl<S: Scalar> Basis<S> {
     /// The ideal-gas (handbook) basis.
     pub const fn ideal_gas(pressure: Pressure<S>) -> Self {
         Self::new(pressure, Formulation::IdealGas)
+    }
+
+    /// The Helmholtz basis, IAPWS G8-10 as published.
+    #[cfg(any(feature = "helmholtz", test))]
+    pub const fn helmholtz(pressure: Pressure<S>) -> Self {
+        Self::new(pressure, Formulation::Helmholtz)
     }
 
     /// Absolute pressure.
@@ -96,6 +137,11 @@ macro_rules! with_mixture {
             }
             $crate::Formulation::IdealGas => {
                 type $mixture<T> = $crate::mixture::IdealGas<T>;
+                $body
+            }
+            #[cfg(any(feature = "helmholtz", test))]
+            $crate::Formulation::Helmholtz => {
+                type $mixture<T> = $crate::mixture::Helmholtz<T>;
                 $body
             }
         }

@@ -28,7 +28,7 @@ macro_rules! quantities {
                 match self { $(Self::$variant => $unit,)* }
             }
 
-            /// The declared range of an input, both ends included.
+            /// The declared range of an input, both ends included; [`crate::Formulation::limits`] gives those of each formulation.
             #[must_use]
             pub const fn limits(self) -> (f64, f64) {
                 match self { $(Self::$variant => ($min, $max),)* }
@@ -58,7 +58,7 @@ pub const PROPERTY_COUNT: i32 = 35;
 const INFINITY: f64 = f64::INFINITY;
 
 quantities! {
-    /// Dry-bulb temperature. The range of states; the formulations themselves reach 193.15 to 473.15 K (IAPWS G8-10).
+    /// Dry-bulb temperature. The range of states; IAPWS G8-10 itself reaches 193.15 to 473.15 K, as the Helmholtz formulation does.
     DryBulb = 0, "dry bulb", "°C", -80.0, 150.0;
     /// Absolute total pressure.
     Pressure = 1, "pressure", "Pa", 20_000.0, 1_100_000.0;
@@ -108,6 +108,14 @@ quantities! {
     SpecificEntropy = 23, "specific entropy", "J/(kg K)", -INFINITY, INFINITY;
     /// Speed of sound at constant composition.
     SpeedOfSound = 24, "speed of sound", "m/s", 0.0, INFINITY;
+    /// Isochoric heat capacity per mass of dry air, at constant humidity ratio.
+    SpecificHeatAtConstantVolume = 25, "specific heat at constant volume", "J/(kg K)", 0.0, INFINITY;
+    /// Chemical potential of the water in the gas, per mass of water.
+    ChemicalPotentialOfWater = 26, "chemical potential of water", "J/kg", -INFINITY, INFINITY;
+    /// Chemical potential of the dry air in the gas, per mass of dry air.
+    ChemicalPotentialOfDryAir = 27, "chemical potential of dry air", "J/kg", -INFINITY, INFINITY;
+    /// Fugacity of the water in the gas.
+    FugacityOfWater = 28, "fugacity of water", "Pa", 0.0, INFINITY;
     /// Dynamic viscosity.
     DynamicViscosity = 29, "dynamic viscosity", "Pa s", 0.0, INFINITY;
     /// Thermal conductivity.
@@ -165,6 +173,27 @@ quantities! {
 }
 
 impl Quantity {
+    /// The range of an input of the Helmholtz formulation: wider where 200 °C and 5 MPa make it so.
+    #[cfg(any(feature = "helmholtz", test))]
+    pub(crate) const fn limits_of_helmholtz(self) -> (f64, f64) {
+        let (min, max) = self.limits();
+        match self {
+            Self::DryBulb
+            | Self::WetBulb
+            | Self::WetBulbOverLiquid
+            | Self::LeavingTemperature
+            | Self::ApparatusDewPoint
+            | Self::CondensateTemperature => (min, 200.0),
+            Self::Pressure => (min, 5_000_000.0),
+            Self::VaporPressure => (min, 4_750_000.0),
+            Self::AbsoluteHumidity => (min, 10.0),
+            Self::SpecificEnthalpy => (-120_000.0, max),
+            Self::SpecificVolume => (0.009, max),
+            Self::Density => (min, 110.0),
+            _ => (min, max),
+        }
+    }
+
     /// Whether the quantity is a property that can be read from a state.
     #[must_use]
     pub const fn is_property(self) -> bool {

@@ -2,6 +2,7 @@
 
 use core::fmt;
 
+use crate::basis::Formulation;
 use crate::bounds::Quantity;
 use crate::real::k;
 
@@ -164,9 +165,21 @@ impl Error {
     }
 }
 
-/// `value` if it is finite and within the declared range of its quantity.
+/// `value` if it is finite and within the declared range of its quantity, where that does not depend on the formulation.
 pub(crate) fn checked<S: crate::Scalar>(quantity: Quantity, value: S) -> Result<S, Error> {
-    let (min, max) = quantity.limits();
+    between(quantity, value, quantity.limits())
+}
+
+/// `value` if it is finite and within the range of its quantity that a formulation declares.
+pub(crate) fn checked_for<S: crate::Scalar>(
+    formulation: Formulation,
+    quantity: Quantity,
+    value: S,
+) -> Result<S, Error> {
+    between(quantity, value, formulation.limits(quantity))
+}
+
+fn between<S: crate::Scalar>(quantity: Quantity, value: S, (min, max): (f64, f64)) -> Result<S, Error> {
     if !value.is_finite() {
         return Err(Error::NotFinite { quantity });
     }

@@ -189,6 +189,14 @@ quantity!(
     SpecificEntropy: from_joules_per_kilogram_kelvin, joules_per_kilogram_kelvin
 );
 quantity!(
+    /// Chemical potential per mass of the component that it belongs to.
+    ChemicalPotential: from_joules_per_kilogram, joules_per_kilogram; from_kilojoules_per_kilogram, kilojoules_per_kilogram, 1_000.0
+);
+quantity!(
+    /// Fugacity, a vapor pressure corrected for the forces between molecules.
+    Fugacity: from_pascals, pascals; from_kilopascals, kilopascals, 1_000.0
+);
+quantity!(
     /// A speed, such as that of sound.
     Speed: from_meters_per_second, meters_per_second
 );

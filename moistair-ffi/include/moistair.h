@@ -102,7 +102,7 @@
 // Number of property selectors: they run from 0 to one less. Later versions may add to them.
 #define MOISTAIR_PROPERTY_COUNT 35
 
-// Dry-bulb temperature. The range of states; the formulations themselves reach 193.15 to 473.15 K (IAPWS G8-10) [°C].
+// Dry-bulb temperature. The range of states; IAPWS G8-10 itself reaches 193.15 to 473.15 K, as the Helmholtz formulation does [°C].
 #define MOISTAIR_DRY_BULB 0
 
 // Absolute total pressure [Pa].
@@ -177,6 +177,18 @@
 
 // Speed of sound at constant composition [m/s].
 #define MOISTAIR_SPEED_OF_SOUND 24
+
+// Isochoric heat capacity per mass of dry air, at constant humidity ratio [J/(kg K)].
+#define MOISTAIR_SPECIFIC_HEAT_AT_CONSTANT_VOLUME 25
+
+// Chemical potential of the water in the gas, per mass of water, on the datum of enthalpy and entropy; none for dry air [J/kg].
+#define MOISTAIR_CHEMICAL_POTENTIAL_OF_WATER 26
+
+// Chemical potential of the dry air in the gas, per mass of dry air, on the datum of enthalpy and entropy [J/kg].
+#define MOISTAIR_CHEMICAL_POTENTIAL_OF_DRY_AIR 27
+
+// Fugacity of the water in the gas; zero for dry air [Pa].
+#define MOISTAIR_FUGACITY_OF_WATER 28
 
 // Dynamic viscosity [Pa s].
 #define MOISTAIR_DYNAMIC_VISCOSITY 29
@@ -261,6 +273,9 @@
 
 // The perfect-gas relations of the ASHRAE handbook, for reproducing contract and textbook numbers.
 #define MOISTAIR_IDEAL_GAS 1
+
+// IAPWS G8-10 as published, all terms: -80 to 200 °C, to 5 MPa; slower. An unknown selector in a library that was built without it.
+#define MOISTAIR_HELMHOLTZ 2
 
 // The wetted bulb is covered with water, supercooled below the melting temperature.
 #define MOISTAIR_BULB_WATER 0
@@ -563,9 +578,9 @@ typedef struct {
 
 // On what a state stands.
 typedef struct {
-    // Absolute pressure [Pa], 20000 to 1100000.
+    // Absolute pressure [Pa], 20000 to 1100000 (to 5000000 with MOISTAIR_HELMHOLTZ).
     double pressure;
-    // MOISTAIR_REAL_GAS or MOISTAIR_IDEAL_GAS.
+    // MOISTAIR_REAL_GAS, MOISTAIR_IDEAL_GAS or MOISTAIR_HELMHOLTZ.
     int32_t formulation;
     // Set to 0; not read.
     int32_t reserved;
@@ -598,7 +613,7 @@ typedef struct {
     double specific_heat;
     // p v / (R T) of the mixture [1].
     double compressibility_factor;
-    // MOISTAIR_REAL_GAS or MOISTAIR_IDEAL_GAS.
+    // MOISTAIR_REAL_GAS, MOISTAIR_IDEAL_GAS or MOISTAIR_HELMHOLTZ.
     int32_t formulation;
     // 0.
     int32_t reserved;
@@ -984,15 +999,25 @@ const char *moistair_quantity_name(int32_t quantity);
 // The unit of a quantity, such as "kg/kg": static, UTF-8. Empty for an unknown selector.
 const char *moistair_quantity_unit(int32_t quantity);
 
-// The limits of a quantity as an input, in its unit.
+// The limits of a quantity as an input, in its unit, with the real and the ideal gas.
 //
 // quantity: selector of any quantity; limits: output; error: may be null.
 // Returns 0, 101, 102, 103.
 int32_t moistair_quantity_limits(int32_t quantity, moistair_limits *limits, moistair_error *error);
 
+// The limits of a quantity as an input, in its unit, with a formulation: the Helmholtz formulation reaches 200 °C and 5 MPa.
+//
+// formulation: MOISTAIR_REAL_GAS, MOISTAIR_IDEAL_GAS or MOISTAIR_HELMHOLTZ; quantity: selector of any quantity; limits: output; error: may be
+// null.
+// Returns 0, 101, 102, 103.
+int32_t moistair_formulation_limits(int32_t formulation,
+                                    int32_t quantity,
+                                    moistair_limits *limits,
+                                    moistair_error *error);
+
 // A state from its dry bulb and any second property.
 //
-// dry_bulb: [°C], -80 to 150; property: selector of the second property, one that fixes a state (humidity ratio, relative humidity,
+// dry_bulb: [°C], -80 to 150 (to 200 with MOISTAIR_HELMHOLTZ); property: selector of the second property, one that fixes a state (humidity ratio, relative humidity,
 // wet bulb, dew point, specific enthalpy, …); value: its value in its unit; basis: pressure and formulation; state: output; error: may
 // be null.
 // Returns 0, 101, 102, 103, 201, 202, 203 (no state has the value here; the error holds the limits).
@@ -1102,7 +1127,7 @@ int32_t moistair_psychrometer_reading(const moistair_state *state,
 
 // The same air, with the same humidity ratio, at another pressure and temperature.
 //
-// state: a state; dry_bulb: [°C], -80 to 150; pressure: absolute [Pa], 20000 to 1100000; changed: output, may be state itself; error: may be
+// state: a state; dry_bulb: [°C]; pressure: absolute [Pa]; changed: output, may be state itself; error: may be
 // null.
 // Returns 0, 101, 102, 103, 201, 202, 203 (water would condense; the error holds the humidity ratio at saturation there).
 int32_t moistair_at_temperature_and_pressure(const moistair_state *state,
@@ -1113,7 +1138,7 @@ int32_t moistair_at_temperature_and_pressure(const moistair_state *state,
 
 // The same air, with the same humidity ratio and temperature, at another pressure.
 //
-// state: a state; pressure: absolute [Pa], 20000 to 1100000; changed: output, may be state itself; error: may be null.
+// state: a state; pressure: absolute [Pa]; changed: output, may be state itself; error: may be null.
 // Returns 0, 101, 102, 103, 201, 202, 203 (water would condense; the error holds the humidity ratio at saturation there).
 int32_t moistair_at_pressure(const moistair_state *state,
                              double pressure,
@@ -1123,7 +1148,7 @@ int32_t moistair_at_pressure(const moistair_state *state,
 // Dew or frost point of the air of a state at another pressure: the pressure dew point of a line, or the atmospheric one of air in it. Above
 // the temperature there it says that water condenses.
 //
-// state: a state; property: MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; pressure: absolute [Pa], 20000 to 1100000; temperature: output [°C];
+// state: a state; property: MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; pressure: absolute [Pa]; temperature: output [°C];
 // error: may be null.
 // Returns 0, 101, 102, 103, 201, 202, 203, 31x (dry air, or outside -40 to 200 °C over liquid, -100 °C to melting over ice).
 int32_t moistair_saturation_temperature_at(const moistair_state *state,
@@ -1135,7 +1160,7 @@ int32_t moistair_saturation_temperature_at(const moistair_state *state,
 // Dew or frost point after a change of pressure: from a pressure dew point to the atmospheric one, or back.
 //
 // property: what is given, MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; value: its value [°C]; basis: pressure that it belongs to, and
-// formulation; wanted: MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; pressure: the other, absolute [Pa], 20000 to 1100000; temperature: output
+// formulation; wanted: MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; pressure: the other, absolute [Pa]; temperature: output
 // [°C]; error: may be null.
 // Returns 0, 101, 102, 103, 201, 202, 31x (ice above its melting temperature, water above boiling, or the result out of its range).
 int32_t moistair_saturation_temperature_after(int32_t property,
@@ -1479,7 +1504,7 @@ int32_t moistair_tower_with_leaving_air(const moistair_state *entering,
 // equilibrium there; below the melting temperature what condenses is ice. Pressures are absolute. Vessels under pressure can burst, condensate
 // freezes: codes for pressure equipment and licensed practice govern, this is no safety function.
 //
-// entering: the stream that enters; pressure: absolute [Pa], 20000 to 1100000; leaving_temperature: [°C], -80 to 150; done: output; error: may
+// entering: the stream that enters; pressure: absolute [Pa]; leaving_temperature: [°C]; done: output; error: may
 // be null.
 // Returns 0, 1xx, 2xx.
 int32_t moistair_compression_to_pressure(const moistair_wet_stream *entering,

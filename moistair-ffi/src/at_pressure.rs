@@ -9,7 +9,7 @@ use crate::status::moistair_error;
 
 /// The same air, with the same humidity ratio, at another pressure and temperature.
 ///
-/// state: a state; dry_bulb: [°C], -80 to 150; pressure: absolute [Pa], 20000 to 1100000; changed: output, may be state itself; error: may be
+/// state: a state; dry_bulb: [°C]; pressure: absolute [Pa]; changed: output, may be state itself; error: may be
 /// null.
 /// Returns 0, 101, 102, 103, 201, 202, 203 (water would condense; the error holds the humidity ratio at saturation there).
 #[unsafe(no_mangle)]
@@ -32,7 +32,7 @@ pub unsafe extern "C" fn moistair_at_temperature_and_pressure(
 
 /// The same air, with the same humidity ratio and temperature, at another pressure.
 ///
-/// state: a state; pressure: absolute [Pa], 20000 to 1100000; changed: output, may be state itself; error: may be null.
+/// state: a state; pressure: absolute [Pa]; changed: output, may be state itself; error: may be null.
 /// Returns 0, 101, 102, 103, 201, 202, 203 (water would condense; the error holds the humidity ratio at saturation there).
 #[unsafe(no_mangle)]
 pub unsafe extern "C" fn moistair_at_pressure(
@@ -53,7 +53,7 @@ pub unsafe extern "C" fn moistair_at_pressure(
 /// Dew or frost point of the air of a state at another pressure: the pressure dew point of a line, or the atmospheric one of air in it. Above
 /// the temperature there it says that water condenses.
 ///
-/// state: a state; property: MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; pressure: absolute [Pa], 20000 to 1100000; temperature: output [°C];
+/// state: a state; property: MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; pressure: absolute [Pa]; temperature: output [°C];
 /// error: may be null.
 /// Returns 0, 101, 102, 103, 201, 202, 203, 31x (dry air, or outside -40 to 200 °C over liquid, -100 °C to melting over ice).
 #[unsafe(no_mangle)]
@@ -76,7 +76,7 @@ pub unsafe extern "C" fn moistair_saturation_temperature_at(
 /// Dew or frost point after a change of pressure: from a pressure dew point to the atmospheric one, or back.
 ///
 /// property: what is given, MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; value: its value [°C]; basis: pressure that it belongs to, and
-/// formulation; wanted: MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; pressure: the other, absolute [Pa], 20000 to 1100000; temperature: output
+/// formulation; wanted: MOISTAIR_DEW_POINT or MOISTAIR_FROST_POINT; pressure: the other, absolute [Pa]; temperature: output
 /// [°C]; error: may be null.
 /// Returns 0, 101, 102, 103, 201, 202, 31x (ice above its melting temperature, water above boiling, or the result out of its range).
 #[unsafe(no_mangle)]

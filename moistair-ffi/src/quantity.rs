@@ -11,7 +11,7 @@ use crate::text::{Text, texts};
 /// Number of property selectors: they run from 0 to one less. Later versions may add to them.
 pub const MOISTAIR_PROPERTY_COUNT: i32 = 35;
 
-/// Dry-bulb temperature. The range of states; the formulations themselves reach 193.15 to 473.15 K (IAPWS G8-10) [°C].
+/// Dry-bulb temperature. The range of states; IAPWS G8-10 itself reaches 193.15 to 473.15 K, as the Helmholtz formulation does [°C].
 pub const MOISTAIR_DRY_BULB: i32 = 0;
 /// Absolute total pressure [Pa].
 pub const MOISTAIR_PRESSURE: i32 = 1;
@@ -62,6 +62,14 @@ pub const MOISTAIR_FROST_POINT: i32 = 22;
 pub const MOISTAIR_SPECIFIC_ENTROPY: i32 = 23;
 /// Speed of sound at constant composition [m/s].
 pub const MOISTAIR_SPEED_OF_SOUND: i32 = 24;
+/// Isochoric heat capacity per mass of dry air, at constant humidity ratio [J/(kg K)].
+pub const MOISTAIR_SPECIFIC_HEAT_AT_CONSTANT_VOLUME: i32 = 25;
+/// Chemical potential of the water in the gas, per mass of water, on the datum of enthalpy and entropy; none for dry air [J/kg].
+pub const MOISTAIR_CHEMICAL_POTENTIAL_OF_WATER: i32 = 26;
+/// Chemical potential of the dry air in the gas, per mass of dry air, on the datum of enthalpy and entropy [J/kg].
+pub const MOISTAIR_CHEMICAL_POTENTIAL_OF_DRY_AIR: i32 = 27;
+/// Fugacity of the water in the gas; zero for dry air [Pa].
+pub const MOISTAIR_FUGACITY_OF_WATER: i32 = 28;
 /// Dynamic viscosity [Pa s].
 pub const MOISTAIR_DYNAMIC_VISCOSITY: i32 = 29;
 /// Thermal conductivity [W/(m K)].
@@ -162,7 +170,7 @@ pub extern "C" fn moistair_quantity_unit(quantity: i32) -> *const c_char {
     text(texts!(Quantity, Text::new, unit), quantity)
 }
 
-/// The limits of a quantity as an input, in its unit.
+/// The limits of a quantity as an input, in its unit, with the real and the ideal gas.
 ///
 /// quantity: selector of any quantity; limits: output; error: may be null.
 /// Returns 0, 101, 102, 103.
@@ -174,6 +182,26 @@ pub unsafe extern "C" fn moistair_quantity_limits(
 ) -> i32 {
     let call = || {
         let (min, max) = self::quantity(quantity)?.limits();
+        Ok(moistair_limits { min, max })
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(limits, error, call) }
+}
+
+/// The limits of a quantity as an input, in its unit, with a formulation: the Helmholtz formulation reaches 200 °C and 5 MPa.
+///
+/// formulation: MOISTAIR_REAL_GAS, MOISTAIR_IDEAL_GAS or MOISTAIR_HELMHOLTZ; quantity: selector of any quantity; limits: output; error: may be
+/// null.
+/// Returns 0, 101, 102, 103.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_formulation_limits(
+    formulation: i32,
+    quantity: i32,
+    limits: *mut moistair_limits,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        let (min, max) = crate::state::formulation(formulation)?.limits(self::quantity(quantity)?);
         Ok(moistair_limits { min, max })
     };
     // SAFETY: the caller's pointers.

@@ -11,14 +11,16 @@ use crate::status::{Failure, moistair_error};
 pub const MOISTAIR_REAL_GAS: i32 = 0;
 /// The perfect-gas relations of the ASHRAE handbook, for reproducing contract and textbook numbers.
 pub const MOISTAIR_IDEAL_GAS: i32 = 1;
+/// IAPWS G8-10 as published, all terms: -80 to 200 °C, to 5 MPa; slower. An unknown selector in a library that was built without it.
+pub const MOISTAIR_HELMHOLTZ: i32 = 2;
 
 /// On what a state stands.
 #[repr(C)]
 #[derive(Clone, Copy, Debug)]
 pub struct moistair_basis {
-    /// Absolute pressure [Pa], 20000 to 1100000.
+    /// Absolute pressure [Pa], 20000 to 1100000 (to 5000000 with MOISTAIR_HELMHOLTZ).
     pub pressure: f64,
-    /// MOISTAIR_REAL_GAS or MOISTAIR_IDEAL_GAS.
+    /// MOISTAIR_REAL_GAS, MOISTAIR_IDEAL_GAS or MOISTAIR_HELMHOLTZ.
     pub formulation: i32,
     /// Set to 0; not read.
     pub reserved: i32,
@@ -59,7 +61,7 @@ pub struct moistair_state {
     pub specific_heat: f64,
     /// p v / (R T) of the mixture [1].
     pub compressibility_factor: f64,
-    /// MOISTAIR_REAL_GAS or MOISTAIR_IDEAL_GAS.
+    /// MOISTAIR_REAL_GAS, MOISTAIR_IDEAL_GAS or MOISTAIR_HELMHOLTZ.
     pub formulation: i32,
     /// 0.
     pub reserved: i32,
@@ -110,7 +112,7 @@ pub(crate) fn formulation(selector: i32) -> Result<Formulation, Failure> {
 
 /// A state from its dry bulb and any second property.
 ///
-/// dry_bulb: [°C], -80 to 150; property: selector of the second property, one that fixes a state (humidity ratio, relative humidity,
+/// dry_bulb: [°C], -80 to 150 (to 200 with MOISTAIR_HELMHOLTZ); property: selector of the second property, one that fixes a state (humidity ratio, relative humidity,
 /// wet bulb, dew point, specific enthalpy, …); value: its value in its unit; basis: pressure and formulation; state: output; error: may
 /// be null.
 /// Returns 0, 101, 102, 103, 201, 202, 203 (no state has the value here; the error holds the limits).
@@ -205,6 +207,8 @@ pub(crate) fn properties(mask: u64) -> impl Iterator<Item = Quantity> {
 const _: () = {
     assert!(MOISTAIR_PROPERTY_COUNT == moistair_core::PROPERTY_COUNT && MOISTAIR_PROPERTY_COUNT <= 64);
     assert!(MOISTAIR_REAL_GAS == Formulation::RealGas.code() && MOISTAIR_IDEAL_GAS == Formulation::IdealGas.code());
+    #[cfg(feature = "helmholtz")]
+    assert!(MOISTAIR_HELMHOLTZ == Formulation::Helmholtz.code());
     assert!(
         size_of::<moistair_basis>() == 16 && size_of::<moistair_state>() == 104 && size_of::<moistair_error>() == 32
     );

@@ -230,16 +230,33 @@ impl Caller {
         }
     }
 
+    /// Mostly one and the same, since processes want states of one formulation.
+    fn formulation(&self) -> i32 {
+        match self.below(8) {
+            0 => self.selector(3),
+            1 => MOISTAIR_HELMHOLTZ,
+            2 | 3 => MOISTAIR_IDEAL_GAS,
+            _ => MOISTAIR_REAL_GAS,
+        }
+    }
+
+    /// The highest pressure and temperature of a formulation.
+    fn ends(formulation: i32) -> (f64, f64) {
+        if formulation == MOISTAIR_HELMHOLTZ { (5e6, 200.0) } else { (1.1e6, 150.0) }
+    }
+
     fn state(&self) -> moistair_state {
         // Half of the states come from the whole range, half from where plant works.
         let wide = self.below(2) == 0;
-        let pressure = if wide { self.number(2e4, 1.1e6) } else { self.number(7e4, 1.1e5) };
-        let basis = moistair_basis { pressure, formulation: self.selector(2), reserved: self.bits() as i32 };
+        let formulation = self.formulation();
+        let (highest, warmest) = Self::ends(formulation);
+        let pressure = if wide { self.number(2e4, highest) } else { self.number(7e4, 1.1e5) };
+        let basis = moistair_basis { pressure, formulation, reserved: self.bits() as i32 };
         let mut state = moistair_state::from_words(&[0; 13]);
         let humidity = self.number(0.0, 1.0);
         // SAFETY: valid places.
         unsafe {
-            let dry_bulb = if wide { self.number(-80.0, 150.0) } else { self.number(-40.0, 60.0) };
+            let dry_bulb = if wide { self.number(-80.0, warmest) } else { self.number(-40.0, 60.0) };
             moistair_from_dry_bulb(
                 dry_bulb,
                 MOISTAIR_RELATIVE_HUMIDITY,
@@ -253,8 +270,9 @@ impl Caller {
     }
 
     fn basis(&self) -> moistair_basis {
-        let pressure = self.number(2e4, 1.1e6);
-        self.structure(moistair_basis { pressure, formulation: self.selector(2), reserved: 0 })
+        let formulation = self.formulation();
+        let pressure = self.number(2e4, Self::ends(formulation).0);
+        self.structure(moistair_basis { pressure, formulation, reserved: 0 })
     }
 
     fn stream(&self) -> moistair_stream {
@@ -413,7 +431,8 @@ fn no_argument_upsets_an_export() {
         };
     }
 
-    run!(exercise moistair_quantity_limits: |c, out, e| (c.selector(50), out, e));
+    run!(exercise moistair_quantity_limits: |c, out, e| (c.selector(90), out, e));
+    run!(exercise moistair_formulation_limits: |c, out, e| (c.selector(3), c.selector(90), out, e));
     run!(exercise moistair_pressure_at_elevation: |c, out, e| (c.number(-5e3, 1.1e4), out, e));
     run!(exercise moistair_pressure_at_geometric_elevation: |c, out, e| (c.number(-5e3, 1.1e4), out, e));
     run!(exercise moistair_temperature_at_elevation: |c, out, e| (c.number(-5e3, 1.1e4), out, e));
@@ -612,7 +631,7 @@ fn columns(caller: &Caller) -> usize {
     let mut status = [77; MOST];
     let mut report = moistair_column_report { failed: 77, first_failed: 77 };
     let mut error = moistair_error { value: 0.0, min: 0.0, max: 0.0, code: -1, quantity: -1 };
-    let formulation = caller.selector(2);
+    let formulation = caller.selector(3);
     // SAFETY: valid memory for as many rows, or more rows than the library takes.
     let first = unsafe {
         moistair_state_columns(

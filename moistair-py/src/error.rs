@@ -28,19 +28,14 @@ fn from_parts(py: Python<'_>, parts: Parts) -> PyErr {
     made.map_or_else(|failure| failure, PyErr::from_value)
 }
 
+/// A name that is none of those it may be.
+pub fn unknown_name(py: Python<'_>, text: String) -> PyErr {
+    from_parts(py, (102, text, None, None, None, None))
+}
+
 /// An attribute name that is no property of a state.
-pub fn unknown_name(py: Python<'_>, name: &str) -> PyErr {
-    from_parts(
-        py,
-        (
-            102,
-            format!("{name} is no property of a state; moistair.PROPERTIES lists them"),
-            None::<String>,
-            None::<f64>,
-            None::<f64>,
-            None::<f64>,
-        ),
-    )
+pub fn no_property(py: Python<'_>, name: &str) -> PyErr {
+    unknown_name(py, format!("{name} is no property of a state; moistair.PROPERTIES lists them"))
 }
 
 /// Something that this layer should have ruled out; never a panic.

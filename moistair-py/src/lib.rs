@@ -30,7 +30,7 @@ mod _core {
         Channel, ChannelState, Checked, CheckedColumns, code_table, from_core, restore_checked, to_core,
     };
     #[pymodule_export]
-    use crate::state::{MoistAir, quantity_table, restore_state};
+    use crate::state::{MoistAir, limits, quantity_table, restore_state};
 
     #[pymodule_init]
     fn init(module: &Bound<'_, PyModule>) -> PyResult<()> {

@@ -15,7 +15,7 @@ use pyo3::sync::PyOnceLock;
 use pyo3::types::{PyDict, PyList, PyString, PyTuple, PyType};
 
 use crate::column::{self, Arguments, plain_number};
-use crate::error::{exception, identifier, internal, unknown_name};
+use crate::error::{exception, identifier, internal, no_property, unknown_name};
 use crate::process;
 
 /// What fixes a state, as columns of one length; rows without a state hold NaN.
@@ -53,7 +53,7 @@ pub enum Content {
 /// Parameters
 /// ----------
 /// dry_bulb : float or array_like
-///     Dry-bulb temperature, °C, −80 to 150.
+///     Dry-bulb temperature, °C, −80 to 150 (to 200 with 'helmholtz').
 /// pressure : float or array_like
 ///     Absolute pressure, Pa, 20 000 to 1 100 000. See `pressure_at_elevation`.
 /// relative_humidity : float or array_like
@@ -84,8 +84,9 @@ pub enum Content {
 ///     m³ per kg of dry air.
 /// density : float or array_like
 ///     Of the moist air, kg/m³.
-/// formulation : {'real_gas', 'ideal_gas'}
-///     Virial mixture after IAPWS G8-10, or the handbook's perfect-gas relations.
+/// formulation : {'real_gas', 'ideal_gas', 'helmholtz'}
+///     Virial mixture after IAPWS G8-10, the handbook's perfect-gas relations, or IAPWS G8-10 as published: slower, to 200 °C and
+///     5 MPa. See `limits`.
 ///
 /// Raises
 /// ------
@@ -216,7 +217,7 @@ impl MoistAir {
     ///     A, 1/K, 3e-4 to 2e-3 (over water that at 0 °C). By default that of an aspirated instrument, 3 to 5 m/s over shielded bulbs:
     ///     6.53e-4 over water, 5.75e-4 over ice. About 8e-4 in a naturally ventilated screen, 1.2e-3 in still air (common practice, no
     ///     source).
-    /// formulation : {'real_gas', 'ideal_gas'}
+    /// formulation : {'real_gas', 'ideal_gas', 'helmholtz'}
     ///     As in the constructor.
     ///
     /// Raises
@@ -434,6 +435,31 @@ impl MoistAir {
         self.value(py, Quantity::SpeedOfSound)
     }
 
+    /// Isochoric heat capacity at constant humidity ratio, J/K per kg of dry air.
+    #[getter]
+    fn specific_heat_at_constant_volume<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::SpecificHeatAtConstantVolume)
+    }
+
+    /// Chemical potential of the water in the gas, J per kg of water, on the datum of enthalpy and entropy. At saturation that of
+    /// the condensed phase (not with the ideal gas). No value for dry air.
+    #[getter]
+    fn chemical_potential_of_water<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::ChemicalPotentialOfWater)
+    }
+
+    /// Chemical potential of the dry air in the gas, J per kg of dry air, on the datum of enthalpy and entropy.
+    #[getter]
+    fn chemical_potential_of_dry_air<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::ChemicalPotentialOfDryAir)
+    }
+
+    /// Fugacity of the water in the gas, Pa; zero for dry air, x_w p for the ideal gas.
+    #[getter]
+    fn fugacity_of_water<'py>(&self, py: Python<'py>) -> PyResult<Bound<'py, PyAny>> {
+        self.value(py, Quantity::FugacityOfWater)
+    }
+
     /// Dynamic viscosity μ, Pa s. Dry air by Lemmon & Jacobsen 2004 (1 %), vapor by IAPWS R12-08 (2 %), mixed by Wilke's rule (a few
     /// percent in hot and humid air). Below 0 °C the vapor's part extrapolates.
     #[getter]
@@ -545,7 +571,7 @@ impl MoistAir {
         self.value(py, Quantity::FrostPoint)
     }
 
-    /// Which formulation: 'real_gas' or 'ideal_gas'.
+    /// Which formulation: 'real_gas', 'ideal_gas' or 'helmholtz'.
     #[getter]
     fn formulation(&self) -> &'static str {
         formulation_name(self.formulation_())
@@ -633,7 +659,7 @@ impl MoistAir {
             names.iter().map(|name| name.cast_into().map_err(not_a_name)).collect::<PyResult<_>>()?;
         let quantities = names
             .iter()
-            .map(|name| property_named(&name.to_cow()?).ok_or_else(|| unknown_name(py, &name.to_string())))
+            .map(|name| property_named(&name.to_cow()?).ok_or_else(|| no_property(py, &name.to_string())))
             .collect::<PyResult<Vec<_>>>()?;
         match (&self.content, out) {
             (Content::One(air), None) => properties_of_one(py, air, &names, quantities),
@@ -986,9 +1012,14 @@ fn properties_of_one<'py>(
 
 /// The property that an attribute names.
 fn property_named(name: &str) -> Option<Quantity> {
+    quantity_named(name).filter(|quantity| quantity.is_property())
+}
+
+/// The quantity of a name.
+fn quantity_named(name: &str) -> Option<Quantity> {
     let same = |quantity: &&Quantity| {
-        let words = quantity.name().bytes().map(|byte| if byte == b' ' { b'_' } else { byte });
-        quantity.is_property() && words.eq(name.bytes())
+        let words = quantity.name().bytes().map(|byte| if matches!(byte, b' ' | b'-') { b'_' } else { byte });
+        words.eq(name.bytes())
     };
     Quantity::ALL.iter().find(same).copied()
 }
@@ -1022,20 +1053,24 @@ fn only_result<'py, const N: usize>(
     let (labels, values): (Vec<_>, Vec<_>) = arguments.into_iter().unzip();
     process::run(py, name, layout, PyList::new(py, labels)?.into_any(), values)?.0.get_item(0)
 }
+/// The formulations of this build by their names.
+const FORMULATIONS: &[(&str, Formulation)] = &[
+    ("real_gas", Formulation::RealGas),
+    ("ideal_gas", Formulation::IdealGas),
+    #[cfg(feature = "helmholtz")]
+    ("helmholtz", Formulation::Helmholtz),
+];
 
 pub fn formulation_named(name: &str) -> PyResult<Formulation> {
-    match name {
-        "real_gas" => Ok(Formulation::RealGas),
-        "ideal_gas" => Ok(Formulation::IdealGas),
-        _ => Err(PyValueError::new_err(format!("formulation must be 'real_gas' or 'ideal_gas', not {name:?}"))),
-    }
+    let found = FORMULATIONS.iter().find(|(known, _)| *known == name);
+    found.map(|(_, formulation)| *formulation).ok_or_else(|| {
+        let names: Vec<_> = FORMULATIONS.iter().map(|(known, _)| format!("'{known}'")).collect();
+        PyValueError::new_err(format!("formulation must be {}, not {name:?}", names.join(" or ")))
+    })
 }
 
 fn formulation_name(formulation: Formulation) -> &'static str {
-    match formulation {
-        Formulation::RealGas => "real_gas",
-        Formulation::IdealGas => "ideal_gas",
-    }
+    FORMULATIONS.iter().find(|(_, known)| *known == formulation).map_or("", |(name, _)| name)
 }
 
 /// A state from what fixes it, for pickle.
@@ -1085,4 +1120,39 @@ pub fn quantity_table() -> Vec<(String, i32, &'static str, f64, f64, bool)> {
         (identifier(*quantity), quantity.code(), quantity.unit(), minimum, maximum, quantity.is_property())
     };
     Quantity::ALL.iter().map(row).collect()
+}
+
+/// The range that an input may have with a formulation, in the unit of `QUANTITIES`.
+///
+/// Parameters
+/// ----------
+/// quantity : str
+///     Name of a quantity, as in `QUANTITIES`.
+/// formulation : {'real_gas', 'ideal_gas', 'helmholtz'}
+///     The Helmholtz formulation reaches 200 °C and 5 MPa.
+///
+/// Returns
+/// -------
+/// tuple of float
+///     Least and greatest value, both allowed.
+///
+/// Raises
+/// ------
+/// UnknownNameError
+///     A name that is no quantity.
+/// ValueError
+///     An unknown formulation.
+///
+/// Examples
+/// --------
+/// >>> import moistair
+/// >>> moistair.limits("pressure"), moistair.limits("pressure", "helmholtz")
+/// ((20000.0, 1100000.0), (20000.0, 5000000.0))
+#[pyfunction]
+#[pyo3(signature = (quantity, formulation="real_gas"))]
+pub fn limits(py: Python<'_>, quantity: &str, formulation: &str) -> PyResult<(f64, f64)> {
+    let formulation = formulation_named(formulation)?;
+    let quantity = quantity_named(quantity)
+        .ok_or_else(|| unknown_name(py, format!("{quantity} is no quantity; moistair.QUANTITIES lists them")))?;
+    Ok(formulation.limits(quantity))
 }

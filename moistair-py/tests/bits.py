@@ -20,7 +20,7 @@ from moistair import MoistAir
 from moistair._rows import Record
 from moistair.process import AirStream, books, coil, humidify, mixing, reheat, sensible, tower
 
-FORMULATIONS = ("real_gas", "ideal_gas")
+FORMULATIONS = ("real_gas", "ideal_gas", "helmholtz")
 
 
 def shares(seed: int) -> Iterator[float]:
@@ -41,7 +41,7 @@ class Row:
         def between(low: float, high: float) -> float:
             return low + next(draw) * (high - low)
 
-        self.formulation: Any = FORMULATIONS[row % 2]
+        self.formulation: Any = FORMULATIONS[row % 3]
         self.pressure = between(80e3, 110e3)
         self.warm = AirStream(self.state(between(20.0, 40.0), between(0.2, 0.9)), dry_air_flow=between(0.5, 5.0))
         self.cold = AirStream(self.state(between(-25.0, 10.0), between(0.2, 0.9)), dry_air_flow=between(0.5, 5.0))

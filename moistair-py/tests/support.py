@@ -63,4 +63,4 @@ def grid(count: int, seed: int) -> tuple[NDArray[np.float64], NDArray[np.float64
     return rng.uniform(-40.0, 90.0, count), rng.uniform(0.0, 1.0, count), rng.uniform(80e3, 200e3, count)
 
 
-FORMULATIONS = ("real_gas", "ideal_gas")
+FORMULATIONS = ("real_gas", "ideal_gas", "helmholtz")

@@ -22,7 +22,7 @@ from moistair.process import (
     tower,
 )
 from moistair._rows import Record
-from support import SEA_LEVEL, same_bits
+from support import FORMULATIONS, SEA_LEVEL, same_bits
 
 RNG = np.random.default_rng(7)
 ROWS = 12
@@ -158,7 +158,7 @@ def test_every_process_is_covered():
     assert public <= set(CASES)
 
 
-@pytest.mark.parametrize("formulation", ["real_gas", "ideal_gas"])
+@pytest.mark.parametrize("formulation", FORMULATIONS)
 def test_books_close(formulation):
     t, rh, x = COLUMNS
     entering = stream(t, rh, 1.0 + x, formulation=formulation)

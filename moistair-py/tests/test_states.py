@@ -267,3 +267,56 @@ def test_everything_public_is_documented_and_listed():
             assert thing.__doc__, name
     for name in moistair.PROPERTIES:
         assert getattr(MoistAir, name).__doc__
+
+
+def test_helmholtz_formulation_reaches_further():
+    """IAPWS G8-10 Table 13 at 300 and 400 K, enthalpy of moist air; and what the real gas refuses."""
+    table = [row for row in rows("g8_10_tables13_14_15.csv") if row["quantity"].endswith("[humid air]")]
+    for kelvins in (300, 400):
+        point = {row["quantity"].split()[0]: row for row in table if f"T_K={kelvins};" in row["inputs"]}
+        dry_air = float(point["p"]["inputs"].split(";")[0].removeprefix("A="))
+        state = MoistAir(
+            dry_bulb=kelvins - 273.15,
+            specific_humidity=1.0 - dry_air,
+            pressure=float(point["p"]["value"]),
+            formulation="helmholtz",
+        )
+        assert dry_air * state.specific_enthalpy == pytest.approx(float(point["h"]["value"]), rel=5e-9)
+        # The mass fraction of dry air has nine digits: those of the water are worth 3e-3 J/kg at 300 K.
+        assert state.chemical_potential_of_water == pytest.approx(float(point["mu_W"]["value"]), abs=3e-3)
+    with pytest.raises(moistair.OutOfRangeError) as caught:
+        MoistAir(dry_bulb=180.0, relative_humidity=0.5, pressure=4e6)
+    assert (caught.value.minimum, caught.value.maximum) == moistair.limits("dry_bulb")
+    compressed = MoistAir(dry_bulb=180.0, relative_humidity=0.5, pressure=4e6, formulation="helmholtz")
+    assert 140.0 < compressed.dew_point < 180.0
+    with pytest.raises(moistair.OutOfRangeError) as caught:
+        MoistAir(dry_bulb=180.0, relative_humidity=0.5, pressure=6e6, formulation="helmholtz")
+    assert (caught.value.minimum, caught.value.maximum) == moistair.limits("pressure", "helmholtz")
+
+
+def test_limits_of_every_quantity():
+    for name, quantity in moistair.QUANTITIES.items():
+        for formulation in FORMULATIONS:
+            low, high = moistair.limits(name, formulation)
+            wider = formulation == "helmholtz"
+            assert low <= quantity.minimum and high >= quantity.maximum
+            assert wider or (low, high) == (quantity.minimum, quantity.maximum)
+    with pytest.raises(moistair.UnknownNameError, match="QUANTITIES"):
+        moistair.limits("warmth")
+    with pytest.raises(ValueError, match="'helmholtz'"):
+        moistair.limits("pressure", "perfect")
+
+
+@pytest.mark.parametrize("formulation", FORMULATIONS)
+def test_gibbs_energy_is_that_of_the_components(formulation):
+    """h − T s = μ_a + W μ_w, and fugacity near the vapor pressure."""
+    state = air(relative_humidity=0.7, formulation=formulation)
+    gibbs = state.specific_enthalpy - 303.15 * state.specific_entropy
+    parts = state.chemical_potential_of_dry_air + state.humidity_ratio * state.chemical_potential_of_water
+    assert gibbs == pytest.approx(parts, abs=1e-8)
+    assert state.fugacity_of_water == pytest.approx(state.vapor_pressure, rel=5e-3)
+    assert state.specific_heat_at_constant_volume < state.specific_heat
+    dry = air(humidity_ratio=0.0, formulation=formulation)
+    assert dry.fugacity_of_water == 0.0
+    with pytest.raises(moistair.NoValueError):
+        dry.chemical_potential_of_water

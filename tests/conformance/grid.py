@@ -12,7 +12,7 @@ import numpy as np
 import moistair
 
 NAMES = moistair.PROPERTIES
-FORMULATIONS = ("real_gas", "ideal_gas")
+FORMULATIONS = ("real_gas", "ideal_gas", "helmholtz")
 
 
 def one_state(row, result):

@@ -69,14 +69,22 @@ pub fn rows() -> Vec<Row> {
 
 fn row(i: usize, sequence: &mut Sequence) -> Row {
     let quantity = SECOND[i % SECOND.len()];
-    // Blocks of one formulation, so that the column calls get long runs.
-    let formulation = if (i / SECOND.len()).is_multiple_of(2) { Formulation::RealGas } else { Formulation::IdealGas };
+    // Blocks of one formulation, so that the column calls get long runs. The slow one has an eighth.
+    let formulation = match (i / SECOND.len()) % 8 {
+        7 => Formulation::Helmholtz,
+        1 | 3 | 5 => Formulation::IdealGas,
+        _ => Formulation::RealGas,
+    };
+    let within = |sequence: &mut Sequence, quantity| {
+        let (low, high) = formulation.limits(quantity);
+        sequence.between(low, high)
+    };
     // Half of the rows where people live, half anywhere.
     let everyday = sequence.unit() < 0.5;
     let (dry_bulb, pressure) = if everyday {
         (sequence.between(-30.0, 50.0), sequence.between(70e3, 110e3))
     } else {
-        (sequence.between(-80.0, 150.0), sequence.between(20e3, 1_100e3))
+        (within(sequence, Quantity::DryBulb), within(sequence, Quantity::Pressure))
     };
     let slip = sequence.unit();
     let wetness = sequence.unit();

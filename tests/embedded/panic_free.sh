@@ -43,7 +43,7 @@ callers() {
         sort | uniq -c | sort -rn | head -40
 }
 
-build panic-proof plain
+build panic-proof,helmholtz plain
 count=$(exports "$work/plain.a" | wc -l)
 [ "$count" -gt 10 ] || { echo "only $count exports found" >&2; exit 1; }
 found=$(undefined "$work/plain.a" | grep -Ev "$ALLOWED" || true)
@@ -54,7 +54,7 @@ if [ -n "$found" ]; then
 fi
 size=$(wc -c < "$work/all.so")
 
-build panic-proof,planted-panic planted
+build panic-proof,helmholtz,planted-panic planted
 undefined "$work/planted.a" | grep -qx "$MARKER" || { echo "FAIL: a planted panic was not found" >&2; exit 1; }
 
 echo "ok: $count exports, none reaches a panic ($size bytes linked); a planted panic is found"

@@ -56,7 +56,8 @@ fn enhancement_counts_at_pressure() {
         let basis = Basis::new(kilopascals(800.0), formulation);
         AirWithCondensate::from_dry_bulb_and_water(celsius(35.0), ratio(0.02), Freezing::Equilibrium, basis).unwrap()
     };
-    let [real, ideal] = BOTH.map(|formulation| numbers(&held(formulation).air()).1);
+    let [real, ideal] =
+        [Formulation::RealGas, Formulation::IdealGas].map(|formulation| numbers(&held(formulation).air()).1);
     println!("held at 8 bar and 35 °C: real gas {:.4} of the ideal", real / ideal);
     assert!((1.022..1.026).contains(&(real / ideal)));
 }
@@ -64,7 +65,9 @@ fn enhancement_counts_at_pressure() {
 /// Water of all phases and heat; the condensate is what the gas has lost; only ice below the melting temperature.
 #[test]
 fn books_and_phases() {
-    check((streams(), 20e3..1.1e6_f64, dry_bulbs(), 0.0..0.02_f64), |(entering, pressure, t, carried)| {
+    check((streams(), 0.0..1.0_f64, dry_bulbs(), 0.0..0.02_f64), |(entering, share, t, carried)| {
+        let (low, high) = entering.air().formulation().limits(Quantity::Pressure);
+        let pressure = low * (high / low).powf(share);
         let melting = entering.air().dry_bulb().celsius() > 0.1;
         let wet =
             AirWithCondensate::new(entering.air(), ratio(if melting { carried } else { 0.0 }), ratio(0.0)).unwrap();
@@ -84,7 +87,7 @@ fn books_and_phases() {
         let lost = entering.dry_air_flow().kilograms_per_second() * (water - numbers(&leaving.air()).1);
         prop_assert!(drained >= 0.0 && (drained - lost).abs() <= 8.0 * f64::EPSILON * lost.abs().max(water * 1e2));
         let (liquid, ice) = (leaving.liquid().kilograms_per_kilogram(), leaving.ice().kilograms_per_kilogram());
-        prop_assert!(liquid == 0.0 || t > -0.09, "liquid at {t}");
+        prop_assert!(liquid == 0.0 || t > -0.38, "liquid at {t}");
         prop_assert!(ice == 0.0 || t < 0.011, "ice at {t}");
         if leaving.is_wet() {
             let humidity = leaving.air().relative_humidity().unwrap().fraction();
@@ -104,7 +107,7 @@ fn books_and_phases() {
 /// More pressure or less temperature drains more.
 #[test]
 fn pressure_and_cold_drain() {
-    for formulation in BOTH {
+    for &formulation in Formulation::ALL {
         let outdoor: WetStream = stream(at(25.0, 0.7, sea_level(formulation)), 1.0).into();
         let drained = |pressure, t| {
             compression::to_pressure(&outdoor, kilopascals(pressure), celsius(t))
@@ -128,7 +131,7 @@ fn pressure_and_cold_drain() {
 fn points_there_and_back() {
     const POINTS: [Quantity; 2] = [Quantity::DewPoint, Quantity::FrostPoint];
     let (mut compared, mut worst) = (0, 0.0_f64);
-    for formulation in BOTH {
+    for &formulation in Formulation::ALL {
         for t in (-80..=120).step_by(4).map(|t| f64::from(t) + 0.3) {
             for (from, to) in [(101_325.0, 8e5), (8e5, 101_325.0), (2e4, 1.1e6), (1.1e6, 2e4)] {
                 let basis = |pressure| Basis::new(Pressure::from_pascals(pressure), formulation);

@@ -1,4 +1,4 @@
-//! Facts of the trade (common practice, no source), on both formulations.
+//! Facts of the trade (common practice, no source), on every formulation.
 
 use crate::support::*;
 use moistair_core::process::coil::{self, CoilRegime, CondensateTemperature};
@@ -14,7 +14,7 @@ fn humidity(air: &MoistAir) -> f64 {
 
 #[test]
 fn without_contact_with_water_the_humidity_ratio_stays() {
-    for formulation in BOTH {
+    for &formulation in Formulation::ALL {
         let entering = stream(at(20.0, 0.6, sea_level(formulation)), 1.0);
         for t in [12.5, 18.0, 35.0, 90.0] {
             let leaving = sensible::to_temperature(&entering, celsius(t)).unwrap().leaving.air();
@@ -28,7 +28,7 @@ fn without_contact_with_water_the_humidity_ratio_stays() {
 
 #[test]
 fn heating_at_constant_pressure_lowers_the_relative_humidity() {
-    for formulation in BOTH {
+    for &formulation in Formulation::ALL {
         let mut entering = stream(at(-15.0, 1.0, sea_level(formulation)), 1.0);
         for _ in 0..20 {
             let leaving = sensible::with_heat(&entering, HeatFlow::from_kilowatts(4.0)).unwrap().leaving;
@@ -41,7 +41,7 @@ fn heating_at_constant_pressure_lowers_the_relative_humidity() {
 /// Steam warms the air a little; spray cools it along the wet bulb, so that its enthalpy hardly changes.
 #[test]
 fn steam_warms_and_spray_cools() {
-    for formulation in BOTH {
+    for &formulation in Formulation::ALL {
         let entering = stream(at(24.0, 0.2, sea_level(formulation)), 1.0);
         let (t, _, h) = numbers(&entering.air());
         let steam = humidify::saturated_steam_enthalpy(celsius(100.0)).unwrap();
@@ -58,7 +58,7 @@ fn steam_warms_and_spray_cools() {
 /// Full contact: at constant humidity ratio down to the dew point, then along saturation.
 #[test]
 fn full_contact_cools_to_the_dew_point_and_then_along_saturation() {
-    for formulation in BOTH {
+    for &formulation in Formulation::ALL {
         let entering = stream(at(28.0, 0.5, sea_level(formulation)), 1.0);
         let dew_point = entering.air().dew_point().unwrap().celsius();
         for step in 1..=26 {
@@ -80,7 +80,7 @@ fn full_contact_cools_to_the_dew_point_and_then_along_saturation() {
 /// A coil with bypass leaves on the line toward its apparatus dew point, and short of it by the bypass.
 #[test]
 fn bypass_leaves_on_the_line_to_the_apparatus_dew_point() {
-    for formulation in BOTH {
+    for &formulation in Formulation::ALL {
         let entering = stream(at(27.0, 0.5, sea_level(formulation)), 1.0);
         let surface = at(9.0, 1.0, sea_level(formulation));
         let ((t1, w1, h1), (ta, wa, ha)) = (numbers(&entering.air()), numbers(&surface));
@@ -102,7 +102,7 @@ fn bypass_leaves_on_the_line_to_the_apparatus_dew_point() {
 /// Much dehumidifying at little cooling takes a coil and reheat: the line misses saturation.
 #[test]
 fn a_low_sensible_share_has_no_apparatus_dew_point() {
-    for formulation in BOTH {
+    for &formulation in Formulation::ALL {
         let room = at(24.0, 0.5, sea_level(formulation));
         let (t, w, _) = numbers(&room);
         let by_share = |share: f64| {
@@ -124,7 +124,7 @@ fn a_low_sensible_share_has_no_apparatus_dew_point() {
 
 #[test]
 fn a_wetted_pad_reaches_at_most_the_wet_bulb() {
-    for formulation in BOTH {
+    for &formulation in Formulation::ALL {
         let entering = stream(at(38.0, 0.15, sea_level(formulation)), 1.0);
         let wet_bulb = entering.air().wet_bulb().unwrap().celsius();
         let done = humidify::evaporative(&entering, 1.0, EvaporatingWater::AtWetBulb).unwrap();

@@ -59,7 +59,8 @@ fn number(random: &mut Random) -> f64 {
     match random.bits() % 4 {
         0 => f64::from_bits(random.bits()),
         1 => {
-            let limits = Quantity::ALL[(random.bits() % Quantity::ALL.len() as u64) as usize].limits();
+            let quantity = Quantity::ALL[(random.bits() % Quantity::ALL.len() as u64) as usize];
+            let limits = Formulation::ALL[(random.bits() % 3) as usize].limits(quantity);
             let end = if random.bits() & 1 == 0 { limits.0 } else { limits.1 };
             f64::from_bits(end.to_bits().wrapping_add(random.bits() % 3).wrapping_sub(1))
         }
@@ -70,11 +71,15 @@ fn number(random: &mut Random) -> f64 {
 
 fn any_air(random: &mut Random) -> MoistAir {
     loop {
-        let formulation = BOTH[(random.bits() & 1) as usize];
+        let formulation = Formulation::ALL[(random.bits() % 3) as usize];
         let pressure = if random.bits() & 1 == 0 { 101_325.0 } else { number(random) };
         let basis = Basis::new(Pressure::from_pascals(pressure), formulation);
         let quantity = Quantity::ALL[(random.bits() % Quantity::ALL.len() as u64) as usize];
-        let t = if random.bits() & 1 == 0 { number(random) } else { random.between(-80.0, 150.0) };
+        let t = if random.bits() & 1 == 0 {
+            number(random)
+        } else {
+            random.between(-80.0, formulation.limits(Quantity::DryBulb).1)
+        };
         let made = MoistAir::from_dry_bulb_and(celsius(t), quantity, number(random), basis).or_else(|_| {
             MoistAir::from_dry_bulb_and(celsius(t), Quantity::RelativeHumidity, random.between(0.0, 1.0), basis)
         });

@@ -211,7 +211,7 @@ fn worked_examples() {
 fn handbook_examples() {
     let table = Table::read(include_str!("../published/handbook_examples.csv"));
     let mut tally = Tally::new("handbook examples");
-    for formulation in BOTH {
+    for &formulation in Formulation::ALL {
         let site = sea_level(formulation);
         let by_wet_bulb =
             |t: f64, wet: f64| MoistAir::from_dry_bulb(celsius(t), WetBulb::from_celsius(wet), site).unwrap();

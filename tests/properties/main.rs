@@ -3,6 +3,7 @@
 
 mod errors;
 mod hostile;
+mod identities;
 mod order;
 mod psychrometer;
 mod round_trip;

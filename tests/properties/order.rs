@@ -3,7 +3,7 @@
 use moistair_core::*;
 use proptest::prelude::*;
 
-use crate::support::{cases, from_ratio, greatest_ratio, place, ratio, state};
+use crate::support::{cases, from_ratio, greatest_ratio, place, ratio, state, warmest};
 
 /// Two solved temperatures may each be 1e-9 K off.
 const SOLVES: f64 = 2e-9;
@@ -35,7 +35,7 @@ proptest! {
     }
 
     /// With more vapor at the same temperature and pressure: enthalpy, volume, vapor pressure, humidities and wet bulb rise,
-    /// density falls. (The stable wet bulb steps where its surface changes: per surface only.)
+    /// density falls (but in dense cold air, −70 °C at 5 MPa, which vapor draws together). (The stable wet bulb steps where its surface changes: per surface only.)
     #[test]
     fn with_more_vapor((celsius, basis, share) in place(), other in 0.0..1.0_f64) {
         let limit = greatest_ratio(celsius, basis);
@@ -54,7 +54,7 @@ proptest! {
             }
         }
         let (a, b) = (dry.density().kilograms_per_cubic_meter(), moist.density().kilograms_per_cubic_meter());
-        prop_assert!(a >= b * (1.0 - 8.0 * f64::EPSILON), "{a} {b}");
+        prop_assert!(a >= b * (1.0 - 8.0 * f64::EPSILON) || b > 85.0, "{a} {b}");
     }
 
     /// At the same relative humidity over liquid, warmer air holds more; at the same temperature and relative humidity, air at higher
@@ -62,7 +62,7 @@ proptest! {
     #[test]
     fn capacity_of_air((celsius, basis, share) in place(), kelvins in 0.01..20.0_f64, factor in 1.01..3.0_f64) {
         let celsius = celsius.max(-40.0);
-        let warmer = (celsius + kelvins).min(150.0);
+        let warmer = (celsius + kelvins).min(warmest(basis));
         let pascals = basis.pressure().pascals();
         let at = |celsius: f64, pascals: f64| {
             let humidity = RelativeHumidityOverLiquid::from_fraction(share);
@@ -72,7 +72,7 @@ proptest! {
         if let (Ok(cool), Ok(warm)) = (at(celsius, pascals), at(warmer, pascals)) {
             prop_assert!(cool <= warm, "{cool:e} {warm:e}");
         }
-        let denser = (pascals * factor).min(1.1e6);
+        let denser = (pascals * factor).min(basis.formulation().limits(Quantity::Pressure).1);
         if let (Ok(thin), Ok(dense)) = (at(celsius, pascals), at(celsius, denser)) {
             prop_assert!(thin >= dense, "{thin:e} {dense:e}");
         }
@@ -82,7 +82,7 @@ proptest! {
     #[test]
     fn with_temperature(air in state(), kelvins in 1e-3..20.0_f64) {
         let celsius = air.dry_bulb().celsius();
-        let warmer = (celsius + kelvins).min(150.0);
+        let warmer = (celsius + kelvins).min(warmest(air.basis()));
         prop_assume!(warmer - celsius > 1e-6);
         let warmer = from_ratio(warmer, ratio(&air), air.basis());
         // Warmer air holds as much, but for the step from the limit over ice to that over liquid at −40 °C, which rises too.
@@ -94,7 +94,7 @@ proptest! {
     /// Vapor supersaturated over ice, up to liquid saturation, is a valid state from −40 °C to the melting temperature, says so by its
     /// relative humidity, and beyond liquid saturation is none.
     #[test]
-    fn supersaturated_over_ice(celsius in -40.0..-0.1_f64, (_, basis, share) in place()) {
+    fn supersaturated_over_ice(celsius in -40.0..-0.4_f64, (_, basis, share) in place()) {
         let at = |fraction| {
             let humidity = RelativeHumidityOverLiquid::from_fraction(fraction);
             MoistAir::from_dry_bulb(Temperature::from_celsius(celsius), humidity, basis)

@@ -10,24 +10,35 @@ pub fn cases(usual: u32) -> ProptestConfig {
 
 /// Dry bulb, basis, and a share of the most vapor that a state there holds; corners often.
 pub fn place() -> impl Strategy<Value = (f64, Basis, f64)> {
+    prop::sample::select(Formulation::ALL).prop_flat_map(place_of)
+}
+
+/// The same for one formulation.
+pub fn place_of(formulation: Formulation) -> impl Strategy<Value = (f64, Basis, f64)> {
+    let (coldest, warmest) = formulation.limits(Quantity::DryBulb);
     let celsius = prop_oneof![
-        6 => -80.0..=150.0,
+        6 => coldest..=warmest,
         3 => -45.0..=5.0,
-        1 => prop_oneof![Just(-80.0), Just(-40.0), Just(-39.999), Just(0.0), Just(0.01), Just(100.0), Just(150.0)],
+        1 => prop_oneof![Just(coldest), Just(-40.0), Just(-39.999), Just(0.0), Just(0.01), Just(100.0), Just(warmest)],
     ];
+    let (low, high) = formulation.limits(Quantity::Pressure);
     let pascals = prop_oneof![
-        8 => (20e3_f64.ln()..=1.1e6_f64.ln()).prop_map(f64::exp),
-        2 => prop_oneof![Just(20e3), Just(101_325.0), Just(1.1e6)],
+        8 => (low.ln()..=high.ln()).prop_map(f64::exp),
+        2 => prop_oneof![Just(low), Just(101_325.0), Just(high)],
     ];
     let share = prop_oneof![
         6 => 0.0..=1.0,
         2 => (-14.0..=0.0_f64).prop_map(|exponent| 10_f64.powf(exponent)),
         1 => prop_oneof![Just(0.0), Just(1.0)],
     ];
-    let formulation = prop_oneof![Just(Formulation::RealGas), Just(Formulation::IdealGas)];
-    (celsius, pascals, formulation, share).prop_map(|(celsius, pascals, formulation, share)| {
-        (celsius, Basis::new(Pressure::from_pascals(pascals.clamp(20e3, 1.1e6)), formulation), share)
+    (celsius, pascals, share).prop_map(move |(celsius, pascals, share)| {
+        (celsius, Basis::new(Pressure::from_pascals(pascals.clamp(low, high)), formulation), share)
     })
+}
+
+/// The warmest state of a basis, °C.
+pub fn warmest(basis: Basis) -> f64 {
+    basis.formulation().limits(Quantity::DryBulb).1
 }
 
 pub fn from_ratio(celsius: f64, ratio: f64, basis: Basis) -> Result<MoistAir, Error> {

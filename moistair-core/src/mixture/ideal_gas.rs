@@ -3,7 +3,7 @@
 //! One datum throughout: dry air and liquid water at 0 °C; ice −333.4 + 2.1 t kJ/kg, so that ice sublimes at 2834.4 kJ/kg at 0 °C.
 //! The chapter's wet-bulb equation below freezing rounds this to 2830.
 
-use super::{Gas, Mixture, Saturation};
+use super::{Gas, Mixture, Potentials, Saturation, Steps};
 use crate::quantity::ZERO_CELSIUS;
 use crate::real::{Real, k};
 use crate::saturation::{Surface, hyland_wexler_ice, hyland_wexler_liquid};
@@ -34,9 +34,29 @@ pub struct IdealGas<R> {
     kelvins: R,
 }
 
+/// Of the mixture, per kilogram of dry air, J/(kg K): Eq. (26).
+fn gas_constant<R: Real>(humidity_ratio: R) -> R {
+    (humidity_ratio * k(VOLUME_OF_WATER) + k(1.0)) * k(R_DRY_AIR)
+}
+
 impl<R: Real> IdealGas<R> {
     fn vapor_enthalpy(&self) -> R {
         self.celsius * k(CP_VAPOR) + k(H_VAPOR)
+    }
+
+    /// Of dry air and of vapor, each at its partial pressure and per kilogram of its own. Dry air is zero at 0 °C and 101 325 Pa, liquid water
+    /// at 0 °C: the perfect gas between.
+    fn entropies(&self, pressure: R, humidity_ratio: R) -> (R, R) {
+        let water_fraction = <Self as Mixture<R>>::mole_fraction(humidity_ratio);
+        let zero = k::<R>(ZERO_CELSIUS);
+        let warming = (self.kelvins / zero).ln();
+        let air_pressure = pressure * (k::<R>(1.0) - water_fraction);
+        // Without water the logarithm is bounded and multiplies nothing.
+        let water_pressure = (pressure * water_fraction).at_least(k(1e-30));
+        let saturation = hyland_wexler_liquid(zero).0;
+        let air = warming * k(CP_DRY_AIR) - (air_pressure / k(STANDARD_PRESSURE)).ln() * k(R_DRY_AIR);
+        let vapor = warming * k(CP_VAPOR) - (water_pressure.ln() - saturation) * k(R_WATER);
+        (air, vapor + k(H_VAPOR / ZERO_CELSIUS))
     }
 
     /// Of liquid water or ice at this temperature.
@@ -62,8 +82,8 @@ impl<R: Real> IdealGas<R> {
 }
 
 impl<R: Real> Mixture<R> for IdealGas<R> {
-    #[cfg(test)]
     const FORMULATION: crate::Formulation = crate::Formulation::IdealGas;
+    const STEPS: Steps = Steps::TO_150_CELSIUS;
     const MOLAR_MASS_RATIO: f64 = 0.621945;
 
     #[inline(always)]
@@ -84,25 +104,32 @@ impl<R: Real> Mixture<R> for IdealGas<R> {
         }
     }
 
-    /// Dry air is zero at 0 °C and 101 325 Pa, liquid water at 0 °C: the perfect gas between, each at its partial pressure.
     fn entropy(&self, pressure: R, humidity_ratio: R, _gas: &Gas<R>) -> R {
-        let water_fraction = Self::mole_fraction(humidity_ratio);
-        let zero = k::<R>(ZERO_CELSIUS);
-        let warming = (self.kelvins / zero).ln();
-        let air_pressure = pressure * (k::<R>(1.0) - water_fraction);
-        // Without water the logarithm is bounded and multiplies nothing.
-        let water_pressure = (pressure * water_fraction).at_least(k(1e-30));
-        let saturation = hyland_wexler_liquid(zero).0;
-        let air = warming * k(CP_DRY_AIR) - (air_pressure / k(STANDARD_PRESSURE)).ln() * k(R_DRY_AIR);
-        let vapor = warming * k(CP_VAPOR) - (water_pressure.ln() - saturation) * k(R_WATER);
-        air + humidity_ratio * (vapor + k(H_VAPOR / ZERO_CELSIUS))
+        let (air, vapor) = self.entropies(pressure, humidity_ratio);
+        air + humidity_ratio * vapor
     }
 
     /// √(γ R T) of the mixture.
     fn speed_of_sound(&self, humidity_ratio: R, gas: &Gas<R>) -> R {
-        let gas_constant = (humidity_ratio * k(VOLUME_OF_WATER) + k(1.0)) * k(R_DRY_AIR);
-        let ratio = gas.specific_heat / (gas.specific_heat - gas_constant);
-        (ratio * gas_constant * self.kelvins / (humidity_ratio + k(1.0))).sqrt()
+        let ratio = gas.specific_heat / self.specific_heat_at_constant_volume(humidity_ratio, gas);
+        (ratio * gas_constant(humidity_ratio) * self.kelvins / (humidity_ratio + k(1.0))).sqrt()
+    }
+
+    fn specific_heat_at_constant_volume(&self, humidity_ratio: R, gas: &Gas<R>) -> R {
+        gas.specific_heat - gas_constant(humidity_ratio)
+    }
+
+    /// h − T s of each component at its partial pressure.
+    fn potentials(&self, pressure: R, humidity_ratio: R, _gas: &Gas<R>) -> Potentials<R> {
+        let (air, vapor) = self.entropies(pressure, humidity_ratio);
+        Potentials {
+            water: self.vapor_enthalpy() - self.kelvins * vapor,
+            dry_air: self.celsius * k(CP_DRY_AIR) - self.kelvins * air,
+        }
+    }
+
+    fn fugacity(&self, pressure: R, humidity_ratio: R, _gas: &Gas<R>) -> R {
+        Self::mole_fraction(humidity_ratio) * pressure
     }
 
     #[inline(always)]

@@ -2,7 +2,7 @@
 //!
 //! Every property and every solve in `state/` is written once over [`Mixture`].
 
-#[cfg(test)]
+#[cfg(any(feature = "helmholtz", test))]
 mod helmholtz;
 mod ideal_gas;
 mod real_gas;
@@ -11,9 +11,12 @@ mod two_component;
 #[cfg(test)]
 mod virial;
 
+#[cfg(any(feature = "helmholtz", test))]
+pub use helmholtz::Helmholtz;
 pub use ideal_gas::IdealGas;
 pub use real_gas::RealGas;
 
+use crate::Formulation;
 use crate::real::Real;
 use crate::saturation::Surface;
 
@@ -47,11 +50,40 @@ pub struct Saturation<R> {
     pub condensed_enthalpy: R,
 }
 
+/// Chemical potentials of the components of the gas, each per kilogram of that component, J/kg: g = μ_a + W μ_w.
+#[derive(Clone, Copy, Debug)]
+pub struct Potentials<R> {
+    pub water: R,
+    pub dry_air: R,
+}
+
+/// How many Newton steps the solves in `state/` take: constant, so that the work is. Their tests show each to be enough over the declared
+/// range of the formulation, and none to be idle.
+#[derive(Clone, Copy, Debug)]
+pub struct Steps {
+    pub dew_point: usize,
+    pub wet_bulb: usize,
+    /// Halvings of the interval that the wet bulb starts with.
+    pub wet_bulb_halvings: usize,
+    /// Humidity ratio from enthalpy, volume or wet bulb.
+    pub humidity_ratio: usize,
+    /// Temperature from enthalpy.
+    pub temperature: usize,
+}
+
+impl Steps {
+    /// To 150 °C and 1.1 MPa.
+    pub const TO_150_CELSIUS: Self =
+        Self { dew_point: 3, wet_bulb: 3, wet_bulb_halvings: 8, humidity_ratio: 3, temperature: 4 };
+}
+
 /// A formulation. `Self` holds what depends on temperature alone.
 pub trait Mixture<R: Real>: Copy {
     /// Which formulation it is.
-    #[cfg(test)]
-    const FORMULATION: crate::Formulation;
+    const FORMULATION: Formulation;
+
+    /// Steps of the solves over it.
+    const STEPS: Steps;
 
     /// Molar mass of water over that of dry air.
     const MOLAR_MASS_RATIO: f64;
@@ -67,6 +99,15 @@ pub trait Mixture<R: Real>: Copy {
 
     /// Speed of sound of that gas at constant composition, m/s.
     fn speed_of_sound(&self, humidity_ratio: R, gas: &Gas<R>) -> R;
+
+    /// Isochoric heat capacity of that gas at constant humidity ratio, per kilogram of dry air, J/(kg K).
+    fn specific_heat_at_constant_volume(&self, humidity_ratio: R, gas: &Gas<R>) -> R;
+
+    /// Chemical potentials in that gas; that of the water is of no meaning where there is none.
+    fn potentials(&self, pressure: R, humidity_ratio: R, gas: &Gas<R>) -> Potentials<R>;
+
+    /// Fugacity of the water in that gas, Pa.
+    fn fugacity(&self, pressure: R, humidity_ratio: R, gas: &Gas<R>) -> R;
 
     /// Equilibrium over a surface at a pressure.
     fn saturation(&self, pressure: R, surface: Surface) -> Saturation<R>;

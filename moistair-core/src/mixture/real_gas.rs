@@ -10,6 +10,7 @@ mod coefficients;
 mod fit;
 
 use self::coefficients as curves;
+use super::Steps;
 use super::two_component::{HelmholtzMixture, Model, Phase, Warmth};
 use crate::quantity::ZERO_CELSIUS;
 use crate::real::{Real, k, polynomial, power};
@@ -265,8 +266,8 @@ impl Domain {
 }
 
 impl<R: Real> Model<R> for Fitted {
-    #[cfg(test)]
     const FORMULATION: crate::Formulation = crate::Formulation::RealGas;
+    const STEPS: Steps = Steps::TO_150_CELSIUS;
     type Air = Air<R>;
     type Water = Water<R>;
     const DENSITY_STEPS: usize = 2;

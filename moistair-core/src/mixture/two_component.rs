@@ -8,7 +8,7 @@
 //! everything else follows by differentiation: p/T = ρ_a Ψ_a + ρ_w Ψ_w − Ψ, μ_w/T = Ψ_w, and U/T = τΨ_τ. Where the functions of
 //! temperature and the residuals αʳ, φʳ come from is the choice of a [`Model`].
 
-use super::{Gas, Mixture, Saturation};
+use super::{Gas, Mixture, Potentials, Saturation, Steps};
 use crate::quantity::ZERO_CELSIUS;
 use crate::real::{Choose, Real, k};
 use crate::saturation::{Surface, hyland_wexler_ice, hyland_wexler_liquid};
@@ -18,8 +18,8 @@ use crate::substance::{DensityDerivatives, Fluid, Jet, TemperatureOrder, dry_air
 /// Newton steps for the melting temperature; see the tests of the models.
 const MELTING_STEPS: usize = 2;
 
-/// Between these, °C, ice and liquid are compared; the melting temperature lies between −0.08 and 0.01 °C up to 1.1 MPa.
-const BOTH_PHASES: (f64, f64) = (-0.2, 0.02);
+/// Between these, °C, ice and liquid are compared; the melting temperature lies between −0.37 and 0.01 °C up to 5 MPa.
+const BOTH_PHASES: (f64, f64) = (-0.5, 0.02);
 
 /// 2R / (M_a M_w) with R = 8.314472 J/(mol K): G8-10 Eq. (2) and Table 2.
 const KAPPA: f64 = 2.0 * 8.314472 / (dry_air::MOLAR_MASS * water_vapor::MOLAR_MASS);
@@ -27,8 +27,10 @@ const KAPPA: f64 = 2.0 * 8.314472 / (dry_air::MOLAR_MASS * water_vapor::MOLAR_MA
 /// Where the parts of the mixture come from.
 pub trait Model<R: Real>: Copy {
     /// Which formulation it stands for.
-    #[cfg(test)]
     const FORMULATION: crate::Formulation;
+
+    /// Steps of the solves over the mixture.
+    const STEPS: Steps;
 
     /// Dry air and water vapor, each alone.
     type Air: Fluid<R>;
@@ -136,6 +138,14 @@ impl<P> Component<P> {
         let series = self.residual(density, TemperatureOrder::Value);
         let ln_delta = (density / k(self.reducing_density)).ln();
         (ln_delta + series.value + series.first) * k(self.gas_constant)
+    }
+
+    /// R (φ° + 1), what [`Component::potential`] leaves out.
+    fn ideal_potential<R: Real>(&self) -> R
+    where
+        P: Fluid<R>,
+    {
+        (self.fluid.ideal(TemperatureOrder::Value) + k(1.0)) * k(self.gas_constant)
     }
 
     /// Coefficient of the square of the density in p/T.
@@ -248,12 +258,23 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
         }
     }
 
+    /// What dry air adds to Ψ_w.
+    fn interaction(&self, air: R, water: R) -> R {
+        air * (self.pair.value + air * self.two_air.value + water * self.two_water.value * k(2.0))
+    }
+
+    /// Ψ_a = μ_a / T, less R_a (α° + 1).
+    fn potential_of_air(&self, air: R, water: R) -> R {
+        let inner = self.pair.value + air * self.two_air.value * k(2.0) + water * self.two_water.value;
+        self.air.potential(air) + water * inner
+    }
+
     /// Ψ_w = μ_w / T, less R_w (φ° + 1), with its slopes in the density of air and in the logarithm of the density of water.
     fn potential(&self, air: R, water: R) -> (R, R, R) {
         let (two_air, two_water) = (air * self.two_air.value, water * self.two_water.value * k(2.0));
         let (_, slope) = self.water.pressure(water);
         (
-            self.water.potential(water) + air * (self.pair.value + two_air + two_water),
+            self.water.potential(water) + self.interaction(air, water),
             self.pair.value + two_air * k(2.0) + two_water,
             slope + air * two_water,
         )
@@ -396,8 +417,8 @@ fn solve_pair<R: Real>(first: (R, R, R), second: (R, R, R)) -> (R, R) {
 }
 
 impl<R: Real, M: Model<R>> Mixture<R> for HelmholtzMixture<R, M> {
-    #[cfg(test)]
     const FORMULATION: crate::Formulation = M::FORMULATION;
+    const STEPS: Steps = M::STEPS;
     const MOLAR_MASS_RATIO: f64 = water_vapor::MOLAR_MASS / dry_air::MOLAR_MASS;
 
     fn at(celsius: R) -> Self {
@@ -463,6 +484,32 @@ impl<R: Real, M: Model<R>> Mixture<R> for HelmholtzMixture<R, M> {
         let tension = p.value - thermal.pressure_first;
         // w² = (∂p/∂ρ)_T + T p_T² / (ρ² c_v)
         (self.kelvins * (slope + tension * tension / thermal.heat) * gas.volume / (humidity_ratio + k(1.0))).sqrt()
+    }
+
+    fn specific_heat_at_constant_volume(&self, humidity_ratio: R, gas: &Gas<R>) -> R {
+        let air = k::<R>(1.0) / gas.volume;
+        self.thermal(air, air * humidity_ratio).0.heat * gas.volume
+    }
+
+    fn potentials(&self, _pressure: R, humidity_ratio: R, gas: &Gas<R>) -> Potentials<R> {
+        let air = k::<R>(1.0) / gas.volume;
+        let water = air * humidity_ratio;
+        let (of_water, of_air) = (self.potential(air, water).0, self.potential_of_air(air, water));
+        Potentials {
+            water: (of_water + self.water.ideal_potential()) * self.kelvins,
+            dry_air: (of_air + self.air.ideal_potential()) * self.kelvins,
+        }
+    }
+
+    /// f = ρ_w R_w T e^{Ψʳ_w / R_w}, with the residual part of Ψ_w: its limit at low pressure is the partial pressure of water as the mixture
+    /// has it, and vapor in equilibrium with pure water has the fugacity of that water.
+    fn fugacity(&self, _pressure: R, humidity_ratio: R, gas: &Gas<R>) -> R {
+        let air = k::<R>(1.0) / gas.volume;
+        let water = air * humidity_ratio;
+        let gas_constant = k::<R>(water_vapor::GAS_CONSTANT);
+        let alone = self.water.residual(water, TemperatureOrder::Value);
+        let residual = alone.value + alone.first + self.interaction(air, water) / gas_constant;
+        water * gas_constant * self.kelvins * residual.exp()
     }
 
     fn saturation(&self, pressure: R, surface: Surface) -> Saturation<R> {

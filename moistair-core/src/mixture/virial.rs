@@ -1,6 +1,7 @@
 //! IAPWS G8-10 with the residuals of its components expanded in powers of density, evaluated directly from the published equations: the
 //! truth of the fits in the tests.
 
+use super::Steps;
 use super::two_component::{Model, Warmth};
 use crate::real::Real;
 use crate::substance::{Series, dry_air, water_vapor};
@@ -11,6 +12,7 @@ pub struct Virial;
 
 impl<R: Real> Model<R> for Virial {
     const FORMULATION: crate::Formulation = crate::Formulation::RealGas;
+    const STEPS: Steps = Steps::TO_150_CELSIUS;
     type Air = Series<R, { dry_air::ORDERS }>;
     type Water = Series<R, { water_vapor::ORDERS }>;
     const DENSITY_STEPS: usize = 2;

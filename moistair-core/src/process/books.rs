@@ -6,11 +6,13 @@ use crate::quantity::{HeatFlow, MassFlow};
 use crate::real::{Scalar, k};
 use crate::state::{AirWithCondensate, MoistAir};
 
-/// How fine a leaving temperature can be solved for, in units of ε T. Equations of state stand on the absolute temperature; those of
-/// the real gas also sum enthalpies on that scale, and the roughness of the sum, measured in the tests, is part of the limit.
+/// How fine a leaving temperature can be solved for, in units of ε T. Equations of state stand on the absolute temperature; all but
+/// the ideal gas also sum enthalpies on that scale, and the roughness of the sum, measured in the tests, is part of the limit.
 pub(super) const fn resolution(formulation: Formulation) -> f64 {
     match formulation {
         Formulation::RealGas | Formulation::IdealGas => 1.0,
+        #[cfg(any(feature = "helmholtz", test))]
+        Formulation::Helmholtz => 8.0,
     }
 }
 
@@ -26,7 +28,7 @@ pub struct Books<S = f64> {
     pub water_residual: MassFlow<S>,
     /// Sum of the magnitudes of all water terms.
     pub water_scale: MassFlow<S>,
-    /// What the rounding of the leaving temperature is worth: 8 ε T ∂h/∂T for the real gas, ε T ∂h/∂T for the ideal gas.
+    /// What the rounding of the leaving temperature is worth: 8 ε T ∂h/∂T, and ε T ∂h/∂T for the ideal gas.
     pub heat_resolution: HeatFlow<S>,
 }
 

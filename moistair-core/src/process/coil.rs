@@ -7,7 +7,7 @@ pub use apparatus::{Apparatus, apparatus_dew_point};
 use super::{AirStream, Exchange, infeasible, parts, same_formulation};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
-use crate::error::{Error, checked};
+use crate::error::{Error, checked, checked_for};
 use crate::mixture::Mixture;
 use crate::quantity::{HeatFlow, HumidityRatio, MassFlow, SpecificEnthalpy, Temperature};
 use crate::real::{Scalar, k};
@@ -99,7 +99,7 @@ pub fn to_state<S: Scalar>(
         return Err(infeasible(
             Quantity::LeavingTemperature,
             celsius,
-            k(Quantity::LeavingTemperature.limits().0),
+            k(leaving.formulation().limits(Quantity::LeavingTemperature).0),
             warmest,
         ));
     }
@@ -125,19 +125,19 @@ pub fn by_bypass_factor<S: Scalar>(
     condensate: CondensateTemperature<S>,
 ) -> Result<Cooling<S>, Error> {
     let bypass = checked(Quantity::BypassFactor, bypass_factor)?;
-    let apparatus = checked(Quantity::ApparatusDewPoint, apparatus_dew_point.celsius())?;
     let air = entering.air();
+    let apparatus = checked_for(air.formulation(), Quantity::ApparatusDewPoint, apparatus_dew_point.celsius())?;
     let warmest = air.dry_bulb().celsius();
     if apparatus > warmest {
         return Err(infeasible(
             Quantity::ApparatusDewPoint,
             apparatus,
-            k(Quantity::ApparatusDewPoint.limits().0),
+            k(air.formulation().limits(Quantity::ApparatusDewPoint).0),
             warmest,
         ));
     }
     if bypass == k(1.0) {
-        return Ok(account(entering, &air, drain_temperature(condensate, warmest, apparatus)?));
+        return Ok(account(entering, &air, drain_temperature(&air, condensate, warmest, apparatus)?));
     }
     let pressure = air.pressure().pascals();
     let (enthalpy, ratio) = parts(&air);
@@ -162,7 +162,7 @@ pub fn by_bypass_factor<S: Scalar>(
         )?
         .air()
     };
-    let drain = drain_temperature(condensate, leaving.dry_bulb().celsius(), apparatus)?;
+    let drain = drain_temperature(&air, condensate, leaving.dry_bulb().celsius(), apparatus)?;
     let mut cooling = account(entering, &leaving, drain);
     if cooling.regime == CoilRegime::Wet && freezes(&air, apparatus) {
         cooling.regime = CoilRegime::Frost;
@@ -242,14 +242,21 @@ fn drain_between<S: Scalar>(
     } else {
         celsius
     };
-    drain_temperature(choice, celsius, apparatus)
+    drain_temperature(leaving, choice, celsius, apparatus)
 }
 
-fn drain_temperature<S: Scalar>(choice: CondensateTemperature<S>, leaving: S, apparatus: S) -> Result<S, Error> {
+fn drain_temperature<S: Scalar>(
+    air: &MoistAir<S>,
+    choice: CondensateTemperature<S>,
+    leaving: S,
+    apparatus: S,
+) -> Result<S, Error> {
     match choice {
         CondensateTemperature::LeavingAir => Ok(leaving),
         CondensateTemperature::Apparatus => Ok(apparatus),
-        CondensateTemperature::Given(temperature) => checked(Quantity::CondensateTemperature, temperature.celsius()),
+        CondensateTemperature::Given(temperature) => {
+            checked_for(air.formulation(), Quantity::CondensateTemperature, temperature.celsius())
+        }
     }
 }
 

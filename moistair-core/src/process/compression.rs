@@ -36,7 +36,7 @@ impl<S: Scalar> Compressed<S> {
 /// Bounded work, no search. The exchange counts work and heat together; how much of either depends on the machine.
 ///
 /// # Errors
-/// [`Error::OutOfRange`], [`Error::NotFinite`]: 20 to 1100 kPa absolute, −80 to 150 °C.
+/// [`Error::OutOfRange`], [`Error::NotFinite`]: 20 to 1100 kPa absolute, −80 to 150 °C (to 5 MPa and 200 °C with the Helmholtz formulation).
 ///
 /// ```
 /// use moistair_core::*;

@@ -161,7 +161,7 @@ fn first_crossing<S: Scalar>(air: &MoistAir<S>, enthalpy: S, fraction: S) -> Opt
         let excess = |s: S| {
             let ratio = w1 + s;
             let celsius = temperature_of_enthalpy::<M<S>, S>(h1 + s * enthalpy, pressure, ratio);
-            let (coldest, warmest) = Quantity::DryBulb.limits();
+            let (coldest, warmest) = air.formulation().limits(Quantity::DryBulb);
             let cool_enough = celsius <= k(warmest);
             if !cool_enough {
                 return None;
@@ -255,7 +255,7 @@ pub fn evaporative<S: Scalar>(
     let wet_bulb = air.wet_bulb()?.celsius();
     let melting = with_mixture!(air.formulation(), S, M => <M<S> as Mixture<S>>::melting_temperature(pressure));
     if wet_bulb < melting {
-        let (_, warmest) = Quantity::WetBulb.limits();
+        let (_, warmest) = air.formulation().limits(Quantity::WetBulb);
         return Err(infeasible(Quantity::WetBulb, wet_bulb, melting, k(warmest)));
     }
     let water = match water {

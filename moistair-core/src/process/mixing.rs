@@ -57,7 +57,7 @@ pub fn adiabatic_at<S: Scalar>(
 ) -> Result<Mixed<S>, Error> {
     let first = flowing(streams).next().ok_or(Error::NoFlow)?;
     let basis: Basis<S> = first.air().air().basis().at_pressure(outlet);
-    checked_pressure(outlet)?;
+    checked_pressure(&basis)?;
     let zero = k::<S>(0.0);
     let (mut flow, mut water, mut enthalpy) = (zero, zero, zero);
     for stream in flowing(streams) {

@@ -12,7 +12,7 @@ use crate::real::{Scalar, k};
 use crate::saturation::Surface;
 use crate::solve;
 use crate::state::MoistAir;
-use crate::state::property::{DEW_POINT_STEPS, dew_point};
+use crate::state::property::dew_point;
 
 /// A coil and the heater behind it.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -63,7 +63,7 @@ pub fn to_state<S: Scalar>(
     // A target on the coil's own curve needs no reheat; the solve may place it a rounding above.
     let rounding = solve::temperature_resolution::<S>() * k(32.0);
     if celsius > reached + rounding {
-        let (_, warmest) = Quantity::LeavingTemperature.limits();
+        let (_, warmest) = target.formulation().limits(Quantity::LeavingTemperature);
         return Err(infeasible(Quantity::LeavingTemperature, reached, celsius, k(warmest)));
     }
     let ratio = target.humidity_ratio().kilograms_per_kilogram();
@@ -79,7 +79,7 @@ fn off_coil_temperature<S: Scalar>(entering: &MoistAir<S>, target: &MoistAir<S>,
     let ratio = target.humidity_ratio().kilograms_per_kilogram();
     let pressure = target.pressure().pascals();
     with_mixture!(target.formulation(), S, M => {
-        let coldest = k::<S>(Quantity::LeavingTemperature.limits().0);
+        let coldest = k::<S>(target.formulation().limits(Quantity::LeavingTemperature).0);
         let driest = M::<S>::at(coldest).saturation(pressure, Surface::Ice).mole_fraction * fraction;
         let mole_fraction = <M<S> as Mixture<S>>::mole_fraction(ratio);
         if mole_fraction < driest {
@@ -90,7 +90,7 @@ fn off_coil_temperature<S: Scalar>(entering: &MoistAir<S>, target: &MoistAir<S>,
         if saturated > k(Quantity::WaterMoleFraction.limits().1) {
             return Err(infeasible(Quantity::RelativeHumidity, fraction, mole_fraction, k(1.0)));
         }
-        let over = |surface| dew_point::<M<S>, S, DEW_POINT_STEPS>(saturated, pressure, surface);
+        let over = |surface| dew_point::<M<S>, S>(saturated, pressure, surface);
         let melting = <M<S> as Mixture<S>>::melting_temperature(pressure);
         let at_melting = M::<S>::at(melting).saturation(pressure, Surface::Liquid).mole_fraction;
         Ok(if saturated < at_melting { over(Surface::Ice).at_most(melting) } else { over(Surface::Liquid) })

@@ -3,7 +3,7 @@
 use super::{AirStream, Exchange, capacity, infeasible, parts};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
-use crate::error::{Error, checked};
+use crate::error::{Error, checked, checked_for};
 use crate::quantity::{HeatFlow, Temperature};
 use crate::real::{Scalar, k};
 use crate::state::MoistAir;
@@ -38,7 +38,7 @@ pub struct Sensible<S = f64> {
 /// # Ok::<(), Error>(())
 /// ```
 pub fn to_temperature<S: Scalar>(entering: &AirStream<S>, leaving: Temperature<S>) -> Result<Sensible<S>, Error> {
-    let celsius = checked(Quantity::LeavingTemperature, leaving.celsius())?;
+    let celsius = checked_for(entering.air().formulation(), Quantity::LeavingTemperature, leaving.celsius())?;
     let air = at_same_ratio(&entering.air(), celsius)?;
     let heat = entering.dry_air_flow * (parts(&air).0 - parts(&entering.air()).0);
     Ok(Sensible { leaving: entering.with_air(air), exchange: Exchange::new(heat, k(0.0), k(0.0)) })
@@ -63,7 +63,8 @@ pub fn with_heat<S: Scalar>(entering: &AirStream<S>, heat: HeatFlow<S>) -> Resul
     let start = air.dry_bulb().celsius();
     let celsius = if watts > k(0.0) { solved.at_least(start) } else { solved.at_most(start) };
     at_same_ratio(&air, celsius).map(|air| Sensible { leaving: entering.with_air(air), exchange }).map_err(|_| {
-        let (coldest, warmest) = (coldest_without_condensate(&air), Quantity::LeavingTemperature.limits().1);
+        let (_, warmest) = air.formulation().limits(Quantity::LeavingTemperature);
+        let coldest = coldest_without_condensate(&air);
         let heat_to = |celsius: f64| {
             let end = MoistAir::assemble(k(celsius), air.pressure().pascals(), ratio, air.formulation());
             entering.dry_air_flow * (parts(&end).0 - enthalpy)
@@ -76,7 +77,7 @@ pub fn with_heat<S: Scalar>(entering: &AirStream<S>, heat: HeatFlow<S>) -> Resul
 pub(super) fn at_same_ratio<S: Scalar>(air: &MoistAir<S>, celsius: S) -> Result<MoistAir<S>, Error> {
     let ratio = air.humidity_ratio().kilograms_per_kilogram();
     let pressure = air.pressure().pascals();
-    let (coldest, warmest) = Quantity::LeavingTemperature.limits();
+    let (coldest, warmest) = air.formulation().limits(Quantity::LeavingTemperature);
     let in_range = k::<S>(coldest) <= celsius && celsius <= k(warmest);
     if in_range && (celsius >= air.dry_bulb().celsius() || ratio <= capacity(air, celsius)) {
         return Ok(MoistAir::assemble(celsius, pressure, ratio, air.formulation()));
@@ -93,5 +94,6 @@ pub(super) fn at_same_ratio<S: Scalar>(air: &MoistAir<S>, celsius: S) -> Result<
 fn coldest_without_condensate<S: Scalar>(air: &MoistAir<S>) -> f64 {
     let dew_point = air.dew_point().map(|dew| dew.celsius());
     let coldest = dew_point.or_else(|_| air.frost_point().map(|frost| frost.celsius()));
-    coldest.map_or(f64::NEG_INFINITY, Scalar::to_f64).max(Quantity::LeavingTemperature.limits().0)
+    let (end, _) = air.formulation().limits(Quantity::LeavingTemperature);
+    coldest.map_or(end, |dew| dew.to_f64().max(end))
 }

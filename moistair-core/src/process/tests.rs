@@ -3,7 +3,7 @@
 use super::*;
 use crate::basis::Formulation;
 use crate::checks::Random;
-use crate::mixture::{IdealGas, RealGas};
+use crate::mixture::{Helmholtz, IdealGas, RealGas};
 use crate::saturation::Surface;
 use std::println;
 
@@ -16,7 +16,12 @@ fn roughness<M: Mixture<f64>>() -> f64 {
     let mut random = Random(1);
     let mut worst = 0.0_f64;
     for _ in 0..3_000 {
-        let (celsius, pressure) = (random.between(-80.0, 150.0), random.between(2e4, 1.1e6));
+        let within = |random: &mut Random, quantity| {
+            let (low, high) = M::FORMULATION.limits(quantity);
+            random.between(low, high)
+        };
+        let celsius = within(&mut random, Quantity::DryBulb);
+        let pressure = within(&mut random, Quantity::Pressure);
         let limit = greatest_humidity_ratio(&M::at(celsius), celsius, pressure);
         let ratio = limit * random.between(0.0, 1.0);
         let first = M::at(celsius).gas(pressure, ratio);
@@ -37,10 +42,15 @@ fn roughness<M: Mixture<f64>>() -> f64 {
 #[test]
 fn roughness_of_enthalpy() {
     let (real, ideal) = (roughness::<RealGas<f64>>(), roughness::<IdealGas<f64>>());
-    println!("enthalpy is rough by {real:.2} (real gas), {ideal:.2} (ideal gas) units of ε T c_p");
+    let helmholtz = roughness::<Helmholtz<f64>>();
+    println!(
+        "enthalpy is rough by {real:.2} (real gas), {ideal:.2} (ideal gas), {helmholtz:.2} (Helmholtz) units of ε T c_p"
+    );
     let (for_real, for_ideal) = (books::resolution(Formulation::RealGas), books::resolution(Formulation::IdealGas));
     assert!(real <= for_real && real > for_real / 2.0, "the allowance is too small, or stale");
     assert!(ideal <= for_ideal);
+    let allowed = books::resolution(Formulation::Helmholtz);
+    assert!(helmholtz <= allowed && helmholtz > allowed / 2.0, "the allowance is too small, or stale");
 }
 
 /// The enthalpy of condensate, J/kg: rougher than that of air, most of all next to the limit of stability of the supercooled liquid.
@@ -84,11 +94,13 @@ fn evaluations_stay_below_the_cap() {
     };
     let cases = std::env::var("MOISTAIR_CASES").map_or(1_500, |cases| cases.parse().unwrap());
     for _ in 0..cases {
-        let formulation = if random.bits() & 1 == 0 { Formulation::RealGas } else { Formulation::IdealGas };
-        let pressure = if random.bits() & 1 == 0 { 101_325.0 } else { random.between(2e4, 1.1e6) };
+        let formulation = Formulation::ALL[(random.bits() % 3) as usize];
+        let (_, highest) = formulation.limits(Quantity::Pressure);
+        let (coldest, warmest) = formulation.limits(Quantity::DryBulb);
+        let pressure = if random.bits() & 1 == 0 { 101_325.0 } else { random.between(2e4, highest) };
         let mut air = || {
             // Round numbers too: a root at 0 °C is the hardest to halve down to.
-            let celsius = if random.bits() % 4 == 0 { 0.0 } else { random.between(-80.0, 150.0) };
+            let celsius = if random.bits() % 4 == 0 { 0.0 } else { random.between(coldest, warmest) };
             let limit = with_mixture!(formulation, f64, M => greatest_humidity_ratio(&M::<f64>::at(celsius), celsius, pressure));
             let share = random.between(0.0, 1.2).min(1.0);
             (MoistAir::assemble(celsius, pressure, limit * share, formulation), random.between(0.0, 1.0))
@@ -189,7 +201,7 @@ fn single_precision() {
         .map(Scalar::to_f64)
         .to_vec()
     }
-    for formulation in [Formulation::RealGas, Formulation::IdealGas] {
+    for &formulation in Formulation::ALL {
         let (single, double) = (results::<f32>(formulation), results::<f64>(formulation));
         let off: Vec<f64> = single.iter().zip(&double).map(|(a, b)| (a / b - 1.0).abs()).collect();
         println!("{formulation:?}, single against double precision, relative: {off:.7?}");

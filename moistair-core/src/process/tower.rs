@@ -164,8 +164,9 @@ pub fn with_air_flow<S: Scalar>(
     // h₂ − W₂ h_w2 that the leaving air must have.
     let target = (h1 - w1 * side.cold) + side.heat / flow;
     // It leaves no warmer than the hot water.
-    let (coldest, warmest) = (k::<S>(Quantity::DewPoint.limits().0), k::<S>(Quantity::DryBulb.limits().1));
-    let warmest = warmest.at_most(water.hot.celsius());
+    let (coldest, _) = air.formulation().limits(Quantity::DewPoint);
+    let (_, warmest) = air.formulation().limits(Quantity::DryBulb);
+    let (coldest, warmest) = (k::<S>(coldest), k::<S>(warmest).at_most(water.hot.celsius()));
     let leaving = with_mixture!(air.formulation(), S, M => {
         // What saturated air has beyond the target, the slope of that, and the humidity ratio that is left without it.
         let saturated = |celsius: S| {

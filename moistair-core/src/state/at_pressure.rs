@@ -3,12 +3,13 @@
 
 use crate::basis::{Basis, with_mixture};
 use crate::bounds::Quantity;
-use crate::error::{Error, NoValue, checked};
+use crate::error::{Error, NoValue, checked_for};
 use crate::mixture::Mixture;
 use crate::quantity::{DewPoint, FrostPoint, Pressure, Temperature};
 use crate::real::Scalar;
 use crate::saturation::Surface;
 
+use super::condensate::checked_pressure;
 use super::property::{saturates, saturation_point};
 use super::{MoistAir, SecondProperty};
 
@@ -93,7 +94,7 @@ impl<S: Scalar> MoistAir<S> {
     /// # Errors
     /// As [`MoistAir::dew_point_at`]; [`Error::UnknownSelector`] for any other quantity.
     pub fn saturation_temperature_at(&self, quantity: Quantity, pressure: Pressure<S>) -> Result<S, Error> {
-        let pressure = checked(Quantity::Pressure, pressure.pascals())?;
+        let pressure = checked_pressure(&self.basis().at_pressure(pressure))?;
         surface(quantity)?;
         with_mixture!(self.formulation, S, M => saturation_point::<M<S>, S>(quantity, self.mole_fraction(), pressure))
     }
@@ -139,9 +140,8 @@ pub fn saturation_temperature_after<S: Scalar>(
 ) -> Result<S, Error> {
     let basis = basis.into();
     let (over, _) = (surface(quantity)?, surface(wanted)?);
-    let celsius = checked(quantity, value)?;
-    let from = checked(Quantity::Pressure, basis.pressure().pascals())?;
-    let to = checked(Quantity::Pressure, pressure.pascals())?;
+    let celsius = checked_for(basis.formulation(), quantity, value)?;
+    let (from, to) = (checked_pressure(&basis)?, checked_pressure(&basis.at_pressure(pressure))?);
     with_mixture!(basis.formulation(), S, M => {
         if over == Surface::Ice && celsius > <M<S> as Mixture<S>>::melting_temperature(from) {
             return Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange });

@@ -2,19 +2,16 @@
 
 use crate::basis::{Basis, Formulation, with_mixture};
 use crate::bounds::Quantity;
-use crate::error::{Error, checked};
+use crate::error::{Error, checked, checked_for};
 use crate::mixture::Mixture;
-use crate::quantity::{HumidityRatio, Pressure, SpecificEnthalpy, Temperature};
+use crate::quantity::{HumidityRatio, SpecificEnthalpy, Temperature};
 use crate::real::{Scalar, k};
-use crate::saturation::Surface;
+use crate::saturation::{Magnus, Surface};
 use crate::solve;
 
 use super::MoistAir;
 use super::construct::{SATURATION_TOLERANCE, saturation_rounding};
-use super::property::{DEW_POINT_STEPS, condensed_heat_capacity, dew_point};
-
-/// Newton steps for the temperature that goes with an enthalpy; see the test of this module.
-const TEMPERATURE_STEPS: usize = 4;
+use super::property::{condensed_heat_capacity, dew_point};
 
 /// K. A last step below this has found the temperature: the next would be its square.
 const SETTLED: f64 = 1e-3;
@@ -97,7 +94,7 @@ impl<S: Scalar> AirWithCondensate<S> {
         let celsius = air.dry_bulb().celsius();
         let melting = with_mixture!(air.formulation(), S, M =>
             <M<S> as Mixture<S>>::melting_temperature(air.pressure().pascals()));
-        let (coldest, warmest) = Quantity::DryBulb.limits();
+        let (coldest, warmest) = air.formulation().limits(Quantity::DryBulb);
         let min = if liquid > k(0.0) { k(Quantity::DewPoint.limits().0) } else { k(coldest) };
         let max = if ice > k(0.0) { melting } else { k(warmest) };
         if celsius < min || celsius > max {
@@ -146,9 +143,9 @@ impl<S: Scalar> AirWithCondensate<S> {
         basis: impl Into<Basis<S>>,
     ) -> Result<Self, Error> {
         let basis = basis.into();
-        let celsius = checked(Quantity::DryBulb, dry_bulb.celsius())?;
+        let celsius = checked_for(basis.formulation(), Quantity::DryBulb, dry_bulb.celsius())?;
         let water = checked(Quantity::TotalWater, total_water.kilograms_per_kilogram())?;
-        let pressure = checked(Quantity::Pressure, basis.pressure().pascals())?;
+        let pressure = checked_pressure(&basis)?;
         with_mixture!(basis.formulation(), S, M => {
             let held = capacity::<M<S>, S>(celsius, pressure, freezing);
             let state = |ratio| MoistAir::assemble(celsius, pressure, ratio, basis.formulation());
@@ -196,8 +193,8 @@ impl<S: Scalar> AirWithCondensate<S> {
         let basis = basis.into();
         let enthalpy = checked(Quantity::LeavingEnthalpy, enthalpy.joules_per_kilogram())?;
         let water = checked(Quantity::TotalWater, total_water.kilograms_per_kilogram())?;
-        let pressure = checked(Quantity::Pressure, basis.pressure().pascals())?;
-        with_mixture!(basis.formulation(), S, M => equilibrium::<M<S>, S>(enthalpy, water, pressure, freezing, basis.formulation()))
+        let pressure = checked_pressure(&basis)?;
+        with_mixture!(basis.formulation(), S, M => equilibrium::<M<S>, S>(enthalpy, water, pressure, freezing))
     }
 }
 
@@ -210,22 +207,33 @@ pub(crate) fn condensed_enthalpy<S: Scalar>(formulation: Formulation, celsius: S
 ///
 /// Far beyond saturation the equation of the real gas has no meaning, nor has what Newton finds there: its last step tells.
 pub(crate) fn temperature_of_enthalpy<M: Mixture<S>, S: Scalar>(enthalpy: S, pressure: S, humidity_ratio: S) -> S {
-    let (celsius, last_step) = search_temperature::<M, S, TEMPERATURE_STEPS>(enthalpy, pressure, humidity_ratio);
+    let (celsius, last_step) = search_temperature::<M, S>(M::STEPS.temperature, enthalpy, pressure, humidity_ratio);
     let settled = k::<S>(SETTLED);
-    if -settled < last_step && last_step < settled { within_states(celsius) } else { S::nan() }
+    if -settled < last_step && last_step < settled {
+        // What the last bits of the enthalpy are worth comes to the temperature's own.
+        let bits = enthalpy.at_least(-enthalpy) * S::epsilon() * k(4.0) / heat_capacity(humidity_ratio);
+        within_states::<M, S>(celsius, bits)
+    } else {
+        S::nan()
+    }
+}
+
+/// Of the gas, near enough, per kilogram of dry air, J/(kg K).
+fn heat_capacity<S: Scalar>(humidity_ratio: S) -> S {
+    humidity_ratio * k(1_860.0) + k(1_006.0)
 }
 
 /// The temperature after some steps, and the last of them.
-fn search_temperature<M: Mixture<S>, S: Scalar, const STEPS: usize>(
-    enthalpy: S,
-    pressure: S,
-    humidity_ratio: S,
-) -> (S, S) {
-    let mut celsius = (enthalpy - humidity_ratio * k(2_501_000.0)) / (humidity_ratio * k(1_860.0) + k(1_006.0));
+fn search_temperature<M: Mixture<S>, S: Scalar>(steps: usize, enthalpy: S, pressure: S, humidity_ratio: S) -> (S, S) {
+    let mut celsius = (enthalpy - humidity_ratio * k(2_501_000.0)) / heat_capacity(humidity_ratio);
+    // The forces in dense steam cost it up to 45 K here; started so far within saturation, the search would not end.
+    let saturated = Magnus::over(Surface::Liquid).temperature((M::mole_fraction(humidity_ratio) * pressure).ln());
+    celsius = celsius.at_least(saturated - k(20.0));
     let mut step = S::infinity();
-    for _ in 0..STEPS {
+    let (coldest, warmest) = M::FORMULATION.limits(Quantity::DryBulb);
+    for _ in 0..steps {
         // An enthalpy far outside leads far outside the equations; the caller checks the range.
-        celsius = celsius.at_least(k(-120.0)).at_most(k(200.0));
+        celsius = celsius.at_least(k(coldest - 40.0)).at_most(k(warmest + 50.0));
         let gas = M::at(celsius).gas(pressure, humidity_ratio);
         step = (gas.enthalpy - enthalpy) / gas.specific_heat;
         celsius = celsius - step;
@@ -234,9 +242,9 @@ fn search_temperature<M: Mixture<S>, S: Scalar, const STEPS: usize>(
 }
 
 /// The temperature, at an end of the range of states where rounding carried it past.
-fn within_states<S: Scalar>(celsius: S) -> S {
-    let (coldest, warmest) = Quantity::DryBulb.limits();
-    let rounding = solve::temperature_resolution::<S>() * k(32.0);
+fn within_states<M: Mixture<S>, S: Scalar>(celsius: S, bits: S) -> S {
+    let (coldest, warmest) = M::FORMULATION.limits(Quantity::DryBulb);
+    let rounding = solve::temperature_resolution::<S>() * k(32.0) + bits;
     let near = |end: S| end - rounding <= celsius && celsius <= end + rounding;
     if near(k(coldest)) {
         k(coldest)
@@ -284,10 +292,9 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
     water: S,
     pressure: S,
     freezing: Freezing,
-    formulation: Formulation,
 ) -> Result<AirWithCondensate<S>, Error> {
-    let state = |celsius, ratio| MoistAir::assemble(celsius, pressure, ratio, formulation);
-    let (coldest, warmest) = Quantity::DryBulb.limits();
+    let state = |celsius, ratio| MoistAir::assemble(celsius, pressure, ratio, M::FORMULATION);
+    let (coldest, warmest) = M::FORMULATION.limits(Quantity::DryBulb);
     let in_range = |celsius: S| k::<S>(coldest) <= celsius && celsius <= k(warmest);
     let dry_bulb = temperature_of_enthalpy::<M, S>(enthalpy, pressure, water);
     // Saturated to rounding is not fog.
@@ -300,7 +307,7 @@ fn equilibrium<M: Mixture<S>, S: Scalar>(
     let melting = M::melting_temperature(pressure);
     let wet = |celsius, surface| Wet::at::<M>(celsius, pressure, water, surface);
     let mole_fraction = M::mole_fraction(water);
-    let dew = |surface| dew_point::<M, S, DEW_POINT_STEPS>(mole_fraction, pressure, surface);
+    let dew = |surface| dew_point::<M, S>(mole_fraction, pressure, surface);
     let (curve, low, high) = match freezing {
         Freezing::Supercooled => (Surface::Liquid, k(Quantity::DewPoint.limits().0), dew(Surface::Liquid)),
         Freezing::Equilibrium => {
@@ -371,9 +378,9 @@ fn capacity<M: Mixture<S>, S: Scalar>(celsius: S, pressure: S, freezing: Freezin
     if super::property::saturates(saturation.mole_fraction) { saturation.humidity_ratio } else { S::infinity() }
 }
 
-/// A pressure of an outlet, checked.
-pub(crate) fn checked_pressure<S: Scalar>(pressure: Pressure<S>) -> Result<S, Error> {
-    checked(Quantity::Pressure, pressure.pascals())
+/// The pressure of a basis, checked.
+pub(crate) fn checked_pressure<S: Scalar>(basis: &Basis<S>) -> Result<S, Error> {
+    checked_for(basis.formulation(), Quantity::Pressure, basis.pressure().pascals())
 }
 
 /// Enthalpy per kilogram of liquid water, on the datum of a basis.
@@ -386,7 +393,7 @@ pub fn liquid_water_enthalpy<S: Scalar>(
 ) -> Result<SpecificEnthalpy<S>, Error> {
     let basis = basis.into();
     let celsius = checked(Quantity::WaterTemperature, temperature.celsius())?;
-    let pressure = checked_pressure(basis.pressure())?;
+    let pressure = checked_pressure(&basis)?;
     let enthalpy = condensed_enthalpy(basis.formulation(), celsius, pressure, Surface::Liquid);
     Ok(SpecificEnthalpy::from_joules_per_kilogram(enthalpy))
 }
@@ -396,39 +403,43 @@ mod steps {
     use std::println;
 
     use super::*;
-    use crate::mixture::{IdealGas, RealGas};
+    use crate::mixture::{Helmholtz, IdealGas, RealGas, Steps};
     use crate::state::property::tests::states;
 
-    fn left_over<const STEPS: usize>() -> f64 {
-        fn of<M: Mixture<f64>, const STEPS: usize>() -> f64 {
-            let error = |(celsius, pressure, w, gas): (f64, f64, f64, crate::mixture::Gas<f64>)| {
-                (search_temperature::<M, f64, STEPS>(gas.enthalpy, pressure, w).0 - celsius).abs()
-            };
-            states::<M>().map(error).fold(0.0, |most, error| if error <= most { most } else { error })
-        }
-        let (real, ideal) = (of::<RealGas<f64>, STEPS>(), of::<IdealGas<f64>, STEPS>());
-        println!("temperature of an enthalpy after {STEPS} steps: real gas {real:e} K, ideal gas {ideal:e} K");
-        real.max(ideal)
+    fn left_over<M: Mixture<f64>>(steps: usize) -> f64 {
+        let error = |(celsius, pressure, w, gas): (f64, f64, f64, crate::mixture::Gas<f64>)| {
+            (search_temperature::<M, f64>(steps, gas.enthalpy, pressure, w).0 - celsius).abs()
+        };
+        let left = states::<M>().map(error).fold(0.0, |most, error| if error <= most { most } else { error });
+        println!("temperature of an enthalpy, {:?}: after {steps} steps {left:e} K", M::FORMULATION);
+        left
     }
 
-    /// The constant passes the bound and one step fewer does not.
+    /// The constants pass the bound and one step fewer does not.
     #[test]
     fn temperature_steps_are_enough_and_none_is_idle() {
         const BOUND: f64 = 1e-11;
-        assert!(left_over::<TEMPERATURE_STEPS>() <= BOUND);
-        assert!(left_over::<{ TEMPERATURE_STEPS - 1 }>() > BOUND, "one step fewer does as well: the constant is stale");
+        let check = |steps: usize, left: &dyn Fn(usize) -> f64| {
+            assert!(left(steps) <= BOUND);
+            assert!(left(steps - 1) > BOUND, "one step fewer does as well: the constant is stale");
+        };
+        check(Steps::TO_150_CELSIUS.temperature, &|steps| {
+            left_over::<RealGas<f64>>(steps).max(left_over::<IdealGas<f64>>(steps))
+        });
+        check(<Helmholtz<f64> as Mixture<f64>>::STEPS.temperature, &left_over::<Helmholtz<f64>>);
     }
 
     /// No state is taken for one that the search did not find.
     #[test]
     fn every_state_is_found() {
         fn longest<M: Mixture<f64>>() -> f64 {
-            states::<M>().fold(0.0, |most, (_, pressure, w, gas)| {
-                most.max(search_temperature::<M, f64, TEMPERATURE_STEPS>(gas.enthalpy, pressure, w).1.abs())
-            })
+            let last = states::<M>().fold(0.0, |most: f64, (_, pressure, w, gas)| {
+                most.max(search_temperature::<M, f64>(M::STEPS.temperature, gas.enthalpy, pressure, w).1.abs())
+            });
+            println!("last step of the temperature, {:?}: {last:e} K", M::FORMULATION);
+            last
         }
-        let (real, ideal) = (longest::<RealGas<f64>>(), longest::<IdealGas<f64>>());
-        println!("last step of the temperature: real gas {real:e} K, ideal gas {ideal:e} K");
-        assert!(real.max(ideal) < 0.1 * SETTLED);
+        let all = [longest::<RealGas<f64>>(), longest::<IdealGas<f64>>(), longest::<Helmholtz<f64>>()];
+        assert!(all.iter().all(|last| *last < 0.1 * SETTLED));
     }
 }

@@ -2,17 +2,15 @@
 
 use crate::basis::{Basis, with_mixture};
 use crate::bounds::Quantity;
-use crate::error::{Error, NoValue, checked};
+use crate::error::{Error, NoValue, checked_for};
 use crate::mixture::{Gas, Mixture};
 use crate::quantity::*;
 use crate::real::{Real, Scalar, k};
 use crate::saturation::Surface;
 
 use super::MoistAir;
+use super::condensate::checked_pressure;
 use super::property::{View, saturates};
-
-/// Newton steps for humidity ratio from enthalpy, volume or wet bulb; see the test of this module.
-pub(super) const RATIO_STEPS: usize = 3;
 
 /// A value this close beyond saturation, relative in the humidity ratio, counts as saturated: it is rounding. In single
 /// precision it is [`saturation_rounding`].
@@ -65,7 +63,7 @@ second_properties! {
 impl<S: Scalar> MoistAir<S> {
     /// A state from dry bulb, any second property by its type, and a basis (a pressure, or pressure and formulation).
     ///
-    /// Range: dry bulb −80 to 150 °C, 20 to 1100 kPa, humidity ratio to 10 kg/kg, vapor up to saturation over liquid water (over
+    /// Range: dry bulb −80 to 150 °C, 20 to 1100 kPa (200 °C and 5 MPa with the Helmholtz formulation), humidity ratio to 10 kg/kg, vapor up to saturation over liquid water (over
     /// ice below −40 °C, where no liquid lasts). Vapor supersaturated over ice is a valid state. The dry bulb reads back
     /// bit for bit. A second property within 1e-9 beyond saturation in the humidity ratio is taken as saturated (in single precision
     /// within 1.2e-4, and more where vapor outweighs the air).
@@ -107,10 +105,11 @@ impl<S: Scalar> MoistAir<S> {
         if !quantity.fixes_state() {
             return Err(Error::UnknownSelector { code: quantity.code() });
         }
-        let celsius = checked(Quantity::DryBulb, dry_bulb.celsius())?;
-        let pressure = checked(Quantity::Pressure, basis.pressure().pascals())?;
-        let value = checked(quantity, value)?;
-        with_mixture!(basis.formulation(), S, M => {
+        let formulation = basis.formulation();
+        let celsius = checked_for(formulation, Quantity::DryBulb, dry_bulb.celsius())?;
+        let pressure = checked_pressure(&basis)?;
+        let value = checked_for(formulation, quantity, value)?;
+        with_mixture!(formulation, S, M => {
             let mixture = M::<S>::at(celsius);
             let (limit, saturated) = capacity(&mixture, celsius, pressure);
             let over_surface = |reason| Err(Error::NoValue { quantity, reason });
@@ -134,7 +133,7 @@ impl<S: Scalar> MoistAir<S> {
                 .ok_or(Error::UnknownSelector { code: quantity.code() })?;
             let inside = |humidity_ratio: S| {
                 let gas = mixture.gas(pressure, humidity_ratio);
-                Self { celsius, pascals: pressure, humidity_ratio, gas, formulation: basis.formulation() }
+                Self { celsius, pascals: pressure, humidity_ratio, gas, formulation }
             };
             match settle(ratio, limit, is_searched(quantity)) {
                 Some(humidity_ratio) => Ok(inside(humidity_ratio)),
@@ -142,7 +141,7 @@ impl<S: Scalar> MoistAir<S> {
                     let end = |humidity_ratio: S| {
                         View { mixture, air: inside(humidity_ratio) }.value(quantity).map(Scalar::to_f64)
                     };
-                    let (least, most) = quantity.limits();
+                    let (least, most) = formulation.limits(quantity);
                     // What has no value rises with the vapor: into its range from below, out of it above. If it is past its range at
                     // the dry end, or short of it at the other, no state here has it.
                     let a = match end(k(0.0)) {
@@ -153,7 +152,14 @@ impl<S: Scalar> MoistAir<S> {
                         Err(Error::NoValue { reason: NoValue::AboveSurfaceRange, .. }) => most,
                         other => other?,
                     };
-                    Err(Error::Unattainable { quantity, value: value.to_f64(), min: a.min(b), max: a.max(b) })
+                    let value = value.to_f64();
+                    // In dense cold air density hardly changes with the vapor, and its last bits are worth any amount of it.
+                    let same = |end: f64| (value - end).abs() <= 32.0 * S::epsilon().to_f64() * end;
+                    match quantity {
+                        Quantity::Density if same(a) => Ok(inside(k(0.0))),
+                        Quantity::Density if same(b) => Ok(inside(limit)),
+                        _ => Err(Error::Unattainable { quantity, value, min: a.min(b), max: a.max(b) }),
+                    }
                 }
             }
         })
@@ -249,10 +255,11 @@ pub(super) fn humidity_ratio<M: Mixture<R>, R: Real>(
     value: R,
     limit: R,
 ) -> Option<R> {
-    humidity_ratio_after::<RATIO_STEPS, M, R>(mixture, pressure, quantity, value, limit)
+    humidity_ratio_after::<M, R>(M::STEPS.humidity_ratio, mixture, pressure, quantity, value, limit)
 }
 
-fn humidity_ratio_after<const STEPS: usize, M: Mixture<R>, R: Real>(
+fn humidity_ratio_after<M: Mixture<R>, R: Real>(
+    steps: usize,
     mixture: &M,
     pressure: R,
     quantity: Quantity,
@@ -268,7 +275,7 @@ fn humidity_ratio_after<const STEPS: usize, M: Mixture<R>, R: Real>(
         let saturated = wet.gas(pressure, saturation.humidity_ratio);
         let condensed = saturation.condensed_enthalpy;
         let target = saturated.enthalpy - saturation.humidity_ratio * condensed;
-        Some(search_ratio_after::<STEPS, M, R>(mixture, pressure, limit, move |w, gas| {
+        Some(search_ratio_after::<M, R>(steps, mixture, pressure, limit, move |w, gas| {
             (gas.enthalpy - w * condensed - target, gas.enthalpy_of_water - condensed)
         }))
     };
@@ -285,16 +292,16 @@ fn humidity_ratio_after<const STEPS: usize, M: Mixture<R>, R: Real>(
         Quantity::WetBulb => wet_bulb(Surface::Stable),
         Quantity::WetBulbOverLiquid => wet_bulb(Surface::Liquid),
         Quantity::WetBulbOverIce => wet_bulb(Surface::Ice),
-        Quantity::SpecificEnthalpy => Some(search_ratio_after::<STEPS, M, R>(mixture, pressure, limit, |_, gas| {
+        Quantity::SpecificEnthalpy => Some(search_ratio_after::<M, R>(steps, mixture, pressure, limit, |_, gas| {
             (gas.enthalpy - value, gas.enthalpy_of_water)
         })),
-        Quantity::SpecificVolume => Some(search_ratio_after::<STEPS, M, R>(mixture, pressure, limit, |_, gas| {
+        Quantity::SpecificVolume => Some(search_ratio_after::<M, R>(steps, mixture, pressure, limit, |_, gas| {
             (gas.volume - value, gas.volume_of_water)
         })),
-        Quantity::Density => Some(search_ratio_after::<STEPS, M, R>(mixture, pressure, limit, |w, gas| {
+        Quantity::Density => Some(search_ratio_after::<M, R>(steps, mixture, pressure, limit, |w, gas| {
             (value * gas.volume - one - w, value * gas.volume_of_water - one)
         })),
-        Quantity::AbsoluteHumidity => Some(search_ratio_after::<STEPS, M, R>(mixture, pressure, limit, |w, gas| {
+        Quantity::AbsoluteHumidity => Some(search_ratio_after::<M, R>(steps, mixture, pressure, limit, |w, gas| {
             (value * gas.volume - w, value * gas.volume_of_water - one)
         })),
         _ => None,
@@ -308,10 +315,11 @@ pub(crate) fn search_ratio<M: Mixture<R>, R: Real>(
     limit: R,
     f: impl Fn(R, &Gas<R>) -> (R, R),
 ) -> R {
-    search_ratio_after::<RATIO_STEPS, M, R>(mixture, pressure, limit, f)
+    search_ratio_after::<M, R>(M::STEPS.humidity_ratio, mixture, pressure, limit, f)
 }
 
-fn search_ratio_after<const STEPS: usize, M: Mixture<R>, R: Real>(
+fn search_ratio_after<M: Mixture<R>, R: Real>(
+    steps: usize,
     mixture: &M,
     pressure: R,
     limit: R,
@@ -325,7 +333,7 @@ fn search_ratio_after<const STEPS: usize, M: Mixture<R>, R: Real>(
     let chord = (saturated - dry.0) / limit;
     let slope = R::select(limit.lt(k(1e-6)), dry.1, chord);
     let mut w = near(-(dry.0 / slope));
-    for _ in 0..STEPS {
+    for _ in 0..steps {
         let (value, slope) = at(w);
         w = near(w - value / slope);
     }

@@ -3,70 +3,66 @@
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, NoValue};
-use crate::mixture::Mixture;
 use crate::mixture::transport::Transport;
-use crate::quantity::{Diffusivity, DynamicViscosity, SpecificEntropy, Speed, ThermalConductivity, ZERO_CELSIUS};
+use crate::mixture::{Mixture, Potentials, Steps};
+use crate::quantity::{
+    ChemicalPotential, Diffusivity, DynamicViscosity, Fugacity, SpecificEntropy, SpecificHeat, Speed,
+    ThermalConductivity, ZERO_CELSIUS,
+};
 use crate::real::{Mask, Real, Scalar, k};
 use crate::saturation::{Magnus, Surface};
 use crate::substance::{ice, liquid_water};
 
 use super::MoistAir;
 
-/// Newton steps, constant so that the work is; the tests of this module show each count to be enough and none to be idle.
-pub(crate) const DEW_POINT_STEPS: usize = 3;
-pub(super) const WET_BULB_STEPS: usize = 3;
-const WET_BULB_HALVINGS: usize = 8;
-
-/// °C. Below the ranges of dew and frost points by 5 K: in dry air a first step may lead to where no equation holds.
-const fn coldest_trial(surface: Surface) -> f64 {
-    match surface {
-        Surface::Ice => ice::RANGE.0,
-        Surface::Liquid | Surface::Stable => liquid_water::RANGE.0,
-    }
-}
-
 /// Temperature, °C, at which a water mole fraction saturates over a surface.
 ///
 /// ln x_ws is nearly linear in 1/T: Newton in that variable.
-pub(crate) fn dew_point<M: Mixture<R>, R: Real, const STEPS: usize>(
-    mole_fraction: R,
-    pressure: R,
-    surface: Surface,
-) -> R {
+pub(crate) fn dew_point<M: Mixture<R>, R: Real>(mole_fraction: R, pressure: R, surface: Surface) -> R {
+    dew_point_after::<M, R>(M::STEPS.dew_point, mole_fraction, pressure, surface)
+}
+
+fn dew_point_after<M: Mixture<R>, R: Real>(steps: usize, mole_fraction: R, pressure: R, surface: Surface) -> R {
     let target = mole_fraction.ln();
-    let mut kelvins = Magnus::over(surface).temperature(target + pressure.ln()) + k(ZERO_CELSIUS);
-    for _ in 0..STEPS {
+    let (coldest, warmest) = match surface {
+        Surface::Ice => ice::RANGE,
+        Surface::Liquid | Surface::Stable => liquid_water::RANGE,
+    };
+    // Beyond the equation of the condensed phase the search would wander, and might end where it looks like a result.
+    let within = |kelvins: R| kelvins.at_least(k(coldest + ZERO_CELSIUS)).at_most(k(warmest + ZERO_CELSIUS));
+    let mut kelvins = within(Magnus::over(surface).temperature(target + pressure.ln()) + k(ZERO_CELSIUS));
+    for _ in 0..steps {
         let saturation = M::at(kelvins - k(ZERO_CELSIUS)).saturation(pressure, surface);
         // d ln x / dT = (1 − x) d ln W / dT
         let slope = (k::<R>(1.0) - saturation.mole_fraction) * saturation.log_slope;
         let error = saturation.mole_fraction.ln() - target;
-        kelvins =
-            (kelvins / (k::<R>(1.0) + error / (slope * kelvins))).at_least(k(coldest_trial(surface) + ZERO_CELSIUS));
+        kelvins = within(kelvins / (k::<R>(1.0) + error / (slope * kelvins)));
     }
     kelvins - k(ZERO_CELSIUS)
 }
 
 /// Thermodynamic wet bulb, °C, over liquid or ice: x with h + (W_s(x) − W) h_c(x) = h_s(x)
 /// (ASHRAE Fundamentals 2021 ch. 1, Eq. (33), without its approximations).
-pub(super) fn wet_bulb<M: Mixture<R>, R: Real, const STEPS: usize>(
+pub(super) fn wet_bulb<M: Mixture<R>, R: Real>(
     celsius: R,
     pressure: R,
     humidity_ratio: R,
     enthalpy: R,
     surface: Surface,
 ) -> R {
-    wet_bulb_after::<M, R, WET_BULB_HALVINGS, STEPS>(celsius, pressure, humidity_ratio, enthalpy, surface)
+    wet_bulb_after::<M, R>(M::STEPS, celsius, pressure, humidity_ratio, enthalpy, surface)
 }
 
-fn wet_bulb_after<M: Mixture<R>, R: Real, const HALVINGS: usize, const STEPS: usize>(
+fn wet_bulb_after<M: Mixture<R>, R: Real>(
+    steps: Steps,
     celsius: R,
     pressure: R,
     humidity_ratio: R,
     enthalpy: R,
     surface: Surface,
 ) -> R {
-    let mut x = wet_bulb_start::<R, HALVINGS>(celsius, pressure, humidity_ratio, surface);
-    for _ in 0..STEPS {
+    let mut x = wet_bulb_start::<R>(steps.wet_bulb_halvings, celsius, pressure, humidity_ratio, surface);
+    for _ in 0..steps.wet_bulb {
         let (deficit, slope) = saturation_deficit::<M, R>(x, pressure, humidity_ratio, enthalpy, surface);
         x = x - deficit / slope;
     }
@@ -103,15 +99,15 @@ pub(super) const fn condensed_heat_capacity(surface: Surface) -> f64 {
     }
 }
 
-/// A wet bulb within 2.2 K (the worst in hot steam), by halving the interval of possible ones under rounded perfect-gas constants.
-fn wet_bulb_start<R: Real, const HALVINGS: usize>(celsius: R, pressure: R, humidity_ratio: R, surface: Surface) -> R {
+/// A wet bulb within 2.2 K (the worst in hot steam; 4 K with the Helmholtz formulation, to 5 MPa), by halving the interval of possible ones under rounded perfect-gas constants.
+fn wet_bulb_start<R: Real>(halvings: usize, celsius: R, pressure: R, humidity_ratio: R, surface: Surface) -> R {
     let curve = Magnus::over(surface);
     let (coldest, latent_at_zero, heat_capacity) = match surface {
         Surface::Ice => (-105.0, 2_834_000.0, 2_100.0),
         Surface::Liquid | Surface::Stable => (-45.0, 2_501_000.0, 4_200.0),
     };
     let (mut cold, mut warm) = (k::<R>(coldest), celsius + k(2.0));
-    for _ in 0..HALVINGS {
+    for _ in 0..halvings {
         let x = (cold + warm) * k(0.5);
         let saturated = curve.pressure(x);
         let latent = k::<R>(latent_at_zero) + x * k(1_860.0 - heat_capacity);
@@ -129,7 +125,7 @@ fn wet_bulb_start<R: Real, const HALVINGS: usize>(celsius: R, pressure: R, humid
 pub(super) fn stable_wet_bulb<M: Mixture<R>, R: Real>(celsius: R, pressure: R, humidity_ratio: R, enthalpy: R) -> R {
     let melting = M::melting_temperature(pressure);
     let (at_melting, _) = saturation_deficit::<M, R>(melting, pressure, humidity_ratio, enthalpy, Surface::Liquid);
-    let over = |surface| wet_bulb::<M, R, WET_BULB_STEPS>(celsius, pressure, humidity_ratio, enthalpy, surface);
+    let over = |surface| wet_bulb::<M, R>(celsius, pressure, humidity_ratio, enthalpy, surface);
     R::pick(
         k::<R>(0.0).le(at_melting),
         || over(Surface::Liquid).at_least(melting),
@@ -229,6 +225,17 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
             }
             Quantity::SpecificEntropy => self.entropy(),
             Quantity::SpeedOfSound => self.speed_of_sound(),
+            Quantity::SpecificHeatAtConstantVolume => self.specific_heat_at_constant_volume(),
+            Quantity::ChemicalPotentialOfWater => {
+                let potential = self.potentials().water;
+                // −∞ also where the density of the water underflows.
+                if !(k::<S>(0.0).lt(w) && potential.is_finite()) {
+                    return Err(Error::NoValue { quantity, reason: NoValue::DryAir });
+                }
+                potential
+            }
+            Quantity::ChemicalPotentialOfDryAir => self.potentials().dry_air,
+            Quantity::FugacityOfWater => self.fugacity(),
             Quantity::DynamicViscosity => self.transport().viscosity,
             Quantity::ThermalConductivity => self.transport().conductivity,
             Quantity::VaporDiffusivity => self.transport().diffusivity,
@@ -259,6 +266,18 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
 
     fn speed_of_sound(&self) -> S {
         self.mixture.speed_of_sound(self.air.humidity_ratio, &self.air.gas)
+    }
+
+    fn specific_heat_at_constant_volume(&self) -> S {
+        self.mixture.specific_heat_at_constant_volume(self.air.humidity_ratio, &self.air.gas)
+    }
+
+    fn potentials(&self) -> Potentials<S> {
+        self.mixture.potentials(self.air.pascals, self.air.humidity_ratio, &self.air.gas)
+    }
+
+    fn fugacity(&self) -> S {
+        self.mixture.fugacity(self.air.pascals, self.air.humidity_ratio, &self.air.gas)
     }
 
     fn transport(&self) -> Transport<S> {
@@ -319,7 +338,7 @@ impl<M: Mixture<S>, S: Scalar> View<M, S> {
                 return Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange });
             }
         }
-        let value = wet_bulb::<M, S, WET_BULB_STEPS>(
+        let value = wet_bulb::<M, S>(
             self.air.celsius,
             self.air.pascals,
             self.air.humidity_ratio,
@@ -361,14 +380,14 @@ pub(super) fn saturation_point<M: Mixture<S>, S: Scalar>(
         return Err(Error::NoValue { quantity, reason: NoValue::DryAir });
     }
     let surface = if quantity == Quantity::FrostPoint { Surface::Ice } else { Surface::Liquid };
-    let value = dew_point::<M, S, DEW_POINT_STEPS>(mole_fraction, pressure, surface);
+    let value = dew_point::<M, S>(mole_fraction, pressure, surface);
     let (min, max) = range::<M, S>(quantity, surface, pressure);
     within(quantity, value, min, max)
 }
 
 /// Where a temperature over a surface has a meaning.
 fn range<M: Mixture<S>, S: Scalar>(quantity: Quantity, surface: Surface, pressure: S) -> (S, S) {
-    let (min, max) = quantity.limits();
+    let (min, max) = M::FORMULATION.limits(quantity);
     let max = k::<S>(max);
     (k(min), if surface == Surface::Ice { M::melting_temperature(pressure).at_most(max) } else { max })
 }
@@ -441,6 +460,51 @@ impl<S: Scalar> MoistAir<S> {
     pub fn speed_of_sound(&self) -> Speed<S> {
         let value = with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).speed_of_sound());
         Speed::from_meters_per_second(value)
+    }
+
+    /// Isochoric heat capacity per mass of dry air, at constant humidity ratio. Real gas: −T ∂²f/∂T² of IAPWS G8-10; ideal gas: c_p less the
+    /// gas constant.
+    pub fn specific_heat_at_constant_volume(&self) -> SpecificHeat<S> {
+        let value =
+            with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).specific_heat_at_constant_volume());
+        SpecificHeat::from_joules_per_kilogram_kelvin(value)
+    }
+
+    /// Chemical potential μ_w of the water in the gas, per mass of water, on the datum of enthalpy and entropy: near zero for liquid water at the
+    /// triple point. At saturation it is that of the condensed phase (IAPWS G8-10 Table 2); not so for the ideal gas, whose relations do
+    /// not stem from one potential.
+    ///
+    /// # Errors
+    /// [`Error::NoValue`] for dry air, where it would be −∞.
+    ///
+    /// ```
+    /// # use moistair_core::*;
+    /// let site = Basis::real_gas(Pressure::from_kilopascals(101.325));
+    /// let at = |rh| MoistAir::from_dry_bulb(Temperature::from_celsius(20.0), RelativeHumidity::from_percent(rh), site);
+    /// // That of liquid water at 20 °C and 101 325 Pa: h − T s = 84.01 − 293.15 × 0.29646 kJ/kg (IAPWS-95).
+    /// let saturated: f64 = at(100.0)?.chemical_potential_of_water()?.kilojoules_per_kilogram();
+    /// assert!((saturated - -2.90).abs() < 0.01);
+    /// assert!(at(50.0)?.chemical_potential_of_water()?.kilojoules_per_kilogram() < saturated);
+    /// assert!(at(0.0)?.chemical_potential_of_water().is_err());
+    /// # Ok::<(), Error>(())
+    /// ```
+    pub fn chemical_potential_of_water(&self) -> Result<ChemicalPotential<S>, Error> {
+        self.value(Quantity::ChemicalPotentialOfWater).map(ChemicalPotential::from_joules_per_kilogram)
+    }
+
+    /// Chemical potential μ_a of the dry air in the gas, per mass of dry air, on the datum of enthalpy and entropy: zero for dry air at 0 °C and
+    /// 101 325 Pa. With the water's it makes the Gibbs energy: h − T s = μ_a + W μ_w.
+    pub fn chemical_potential_of_dry_air(&self) -> ChemicalPotential<S> {
+        let value = with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).potentials().dry_air);
+        ChemicalPotential::from_joules_per_kilogram(value)
+    }
+
+    /// Fugacity f_w of the water in the gas, zero for dry air; ideal gas: x_w p. Real gas: ρ_w R_w T exp(μʳ_w / R_w T) from the residual
+    /// chemical potential of IAPWS G8-10. It goes to ρ_w R_w T at low pressure, which is x_w p to 1.7e-5: so far the gas constants of the
+    /// publications for water and dry air lie apart. IAPWS G11-15 has it by a virial equation.
+    pub fn fugacity_of_water(&self) -> Fugacity<S> {
+        let value = with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).fugacity());
+        Fugacity::from_pascals(value)
     }
 
     /// Dynamic viscosity μ. Dry air by Lemmon & Jacobsen 2004 (1 %), vapor by IAPWS R12-08 (2 %), mixed by Wilke's rule of 1950 (a few percent

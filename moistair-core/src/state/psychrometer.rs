@@ -6,7 +6,7 @@
 
 use crate::basis::{Basis, with_mixture};
 use crate::bounds::Quantity;
-use crate::error::{Error, NoValue, checked};
+use crate::error::{Error, NoValue, checked, checked_for};
 use crate::mixture::Mixture;
 use crate::quantity::Temperature;
 use crate::real::{Scalar, k};
@@ -14,6 +14,7 @@ use crate::saturation::Surface;
 use crate::solve;
 
 use super::MoistAir;
+use super::condensate::checked_pressure;
 use super::construct::{greatest_humidity_ratio, settle};
 use super::property::saturates;
 
@@ -191,9 +192,9 @@ impl<S: Scalar> MoistAir<S> {
     ) -> Result<Self, Error> {
         const QUANTITY: Quantity = Quantity::PsychrometerWetBulb;
         let basis = basis.into();
-        let celsius = checked(Quantity::DryBulb, reading.dry_bulb.celsius())?;
+        let celsius = checked_for(basis.formulation(), Quantity::DryBulb, reading.dry_bulb.celsius())?;
         let wet_bulb = checked(QUANTITY, reading.wet_bulb.celsius())?;
-        let pressure = checked(Quantity::Pressure, basis.pressure().pascals())?;
+        let pressure = checked_pressure(&basis)?;
         with_mixture!(basis.formulation(), S, M => {
             let (_, warmest) = psychrometer.range::<M<S>>(pressure);
             let most = greatest_humidity_ratio(&M::<S>::at(celsius), celsius, pressure);

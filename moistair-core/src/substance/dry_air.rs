@@ -1,7 +1,11 @@
 //! Dry air: Lemmon, Jacobsen, Penoncello & Friend, J. Phys. Chem. Ref. Data 29 (2000) 331, as taken over by IAPWS G8-10
 //! (Table 3 there: ideal part with the reference state of moist air; Table 4: residual).
 
-use super::{Jet, Term, density_series};
+#[cfg(test)]
+use super::density_series;
+#[cfg(any(feature = "helmholtz", test))]
+use super::{Jet, Term};
+#[cfg(any(feature = "helmholtz", test))]
 use crate::real::{Real, k};
 
 /// Molar mass, kg/mol: G8-10 Table 2.
@@ -18,6 +22,7 @@ pub const REDUCING_DENSITY: f64 = 10447.7 * MOLAR_MASS;
 pub const ORDERS: usize = 5;
 
 /// `n δⁱ τʲ exp(−δˡ)`, G8-10 Table 4.
+#[cfg(any(feature = "helmholtz", test))]
 pub const TERMS: [Term; 19] = [
     Term::new(0, 1, 0.0, 0.118160747229),
     Term::new(0, 1, 0.33, 0.713116392079),
@@ -40,9 +45,11 @@ pub const TERMS: [Term; 19] = [
     Term::new(3, 3, 15.0, -0.938782884667e-2),
 ];
 
+#[cfg(test)]
 const WEIGHTS: [[f64; ORDERS]; 19] = Term::weights(TERMS);
 
 /// The part of α° that depends on temperature: G8-10 Eq. (5), (6), less ln δ.
+#[cfg(any(feature = "helmholtz", test))]
 pub fn ideal<R: Real>(kelvins: R) -> Jet<R> {
     /// n₁ to n₅ with τ⁻³ to τ¹.
     const POWERS: [(f64, f64); 5] = [
@@ -67,6 +74,7 @@ pub fn ideal<R: Real>(kelvins: R) -> Jet<R> {
 }
 
 /// `n₁₀ ln(2/3 + e^{n₁₃ τ})`.
+#[cfg(any(feature = "helmholtz", test))]
 fn dissociation<R: Real>(tau: R) -> Jet<R> {
     const N: f64 = -0.197938904;
     const RATE: f64 = 0.873127900e2;
@@ -79,6 +87,7 @@ fn dissociation<R: Real>(tau: R) -> Jet<R> {
 }
 
 /// Coefficients of δ¹ to δ⁵ of αʳ.
+#[cfg(test)]
 pub fn residual<R: Real>(kelvins: R) -> [Jet<R>; ORDERS] {
     density_series(&TERMS, &WEIGHTS, k::<R>(REDUCING_TEMPERATURE) / kelvins)
 }

@@ -57,7 +57,10 @@ impl<R: Real> Complex<R> {
 
 /// Ice at `celsius`, `pascals`: R10-06 Eq. (1), (2), (3) with its derivatives g_T and g_p (Table 4).
 pub fn at<R: Real>(celsius: R, pascals: R) -> Condensed<R> {
-    let celsius = celsius.at_least(k(RANGE.0)).at_most(k(RANGE.1));
+    equation(celsius.at_least(k(RANGE.0)).at_most(k(RANGE.1)), pascals)
+}
+
+fn equation<R: Real>(celsius: R, pascals: R) -> Condensed<R> {
     let tau = (celsius + k(ZERO_CELSIUS)) / k(TRIPLE_TEMPERATURE);
     // π − π₀
     let y = (pascals - k(NORMAL_PRESSURE)) / k(TRIPLE_PRESSURE);
@@ -95,3 +98,6 @@ impl<R: Real> Vibration<R> {
         Self { value, slope }
     }
 }
+
+#[cfg(test)]
+mod tests;

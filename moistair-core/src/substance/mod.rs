@@ -4,6 +4,8 @@
 //! reduced inverse temperature τ. Functions of temperature alone come as a [`Jet`], so that the mixture can form
 //! energies and heat capacities; the residual of a gas comes as the coefficients of its expansion in powers of density.
 
+#[cfg(any(feature = "helmholtz", test))]
+pub mod critical_region;
 pub mod dry_air;
 pub mod ice;
 pub mod liquid_water;
@@ -75,6 +77,7 @@ impl Term {
     }
 
     /// Coefficient of `δᵒʳᵈᵉʳ` in `δᵈ exp(−δᶜ) = Σ (−1)ʲ δᵈ⁺ᶜʲ / j!`.
+    #[cfg(test)]
     const fn weight(self, order: u32) -> f64 {
         if order < self.d || (self.c == 0 && order != self.d) {
             return 0.0;
@@ -96,6 +99,7 @@ impl Term {
     }
 
     /// The weights of orders 1 to `N`.
+    #[cfg(test)]
     #[allow(clippy::indexing_slicing, reason = "evaluated at compile time")]
     pub const fn weights<const N: usize, const L: usize>(terms: [Self; L]) -> [[f64; N]; L] {
         let mut table = [[0.0; N]; L];
@@ -112,7 +116,8 @@ impl Term {
     }
 }
 
-/// The residual as `Σₖ aₖ(τ) δᵏ`, k = 1 … N: the virial expansion of its Helmholtz energy.
+/// The residual as `Σₖ aₖ(τ) δᵏ`, k = 1 … N: the virial expansion of its Helmholtz energy, the truth of the fits.
+#[cfg(test)]
 pub fn density_series<R: Real, const N: usize, const L: usize>(
     terms: &[Term; L],
     weights: &[[f64; N]; L],
@@ -214,12 +219,14 @@ impl<R: Real, const L: usize> Fluid<R> for Terms<R, L> {
 }
 
 /// A fluid with its residual expanded in powers of density: coefficients of δ¹ to δᴺ.
+#[cfg(test)]
 #[derive(Clone, Copy, Debug)]
 pub struct Series<R, const N: usize> {
     pub ideal: Jet<R>,
     pub residual: [Jet<R>; N],
 }
 
+#[cfg(test)]
 impl<R: Real, const N: usize> Fluid<R> for Series<R, N> {
     fn ideal(&self, of: TemperatureOrder) -> R {
         self.ideal.get(of)

@@ -11,9 +11,9 @@ pub const CRITICAL_DENSITY: f64 = 322.0;
 /// Molar mass, kg/mol: IAPWS G5-01, as used in G8-10.
 pub const MOLAR_MASS: f64 = 0.018015268;
 
-/// Terms 1 to 51 of R6-95 Table 2. Terms 52 to 56 shape the critical region: their factors exp(−20(δ−1)²) and
-/// exp(−28(δ−1)² − 700(τ−1)²) leave less than 1e-16 of the residual of the liquid and its derivatives at −45 to 205 °C, and
-/// less than 1e-12 of pressure, energy and heat capacity of the vapor up to saturation at 160 °C.
+/// Terms 1 to 51 of R6-95 Table 2. Terms 52 to 56 shape the critical region (`critical_region.rs`, which the Helmholtz formulation takes
+/// in): their factors exp(−20(δ−1)²) and exp(−28(δ−1)² − 700(τ−1)²) leave less than 1e-16 of the residual of the liquid and its
+/// derivatives at −45 to 205 °C, and less than 1e-12 of pressure, energy and heat capacity of the vapor up to saturation at 160 °C.
 pub const TERMS: [Term; 51] = [
     Term::new(0, 1, -0.5, 0.012533547935523),
     Term::new(0, 1, 0.875, 7.8957634722828),

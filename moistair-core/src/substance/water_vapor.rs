@@ -1,6 +1,8 @@
 //! Water vapor: IAPWS R6-95(2018), ideal-gas part in full, residual expanded in powers of density.
 
-use super::{Jet, Term, density_series, water};
+use super::{Jet, water};
+#[cfg(test)]
+use super::{Term, density_series};
 use crate::real::{Real, k};
 
 pub use water::{CRITICAL_DENSITY as REDUCING_DENSITY, GAS_CONSTANT, MOLAR_MASS};
@@ -10,6 +12,7 @@ pub use water::{CRITICAL_DENSITY as REDUCING_DENSITY, GAS_CONSTANT, MOLAR_MASS};
 /// and further stay below 2e-11.
 pub const ORDERS: usize = 6;
 
+#[cfg(test)]
 const WEIGHTS: [[f64; ORDERS]; 51] = Term::weights(water::TERMS);
 
 /// n°₄ to n°₈ and γ°₄ to γ°₈ of R6-95 Table 1.
@@ -33,7 +36,30 @@ pub fn ideal<R: Real>(kelvins: R) -> Jet<R> {
     OSCILLATORS.iter().fold(polynomial, |sum, &(n, gamma)| sum.plus(Jet::oscillator(tau, n, gamma)))
 }
 
+/// φ°ₑₓ of IAPWS G9-12, which extends the ideal part down to 50 K and is added to it below 130 K. No state is so cold (its vapor
+/// down to −100 °C at most), and none takes it: for tests.
+#[cfg(test)]
+pub fn cold_extension<R: Real>(kelvins: R) -> Jet<R> {
+    const E: f64 = 0.278296458178592;
+    const EPSILON: f64 = water::CRITICAL_TEMPERATURE / 130.0;
+    let tau = k::<R>(water::CRITICAL_TEMPERATURE) / kelvins;
+    let (inverse, ratio) = (k::<R>(1.0) / tau, tau * k(1.0 / EPSILON));
+    let ln_ratio = ratio.ln();
+    // τ²φ_ττ = τ² (1/ε − 1/τ)³, and its integrals.
+    let rest = ratio - k(1.0);
+    Jet {
+        value: (-(inverse * k(0.5)) - (tau + k(EPSILON)) * ln_ratio * k(3.0 / (EPSILON * EPSILON))
+            + (ratio * k(9.0) + ratio * ratio - k(9.0)) * k(0.5 / EPSILON))
+            * k(E),
+        first: (inverse * k(0.5) - (tau * ln_ratio + tau + k(EPSILON)) * k(3.0 / (EPSILON * EPSILON))
+            + (ratio * k(4.5) + ratio * ratio) * k(1.0 / EPSILON))
+            * k(E),
+        second: rest * rest * rest * inverse * k(E),
+    }
+}
+
 /// Coefficients of δ¹ to δ⁶ of φʳ.
+#[cfg(test)]
 pub fn residual<R: Real>(kelvins: R) -> [Jet<R>; ORDERS] {
     density_series(&water::TERMS, &WEIGHTS, k::<R>(water::CRITICAL_TEMPERATURE) / kelvins)
 }

@@ -41,7 +41,7 @@ impl Answer for moistair_compressed {
 /// equilibrium there; below the melting temperature what condenses is ice. Pressures are absolute. Vessels under pressure can burst, condensate
 /// freezes: codes for pressure equipment and licensed practice govern, this is no safety function.
 ///
-/// entering: the stream that enters; pressure: absolute [Pa], 20000 to 1100000; leaving_temperature: [°C], -80 to 150; done: output; error: may
+/// entering: the stream that enters; pressure: absolute [Pa]; leaving_temperature: [°C]; done: output; error: may
 /// be null.
 /// Returns 0, 1xx, 2xx.
 #[unsafe(no_mangle)]

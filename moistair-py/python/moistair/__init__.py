@@ -18,6 +18,7 @@ from ._core import (
     MoistAir,
     __version__,
     elevation_at_pressure,
+    limits,
     pressure_at_elevation,
     temperature_at_elevation,
 )
@@ -50,6 +51,7 @@ __all__ = [
     "__version__",
     "account",
     "elevation_at_pressure",
+    "limits",
     "pressure_at_elevation",
     "process",
     "saturation_temperature_after",

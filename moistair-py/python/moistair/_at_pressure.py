@@ -6,15 +6,13 @@ from typing import Any, Literal, Union, overload
 
 from numpy.typing import ArrayLike
 
+from ._formulation import Formulation, formulation_code
 from ._quantities import QUANTITIES
 from ._rows import Array, run
 
 __all__ = ["saturation_temperature_after"]
 
 _Point = Union[Literal["dew_point"], Literal["frost_point"]]
-_Formulation = Union[Literal["real_gas"], Literal["ideal_gas"]]
-
-_FORMULATION = {"real_gas": 0, "ideal_gas": 1}
 
 
 @overload
@@ -25,7 +23,7 @@ def saturation_temperature_after(
     wanted: _Point = ...,
     dew_point: Union[float, None] = ...,
     frost_point: Union[float, None] = ...,
-    formulation: _Formulation = ...,
+    formulation: Formulation = ...,
 ) -> float: ...
 @overload
 def saturation_temperature_after(
@@ -35,7 +33,7 @@ def saturation_temperature_after(
     wanted: _Point = ...,
     dew_point: Union[ArrayLike, None] = ...,
     frost_point: Union[ArrayLike, None] = ...,
-    formulation: _Formulation = ...,
+    formulation: Formulation = ...,
 ) -> Array: ...
 def saturation_temperature_after(
     *,
@@ -44,7 +42,7 @@ def saturation_temperature_after(
     wanted: _Point = "dew_point",
     dew_point: Union[ArrayLike, None] = None,
     frost_point: Union[ArrayLike, None] = None,
-    formulation: _Formulation = "real_gas",
+    formulation: Formulation = "real_gas",
 ) -> Any:
     """Dew or frost point after a change of pressure: from a pressure dew point to the atmospheric one, or back.
 
@@ -60,7 +58,7 @@ def saturation_temperature_after(
         Whether the result is over liquid water (−40 to 200 °C) or over ice (−100 °C to melting).
     dew_point, frost_point : float or array_like
         What is given, one of the two, °C.
-    formulation : {'real_gas', 'ideal_gas'}
+    formulation : {'real_gas', 'ideal_gas', 'helmholtz'}
         As in `MoistAir`.
 
     Returns
@@ -94,15 +92,13 @@ def saturation_temperature_after(
         raise TypeError("exactly one of dew_point and frost_point is needed")
     if wanted not in points:
         raise ValueError(f"wanted must be 'dew_point' or 'frost_point', not {wanted!r}")
-    if formulation not in _FORMULATION:
-        raise ValueError(f"formulation must be 'real_gas' or 'ideal_gas', not {formulation!r}")
     return run(
         "saturation_temperature_after",
         float,
         ("given", QUANTITIES[given[0]].code),
         (given[0], points[given[0]]),
         ("pressure", pressure),
-        ("formulation", _FORMULATION[formulation]),
+        formulation_code(formulation),
         ("wanted", QUANTITIES[wanted].code),
         ("new_pressure", new_pressure),
     )

@@ -30,6 +30,7 @@ __all__ = [
     "code_table",
     "elevation_at_pressure",
     "from_core",
+    "limits",
     "pressure_at_elevation",
     "quantity_table",
     "restore_checked",
@@ -48,7 +49,7 @@ _Array = NDArray[np.float64]
 _Codes = NDArray[np.int32]
 _T = TypeVar("_T", covariant=True)
 _Bulb = Union[Literal["water"], Literal["ice"]]
-_Formulation = Union[Literal["real_gas"], Literal["ideal_gas"]]
+_Formulation = Union[Literal["real_gas"], Literal["ideal_gas"], Literal["helmholtz"]]
 
 @final
 class MoistAir(Generic[_T]):
@@ -179,6 +180,14 @@ class MoistAir(Generic[_T]):
     @property
     def speed_of_sound(self) -> _T: ...
     @property
+    def specific_heat_at_constant_volume(self) -> _T: ...
+    @property
+    def chemical_potential_of_water(self) -> _T: ...
+    @property
+    def chemical_potential_of_dry_air(self) -> _T: ...
+    @property
+    def fugacity_of_water(self) -> _T: ...
+    @property
     def dynamic_viscosity(self) -> _T: ...
     @property
     def thermal_conductivity(self) -> _T: ...
@@ -236,6 +245,7 @@ class MoistAir(Generic[_T]):
     @classmethod
     def __class_getitem__(cls, item: Any) -> GenericAlias: ...
 
+def limits(quantity: str, formulation: _Formulation = "real_gas") -> tuple[float, float]: ...
 @overload
 def pressure_at_elevation(elevation: float, *, geometric: bool = False) -> float: ...
 @overload

@@ -12,7 +12,9 @@ __all__ = ["PROPERTIES", "QUANTITIES", "Quantity"]
 
 
 class Quantity(NamedTuple):
-    """A quantity, its unit on this face, and the range that an input of it may have.
+    """A quantity, its unit on this face, and the range that an input of it may have with the real and the ideal gas.
+
+    `limits` gives the range with any formulation.
 
     Examples
     --------

@@ -50,7 +50,7 @@ pub fn apparatus_dew_point<S: Scalar>(entering: &MoistAir<S>, leaving: &MoistAir
     let ((h1, w1), (h2, w2)) = (parts(entering), parts(leaving));
     let (drop, dried) = (h1 - h2, w1 - w2);
     let (start, end) = (leaving.dry_bulb().celsius(), entering.dry_bulb().celsius());
-    let coldest = k::<S>(Quantity::ApparatusDewPoint.limits().0);
+    let coldest = k::<S>(leaving.formulation().limits(Quantity::ApparatusDewPoint).0);
     if dried <= k(0.0) {
         return Err(infeasible(Quantity::HumidityRatio, w2, k(0.0), w1));
     }

@@ -3,15 +3,19 @@
 use std::println;
 
 use super::*;
-use crate::mixture::{Gas, IdealGas, RealGas};
+use crate::mixture::{Gas, Helmholtz, IdealGas, RealGas};
 use crate::state::construct::greatest_humidity_ratio;
 
 /// Dry bulb, pressure, humidity ratio and gas over the declared domain, from nearly dry to the most vapor that a state holds.
 pub fn states<M: Mixture<f64>>() -> impl Iterator<Item = (f64, f64, f64, Gas<f64>)> {
-    let celsius = (0..=115).map(|i| -80.0 + 2.0 * f64::from(i)).chain([-45.0, -39.9, -0.05, 0.0, 0.005, 0.01, 0.02]);
     let shares = [1e-7, 1e-3, 0.02, 0.1, 0.3, 0.6, 0.9, 0.99, 1.0];
+    let (coldest, warmest) = M::FORMULATION.limits(Quantity::DryBulb);
+    let grid = (0..).map(move |i| coldest + 2.0 * f64::from(i)).take_while(move |t| *t <= warmest);
+    let celsius = grid.chain([-45.0, -39.9, -0.3, -0.05, 0.0, 0.005, 0.01, 0.02]);
+    let (_, highest) = M::FORMULATION.limits(Quantity::Pressure);
     celsius.flat_map(move |t| {
-        [20e3, 60e3, 101_325.0, 300e3, 700e3, 1.1e6].into_iter().flat_map(move |p| {
+        let pressures = [20e3, 60e3, 101_325.0, 300e3, 700e3, 1.1e6, 1.8e6, 2.5e6, 3.5e6, 5e6];
+        pressures.into_iter().take_while(move |p| *p <= highest).flat_map(move |p| {
             let mixture = M::at(t);
             let limit = greatest_humidity_ratio(&mixture, t, p);
             shares.map(|share| (t, p, share * limit, mixture.gas(p, share * limit)))
@@ -51,53 +55,64 @@ fn worst<M: Mixture<f64>>(
     most
 }
 
-fn wet_bulb_left_over<const HALVINGS: usize, const STEPS: usize>() -> f64 {
-    let real = worst::<RealGas<f64>>(
-        wet_bulb_after::<RealGas<f64>, f64, 14, 12>,
-        wet_bulb_after::<RealGas<f64>, f64, HALVINGS, STEPS>,
+/// Far more steps than needed.
+const MANY: Steps = Steps { dew_point: 12, wet_bulb: 12, wet_bulb_halvings: 14, humidity_ratio: 12, temperature: 16 };
+
+fn wet_bulb_left_over<M: Mixture<f64>>(steps: Steps) -> f64 {
+    let after = |steps| move |t, p, w, h, surface| wet_bulb_after::<M, f64>(steps, t, p, w, h, surface);
+    let left = worst::<M>(after(MANY), after(steps));
+    println!(
+        "wet bulb, {:?}: after {} halvings and {} steps {left:e} K",
+        M::FORMULATION,
+        steps.wet_bulb_halvings,
+        steps.wet_bulb
     );
-    let ideal = worst::<IdealGas<f64>>(
-        wet_bulb_after::<IdealGas<f64>, f64, 14, 12>,
-        wet_bulb_after::<IdealGas<f64>, f64, HALVINGS, STEPS>,
-    );
-    println!("wet bulb after {HALVINGS} halvings and {STEPS} steps: real gas {real:e} K, ideal gas {ideal:e} K");
-    real.max(ideal)
+    left
 }
 
-fn dew_point_left_over<const STEPS: usize>() -> f64 {
-    fn of<M: Mixture<f64>, const STEPS: usize>(_: f64, pressure: f64, w: f64, _: f64, surface: Surface) -> f64 {
-        dew_point::<M, f64, STEPS>(M::mole_fraction(w), pressure, surface)
-    }
-    let real = worst::<RealGas<f64>>(of::<RealGas<f64>, 12>, of::<RealGas<f64>, STEPS>);
-    let ideal = worst::<IdealGas<f64>>(of::<IdealGas<f64>, 12>, of::<IdealGas<f64>, STEPS>);
-    println!("dew and frost point after {STEPS} steps: real gas {real:e} K, ideal gas {ideal:e} K");
-    real.max(ideal)
+fn dew_point_left_over<M: Mixture<f64>>(steps: usize) -> f64 {
+    let after = |steps| move |_, p, w, _, surface| dew_point_after::<M, f64>(steps, M::mole_fraction(w), p, surface);
+    let left = worst::<M>(after(MANY.dew_point), after(steps));
+    println!("dew and frost point, {:?}: after {steps} steps {left:e} K", M::FORMULATION);
+    left
 }
 
-/// The constants pass the bound and one less of either does not.
+/// The constants of the real and the ideal gas, and those of the Helmholtz formulation, pass the bound and one less of either does not.
 #[test]
 fn wet_bulb_steps_are_enough_and_none_is_idle() {
-    const BOUND: f64 = 1e-9;
-    assert!(wet_bulb_left_over::<WET_BULB_HALVINGS, WET_BULB_STEPS>() <= BOUND);
-    let stale = "one less does as well: the constant is stale";
-    assert!(wet_bulb_left_over::<{ WET_BULB_HALVINGS - 1 }, WET_BULB_STEPS>() > BOUND, "{stale}");
-    assert!(wet_bulb_left_over::<WET_BULB_HALVINGS, { WET_BULB_STEPS - 1 }>() > BOUND, "{stale}");
+    let check = |bound: f64, steps: Steps, left: &dyn Fn(Steps) -> f64| {
+        assert!(left(steps) <= bound);
+        let stale = "one less does as well: the constant is stale";
+        assert!(left(Steps { wet_bulb_halvings: steps.wet_bulb_halvings - 1, ..steps }) > bound, "{stale}");
+        assert!(left(Steps { wet_bulb: steps.wet_bulb - 1, ..steps }) > bound, "{stale}");
+    };
+    check(1e-9, Steps::TO_150_CELSIUS, &|steps| {
+        wet_bulb_left_over::<RealGas<f64>>(steps).max(wet_bulb_left_over::<IdealGas<f64>>(steps))
+    });
+    check(1e-10, <Helmholtz<f64> as Mixture<f64>>::STEPS, &wet_bulb_left_over::<Helmholtz<f64>>);
 }
 
 #[test]
 fn wet_bulb_start_is_as_good_as_it_says() {
-    let start = wet_bulb_left_over::<WET_BULB_HALVINGS, 0>();
+    let steps = Steps { wet_bulb: 0, ..Steps::TO_150_CELSIUS };
+    let start = wet_bulb_left_over::<RealGas<f64>>(steps).max(wet_bulb_left_over::<IdealGas<f64>>(steps));
     assert!((1.8..=2.2).contains(&start), "{start}: the claim at `wet_bulb_start` is wrong or stale");
+    let steps = Steps { wet_bulb: 0, ..<Helmholtz<f64> as Mixture<f64>>::STEPS };
+    let start = wet_bulb_left_over::<Helmholtz<f64>>(steps);
+    assert!((3.5..=4.2).contains(&start), "{start}: the claim at `wet_bulb_start` is wrong or stale");
 }
 
 #[test]
 fn dew_point_steps_are_enough_and_none_is_idle() {
     const BOUND: f64 = 1e-10;
-    assert!(dew_point_left_over::<DEW_POINT_STEPS>() <= BOUND);
-    assert!(
-        dew_point_left_over::<{ DEW_POINT_STEPS - 1 }>() > BOUND,
-        "one step fewer does as well: the constant is stale"
-    );
+    let check = |steps: usize, left: &dyn Fn(usize) -> f64| {
+        assert!(left(steps) <= BOUND);
+        assert!(left(steps - 1) > BOUND, "one step fewer does as well: the constant is stale");
+    };
+    check(Steps::TO_150_CELSIUS.dew_point, &|steps| {
+        dew_point_left_over::<RealGas<f64>>(steps).max(dew_point_left_over::<IdealGas<f64>>(steps))
+    });
+    check(<Helmholtz<f64> as Mixture<f64>>::STEPS.dew_point, &dew_point_left_over::<Helmholtz<f64>>);
 }
 
 /// Whatever is read satisfies the equation that defines it; where nothing is read, the reason is the true one.
@@ -175,6 +190,7 @@ fn what_is_read_solves_its_equation() {
     }
     run::<RealGas<f64>>("real gas");
     run::<IdealGas<f64>>("ideal gas");
+    run::<Helmholtz<f64>>("Helmholtz");
 }
 
 /// The stable wet bulb is the one over liquid at or above the melting temperature, else the one over ice, everywhere.
@@ -183,7 +199,7 @@ fn stable_wet_bulb_follows_its_rule() {
     fn run<M: Mixture<f64>>() {
         for (celsius, pressure, w, gas) in states::<M>() {
             let melting = M::melting_temperature(pressure);
-            let over = |surface| wet_bulb::<M, f64, WET_BULB_STEPS>(celsius, pressure, w, gas.enthalpy, surface);
+            let over = |surface| wet_bulb::<M, f64>(celsius, pressure, w, gas.enthalpy, surface);
             let (at_melting, _) = saturation_deficit::<M, f64>(melting, pressure, w, gas.enthalpy, Surface::Liquid);
             let stable = stable_wet_bulb::<M, f64>(celsius, pressure, w, gas.enthalpy);
             let expected = if at_melting >= 0.0 { over(Surface::Liquid) } else { over(Surface::Ice) };
@@ -193,4 +209,5 @@ fn stable_wet_bulb_follows_its_rule() {
     }
     run::<RealGas<f64>>();
     run::<IdealGas<f64>>();
+    run::<Helmholtz<f64>>();
 }

@@ -9,15 +9,14 @@ import numpy as np
 from numpy.typing import ArrayLike, NDArray
 
 from .._core import MoistAir
+from .._formulation import Formulation, formulation_code
 from .._rows import Array, Record, T, expect, run
 
 __all__ = ["AirStream", "AirWithCondensate", "Exchange", "WetStream", "liquid_water_enthalpy"]
 
 Freezing = Union[Literal["equilibrium"], Literal["supercooled"]]
-Formulation = Union[Literal["real_gas"], Literal["ideal_gas"]]
 
 _FREEZING = {"equilibrium": 0, "supercooled": 1}
-_FORMULATION = {"real_gas": 0, "ideal_gas": 1}
 
 
 def code(names: dict[str, int], value: Any, label: str) -> tuple[str, int]:
@@ -221,7 +220,7 @@ class AirWithCondensate(Record, Generic[T]):
             Pa.
         freezing : {'equilibrium', 'supercooled'}
             Whether condensate below the melting temperature is ice.
-        formulation : {'real_gas', 'ideal_gas'}
+        formulation : {'real_gas', 'ideal_gas', 'helmholtz'}
             As in `MoistAir`.
 
         Raises
@@ -236,7 +235,7 @@ class AirWithCondensate(Record, Generic[T]):
             ("total_water", total_water),
             freezing_code(freezing),
             ("pressure", pressure),
-            code(_FORMULATION, formulation, "formulation"),
+            formulation_code(formulation),
         )
 
     @overload
@@ -280,7 +279,7 @@ class AirWithCondensate(Record, Generic[T]):
             Pa.
         freezing : {'equilibrium', 'supercooled'}
             Whether condensate below the melting temperature is ice, or liquid as in fog down to about −15 °C.
-        formulation : {'real_gas', 'ideal_gas'}
+        formulation : {'real_gas', 'ideal_gas', 'helmholtz'}
             As in `MoistAir`.
 
         Raises
@@ -297,7 +296,7 @@ class AirWithCondensate(Record, Generic[T]):
             ("total_water", total_water),
             freezing_code(freezing),
             ("pressure", pressure),
-            code(_FORMULATION, formulation, "formulation"),
+            formulation_code(formulation),
         )
 
 
@@ -389,7 +388,7 @@ def liquid_water_enthalpy(
         °C, 0 to 200.
     pressure : float or array_like
         Pa.
-    formulation : {'real_gas', 'ideal_gas'}
+    formulation : {'real_gas', 'ideal_gas', 'helmholtz'}
         As in `MoistAir`.
 
     Returns
@@ -408,5 +407,5 @@ def liquid_water_enthalpy(
         float,
         ("water_temperature", water_temperature),
         ("pressure", pressure),
-        code(_FORMULATION, formulation, "formulation"),
+        formulation_code(formulation),
     )
