@@ -7,9 +7,11 @@ use crate::mixture::{Gas, Mixture};
 use crate::quantity::*;
 use crate::real::{Real, Scalar, k};
 use crate::saturation::Surface;
+use crate::solve;
 
 use super::MoistAir;
-use super::property::{View, saturates};
+use super::property::saturates;
+use super::view::View;
 
 /// Newton steps for humidity ratio from enthalpy, volume or wet bulb; see the test of this module.
 pub(super) const RATIO_STEPS: usize = 3;
@@ -324,12 +326,10 @@ fn search_ratio_after<const STEPS: usize, M: Mixture<R>, R: Real>(
     // Over a vanishing interval the chord is noise; the slope at the dry end serves.
     let chord = (saturated - dry.0) / limit;
     let slope = R::select(limit.lt(k(1e-6)), dry.1, chord);
-    let mut w = near(-(dry.0 / slope));
-    for _ in 0..STEPS {
+    solve::repeated(STEPS, near(-(dry.0 / slope)), |w| {
         let (value, slope) = at(w);
-        w = near(w - value / slope);
-    }
-    w
+        near(w - value / slope)
+    })
 }
 
 #[cfg(test)]

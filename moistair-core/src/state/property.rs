@@ -1,16 +1,18 @@
-//! What can be read from a state: the solves, written once over mixture and arithmetic, and the checked reader.
+//! What can be read from a state: the solves, written once over mixture and arithmetic, and the readers.
 
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
-use crate::error::{Error, NoValue};
+use crate::error::Error;
 use crate::mixture::Mixture;
 use crate::mixture::transport::Transport;
 use crate::quantity::{Diffusivity, DynamicViscosity, SpecificEntropy, Speed, ThermalConductivity, ZERO_CELSIUS};
 use crate::real::{Mask, Real, Scalar, k};
 use crate::saturation::{Magnus, Surface};
+use crate::solve;
 use crate::substance::{ice, liquid_water};
 
 use super::MoistAir;
+use super::view::View;
 
 /// Newton steps, constant so that the work is; the tests of this module show each count to be enough and none to be idle.
 pub(crate) const DEW_POINT_STEPS: usize = 3;
@@ -34,15 +36,14 @@ pub(crate) fn dew_point<M: Mixture<R>, R: Real, const STEPS: usize>(
     surface: Surface,
 ) -> R {
     let target = mole_fraction.ln();
-    let mut kelvins = Magnus::over(surface).temperature(target + pressure.ln()) + k(ZERO_CELSIUS);
-    for _ in 0..STEPS {
+    let start = Magnus::over(surface).temperature(target + pressure.ln()) + k(ZERO_CELSIUS);
+    let kelvins = solve::repeated(STEPS, start, |kelvins| {
         let saturation = M::at(kelvins - k(ZERO_CELSIUS)).saturation(pressure, surface);
         // d ln x / dT = (1 − x) d ln W / dT
         let slope = (k::<R>(1.0) - saturation.mole_fraction) * saturation.log_slope;
         let error = saturation.mole_fraction.ln() - target;
-        kelvins =
-            (kelvins / (k::<R>(1.0) + error / (slope * kelvins))).at_least(k(coldest_trial(surface) + ZERO_CELSIUS));
-    }
+        (kelvins / (k::<R>(1.0) + error / (slope * kelvins))).at_least(k(coldest_trial(surface) + ZERO_CELSIUS))
+    });
     kelvins - k(ZERO_CELSIUS)
 }
 
@@ -65,12 +66,11 @@ fn wet_bulb_after<M: Mixture<R>, R: Real, const HALVINGS: usize, const STEPS: us
     enthalpy: R,
     surface: Surface,
 ) -> R {
-    let mut x = wet_bulb_start::<R, HALVINGS>(celsius, pressure, humidity_ratio, surface);
-    for _ in 0..STEPS {
+    let start = wet_bulb_start::<R, HALVINGS>(celsius, pressure, humidity_ratio, surface);
+    solve::repeated(STEPS, start, |x| {
         let (deficit, slope) = saturation_deficit::<M, R>(x, pressure, humidity_ratio, enthalpy, surface);
-        x = x - deficit / slope;
-    }
-    x
+        x - deficit / slope
+    })
 }
 
 /// h + (W_s − W) h_c − h_s at a trial temperature x, positive left of the wet bulb, and the slope for Newton: that of the
@@ -130,22 +130,18 @@ pub(super) fn stable_wet_bulb<M: Mixture<R>, R: Real>(celsius: R, pressure: R, h
     let melting = M::melting_temperature(pressure);
     let (at_melting, _) = saturation_deficit::<M, R>(melting, pressure, humidity_ratio, enthalpy, Surface::Liquid);
     let over = |surface| wet_bulb::<M, R, WET_BULB_STEPS>(celsius, pressure, humidity_ratio, enthalpy, surface);
+    // The choice is that of the exact wet bulb: what lies beyond is rounding.
+    let rounded = |value: R, side: fn(R, R) -> R| value.rounded_to(side(value, melting));
     R::pick(
         k::<R>(0.0).le(at_melting),
-        || over(Surface::Liquid).at_least(melting),
-        || over(Surface::Ice).at_most(melting),
+        || rounded(over(Surface::Liquid), R::at_least),
+        || rounded(over(Surface::Ice), R::at_most),
     )
 }
 
 /// Whether a saturation exists in the gas phase.
 pub(crate) fn saturates<R: Real>(mole_fraction: R) -> R::Mask {
     k::<R>(0.0).lt(mole_fraction).and(mole_fraction.lt(k(1.0)))
-}
-
-/// A state with the temperature functions of its mixture at hand.
-pub(super) struct View<M, S> {
-    pub mixture: M,
-    pub air: MoistAir<S>,
 }
 
 impl<S: Scalar> MoistAir<S> {
@@ -164,10 +160,12 @@ impl<S: Scalar> MoistAir<S> {
     /// # Ok::<(), Error>(())
     /// ```
     pub fn value(&self, quantity: Quantity) -> Result<S, Error> {
-        if let Some(value) = self.plain(quantity) {
-            return Ok(value);
-        }
-        with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).value(quantity))
+        with_mixture!(self.formulation, S, M => {
+            match self.plain::<M<S>>(quantity) {
+                Some(value) => Ok(value),
+                None => View::<M<S>, S>::of(*self).value(quantity),
+            }
+        })
     }
 
     /// Many properties at once: calls `take` for each with its value or the reason why there is none.
@@ -182,210 +180,6 @@ impl<S: Scalar> MoistAir<S> {
                 take(quantity, view.value(quantity));
             }
         });
-    }
-
-    /// A property that every state has.
-    fn plain(&self, quantity: Quantity) -> Option<S> {
-        Some(match quantity {
-            Quantity::DryBulb => self.celsius,
-            Quantity::Pressure => self.pascals,
-            Quantity::HumidityRatio => self.humidity_ratio,
-            Quantity::WaterMoleFraction => self.water_mole_fraction().fraction(),
-            Quantity::VaporPressure => self.vapor_pressure().pascals(),
-            Quantity::SpecificHumidity => self.specific_humidity().kilograms_per_kilogram(),
-            Quantity::AbsoluteHumidity => self.absolute_humidity().kilograms_per_cubic_meter(),
-            Quantity::SpecificEnthalpy => self.gas.enthalpy,
-            Quantity::SpecificVolume => self.gas.volume,
-            Quantity::Density => self.density().kilograms_per_cubic_meter(),
-            Quantity::SpecificHeat => self.gas.specific_heat,
-            Quantity::CompressibilityFactor => self.gas.compressibility,
-            _ => return None,
-        })
-    }
-}
-
-impl<M: Mixture<S>, S: Scalar> View<M, S> {
-    pub fn of(air: MoistAir<S>) -> Self {
-        Self { mixture: M::at(air.celsius), air }
-    }
-
-    fn mole_fraction(&self) -> S {
-        M::mole_fraction(self.air.humidity_ratio)
-    }
-
-    pub fn value(&self, quantity: Quantity) -> Result<S, Error> {
-        if let Some(value) = self.air.plain(quantity) {
-            return Ok(value);
-        }
-        let w = self.air.humidity_ratio;
-        Ok(match quantity {
-            Quantity::RelativeHumidity => self.mole_fraction() / self.saturation(quantity, Surface::Stable)?,
-            Quantity::RelativeHumidityOverLiquid => {
-                self.mole_fraction() / self.saturation(quantity, Surface::Liquid)?
-            }
-            Quantity::DegreeOfSaturation => w / M::humidity_ratio(self.saturation(quantity, Surface::Stable)?),
-            Quantity::VaporPressureDeficit => {
-                (self.saturation(quantity, Surface::Stable)? - self.mole_fraction()) * self.air.pascals
-            }
-            Quantity::SpecificEntropy => self.entropy(),
-            Quantity::SpeedOfSound => self.speed_of_sound(),
-            Quantity::DynamicViscosity => self.transport().viscosity,
-            Quantity::ThermalConductivity => self.transport().conductivity,
-            Quantity::VaporDiffusivity => self.transport().diffusivity,
-            Quantity::PrandtlNumber => self.prandtl_number(),
-            Quantity::SchmidtNumber => self.schmidt_number(),
-            Quantity::LewisNumber => self.lewis_number(),
-            Quantity::SaturationPressure => self.mixture.pure_saturation_pressure(self.air.pascals, Surface::Stable),
-            Quantity::EnhancementFactor => {
-                self.saturation(quantity, Surface::Stable)? * self.air.pascals
-                    / self.mixture.pure_saturation_pressure(self.air.pascals, Surface::Stable)
-            }
-            Quantity::WetBulb => self.within_surface(
-                quantity,
-                stable_wet_bulb::<M, S>(self.air.celsius, self.air.pascals, w, self.air.gas.enthalpy),
-                Surface::Stable,
-            )?,
-            Quantity::WetBulbOverLiquid => self.wet_bulb_over(quantity, Surface::Liquid)?,
-            Quantity::WetBulbOverIce => self.wet_bulb_over(quantity, Surface::Ice)?,
-            Quantity::DewPoint => self.saturation_temperature(quantity, Surface::Liquid)?,
-            Quantity::FrostPoint => self.saturation_temperature(quantity, Surface::Ice)?,
-            _ => return Err(Error::UnknownSelector { code: quantity.code() }),
-        })
-    }
-
-    fn entropy(&self) -> S {
-        self.mixture.entropy(self.air.pascals, self.air.humidity_ratio, &self.air.gas)
-    }
-
-    fn speed_of_sound(&self) -> S {
-        self.mixture.speed_of_sound(self.air.humidity_ratio, &self.air.gas)
-    }
-
-    fn transport(&self) -> Transport<S> {
-        let air = k::<S>(1.0) / self.air.gas.volume;
-        let kelvins = self.air.celsius + k(ZERO_CELSIUS);
-        Transport::of(kelvins, self.air.pascals, self.mole_fraction(), air, air * self.air.humidity_ratio)
-    }
-
-    /// Pr = c_p μ / λ, c_p per mass of moist air.
-    fn prandtl_number(&self) -> S {
-        let transport = self.transport();
-        self.heat_capacity() * transport.viscosity / transport.conductivity
-    }
-
-    /// Sc = μ / (ρ D)
-    fn schmidt_number(&self) -> S {
-        let transport = self.transport();
-        transport.viscosity / (self.density() * transport.diffusivity)
-    }
-
-    /// Le = λ / (ρ c_p D)
-    fn lewis_number(&self) -> S {
-        let transport = self.transport();
-        transport.conductivity / (self.density() * self.heat_capacity() * transport.diffusivity)
-    }
-
-    fn density(&self) -> S {
-        self.air.density().kilograms_per_cubic_meter()
-    }
-
-    /// Isobaric, per mass of moist air.
-    fn heat_capacity(&self) -> S {
-        self.air.gas.specific_heat / (self.air.humidity_ratio + k(1.0))
-    }
-
-    /// Saturation mole fraction at this temperature and pressure.
-    fn saturation(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
-        let no_value = |reason| Err(Error::NoValue { quantity, reason });
-        if surface == Surface::Liquid && self.air.celsius.lt(k(Quantity::DewPoint.limits().0)) {
-            return no_value(NoValue::BelowSurfaceRange);
-        }
-        let mole_fraction = self.mixture.saturation(self.air.pascals, surface).mole_fraction;
-        if saturates(mole_fraction) { Ok(mole_fraction) } else { no_value(NoValue::AboveBoiling) }
-    }
-
-    fn wet_bulb_over(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
-        if surface == Surface::Ice {
-            // The solve means nothing where the wet bulb would be warmer than ice can be.
-            let melting = M::melting_temperature(self.air.pascals);
-            let (at_melting, slope) = saturation_deficit::<M, S>(
-                melting,
-                self.air.pascals,
-                self.air.humidity_ratio,
-                self.air.gas.enthalpy,
-                surface,
-            );
-            if rounding::<S>().lt(-(at_melting / slope)) {
-                return Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange });
-            }
-        }
-        let value = wet_bulb::<M, S, WET_BULB_STEPS>(
-            self.air.celsius,
-            self.air.pascals,
-            self.air.humidity_ratio,
-            self.air.gas.enthalpy,
-            surface,
-        );
-        self.within_surface(quantity, value, surface)
-    }
-
-    fn saturation_temperature(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
-        let value = saturation_point::<M, S>(quantity, self.mole_fraction(), self.air.pascals)?;
-        Ok(self.not_above_dry_bulb(value, surface))
-    }
-
-    fn within_surface(&self, quantity: Quantity, value: S, surface: Surface) -> Result<S, Error> {
-        let (min, max) = range::<M, S>(quantity, surface, self.air.pascals);
-        within(quantity, self.not_above_dry_bulb(value, surface), min, max)
-    }
-
-    /// No state holds more vapor than liquid water allows: over liquid neither wet bulb nor dew point exceeds the dry bulb, though
-    /// the last bits of a solve may. Over ice they may exceed it truly.
-    fn not_above_dry_bulb(&self, value: S, surface: Surface) -> S {
-        let over_liquid = match surface {
-            Surface::Liquid => true,
-            Surface::Ice => false,
-            Surface::Stable => M::melting_temperature(self.air.pascals) <= value,
-        };
-        if over_liquid { value.at_most(self.air.celsius) } else { value }
-    }
-}
-
-/// Dew or frost point, °C, of a mole fraction at a pressure.
-pub(super) fn saturation_point<M: Mixture<S>, S: Scalar>(
-    quantity: Quantity,
-    mole_fraction: S,
-    pressure: S,
-) -> Result<S, Error> {
-    if !k::<S>(0.0).lt(mole_fraction) {
-        return Err(Error::NoValue { quantity, reason: NoValue::DryAir });
-    }
-    let surface = if quantity == Quantity::FrostPoint { Surface::Ice } else { Surface::Liquid };
-    let value = dew_point::<M, S, DEW_POINT_STEPS>(mole_fraction, pressure, surface);
-    let (min, max) = range::<M, S>(quantity, surface, pressure);
-    within(quantity, value, min, max)
-}
-
-/// Where a temperature over a surface has a meaning.
-fn range<M: Mixture<S>, S: Scalar>(quantity: Quantity, surface: Surface, pressure: S) -> (S, S) {
-    let (min, max) = quantity.limits();
-    let max = k::<S>(max);
-    (k(min), if surface == Surface::Ice { M::melting_temperature(pressure).at_most(max) } else { max })
-}
-
-/// What a solved temperature may be off, K.
-fn rounding<S: Scalar>() -> S {
-    k::<S>(1e-9).at_least(S::epsilon() * k(512.0))
-}
-
-/// A temperature, if it lies between two; rounding that carried it past an end is taken back.
-fn within<S: Scalar>(quantity: Quantity, value: S, min: S, max: S) -> Result<S, Error> {
-    if (min - rounding()).le(value) && value.le(max + rounding()) {
-        Ok(value.at_least(min).at_most(max))
-    } else if max.lt(value) {
-        Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange })
-    } else {
-        Err(Error::NoValue { quantity, reason: NoValue::BelowSurfaceRange })
     }
 }
 
