@@ -604,6 +604,18 @@ typedef struct {
     int32_t reserved;
 } moistair_state;
 
+// A property and its partial derivatives, each while the other two inputs stay.
+typedef struct {
+    // The property, with the bits of moistair_properties.
+    double value;
+    // Per kelvin of dry bulb.
+    double by_dry_bulb;
+    // Per unit of the second property.
+    double by_second;
+    // Per pascal.
+    double by_pressure;
+} moistair_property_derivatives;
+
 // An input column: the value of row i is values[i * stride]. Stride 1 is a plain array, stride 0 one value for every row, a larger one reads
 // a field of an array of records that are a whole number of doubles apart.
 typedef struct {
@@ -1145,6 +1157,22 @@ int32_t moistair_saturation_temperature_after(int32_t property,
                                               double pressure,
                                               double *temperature,
                                               moistair_error *error);
+
+// Exact partial derivatives of properties with respect to dry bulb, a second property and pressure: those of moistair_from_dry_bulb with
+// that second property. Where a property has a kink, those of one side: at the melting temperature and above over liquid, below over
+// ice; at saturation towards less vapor; in dry air towards more.
+//
+// state: a state; second: selector of the second property, one that fixes a state; mask: which properties, the bit 1 << selector for each;
+// values: output, each property at the place of its selector, NaN where it has no value or (entropy of dry air) no slope; places not
+// asked for are left alone; have: output, the bits of mask that have derivatives, may be null; error: may be null.
+// Returns 0 (also when a property has no value), 101, 102 (a bit that is no property, a second property that fixes no state), 103, 31x
+// (the second property has no value at this state), 201, 202, 203 (the state is none).
+int32_t moistair_derivatives(const moistair_state *state,
+                             int32_t second,
+                             uint64_t mask,
+                             moistair_property_derivatives *values,
+                             uint64_t *have,
+                             moistair_error *error);
 
 // Properties of many states at once: row by row the same results, bit for bit, as the calls for one state. A bad row costs only itself.
 //

@@ -30,17 +30,16 @@ fn from_parts(py: Python<'_>, parts: Parts) -> PyErr {
 
 /// An attribute name that is no property of a state.
 pub fn unknown_name(py: Python<'_>, name: &str) -> PyErr {
-    from_parts(
-        py,
-        (
-            102,
-            format!("{name} is no property of a state; moistair.PROPERTIES lists them"),
-            None::<String>,
-            None::<f64>,
-            None::<f64>,
-            None::<f64>,
-        ),
-    )
+    unknown(py, format!("{name} is no property of a state; moistair.PROPERTIES lists them"))
+}
+
+/// A name that does not fix a state beside dry bulb and pressure.
+pub fn unknown_second(py: Python<'_>, name: &str) -> PyErr {
+    unknown(py, format!("{name} does not fix a state beside dry_bulb and pressure"))
+}
+
+fn unknown(py: Python<'_>, message: String) -> PyErr {
+    from_parts(py, (102, message, None, None, None, None))
 }
 
 /// Something that this layer should have ruled out; never a panic.

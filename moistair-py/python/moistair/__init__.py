@@ -21,6 +21,7 @@ from ._core import (
     pressure_at_elevation,
     temperature_at_elevation,
 )
+from ._derivatives import PropertyDerivatives
 from ._errors import (
     InfeasibleError,
     MoistAirError,
@@ -44,6 +45,7 @@ __all__ = [
     "NotFiniteError",
     "OutOfRangeError",
     "ProcessError",
+    "PropertyDerivatives",
     "Quantity",
     "UnattainableError",
     "UnknownNameError",
