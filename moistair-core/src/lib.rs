@@ -25,7 +25,7 @@ mod substance;
 
 pub use basis::{Basis, Formulation};
 pub use bounds::{PROPERTY_COUNT, Quantity};
-pub use error::{Error, NoValue};
+pub use error::{Error, NoValue, Undetermined};
 pub use quantity::*;
 pub use real::Scalar;
 pub use state::{

@@ -4,6 +4,7 @@ mod at_pressure;
 pub(crate) mod condensate;
 pub(crate) mod construct;
 mod derivatives;
+mod pair;
 pub(crate) mod property;
 mod psychrometer;
 mod view;
