@@ -78,6 +78,12 @@
 // A channel makes no sense: limits that are not in order, or a unit of another kind.
 #define MOISTAIR_INVALID_CHANNEL 208
 
+// Two properties that fix no state together, or only badly.
+#define MOISTAIR_UNDETERMINED 209
+
+// No state at this pressure has both properties.
+#define MOISTAIR_UNATTAINABLE_TOGETHER 210
+
 // The process cannot reach what was asked.
 #define MOISTAIR_INFEASIBLE 301
 
@@ -1014,6 +1020,26 @@ int32_t moistair_from_dry_bulb(double dry_bulb,
                                moistair_basis basis,
                                moistair_state *state,
                                moistair_error *error);
+
+// A state from two properties of which neither is the dry bulb, in any order.
+//
+// One of them states the vapor (humidity ratio, specific humidity, water mole fraction, vapor pressure, dew point, frost point) and the
+// other is a relative humidity (over the stable surface or over liquid, or degree of saturation), a wet bulb, or the specific
+// enthalpy; or one is a relative humidity, and the other a wet bulb or the specific enthalpy. Other pairs fix no state, or only
+// badly. No two states have both properties; just below the melting temperature the stable wet bulb is taken over ice, and
+// MOISTAIR_WET_BULB_OVER_LIQUID gives the state of supercooled liquid.
+//
+// first, second: selectors; first_value, second_value: their values in their units; basis: pressure and formulation; state: output;
+// error: may be null.
+// Returns 0, 101, 102, 103, 201, 202, 209 (the pair fixes no state), 210 (no state has both; the error holds one of the two and its
+// limits beside the other), 311 (a wet bulb above boiling), 313 (ice above the melting temperature).
+int32_t moistair_from_two_properties(int32_t first,
+                                     double first_value,
+                                     int32_t second,
+                                     double second_value,
+                                     moistair_basis basis,
+                                     moistair_state *state,
+                                     moistair_error *error);
 
 // One property of a state.
 //

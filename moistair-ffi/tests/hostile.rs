@@ -435,6 +435,8 @@ fn no_argument_upsets_an_export() {
     run!(exercise moistair_saturation_temperature_after: |c, out, e|
         (point(c), c.number(-60.0, 60.0), c.basis(), point(c), c.number(2e4, 1.1e6), out, e));
     run!(exercise moistair_property: |c, out, e| let state = c.state(); (c.pointer(&state), c.selector(MOISTAIR_PROPERTY_COUNT), out, e));
+    run!(exercise moistair_from_two_properties: |c, out, e| let (first, a) = c.second(); let (second, b) = c.second();
+        (first, a, second, b, c.basis(), out, e));
     run!(exercise moistair_stream_from_mass_flow: |c, out, e| let air = c.state();
         (c.pointer(&air), c.number(0.0, 10.0), out, e));
     run!(exercise moistair_stream_from_volume_flow: |c, out, e| let air = c.state();
