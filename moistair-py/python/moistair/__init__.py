@@ -30,6 +30,7 @@ from ._errors import (
     OutOfRangeError,
     ProcessError,
     UnattainableError,
+    UndeterminedError,
     UnknownNameError,
 )
 from ._quantities import PROPERTIES, QUANTITIES, Quantity
@@ -48,6 +49,7 @@ __all__ = [
     "PropertyDerivatives",
     "Quantity",
     "UnattainableError",
+    "UndeterminedError",
     "UnknownNameError",
     "__version__",
     "account",

@@ -57,8 +57,8 @@ class MoistAir(Generic[_T]):
     def __new__(
         cls,
         *,
-        dry_bulb: float,
         pressure: float,
+        dry_bulb: Union[float, None] = None,
         relative_humidity: Union[float, None] = None,
         relative_humidity_over_liquid: Union[float, None] = None,
         wet_bulb: Union[float, None] = None,
@@ -81,8 +81,8 @@ class MoistAir(Generic[_T]):
     def __new__(
         cls,
         *,
-        dry_bulb: ArrayLike,
         pressure: ArrayLike,
+        dry_bulb: Union[ArrayLike, None] = None,
         relative_humidity: Union[ArrayLike, None] = None,
         relative_humidity_over_liquid: Union[ArrayLike, None] = None,
         wet_bulb: Union[ArrayLike, None] = None,
