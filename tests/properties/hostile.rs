@@ -6,7 +6,7 @@ use proptest::prelude::*;
 use crate::support::cases;
 
 /// Any bits, and numbers near the domain.
-fn any_number(low: f64, high: f64) -> impl Strategy<Value = f64> {
+pub fn any_number(low: f64, high: f64) -> impl Strategy<Value = f64> {
     prop_oneof![
         2 => any::<u64>().prop_map(f64::from_bits),
         2 => prop_oneof![
@@ -33,7 +33,7 @@ fn any_argument() -> impl Strategy<Value = (f64, f64, Quantity, f64, Formulation
 }
 
 /// Everything that can be read from a state is a number or a reason, and stands in a sane relation to the rest.
-fn inspect(air: &MoistAir) -> Result<(), TestCaseError> {
+pub fn inspect(air: &MoistAir) -> Result<(), TestCaseError> {
     let (celsius, w) = (air.dry_bulb().celsius(), air.humidity_ratio().kilograms_per_kilogram());
     prop_assert!((-80.0..=150.0).contains(&celsius) && (0.0..=10.0).contains(&w), "{air:?}");
     for &quantity in Quantity::ALL {

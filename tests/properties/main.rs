@@ -4,6 +4,7 @@
 mod errors;
 mod hostile;
 mod order;
+mod pairs;
 mod psychrometer;
 mod round_trip;
 mod support;
