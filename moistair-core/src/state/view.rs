@@ -273,3 +273,6 @@ pub(super) fn absolute_humidity<R: Real>(humidity_ratio: R, gas: &Gas<R>) -> R {
 pub(super) fn density<R: Real>(humidity_ratio: R, gas: &Gas<R>) -> R {
     (k::<R>(1.0) + humidity_ratio) / gas.volume
 }
+
+#[cfg(test)]
+mod tests;
