@@ -186,7 +186,7 @@ fn of_vapor<M: Mixture<S>, S: Scalar>(
     let at = |celsius| state_at(celsius, vapor, basis);
     at(settled(celsius)).or_else(|_| {
         // More vapor than any state holds?
-        at(k(Quantity::DryBulb.limits().1)).map_err(in_a_pair)?;
+        let _warmest = at(k(Quantity::DryBulb.limits().1)).map_err(in_a_pair)?;
         at_an_end(second, at(coldest::<M, S>(second, ratio, pressure)), at(hottest::<M, S>(second, pressure)))
     })
 }

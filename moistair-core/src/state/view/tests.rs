@@ -1,4 +1,5 @@
 //! The one text of the properties in its arithmetics: lanes, derivatives, derivatives of lanes.
+#![allow(clippy::disallowed_methods, reason = "the seeded points may use the platform's exponential")]
 
 use std::println;
 use std::vec::Vec;
