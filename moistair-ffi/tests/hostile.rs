@@ -179,7 +179,24 @@ impl Caller {
 
     /// A second property in its own range.
     fn second(&self) -> (i32, f64) {
-        let selector = self.selector(MOISTAIR_PROPERTY_COUNT);
+        self.value_of(self.selector(MOISTAIR_PROPERTY_COUNT))
+    }
+
+    /// Two properties; half of them fix a state.
+    fn pair(&self) -> [(i32, f64); 2] {
+        let pairs = [
+            (MOISTAIR_DEW_POINT, MOISTAIR_RELATIVE_HUMIDITY),
+            (MOISTAIR_RELATIVE_HUMIDITY_OVER_LIQUID, MOISTAIR_HUMIDITY_RATIO),
+            (MOISTAIR_SPECIFIC_ENTHALPY, MOISTAIR_DEGREE_OF_SATURATION),
+            (MOISTAIR_WET_BULB, MOISTAIR_RELATIVE_HUMIDITY),
+            (MOISTAIR_WET_BULB_OVER_LIQUID, MOISTAIR_VAPOR_PRESSURE),
+            (MOISTAIR_FROST_POINT, MOISTAIR_SPECIFIC_ENTHALPY),
+        ];
+        let (first, second) = pairs[self.below(pairs.len() as u64) as usize];
+        if self.below(2) == 0 { [self.second(), self.second()] } else { [self.value_of(first), self.value_of(second)] }
+    }
+
+    fn value_of(&self, selector: i32) -> (i32, f64) {
         let (low, high) = match selector {
             MOISTAIR_HUMIDITY_RATIO | MOISTAIR_SPECIFIC_HUMIDITY | MOISTAIR_ABSOLUTE_HUMIDITY => (0.0, 0.03),
             MOISTAIR_WATER_MOLE_FRACTION => (0.0, 0.05),
@@ -435,7 +452,7 @@ fn no_argument_upsets_an_export() {
     run!(exercise moistair_saturation_temperature_after: |c, out, e|
         (point(c), c.number(-60.0, 60.0), c.basis(), point(c), c.number(2e4, 1.1e6), out, e));
     run!(exercise moistair_property: |c, out, e| let state = c.state(); (c.pointer(&state), c.selector(MOISTAIR_PROPERTY_COUNT), out, e));
-    run!(exercise moistair_from_two_properties: |c, out, e| let (first, a) = c.second(); let (second, b) = c.second();
+    run!(exercise moistair_from_two_properties: |c, out, e| let [(first, a), (second, b)] = c.pair();
         (first, a, second, b, c.basis(), out, e));
     run!(exercise moistair_stream_from_mass_flow: |c, out, e| let air = c.state();
         (c.pointer(&air), c.number(0.0, 10.0), out, e));
