@@ -69,6 +69,28 @@ pub enum Error {
         /// The most that can be reached.
         max: f64,
     },
+    /// Two properties that fix no state together, or only badly.
+    #[error("{first} and {second} do not fix a state together: {reason}")]
+    Undetermined {
+        /// One of them.
+        first: Quantity,
+        /// The other.
+        second: Quantity,
+        /// Why.
+        reason: Undetermined,
+    },
+    /// Of two properties each is in its declared range, but no state at this pressure has both.
+    #[error("{quantity} {value}{} has no state together with the other property: at this pressure it lies between {min} and {max}{}{}", Unit(*.quantity), Unit(*.quantity), .quantity.likely_slip(*.value))]
+    UnattainableTogether {
+        /// The one of which the limits are given.
+        quantity: Quantity,
+        /// Its value.
+        value: f64,
+        /// Its least value at states that have the other.
+        min: f64,
+        /// Its greatest.
+        max: f64,
+    },
     /// A selector that names nothing, or nothing that fits here.
     #[error("selector {code} does not name what is needed here")]
     UnknownSelector {
@@ -86,6 +108,44 @@ impl fmt::Display for Unit {
             "1" => Ok(()),
             unit => write!(f, " {unit}"),
         }
+    }
+}
+
+/// Why two properties fix no state.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Hash)]
+#[non_exhaustive]
+pub enum Undetermined {
+    /// One property, given twice.
+    Twice,
+    /// Both state how much vapor there is, and nothing else.
+    VaporOnly,
+    /// Their lines run along each other.
+    NearlyParallel,
+    /// Without vapor, both hold at every temperature.
+    DryAir,
+    /// A pair that this library does not solve.
+    NotOffered,
+}
+
+impl Undetermined {
+    /// The reason in words.
+    #[must_use]
+    pub const fn text(self) -> &'static str {
+        match self {
+            Self::Twice => "it is one property, given twice",
+            Self::VaporOnly => "both say how much vapor there is, which air of any temperature may hold",
+            Self::NearlyParallel => {
+                "the states of one lie nearly along those of the other, so that the least error would move the result far"
+            }
+            Self::DryAir => "air without vapor has them at every temperature",
+            Self::NotOffered => "this pair is not offered",
+        }
+    }
+}
+
+impl fmt::Display for Undetermined {
+    fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
+        f.pad(self.text())
     }
 }
 
@@ -135,6 +195,8 @@ impl Error {
             Self::MixedFormulations => 205,
             Self::MixedPressures => 206,
             Self::NoFlow => 207,
+            Self::Undetermined { .. } => 209,
+            Self::UnattainableTogether { .. } => 210,
             Self::Infeasible { .. } => 301,
             Self::NoValue { reason, .. } => 310 + *reason as i32,
         }
@@ -147,6 +209,8 @@ impl Error {
             Self::NotFinite { quantity }
             | Self::OutOfRange { quantity, .. }
             | Self::Unattainable { quantity, .. }
+            | Self::UnattainableTogether { quantity, .. }
+            | Self::Undetermined { second: quantity, .. }
             | Self::Infeasible { quantity, .. }
             | Self::NoValue { quantity, .. } => Some(quantity),
             _ => None,
@@ -159,6 +223,7 @@ impl Error {
         match *self {
             Self::OutOfRange { value, min, max, .. }
             | Self::Unattainable { value, min, max, .. }
+            | Self::UnattainableTogether { value, min, max, .. }
             | Self::Infeasible { value, min, max, .. } => Some((value, min, max)),
             _ => None,
         }

@@ -25,12 +25,12 @@ mod substance;
 
 pub use basis::{Basis, Formulation};
 pub use bounds::{PROPERTY_COUNT, Quantity};
-pub use error::{Error, NoValue};
+pub use error::{Error, NoValue, Undetermined};
 pub use quantity::*;
 pub use real::Scalar;
 pub use state::{
-    AirWithCondensate, Bulb, Freezing, MoistAir, Psychrometer, PsychrometerReading, SaturationPoint, SecondProperty,
-    liquid_water_enthalpy, saturation_point_after, saturation_temperature_after,
+    AirWithCondensate, Bulb, Freezing, MoistAir, PropertyDerivatives, Psychrometer, PsychrometerReading,
+    SaturationPoint, SecondProperty, liquid_water_enthalpy, saturation_point_after, saturation_temperature_after,
 };
 
 /// Changes when any result changes in any bit; the change log then states by how much.

@@ -1,6 +1,26 @@
-//! The one bracketed root-finder, for problems whose work cannot be fixed beforehand.
+//! Solves of fixed work, and the one bracketed root-finder for problems whose work cannot be fixed beforehand.
 
-use crate::real::{Scalar, k};
+use crate::real::{Real, Scalar, k};
+
+/// A fixed number of steps of a solve.
+#[inline(always)]
+pub fn repeated<R: Real>(steps: usize, start: R, step: impl Fn(R) -> R) -> R {
+    let mut x = start;
+    for _ in 0..steps {
+        x = step(x);
+    }
+    x.at_root(step)
+}
+
+/// The same of two unknowns.
+#[inline(always)]
+pub fn repeated_for_two<R: Real>(steps: usize, start: (R, R), step: impl Fn(R, R) -> (R, R)) -> (R, R) {
+    let (mut a, mut b) = start;
+    for _ in 0..steps {
+        (a, b) = step(a, b);
+    }
+    R::at_root_of_two(a, b, step)
+}
 
 /// Evaluations at most. Halving an interval of states down to the resolution of an `f64` takes 56, after Newton has been tried; a
 /// sweep over all processes prints the most that any took.

@@ -78,6 +78,12 @@
 // A channel makes no sense: limits that are not in order, or a unit of another kind.
 #define MOISTAIR_INVALID_CHANNEL 208
 
+// Two properties that fix no state together, or only badly.
+#define MOISTAIR_UNDETERMINED 209
+
+// No state at this pressure has both properties.
+#define MOISTAIR_UNATTAINABLE_TOGETHER 210
+
 // The process cannot reach what was asked.
 #define MOISTAIR_INFEASIBLE 301
 
@@ -619,6 +625,18 @@ typedef struct {
     int32_t reserved;
 } moistair_state;
 
+// A property and its partial derivatives, each while the other two inputs stay.
+typedef struct {
+    // The property, with the bits of moistair_properties.
+    double value;
+    // Per kelvin of dry bulb.
+    double by_dry_bulb;
+    // Per unit of the second property.
+    double by_second;
+    // Per pascal.
+    double by_pressure;
+} moistair_property_derivatives;
+
 // An input column: the value of row i is values[i * stride]. Stride 1 is a plain array, stride 0 one value for every row, a larger one reads
 // a field of an array of records that are a whole number of doubles apart.
 typedef struct {
@@ -1028,6 +1046,26 @@ int32_t moistair_from_dry_bulb(double dry_bulb,
                                moistair_state *state,
                                moistair_error *error);
 
+// A state from two properties of which neither is the dry bulb, in any order.
+//
+// One of them states the vapor (humidity ratio, specific humidity, water mole fraction, vapor pressure, dew point, frost point) and the
+// other is a relative humidity (over the stable surface or over liquid, or degree of saturation), a wet bulb, or the specific
+// enthalpy; or one is a relative humidity, and the other a wet bulb or the specific enthalpy. Other pairs fix no state, or only
+// badly. No two states have both properties; just below the melting temperature the stable wet bulb is taken over ice, and
+// MOISTAIR_WET_BULB_OVER_LIQUID gives the state of supercooled liquid.
+//
+// first, second: selectors; first_value, second_value: their values in their units; basis: pressure and formulation; state: output;
+// error: may be null.
+// Returns 0, 101, 102, 103, 201, 202, 209 (the pair fixes no state), 210 (no state has both; the error holds one of the two and its
+// limits beside the other), 311 (a wet bulb above boiling), 313 (ice above the melting temperature).
+int32_t moistair_from_two_properties(int32_t first,
+                                     double first_value,
+                                     int32_t second,
+                                     double second_value,
+                                     moistair_basis basis,
+                                     moistair_state *state,
+                                     moistair_error *error);
+
 // One property of a state.
 //
 // state: a state; property: selector below MOISTAIR_PROPERTY_COUNT; value: output in the unit of the property; error: may be null.
@@ -1170,6 +1208,22 @@ int32_t moistair_saturation_temperature_after(int32_t property,
                                               double pressure,
                                               double *temperature,
                                               moistair_error *error);
+
+// Exact partial derivatives of properties with respect to dry bulb, a second property and pressure: those of moistair_from_dry_bulb with
+// that second property. Where a property has a kink, those of one side: at the melting temperature and above over liquid, below over
+// ice; at saturation towards less vapor; in dry air towards more.
+//
+// state: a state; second: selector of the second property, one that fixes a state; mask: which properties, the bit 1 << selector for each;
+// values: output, each property at the place of its selector, NaN where it has no value or (entropy of dry air) no slope; places not
+// asked for are left alone; have: output, the bits of mask that have derivatives, may be null; error: may be null.
+// Returns 0 (also when a property has no value), 101, 102 (a bit that is no property, a second property that fixes no state), 103, 31x
+// (the second property has no value at this state), 201, 202, 203 (the state is none).
+int32_t moistair_derivatives(const moistair_state *state,
+                             int32_t second,
+                             uint64_t mask,
+                             moistair_property_derivatives *values,
+                             uint64_t *have,
+                             moistair_error *error);
 
 // Properties of many states at once: row by row the same results, bit for bit, as the calls for one state. A bad row costs only itself.
 //

@@ -133,6 +133,37 @@ pub unsafe extern "C" fn moistair_from_dry_bulb(
     unsafe { answer(state, error, call) }
 }
 
+/// A state from two properties of which neither is the dry bulb, in any order.
+///
+/// One of them states the vapor (humidity ratio, specific humidity, water mole fraction, vapor pressure, dew point, frost point) and the
+/// other is a relative humidity (over the stable surface or over liquid, or degree of saturation), a wet bulb, or the specific
+/// enthalpy; or one is a relative humidity, and the other a wet bulb or the specific enthalpy. Other pairs fix no state, or only
+/// badly. No two states have both properties; just below the melting temperature the stable wet bulb is taken over ice, and
+/// MOISTAIR_WET_BULB_OVER_LIQUID gives the state of supercooled liquid.
+///
+/// first, second: selectors; first_value, second_value: their values in their units; basis: pressure and formulation; state: output;
+/// error: may be null.
+/// Returns 0, 101, 102, 103, 201, 202, 209 (the pair fixes no state), 210 (no state has both; the error holds one of the two and its
+/// limits beside the other), 311 (a wet bulb above boiling), 313 (ice above the melting temperature).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_from_two_properties(
+    first: i32,
+    first_value: f64,
+    second: i32,
+    second_value: f64,
+    basis: moistair_basis,
+    state: *mut moistair_state,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        let (first, second) = (quantity(first)?, quantity(second)?);
+        let basis = basis.to_core()?;
+        Ok(MoistAir::from_two_properties_and(first, first_value, second, second_value, basis)?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(state, error, call) }
+}
+
 /// One property of a state.
 ///
 /// state: a state; property: selector below MOISTAIR_PROPERTY_COUNT; value: output in the unit of the property; error: may be null.

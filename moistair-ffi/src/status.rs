@@ -33,6 +33,10 @@ pub const MOISTAIR_MIXED_PRESSURES: i32 = 206;
 pub const MOISTAIR_NO_FLOW: i32 = 207;
 /// A channel makes no sense: limits that are not in order, or a unit of another kind.
 pub const MOISTAIR_INVALID_CHANNEL: i32 = 208;
+/// Two properties that fix no state together, or only badly.
+pub const MOISTAIR_UNDETERMINED: i32 = 209;
+/// No state at this pressure has both properties.
+pub const MOISTAIR_UNATTAINABLE_TOGETHER: i32 = 210;
 /// The process cannot reach what was asked.
 pub const MOISTAIR_INFEASIBLE: i32 = 301;
 /// A sum would not be finite. Nothing was added.
@@ -157,6 +161,8 @@ pub fn text(code: i32) -> Option<&'static CStr> {
         MOISTAIR_MIXED_PRESSURES => c"states at different pressures need the pressure of the outlet",
         MOISTAIR_NO_FLOW => c"the dry-air mass flow is zero",
         MOISTAIR_INVALID_CHANNEL => c"the limits of a channel are not in order, or its unit is of another kind",
+        MOISTAIR_UNDETERMINED => c"the two properties fix no state together, or only badly",
+        MOISTAIR_UNATTAINABLE_TOGETHER => c"no state at this pressure has both properties",
         MOISTAIR_OVERFLOW => c"a sum would not be finite",
         MOISTAIR_INFEASIBLE => c"the process cannot reach what was asked",
         MOISTAIR_NO_VALUE_DRY_AIR => c"no value: there is no water vapor",
@@ -178,6 +184,11 @@ const _: () = {
     assert!(Error::MixedFormulations.code() == MOISTAIR_MIXED_FORMULATIONS);
     assert!(Error::MixedPressures.code() == MOISTAIR_MIXED_PRESSURES);
     assert!(Error::NoFlow.code() == MOISTAIR_NO_FLOW);
+    let (first, second) = (moistair_core::Quantity::DewPoint, moistair_core::Quantity::DewPoint);
+    let undetermined = Error::Undetermined { first, second, reason: moistair_core::Undetermined::Twice };
+    assert!(undetermined.code() == MOISTAIR_UNDETERMINED);
+    let together = Error::UnattainableTogether { quantity: first, value: 0.0, min: 0.0, max: 0.0 };
+    assert!(together.code() == MOISTAIR_UNATTAINABLE_TOGETHER);
     assert!(no_value(NoValue::DryAir) == MOISTAIR_NO_VALUE_DRY_AIR);
     assert!(no_value(NoValue::AboveBoiling) == MOISTAIR_NO_VALUE_ABOVE_BOILING);
     assert!(no_value(NoValue::BelowSurfaceRange) == MOISTAIR_NO_VALUE_BELOW_SURFACE_RANGE);

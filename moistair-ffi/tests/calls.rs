@@ -1,6 +1,6 @@
 //! Calls of C beside the same calls of the core: the same bits, whatever goes through structures and selectors.
 
-#![allow(clippy::unwrap_used, clippy::float_cmp, reason = "a test")]
+#![allow(clippy::unwrap_used, clippy::float_cmp, clippy::indexing_slicing, reason = "a test")]
 
 use core::ptr::null_mut;
 
@@ -8,7 +8,7 @@ use moistair::*;
 use moistair_core::process::{AirStream, compression};
 use moistair_core::{
     AirWithCondensate, Bulb, DewPoint, Formulation, Freezing, FrostPoint, HumidityRatio, Length, MassFlow, MoistAir,
-    Pressure, Psychrometer, PsychrometerReading, Temperature, saturation_point_after,
+    Pressure, Psychrometer, PsychrometerReading, Quantity, Temperature, saturation_point_after,
 };
 
 const FORMULATIONS: [(i32, Formulation); 2] =
@@ -205,5 +205,67 @@ fn transport() {
             let value = number(|out| unsafe { moistair_property(&state, selector, out, null_mut()) });
             assert_eq!(value, expected, "{selector}");
         }
+    }
+}
+
+#[test]
+fn two_properties() {
+    for (selector, formulation) in FORMULATIONS {
+        let basis = moistair_basis { pressure: 95e3, formulation: selector, reserved: 0 };
+        let of_core = moistair_core::Basis::new(pascals(95e3), formulation);
+        let pairs = [
+            (MOISTAIR_DEW_POINT, 4.0, MOISTAIR_RELATIVE_HUMIDITY, 0.4),
+            (MOISTAIR_SPECIFIC_ENTHALPY, 45e3, MOISTAIR_RELATIVE_HUMIDITY, 0.5),
+            (MOISTAIR_WET_BULB, 16.0, MOISTAIR_HUMIDITY_RATIO, 0.008),
+        ];
+        for (first, a, second, b) in pairs {
+            // SAFETY: a valid place.
+            let call = |out| unsafe { moistair_from_two_properties(first, a, second, b, basis, out, null_mut()) };
+            let [first, second] = [first, second].map(|code| Quantity::from_code(code).unwrap());
+            same(&output(blank(), call), &MoistAir::from_two_properties_and(first, a, second, b, of_core).unwrap());
+        }
+        let mut error = blank::<moistair_error>();
+        let mut refused = |second, b| {
+            let mut state = blank();
+            // SAFETY: valid places.
+            unsafe { moistair_from_two_properties(MOISTAIR_DEW_POINT, 20.0, second, b, basis, &mut state, &mut error) };
+            (error.code, error.quantity, error.value)
+        };
+        let (code, quantity, value) = refused(MOISTAIR_HUMIDITY_RATIO, 0.01);
+        assert_eq!((code, quantity, value.is_nan()), (MOISTAIR_UNDETERMINED, MOISTAIR_HUMIDITY_RATIO, true));
+        assert_eq!(refused(MOISTAIR_WET_BULB, 10.0), (MOISTAIR_UNATTAINABLE_TOGETHER, MOISTAIR_WET_BULB, 10.0));
+    }
+}
+
+#[test]
+fn derivatives() {
+    for (_, formulation) in FORMULATIONS {
+        let basis = moistair_core::Basis::new(pascals(95e3), formulation);
+        let air =
+            MoistAir::from_dry_bulb(celsius(24.0), HumidityRatio::from_kilograms_per_kilogram(0.007), basis).unwrap();
+        let state = moistair_state::from(air);
+        let properties = || Quantity::ALL.iter().copied().filter(|quantity| quantity.is_property());
+        let mask = properties().fold(0, |mask, property| mask | 1_u64 << property.code());
+        let mut values = [blank::<moistair_property_derivatives>(); MOISTAIR_PROPERTY_COUNT as usize];
+        let mut have = 0;
+        let second = Quantity::WetBulb;
+        // SAFETY: valid places.
+        let status =
+            unsafe { moistair_derivatives(&state, second.code(), mask, values.as_mut_ptr(), &mut have, null_mut()) };
+        assert_eq!(status, MOISTAIR_OK);
+        let mut compared = 0;
+        for property in properties() {
+            let of = values[property.code() as usize];
+            match air.derivatives(property, second) {
+                Ok(core) => {
+                    let ours = [of.value, of.by_dry_bulb, of.by_second, of.by_pressure].map(f64::to_bits);
+                    let cores = [core.value, core.by_dry_bulb, core.by_second, core.by_pressure].map(f64::to_bits);
+                    assert_eq!(ours, cores, "{property:?}");
+                    compared += 1;
+                }
+                Err(_) => assert!(of.value.is_nan() && have >> property.code() & 1 == 0, "{property:?}"),
+            }
+        }
+        assert!(compared > 20);
     }
 }

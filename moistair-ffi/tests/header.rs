@@ -76,6 +76,7 @@ fn rendered() -> String {
         "atmosphere",
         "psychrometer",
         "at_pressure",
+        "derivatives",
         "columns",
         "process/stream",
         "process/sensible",

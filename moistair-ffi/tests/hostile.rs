@@ -179,7 +179,24 @@ impl Caller {
 
     /// A second property in its own range.
     fn second(&self) -> (i32, f64) {
-        let selector = self.selector(MOISTAIR_PROPERTY_COUNT);
+        self.value_of(self.selector(MOISTAIR_PROPERTY_COUNT))
+    }
+
+    /// Two properties; half of them fix a state.
+    fn pair(&self) -> [(i32, f64); 2] {
+        let pairs = [
+            (MOISTAIR_DEW_POINT, MOISTAIR_RELATIVE_HUMIDITY),
+            (MOISTAIR_RELATIVE_HUMIDITY_OVER_LIQUID, MOISTAIR_HUMIDITY_RATIO),
+            (MOISTAIR_SPECIFIC_ENTHALPY, MOISTAIR_DEGREE_OF_SATURATION),
+            (MOISTAIR_WET_BULB, MOISTAIR_RELATIVE_HUMIDITY),
+            (MOISTAIR_WET_BULB_OVER_LIQUID, MOISTAIR_VAPOR_PRESSURE),
+            (MOISTAIR_FROST_POINT, MOISTAIR_SPECIFIC_ENTHALPY),
+        ];
+        let (first, second) = pairs[self.below(pairs.len() as u64) as usize];
+        if self.below(2) == 0 { [self.second(), self.second()] } else { [self.value_of(first), self.value_of(second)] }
+    }
+
+    fn value_of(&self, selector: i32) -> (i32, f64) {
         let (low, high) = match selector {
             MOISTAIR_HUMIDITY_RATIO | MOISTAIR_SPECIFIC_HUMIDITY | MOISTAIR_ABSOLUTE_HUMIDITY => (0.0, 0.03),
             MOISTAIR_WATER_MOLE_FRACTION => (0.0, 0.05),
@@ -454,6 +471,8 @@ fn no_argument_upsets_an_export() {
     run!(exercise moistair_saturation_temperature_after: |c, out, e|
         (point(c), c.number(-60.0, 60.0), c.basis(), point(c), c.number(2e4, 1.1e6), out, e));
     run!(exercise moistair_property: |c, out, e| let state = c.state(); (c.pointer(&state), c.selector(MOISTAIR_PROPERTY_COUNT), out, e));
+    run!(exercise moistair_from_two_properties: |c, out, e| let [(first, a), (second, b)] = c.pair();
+        (first, a, second, b, c.basis(), out, e));
     run!(exercise moistair_stream_from_mass_flow: |c, out, e| let air = c.state();
         (c.pointer(&air), c.number(0.0, 10.0), out, e));
     run!(exercise moistair_stream_from_volume_flow: |c, out, e| let air = c.state();
@@ -574,7 +593,7 @@ fn head_name(head: &str) -> &str {
 
 /// Exports with more than one output, or none.
 fn several_outputs(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static str, (u64, u64)>) {
-    let (mut read, mut columned, mut unfinished) = (0, 0, 0);
+    let (mut read, mut sloped, mut columned, mut unfinished) = (0, 0, 0, 0);
     for _ in 0..n {
         caller.broken.set(false);
         let (state, mask) = (caller.state(), caller.mask());
@@ -595,6 +614,7 @@ fn several_outputs(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static st
             }
         }
         read += u64::from(status == MOISTAIR_OK);
+        sloped += u64::from(derivatives(caller));
         columned += u64::from(columns(caller) != 0);
         caller.broken.set(false);
         let (periods, mut period, mut begun) = (caller.kept(), caller.kept::<moistair_period>(), 0);
@@ -605,8 +625,37 @@ fn several_outputs(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static st
         unfinished += u64::from(status == MOISTAIR_OK);
     }
     successes.insert("moistair_properties", (read, n));
+    successes.insert("moistair_derivatives", (sloped, n));
     successes.insert("moistair_state_columns", (columned, n));
     successes.insert("moistair_periods_unfinished", (unfinished, n));
+}
+
+/// Derivatives of some properties; whether there were any.
+fn derivatives(caller: &Caller) -> bool {
+    caller.broken.set(false);
+    let (state, mask, (second, _)) = (caller.state(), caller.mask(), caller.second());
+    let blank = f64::from_bits(SENTINEL);
+    let blank =
+        moistair_property_derivatives { value: blank, by_dry_bulb: blank, by_second: blank, by_pressure: blank };
+    let mut values = [blank; MOISTAIR_PROPERTY_COUNT as usize];
+    let mut have = SENTINEL;
+    let place = caller.place(&mut values).cast();
+    let (pointer, bits) = (caller.pointer(&state), caller.optional(&mut have));
+    // SAFETY: pointers are valid, null or misaligned.
+    let status = unsafe { moistair_derivatives(pointer, second, mask, place, bits, core::ptr::null_mut()) };
+    verdict(caller, "moistair_derivatives", status, None);
+    for (code, of) in values.iter().enumerate() {
+        let (asked, found) = (status == MOISTAIR_OK && mask >> code & 1 == 1, have >> code & 1 == 1);
+        for number in [of.value, of.by_dry_bulb, of.by_second, of.by_pressure] {
+            match (asked, found && !bits.is_null()) {
+                (false, _) => assert_eq!(number.to_bits(), SENTINEL, "moistair_derivatives: {code}"),
+                (true, true) => assert!(number.is_finite(), "moistair_derivatives: {code} {number}"),
+                (true, false) if bits.is_null() => assert!(number.is_finite() || number.to_bits() == NAN_BITS),
+                (true, false) => assert_eq!(number.to_bits(), NAN_BITS, "moistair_derivatives: {code}"),
+            }
+        }
+    }
+    status == MOISTAIR_OK
 }
 
 /// A column call; how many rows had every value.

@@ -44,6 +44,8 @@ _Static_assert(sizeof(moistair_books_total_values) == 120, "moistair_books_total
 _Static_assert(sizeof(moistair_deviation) == 64, "moistair_deviation");
 _Static_assert(sizeof(moistair_deviation_values) == 48, "moistair_deviation_values");
 _Static_assert(sizeof(moistair_limits) == 16, "moistair_limits");
+_Static_assert(sizeof(moistair_property_derivatives) == 32, "moistair_property_derivatives");
+_Static_assert(offsetof(moistair_property_derivatives, by_pressure) == 24, "moistair_property_derivatives");
 
 /* What a selector at fault leaves in the error: a quantity by its name, any other as a number without one. */
 static int selectors(void)

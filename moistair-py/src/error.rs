@@ -38,6 +38,11 @@ pub fn no_property(py: Python<'_>, name: &str) -> PyErr {
     unknown_name(py, format!("{name} is no property of a state; moistair.PROPERTIES lists them"))
 }
 
+/// A name that does not fix a state beside dry bulb and pressure.
+pub fn unknown_second(py: Python<'_>, name: &str) -> PyErr {
+    unknown_name(py, format!("{name} does not fix a state beside dry_bulb and pressure"))
+}
+
 /// Something that this layer should have ruled out; never a panic.
 pub fn internal(reason: impl core::fmt::Display) -> PyErr {
     PyRuntimeError::new_err(format!("internal error of moistair: {reason}"))

@@ -3,6 +3,7 @@
 mod account;
 mod atmosphere;
 mod column;
+mod derivatives;
 mod error;
 mod memory;
 mod owned;

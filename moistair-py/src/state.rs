@@ -15,7 +15,8 @@ use pyo3::sync::PyOnceLock;
 use pyo3::types::{PyDict, PyList, PyString, PyTuple, PyType};
 
 use crate::column::{self, Arguments, plain_number};
-use crate::error::{exception, identifier, internal, no_property, unknown_name};
+use crate::derivatives;
+use crate::error::{exception, identifier, internal, no_property, unknown_name, unknown_second};
 use crate::process;
 
 /// What fixes a state, as columns of one length; rows without a state hold NaN.
@@ -37,7 +38,8 @@ pub enum Content {
     Many(States),
 }
 
-/// Moist air without condensate at a dry bulb, a pressure and one second property: one state, or an array of states.
+/// Moist air without condensate at a pressure, a dry bulb and a second property, or two properties without the dry bulb: one
+/// state, or an array of states.
 ///
 /// Numbers make one state, whose attributes are floats; arrays (anything NumPy takes) are broadcast against each other and
 /// make an array of states, whose attributes are float64 arrays of the common shape. Values come bit for bit the same
@@ -46,16 +48,23 @@ pub enum Content {
 /// Rows are paired by position. Columns of pandas are taken as arrays and must have equal labels; attributes are arrays in the
 /// order of the rows, so that ``log["wet_bulb"] = air.wet_bulb`` fits.
 ///
+/// Without ``dry_bulb``, two properties are given of which one states the vapor (humidity ratio, specific humidity, water mole
+/// fraction, vapor pressure, dew point, frost point) and the other is a relative humidity (or degree of saturation), a wet bulb or
+/// the specific enthalpy; or a relative humidity with a wet bulb or the specific enthalpy. Other pairs, such as dew point and humidity
+/// ratio, fix no state, or only badly (wet bulb and enthalpy), and raise `UndeterminedError`. No two states have both properties;
+/// just below the melting temperature ``wet_bulb`` is taken over ice, and ``wet_bulb_over_liquid`` gives the state of supercooled
+/// liquid.
+///
 /// A state is immutable. One state raises where it cannot be made or where a property has no value. In an array a bad
 /// row costs only itself: NaN, with its code in `status`; it warns of nothing, so look at `failed`. An attribute beyond what fixes
 /// the state is computed whenever it is read: keep it, or take several at once by `properties`.
 ///
 /// Parameters
 /// ----------
-/// dry_bulb : float or array_like
-///     Dry-bulb temperature, °C, −80 to 150 (to 200 with 'helmholtz').
 /// pressure : float or array_like
 ///     Absolute pressure, Pa, 20 000 to 1 100 000. See `pressure_at_elevation`.
+/// dry_bulb : float or array_like
+///     Dry-bulb temperature, °C, −80 to 150 (to 200 with 'helmholtz').
 /// relative_humidity : float or array_like
 ///     Fraction, over the stable surface: ice below the melting temperature, liquid above.
 /// relative_humidity_over_liquid : float or array_like
@@ -91,9 +100,11 @@ pub enum Content {
 /// Raises
 /// ------
 /// TypeError
-///     Not exactly one second property, or something that is not a number.
+///     Not exactly two properties beside the pressure, or something that is not a number.
 /// ValueError
 ///     Shapes that do not match, an unknown formulation.
+/// UndeterminedError
+///     Two properties that fix no state.
 /// NotFiniteError, OutOfRangeError, UnattainableError, NoValueError
 ///     One state that cannot be made: an argument that is no number, is out of range, is beyond what the air can hold, or has no
 ///     meaning there, as a relative humidity above boiling.
@@ -109,12 +120,15 @@ pub enum Content {
 /// array([ 9.27, 13.87,   nan])
 /// >>> column.status
 /// array([  0,   0, 202], dtype=int32)
+/// >>> store = moistair.MoistAir(dew_point=2.0, relative_humidity=0.85, pressure=101_325.0)
+/// >>> round(store.dry_bulb, 2)
+/// 4.3
 #[pyclass(frozen, weakref, module = "moistair")]
 pub struct MoistAir {
     content: Content,
 }
 
-/// What may stand beside the dry bulb, in the order of the constructor's arguments.
+/// What may stand beside the dry bulb, or two of it, in the order of the constructor's arguments.
 const SECOND: [Quantity; 16] = [
     Quantity::RelativeHumidity,
     Quantity::RelativeHumidityOverLiquid,
@@ -137,15 +151,15 @@ const SECOND: [Quantity; 16] = [
 #[pymethods]
 impl MoistAir {
     #[new]
-    #[pyo3(signature = (*, dry_bulb, pressure, relative_humidity=None, relative_humidity_over_liquid=None, wet_bulb=None,
+    #[pyo3(signature = (*, pressure, dry_bulb=None, relative_humidity=None, relative_humidity_over_liquid=None, wet_bulb=None,
         wet_bulb_over_liquid=None, wet_bulb_over_ice=None, dew_point=None, frost_point=None, humidity_ratio=None,
         specific_humidity=None, absolute_humidity=None, vapor_pressure=None, water_mole_fraction=None,
         degree_of_saturation=None, specific_enthalpy=None, specific_volume=None, density=None, formulation="real_gas"))]
     #[allow(clippy::too_many_arguments, reason = "each is a keyword of Python")]
     fn new<'py>(
         py: Python<'py>,
-        dry_bulb: Bound<'py, PyAny>,
         pressure: Bound<'py, PyAny>,
+        dry_bulb: Option<Bound<'py, PyAny>>,
         relative_humidity: Option<Bound<'py, PyAny>>,
         relative_humidity_over_liquid: Option<Bound<'py, PyAny>>,
         wet_bulb: Option<Bound<'py, PyAny>>,
@@ -183,20 +197,28 @@ impl MoistAir {
             specific_volume,
             density,
         ];
-        let (quantity, second) = only_one(given)?;
-        if let (Some(t), Some(x), Some(p)) = (plain_number(&dry_bulb), plain_number(&second), plain_number(&pressure)) {
-            return one(py, t?, quantity, x?, p?, formulation);
+        let [first, second] = two_of(dry_bulb, given)?;
+        let fixing = Fixing { first: first.0, second: second.0, formulation };
+        let (first, second) = (first.1, second.1);
+        if let (Some(a), Some(b), Some(p)) = (plain_number(&first), plain_number(&second), plain_number(&pressure)) {
+            return fixing.one(py, a?, b?, p?);
         }
-        let name = identifier(quantity);
-        let arguments = Arguments::read(py, &["dry_bulb", &name, "pressure"], &[dry_bulb, second, pressure])?;
+        let names = [&identifier(fixing.first), &identifier(fixing.second), "pressure"];
+        let arguments = Arguments::read(py, &names, &[first, second, pressure])?;
         let columns = arguments.columns()?;
-        let [dry_bulb, second, pressure] = columns[..] else { return Err(internal("three columns expected")) };
+        let [first, second, pressure] = columns[..] else { return Err(internal("three columns expected")) };
         if arguments.shape.is_empty() {
-            let first = |column: Column| column.get(0).unwrap_or(NAN);
-            return one(py, first(dry_bulb), quantity, first(second), first(pressure), formulation);
+            let only = |column: Column| column.get(0).unwrap_or(NAN);
+            return fixing.one(py, only(first), only(second), only(pressure));
         }
-        let inputs = StateColumns { dry_bulb, property: quantity, second, pressure, formulation };
-        Ok(Content::Many(States::compute(py, arguments.shape.clone(), arguments.rows, inputs)?).into())
+        let shape = arguments.shape.clone();
+        let states = if fixing.first == Quantity::DryBulb {
+            let inputs = StateColumns { dry_bulb: first, property: fixing.second, second, pressure, formulation };
+            States::compute(py, shape, arguments.rows, inputs)?
+        } else {
+            fixing.many(py, shape, arguments.rows, [first, second, pressure])?
+        };
+        Ok(Content::Many(states).into())
     }
 
     /// A state from what a psychrometer shows, by the equation of WMO-No. 8 (coefficients from memory),
@@ -594,7 +616,8 @@ impl MoistAir {
 
     /// Why a row has no state: 0 where it has one, else the code of the error. An int32 array; 0 for one state.
     ///
-    /// 201 is what raises NotFiniteError for one state, 202 OutOfRangeError, 203 UnattainableError, 310 to 313 NoValueError.
+    /// 201 is what raises NotFiniteError for one state, 202 OutOfRangeError, 203 and 210 UnattainableError, 209 UndeterminedError, 310 to
+    /// 313 NoValueError.
     /// Processes add 205 to 207 (ProcessError) and 301 (InfeasibleError). That a property has no value at a valid state is no
     /// failure of the row: the property is NaN, its status 0.
     #[getter]
@@ -655,12 +678,8 @@ impl MoistAir {
         names: &Bound<'py, PyTuple>,
         out: Option<Bound<'py, PyDict>>,
     ) -> PyResult<Bound<'py, PyDict>> {
-        let names: Vec<Bound<'py, PyString>> =
-            names.iter().map(|name| name.cast_into().map_err(not_a_name)).collect::<PyResult<_>>()?;
-        let quantities = names
-            .iter()
-            .map(|name| property_named(&name.to_cow()?).ok_or_else(|| no_property(py, &name.to_string())))
-            .collect::<PyResult<Vec<_>>>()?;
+        let names = property_names(names)?;
+        let quantities = properties_named(py, &names)?;
         match (&self.content, out) {
             (Content::One(air), None) => properties_of_one(py, air, &names, quantities),
             (Content::One(_), Some(_)) => Err(PyTypeError::new_err("out is for arrays of states; this is one state")),
@@ -675,6 +694,61 @@ impl MoistAir {
                 states.properties_into(py, &names, &quantities, &out)?;
                 Ok(out)
             }
+        }
+    }
+
+    /// Exact partial derivatives of properties with respect to dry bulb, a second property and pressure: how sensitive a state made of
+    /// these three is to each of them.
+    ///
+    /// The formulas are differentiated, not their values: nothing is lost to a difference of neighbors. Where a property has a
+    /// kink, the derivative is that of one side: at the melting temperature and above over liquid, below over ice; at saturation
+    /// towards less vapor; in dry air towards more.
+    ///
+    /// Parameters
+    /// ----------
+    /// *names : str
+    ///     Names of properties, as the attributes are called.
+    /// second : str
+    ///     The second property: the name of one that fixes a state beside dry bulb and pressure, whether this one was made by it or not.
+    ///
+    /// Returns
+    /// -------
+    /// dict of str to PropertyDerivatives
+    ///     Each with `value`, `by_dry_bulb`, `by_second`, `by_pressure`: floats, or arrays of the shape of the states. NaN where a
+    ///     row has no value; one state raises instead.
+    ///
+    /// Raises
+    /// ------
+    /// UnknownNameError
+    ///     A name that is no property, a second property that does not fix a state.
+    /// NoValueError
+    ///     One state, and a property that has no meaning there, or (the entropy of dry air) no slope.
+    ///
+    /// Examples
+    /// --------
+    /// What an error of 0.3 K and 2 % is worth in the dew point:
+    ///
+    /// >>> import math
+    /// >>> import moistair
+    /// >>> air = moistair.MoistAir(dry_bulb=24.0, relative_humidity=0.5, pressure=101_325.0)
+    /// >>> slopes = air.derivatives("dew_point", second="relative_humidity")["dew_point"]
+    /// >>> round(math.hypot(0.3 * slopes.by_dry_bulb, 0.02 * slopes.by_second), 2)
+    /// 0.67
+    #[pyo3(signature = (*names, second))]
+    fn derivatives<'py>(
+        &self,
+        py: Python<'py>,
+        names: &Bound<'py, PyTuple>,
+        second: &str,
+    ) -> PyResult<Bound<'py, PyDict>> {
+        let names = property_names(names)?;
+        let quantities = properties_named(py, &names)?;
+        let second = property_named(second)
+            .filter(|quantity| quantity.fixes_state())
+            .ok_or_else(|| unknown_second(py, second))?;
+        match &self.content {
+            Content::One(air) => derivatives::of_one(py, air, &names, quantities, second),
+            Content::Many(states) => derivatives::of_many(py, states, &names, &quantities, second),
         }
     }
 
@@ -826,6 +900,26 @@ impl States {
         })
     }
 
+    fn set(&mut self, row: usize, air: &Air) {
+        let parts = [
+            (&mut self.dry_bulb, air.dry_bulb().celsius()),
+            (&mut self.pressure, air.pressure().pascals()),
+            (&mut self.humidity_ratio, air.humidity_ratio().kilograms_per_kilogram()),
+        ];
+        for (column, value) in parts {
+            if let Some(place) = column.get_mut(row) {
+                *place = value;
+            }
+        }
+    }
+
+    fn fail(&mut self, row: usize, code: i32) {
+        self.failed += 1;
+        if let Some(place) = self.status.get_mut(row) {
+            *place = code;
+        }
+    }
+
     fn inputs(&self) -> StateColumns<'_> {
         StateColumns {
             dry_bulb: Column::new(&self.dry_bulb),
@@ -957,42 +1051,84 @@ fn not_a_name(error: CastIntoError<'_>) -> PyErr {
     ))
 }
 
-/// The one second property that is given.
-fn only_one<'py>(given: [Option<Bound<'py, PyAny>>; 16]) -> PyResult<(Quantity, Bound<'py, PyAny>)> {
-    let mut found = None;
-    for (quantity, value) in SECOND.into_iter().zip(given) {
-        if let Some(value) = value {
-            if let Some((first, _)) = found {
-                let (first, second) = (identifier(first), identifier(quantity));
-                return Err(PyTypeError::new_err(format!(
-                    "exactly one property beside dry_bulb and pressure fixes a state; {first} and {second} are given"
-                )));
-            }
-            found = Some((quantity, value));
+type Argument<'py> = (Quantity, Bound<'py, PyAny>);
+
+/// The two properties that are given, the dry bulb first if it is one of them.
+fn two_of<'py>(
+    dry_bulb: Option<Bound<'py, PyAny>>,
+    given: [Option<Bound<'py, PyAny>>; 16],
+) -> PyResult<[Argument<'py>; 2]> {
+    let dry_bulb = dry_bulb.map(|value| (Quantity::DryBulb, value));
+    let given = SECOND.into_iter().zip(given).filter_map(|(quantity, value)| Some((quantity, value?)));
+    let given: Vec<_> = dry_bulb.into_iter().chain(given).collect();
+    let names = given.iter().map(|(quantity, _)| identifier(*quantity)).collect::<Vec<_>>().join(", ");
+    <[Argument<'py>; 2]>::try_from(given).map_err(|_| {
+        let all = SECOND.map(identifier).join(", ");
+        PyTypeError::new_err(format!(
+            "exactly two properties beside pressure fix a state, dry_bulb and one of {all}, or two of these; given: {names}"
+        ))
+    })
+}
+
+/// What fixes a state beside the pressure.
+#[derive(Clone, Copy)]
+struct Fixing {
+    first: Quantity,
+    second: Quantity,
+    formulation: Formulation,
+}
+
+impl Fixing {
+    fn air(&self, a: f64, b: f64, p: f64) -> Result<Air, Error> {
+        let basis = Basis::new(Pressure::from_pascals(p), self.formulation);
+        if self.first == Quantity::DryBulb {
+            Air::from_dry_bulb_and(Temperature::from_celsius(a), self.second, b, basis)
+        } else {
+            Air::from_two_properties_and(self.first, a, self.second, b, basis)
         }
     }
-    found.ok_or_else(|| {
-        let names = SECOND.map(identifier).join(", ");
-        PyTypeError::new_err(format!("one property beside dry_bulb and pressure is needed, one of: {names}"))
-    })
+
+    fn one(&self, py: Python<'_>, a: f64, b: f64, p: f64) -> PyResult<MoistAir> {
+        match self.air(a, b, p) {
+            Ok(air) => Ok(Content::One(air).into()),
+            Err(error) => Err(exception(py, &error)),
+        }
+    }
+
+    /// The states of rows. A pair that fixes no state is an error of the call, whatever is in the rows.
+    fn many(&self, py: Python<'_>, shape: Vec<usize>, rows: usize, columns: [Column<'_>; 3]) -> PyResult<States> {
+        if let Err(error @ Error::Undetermined { .. }) = self.air(NAN, NAN, NAN) {
+            return Err(exception(py, &error));
+        }
+        let blank = || column::blank(rows, NAN);
+        let mut states = States {
+            formulation: self.formulation,
+            shape,
+            dry_bulb: blank()?,
+            pressure: blank()?,
+            humidity_ratio: blank()?,
+            status: column::blank(rows, 0)?,
+            failed: 0,
+            settled: true,
+        };
+        py.detach(|| {
+            let [a, b, p] = columns;
+            for row in 0..rows {
+                let at = |column: Column| column.get(row).unwrap_or(NAN);
+                match self.air(at(a), at(b), at(p)) {
+                    Ok(air) => states.set(row, &air),
+                    Err(error) => states.fail(row, error.code()),
+                }
+            }
+        });
+        Ok(states)
+    }
 }
 
 /// A state from the numbers of one that was made before, bit for bit.
 pub fn restore(t: f64, w: f64, p: f64, formulation: Formulation) -> Result<Air, Error> {
     let basis = Basis::new(Pressure::from_pascals(p), formulation);
     Air::restore(Temperature::from_celsius(t), HumidityRatio::from_kilograms_per_kilogram(w), basis)
-}
-
-fn one(py: Python<'_>, t: f64, quantity: Quantity, x: f64, p: f64, formulation: Formulation) -> PyResult<MoistAir> {
-    match air(t, quantity, x, p, formulation) {
-        Ok(air) => Ok(Content::One(air).into()),
-        Err(error) => Err(exception(py, &error)),
-    }
-}
-
-fn air(t: f64, quantity: Quantity, x: f64, p: f64, formulation: Formulation) -> Result<Air, Error> {
-    let basis = Basis::new(Pressure::from_pascals(p), formulation);
-    Air::from_dry_bulb_and(Temperature::from_celsius(t), quantity, x, basis)
 }
 
 fn properties_of_one<'py>(
@@ -1008,6 +1144,16 @@ fn properties_of_one<'py>(
         result.set_item(name, value.map_err(|error| exception(py, &error))?)?;
     }
     Ok(result)
+}
+
+fn property_names<'py>(names: &Bound<'py, PyTuple>) -> PyResult<Vec<Bound<'py, PyString>>> {
+    names.iter().map(|name| name.cast_into().map_err(not_a_name)).collect()
+}
+
+fn properties_named(py: Python<'_>, names: &[Bound<'_, PyString>]) -> PyResult<Vec<Quantity>> {
+    let named =
+        |name: &Bound<'_, PyString>| property_named(&name.to_cow()?).ok_or_else(|| no_property(py, &name.to_string()));
+    names.iter().map(named).collect()
 }
 
 /// The property that an attribute names.

@@ -18,6 +18,11 @@ RAISED = {
     "NotFiniteError": (lambda: stream(t=float("nan")), 201, "dry_bulb"),
     "OutOfRangeError": (lambda: stream(t=900.0), 202, "dry_bulb"),
     "UnattainableError": (lambda: MoistAir(dry_bulb=20.0, humidity_ratio=0.5, pressure=SEA_LEVEL), 203, "humidity_ratio"),
+    "UndeterminedError": (
+        lambda: MoistAir(dew_point=10.0, humidity_ratio=0.008, pressure=SEA_LEVEL),
+        209,
+        "humidity_ratio",
+    ),
     "ProcessError": (lambda: mixing.adiabatic(stream(), stream(formulation="ideal_gas")), 205, None),
     "InfeasibleError": (
         lambda: sensible.to_temperature(stream(), leaving_temperature=-20.0),

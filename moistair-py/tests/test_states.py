@@ -94,11 +94,13 @@ def test_integers_and_numpy_scalars_are_numbers():
     assert MoistAir(dry_bulb=np.array(20.0), relative_humidity=np.array(0.5), pressure=np.int64(100_000)) == state
 
 
-def test_exactly_one_second_property():
-    with pytest.raises(TypeError, match="one of: relative_humidity"):
+def test_exactly_two_properties_beside_pressure():
+    with pytest.raises(TypeError, match="one of relative_humidity, .*; given: dry_bulb$"):
         MoistAir(dry_bulb=20.0, pressure=SEA_LEVEL)
-    with pytest.raises(TypeError, match="wet_bulb and dew_point are given"):
+    with pytest.raises(TypeError, match="given: dry_bulb, wet_bulb, dew_point$"):
         MoistAir(dry_bulb=20.0, pressure=SEA_LEVEL, wet_bulb=15.0, dew_point=12.0)
+    with pytest.raises(TypeError, match="given: wet_bulb$"):
+        MoistAir(pressure=SEA_LEVEL, wet_bulb=15.0)
     with pytest.raises(TypeError):
         MoistAir(20.0, 0.5, SEA_LEVEL)
     with pytest.raises(TypeError):

@@ -101,9 +101,9 @@ impl Page {
             }
             let _ = writeln!(text, "{head}\n{line}");
             for row in &section.rows {
-                let (greatest, place) = row
-                    .worst
-                    .map_or((String::from("–"), String::new()), |(worst, at)| (format!("{worst:.2e}"), at.to_string()));
+                let (greatest, place) = row.worst.map_or((String::from("–"), String::new()), |(worst, at)| {
+                    (format!("{worst:.2e}"), at.to_string())
+                });
                 let _ = write!(
                     text,
                     "| {} | {} | {greatest} | {place} | {:.1e} | {} | {} |",
@@ -128,7 +128,12 @@ impl Page {
         for (section, row) in rows {
             if let Some(budget) = row.budget {
                 let (worst, at) = row.worst.expect("a budget is put to the test");
-                assert!(worst <= budget, "{}: {} is {worst:e} off at {at}, more than {budget:e}", section.title, row.name);
+                assert!(
+                    worst <= budget,
+                    "{}: {} is {worst:e} off at {at}, more than {budget:e}",
+                    section.title,
+                    row.name
+                );
             }
         }
     }

@@ -72,9 +72,8 @@ impl Point {
     /// The share of what the air can hold, saturated over liquid (over ice where no liquid lasts), as a humidity ratio.
     pub fn humidity_ratio(&self, formulation: Formulation) -> HumidityRatio {
         let (most, basis) = (Quantity::HumidityRatio.limits().1, self.basis(formulation));
-        let saturated =
-            MoistAir::from_dry_bulb(self.dry_bulb(), RelativeHumidityOverLiquid::from_fraction(1.0), basis)
-                .or_else(|_| MoistAir::from_dry_bulb(self.dry_bulb(), RelativeHumidity::from_fraction(1.0), basis));
+        let saturated = MoistAir::from_dry_bulb(self.dry_bulb(), RelativeHumidityOverLiquid::from_fraction(1.0), basis)
+            .or_else(|_| MoistAir::from_dry_bulb(self.dry_bulb(), RelativeHumidity::from_fraction(1.0), basis));
         let limit = saturated.map_or(most, |air| air.humidity_ratio().kilograms_per_kilogram().min(most));
         HumidityRatio::from_kilograms_per_kilogram(limit * self.share)
     }

@@ -55,8 +55,14 @@ pub fn all(points: usize) -> Vec<Section> {
         (Formulation::IdealGas, ROOMS),
         (STANDARD, ROOMS),
     ] {
-        let budget = if region.name == ROOMS.name && formulation == Formulation::RealGas { budget_of_single } else { |_| None };
-        sections.push(single_precision(formulation, region, points / if formulation == STANDARD { 10 } else { 1 }, budget));
+        let budget =
+            if region.name == ROOMS.name && formulation == Formulation::RealGas { budget_of_single } else { |_| None };
+        sections.push(single_precision(
+            formulation,
+            region,
+            points / if formulation == STANDARD { 10 } else { 1 },
+            budget,
+        ));
     }
     sections
 }
@@ -94,8 +100,7 @@ fn compare<S: Scalar>(properties: &[Quantity], air: &MoistAir<S>, truth: &MoistA
     for (property, errors) in properties.iter().zip(errors) {
         match (air.value(*property), truth.value(*property)) {
             (Ok(value), Ok(exact))
-                if *property == Quantity::WetBulb
-                    && is_over_liquid(air, value) != is_over_liquid(truth, exact) =>
+                if *property == Quantity::WetBulb && is_over_liquid(air, value) != is_over_liquid(truth, exact) =>
             {
                 errors.unlike += 1;
             }
@@ -123,7 +128,9 @@ fn against_standard(
     });
     let meaning = match formulation {
         Formulation::RealGas => "How far the fits of the default are from the published standard",
-        _ => "How far the handbook's perfect gas is from the published standard: what the model leaves out, not an error of computing",
+        _ => {
+            "How far the handbook's perfect gas is from the published standard: what the model leaves out, not an error of computing"
+        }
     };
     Section {
         title: format!("{}, f64, against Helmholtz: {}", name(formulation), region.name),

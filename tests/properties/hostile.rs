@@ -6,7 +6,7 @@ use proptest::prelude::*;
 use crate::support::cases;
 
 /// Any bits, and numbers near the domain.
-fn any_number(low: f64, high: f64) -> impl Strategy<Value = f64> {
+pub fn any_number(low: f64, high: f64) -> impl Strategy<Value = f64> {
     prop_oneof![
         2 => any::<u64>().prop_map(f64::from_bits),
         2 => prop_oneof![
@@ -32,7 +32,7 @@ fn any_argument() -> impl Strategy<Value = (f64, f64, Quantity, f64, Formulation
 }
 
 /// Everything that can be read from a state is a number or a reason, and stands in a sane relation to the rest.
-fn inspect(air: &MoistAir) -> Result<(), TestCaseError> {
+pub fn inspect(air: &MoistAir) -> Result<(), TestCaseError> {
     let (celsius, w) = (air.dry_bulb().celsius(), air.humidity_ratio().kilograms_per_kilogram());
     let (coldest, warmest) = air.formulation().limits(Quantity::DryBulb);
     prop_assert!((coldest..=warmest).contains(&celsius) && (0.0..=10.0).contains(&w), "{air:?}");
@@ -54,6 +54,28 @@ fn inspect(air: &MoistAir) -> Result<(), TestCaseError> {
     Ok(())
 }
 
+/// Every derivative is a number, or there is a reason why there is none.
+fn slopes(air: &MoistAir, second: Quantity) -> Result<(), TestCaseError> {
+    let mut all = Vec::new();
+    let result = air.derivatives_of(Quantity::ALL.iter().copied(), second, |property, of| all.push((property, of)));
+    if result.is_err() {
+        // A state that was made by a property may have no value of it: dry air made by a wet bulb over ice above the melting temperature.
+        prop_assert!(all.is_empty() && air.value(second).is_err(), "{second:?} {air:?}");
+    }
+    for (property, of) in all {
+        match of {
+            Ok(of) => {
+                let numbers = [of.value, of.by_dry_bulb, of.by_second, of.by_pressure];
+                prop_assert!(numbers.iter().all(|number| number.is_finite()), "{property:?} {of:?} {air:?}");
+            }
+            Err(Error::UnknownSelector { code }) => prop_assert!(code == property.code() && !property.is_property()),
+            Err(Error::NoValue { quantity, .. }) => prop_assert!(quantity == property),
+            Err(other) => prop_assert!(false, "{property:?} {other:?}"),
+        }
+    }
+    Ok(())
+}
+
 proptest! {
     #![proptest_config(cases(20_000))]
 
@@ -65,6 +87,7 @@ proptest! {
                 prop_assert_eq!(air.dry_bulb().celsius().to_bits(), celsius.to_bits());
                 prop_assert_eq!(air.pressure().pascals().to_bits(), pascals.to_bits());
                 inspect(&air)?;
+                slopes(&air, quantity)?;
             }
             Err(error) => {
                 // Every refusal has a code and a text; one with limits has a true reason.

@@ -5,6 +5,7 @@ mod errors;
 mod hostile;
 mod identities;
 mod order;
+mod pairs;
 mod psychrometer;
 mod round_trip;
 mod support;

@@ -12,7 +12,7 @@ use crate::support::{cases, from_ratio, greatest_ratio, ratio, state};
 /// What of a value rounding and its solve may have changed: of a wet bulb 5e-10 K, of a dew or frost point 5e-12 K (what
 /// their steps leave, as the core's own tests measure); of other values four units in the last place of what they are computed from
 /// (enthalpy: of T τΨ_τ, which is larger than it).
-fn uncertainty(quantity: Quantity, value: f64, air: &MoistAir) -> f64 {
+pub fn uncertainty(quantity: Quantity, value: f64, air: &MoistAir) -> f64 {
     let size = match quantity.unit() {
         "°C" if matches!(quantity, Quantity::DewPoint | Quantity::FrostPoint) => return 5e-12,
         "°C" => return 5e-10,

@@ -4,5 +4,6 @@
 #[path = "../../moistair-core/src/checks.rs"]
 pub mod checks;
 pub mod helmholtz_reference;
+pub mod pairs;
 pub mod publications;
 pub mod toolchain;

@@ -12,6 +12,7 @@ use super::{Gas, Mixture, Potentials, Saturation, Steps};
 use crate::quantity::ZERO_CELSIUS;
 use crate::real::{Choose, Real, k};
 use crate::saturation::{Surface, hyland_wexler_ice, hyland_wexler_liquid};
+use crate::solve;
 use crate::substance::liquid_water::Condensed;
 use crate::substance::{DensityDerivatives, Fluid, Jet, TemperatureOrder, dry_air, ice, liquid_water, water_vapor};
 
@@ -304,12 +305,11 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
         let second =
             self.air.second_virial() + humidity_ratio * (humidity_ratio * self.water.second_virial() + self.pair.value);
         let ideal = target / gas_constant;
-        let mut air = ideal / (k::<R>(1.0) + ideal * second / gas_constant);
-        for _ in 0..steps {
+        let start = ideal / (k::<R>(1.0) + ideal * second / gas_constant);
+        solve::repeated(steps, start, |air| {
             let p = self.pressure(air, air * humidity_ratio);
-            air = air + (target - p.value) / (p.of_air + humidity_ratio * p.of_water);
-        }
-        air
+            air + (target - p.value) / (p.of_air + humidity_ratio * p.of_water)
+        })
     }
 
     /// The condensed phase at a temperature, °C.
@@ -339,21 +339,19 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
         let rest = (target - ideal * k(water_vapor::GAS_CONSTANT)) / k(dry_air::GAS_CONSTANT);
         let (of_air, of_water) = (self.air.second_virial(), self.water.second_virial());
         let step = (ideal * of_water * k(2.0) + rest * self.pair.value) / k(water_vapor::GAS_CONSTANT);
-        let mut water = ideal / (k::<R>(1.0) + step + step * step * k(0.5));
+        let water = ideal / (k::<R>(1.0) + step + step * step * k(0.5));
         let interaction = water * (water * of_water + rest * self.pair.value) + rest * rest * of_air;
-        let mut air = (target - water * k(water_vapor::GAS_CONSTANT) - interaction) / k(dry_air::GAS_CONSTANT);
-        for _ in 0..steps {
+        let air = (target - water * k(water_vapor::GAS_CONSTANT) - interaction) / k(dry_air::GAS_CONSTANT);
+        solve::repeated_for_two(steps, (air, water), |air, water| {
             let p = self.pressure(air, water);
             let (mu, mu_of_air, mu_of_ln_water) = self.potential(air, water);
             let (air_step, water_step) = solve_pair(
                 (p.of_air, water * p.of_water, p.value - target),
                 (mu_of_air, mu_of_ln_water, mu - potential),
             );
-            air = air - air_step;
             // e^{−step} of the logarithm, near enough and positive.
-            water = water / (k::<R>(1.0) + water_step + water_step * water_step * k(0.5));
-        }
-        (air, water)
+            (air - air_step, water / (k::<R>(1.0) + water_step + water_step * water_step * k(0.5)))
+        })
     }
 
     /// d ln(ρ_w / ρ_a) / dT along saturation at constant pressure.
@@ -376,17 +374,16 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
         };
         let phase = Self::condensed(self.celsius, start, surface);
         let ideal = start / (self.kelvins * k(water_vapor::GAS_CONSTANT));
-        let mut water = ideal / (k::<R>(1.0) + ideal * self.water.second_virial() / k(water_vapor::GAS_CONSTANT));
-        for _ in 0..steps {
+        let start_density = ideal / (k::<R>(1.0) + ideal * self.water.second_virial() / k(water_vapor::GAS_CONSTANT));
+        solve::repeated(steps, start_density, |water| {
             let (p, p_slope) = self.water.pressure(water);
             let potential = self.water.potential(water) - phase.potential * k(water_vapor::GAS_CONSTANT);
             // The condensed phase is linear in the little pressure between the start and the result.
             let error = potential - phase.volume * (p - start / self.kelvins);
             let slope = p_slope * (k::<R>(1.0) - phase.volume * water);
             let step = error / slope;
-            water = water / (k::<R>(1.0) + step + step * step * k(0.5));
-        }
-        water
+            water / (k::<R>(1.0) + step + step * step * k(0.5))
+        })
     }
 
     /// Enthalpy of saturated steam at this temperature, J/kg.
@@ -399,15 +396,13 @@ impl<R: Real, M: Model<R>> HelmholtzMixture<R, M> {
 
 /// The melting temperature, °C. Start: the slope of the melting curve at the triple point. Then equal chemical potentials.
 fn melting<R: Real, M: Model<R>>(steps: usize, pressure: R) -> R {
-    let mut celsius = k::<R>(0.01) - pressure * k(7.4e-8);
-    for _ in 0..steps {
+    solve::repeated(steps, k::<R>(0.01) - pressure * k(7.4e-8), |celsius| {
         let (liquid, ice) = (M::liquid(celsius, pressure), M::ice(celsius, pressure));
         let kelvins = celsius + k(ZERO_CELSIUS);
         // ∂(g/T)/∂T = −h/T²
         let fusion = (liquid.enthalpy - ice.enthalpy) / (kelvins * kelvins * k(water_vapor::GAS_CONSTANT));
-        celsius = celsius + (liquid.potential - ice.potential) / fusion;
-    }
-    celsius
+        celsius + (liquid.potential - ice.potential) / fusion
+    })
 }
 
 /// Solves `aᵢ x + bᵢ y = cᵢ`.

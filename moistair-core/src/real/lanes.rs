@@ -87,10 +87,16 @@ impl<M: Mask, const N: usize> Mask for [M; N] {
         }
         self
     }
+    #[inline(always)]
+    fn known(self) -> Option<bool> {
+        None
+    }
 }
 
 impl<T: Real, const N: usize> Real for Lanes<T, N> {
     type Mask = [T::Mask; N];
+
+    const EPSILON: f64 = T::EPSILON;
 
     #[inline(always)]
     fn constant(value: f64) -> Self {

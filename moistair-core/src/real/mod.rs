@@ -1,10 +1,11 @@
 //! The arithmetic that every formula is written in.
 //!
 //! A formula is written once, generic over [`Real`], and runs as a single number (`f64`, `f32`), as a row of numbers
-//! ([`Lanes`]) or, later, with derivatives. All of them are made of IEEE `+ − × ÷ √` and integer moves of bits in one
+//! ([`Lanes`]) or with its derivatives ([`Dual`]). All of them are made of IEEE `+ − × ÷ √` and integer moves of bits in one
 //! fixed order, so that a result has the same bits on every face and every processor.
 
 mod coefficients;
+mod dual;
 mod elementary;
 mod lanes;
 mod scalar;
@@ -14,6 +15,7 @@ mod tests;
 
 use core::ops::{Add, Div, Mul, Neg, Sub};
 
+pub use dual::Dual;
 #[allow(unused_imports, reason = "so far only the tests run formulas on lanes")]
 pub use lanes::Lanes;
 pub use scalar::Scalar;
@@ -29,6 +31,8 @@ pub trait Mask: Copy {
     fn or(self, other: Self) -> Self;
     /// The opposite.
     fn not(self) -> Self;
+    /// The one truth value, if it is one: what a branch may go by.
+    fn known(self) -> Option<bool>;
 }
 
 /// Numbers that a formula can be evaluated in. Sealed by being unreachable from outside the crate.
@@ -37,6 +41,9 @@ pub trait Real:
 {
     /// What a comparison returns.
     type Mask: Mask;
+
+    /// The distance from 1 to the next number.
+    const EPSILON: f64;
 
     /// The nearest representable value of a published constant, in every lane.
     fn constant(value: f64) -> Self;
@@ -58,7 +65,30 @@ pub trait Real:
     /// `select` of two costly values: a single number evaluates only the one it takes, lanes evaluate both; the bits are the same.
     #[inline(always)]
     fn pick<T: Choose<Self>>(mask: Self::Mask, a: impl FnOnce() -> T, b: impl FnOnce() -> T) -> T {
-        T::choose(mask, a(), b())
+        match mask.known() {
+            Some(true) => a(),
+            Some(false) => b(),
+            None => T::choose(mask, a(), b()),
+        }
+    }
+
+    /// Another value for what is the same but for rounding; derivatives stay.
+    #[inline(always)]
+    fn rounded_to(self, value: Self) -> Self {
+        value
+    }
+
+    /// The root that repeated steps have found. A number with derivatives takes implicit steps here: the way to the root is not
+    /// differentiated.
+    #[inline(always)]
+    fn at_root(self, _step: impl Fn(Self) -> Self) -> Self {
+        self
+    }
+
+    /// The same of two unknowns.
+    #[inline(always)]
+    fn at_root_of_two(a: Self, b: Self, _step: impl Fn(Self, Self) -> (Self, Self)) -> (Self, Self) {
+        (a, b)
     }
 
     /// The smaller; `self` where they cannot be compared.

@@ -1,6 +1,6 @@
 //! `f64` and `f32` as [`Real`], and the public bound [`Scalar`].
 
-use super::{Choose, Mask, Real, elementary};
+use super::{Mask, Real, elementary};
 
 impl Mask for bool {
     const NONE: Self = false;
@@ -16,6 +16,10 @@ impl Mask for bool {
     #[inline(always)]
     fn not(self) -> Self {
         !self
+    }
+    #[inline(always)]
+    fn known(self) -> Option<bool> {
+        Some(self)
     }
 }
 
@@ -33,6 +37,8 @@ macro_rules! scalar {
     ($type:ty, $sqrt:path, $exp:path, $ln:path, $atan:path) => {
         impl Real for $type {
             type Mask = bool;
+
+            const EPSILON: f64 = <$type>::EPSILON as f64;
 
             #[inline(always)]
             fn constant(value: f64) -> Self {
@@ -65,10 +71,6 @@ macro_rules! scalar {
             #[inline(always)]
             fn select(mask: bool, a: Self, b: Self) -> Self {
                 if mask { a } else { b }
-            }
-            #[inline(always)]
-            fn pick<T: Choose<Self>>(mask: bool, a: impl FnOnce() -> T, b: impl FnOnce() -> T) -> T {
-                if mask { a() } else { b() }
             }
         }
 

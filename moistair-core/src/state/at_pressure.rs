@@ -10,7 +10,8 @@ use crate::real::Scalar;
 use crate::saturation::Surface;
 
 use super::condensate::checked_pressure;
-use super::property::{saturates, saturation_point};
+use super::property::saturates;
+use super::view::saturation_point;
 use super::{MoistAir, SecondProperty};
 
 /// A temperature of saturation, by its own type: [`DewPoint`] over liquid water, [`FrostPoint`] over ice. Sealed.
@@ -96,7 +97,7 @@ impl<S: Scalar> MoistAir<S> {
     pub fn saturation_temperature_at(&self, quantity: Quantity, pressure: Pressure<S>) -> Result<S, Error> {
         let pressure = checked_pressure(&self.basis().at_pressure(pressure))?;
         surface(quantity)?;
-        with_mixture!(self.formulation, S, M => saturation_point::<M<S>, S>(quantity, self.mole_fraction(), pressure))
+        with_mixture!(self.formulation, S, M => saturation_point::<M<S>, S>(quantity, self.mole_fraction(), pressure).checked(quantity))
     }
 }
 
@@ -150,7 +151,7 @@ pub fn saturation_temperature_after<S: Scalar>(
         if !saturates(mole_fraction) {
             return Err(Error::NoValue { quantity, reason: NoValue::AboveBoiling });
         }
-        saturation_point::<M<S>, S>(wanted, mole_fraction, to)
+        saturation_point::<M<S>, S>(wanted, mole_fraction, to).checked(wanted)
     })
 }
 

@@ -7,10 +7,12 @@ use crate::mixture::{Gas, Mixture};
 use crate::quantity::*;
 use crate::real::{Real, Scalar, k};
 use crate::saturation::Surface;
+use crate::solve;
 
 use super::MoistAir;
 use super::condensate::checked_pressure;
-use super::property::{View, saturates};
+use super::property::saturates;
+use super::view::View;
 
 /// A value this close beyond saturation, relative in the humidity ratio, counts as saturated: it is rounding. In single
 /// precision it is [`saturation_rounding`].
@@ -268,27 +270,19 @@ fn humidity_ratio_after<M: Mixture<R>, R: Real>(
 ) -> Option<R> {
     let one = k::<R>(1.0);
     let of_saturation = |surface| mixture.saturation(pressure, surface).mole_fraction;
-    let at_temperature = |surface| M::at(value).saturation(pressure, surface).mole_fraction;
     let wet_bulb = |surface| {
-        let wet = M::at(value);
-        let saturation = wet.saturation(pressure, surface);
-        let saturated = wet.gas(pressure, saturation.humidity_ratio);
-        let condensed = saturation.condensed_enthalpy;
-        let target = saturated.enthalpy - saturation.humidity_ratio * condensed;
+        let EnergyLine { target, condensed } = EnergyLine::of_wet_bulb::<M>(value, pressure, surface);
         Some(search_ratio_after::<M, R>(steps, mixture, pressure, limit, move |w, gas| {
             (gas.enthalpy - w * condensed - target, gas.enthalpy_of_water - condensed)
         }))
     };
+    if let Some(ratio) = vapor_ratio::<M, R>(pressure, quantity, value) {
+        return Some(ratio);
+    }
     match quantity {
-        Quantity::HumidityRatio => Some(value),
-        Quantity::SpecificHumidity => Some(value / (one - value)),
-        Quantity::WaterMoleFraction => Some(M::humidity_ratio(value)),
-        Quantity::VaporPressure => Some(M::humidity_ratio(value / pressure)),
         Quantity::RelativeHumidity => Some(M::humidity_ratio(value * of_saturation(Surface::Stable))),
         Quantity::RelativeHumidityOverLiquid => Some(M::humidity_ratio(value * of_saturation(Surface::Liquid))),
         Quantity::DegreeOfSaturation => Some(value * M::humidity_ratio(of_saturation(Surface::Stable))),
-        Quantity::DewPoint => Some(M::humidity_ratio(at_temperature(Surface::Liquid))),
-        Quantity::FrostPoint => Some(M::humidity_ratio(at_temperature(Surface::Ice))),
         Quantity::WetBulb => wet_bulb(Surface::Stable),
         Quantity::WetBulbOverLiquid => wet_bulb(Surface::Liquid),
         Quantity::WetBulbOverIce => wet_bulb(Surface::Ice),
@@ -305,6 +299,38 @@ fn humidity_ratio_after<M: Mixture<R>, R: Real>(
             (value * gas.volume - w, value * gas.volume_of_water - one)
         })),
         _ => None,
+    }
+}
+
+/// The humidity ratio that goes with what states the vapor, whatever the dry bulb; `None` for other quantities.
+pub(super) fn vapor_ratio<M: Mixture<R>, R: Real>(pressure: R, quantity: Quantity, value: R) -> Option<R> {
+    let at_saturation = |surface| M::humidity_ratio(M::at(value).saturation(pressure, surface).mole_fraction);
+    Some(match quantity {
+        Quantity::HumidityRatio => value,
+        Quantity::SpecificHumidity => value / (k::<R>(1.0) - value),
+        Quantity::WaterMoleFraction => M::humidity_ratio(value),
+        Quantity::VaporPressure => M::humidity_ratio(value / pressure),
+        Quantity::DewPoint => at_saturation(Surface::Liquid),
+        Quantity::FrostPoint => at_saturation(Surface::Ice),
+        _ => return None,
+    })
+}
+
+/// States of h − W h_c = target.
+pub(super) struct EnergyLine<R> {
+    pub target: R,
+    /// h_c, of the water or ice that the air takes up along the line.
+    pub condensed: R,
+}
+
+impl<R: Real> EnergyLine<R> {
+    /// The states of a thermodynamic wet bulb: h + (W_s − W) h_c = h_s.
+    pub fn of_wet_bulb<M: Mixture<R>>(celsius: R, pressure: R, surface: Surface) -> Self {
+        let wet = M::at(celsius);
+        let saturation = wet.saturation(pressure, surface);
+        let saturated = wet.gas(pressure, saturation.humidity_ratio);
+        let condensed = saturation.condensed_enthalpy;
+        Self { target: saturated.enthalpy - saturation.humidity_ratio * condensed, condensed }
     }
 }
 
@@ -332,12 +358,10 @@ fn search_ratio_after<M: Mixture<R>, R: Real>(
     // Over a vanishing interval the chord is noise; the slope at the dry end serves.
     let chord = (saturated - dry.0) / limit;
     let slope = R::select(limit.lt(k(1e-6)), dry.1, chord);
-    let mut w = near(-(dry.0 / slope));
-    for _ in 0..steps {
+    solve::repeated(steps, near(-(dry.0 / slope)), |w| {
         let (value, slope) = at(w);
-        w = near(w - value / slope);
-    }
-    w
+        near(w - value / slope)
+    })
 }
 
 #[cfg(test)]

@@ -3,17 +3,21 @@
 mod at_pressure;
 pub(crate) mod condensate;
 pub(crate) mod construct;
+mod derivatives;
+mod pair;
 pub(crate) mod property;
 mod psychrometer;
+mod view;
 
-use crate::basis::{Basis, Formulation};
+use crate::basis::{Basis, Formulation, with_mixture};
 use crate::mixture::Gas;
 use crate::quantity::*;
-use crate::real::{Scalar, k};
+use crate::real::Scalar;
 
 pub use at_pressure::{SaturationPoint, saturation_point_after, saturation_temperature_after};
 pub use condensate::{AirWithCondensate, Freezing, liquid_water_enthalpy};
 pub use construct::SecondProperty;
+pub use derivatives::PropertyDerivatives;
 pub use psychrometer::{Bulb, Psychrometer, PsychrometerReading};
 
 /// Moist air without condensate, at a dry bulb, pressure and humidity ratio, on a stated formulation.
@@ -34,7 +38,7 @@ impl<S: Scalar> MoistAir<S> {
     /// From numbers already known to make a state.
     pub(crate) fn assemble(celsius: S, pascals: S, humidity_ratio: S, formulation: Formulation) -> Self {
         use crate::mixture::Mixture;
-        let gas = crate::basis::with_mixture!(formulation, S, M => M::<S>::at(celsius).gas(pascals, humidity_ratio));
+        let gas = with_mixture!(formulation, S, M => M::<S>::at(celsius).gas(pascals, humidity_ratio));
         Self { celsius, pascals, humidity_ratio, gas, formulation }
     }
 
@@ -103,13 +107,13 @@ macro_rules! plain_readers {
 plain_readers! {
     /// Specific humidity, per mass of moist air.
     specific_humidity -> SpecificHumidity::from_kilograms_per_kilogram,
-        |air| air.humidity_ratio / (k::<S>(1.0) + air.humidity_ratio);
+        |air| view::specific_humidity(air.humidity_ratio);
     /// Absolute humidity, mass of vapor per volume.
     absolute_humidity -> AbsoluteHumidity::from_kilograms_per_cubic_meter,
-        |air| air.humidity_ratio / air.gas.volume;
+        |air| view::absolute_humidity(air.humidity_ratio, &air.gas);
     /// Density of the moist air.
     density -> Density::from_kilograms_per_cubic_meter,
-        |air| (k::<S>(1.0) + air.humidity_ratio) / air.gas.volume;
+        |air| view::density(air.humidity_ratio, &air.gas);
     /// Water mole fraction x_w.
     water_mole_fraction -> WaterMoleFraction::from_fraction, |air| air.mole_fraction();
     /// Vapor pressure x_w p.
@@ -119,6 +123,6 @@ plain_readers! {
 impl<S: Scalar> MoistAir<S> {
     fn mole_fraction(&self) -> S {
         use crate::mixture::Mixture;
-        crate::basis::with_mixture!(self.formulation, S, M => <M<S> as Mixture<S>>::mole_fraction(self.humidity_ratio))
+        with_mixture!(self.formulation, S, M => <M<S> as Mixture<S>>::mole_fraction(self.humidity_ratio))
     }
 }

@@ -1,19 +1,21 @@
-//! What can be read from a state: the solves, written once over mixture and arithmetic, and the checked reader.
+//! What can be read from a state: the solves, written once over mixture and arithmetic, and the readers.
 
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
-use crate::error::{Error, NoValue};
+use crate::error::Error;
 use crate::mixture::transport::Transport;
-use crate::mixture::{Mixture, Potentials, Steps};
+use crate::mixture::{Mixture, Steps};
 use crate::quantity::{
     ChemicalPotential, Diffusivity, DynamicViscosity, Fugacity, SpecificEntropy, SpecificHeat, Speed,
     ThermalConductivity, ZERO_CELSIUS,
 };
 use crate::real::{Mask, Real, Scalar, k};
 use crate::saturation::{Magnus, Surface};
+use crate::solve;
 use crate::substance::{ice, liquid_water};
 
 use super::MoistAir;
+use super::view::View;
 
 /// Temperature, °C, at which a water mole fraction saturates over a surface.
 ///
@@ -30,14 +32,14 @@ fn dew_point_after<M: Mixture<R>, R: Real>(steps: usize, mole_fraction: R, press
     };
     // Beyond the equation of the condensed phase the search would wander, and might end where it looks like a result.
     let within = |kelvins: R| kelvins.at_least(k(coldest + ZERO_CELSIUS)).at_most(k(warmest + ZERO_CELSIUS));
-    let mut kelvins = within(Magnus::over(surface).temperature(target + pressure.ln()) + k(ZERO_CELSIUS));
-    for _ in 0..steps {
+    let start = within(Magnus::over(surface).temperature(target + pressure.ln()) + k(ZERO_CELSIUS));
+    let kelvins = solve::repeated(steps, start, |kelvins| {
         let saturation = M::at(kelvins - k(ZERO_CELSIUS)).saturation(pressure, surface);
         // d ln x / dT = (1 − x) d ln W / dT
         let slope = (k::<R>(1.0) - saturation.mole_fraction) * saturation.log_slope;
         let error = saturation.mole_fraction.ln() - target;
-        kelvins = within(kelvins / (k::<R>(1.0) + error / (slope * kelvins)));
-    }
+        within(kelvins / (k::<R>(1.0) + error / (slope * kelvins)))
+    });
     kelvins - k(ZERO_CELSIUS)
 }
 
@@ -61,12 +63,11 @@ fn wet_bulb_after<M: Mixture<R>, R: Real>(
     enthalpy: R,
     surface: Surface,
 ) -> R {
-    let mut x = wet_bulb_start::<R>(steps.wet_bulb_halvings, celsius, pressure, humidity_ratio, surface);
-    for _ in 0..steps.wet_bulb {
+    let start = wet_bulb_start::<R>(steps.wet_bulb_halvings, celsius, pressure, humidity_ratio, surface);
+    solve::repeated(steps.wet_bulb, start, |x| {
         let (deficit, slope) = saturation_deficit::<M, R>(x, pressure, humidity_ratio, enthalpy, surface);
-        x = x - deficit / slope;
-    }
-    x
+        x - deficit / slope
+    })
 }
 
 /// h + (W_s − W) h_c − h_s at a trial temperature x, positive left of the wet bulb, and the slope for Newton: that of the
@@ -99,7 +100,8 @@ pub(super) const fn condensed_heat_capacity(surface: Surface) -> f64 {
     }
 }
 
-/// A wet bulb within 2.2 K (the worst in hot steam; 4 K with the Helmholtz formulation, to 5 MPa), by halving the interval of possible ones under rounded perfect-gas constants.
+/// A wet bulb within 2.2 K (the worst in hot steam; 4 K with the Helmholtz formulation, to 5 MPa), by halving the interval of possible ones
+/// under rounded perfect-gas constants.
 fn wet_bulb_start<R: Real>(halvings: usize, celsius: R, pressure: R, humidity_ratio: R, surface: Surface) -> R {
     let curve = Magnus::over(surface);
     let (coldest, latent_at_zero, heat_capacity) = match surface {
@@ -126,22 +128,18 @@ pub(super) fn stable_wet_bulb<M: Mixture<R>, R: Real>(celsius: R, pressure: R, h
     let melting = M::melting_temperature(pressure);
     let (at_melting, _) = saturation_deficit::<M, R>(melting, pressure, humidity_ratio, enthalpy, Surface::Liquid);
     let over = |surface| wet_bulb::<M, R>(celsius, pressure, humidity_ratio, enthalpy, surface);
+    // The choice is that of the exact wet bulb: what lies beyond is rounding.
+    let rounded = |value: R, side: fn(R, R) -> R| value.rounded_to(side(value, melting));
     R::pick(
         k::<R>(0.0).le(at_melting),
-        || over(Surface::Liquid).at_least(melting),
-        || over(Surface::Ice).at_most(melting),
+        || rounded(over(Surface::Liquid), R::at_least),
+        || rounded(over(Surface::Ice), R::at_most),
     )
 }
 
 /// Whether a saturation exists in the gas phase.
 pub(crate) fn saturates<R: Real>(mole_fraction: R) -> R::Mask {
     k::<R>(0.0).lt(mole_fraction).and(mole_fraction.lt(k(1.0)))
-}
-
-/// A state with the temperature functions of its mixture at hand.
-pub(super) struct View<M, S> {
-    pub mixture: M,
-    pub air: MoistAir<S>,
 }
 
 impl<S: Scalar> MoistAir<S> {
@@ -160,10 +158,12 @@ impl<S: Scalar> MoistAir<S> {
     /// # Ok::<(), Error>(())
     /// ```
     pub fn value(&self, quantity: Quantity) -> Result<S, Error> {
-        if let Some(value) = self.plain(quantity) {
-            return Ok(value);
-        }
-        with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).value(quantity))
+        with_mixture!(self.formulation, S, M => {
+            match self.plain::<M<S>>(quantity) {
+                Some(value) => Ok(value),
+                None => View::<M<S>, S>::of(*self).value(quantity),
+            }
+        })
     }
 
     /// Many properties at once: calls `take` for each with its value or the reason why there is none.
@@ -178,233 +178,6 @@ impl<S: Scalar> MoistAir<S> {
                 take(quantity, view.value(quantity));
             }
         });
-    }
-
-    /// A property that every state has.
-    fn plain(&self, quantity: Quantity) -> Option<S> {
-        Some(match quantity {
-            Quantity::DryBulb => self.celsius,
-            Quantity::Pressure => self.pascals,
-            Quantity::HumidityRatio => self.humidity_ratio,
-            Quantity::WaterMoleFraction => self.water_mole_fraction().fraction(),
-            Quantity::VaporPressure => self.vapor_pressure().pascals(),
-            Quantity::SpecificHumidity => self.specific_humidity().kilograms_per_kilogram(),
-            Quantity::AbsoluteHumidity => self.absolute_humidity().kilograms_per_cubic_meter(),
-            Quantity::SpecificEnthalpy => self.gas.enthalpy,
-            Quantity::SpecificVolume => self.gas.volume,
-            Quantity::Density => self.density().kilograms_per_cubic_meter(),
-            Quantity::SpecificHeat => self.gas.specific_heat,
-            Quantity::CompressibilityFactor => self.gas.compressibility,
-            _ => return None,
-        })
-    }
-}
-
-impl<M: Mixture<S>, S: Scalar> View<M, S> {
-    pub fn of(air: MoistAir<S>) -> Self {
-        Self { mixture: M::at(air.celsius), air }
-    }
-
-    fn mole_fraction(&self) -> S {
-        M::mole_fraction(self.air.humidity_ratio)
-    }
-
-    pub fn value(&self, quantity: Quantity) -> Result<S, Error> {
-        if let Some(value) = self.air.plain(quantity) {
-            return Ok(value);
-        }
-        let w = self.air.humidity_ratio;
-        Ok(match quantity {
-            Quantity::RelativeHumidity => self.mole_fraction() / self.saturation(quantity, Surface::Stable)?,
-            Quantity::RelativeHumidityOverLiquid => {
-                self.mole_fraction() / self.saturation(quantity, Surface::Liquid)?
-            }
-            Quantity::DegreeOfSaturation => w / M::humidity_ratio(self.saturation(quantity, Surface::Stable)?),
-            Quantity::VaporPressureDeficit => {
-                (self.saturation(quantity, Surface::Stable)? - self.mole_fraction()) * self.air.pascals
-            }
-            Quantity::SpecificEntropy => self.entropy(),
-            Quantity::SpeedOfSound => self.speed_of_sound(),
-            Quantity::SpecificHeatAtConstantVolume => self.specific_heat_at_constant_volume(),
-            Quantity::ChemicalPotentialOfWater => {
-                let potential = self.potentials().water;
-                // −∞ also where the density of the water underflows.
-                if !(k::<S>(0.0).lt(w) && potential.is_finite()) {
-                    return Err(Error::NoValue { quantity, reason: NoValue::DryAir });
-                }
-                potential
-            }
-            Quantity::ChemicalPotentialOfDryAir => self.potentials().dry_air,
-            Quantity::FugacityOfWater => self.fugacity(),
-            Quantity::DynamicViscosity => self.transport().viscosity,
-            Quantity::ThermalConductivity => self.transport().conductivity,
-            Quantity::VaporDiffusivity => self.transport().diffusivity,
-            Quantity::PrandtlNumber => self.prandtl_number(),
-            Quantity::SchmidtNumber => self.schmidt_number(),
-            Quantity::LewisNumber => self.lewis_number(),
-            Quantity::SaturationPressure => self.mixture.pure_saturation_pressure(self.air.pascals, Surface::Stable),
-            Quantity::EnhancementFactor => {
-                self.saturation(quantity, Surface::Stable)? * self.air.pascals
-                    / self.mixture.pure_saturation_pressure(self.air.pascals, Surface::Stable)
-            }
-            Quantity::WetBulb => self.within_surface(
-                quantity,
-                stable_wet_bulb::<M, S>(self.air.celsius, self.air.pascals, w, self.air.gas.enthalpy),
-                Surface::Stable,
-            )?,
-            Quantity::WetBulbOverLiquid => self.wet_bulb_over(quantity, Surface::Liquid)?,
-            Quantity::WetBulbOverIce => self.wet_bulb_over(quantity, Surface::Ice)?,
-            Quantity::DewPoint => self.saturation_temperature(quantity, Surface::Liquid)?,
-            Quantity::FrostPoint => self.saturation_temperature(quantity, Surface::Ice)?,
-            _ => return Err(Error::UnknownSelector { code: quantity.code() }),
-        })
-    }
-
-    fn entropy(&self) -> S {
-        self.mixture.entropy(self.air.pascals, self.air.humidity_ratio, &self.air.gas)
-    }
-
-    fn speed_of_sound(&self) -> S {
-        self.mixture.speed_of_sound(self.air.humidity_ratio, &self.air.gas)
-    }
-
-    fn specific_heat_at_constant_volume(&self) -> S {
-        self.mixture.specific_heat_at_constant_volume(self.air.humidity_ratio, &self.air.gas)
-    }
-
-    fn potentials(&self) -> Potentials<S> {
-        self.mixture.potentials(self.air.pascals, self.air.humidity_ratio, &self.air.gas)
-    }
-
-    fn fugacity(&self) -> S {
-        self.mixture.fugacity(self.air.pascals, self.air.humidity_ratio, &self.air.gas)
-    }
-
-    fn transport(&self) -> Transport<S> {
-        let air = k::<S>(1.0) / self.air.gas.volume;
-        let kelvins = self.air.celsius + k(ZERO_CELSIUS);
-        Transport::of(kelvins, self.air.pascals, self.mole_fraction(), air, air * self.air.humidity_ratio)
-    }
-
-    /// Pr = c_p μ / λ, c_p per mass of moist air.
-    fn prandtl_number(&self) -> S {
-        let transport = self.transport();
-        self.heat_capacity() * transport.viscosity / transport.conductivity
-    }
-
-    /// Sc = μ / (ρ D)
-    fn schmidt_number(&self) -> S {
-        let transport = self.transport();
-        transport.viscosity / (self.density() * transport.diffusivity)
-    }
-
-    /// Le = λ / (ρ c_p D)
-    fn lewis_number(&self) -> S {
-        let transport = self.transport();
-        transport.conductivity / (self.density() * self.heat_capacity() * transport.diffusivity)
-    }
-
-    fn density(&self) -> S {
-        self.air.density().kilograms_per_cubic_meter()
-    }
-
-    /// Isobaric, per mass of moist air.
-    fn heat_capacity(&self) -> S {
-        self.air.gas.specific_heat / (self.air.humidity_ratio + k(1.0))
-    }
-
-    /// Saturation mole fraction at this temperature and pressure.
-    fn saturation(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
-        let no_value = |reason| Err(Error::NoValue { quantity, reason });
-        if surface == Surface::Liquid && self.air.celsius.lt(k(Quantity::DewPoint.limits().0)) {
-            return no_value(NoValue::BelowSurfaceRange);
-        }
-        let mole_fraction = self.mixture.saturation(self.air.pascals, surface).mole_fraction;
-        if saturates(mole_fraction) { Ok(mole_fraction) } else { no_value(NoValue::AboveBoiling) }
-    }
-
-    fn wet_bulb_over(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
-        if surface == Surface::Ice {
-            // The solve means nothing where the wet bulb would be warmer than ice can be.
-            let melting = M::melting_temperature(self.air.pascals);
-            let (at_melting, slope) = saturation_deficit::<M, S>(
-                melting,
-                self.air.pascals,
-                self.air.humidity_ratio,
-                self.air.gas.enthalpy,
-                surface,
-            );
-            if rounding::<S>().lt(-(at_melting / slope)) {
-                return Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange });
-            }
-        }
-        let value = wet_bulb::<M, S>(
-            self.air.celsius,
-            self.air.pascals,
-            self.air.humidity_ratio,
-            self.air.gas.enthalpy,
-            surface,
-        );
-        self.within_surface(quantity, value, surface)
-    }
-
-    fn saturation_temperature(&self, quantity: Quantity, surface: Surface) -> Result<S, Error> {
-        let value = saturation_point::<M, S>(quantity, self.mole_fraction(), self.air.pascals)?;
-        Ok(self.not_above_dry_bulb(value, surface))
-    }
-
-    fn within_surface(&self, quantity: Quantity, value: S, surface: Surface) -> Result<S, Error> {
-        let (min, max) = range::<M, S>(quantity, surface, self.air.pascals);
-        within(quantity, self.not_above_dry_bulb(value, surface), min, max)
-    }
-
-    /// No state holds more vapor than liquid water allows: over liquid neither wet bulb nor dew point exceeds the dry bulb, though
-    /// the last bits of a solve may. Over ice they may exceed it truly.
-    fn not_above_dry_bulb(&self, value: S, surface: Surface) -> S {
-        let over_liquid = match surface {
-            Surface::Liquid => true,
-            Surface::Ice => false,
-            Surface::Stable => M::melting_temperature(self.air.pascals) <= value,
-        };
-        if over_liquid { value.at_most(self.air.celsius) } else { value }
-    }
-}
-
-/// Dew or frost point, °C, of a mole fraction at a pressure.
-pub(super) fn saturation_point<M: Mixture<S>, S: Scalar>(
-    quantity: Quantity,
-    mole_fraction: S,
-    pressure: S,
-) -> Result<S, Error> {
-    if !k::<S>(0.0).lt(mole_fraction) {
-        return Err(Error::NoValue { quantity, reason: NoValue::DryAir });
-    }
-    let surface = if quantity == Quantity::FrostPoint { Surface::Ice } else { Surface::Liquid };
-    let value = dew_point::<M, S>(mole_fraction, pressure, surface);
-    let (min, max) = range::<M, S>(quantity, surface, pressure);
-    within(quantity, value, min, max)
-}
-
-/// Where a temperature over a surface has a meaning.
-fn range<M: Mixture<S>, S: Scalar>(quantity: Quantity, surface: Surface, pressure: S) -> (S, S) {
-    let (min, max) = M::FORMULATION.limits(quantity);
-    let max = k::<S>(max);
-    (k(min), if surface == Surface::Ice { M::melting_temperature(pressure).at_most(max) } else { max })
-}
-
-/// What a solved temperature may be off, K.
-fn rounding<S: Scalar>() -> S {
-    k::<S>(1e-9).at_least(S::epsilon() * k(512.0))
-}
-
-/// A temperature, if it lies between two; rounding that carried it past an end is taken back.
-fn within<S: Scalar>(quantity: Quantity, value: S, min: S, max: S) -> Result<S, Error> {
-    if (min - rounding()).le(value) && value.le(max + rounding()) {
-        Ok(value.at_least(min).at_most(max))
-    } else if max.lt(value) {
-        Err(Error::NoValue { quantity, reason: NoValue::AboveSurfaceRange })
-    } else {
-        Err(Error::NoValue { quantity, reason: NoValue::BelowSurfaceRange })
     }
 }
 
@@ -462,51 +235,6 @@ impl<S: Scalar> MoistAir<S> {
         Speed::from_meters_per_second(value)
     }
 
-    /// Isochoric heat capacity per mass of dry air, at constant humidity ratio. Real gas: −T ∂²f/∂T² of IAPWS G8-10; ideal gas: c_p less the
-    /// gas constant.
-    pub fn specific_heat_at_constant_volume(&self) -> SpecificHeat<S> {
-        let value =
-            with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).specific_heat_at_constant_volume());
-        SpecificHeat::from_joules_per_kilogram_kelvin(value)
-    }
-
-    /// Chemical potential μ_w of the water in the gas, per mass of water, on the datum of enthalpy and entropy: near zero for liquid water at the
-    /// triple point. At saturation it is that of the condensed phase (IAPWS G8-10 Table 2); not so for the ideal gas, whose relations do
-    /// not stem from one potential.
-    ///
-    /// # Errors
-    /// [`Error::NoValue`] for dry air, where it would be −∞.
-    ///
-    /// ```
-    /// # use moistair_core::*;
-    /// let site = Basis::real_gas(Pressure::from_kilopascals(101.325));
-    /// let at = |rh| MoistAir::from_dry_bulb(Temperature::from_celsius(20.0), RelativeHumidity::from_percent(rh), site);
-    /// // That of liquid water at 20 °C and 101 325 Pa: h − T s = 84.01 − 293.15 × 0.29646 kJ/kg (IAPWS-95).
-    /// let saturated: f64 = at(100.0)?.chemical_potential_of_water()?.kilojoules_per_kilogram();
-    /// assert!((saturated - -2.90).abs() < 0.01);
-    /// assert!(at(50.0)?.chemical_potential_of_water()?.kilojoules_per_kilogram() < saturated);
-    /// assert!(at(0.0)?.chemical_potential_of_water().is_err());
-    /// # Ok::<(), Error>(())
-    /// ```
-    pub fn chemical_potential_of_water(&self) -> Result<ChemicalPotential<S>, Error> {
-        self.value(Quantity::ChemicalPotentialOfWater).map(ChemicalPotential::from_joules_per_kilogram)
-    }
-
-    /// Chemical potential μ_a of the dry air in the gas, per mass of dry air, on the datum of enthalpy and entropy: zero for dry air at 0 °C and
-    /// 101 325 Pa. With the water's it makes the Gibbs energy: h − T s = μ_a + W μ_w.
-    pub fn chemical_potential_of_dry_air(&self) -> ChemicalPotential<S> {
-        let value = with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).potentials().dry_air);
-        ChemicalPotential::from_joules_per_kilogram(value)
-    }
-
-    /// Fugacity f_w of the water in the gas, zero for dry air; ideal gas: x_w p. Real gas: ρ_w R_w T exp(μʳ_w / R_w T) from the residual
-    /// chemical potential of IAPWS G8-10. It goes to ρ_w R_w T at low pressure, which is x_w p to 1.7e-5: so far the gas constants of the
-    /// publications for water and dry air lie apart. IAPWS G11-15 has it by a virial equation.
-    pub fn fugacity_of_water(&self) -> Fugacity<S> {
-        let value = with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).fugacity());
-        Fugacity::from_pascals(value)
-    }
-
     /// Dynamic viscosity μ. Dry air by Lemmon & Jacobsen 2004 (1 %), vapor by IAPWS R12-08 (2 %), mixed by Wilke's rule of 1950 (a few percent
     /// in hot and humid air). Below 0 °C the vapor's part extrapolates.
     ///
@@ -555,6 +283,51 @@ impl<S: Scalar> MoistAir<S> {
 
     fn transport(&self) -> Transport<S> {
         with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).transport())
+    }
+
+    /// Isochoric heat capacity per mass of dry air, at constant humidity ratio. Real gas: −T ∂²f/∂T² of IAPWS G8-10; ideal gas: c_p less the
+    /// gas constant.
+    pub fn specific_heat_at_constant_volume(&self) -> SpecificHeat<S> {
+        let value =
+            with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).specific_heat_at_constant_volume());
+        SpecificHeat::from_joules_per_kilogram_kelvin(value)
+    }
+
+    /// Chemical potential μ_w of the water in the gas, per mass of water, on the datum of enthalpy and entropy: near zero for liquid water at the
+    /// triple point. At saturation it is that of the condensed phase (IAPWS G8-10 Table 2); not so for the ideal gas, whose relations do
+    /// not stem from one potential.
+    ///
+    /// # Errors
+    /// [`Error::NoValue`] for dry air, where it would be −∞.
+    ///
+    /// ```
+    /// # use moistair_core::*;
+    /// let site = Basis::real_gas(Pressure::from_kilopascals(101.325));
+    /// let at = |rh| MoistAir::from_dry_bulb(Temperature::from_celsius(20.0), RelativeHumidity::from_percent(rh), site);
+    /// // That of liquid water at 20 °C and 101 325 Pa: h − T s = 84.01 − 293.15 × 0.29646 kJ/kg (IAPWS-95).
+    /// let saturated: f64 = at(100.0)?.chemical_potential_of_water()?.kilojoules_per_kilogram();
+    /// assert!((saturated - -2.90).abs() < 0.01);
+    /// assert!(at(50.0)?.chemical_potential_of_water()?.kilojoules_per_kilogram() < saturated);
+    /// assert!(at(0.0)?.chemical_potential_of_water().is_err());
+    /// # Ok::<(), Error>(())
+    /// ```
+    pub fn chemical_potential_of_water(&self) -> Result<ChemicalPotential<S>, Error> {
+        self.value(Quantity::ChemicalPotentialOfWater).map(ChemicalPotential::from_joules_per_kilogram)
+    }
+
+    /// Chemical potential μ_a of the dry air in the gas, per mass of dry air, on the datum of enthalpy and entropy: zero for dry air at 0 °C and
+    /// 101 325 Pa. With the water's it makes the Gibbs energy: h − T s = μ_a + W μ_w.
+    pub fn chemical_potential_of_dry_air(&self) -> ChemicalPotential<S> {
+        let value = with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).potentials().dry_air);
+        ChemicalPotential::from_joules_per_kilogram(value)
+    }
+
+    /// Fugacity f_w of the water in the gas, zero for dry air; ideal gas: x_w p. Real gas: ρ_w R_w T exp(μʳ_w / R_w T) from the residual
+    /// chemical potential of IAPWS G8-10. It goes to ρ_w R_w T at low pressure, which is x_w p to 1.7e-5: so far the gas constants of the
+    /// publications for water and dry air lie apart. IAPWS G11-15 has it by a virial equation.
+    pub fn fugacity_of_water(&self) -> Fugacity<S> {
+        let value = with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).fugacity());
+        Fugacity::from_pascals(value)
     }
 
     /// Enhancement factor: x_ws p over the saturation pressure of pure water, stable surface; 1 for the ideal gas.

@@ -3,6 +3,7 @@
 use super::{Fluid, TemperatureOrder, Terms, water, water_vapor};
 use crate::quantity::ZERO_CELSIUS;
 use crate::real::{Choose, Real, k, polynomial};
+use crate::solve;
 
 /// Liquid water is evaluated between these, °C; outside, at the nearer end.
 pub const RANGE: (f64, f64) = (-45.0, 205.0);
@@ -51,14 +52,13 @@ fn equation<R: Real, const STEPS: usize>(celsius: R, pascals: R) -> Condensed<R>
     let rt = kelvins * k(water::GAS_CONSTANT);
     let tau = k::<R>(water::CRITICAL_TEMPERATURE) / kelvins;
     let terms = Terms::at(water_vapor::ideal(kelvins), &water::TERMS, tau);
-    let mut delta = density_start(celsius, pascals);
-    for _ in 0..STEPS {
+    let delta = solve::repeated(STEPS, density_start(celsius, pascals), |delta| {
         // p = ρ R T (1 + δφʳ_δ) and its slope in density: R6-95 Table 3.
         let residual = terms.residual(delta, TemperatureOrder::Value);
         let pressure = delta * rt * (residual.first + k(1.0)) * k(water::CRITICAL_DENSITY);
         let slope = rt * (residual.first * k(2.0) + residual.second + k(1.0)) * k(water::CRITICAL_DENSITY);
-        delta = delta - (pressure - pascals) / slope;
-    }
+        delta - (pressure - pascals) / slope
+    });
     let residual = terms.residual(delta, TemperatureOrder::Value);
     let thermal = terms.residual(delta, TemperatureOrder::First);
     let volume = k::<R>(1.0) / (delta * k(water::CRITICAL_DENSITY));

@@ -22,6 +22,7 @@ from ._core import (
     pressure_at_elevation,
     temperature_at_elevation,
 )
+from ._derivatives import PropertyDerivatives
 from ._errors import (
     InfeasibleError,
     MoistAirError,
@@ -30,6 +31,7 @@ from ._errors import (
     OutOfRangeError,
     ProcessError,
     UnattainableError,
+    UndeterminedError,
     UnknownNameError,
 )
 from ._quantities import PROPERTIES, QUANTITIES, Quantity
@@ -45,8 +47,10 @@ __all__ = [
     "NotFiniteError",
     "OutOfRangeError",
     "ProcessError",
+    "PropertyDerivatives",
     "Quantity",
     "UnattainableError",
+    "UndeterminedError",
     "UnknownNameError",
     "__version__",
     "account",

@@ -7,6 +7,7 @@ import numpy as np
 from numpy.typing import ArrayLike, NDArray
 from typing_extensions import Self
 
+from ._derivatives import PropertyDerivatives
 from .account import Added, Rule
 from .process.books import Books
 from .signal import Kind, Quality, Reason, Unit
@@ -57,8 +58,8 @@ class MoistAir(Generic[_T]):
     def __new__(
         cls,
         *,
-        dry_bulb: float,
         pressure: float,
+        dry_bulb: Union[float, None] = None,
         relative_humidity: Union[float, None] = None,
         relative_humidity_over_liquid: Union[float, None] = None,
         wet_bulb: Union[float, None] = None,
@@ -81,8 +82,8 @@ class MoistAir(Generic[_T]):
     def __new__(
         cls,
         *,
-        dry_bulb: ArrayLike,
         pressure: ArrayLike,
+        dry_bulb: Union[ArrayLike, None] = None,
         relative_humidity: Union[ArrayLike, None] = None,
         relative_humidity_over_liquid: Union[ArrayLike, None] = None,
         wet_bulb: Union[ArrayLike, None] = None,
@@ -237,6 +238,7 @@ class MoistAir(Generic[_T]):
     def properties(self: MoistAir[_Array], *names: str, out: None = None) -> dict[str, _Array]: ...
     @overload
     def properties(self: MoistAir[_Array], *names: str, out: dict[str, NDArray[Any]]) -> dict[str, NDArray[Any]]: ...
+    def derivatives(self, *names: str, second: str) -> dict[str, PropertyDerivatives[_T]]: ...
     def __eq__(self, other: object, /) -> bool: ...
     def __hash__(self) -> int: ...
     def __copy__(self) -> Self: ...

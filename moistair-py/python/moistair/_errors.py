@@ -12,6 +12,7 @@ __all__ = [
     "OutOfRangeError",
     "ProcessError",
     "UnattainableError",
+    "UndeterminedError",
     "UnknownNameError",
 ]
 
@@ -80,7 +81,11 @@ class OutOfRangeError(MoistAirError):
 
 
 class UnattainableError(MoistAirError):
-    """An input is in its range, but no state has it at this dry bulb and pressure."""
+    """An input is in its range, but no state has it at this dry bulb and pressure, or beside the other property."""
+
+
+class UndeterminedError(MoistAirError):
+    """Two properties that fix no state together, or only badly; the message says why."""
 
 
 class NoValueError(MoistAirError):
@@ -103,6 +108,8 @@ _CLASSES: dict[int, type[MoistAirError]] = {
     205: ProcessError,
     206: ProcessError,
     207: ProcessError,
+    209: UndeterminedError,
+    210: UnattainableError,
     301: InfeasibleError,
 }
 

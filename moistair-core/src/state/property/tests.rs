@@ -3,6 +3,7 @@
 use std::println;
 
 use super::*;
+use crate::error::NoValue;
 use crate::mixture::{Gas, Helmholtz, IdealGas, RealGas};
 use crate::state::construct::greatest_humidity_ratio;
 
