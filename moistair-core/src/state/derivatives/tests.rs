@@ -15,7 +15,7 @@ use crate::checks::Random;
 use crate::quantity::{Pressure, Temperature};
 use crate::state::construct::{greatest_humidity_ratio, humidity_ratio};
 
-const FORMULATIONS: [Formulation; 2] = [Formulation::RealGas, Formulation::IdealGas];
+const FORMULATIONS: &[Formulation] = Formulation::ALL;
 
 fn seconds() -> impl Iterator<Item = Quantity> {
     Quantity::ALL.iter().copied().filter(|quantity| quantity.fixes_state())
@@ -42,7 +42,7 @@ fn states(count: usize, seed: u64, share: (f64, f64)) -> Vec<MoistAir> {
         let w = random.between(share.0, share.1) * limit(celsius, ln.exp(), formulation);
         made(celsius, Quantity::HumidityRatio, w, ln.exp(), formulation).unwrap()
     };
-    (0..count).map(|i| next(FORMULATIONS[i % 2])).collect()
+    (0..count).map(|i| next(FORMULATIONS[i % FORMULATIONS.len()])).collect()
 }
 
 /// The value beside its derivatives is that of the scalar call, to the bit, and a property has derivatives where it has a value: for
@@ -248,7 +248,7 @@ fn kinks_have_a_side() {
         let air = made(t, Quantity::HumidityRatio, 1e-4, 101_325.0, formulation).unwrap();
         air.derivatives(Quantity::SaturationPressure, Quantity::HumidityRatio).unwrap().by_dry_bulb
     };
-    for formulation in FORMULATIONS {
+    for &formulation in FORMULATIONS {
         let melting = with_mixture!(formulation, f64, M => <M<f64> as Mixture<f64>>::melting_temperature(101_325.0));
         // At the melting temperature: over liquid, 45 Pa/K; below: over ice, 50 Pa/K.
         let (at, above, below) = (melting, melting + 1e-6, melting - 1e-6);
