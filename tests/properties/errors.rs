@@ -55,6 +55,21 @@ fn texts_name_quantity_value_and_limits() {
     assert!(text.starts_with("dew point 25 °C has no state here") && text.contains("-40 and 20"), "{text}");
 }
 
+/// The Helmholtz formulation names its own limits.
+#[test]
+fn texts_name_the_limits_of_the_formulation() {
+    let refused = |celsius, pascals| {
+        let basis: Basis = Basis::helmholtz(Pressure::from_pascals(pascals));
+        let humidity = RelativeHumidity::from_percent(50.0);
+        MoistAir::from_dry_bulb(Temperature::from_celsius(celsius), humidity, basis).unwrap_err().to_string()
+    };
+    assert_eq!(refused(20.0, 6e6), "pressure 6000000 Pa is outside 20000 to 5000000 Pa");
+    assert_eq!(
+        refused(293.15, 101_325.0),
+        "dry bulb 293.15 °C is outside -80 to 200 °C; kelvins? degrees Celsius are expected"
+    );
+}
+
 /// A property of a mixed-up selector is refused by its code.
 #[test]
 fn quantities_that_fix_no_state() {

@@ -5,7 +5,9 @@ use proptest::prelude::*;
 
 /// How many cases a law is tried on: so many, or `MOISTAIR_CASES`.
 pub fn cases(usual: u32) -> ProptestConfig {
-    ProptestConfig::with_cases(std::env::var("MOISTAIR_CASES").map_or(usual, |cases| cases.parse().unwrap()))
+    let cases = std::env::var("MOISTAIR_CASES").map_or(usual, |cases| cases.parse().unwrap());
+    let rejects = 65_536 + 4 * cases;
+    ProptestConfig { cases, max_local_rejects: rejects, max_global_rejects: rejects, ..ProptestConfig::default() }
 }
 
 /// Dry bulb, basis, and a share of the most vapor that a state there holds; corners often.

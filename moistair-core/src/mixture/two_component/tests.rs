@@ -246,7 +246,7 @@ fn fugacity_of_the_mixture() {
 /// phase: on either side of the melting temperature, supercooled too.
 #[test]
 fn equal_chemical_potentials_at_saturation() {
-    fn run<M: Model<f64>>() {
+    fn run<M: Model<f64>>(bound: f64) {
         let (mut worst, mut compared) = (0.0_f64, 0);
         for (celsius, pascals) in domain_of(M::FORMULATION) {
             let mixture = HelmholtzMixture::<f64, M>::at(celsius);
@@ -270,10 +270,12 @@ fn equal_chemical_potentials_at_saturation() {
             }
         }
         println!("chemical potentials at saturation, {:?}: {compared} compared, worst {worst:e} RT", M::FORMULATION);
-        assert!(worst < 1e-12 && compared > 1_000);
+        assert!(worst < bound && compared > 1_000);
     }
-    run::<Virial>();
-    run::<Published>();
+    run::<Virial>(1e-12);
+    run::<Published>(1e-12);
+    // Against the condensed phases as published: what the fits leave.
+    run::<Fitted>(3e-8);
 }
 
 /// g of ice, where there is ice.
