@@ -5,7 +5,7 @@
 //! Each function is interpolated at the Chebyshev nodes of its domain by the least number of coefficients that meets its tolerance at points
 //! between the nodes. All arithmetic is + − × ÷ √ on doubles in a fixed order, so that every machine makes the same text.
 
-use std::fmt::Write;
+use core::fmt::Write;
 use std::prelude::rust_2024::*;
 use std::{format, println, vec};
 
@@ -51,7 +51,7 @@ fn greatest_density(water: bool, kelvins: f64) -> f64 {
     if water {
         // Saturation over liquid, with room for what the vapor is denser than ideal and for other pressures.
         let celsius = (kelvins - ZERO_CELSIUS).max(COLDEST_LIQUID.coldest);
-        1.25 * Phase::of(celsius, liquid_water::at(celsius, REFERENCE_PRESSURE)).potential.exp()
+        1.25 * Real::exp(Phase::of(celsius, liquid_water::at(celsius, REFERENCE_PRESSURE)).potential)
     } else {
         GREATEST_PRESSURE / (dry_air::GAS_CONSTANT * kelvins * dry_air::REDUCING_DENSITY)
     }
