@@ -62,8 +62,12 @@ impl Errors {
     /// One more.
     pub fn add(&mut self, error: f64, at: Point) {
         self.all.push(error as f32);
+        self.consider(error, at);
+    }
+
+    fn consider(&mut self, error: f64, at: Point) {
         // A NaN is the worst there is.
-        if self.worst.is_none_or(|(worst, _)| !(error <= worst)) {
+        if self.worst.is_none_or(|(worst, _)| error.is_nan() || error > worst) {
             self.worst = Some((error, at));
         }
     }
@@ -73,9 +77,7 @@ impl Errors {
         self.all.extend(other.all);
         self.unlike += other.unlike;
         if let Some((error, at)) = other.worst {
-            if self.worst.is_none_or(|(worst, _)| !(error <= worst)) {
-                self.worst = Some((error, at));
-            }
+            self.consider(error, at);
         }
     }
 
