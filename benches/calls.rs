@@ -6,7 +6,7 @@ use moistair_benches::air;
 use moistair_core::process::AirStream;
 use moistair_core::process::coil::{self, CondensateTemperature};
 use moistair_core::{
-    AirWithCondensate, Basis, Formulation, Freezing, HumidityRatio, MassFlow, MoistAir, Pressure, Quantity,
+    AirWithCondensate, Basis, DewPoint, Formulation, Freezing, HumidityRatio, MassFlow, MoistAir, Pressure, Quantity,
     RelativeHumidity, SpecificEnthalpy, Temperature,
 };
 
@@ -18,6 +18,7 @@ struct Case {
     humidity: RelativeHumidity,
     basis: Basis,
     air: MoistAir,
+    dew_point: DewPoint,
     stream: AirStream,
     apparatus: Temperature,
     fog: (SpecificEnthalpy, HumidityRatio),
@@ -44,6 +45,14 @@ calls! {
     measured_enthalpy: |case| case.air.value(Quantity::SpecificEnthalpy);
     measured_wet_bulb: |case| case.air.wet_bulb();
     measured_dew_point: |case| case.air.dew_point();
+    measured_specific_entropy: |case| case.air.specific_entropy();
+    measured_speed_of_sound: |case| case.air.speed_of_sound();
+    measured_dynamic_viscosity: |case| case.air.dynamic_viscosity();
+    measured_fugacity_of_water: |case| case.air.fugacity_of_water();
+    measured_dew_point_derivatives: |case| case.air.derivatives(Quantity::DewPoint, Quantity::RelativeHumidity);
+    measured_from_dew_point_and_humidity: |case| {
+        MoistAir::from_two_properties(case.dew_point, case.humidity, case.basis)
+    };
     measured_equilibrium_fog: |case| {
         AirWithCondensate::from_enthalpy_and_water(case.fog.0, case.fog.1, Freezing::Equilibrium, case.basis)
     };
@@ -56,7 +65,8 @@ fn main() {
     let formulation = match std::env::args().nth(1).as_deref() {
         Some("ideal") => Formulation::IdealGas,
         Some("real") => Formulation::RealGas,
-        _ => panic!("calls ideal|real"),
+        Some("helmholtz") => Formulation::Helmholtz,
+        _ => panic!("calls ideal|real|helmholtz"),
     };
     let rows = air::rows(ROWS);
     for i in 0..ROWS {
@@ -73,6 +83,7 @@ fn main() {
             humidity,
             basis,
             air,
+            dew_point: DewPoint::from_celsius(dew_point),
             stream: AirStream::new(air, MassFlow::from_kilograms_per_second(1.0)).unwrap(),
             apparatus: Temperature::from_celsius((dew_point - 5.0).max(-40.0)),
             fog: (saturated.specific_enthalpy(), water),

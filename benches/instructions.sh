@@ -16,7 +16,7 @@ calls=${CARGO_TARGET_DIR:-target}/release/calls
 work=$(mktemp -d)
 trap 'rm -rf "$work"' EXIT
 
-for formulation in ideal real; do
+for formulation in ideal real helmholtz; do
     rows=$(valgrind -q --tool=callgrind --callgrind-out-file="$work/$formulation" --toggle-collect='*measured_*' \
         "$calls" "$formulation" 2>"$work/messages") || { cat "$work/messages" >&2; exit 1; }
     callgrind_annotate --inclusive=yes --threshold=100 --auto=no "$work/$formulation" |
@@ -36,7 +36,7 @@ awk -F, '
     {
         old = before[$1 "," $2]
         change = old > 0 ? sprintf("%+.1f %%", 100 * ($3 - old) / old) : ""
-        printf "%-12s%-28s%14d%14s%10s\n", $1 " gas", $2, $3, old == "" ? "-" : old, change
+        printf "%-12s%-28s%14d%14s%10s\n", $1, $2, $3, old == "" ? "-" : old, change
     }' "$committed" "$work/counted.csv"
 
 if [ "${1-}" = --write ]; then
