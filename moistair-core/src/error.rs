@@ -80,12 +80,14 @@ pub enum Error {
         reason: Undetermined,
     },
     /// Of two properties each is in its declared range, but no state at this pressure has both.
-    #[error("{quantity} {value}{} has no state together with the other property: at this pressure it lies between {min} and {max}{}{}", Unit(*.quantity), Unit(*.quantity), .quantity.likely_slip(*.value))]
+    #[error("{quantity} {value}{} has no state together with this {with}: at this pressure it lies between {min} and {max}{}{}", Unit(*.quantity), Unit(*.quantity), .quantity.likely_slip(*.value))]
     UnattainableTogether {
         /// The one of which the limits are given.
         quantity: Quantity,
         /// Its value.
         value: f64,
+        /// The other property.
+        with: Quantity,
         /// Its least value at states that have the other.
         min: f64,
         /// Its greatest.
@@ -162,6 +164,8 @@ pub enum NoValue {
     BelowSurfaceRange = 2,
     /// The value would lie above the range of saturation over this surface.
     AboveSurfaceRange = 3,
+    /// Of a derivative: the slope has no bound where the vapor vanishes.
+    UnboundedSlope = 4,
 }
 
 impl NoValue {
@@ -173,6 +177,7 @@ impl NoValue {
             Self::AboveBoiling => "the saturation pressure exceeds the total pressure, so that nothing saturates",
             Self::BelowSurfaceRange => "it would lie below the range of saturation over this surface",
             Self::AboveSurfaceRange => "it would lie above the range of saturation over this surface",
+            Self::UnboundedSlope => "a slope has no bound where the vapor vanishes",
         }
     }
 }

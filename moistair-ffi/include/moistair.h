@@ -102,6 +102,9 @@
 // No value: it would lie above the range of saturation over this surface.
 #define MOISTAIR_NO_VALUE_ABOVE_SURFACE_RANGE 313
 
+// Of a derivative: a slope has no bound where the vapor vanishes.
+#define MOISTAIR_NO_VALUE_UNBOUNDED_SLOPE 314
+
 // A fault of the library: a result was not a finite number. Nothing was written.
 #define MOISTAIR_INTERNAL 901
 

@@ -49,6 +49,8 @@ pub const MOISTAIR_NO_VALUE_ABOVE_BOILING: i32 = 311;
 pub const MOISTAIR_NO_VALUE_BELOW_SURFACE_RANGE: i32 = 312;
 /// No value: it would lie above the range of saturation over this surface.
 pub const MOISTAIR_NO_VALUE_ABOVE_SURFACE_RANGE: i32 = 313;
+/// Of a derivative: a slope has no bound where the vapor vanishes.
+pub const MOISTAIR_NO_VALUE_UNBOUNDED_SLOPE: i32 = 314;
 /// A fault of the library: a result was not a finite number. Nothing was written.
 pub const MOISTAIR_INTERNAL: i32 = 901;
 
@@ -169,6 +171,7 @@ pub fn text(code: i32) -> Option<&'static CStr> {
         MOISTAIR_NO_VALUE_ABOVE_BOILING => c"no value: the saturation pressure exceeds the total pressure",
         MOISTAIR_NO_VALUE_BELOW_SURFACE_RANGE => c"no value: below the range of saturation over this surface",
         MOISTAIR_NO_VALUE_ABOVE_SURFACE_RANGE => c"no value: above the range of saturation over this surface",
+        MOISTAIR_NO_VALUE_UNBOUNDED_SLOPE => c"no derivative: a slope has no bound where the vapor vanishes",
         MOISTAIR_INTERNAL => c"a result is not a finite number: a fault of the library",
         _ => return None,
     })
@@ -187,10 +190,11 @@ const _: () = {
     let (first, second) = (moistair_core::Quantity::DewPoint, moistair_core::Quantity::DewPoint);
     let undetermined = Error::Undetermined { first, second, reason: moistair_core::Undetermined::Twice };
     assert!(undetermined.code() == MOISTAIR_UNDETERMINED);
-    let together = Error::UnattainableTogether { quantity: first, value: 0.0, min: 0.0, max: 0.0 };
+    let together = Error::UnattainableTogether { quantity: first, value: 0.0, with: first, min: 0.0, max: 0.0 };
     assert!(together.code() == MOISTAIR_UNATTAINABLE_TOGETHER);
     assert!(no_value(NoValue::DryAir) == MOISTAIR_NO_VALUE_DRY_AIR);
     assert!(no_value(NoValue::AboveBoiling) == MOISTAIR_NO_VALUE_ABOVE_BOILING);
     assert!(no_value(NoValue::BelowSurfaceRange) == MOISTAIR_NO_VALUE_BELOW_SURFACE_RANGE);
     assert!(no_value(NoValue::AboveSurfaceRange) == MOISTAIR_NO_VALUE_ABOVE_SURFACE_RANGE);
+    assert!(no_value(NoValue::UnboundedSlope) == MOISTAIR_NO_VALUE_UNBOUNDED_SLOPE);
 };

@@ -617,7 +617,7 @@ impl MoistAir {
     /// Why a row has no state: 0 where it has one, else the code of the error. An int32 array; 0 for one state.
     ///
     /// 201 is what raises NotFiniteError for one state, 202 OutOfRangeError, 203 and 210 UnattainableError, 209 UndeterminedError, 310 to
-    /// 313 NoValueError.
+    /// 314 NoValueError.
     /// Processes add 205 to 207 (ProcessError) and 301 (InfeasibleError). That a property has no value at a valid state is no
     /// failure of the row: the property is NaN, its status 0.
     #[getter]

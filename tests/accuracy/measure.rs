@@ -14,10 +14,14 @@ pub enum Scale {
     Absolute,
 }
 
+fn is_heat_capacity(property: Quantity) -> bool {
+    matches!(property, Quantity::SpecificHeat | Quantity::SpecificHeatAtConstantVolume)
+}
+
 /// How the error of a property is told.
 pub fn scale(property: Quantity) -> Scale {
     match property.unit() {
-        "°C" | "J/kg" | "J/(kg K)" if property != Quantity::SpecificHeat => Scale::Absolute,
+        "°C" | "J/kg" | "J/(kg K)" if !is_heat_capacity(property) => Scale::Absolute,
         "Pa" if property == Quantity::VaporPressureDeficit => Scale::Absolute,
         _ => Scale::Relative,
     }

@@ -41,6 +41,26 @@ fn budget_of_single(property: Quantity) -> Option<f64> {
     }
 }
 
+/// Places of sections in the list of all.
+pub const REAL: usize = 0;
+/// The ideal gas.
+pub const IDEAL: usize = 3;
+/// Single precision, of the real gas.
+pub const SINGLE: usize = 4;
+
+/// What makes a figure smaller than an error is.
+fn note(property: Quantity) -> &'static str {
+    match property {
+        Quantity::WaterMoleFraction | Quantity::VaporPressure | Quantity::SpecificHumidity => {
+            "from the humidity ratio alone"
+        }
+        Quantity::DynamicViscosity | Quantity::ThermalConductivity | Quantity::VaporDiffusivity => {
+            "the same correlation on both sides"
+        }
+        _ => "",
+    }
+}
+
 /// All sections, measured.
 pub fn all(points: usize) -> Vec<Section> {
     let mut sections = vec![
@@ -132,10 +152,13 @@ fn against_standard(
             "How far the handbook's perfect gas is from the published standard: what the model leaves out, not an error of computing"
         }
     };
+    let mut rows = rows(properties, measured, budget);
+    rows.iter_mut().zip(properties).for_each(|(row, property)| row.note = note(*property).to_owned());
     Section {
         title: format!("{}, f64, against Helmholtz: {}", name(formulation), region.name),
         text: format!("{meaning}, at the same dry bulb, pressure and humidity ratio."),
-        rows: rows(properties, measured, budget),
+        notes: "note",
+        rows,
     }
 }
 
@@ -170,6 +193,7 @@ fn single_precision(
     Section {
         title: format!("{}, f32 against f64: {}", name(formulation), region.name),
         text: "What single precision costs: states from the same dry bulb and relative humidity.".to_owned(),
+        notes: "",
         rows: rows(properties, measured, budget),
     }
 }
@@ -204,8 +228,10 @@ fn inputs(region: Region, points: usize) -> Section {
     Section {
         title: format!("real gas, f64, from other second properties: {}", region.name),
         text: "Error of the humidity ratio when the state comes from its dry bulb and another property, whose value is that of \
-               Helmholtz: the error of the property times the condition number, which stands beside for the worst point."
+               Helmholtz: the error of the property times the condition number, which stands beside for the worst point (\"at an end\": next \
+               to dry or saturated, where no difference can be taken on both sides)."
             .to_owned(),
+        notes: "condition number",
         rows,
     }
 }

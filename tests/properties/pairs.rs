@@ -73,9 +73,9 @@ proptest! {
             Err(error) => {
                 prop_assert!(error.code() > 100 && !error.to_string().contains("NaN"), "{error}");
                 prop_assert!(!matches!(error, Error::Unattainable { .. }), "{error}");
-                if let Error::UnattainableTogether { quantity, value, min, max } = error {
+                if let Error::UnattainableTogether { quantity, value, with, min, max } = error {
                     let given = if quantity == first { a } else { b };
-                    prop_assert!(quantity == first || quantity == second);
+                    prop_assert!([(first, second), (second, first)].contains(&(quantity, with)));
                     prop_assert!(min.is_finite() && max.is_finite() && value.to_bits() == given.to_bits(), "{error}");
                 }
             }

@@ -104,7 +104,7 @@ impl<S: Scalar> MoistAir<S> {
         let logarithmic = quantity == Quantity::SpecificEntropy && self.humidity_ratio == k(0.0);
         let finite = [of.by_dry_bulb, of.by_second, of.by_pressure].iter().all(|slope| slope.is_finite());
         if logarithmic || !finite {
-            return Err(Error::NoValue { quantity, reason: NoValue::DryAir });
+            return Err(Error::NoValue { quantity, reason: NoValue::UnboundedSlope });
         }
         Ok(of)
     }

@@ -188,10 +188,12 @@ fn of_vapor<M: Mixture<S>, S: Scalar>(
     let at = |celsius| state_at(celsius, vapor, basis);
     at(settled::<M, S>(celsius)).or_else(|_| {
         // More vapor than any state holds?
-        let _warmest = at(k(M::FORMULATION.limits(Quantity::DryBulb).1)).map_err(in_a_pair)?;
+        let _warmest =
+            at(k(M::FORMULATION.limits(Quantity::DryBulb).1)).map_err(|error| in_a_pair(error, second.quantity))?;
         at_an_end(
             M::FORMULATION,
             second,
+            vapor.quantity,
             at(coldest::<M, S>(second, ratio, pressure)),
             at(hottest::<M, S>(second, pressure)),
         )
@@ -223,10 +225,10 @@ fn of_humidity<M: Mixture<S>, S: Scalar>(
     let celsius = solve::increasing(low, k(warmest), solve::temperature_resolution(), excess);
     let (left_over, slope) = excess(celsius);
     if (left_over / slope).abs() <= rounding::<S>().at_least(k(JUMPS)) {
-        return state_at(settled::<M, S>(celsius), humidity, basis).map_err(in_a_pair);
+        return state_at(settled::<M, S>(celsius), humidity, basis).map_err(|error| in_a_pair(error, second.quantity));
     }
     let hot = hottest::<M, S>(humidity, pressure);
-    at_an_end(M::FORMULATION, second, state_at(low, humidity, basis), state_at(hot, humidity, basis))
+    at_an_end(M::FORMULATION, second, humidity.quantity, state_at(low, humidity, basis), state_at(hot, humidity, basis))
 }
 
 fn state_at<S: Scalar>(celsius: S, given: Given<S>, basis: Basis<S>) -> Result<MoistAir<S>, Error> {
@@ -341,6 +343,7 @@ fn hottest<M: Mixture<S>, S: Scalar>(given: Given<S>, pressure: S) -> S {
 fn at_an_end<S: Scalar>(
     formulation: Formulation,
     given: Given<S>,
+    with: Quantity,
     cold: Result<MoistAir<S>, Error>,
     hot: Result<MoistAir<S>, Error>,
 ) -> Result<MoistAir<S>, Error> {
@@ -356,13 +359,15 @@ fn at_an_end<S: Scalar>(
     let (at_cold, at_hot) = if kind(quantity) == Some(Kind::Humidity) { (most, least) } else { (least, most) };
     let limit = |end: Result<(MoistAir<S>, S), Error>, otherwise| end.map_or(otherwise, |(_, value)| value.to_f64());
     let (a, b) = (limit(cold, at_cold), limit(hot, at_hot));
-    Err(Error::UnattainableTogether { quantity, value: value.to_f64(), min: a.min(b), max: a.max(b) })
+    Err(Error::UnattainableTogether { quantity, value: value.to_f64(), with, min: a.min(b), max: a.max(b) })
 }
 
 /// What is unattainable at a dry bulb that nobody gave.
-fn in_a_pair(error: Error) -> Error {
+fn in_a_pair(error: Error, with: Quantity) -> Error {
     match error {
-        Error::Unattainable { quantity, value, min, max } => Error::UnattainableTogether { quantity, value, min, max },
+        Error::Unattainable { quantity, value, min, max } => {
+            Error::UnattainableTogether { quantity, value, with, min, max }
+        }
         other => other,
     }
 }

@@ -149,7 +149,7 @@ fn limits_of_an_error_are_true() {
                 let by = |value| MoistAir::from_two_properties_and(first, a, second, value, air.basis());
                 let (least, most) = second.limits();
                 for end in [least, most] {
-                    let Err(Error::UnattainableTogether { quantity, value, min, max }) = by(end) else { continue };
+                    let Err(Error::UnattainableTogether { quantity, value, min, max, .. }) = by(end) else { continue };
                     // A wet bulb steps where its surface changes; one over ice ends at the melting temperature.
                     if quantity != second || kind(second) == Some(Kind::WetBulb) && min < 1.0 && max > -1.0 {
                         continue;
