@@ -2,7 +2,7 @@
 //! checked against the tables in the tests).
 
 use crate::bounds::Quantity;
-use crate::error::{Error, checked};
+use crate::error::{Error, checked, checked_between};
 use crate::quantity::{Length, Pressure, Temperature};
 use crate::real::{Scalar, k};
 
@@ -129,13 +129,9 @@ fn inverse<S: Scalar>(
     to_geopotential: impl Fn(S) -> S,
     from_geopotential: impl Fn(S) -> S,
 ) -> Result<Length<S>, Error> {
-    let value = checked(Quantity::Pressure, reading.pascals())?;
     let (lowest, highest) = Quantity::Elevation.limits();
     let [min, max] = [highest, lowest].map(|elevation| pressure(to_geopotential(k(elevation))));
-    if !(min <= value && value <= max) {
-        let (value, min, max) = (value.to_f64(), min.to_f64(), max.to_f64());
-        return Err(Error::OutOfRange { quantity: Quantity::Pressure, value, min, max });
-    }
+    let value = checked_between(Quantity::Pressure, reading.pascals(), (min.to_f64(), max.to_f64()))?;
     let ratio = ((value / k(SEA_LEVEL_PRESSURE)).ln() / k(EXPONENT)).exp();
     let elevation = from_geopotential((k::<S>(1.0) - ratio) * k(SEA_LEVEL_TEMPERATURE / LAPSE_RATE));
     Ok(Length::from_meters(elevation.at_least(k(lowest)).at_most(k(highest))))

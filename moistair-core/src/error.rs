@@ -70,7 +70,7 @@ pub enum Error {
         max: f64,
     },
     /// Two properties that fix no state together, or only badly.
-    #[error("{first} and {second} do not fix a state together: {reason}")]
+    #[error("{first} and {second} make no state: {reason}")]
     Undetermined {
         /// One of them.
         first: Quantity,
@@ -237,7 +237,7 @@ impl Error {
 
 /// `value` if it is finite and within the declared range of its quantity, where that does not depend on the formulation.
 pub(crate) fn checked<S: crate::Scalar>(quantity: Quantity, value: S) -> Result<S, Error> {
-    between(quantity, value, quantity.limits())
+    checked_between(quantity, value, quantity.limits())
 }
 
 /// `value` if it is finite and within the range of its quantity that a formulation declares.
@@ -246,10 +246,15 @@ pub(crate) fn checked_for<S: crate::Scalar>(
     quantity: Quantity,
     value: S,
 ) -> Result<S, Error> {
-    between(quantity, value, formulation.limits(quantity))
+    checked_between(quantity, value, formulation.limits(quantity))
 }
 
-fn between<S: crate::Scalar>(quantity: Quantity, value: S, (min, max): (f64, f64)) -> Result<S, Error> {
+/// `value` if it is finite and between two limits, both included.
+pub(crate) fn checked_between<S: crate::Scalar>(
+    quantity: Quantity,
+    value: S,
+    (min, max): (f64, f64),
+) -> Result<S, Error> {
     if !value.is_finite() {
         return Err(Error::NotFinite { quantity });
     }

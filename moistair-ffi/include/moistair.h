@@ -78,7 +78,7 @@
 // A channel makes no sense: limits that are not in order, or a unit of another kind.
 #define MOISTAIR_INVALID_CHANNEL 208
 
-// Two properties that fix no state together, or only badly.
+// Two properties that fix no state together, only badly, or whose pair is not offered.
 #define MOISTAIR_UNDETERMINED 209
 
 // No state at this pressure has both properties.
@@ -181,7 +181,7 @@
 // Temperature of saturation over ice at the same pressure and composition [°C].
 #define MOISTAIR_FROST_POINT 22
 
-// Entropy per mass of dry air [J/(kg K)].
+// Entropy per mass of dry air [J/(kg K)]. Zero: dry air at 0 °C and 101 325 Pa, liquid water at the triple point (0 °C for the ideal gas).
 #define MOISTAIR_SPECIFIC_ENTROPY 23
 
 // Speed of sound at constant composition [m/s].
@@ -199,22 +199,24 @@
 // Fugacity of the water in the gas; zero for dry air [Pa].
 #define MOISTAIR_FUGACITY_OF_WATER 28
 
-// Dynamic viscosity [Pa s].
+// Dynamic viscosity [Pa s]. Dry air by Lemmon & Jacobsen 2004 (1 %), vapor by IAPWS R12-08 (2 %), mixed by Wilke's rule (a few percent in hot
+// and humid air); below 0 °C the vapor's part extrapolates.
 #define MOISTAIR_DYNAMIC_VISCOSITY 29
 
-// Thermal conductivity [W/(m K)].
+// Thermal conductivity [W/(m K)]. Dry air by Lemmon & Jacobsen 2004 (2 %), vapor by IAPWS R15-11 (2 %), mixed by Wassiljewa's rule with the
+// weights of Mason & Saxena (a few percent in hot and humid air); below 0 °C the vapor's part extrapolates.
 #define MOISTAIR_THERMAL_CONDUCTIVITY 30
 
-// Diffusivity of water vapor in air [m²/s].
+// Diffusivity of water vapor in air [m²/s]. Massman 1998, 0 to 100 °C near atmospheric pressure within about 7 %; elsewhere it extrapolates.
 #define MOISTAIR_VAPOR_DIFFUSIVITY 31
 
-// c_p μ / λ, with the heat capacity per mass of moist air [1].
+// c_p μ / λ, with the heat capacity per mass of moist air [1]. Good to a few percent.
 #define MOISTAIR_PRANDTL_NUMBER 32
 
-// μ / (ρ D), of the vapor in the moist air [1].
+// μ / (ρ D), of the vapor in the moist air [1]. Good to about 10 %, mostly that of the diffusivity.
 #define MOISTAIR_SCHMIDT_NUMBER 33
 
-// Thermal diffusivity over the diffusivity of the vapor, λ / (ρ c_p D) [1].
+// Thermal diffusivity over the diffusivity of the vapor, λ / (ρ c_p D) [1]; some define the inverse. Good to about 10 %.
 #define MOISTAIR_LEWIS_NUMBER 34
 
 // Dry-air mass flow [kg/s].
@@ -1055,7 +1057,8 @@ int32_t moistair_from_dry_bulb(double dry_bulb,
 // other is a relative humidity (over the stable surface or over liquid, or degree of saturation), a wet bulb, or the specific
 // enthalpy; or one is a relative humidity, and the other a wet bulb or the specific enthalpy. Other pairs fix no state, or only
 // badly. No two states have both properties; just below the melting temperature the stable wet bulb is taken over ice, and
-// MOISTAIR_WET_BULB_OVER_LIQUID gives the state of supercooled liquid.
+// MOISTAIR_WET_BULB_OVER_LIQUID gives the state of supercooled liquid. With the dry bulb: moistair_from_dry_bulb. Rows of a column go
+// one by one; those of Rust and Python have the same bits.
 //
 // first, second: selectors; first_value, second_value: their values in their units; basis: pressure and formulation; state: output;
 // error: may be null.

@@ -58,7 +58,7 @@ pub const MOISTAIR_WET_BULB_OVER_ICE: i32 = 20;
 pub const MOISTAIR_DEW_POINT: i32 = 21;
 /// Temperature of saturation over ice at the same pressure and composition [°C].
 pub const MOISTAIR_FROST_POINT: i32 = 22;
-/// Entropy per mass of dry air [J/(kg K)].
+/// Entropy per mass of dry air [J/(kg K)]. Zero: dry air at 0 °C and 101 325 Pa, liquid water at the triple point (0 °C for the ideal gas).
 pub const MOISTAIR_SPECIFIC_ENTROPY: i32 = 23;
 /// Speed of sound at constant composition [m/s].
 pub const MOISTAIR_SPEED_OF_SOUND: i32 = 24;
@@ -70,17 +70,19 @@ pub const MOISTAIR_CHEMICAL_POTENTIAL_OF_WATER: i32 = 26;
 pub const MOISTAIR_CHEMICAL_POTENTIAL_OF_DRY_AIR: i32 = 27;
 /// Fugacity of the water in the gas; zero for dry air [Pa].
 pub const MOISTAIR_FUGACITY_OF_WATER: i32 = 28;
-/// Dynamic viscosity [Pa s].
+/// Dynamic viscosity [Pa s]. Dry air by Lemmon & Jacobsen 2004 (1 %), vapor by IAPWS R12-08 (2 %), mixed by Wilke's rule (a few percent in hot
+/// and humid air); below 0 °C the vapor's part extrapolates.
 pub const MOISTAIR_DYNAMIC_VISCOSITY: i32 = 29;
-/// Thermal conductivity [W/(m K)].
+/// Thermal conductivity [W/(m K)]. Dry air by Lemmon & Jacobsen 2004 (2 %), vapor by IAPWS R15-11 (2 %), mixed by Wassiljewa's rule with the
+/// weights of Mason & Saxena (a few percent in hot and humid air); below 0 °C the vapor's part extrapolates.
 pub const MOISTAIR_THERMAL_CONDUCTIVITY: i32 = 30;
-/// Diffusivity of water vapor in air [m²/s].
+/// Diffusivity of water vapor in air [m²/s]. Massman 1998, 0 to 100 °C near atmospheric pressure within about 7 %; elsewhere it extrapolates.
 pub const MOISTAIR_VAPOR_DIFFUSIVITY: i32 = 31;
-/// c_p μ / λ, with the heat capacity per mass of moist air [1].
+/// c_p μ / λ, with the heat capacity per mass of moist air [1]. Good to a few percent.
 pub const MOISTAIR_PRANDTL_NUMBER: i32 = 32;
-/// μ / (ρ D), of the vapor in the moist air [1].
+/// μ / (ρ D), of the vapor in the moist air [1]. Good to about 10 %, mostly that of the diffusivity.
 pub const MOISTAIR_SCHMIDT_NUMBER: i32 = 33;
-/// Thermal diffusivity over the diffusivity of the vapor, λ / (ρ c_p D) [1].
+/// Thermal diffusivity over the diffusivity of the vapor, λ / (ρ c_p D) [1]; some define the inverse. Good to about 10 %.
 pub const MOISTAIR_LEWIS_NUMBER: i32 = 34;
 /// Dry-air mass flow [kg/s].
 pub const MOISTAIR_DRY_AIR_MASS_FLOW: i32 = 64;

@@ -139,7 +139,8 @@ pub unsafe extern "C" fn moistair_from_dry_bulb(
 /// other is a relative humidity (over the stable surface or over liquid, or degree of saturation), a wet bulb, or the specific
 /// enthalpy; or one is a relative humidity, and the other a wet bulb or the specific enthalpy. Other pairs fix no state, or only
 /// badly. No two states have both properties; just below the melting temperature the stable wet bulb is taken over ice, and
-/// MOISTAIR_WET_BULB_OVER_LIQUID gives the state of supercooled liquid.
+/// MOISTAIR_WET_BULB_OVER_LIQUID gives the state of supercooled liquid. With the dry bulb: moistair_from_dry_bulb. Rows of a column go
+/// one by one; those of Rust and Python have the same bits.
 ///
 /// first, second: selectors; first_value, second_value: their values in their units; basis: pressure and formulation; state: output;
 /// error: may be null.

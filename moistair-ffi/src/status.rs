@@ -33,7 +33,7 @@ pub const MOISTAIR_MIXED_PRESSURES: i32 = 206;
 pub const MOISTAIR_NO_FLOW: i32 = 207;
 /// A channel makes no sense: limits that are not in order, or a unit of another kind.
 pub const MOISTAIR_INVALID_CHANNEL: i32 = 208;
-/// Two properties that fix no state together, or only badly.
+/// Two properties that fix no state together, only badly, or whose pair is not offered.
 pub const MOISTAIR_UNDETERMINED: i32 = 209;
 /// No state at this pressure has both properties.
 pub const MOISTAIR_UNATTAINABLE_TOGETHER: i32 = 210;
@@ -163,7 +163,7 @@ pub fn text(code: i32) -> Option<&'static CStr> {
         MOISTAIR_MIXED_PRESSURES => c"states at different pressures need the pressure of the outlet",
         MOISTAIR_NO_FLOW => c"the dry-air mass flow is zero",
         MOISTAIR_INVALID_CHANNEL => c"the limits of a channel are not in order, or its unit is of another kind",
-        MOISTAIR_UNDETERMINED => c"the two properties fix no state together, or only badly",
+        MOISTAIR_UNDETERMINED => c"the two properties fix no state together, only badly, or their pair is not offered",
         MOISTAIR_UNATTAINABLE_TOGETHER => c"no state at this pressure has both properties",
         MOISTAIR_OVERFLOW => c"a sum would not be finite",
         MOISTAIR_INFEASIBLE => c"the process cannot reach what was asked",

@@ -49,7 +49,7 @@ def test_other_pairs_are_refused_with_the_reason():
         if (first, second) in OFFERED or (second, first) in OFFERED:
             continue
         for value in (0.5, [0.5], []):
-            with pytest.raises(moistair.UndeterminedError, match="do not fix a state together: ") as caught:
+            with pytest.raises(moistair.UndeterminedError, match="make no state: ") as caught:
                 by(first, value, second, value)
             assert caught.value.code == 209
         refused += 1

@@ -95,13 +95,13 @@ fn texts() {
         |first, a, second, b| MoistAir::from_two_properties_and(first, a, second, b, basis).unwrap_err().to_string();
     assert_eq!(
         refused(Quantity::DewPoint, 10.0, Quantity::HumidityRatio, 0.008),
-        "dew point and humidity ratio do not fix a state together: both say how much vapor there is, which air of any \
+        "dew point and humidity ratio make no state: both say how much vapor there is, which air of any \
          temperature may hold"
     );
     let text = refused(Quantity::DewPoint, 20.0, Quantity::WetBulb, 10.0);
     assert!(
         text.starts_with(
-            "wet bulb 10 °C has no state together with the other property: at this pressure it lies between 19.99"
+            "wet bulb 10 °C has no state together with this dew point: at this pressure it lies between 19.99"
         ),
         "{text}"
     );

@@ -263,19 +263,20 @@ impl<S: Scalar> MoistAir<S> {
         Diffusivity::from_square_meters_per_second(self.transport().diffusivity)
     }
 
-    /// Prandtl number c_p μ / λ, the heat capacity per mass of moist air.
+    /// Prandtl number c_p μ / λ, the heat capacity per mass of moist air. Good to a few percent, as viscosity and conductivity are.
     #[must_use]
     pub fn prandtl_number(&self) -> S {
         with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).prandtl_number())
     }
 
-    /// Schmidt number μ / (ρ D) of the vapor in the moist air.
+    /// Schmidt number μ / (ρ D) of the vapor in the moist air. Good to about 10 %, mostly that of the diffusivity.
     #[must_use]
     pub fn schmidt_number(&self) -> S {
         with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).schmidt_number())
     }
 
-    /// Lewis number λ / (ρ c_p D): thermal diffusivity over the diffusivity of the vapor (some define the inverse).
+    /// Lewis number λ / (ρ c_p D): thermal diffusivity over the diffusivity of the vapor (some define the inverse). Good to about 10 %, mostly
+    /// that of the diffusivity.
     #[must_use]
     pub fn lewis_number(&self) -> S {
         with_mixture!(self.formulation, S, M => View::<M<S>, S>::of(*self).lewis_number())
