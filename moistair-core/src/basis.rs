@@ -9,7 +9,8 @@ use crate::quantity::Pressure;
 #[non_exhaustive]
 #[repr(i32)]
 pub enum Formulation {
-    /// Dry air and water vapor as a virial mixture in equilibrium with IAPWS-95 liquid or R10-06 ice, after IAPWS G8-10.
+    /// Dry air and water vapor as a virial mixture in equilibrium with IAPWS-95 liquid or R10-06 ice, after IAPWS G8-10, its functions of
+    /// temperature fitted: −80 to 150 °C, 20 kPa to 1.1 MPa. How far it is from the Helmholtz formulation stands in ACCURACY.md.
     #[default]
     RealGas = 0,
     /// The perfect-gas relations of ASHRAE Fundamentals, chapter 1, with Hyland–Wexler saturation: for reproducing

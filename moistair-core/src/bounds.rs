@@ -229,7 +229,7 @@ impl Quantity {
     pub fn likely_slip(self, value: f64) -> &'static str {
         match self {
             Self::RelativeHumidity | Self::RelativeHumidityOverLiquid | Self::DegreeOfSaturation
-                if (2.0..=110.0).contains(&value) =>
+                if value > 1.03 && value <= 110.0 =>
             {
                 "; a percentage? a fraction is expected"
             }

@@ -60,7 +60,7 @@ fn number(random: &mut Random) -> f64 {
         0 => f64::from_bits(random.bits()),
         1 => {
             let quantity = Quantity::ALL[(random.bits() % Quantity::ALL.len() as u64) as usize];
-            let limits = Formulation::ALL[(random.bits() % 3) as usize].limits(quantity);
+            let limits = Formulation::ALL[(random.bits() % Formulation::ALL.len() as u64) as usize].limits(quantity);
             let end = if random.bits() & 1 == 0 { limits.0 } else { limits.1 };
             f64::from_bits(end.to_bits().wrapping_add(random.bits() % 3).wrapping_sub(1))
         }
@@ -71,7 +71,7 @@ fn number(random: &mut Random) -> f64 {
 
 fn any_air(random: &mut Random) -> MoistAir {
     loop {
-        let formulation = Formulation::ALL[(random.bits() % 3) as usize];
+        let formulation = Formulation::ALL[(random.bits() % Formulation::ALL.len() as u64) as usize];
         let pressure = if random.bits() & 1 == 0 { 101_325.0 } else { number(random) };
         let basis = Basis::new(Pressure::from_pascals(pressure), formulation);
         let quantity = Quantity::ALL[(random.bits() % Quantity::ALL.len() as u64) as usize];

@@ -12,7 +12,7 @@ use crate::support::{cases, state};
 /// that is offered multiplies an error by more than 15, and the wet bulb with the enthalpy, refused, does by more than 50.
 #[test]
 fn table_of_pairs() {
-    for &formulation in Formulation::ALL {
+    for formulation in [Formulation::RealGas, Formulation::IdealGas] {
         println!("{formulation:?}\n{}", table(formulation, 2_000));
         for pair in moistair_tests::pairs::measure(formulation, 500) {
             assert!(pair.kelvins < 1e-8 && pair.vapor < 1e-9 && pair.condition_indoors < 15.0, "{pair:?}");

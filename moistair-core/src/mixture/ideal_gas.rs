@@ -52,7 +52,8 @@ impl<R: Real> IdealGas<R> {
         let warming = (self.kelvins / zero).ln();
         let air_pressure = pressure * (k::<R>(1.0) - water_fraction);
         // Without water the logarithm is bounded and multiplies nothing.
-        let water_pressure = (pressure * water_fraction).at_least(k(1e-30));
+        let water_pressure = pressure * water_fraction;
+        let water_pressure = R::select(k::<R>(0.0).lt(water_pressure), water_pressure, k(1.0));
         let saturation = hyland_wexler_liquid(zero).0;
         let air = warming * k(CP_DRY_AIR) - (air_pressure / k(STANDARD_PRESSURE)).ln() * k(R_DRY_AIR);
         let vapor = warming * k(CP_VAPOR) - (water_pressure.ln() - saturation) * k(R_WATER);

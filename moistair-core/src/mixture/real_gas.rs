@@ -2,7 +2,7 @@
 //!
 //! Every published function of temperature (ideal parts, virial coefficients, Gibbs energies of the condensed phases) is nearly a sum of powers of
 //! 1/T. Each is interpolated by one polynomial in a variable linear in 1/T; derivatives in temperature are those of the polynomial, so
-//! that the thermodynamic identities hold whatever the fit is worth. `fit.rs` makes the coefficients and measures them.
+//! that the identities of the gas hold whatever the fit is worth; a condensed phase has a polynomial of its own for its enthalpy. `fit.rs` makes the coefficients and measures them.
 
 #[rustfmt::skip]
 mod coefficients;

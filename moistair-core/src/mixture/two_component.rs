@@ -163,7 +163,9 @@ impl<P> Component<P> {
         P: Fluid<R>,
     {
         let residual = self.residual(density, TemperatureOrder::Value);
-        let ln_delta = (density / k(self.reducing_density)).at_least(k(1e-30)).ln();
+        // Without any the logarithm multiplies nothing.
+        let delta = density / k(self.reducing_density);
+        let ln_delta = R::select(k::<R>(0.0).lt(delta), delta, k(1.0)).ln();
         density * k(self.gas_constant) * (ln_delta + self.fluid.ideal(TemperatureOrder::Value) + residual.value)
     }
 

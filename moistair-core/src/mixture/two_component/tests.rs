@@ -307,6 +307,7 @@ fn clapeyron() {
         println!("Clapeyron, {:?}: worst {worst:e}", M::FORMULATION);
         assert!(worst < 1e-6);
     }
+    run::<Fitted>();
     run::<Virial>();
     run::<Published>();
 }
@@ -595,6 +596,7 @@ fn steps_are_enough_and_none_is_idle() {
 /// Whether anything saturates is decided by the boiling temperature, at every temperature that a solve may try.
 #[test]
 fn nothing_saturates_above_boiling_and_only_there() {
+    boiling_decides::<Fitted>();
     boiling_decides::<Virial>();
     boiling_decides::<Published>();
 }
@@ -629,6 +631,7 @@ fn boiling_decides<M: Model<f64>>() {
 /// d ln W_s/dT, ∂h/∂T, ∂h/∂W and ∂v/∂W against central differences over the domain.
 #[test]
 fn slopes_are_those_of_the_values() {
+    slopes::<Fitted>();
     slopes::<Virial>();
     slopes::<Published>();
 }
@@ -747,6 +750,7 @@ fn entropy_follows_from_heat_and_volume() {
             }
         }
     }
+    run::<HelmholtzMixture<f64, Fitted>>(1e-7);
     run::<Direct>(1e-7);
     run::<HelmholtzMixture<f64, Published>>(1e-7);
     // The handbook rounds its gas constants to six digits and 1/ε apart from ε.
