@@ -53,7 +53,8 @@ fn water_closes(entering: &AirStream, water: &CoilWater, done: &WaterCoil) -> Re
     let resolution = kelvins * (m * 4_500.0 + entering.dry_air_flow().kilograms_per_second() * heat_capacity);
     let scale = 8.0 * (m * (before.abs() + after.abs()) + carried + heat.abs()) + 2.0 * resolution;
     let residual = m * (after - before) + heat;
-    prop_assert!(residual.abs() <= f64::EPSILON * scale, "{residual} of {heat}: {done:?}");
+    // The enthalpy of liquid water is rough by up to 2e-7 J/kg (measured in the core): no temperature can be found that is better.
+    prop_assert!(residual.abs() <= f64::EPSILON * scale + 2e-7 * m, "{residual} of {heat}: {done:?}");
     Ok(())
 }
 

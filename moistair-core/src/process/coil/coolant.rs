@@ -76,15 +76,18 @@ impl<S: Scalar> Liquid<S> {
         self.flow * (self.enthalpy_at(celsius) - self.enthalpy)
     }
 
-    /// Temperature after a heat flow into it; no further than a limit on that side, where no heat could come from.
+    /// Temperature after a heat flow into it: between entering and a limit, beyond which there is no heat to come from.
     pub fn heated(&self, heat: S, limit: S) -> S {
         if self.flow == k(0.0) {
             return self.entering;
         }
         let target = self.enthalpy + heat / self.flow;
         let end = self.enthalpy_at(limit);
-        let passed = if limit >= self.entering { target >= end } else { target <= end };
+        let warms = limit >= self.entering;
+        let passed = if warms { target >= end } else { target <= end };
+        let returned = if warms { target <= self.enthalpy } else { target >= self.enthalpy };
         match self.specific_heat {
+            _ if returned => self.entering,
             _ if passed => limit,
             Some(specific_heat) => target / specific_heat,
             None => self.temperature_of(target),
