@@ -40,10 +40,10 @@ __all__ = [
 CondensateTemperature = Union[Literal["leaving_air"], Literal["apparatus"]]
 
 #: How air and water pass each other: against each other, or across, neither mixed (for coils that stay dry).
-Arrangement = Literal["counterflow", "cross_flow"]
+Arrangement = Union[Literal["counterflow"], Literal["cross_flow"]]
 
 #: What was measured behind a coil.
-Measured = Literal["leaving_air", "leaving_water", "heat"]
+Measured = Union[Literal["leaving_air"], Literal["leaving_water"], Literal["heat"]]
 
 _ARRANGEMENTS = {"counterflow": 0, "cross_flow": 1}
 _MEASURED = {"leaving_air": 0, "leaving_water": 1, "heat": 2}
@@ -482,7 +482,7 @@ def with_water(
     >>> entering = AirStream(air, dry_air_flow=1.0)
     >>> done = coil.with_water(entering, air_side=3e3, water_side=6e3, water_flow=1.6, entering_water=6.0)
     >>> round(done.air.cooling_load / 1000.0, 1), done.air.regime.name
-    (24.4, 'WET')
+    (24.3, 'WET')
     """
     expect(entering, AirStream, "entering")
     return run(
