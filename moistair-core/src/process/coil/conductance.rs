@@ -440,7 +440,7 @@ impl<S: Scalar> Coil<S> {
         // Through the stages, each to the surface that leads it there: saturated at h − drop / (1 − bypass).
         let (mut enthalpy, mut ratio) = parts(&wet.inlet);
         let (mut condensed, mut warmth) = (zero, zero);
-        for Stage { share, drop } in wet.stages {
+        for Stage { share, drop } in wet.stages.into_iter().filter(|stage| stage.drop > zero) {
             let specific_heat = wet.inlet.specific_heat().joules_per_kilogram_kelvin();
             let bypass = (-(self.outside / self.flow) * share / specific_heat).exp();
             let target = enthalpy - drop / (one - bypass);
@@ -450,13 +450,6 @@ impl<S: Scalar> Coil<S> {
             });
             let at_surface = Saturated::at::<M>(surface, pressure).humidity_ratio.at_most(ratio);
             let dried = (ratio - at_surface) * (one - bypass);
-            if ratio.is_nan() || dried.is_nan() {
-                std::eprintln!(
-                    "NAN {share} {drop} {bypass} {target} {surface} {at_surface} heat {heat} most {most} dry {} {:?}",
-                    wet.dry_share,
-                    wet.stages.map(|s| (s.share, s.drop))
-                );
-            }
             (enthalpy, ratio) = (enthalpy - drop, ratio - dried);
             (condensed, warmth) = (condensed + dried, warmth + dried * surface);
         }
