@@ -170,6 +170,14 @@ quantities! {
     PsychrometerWetBulb = 82, "psychrometer wet bulb", "°C", -40.0, 100.0;
     /// Coefficient of a psychrometer, over water that at 0 °C.
     PsychrometerCoefficient = 83, "psychrometer coefficient", "1/K", 3e-4, 2e-3;
+    /// Temperature of a coolant other than water.
+    CoolantTemperature = 106, "coolant temperature", "°C", -40.0, 200.0;
+    /// Specific heat of a coolant other than water.
+    CoolantSpecificHeat = 107, "coolant specific heat", "J/(kg K)", 500.0, 6_000.0;
+    /// Thermal conductance of a coil: heat flow per difference of temperature.
+    Conductance = 108, "conductance", "W/K", 0.0, 1.0e9;
+    /// Conductance of the water side of a coil over that of its air side.
+    ConductanceRatio = 109, "conductance ratio", "1", 1.0e-3, 1.0e3;
 }
 
 impl Quantity {

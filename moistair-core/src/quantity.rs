@@ -229,6 +229,11 @@ quantity!(
     HeatFlow: from_watts, watts; from_kilowatts, kilowatts, 1_000.0
 );
 
+quantity!(
+    /// Thermal conductance, heat flow per difference of temperature.
+    Conductance: from_watts_per_kelvin, watts_per_kelvin; from_kilowatts_per_kelvin, kilowatts_per_kelvin, 1_000.0
+);
+
 impl<S: Scalar> Sub for Temperature<S> {
     type Output = TemperatureDifference<S>;
     fn sub(self, other: Self) -> TemperatureDifference<S> {

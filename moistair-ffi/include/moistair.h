@@ -279,6 +279,18 @@
 // Coefficient of a psychrometer, over water that at 0 °C [1/K].
 #define MOISTAIR_PSYCHROMETER_COEFFICIENT 83
 
+// Temperature of a coolant other than water [°C].
+#define MOISTAIR_COOLANT_TEMPERATURE 106
+
+// Specific heat of a coolant other than water [J/(kg K)].
+#define MOISTAIR_COOLANT_SPECIFIC_HEAT 107
+
+// Thermal conductance of a coil: heat flow per difference of temperature [W/K].
+#define MOISTAIR_CONDUCTANCE 108
+
+// Conductance of the water side of a coil over that of its air side [1].
+#define MOISTAIR_CONDUCTANCE_RATIO 109
+
 // Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
 #define MOISTAIR_REAL_GAS 0
 
@@ -323,6 +335,24 @@
 
 // The coil is cold enough for frost.
 #define MOISTAIR_COIL_FROST 2
+
+// Water condensed as liquid on a part of the surface.
+#define MOISTAIR_COIL_PARTLY_WET 3
+
+// Air and water against each other, as in coils of four rows and more.
+#define MOISTAIR_COUNTERFLOW 0
+
+// Air and water across each other, neither mixed; for coils that stay dry.
+#define MOISTAIR_CROSS_FLOW 1
+
+// The dry bulb of the leaving air was measured [°C].
+#define MOISTAIR_MEASURED_LEAVING_AIR 0
+
+// The temperature of the leaving water was measured [°C].
+#define MOISTAIR_MEASURED_LEAVING_WATER 1
+
+// The heat into the air was measured, negative where the coil cools [W].
+#define MOISTAIR_MEASURED_HEAT 2
 
 // A wetted medium evaporates water at the wet bulb, where recirculated water settles.
 #define MOISTAIR_WATER_AT_WET_BULB 0
@@ -726,7 +756,7 @@ typedef struct {
     double condensate;
     // Sensible part over the load [1]; NaN without a load.
     double sensible_heat_ratio;
-    // MOISTAIR_COIL_DRY, MOISTAIR_COIL_WET or MOISTAIR_COIL_FROST.
+    // MOISTAIR_COIL_DRY, MOISTAIR_COIL_WET, MOISTAIR_COIL_FROST or MOISTAIR_COIL_PARTLY_WET.
     int32_t regime;
     // 0.
     int32_t reserved;
@@ -739,6 +769,58 @@ typedef struct {
     // The share of the air that seems to pass untouched [1]; 0 for air that leaves saturated.
     double bypass_factor;
 } moistair_apparatus;
+
+// Where the line from the entering through the leaving air meets saturation: nowhere, once, or twice.
+typedef struct {
+    // The warmer meeting, which is the coil's; NaN for a line that misses saturation.
+    moistair_apparatus warmer;
+    // The colder, where the line comes out of saturation again; NaN where it does not down to -40 °C.
+    moistair_apparatus colder;
+    // Where the line comes nearest to saturation, if it misses it; otherwise the warmer meeting [°C].
+    double nearest;
+    // Number of meetings: 0, 1 or 2.
+    int32_t count;
+    // 0.
+    int32_t reserved;
+} moistair_apparatus_dew_points;
+
+// A coil by its conductances at the flows at hand.
+typedef struct {
+    // From air to metal with the fins' efficiency, for sensible heat [W/K].
+    double air_side;
+    // From metal to water [W/K].
+    double water_side;
+    // MOISTAIR_COUNTERFLOW or MOISTAIR_CROSS_FLOW.
+    int32_t arrangement;
+    // 0.
+    int32_t reserved;
+} moistair_coil_surface;
+
+// The water, or brine, that enters a coil.
+typedef struct {
+    // Its mass flow [kg/s].
+    double flow;
+    // Its temperature [°C]: 0 to 200, and from -40 for a brine.
+    double entering;
+    // 0 for water; of a brine that does not freeze, 500 to 6000 [J/(kg K)].
+    double specific_heat;
+} moistair_coil_water;
+
+// What a coil with water in it did.
+typedef struct {
+    // The air side. A coil that heats has a negative cooling load.
+    moistair_cooling air;
+    // Temperature of the water that leaves; it takes up the heat that air.exchange takes out [°C].
+    double leaving_water;
+    // Share of the surface on which nothing condenses [1].
+    double dry_fraction;
+    // The coldest metal, at one end of the coil [°C].
+    double coldest_surface;
+    // 1 if the coldest metal is below the melting temperature and there is water in it; else 0. No freezestat.
+    int32_t freezing;
+    // 0.
+    int32_t reserved;
+} moistair_water_coil;
 
 // What a coil and the heater behind it did.
 typedef struct {
@@ -1394,6 +1476,54 @@ int32_t moistair_coil_between(const moistair_stream *entering,
 int32_t moistair_coil_apparatus_dew_point(const moistair_state *entering,
                                           const moistair_state *leaving,
                                           moistair_apparatus *apparatus,
+                                          moistair_error *error);
+
+// All meetings of the line from the entering through the leaving air with saturation, below the leaving air's dry bulb.
+//
+// entering: the state that enters; leaving: the state that leaves; found: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (nothing condenses, or the air leaves warmer).
+int32_t moistair_coil_apparatus_dew_points(const moistair_state *entering,
+                                           const moistair_state *leaving,
+                                           moistair_apparatus_dew_points *found,
+                                           moistair_error *error);
+
+// The bypass factor of a number of equal rows, one behind the other.
+//
+// of_one_row: bypass factor of one of them [1], 0 to 1; rows: how many; bypass_factor: output [1]; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_coil_bypass_factor_of_rows(double of_one_row,
+                                            uint32_t rows,
+                                            double *bypass_factor,
+                                            moistair_error *error);
+
+// A coil from its conductances and the water that enters it: dry, wet or partly wet by effectiveness and number of transfer units. It
+// cools or heats, as the water is colder or warmer than the air; without water flow or conductance it changes nothing.
+//
+// entering: the stream that enters; surface: the coil; water: what enters it; condensate: where the condensate temperature comes from,
+// MOISTAIR_CONDENSATE_AT_… (the apparatus is the mean surface that condenses); condensate_temperature: [°C], -40 to 150, read for
+// MOISTAIR_CONDENSATE_AT_GIVEN only; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (water would freeze in the coil; a coil in cross-flow would get wet; the air would leave above the range).
+int32_t moistair_coil_with_water(const moistair_stream *entering,
+                                 const moistair_coil_surface *surface,
+                                 const moistair_coil_water *water,
+                                 int32_t condensate,
+                                 double condensate_temperature,
+                                 moistair_water_coil *done,
+                                 moistair_error *error);
+
+// The conductances of a coil that explain one measured point; moistair_coil_with_water then predicts others.
+//
+// entering: the stream that enters; water: what enters the coil; measured: what the value is, MOISTAIR_MEASURED_…; value: [°C] or [W];
+// conductance_ratio: of the water side over the air side [1], 0.001 to 1000; arrangement: MOISTAIR_COUNTERFLOW or MOISTAIR_CROSS_FLOW;
+// surface: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (no conductance explains the value: the limits are what no and endless surface would give).
+int32_t moistair_coil_surface_from_rating(const moistair_stream *entering,
+                                          const moistair_coil_water *water,
+                                          int32_t measured,
+                                          double value,
+                                          double conductance_ratio,
+                                          int32_t arrangement,
+                                          moistair_coil_surface *surface,
                                           moistair_error *error);
 
 // Reaches a state by cooling to its humidity ratio, then heating. Codes restrict simultaneous heating and cooling.

@@ -124,6 +124,14 @@ pub const MOISTAIR_LEAVING_ENTHALPY: i32 = 81;
 pub const MOISTAIR_PSYCHROMETER_WET_BULB: i32 = 82;
 /// Coefficient of a psychrometer, over water that at 0 °C [1/K].
 pub const MOISTAIR_PSYCHROMETER_COEFFICIENT: i32 = 83;
+/// Temperature of a coolant other than water [°C].
+pub const MOISTAIR_COOLANT_TEMPERATURE: i32 = 106;
+/// Specific heat of a coolant other than water [J/(kg K)].
+pub const MOISTAIR_COOLANT_SPECIFIC_HEAT: i32 = 107;
+/// Thermal conductance of a coil: heat flow per difference of temperature [W/K].
+pub const MOISTAIR_CONDUCTANCE: i32 = 108;
+/// Conductance of the water side of a coil over that of its air side [1].
+pub const MOISTAIR_CONDUCTANCE_RATIO: i32 = 109;
 
 /// Limits of a quantity as an input, both included.
 #[repr(C)]

@@ -64,6 +64,10 @@ words! {
     moistair_reheat, [12, 26, 36, 49], [35, 54], [0, 14, 37];
     moistair_humidified, [12], [], [0];
     moistair_apparatus, [], [], [];
+    moistair_apparatus_dew_points, [5], [0, 1, 2, 3], [];
+    moistair_coil_surface, [2], [], [];
+    moistair_coil_water, [], [], [];
+    moistair_water_coil, [12, 26, 36, 40], [35], [0, 14];
     moistair_compressed, [12], [], [0];
     moistair_books, [5], [], [];
     moistair_tower_water, [], [], [];
@@ -503,6 +507,24 @@ fn no_argument_upsets_an_export() {
         (c.pointer(&s), c.pointer(&leaving), c.selector(3), c.number(-5.0, 20.0), c.number(0.0, 0.001), out, e));
     run!(exercise moistair_coil_apparatus_dew_point: |c, out, e| let coil = c.kept::<moistair_cooling>();
         (c.pointer(&coil.entering.air), c.pointer(&coil.leaving.air), out, e));
+    run!(exercise moistair_coil_apparatus_dew_points: |c, out, e| let coil = c.kept::<moistair_cooling>();
+        (c.pointer(&coil.entering.air), c.pointer(&coil.leaving.air), out, e));
+    run!(exercise moistair_coil_bypass_factor_of_rows: |c, out, e| (c.number(0.0, 1.0), c.bits() as u32, out, e));
+    let chilled = |c: &Caller| moistair_coil_water {
+        flow: c.number(0.0, 5.0),
+        entering: c.number(0.0, 20.0),
+        specific_heat: if c.below(2) == 0 { 0.0 } else { c.number(3e3, 4.2e3) },
+    };
+    run!(exercise moistair_coil_with_water: |c, out, e| let s = c.stream(); let water = chilled(c);
+        let surface = moistair_coil_surface {
+            air_side: c.number(0.0, 1e4),
+            water_side: c.number(0.0, 1e4),
+            arrangement: c.selector(2),
+            reserved: 0,
+        };
+        (c.pointer(&s), c.pointer(&surface), c.pointer(&water), c.selector(3), c.number(-5.0, 20.0), out, e));
+    run!(exercise moistair_coil_surface_from_rating: |c, out, e| let s = c.stream(); let water = chilled(c);
+        (c.pointer(&s), c.pointer(&water), c.selector(3), c.number(5.0, 20.0), c.number(0.5, 5.0), c.selector(2), out, e));
     run!(exercise moistair_reheat_to_state: |c, out, e| let s = c.stream(); let target = c.state();
         (c.pointer(&s), c.pointer(&target), c.number(0.2, 1.0), c.selector(3), c.number(-5.0, 20.0), out, e));
     run!(exercise moistair_humidify_steam: |c, out, e| let s = c.stream();

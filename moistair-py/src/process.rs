@@ -3,11 +3,14 @@
 use moistair_core::columns::{Column, NAN};
 use moistair_core::process::{self, AirStream, Exchange, WetStream};
 use moistair_core::{
-    AirWithCondensate, Basis, Bulb, Density, Error, Formulation, Freezing, HeatFlow, HumidityRatio, MassFlow,
-    MoistAir as Air, Pressure, Psychrometer, PsychrometerReading, Quantity, RelativeHumidity, SpecificEnthalpy,
-    Temperature, VolumeFlow, liquid_water_enthalpy, saturation_temperature_after,
+    AirWithCondensate, Basis, Bulb, Conductance, Density, Error, Formulation, Freezing, HeatFlow, HumidityRatio,
+    MassFlow, MoistAir as Air, Pressure, Psychrometer, PsychrometerReading, Quantity, RelativeHumidity,
+    SpecificEnthalpy, SpecificHeat, Temperature, VolumeFlow, liquid_water_enthalpy, saturation_temperature_after,
 };
-use process::coil::{Apparatus, CondensateTemperature, Cooling};
+use process::coil::{
+    Apparatus, ApparatusDewPoints, Arrangement, CoilSurface, CoilWater, CondensateTemperature, Coolant, Cooling,
+    Measured, WaterCoil,
+};
 use process::compression::Compressed;
 use process::humidify::{Absorption, EvaporatingWater, Humidified};
 use process::sensible::Sensible;
@@ -153,6 +156,43 @@ impl Row<'_> {
         }
     }
 
+    fn conductance(&mut self) -> Outcome<Conductance> {
+        self.number().map(Conductance::from_watts_per_kelvin)
+    }
+
+    fn arrangement(&mut self) -> Outcome<Arrangement> {
+        match self.code()? {
+            0 => Ok(Arrangement::Counterflow),
+            1 => Ok(Arrangement::CrossFlow),
+            _ => Err(Failure::Arguments),
+        }
+    }
+
+    fn coil_surface(&mut self) -> Outcome<CoilSurface> {
+        let (air_side, water_side) = (self.conductance()?, self.conductance()?);
+        Ok(CoilSurface { air_side, water_side, arrangement: self.arrangement()? })
+    }
+
+    fn coil_water(&mut self) -> Outcome<CoilWater> {
+        let (flow, entering) = (self.mass_flow()?, self.temperature()?);
+        let (choice, given) = (self.code()?, SpecificHeat::from_joules_per_kilogram_kelvin(self.number()?));
+        let coolant = match choice {
+            0 => Coolant::Water,
+            2 => Coolant::Brine(given),
+            _ => return Err(Failure::Arguments),
+        };
+        Ok(CoilWater { flow, entering, coolant })
+    }
+
+    fn measured(&mut self) -> Outcome<Measured> {
+        match self.code()? {
+            0 => self.temperature().map(Measured::LeavingAir),
+            1 => self.temperature().map(Measured::LeavingWater),
+            2 => self.heat_flow().map(Measured::Heat),
+            _ => Err(Failure::Arguments),
+        }
+    }
+
     fn evaporating_water(&mut self) -> Outcome<EvaporatingWater> {
         let (choice, given) = (self.code()?, self.temperature()?);
         match choice {
@@ -233,7 +273,8 @@ emit_number!(
     DewPoint.celsius,
     FrostPoint.celsius,
     Temperature.celsius,
-    TemperatureDifference.kelvins
+    TemperatureDifference.kelvins,
+    Conductance.watts_per_kelvin
 );
 
 macro_rules! emit_fields {
@@ -255,6 +296,9 @@ emit_fields! {
     Cooling, |x| x.entering, x.leaving, x.exchange, x.cooling_load, x.sensible, x.latent, x.condensate, f64::from(x.regime as i32),
         x.sensible_heat_ratio();
     Apparatus, |x| x.dew_point, x.bypass_factor;
+    ApparatusDewPoints, |x| x.warmer, x.colder, x.nearest;
+    WaterCoil, |x| x.air, x.leaving_water, x.dry_fraction, x.coldest_surface, x.freezing;
+    CoilSurface, |x| x.air_side, x.water_side;
     Compressed, |x| x.leaving, x.exchange, x.condensate;
     reheat::Reheat, |x| x.cooling, x.heating, x.reheat(), x.reheat_fraction();
     mixing::Mixed, |x| x.leaving, x.exchange;
@@ -262,6 +306,15 @@ emit_fields! {
     WaterUse, |x| x.evaporation, x.drift, x.blowdown, x.make_up, x.limited_by_drift;
     TowerBalance, |x| x.leaving, x.exchange, x.heat_rejected, x.water, x.range, x.approach, x.effectiveness();
     books::Books, |x| x.heat_residual, x.heat_scale, x.water_residual, x.water_scale, x.heat_resolution, x.close();
+}
+
+impl Emit for Option<Apparatus> {
+    fn emit(&self, out: &mut Out) {
+        match self {
+            Some(apparatus) => out.put(apparatus),
+            None => out.put(&NAN).put(&NAN),
+        };
+    }
 }
 
 impl Emit for Absorption {
@@ -331,6 +384,17 @@ processes! {
         coil::by_bypass_factor(&r.stream()?, r.temperature()?, r.number()?, r.condensate_temperature()?)?
     };
     "coil.apparatus_dew_point", |r| coil::apparatus_dew_point(&r.air()?, &r.air()?)?;
+    "coil.apparatus_dew_points", |r| coil::apparatus_dew_points(&r.air()?, &r.air()?)?;
+    "coil.bypass_factor_of_rows", |r| {
+        let (of_one_row, rows) = (r.number()?, r.code()?);
+        coil::bypass_factor_of_rows(of_one_row, u32::try_from(rows).map_err(|_| Failure::Arguments)?)?
+    };
+    "coil.with_water", |r| {
+        coil::with_water(&r.stream()?, r.coil_surface()?, r.coil_water()?, r.condensate_temperature()?)?
+    };
+    "coil.surface_from_rating", |r| {
+        coil::surface_from_rating(&r.stream()?, r.coil_water()?, r.measured()?, r.number()?, r.arrangement()?)?
+    };
     "coil.between", |r| coil::between(&r.stream()?, &r.air()?, r.condensate_temperature()?, r.humidity_ratio()?)?;
     "reheat.to_state", |r| {
         reheat::to_state(&r.stream()?, &r.air()?, r.relative_humidity()?, r.condensate_temperature()?)?

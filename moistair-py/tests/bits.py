@@ -67,6 +67,13 @@ CASES: dict[str, Callable[[Row], Any]] = {
     "coil.to_state": lambda r: coil.to_state(r.warm, leaving=r.leaving),
     "coil.by_bypass_factor": lambda r: coil.by_bypass_factor(r.warm, apparatus_dew_point=8.0, bypass_factor=r.share),
     "coil.apparatus_dew_point": lambda r: coil.apparatus_dew_point(r.warm.air, leaving=r.leaving),
+    "coil.apparatus_dew_points": lambda r: coil.apparatus_dew_points(r.warm.air, leaving=r.leaving),
+    "coil.with_water": lambda r: coil.with_water(
+        r.warm, air_side=6e3, water_side=2e4 * r.share, water_flow=2.0, entering_water=6.0
+    ),
+    "coil.surface_from_rating": lambda r: coil.surface_from_rating(
+        r.warm, water_flow=2.0, entering_water=6.0, value=6.0 + 10.0 * r.share, measured="leaving_water", conductance_ratio=2.0
+    ),
     "coil.between": lambda r: coil.between(r.warm, leaving=r.leaving, dead_band=2e-4),
     "reheat.to_state": lambda r: reheat.to_state(r.warm, target=r.leaving, coil_leaving_relative_humidity=1.0),
     "mixing.adiabatic": lambda r: mixing.adiabatic(r.warm, r.cold),

@@ -63,13 +63,16 @@ def arguments(function, rng, count):
             positional.extend(streams(rng, count) for _ in range(3))
         elif name == "entering":
             whole = streams(rng, count)
-            positional.append(whole.air if function in (tower.with_leaving_air, coil.apparatus_dew_point) else whole)
+            of_state = (tower.with_leaving_air, coil.apparatus_dew_point, coil.apparatus_dew_points)
+            positional.append(whole.air if function in of_state else whole)
         elif name == "part":
             keywords[name] = streams(rng, count)
         elif name in state_names:
             keywords[name] = streams(rng, count).air
-        elif name in ("freezing", "formulation"):
+        elif name in ("freezing", "formulation", "arrangement", "measured"):
             continue
+        elif name == "rows":
+            keywords[name] = 3
         else:
             keywords[name] = odd_numbers(rng, count)
     return positional, keywords

@@ -1,6 +1,7 @@
 """Processes: one row and many, the books, choices, and objects."""
 
 import dataclasses
+import math
 import pickle
 
 import moistair
@@ -73,6 +74,23 @@ CASES = {
         stream(t, rh, 2.0), apparatus_dew_point=6.0, bypass_factor=x, condensate_temperature="apparatus"
     ),
     "coil.apparatus_dew_point": lambda t, rh, x: coil.apparatus_dew_point(state(t, rh), leaving=state(12.0 + x, 0.95)),
+    "coil.apparatus_dew_points": lambda t, rh, x: coil.apparatus_dew_points(state(t, rh), leaving=state(12.0 + x, 0.85)),
+    "coil.bypass_factor_of_rows": lambda t, rh, x: coil.bypass_factor_of_rows(of_one_row=x + 0 * (t + rh), rows=4),
+    "coil.with_water": lambda t, rh, x: coil.with_water(
+        stream(t, rh, 2.0), air_side=6e3, water_side=1e4 * x, water_flow=1.0 + x, entering_water=6.0
+    ),
+    "coil.with_water.brine": lambda t, rh, x: coil.with_water(
+        stream(t, rh, 2.0),
+        air_side=6e3,
+        water_side=1e4,
+        water_flow=1.0,
+        entering_water=-10.0 + 80.0 * x,
+        specific_heat=3600.0,
+        condensate_temperature="apparatus",
+    ),
+    "coil.surface_from_rating": lambda t, rh, x: coil.surface_from_rating(
+        stream(t, rh, 2.0), water_flow=1.0 + x, entering_water=6.0, value=8.0, measured="leaving_water", conductance_ratio=2.0
+    ),
     "coil.between": lambda t, rh, x: coil.between(stream(t, rh, 2.0 + x), leaving=state(5.0, 0.9), dead_band=1e-4),
     "reheat.to_state": lambda t, rh, x: reheat.to_state(
         stream(t, rh, 2.0), target=state(18.0, 0.3), coil_leaving_relative_humidity=0.9 + 0.1 * x
@@ -219,6 +237,32 @@ def test_choices():
     apparatus = coil.apparatus_dew_point(entering.air, leaving=leaving).dew_point
     drained = coil.to_state(entering, leaving=leaving, condensate_temperature="apparatus")
     assert drained == coil.to_state(entering, leaving=leaving, condensate_temperature=apparatus)
+
+
+def test_coils_with_water():
+    entering = stream(30.0, 0.6, 1.5)
+    water = {"water_flow": 2.0, "entering_water": 6.0}
+    done = coil.with_water(entering, air_side=4e3, water_side=8e3, **water)
+    assert done.air.regime is coil.CoilRegime.WET and done.freezing is False and done.dry_fraction == 0.0
+    warmth = [liquid_water_enthalpy(water_temperature=t, pressure=SEA_LEVEL) for t in (6.0, done.leaving_water)]
+    assert math.isclose(2.0 * (warmth[1] - warmth[0]), done.air.cooling_load, rel_tol=1e-9)
+    for measured, value in (
+        ("leaving_air", done.air.leaving.air.dry_bulb),
+        ("leaving_water", done.leaving_water),
+        ("heat", done.air.exchange.heat),
+    ):
+        surface = coil.surface_from_rating(entering, value=value, measured=measured, conductance_ratio=2.0, **water)
+        assert math.isclose(surface.air_side, 4e3, rel_tol=1e-6) and math.isclose(surface.water_side, 8e3, rel_tol=1e-6)
+    with pytest.raises(moistair.InfeasibleError):
+        coil.with_water(entering, air_side=4e3, water_side=8e3, arrangement="cross_flow", **water)
+    with pytest.raises(moistair.InfeasibleError):
+        coil.surface_from_rating(entering, value=5.0, conductance_ratio=2.0, **water)
+    with pytest.raises(ValueError, match="arrangement must be 'counterflow' or 'cross_flow'"):
+        coil.with_water(entering, air_side=4e3, water_side=8e3, arrangement="parallel", **water)
+    with pytest.raises(ValueError, match="measured"):
+        coil.surface_from_rating(entering, value=5.0, measured="load", conductance_ratio=2.0, **water)
+    with pytest.raises(TypeError):
+        coil.bypass_factor_of_rows(of_one_row=0.5, rows=2.5)
 
 
 def test_arguments_of_another_class():

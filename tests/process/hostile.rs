@@ -2,7 +2,9 @@
 
 use crate::checks::Random;
 use crate::support::*;
-use moistair_core::process::coil::{self, CondensateTemperature};
+use moistair_core::process::coil::{
+    self, Arrangement, CoilSurface, CoilWater, CondensateTemperature, Coolant, Measured,
+};
 use moistair_core::process::compression;
 use moistair_core::process::humidify::{self, Absorption, EvaporatingWater};
 use moistair_core::process::tower::{self, TowerWater, WaterTreatment};
@@ -179,6 +181,49 @@ fn no_argument_breaks_a_process() {
             finite(&[found.dew_point.celsius(), found.bypass_factor]);
             assert!((0.0..=1.0).contains(&found.bypass_factor), "{found:?}");
         });
+
+        seen.take("apparatus dew points", coil::apparatus_dew_points(&first, &second), |found| {
+            finite(&[found.nearest.celsius()]);
+            for met in [found.warmer, found.colder].into_iter().flatten() {
+                finite(&[met.dew_point.celsius()]);
+                assert!((0.0..=1.0).contains(&met.bypass_factor), "{found:?}");
+            }
+        });
+        let rows = x() as u32;
+        seen.take("bypass of rows", coil::bypass_factor_of_rows(x(), rows), |factor| {
+            assert!((0.0..=1.0).contains(factor))
+        });
+        // Hardly any five random numbers make a coil: most of them are given a usual value half of the time.
+        let mut or = |usual: f64| if random.bits() & 1 == 0 { number(&mut random) } else { usual };
+        let conductance = Conductance::from_watts_per_kelvin;
+        let coolant = if or(1.0) > 0.5 {
+            Coolant::Water
+        } else {
+            Coolant::Brine(SpecificHeat::from_joules_per_kilogram_kelvin(or(3_600.0)))
+        };
+        let water = CoilWater { flow: flow(or(1.0)), entering: celsius(or(7.0)), coolant };
+        for arrangement in [Arrangement::Counterflow, Arrangement::CrossFlow] {
+            let surface = CoilSurface { air_side: conductance(or(3e3)), water_side: conductance(or(6e3)), arrangement };
+            let drain = CondensateTemperature::Apparatus;
+            seen.take("coil with water", coil::with_water(&entering, surface, water, drain), |done| {
+                outlet(&done.air.leaving.into(), &done.air.exchange);
+                finite(&[done.leaving_water.celsius(), done.coldest_surface.celsius(), done.air.cooling_load.watts()]);
+                assert!((0.0..=1.0).contains(&done.dry_fraction), "{done:?}");
+            });
+            for measured in [
+                Measured::LeavingAir(celsius(or(12.0))),
+                Measured::LeavingWater(celsius(or(12.0))),
+                Measured::Heat(HeatFlow::from_watts(or(-2e4))),
+            ] {
+                let rated = coil::surface_from_rating(&entering, water, measured, or(2.0), arrangement);
+                seen.take("rating of a coil", rated, |surface| {
+                    let [outside, inside] = [surface.air_side, surface.water_side].map(Conductance::watts_per_kelvin);
+                    finite(&[outside, inside]);
+                    assert!(outside >= 0.0 && inside >= 0.0);
+                });
+            }
+        }
+        let mut x = || number(&mut random);
 
         let carried = AirWithCondensate::new(second, ratio(x()), ratio(x()));
         seen.take("carried water", carried, |wet| finite(&[wet.specific_enthalpy().joules_per_kilogram()]));

@@ -6,6 +6,8 @@
 #[path = "../../moistair-core/src/checks.rs"]
 #[allow(dead_code)]
 mod checks;
+mod coil_march;
+mod coils;
 mod compression;
 mod facts;
 mod hostile;

@@ -1,8 +1,18 @@
-//! Cooling coils: to a given leaving state, by bypass factor, and between two measured states.
+//! Coils: to a given leaving state, by bypass factor, between two measured states, and from their conductances and their water.
+//!
+//! A coil with air below freezing on it, or with water that stands still in it, can freeze and burst within minutes: a hard-wired
+//! freezestat protects it (trips near 2 to 3 °C, common practice, no source), never a computed temperature. Wet surfaces and pans that do
+//! not drain grow mould. Local codes govern.
 
 mod apparatus;
+mod conductance;
+mod coolant;
+mod rating;
 
-pub use apparatus::{Apparatus, apparatus_dew_point};
+pub use apparatus::{Apparatus, ApparatusDewPoints, apparatus_dew_point, apparatus_dew_points};
+pub use conductance::{Arrangement, CoilSurface, WaterCoil, with_water};
+pub use coolant::{CoilWater, Coolant};
+pub use rating::{Measured, surface_from_rating};
 
 use super::{AirStream, Exchange, infeasible, parts, same_formulation};
 use crate::basis::with_mixture;
@@ -10,7 +20,7 @@ use crate::bounds::Quantity;
 use crate::error::{Error, checked, checked_for};
 use crate::mixture::Mixture;
 use crate::quantity::{HeatFlow, HumidityRatio, MassFlow, SpecificEnthalpy, Temperature};
-use crate::real::{Scalar, k};
+use crate::real::{Scalar, k, power};
 use crate::saturation::Surface;
 use crate::state::condensate::{condensed_enthalpy, temperature_of_enthalpy};
 use crate::state::property::saturates;
@@ -38,6 +48,8 @@ pub enum CoilRegime {
     Wet = 1,
     /// The surface or the leaving air is below the melting temperature: frost, which no steady state describes.
     Frost = 2,
+    /// Liquid condensate on a part of the surface; the part that the air meets first is dry.
+    PartlyWet = 3,
 }
 
 /// What a cooling coil did.
@@ -136,38 +148,57 @@ pub fn by_bypass_factor<S: Scalar>(
             warmest,
         ));
     }
-    if bypass == k(1.0) {
-        return Ok(account(entering, &air, drain_temperature(&air, condensate, warmest, apparatus)?));
-    }
-    let pressure = air.pressure().pascals();
-    let (enthalpy, ratio) = parts(&air);
-    let surface_ratio = with_mixture!(air.formulation(), S, M => {
-        let saturation = M::<S>::at(apparatus).saturation(pressure, Surface::Stable);
-        S::select(saturates(saturation.mole_fraction), saturation.humidity_ratio, ratio).at_most(ratio)
-    });
-    let surface = MoistAir::assemble(apparatus, pressure, surface_ratio, air.formulation());
-    let between = |at_surface: S, at_inlet: S| at_surface + bypass * (at_inlet - at_surface);
-    let target = (between(parts(&surface).0, enthalpy), between(surface_ratio, ratio));
-    let celsius =
-        with_mixture!(air.formulation(), S, M => temperature_of_enthalpy::<M<S>, S>(target.0, pressure, target.1));
-    let leaving = if surface_ratio >= ratio {
-        MoistAir::assemble(celsius, pressure, ratio, air.formulation())
-    } else {
-        // Nearly saturated air can be led through fog; its droplets drain with the rest.
-        AirWithCondensate::from_enthalpy_and_water(
-            SpecificEnthalpy::from_joules_per_kilogram(target.0),
-            HumidityRatio::from_kilograms_per_kilogram(target.1),
-            Freezing::Equilibrium,
-            air.basis(),
-        )?
-        .air()
-    };
+    let leaving = toward_surface(&air, apparatus, bypass)?;
     let drain = drain_temperature(&air, condensate, leaving.dry_bulb().celsius(), apparatus)?;
     let mut cooling = account(entering, &leaving, drain);
     if cooling.regime == CoilRegime::Wet && freezes(&air, apparatus) {
         cooling.regime = CoilRegime::Frost;
     }
     Ok(cooling)
+}
+
+/// The bypass factor of a number of equal rows, one behind the other: BFⁿ.
+///
+/// # Errors
+/// [`Error::OutOfRange`], [`Error::NotFinite`].
+///
+/// ```
+/// use moistair_core::process::coil::bypass_factor_of_rows;
+/// assert_eq!(bypass_factor_of_rows(0.5, 4)?, 0.0625);
+/// assert!(bypass_factor_of_rows(1.5, 4).is_err());
+/// # Ok::<(), moistair_core::Error>(())
+/// ```
+pub fn bypass_factor_of_rows<S: Scalar>(of_one_row: S, rows: u32) -> Result<S, Error> {
+    checked(Quantity::BypassFactor, of_one_row).map(|factor| power(factor, rows))
+}
+
+/// Air led toward the state at a surface, short of it by the bypass.
+fn toward_surface<S: Scalar>(air: &MoistAir<S>, surface: S, bypass: S) -> Result<MoistAir<S>, Error> {
+    if bypass == k(1.0) {
+        return Ok(*air);
+    }
+    let pressure = air.pressure().pascals();
+    let (enthalpy, ratio) = parts(air);
+    let surface_ratio = with_mixture!(air.formulation(), S, M => {
+        let saturation = M::<S>::at(surface).saturation(pressure, Surface::Stable);
+        S::select(saturates(saturation.mole_fraction), saturation.humidity_ratio, ratio).at_most(ratio)
+    });
+    let at_surface = MoistAir::assemble(surface, pressure, surface_ratio, air.formulation());
+    let between = |at_surface: S, at_inlet: S| at_surface + bypass * (at_inlet - at_surface);
+    let target = (between(parts(&at_surface).0, enthalpy), between(surface_ratio, ratio));
+    if surface_ratio >= ratio {
+        let celsius =
+            with_mixture!(air.formulation(), S, M => temperature_of_enthalpy::<M<S>, S>(target.0, pressure, target.1));
+        return Ok(MoistAir::assemble(celsius, pressure, ratio, air.formulation()));
+    }
+    // Nearly saturated air can be led through fog; its droplets drain with the rest.
+    let leaving = AirWithCondensate::from_enthalpy_and_water(
+        SpecificEnthalpy::from_joules_per_kilogram(target.0),
+        HumidityRatio::from_kilograms_per_kilogram(target.1),
+        Freezing::Equilibrium,
+        air.basis(),
+    )?;
+    Ok(leaving.air())
 }
 
 /// The coil between two measured states. Differences of humidity ratio within `dead_band` are noise of the sensors: the coil then

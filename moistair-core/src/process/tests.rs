@@ -85,7 +85,7 @@ fn evaluations_stay_below_the_cap() {
 
     MOST_EVALUATIONS.set(0);
     let mut random = Random(3);
-    let mut worst = [("", 0); 5];
+    let mut worst = [("", 0); 7];
     let mut note = |slot: usize, name: &'static str| {
         let taken = MOST_EVALUATIONS.replace(0);
         if taken > worst[slot].1 {
@@ -131,6 +131,26 @@ fn evaluations_stay_below_the_cap() {
             coil::CondensateTemperature::Apparatus,
         );
         note(3, "coil");
+        let conductance = |x: f64| crate::Conductance::from_watts_per_kelvin(x);
+        let surface = coil::CoilSurface {
+            air_side: conductance(1e4 * x),
+            water_side: conductance(1e4 * y),
+            arrangement: if random.bits() & 1 == 0 {
+                coil::Arrangement::Counterflow
+            } else {
+                coil::Arrangement::CrossFlow
+            },
+        };
+        let chilled = coil::CoilWater {
+            flow: MassFlow::from_kilograms_per_second(5.0 * y * y),
+            entering: Temperature::from_celsius(60.0 * x * y),
+            coolant: coil::Coolant::Water,
+        };
+        let _ = coil::with_water(&stream, surface, chilled, coil::CondensateTemperature::Apparatus);
+        note(4, "coil with water");
+        let measured = coil::Measured::LeavingAir(second.dry_bulb());
+        let _ = coil::surface_from_rating(&stream, chilled, measured, 2.0, coil::Arrangement::Counterflow);
+        note(5, "rating of a coil");
         let cold = 50.0 * y;
         let water = TowerWater {
             flow: MassFlow::from_kilograms_per_second(3.0 * x),
@@ -139,7 +159,7 @@ fn evaluations_stay_below_the_cap() {
         };
         let _ =
             tower::with_air_flow(&stream, water, WaterTreatment { drift_fraction: 0.0, cycles_of_concentration: 3.0 });
-        note(4, "tower");
+        note(6, "tower");
     }
     println!("most evaluations of one search, of {ITERATION_CAP}: {worst:?}");
     assert!(worst.iter().all(|&(_, taken)| taken > 0 && taken < ITERATION_CAP));
@@ -171,6 +191,21 @@ fn single_precision() {
         let heated = sensible::with_heat(&cold, HeatFlow::from_watts(s(4e4))).unwrap();
         let by_bypass = coil::by_bypass_factor(&warm, t(8.0), s(0.15), drain).unwrap();
         let apparatus = coil::apparatus_dew_point(&warm.air(), &by_bypass.leaving.air()).unwrap();
+        let chilled = coil::CoilWater {
+            flow: MassFlow::from_kilograms_per_second(s(2.5)),
+            entering: t(6.0),
+            coolant: coil::Coolant::Water,
+        };
+        let conductance = crate::Conductance::from_kilowatts_per_kelvin;
+        let surface = coil::CoilSurface {
+            air_side: conductance(s(5.0)),
+            water_side: conductance(s(9.0)),
+            arrangement: coil::Arrangement::Counterflow,
+        };
+        let watered = coil::with_water(&warm, surface, chilled, drain).unwrap();
+        let measured = coil::Measured::LeavingAir(t(14.0));
+        let rated =
+            coil::surface_from_rating(&warm, chilled, measured, s(2.0), coil::Arrangement::Counterflow).unwrap();
         let held =
             coil::between(&warm, &air(12.0, 0.95), drain, HumidityRatio::from_grams_per_kilogram(s(0.1))).unwrap();
         let reheated =
@@ -184,6 +219,10 @@ fn single_precision() {
         let treatment = WaterTreatment { drift_fraction: s(1e-4), cycles_of_concentration: s(3.0) };
         let cooled = tower::with_air_flow(&warm, water, treatment).unwrap();
         [
+            watered.air.leaving.air().dry_bulb().celsius(),
+            watered.leaving_water.celsius(),
+            watered.air.cooling_load.kilowatts(),
+            rated.air_side.kilowatts_per_kelvin(),
             heated.leaving.air().dry_bulb().celsius(),
             by_bypass.cooling_load.kilowatts(),
             apparatus.dew_point.celsius(),

@@ -1,7 +1,7 @@
 //! Cooling coils.
 
 use moistair_core::columns::NAN;
-use moistair_core::process::coil::{self, Apparatus, CoilRegime, CondensateTemperature, Cooling};
+use moistair_core::process::coil::{self, Apparatus, ApparatusDewPoints, CoilRegime, CondensateTemperature, Cooling};
 
 use super::stream::{moistair_exchange, moistair_stream};
 use super::{celsius, finite, ratio};
@@ -22,6 +22,8 @@ pub const MOISTAIR_COIL_DRY: i32 = 0;
 pub const MOISTAIR_COIL_WET: i32 = 1;
 /// The coil is cold enough for frost.
 pub const MOISTAIR_COIL_FROST: i32 = 2;
+/// Water condensed as liquid on a part of the surface.
+pub const MOISTAIR_COIL_PARTLY_WET: i32 = 3;
 
 /// What a cooling coil did.
 #[repr(C)]
@@ -43,7 +45,7 @@ pub struct moistair_cooling {
     pub condensate: f64,
     /// Sensible part over the load [1]; NaN without a load.
     pub sensible_heat_ratio: f64,
-    /// MOISTAIR_COIL_DRY, MOISTAIR_COIL_WET or MOISTAIR_COIL_FROST.
+    /// MOISTAIR_COIL_DRY, MOISTAIR_COIL_WET, MOISTAIR_COIL_FROST or MOISTAIR_COIL_PARTLY_WET.
     pub regime: i32,
     /// 0.
     pub reserved: i32,
@@ -92,6 +94,42 @@ impl From<Apparatus> for moistair_apparatus {
 impl Answer for moistair_apparatus {
     fn is_finite(&self) -> bool {
         finite([self.dew_point, self.bypass_factor])
+    }
+}
+
+/// Where the line from the entering through the leaving air meets saturation: nowhere, once, or twice.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_apparatus_dew_points {
+    /// The warmer meeting, which is the coil's; NaN for a line that misses saturation.
+    pub warmer: moistair_apparatus,
+    /// The colder, where the line comes out of saturation again; NaN where it does not down to -40 °C.
+    pub colder: moistair_apparatus,
+    /// Where the line comes nearest to saturation, if it misses it; otherwise the warmer meeting [°C].
+    pub nearest: f64,
+    /// Number of meetings: 0, 1 or 2.
+    pub count: i32,
+    /// 0.
+    pub reserved: i32,
+}
+
+impl From<ApparatusDewPoints> for moistair_apparatus_dew_points {
+    fn from(found: ApparatusDewPoints) -> Self {
+        let none = moistair_apparatus { dew_point: NAN, bypass_factor: NAN };
+        let part = |met: Option<Apparatus>| met.map_or(none, Into::into);
+        Self {
+            warmer: part(found.warmer),
+            colder: part(found.colder),
+            nearest: found.nearest.celsius(),
+            count: i32::from(found.warmer.is_some()) + i32::from(found.colder.is_some()),
+            reserved: 0,
+        }
+    }
+}
+
+impl Answer for moistair_apparatus_dew_points {
+    fn is_finite(&self) -> bool {
+        self.nearest.is_finite()
     }
 }
 
@@ -209,9 +247,45 @@ pub unsafe extern "C" fn moistair_coil_apparatus_dew_point(
     unsafe { answer(apparatus, error, call) }
 }
 
+/// All meetings of the line from the entering through the leaving air with saturation, below the leaving air's dry bulb.
+///
+/// entering: the state that enters; leaving: the state that leaves; found: output; error: may be null.
+/// Returns 0, 1xx, 2xx, 301 (nothing condenses, or the air leaves warmer).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_coil_apparatus_dew_points(
+    entering: *const moistair_state,
+    leaving: *const moistair_state,
+    found: *mut moistair_apparatus_dew_points,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        // SAFETY: the caller's pointers.
+        let (entering, leaving) = unsafe { (read(entering)?.to_core()?, read(leaving)?.to_core()?) };
+        Ok(coil::apparatus_dew_points(&entering, &leaving)?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(found, error, call) }
+}
+
+/// The bypass factor of a number of equal rows, one behind the other.
+///
+/// of_one_row: bypass factor of one of them [1], 0 to 1; rows: how many; bypass_factor: output [1]; error: may be null.
+/// Returns 0, 1xx, 2xx.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_coil_bypass_factor_of_rows(
+    of_one_row: f64,
+    rows: u32,
+    bypass_factor: *mut f64,
+    error: *mut moistair_error,
+) -> i32 {
+    // SAFETY: the caller's pointers.
+    unsafe { answer(bypass_factor, error, || Ok(coil::bypass_factor_of_rows(of_one_row, rows)?)) }
+}
+
 const _: () = {
     assert!(size_of::<moistair_apparatus>() == 16);
     assert!(size_of::<moistair_cooling>() == 296 && core::mem::offset_of!(moistair_cooling, regime) == 288);
     assert!(CoilRegime::Dry as i32 == MOISTAIR_COIL_DRY && CoilRegime::Frost as i32 == MOISTAIR_COIL_FROST);
-    assert!(CoilRegime::Wet as i32 == MOISTAIR_COIL_WET);
+    assert!(CoilRegime::Wet as i32 == MOISTAIR_COIL_WET && CoilRegime::PartlyWet as i32 == MOISTAIR_COIL_PARTLY_WET);
+    assert!(size_of::<moistair_apparatus_dew_points>() == 48);
 };

@@ -1,8 +1,14 @@
-"""Cooling coils: to a given leaving state, by bypass factor, and between two measured states."""
+"""Coils: to a given leaving state, by bypass factor, between two measured states, and from their conductances and their water.
+
+A coil with air below freezing on it, or with water that stands still in it, can freeze and burst within minutes: a
+hard-wired freezestat protects it, never a computed temperature. Wet surfaces and pans that do not drain grow mould. Local
+codes govern.
+"""
 
 from __future__ import annotations
 
 import enum
+import operator
 from dataclasses import dataclass
 from typing import Any, Generic, Literal, Union, overload
 
@@ -11,12 +17,36 @@ from numpy.typing import ArrayLike, NDArray
 
 from .._core import MoistAir
 from .._rows import Array, Record, T, choice, expect, run
-from ._streams import AirStream, Exchange
+from ._streams import AirStream, Exchange, code
 
-__all__ = ["Apparatus", "CoilRegime", "Cooling", "apparatus_dew_point", "between", "by_bypass_factor", "to_state"]
+__all__ = [
+    "Apparatus",
+    "ApparatusDewPoints",
+    "CoilRegime",
+    "CoilSurface",
+    "Cooling",
+    "WaterCoil",
+    "apparatus_dew_point",
+    "apparatus_dew_points",
+    "between",
+    "by_bypass_factor",
+    "bypass_factor_of_rows",
+    "surface_from_rating",
+    "to_state",
+    "with_water",
+]
 
 #: What stands for the temperature at which condensate leaves: an assumption. In all it carries about 1 % of the load.
 CondensateTemperature = Union[Literal["leaving_air"], Literal["apparatus"]]
+
+#: How air and water pass each other: against each other, or across, neither mixed (for coils that stay dry).
+Arrangement = Union[Literal["counterflow"], Literal["cross_flow"]]
+
+#: What was measured behind a coil.
+Measured = Union[Literal["leaving_air"], Literal["leaving_water"], Literal["heat"]]
+
+_ARRANGEMENTS = {"counterflow": 0, "cross_flow": 1}
+_MEASURED = {"leaving_air": 0, "leaving_water": 1, "heat": 2}
 
 
 def condensate_choice(value: Any) -> tuple[tuple[str, Any], tuple[str, Any]]:
@@ -32,6 +62,8 @@ class CoilRegime(enum.IntEnum):
     """Liquid condensate."""
     FROST = 2
     """The surface or the leaving air is below the melting temperature: frost, which no steady state describes."""
+    PARTLY_WET = 3
+    """Liquid condensate on a part of the surface; the part that the air meets first is dry."""
 
 
 @dataclass(frozen=True, eq=False, init=False)
@@ -47,7 +79,8 @@ class Cooling(Record, Generic[T]):
     exchange : Exchange
         Heat and water into the air, both negative here.
     cooling_load : float or numpy.ndarray
-        Heat taken out by the coil, W, positive; negative only from `between`, where the leaving air reads warmer.
+        Heat taken out by the coil, W, positive; negative from `between`, where the leaving air reads warmer, and from
+        `with_water` with warm water.
     sensible : float or numpy.ndarray
         ṁ (h(t₁, W₂) − h(t₂, W₂)), W.
     latent : float or numpy.ndarray
@@ -55,7 +88,7 @@ class Cooling(Record, Generic[T]):
     condensate : float or numpy.ndarray
         Water that drains, kg/s, positive.
     regime : CoilRegime or numpy.ndarray
-        Dry, wet or frosting; an int32 array of the codes for many rows, −1 where a row has no result.
+        Dry, wet, frosting or partly wet; an int32 array of the codes for many rows, −1 where a row has no result.
     sensible_heat_ratio : float or numpy.ndarray
         Sensible over total; NaN without a load.
     """
@@ -251,6 +284,329 @@ def apparatus_dew_point(entering: MoistAir[Any], *, leaving: MoistAir[Any]) -> A
     expect(entering, MoistAir, "entering")
     expect(leaving, MoistAir, "leaving")
     return run("coil.apparatus_dew_point", Apparatus, ("entering", entering), ("leaving", leaving))
+
+
+@dataclass(frozen=True, eq=False, init=False)
+class ApparatusDewPoints(Record, Generic[T]):
+    """Where the line from the entering through the leaving air meets saturation: nowhere, once, or twice.
+
+    Attributes
+    ----------
+    warmer : Apparatus
+        The warmer meeting, which is the coil's; NaN for a line that misses saturation.
+    colder : Apparatus
+        The colder, where the line comes out of saturation again; NaN where it does not down to −40 °C.
+    nearest : float or numpy.ndarray
+        Where the line comes nearest to saturation, if it misses it, °C; otherwise the warmer meeting.
+    """
+
+    warmer: Apparatus[T]
+    colder: Apparatus[T]
+    nearest: T
+
+
+@overload
+def apparatus_dew_points(entering: MoistAir[float], *, leaving: MoistAir[float]) -> ApparatusDewPoints[float]: ...
+@overload
+def apparatus_dew_points(entering: MoistAir[Any], *, leaving: MoistAir[Any]) -> ApparatusDewPoints[Array]: ...
+def apparatus_dew_points(entering: MoistAir[Any], *, leaving: MoistAir[Any]) -> ApparatusDewPoints[Any]:
+    """All meetings of the line from the entering through the leaving air with saturation, below the leaving dry bulb.
+
+    Parameters
+    ----------
+    entering, leaving : MoistAir
+        The air on both sides.
+
+    Returns
+    -------
+    ApparatusDewPoints
+
+    Raises
+    ------
+    InfeasibleError
+        Nothing condenses, or the air leaves warmer.
+    ProcessError
+        States of different formulations.
+
+    Examples
+    --------
+    >>> from moistair import MoistAir
+    >>> from moistair.process import coil
+    >>> entering = MoistAir(dry_bulb=27.0, relative_humidity=0.5, pressure=101_325.0)
+    >>> leaving = MoistAir(dry_bulb=13.0, relative_humidity=0.85, pressure=101_325.0)
+    >>> found = coil.apparatus_dew_points(entering, leaving=leaving)
+    >>> found.colder.dew_point < found.warmer.dew_point < 13.0
+    True
+    """
+    expect(entering, MoistAir, "entering")
+    expect(leaving, MoistAir, "leaving")
+    return run("coil.apparatus_dew_points", ApparatusDewPoints, ("entering", entering), ("leaving", leaving))
+
+
+@overload
+def bypass_factor_of_rows(*, of_one_row: float, rows: int) -> float: ...
+@overload
+def bypass_factor_of_rows(*, of_one_row: ArrayLike, rows: int) -> Array: ...
+def bypass_factor_of_rows(*, of_one_row: ArrayLike, rows: int) -> Any:
+    """The bypass factor of a number of equal rows, one behind the other.
+
+    Parameters
+    ----------
+    of_one_row : float or array_like
+        Bypass factor of one of them, 0 to 1.
+    rows : int
+        How many.
+
+    Returns
+    -------
+    float or numpy.ndarray
+
+    Raises
+    ------
+    NotFiniteError, OutOfRangeError
+        The bypass factor.
+
+    Examples
+    --------
+    >>> from moistair.process import coil
+    >>> coil.bypass_factor_of_rows(of_one_row=0.5, rows=4)
+    0.0625
+    """
+    return run("coil.bypass_factor_of_rows", float, ("of_one_row", of_one_row), ("rows", operator.index(rows)))
+
+
+@dataclass(frozen=True, eq=False, init=False)
+class WaterCoil(Record, Generic[T]):
+    """What a coil with water in it did.
+
+    Attributes
+    ----------
+    air : Cooling
+        The air side. A coil that heats has a negative cooling load.
+    leaving_water : float or numpy.ndarray
+        Temperature of the water that leaves, °C; it takes up the heat that `air.exchange` takes out.
+    dry_fraction : float or numpy.ndarray
+        Share of the surface on which nothing condenses.
+    coldest_surface : float or numpy.ndarray
+        The coldest metal, at one end of the coil, °C.
+    freezing : bool or numpy.ndarray
+        The coldest metal is below the melting temperature and there is water in it. No freezestat.
+    """
+
+    air: Cooling[T]
+    leaving_water: T
+    dry_fraction: T
+    coldest_surface: T
+    freezing: Union[bool, NDArray[np.bool_]]
+
+
+@overload
+def with_water(
+    entering: AirStream[float],
+    *,
+    air_side: float,
+    water_side: float,
+    water_flow: float,
+    entering_water: float,
+    specific_heat: Union[Literal["water"], float] = ...,
+    arrangement: Arrangement = ...,
+    condensate_temperature: Union[CondensateTemperature, float] = ...,
+) -> WaterCoil[float]: ...
+@overload
+def with_water(
+    entering: AirStream[Any],
+    *,
+    air_side: ArrayLike,
+    water_side: ArrayLike,
+    water_flow: ArrayLike,
+    entering_water: ArrayLike,
+    specific_heat: Union[Literal["water"], ArrayLike] = ...,
+    arrangement: Arrangement = ...,
+    condensate_temperature: Union[CondensateTemperature, ArrayLike] = ...,
+) -> WaterCoil[Array]: ...
+def with_water(
+    entering: AirStream[Any],
+    *,
+    air_side: ArrayLike,
+    water_side: ArrayLike,
+    water_flow: ArrayLike,
+    entering_water: ArrayLike,
+    specific_heat: Union[Literal["water"], ArrayLike] = "water",
+    arrangement: Arrangement = "counterflow",
+    condensate_temperature: Union[CondensateTemperature, ArrayLike] = "leaving_air",
+) -> WaterCoil[Any]:
+    """A coil from its conductances and the water that enters it: dry, wet or partly wet.
+
+    By effectiveness and number of transfer units, on temperature where the surface is dry and on enthalpy where it is wet
+    (Threlkeld 1970; Braun, Klein & Mitchell 1989). It cools or heats, as the water is colder or warmer than the air;
+    without water flow or without conductance it changes nothing. Left out: that conductances change with flow, that wet
+    fins have a lower efficiency, evaporation of condensate at part load, growth of frost, uneven flow.
+
+    Parameters
+    ----------
+    entering : AirStream
+        The air that enters.
+    air_side : float or array_like
+        Conductance from air to metal with the fins' efficiency, for sensible heat, W/K.
+    water_side : float or array_like
+        Conductance from metal to water, W/K.
+    water_flow : float or array_like
+        kg/s.
+    entering_water : float or array_like
+        Temperature of the water that enters, °C.
+    specific_heat : 'water', float or array_like
+        Of a brine that does not freeze, J/(kg K).
+    arrangement : {'counterflow', 'cross_flow'}
+        Cross-flow is for coils that stay dry.
+    condensate_temperature : 'leaving_air', 'apparatus', float or array_like
+        Temperature at which the condensate leaves, °C; that of the apparatus is the mean of the surface that condenses.
+
+    Returns
+    -------
+    WaterCoil
+
+    Raises
+    ------
+    InfeasibleError
+        Water would freeze in the coil, a coil in cross-flow would get wet, or the air would leave above its range.
+    ProcessError
+        No air flows.
+    NotFiniteError, OutOfRangeError
+        An input.
+
+    Examples
+    --------
+    >>> from moistair import MoistAir
+    >>> from moistair.process import AirStream, coil
+    >>> air = MoistAir(dry_bulb=27.0, relative_humidity=0.5, pressure=101_325.0)
+    >>> entering = AirStream(air, dry_air_flow=1.0)
+    >>> done = coil.with_water(entering, air_side=3e3, water_side=6e3, water_flow=1.6, entering_water=6.0)
+    >>> round(done.air.cooling_load / 1000.0, 1), done.air.regime.name
+    (24.3, 'WET')
+    """
+    expect(entering, AirStream, "entering")
+    return run(
+        "coil.with_water",
+        WaterCoil,
+        ("entering", entering),
+        ("air_side", air_side),
+        ("water_side", water_side),
+        code(_ARRANGEMENTS, arrangement, "arrangement"),
+        ("water_flow", water_flow),
+        ("entering_water", entering_water),
+        *choice(specific_heat, {"water": 0}, "specific_heat"),
+        *condensate_choice(condensate_temperature),
+    )
+
+
+@dataclass(frozen=True, eq=False, init=False)
+class CoilSurface(Record, Generic[T]):
+    """A coil by its conductances at the flows at hand.
+
+    Attributes
+    ----------
+    air_side : float or numpy.ndarray
+        From air to metal, W/K.
+    water_side : float or numpy.ndarray
+        From metal to water, W/K.
+    """
+
+    air_side: T
+    water_side: T
+
+
+@overload
+def surface_from_rating(
+    entering: AirStream[float],
+    *,
+    water_flow: float,
+    entering_water: float,
+    value: float,
+    measured: Measured = ...,
+    conductance_ratio: float,
+    specific_heat: Union[Literal["water"], float] = ...,
+    arrangement: Arrangement = ...,
+) -> CoilSurface[float]: ...
+@overload
+def surface_from_rating(
+    entering: AirStream[Any],
+    *,
+    water_flow: ArrayLike,
+    entering_water: ArrayLike,
+    value: ArrayLike,
+    measured: Measured = ...,
+    conductance_ratio: ArrayLike,
+    specific_heat: Union[Literal["water"], ArrayLike] = ...,
+    arrangement: Arrangement = ...,
+) -> CoilSurface[Array]: ...
+def surface_from_rating(
+    entering: AirStream[Any],
+    *,
+    water_flow: ArrayLike,
+    entering_water: ArrayLike,
+    value: ArrayLike,
+    measured: Measured = "leaving_air",
+    conductance_ratio: ArrayLike,
+    specific_heat: Union[Literal["water"], ArrayLike] = "water",
+    arrangement: Arrangement = "counterflow",
+) -> CoilSurface[Any]:
+    """The conductances of a coil that explain one measured point; `with_water` then predicts others.
+
+    Parameters
+    ----------
+    entering : AirStream
+        The air that enters.
+    water_flow : float or array_like
+        kg/s.
+    entering_water : float or array_like
+        Temperature of the water that enters, °C.
+    value : float or array_like
+        What was measured, °C or W.
+    measured : {'leaving_air', 'leaving_water', 'heat'}
+        What the value is; heat is into the air, negative where the coil cools.
+    conductance_ratio : float or array_like
+        Of the water side over the air side; 1 to 5 is common practice, no source.
+    specific_heat, arrangement
+        As in `with_water`.
+
+    Returns
+    -------
+    CoilSurface
+
+    Raises
+    ------
+    InfeasibleError
+        No conductance explains the value; the limits are what no and endless surface would give.
+    ProcessError
+        No air flows.
+    NotFiniteError, OutOfRangeError
+        An input.
+
+    Examples
+    --------
+    >>> from moistair import MoistAir
+    >>> from moistair.process import AirStream, coil
+    >>> air = MoistAir(dry_bulb=27.0, relative_humidity=0.5, pressure=101_325.0)
+    >>> entering = AirStream(air, dry_air_flow=1.0)
+    >>> surface = coil.surface_from_rating(
+    ...     entering, water_flow=1.6, entering_water=6.0, value=11.0, conductance_ratio=2.0
+    ... )
+    >>> round(surface.air_side / 1000.0, 1)
+    3.0
+    """
+    expect(entering, AirStream, "entering")
+    return run(
+        "coil.surface_from_rating",
+        CoilSurface,
+        ("entering", entering),
+        ("water_flow", water_flow),
+        ("entering_water", entering_water),
+        *choice(specific_heat, {"water": 0}, "specific_heat"),
+        code(_MEASURED, measured, "measured"),
+        ("value", value),
+        ("conductance_ratio", conductance_ratio),
+        code(_ARRANGEMENTS, arrangement, "arrangement"),
+    )
 
 
 @overload
