@@ -32,7 +32,8 @@ pub struct Basin<S = f64> {
 }
 
 impl<S: Scalar> Basin<S> {
-    /// From the water in basin, pipes and plant together [kg] and its concentration [mg/kg, or any unit that the make-up's is in too].
+    /// From the water in basin, pipes and plant together, kg, and its concentration, mg/kg or any unit that the make-up's is in
+    /// too.
     ///
     /// # Errors
     /// [`Error::OutOfRange`], [`Error::NotFinite`].
@@ -43,7 +44,7 @@ impl<S: Scalar> Basin<S> {
         })
     }
 
-    /// Water in circulation [kg].
+    /// Water in circulation, kg.
     #[must_use]
     pub fn inventory(&self) -> S {
         self.inventory

@@ -6,7 +6,7 @@
 //!
 //! # Accuracy
 //! Its number is 1 to 3 % below Merkel's for ranges of cooling practice, and meets it as the range vanishes. Not for ranges over some
-//! 20 K, where one line no longer follows the curve; not where air warms the water.
+//! 15 K, where one line no longer follows the curve (beyond it hotter water can even seem to leave colder); not where air warms the water.
 
 use super::film::{Site, limit};
 use super::rating::{Inlet, TowerRating, TowerStatus, checked_number};
@@ -87,8 +87,8 @@ fn mean_logarithm<S: Scalar>(x: S) -> S {
 /// use moistair_core::*;
 /// use moistair_core::process::{AirStream, tower::{TowerWater, effectiveness_ntu}};
 /// let site = Basis::ideal_gas(Pressure::from_kilopascals(101.325));
-/// let outdoor = MoistAir::from_dry_bulb(Temperature::from_celsius(24.0), RelativeHumidity::from_percent(100.0), site)?;
-/// let (flow, celsius) = (MassFlow::from_kilograms_per_second, Temperature::from_celsius);
+/// let outdoor: MoistAir = MoistAir::from_dry_bulb(Temperature::from_celsius(24.0), RelativeHumidity::from_percent(100.0), site)?;
+/// let (flow, celsius) = (MassFlow::<f64>::from_kilograms_per_second, Temperature::<f64>::from_celsius);
 /// let entering = AirStream::new(outdoor, flow(10.0))?;
 /// let duty = TowerWater { flow: flow(12.0), hot: celsius(39.0), cold: celsius(29.0) };
 /// let number = effectiveness_ntu::number(&entering, duty)?;

@@ -30,8 +30,8 @@ pub enum Quadrature {
     /// Eight points of Gauss and Legendre over the range.
     #[default]
     GaussLegendre = 0,
-    /// The same on four quarters of the range, for duties next to the pinch.
-    GaussLegendreInQuarters = 1,
+    /// The same on each of seven parts of the range, narrow where the water is cold, for duties next to the limit or the pinch.
+    GaussLegendreGraded = 1,
     /// The rule of the trade, for comparison with contracts: the mean of the values at 0.1, 0.4, 0.6 and 0.9 of the range. It bears
     /// Chebyshev's name, but not his points.
     FourPoint = 2,
@@ -45,6 +45,9 @@ const GAUSS_LEGENDRE: [(f64, f64); 4] = [
     (0.40828267875217509753, 0.18134189168918099148),
 ];
 
+/// Upper ends of the parts of the graded rule.
+const PARTS: [f64; 7] = [1.0 / 256.0, 1.0 / 64.0, 1.0 / 16.0, 1.0 / 4.0, 1.0 / 2.0, 3.0 / 4.0, 1.0];
+
 impl Quadrature {
     /// ∫ f over the unit interval.
     fn integrate<S: Scalar>(self, f: impl Fn(S) -> S) -> S {
@@ -57,8 +60,8 @@ impl Quadrature {
         };
         match self {
             Self::GaussLegendre => gauss(zero, k(1.0)),
-            Self::GaussLegendreInQuarters => {
-                [0.0, 0.25, 0.5, 0.75].iter().fold(zero, |sum, &from| sum + gauss(k(from), k(0.25)))
+            Self::GaussLegendreGraded => {
+                PARTS.iter().fold((zero, zero), |(sum, from), &to| (sum + gauss(from, k::<S>(to) - from), k(to))).0
             }
             Self::FourPoint => [0.1, 0.4, 0.6, 0.9].iter().fold(zero, |sum, &point| sum + f(k(point))) * k(0.25),
         }
@@ -168,8 +171,16 @@ pub fn pinch<S: Scalar>(air: &MoistAir<S>, hot: Temperature<S>, cold: Temperatur
 /// The Merkel number that a duty takes.
 ///
 /// # Accuracy
-/// Of the integral, over 422 duties with wet bulbs of 5 to 28 °C, approaches of 1 to 8 K, ranges of 3 to 25 K and L/G 0.3 to 2.2,
-/// as far as they stay clear of the pinch: see the tests, which print median and worst of each rule.
+/// Of the integral, relative, over 422 duties with wet bulbs of 5 to 28 °C, approaches of 1 to 8 K, ranges of 3 to 25 K and L/G of
+/// 0.3 to 2.2, not above 0.9 of the pinch; in brackets those of common cooling practice, with ranges up to 10 K and approaches from 3 K:
+///
+/// | rule | median | worst |
+/// |---|---|---|
+/// | Gauss–Legendre | 2e-11 | 2e-4 (1e-8) |
+/// | graded | 2e-15 | 4e-12 |
+/// | four points | 1e-3 | 4e-2 (2e-3) |
+///
+/// Next to the pinch the number runs away, and so does the error of any rule: a duty within 5 % of it is better rated than sized.
 ///
 /// # Errors
 /// [`Error::Infeasible`] for the cold water at or below its limit T*, for L/G at or beyond the pinch (the error holds the greatest), for water
@@ -179,8 +190,8 @@ pub fn pinch<S: Scalar>(air: &MoistAir<S>, hot: Temperature<S>, cold: Temperatur
 /// use moistair_core::*;
 /// use moistair_core::process::{AirStream, tower::{TowerWater, merkel::{self, Quadrature}}};
 /// let site = Basis::ideal_gas(Pressure::from_kilopascals(101.325));
-/// let outdoor = MoistAir::from_dry_bulb(Temperature::from_celsius(24.0), RelativeHumidity::from_percent(100.0), site)?;
-/// let (flow, celsius) = (MassFlow::from_kilograms_per_second, Temperature::from_celsius);
+/// let outdoor: MoistAir = MoistAir::from_dry_bulb(Temperature::from_celsius(24.0), RelativeHumidity::from_percent(100.0), site)?;
+/// let (flow, celsius) = (MassFlow::<f64>::from_kilograms_per_second, Temperature::<f64>::from_celsius);
 /// let entering = AirStream::new(outdoor, flow(10.0))?;
 /// let duty = TowerWater { flow: flow(12.0), hot: celsius(39.0), cold: celsius(29.0) };
 /// let needed = merkel::number(&entering, duty, Quadrature::GaussLegendre)?;
@@ -232,8 +243,8 @@ pub fn number<S: Scalar>(
 /// use moistair_core::*;
 /// use moistair_core::process::{AirStream, tower::{HotWater, TowerStatus, merkel}};
 /// let site = Basis::ideal_gas(Pressure::from_kilopascals(101.325));
-/// let outdoor = MoistAir::from_dry_bulb(Temperature::from_celsius(24.0), RelativeHumidity::from_percent(100.0), site)?;
-/// let (flow, celsius) = (MassFlow::from_kilograms_per_second, Temperature::from_celsius);
+/// let outdoor: MoistAir = MoistAir::from_dry_bulb(Temperature::from_celsius(24.0), RelativeHumidity::from_percent(100.0), site)?;
+/// let (flow, celsius) = (MassFlow::<f64>::from_kilograms_per_second, Temperature::<f64>::from_celsius);
 /// let entering = AirStream::new(outdoor, flow(10.0))?;
 /// let rated = merkel::rate(&entering, HotWater { flow: flow(12.0), temperature: celsius(39.0) }, 1.60834)?;
 /// assert!((rated.water.cold.celsius() - 29.0).abs() < 1e-4);
@@ -260,22 +271,29 @@ pub(super) fn rate_in_steps<S: Scalar>(
     if number == k(0.0) || inlet.hot == limit {
         return TowerRating::new(&inlet, inlet.hot, status);
     }
+    let (enthalpy, _) = parts(&air);
     let cold = inlet.cold_water(limit, number, solve::temperature_resolution(), |cold, number| {
-        excess(cold, inlet.hot, climb(&inlet, cold, number, least_steps))
+        climb(&inlet.site, enthalpy, (inlet.hot, cold), inlet.water_to_air, number, least_steps)
     })?;
     TowerRating::new(&inlet, cold, status)
 }
 
 /// dT/dN = (h_s(T) − h₁) / c_pw − (L/G) (T − t₂).
-fn climb<S: Scalar>(inlet: &Inlet<S>, cold: S, number: S, least_steps: u32) -> Height<S> {
-    let (enthalpy, humidity_ratio) = parts(&inlet.entering.air());
-    let heat_capacity = inlet.site.water_heat_capacity(inlet.hot, cold);
-    let foot = Height { celsius: cold, humidity_ratio };
-    march(foot, inlet.hot, number, steps(least_steps, number, inlet.water_to_air), |at| Height {
-        celsius: (inlet.site.film(at.celsius).enthalpy - enthalpy) / heat_capacity
-            - inlet.water_to_air * (at.celsius - cold),
+fn climb<S: Scalar>(
+    site: &Site<S>,
+    enthalpy: S,
+    (hot, cold): (S, S),
+    water_to_air: S,
+    number: S,
+    least_steps: u32,
+) -> S {
+    let heat_capacity = site.water_heat_capacity(hot, cold);
+    let foot = Height { celsius: cold, humidity_ratio: k(0.0) };
+    let top = march(foot, hot, number, steps(least_steps, number, water_to_air), |at| Height {
+        celsius: (site.film(at.celsius).enthalpy - enthalpy) / heat_capacity - water_to_air * (at.celsius - cold),
         humidity_ratio: k(0.0),
-    })
+    });
+    excess(cold, hot, top)
 }
 
 /// The dry-air flow with which a tower of a given fill does a duty: what the fan must move.
@@ -294,22 +312,17 @@ pub fn air_for_duty<S: Scalar>(
     let flow = checked(Quantity::WaterFlow, water.flow.kilograms_per_second())?;
     let (least, _) = Quantity::WaterToAirRatio.limits();
     let (low, high) = (k::<S>(least), duty.pinch().water_to_air);
-    // Positive where the duty takes more than there is.
-    let lacking = |ratio: S| duty.number(ratio, Quadrature::GaussLegendreInQuarters) - fill.at(ratio);
+    let most = k::<S>(Quantity::MerkelNumber.limits().1);
+    // What the fill has beyond the duty, as the excess of a march: falls with the ratio.
+    let lacking = |ratio: S| {
+        let number = fill.at(ratio).at_most(most);
+        -climb(&duty.site, duty.enthalpy, (duty.hot, duty.cold), ratio, number, MARCH_STEPS)
+    };
     let (at_low, at_high) = (lacking(low), lacking(high));
-    if at_low > k(0.0) {
-        return Err(infeasible(
-            Quantity::MerkelNumber,
-            duty.number(low, Quadrature::GaussLegendreInQuarters),
-            k(0.0),
-            fill.at(low),
-        ));
+    let enough = at_low < k(0.0) && k::<S>(0.0) < at_high;
+    if !enough {
+        return Err(infeasible(Quantity::FillCoefficient, fill.coefficient(), k(0.0), most));
     }
-    if at_high <= k(0.0) && high == k(Quantity::WaterToAirRatio.limits().1) {
-        // Less air than there is a ratio for would do.
-        return Err(infeasible(Quantity::MerkelNumber, fill.at(high), k(0.0), at_high + fill.at(high)));
-    }
-    let short = if at_high > k(0.0) { at_high.at_most(k(Quantity::MerkelNumber.limits().1)) } else { k(1.0) };
-    let ratio = solve::between((low, at_low), (high, short), high * S::epsilon(), lacking);
+    let ratio = solve::between((low, at_low), (high, at_high), high * S::epsilon() * k(16.0), lacking);
     AirStream::new(*air, MassFlow::from_kilograms_per_second(flow / ratio))
 }

@@ -93,29 +93,44 @@ impl<S: Scalar> Inlet<S> {
         Ok(Self { entering: *entering, water, site, hot, water_to_air })
     }
 
-    /// The cold water between the limit and the hot, where the `excess` of a march from it with the given number vanishes.
-    ///
-    /// At the limit nothing happens, whatever the size; next to the hot water any tower does more than is asked.
+    /// The cold water, where the `excess` of a march from it with the given number vanishes.
     pub fn cold_water(&self, limit: S, number: S, resolution: S, excess: impl Fn(S, S) -> S) -> Result<S, Error> {
+        self.refuse_frost(limit, number, || {
+            let most = excess(self.freezing(), number);
+            // So large a tower would freeze the water, or one in between would.
+            (most > k(0.0)).then(|| {
+                solve::between((k(0.0), k(-1.0)), (number, most), resolution, |number| excess(self.freezing(), number))
+            })
+        })?;
+        Ok(self.search(limit, resolution, |cold| excess(cold, number)))
+    }
+
+    /// Between the limit, where nothing happens whatever the size, and the hot water, next to which any tower does more than is asked; not
+    /// below freezing.
+    pub fn search(&self, limit: S, resolution: S, excess: impl Fn(S) -> S) -> S {
         let (least, most) = (k::<S>(-1.0), k::<S>(1.0));
         if self.hot < limit {
-            return Ok(solve::between((self.hot, least), (limit, most), resolution, |cold| -excess(cold, number)));
+            return solve::between((self.hot, least), (limit, most), resolution, |cold| -excess(cold));
         }
-        let freezing = k::<S>(Quantity::WaterTemperature.limits().0);
+        solve::between((limit.at_least(self.freezing()), least), (self.hot, most), resolution, excess)
+    }
+
+    /// Refuses a number larger than the one with which the water leaves at freezing; `largest` finds that, if it is not larger anyway.
+    pub fn refuse_frost(&self, limit: S, number: S, largest: impl FnOnce() -> Option<S>) -> Result<(), Error> {
+        let freezing = self.freezing();
         if freezing <= limit {
-            return Ok(solve::between((limit, least), (self.hot, most), resolution, |cold| excess(cold, number)));
+            return Ok(());
         }
-        let lowest = if freezing < self.hot { excess(freezing, number) } else { most };
-        if lowest <= k(0.0) {
-            return Ok(solve::between((freezing, lowest), (self.hot, most), resolution, |cold| excess(cold, number)));
+        let largest = if freezing < self.hot { largest() } else { Some(k(0.0)) };
+        match largest {
+            Some(largest) if largest < number => Err(infeasible(Quantity::MerkelNumber, number, k(0.0), largest)),
+            _ => Ok(()),
         }
-        // So large a tower would freeze the water; the largest that would not.
-        let largest = if freezing < self.hot {
-            solve::between((k(0.0), least), (number, lowest), resolution, |number| excess(freezing, number))
-        } else {
-            k(0.0)
-        };
-        Err(infeasible(Quantity::MerkelNumber, number, k(0.0), largest))
+    }
+
+    /// The least temperature of water.
+    pub fn freezing(&self) -> S {
+        k(Quantity::WaterTemperature.limits().0)
     }
 }
 

@@ -8,8 +8,14 @@ use crate::checks::Random;
 use crate::process::tower::march::MARCH_STEPS;
 use crate::quantity::{Pressure, RelativeHumidity};
 use crate::real::k;
+use core::cell::Cell;
 use std::println;
 use std::vec::Vec;
+
+std::thread_local! {
+    /// Poppe's marches on this thread: all, and the most for one cold water.
+    pub(super) static MARCHES: Cell<(u32, u32)> = const { Cell::new((0, 0)) };
+}
 
 fn celsius<S: Scalar>(x: f64) -> Temperature<S> {
     Temperature::from_celsius(k(x))
@@ -61,6 +67,49 @@ fn march_steps_are_enough_and_none_is_idle() {
     assert!(poppe[0] < 5e-5 && poppe[1] > 5e-5, "too few steps, or stale");
 }
 
+/// The caps of the searches are never reached, from next to no water to twenty times the air.
+#[test]
+fn work_stays_below_the_caps() {
+    use crate::solve::{ITERATION_CAP, tests::MOST_EVALUATIONS};
+    let mut random = Random(6);
+    let (mut given, mut refused) = (0, 0);
+    MOST_EVALUATIONS.set(0);
+    for case in 0..600 {
+        let formulation = if case % 20 == 0 { Formulation::RealGas } else { Formulation::IdealGas };
+        let (entering, water, number) = cases(&mut random, formulation);
+        let ratio = if case % 2 == 0 { water.flow.kilograms_per_second() } else { 0.003 / random.between(2e-4, 1.0) };
+        let hot = if case % 3 == 0 { random.between(0.0, 95.0) } else { water.temperature.celsius() };
+        let water = HotWater { flow: flow(ratio), temperature: celsius(hot) };
+        let rated = poppe::rate(&entering, water, number, Transfer::Bosnjakovic);
+        let _ = merkel::rate(&entering, water, number);
+        let _ = effectiveness_ntu::rate(&entering, water, number);
+        match rated {
+            Ok(done) => {
+                given += 1;
+                let _ = merkel::pinch(&entering.air(), done.water.hot, done.water.cold);
+                if case % 5 == 0 {
+                    let _ = poppe::number(&entering, done.water, Transfer::Bosnjakovic);
+                }
+            }
+            Err(error) => {
+                refused += 1;
+                let Error::Infeasible { quantity, .. } = error else { panic!("{error:?}") };
+                let bound = matches!(quantity, Quantity::MerkelNumber | Quantity::WaterTemperature);
+                assert!(bound || ratio < 0.05, "{error:?} {entering:?} {water:?} {number}");
+            }
+        }
+    }
+    let ((marches, passes), most) = (MARCHES.get(), MOST_EVALUATIONS.get());
+    println!("{given} rated, {refused} refused; most evaluations of one search {most} of {ITERATION_CAP}");
+    println!(
+        "{} marches for each of Poppe's ratings, {passes} of {} at most for one cold water",
+        marches / (given + refused),
+        poppe::PASSES
+    );
+    assert!(most < ITERATION_CAP && passes < poppe::PASSES);
+    assert!(2 * passes > poppe::PASSES, "the cap is stale");
+}
+
 /// The most that a tower can be asked: still steady, and cold water between its limits.
 #[test]
 fn march_is_steady_at_the_ends_of_its_ranges() {
@@ -95,7 +144,7 @@ fn march_is_steady_at_the_ends_of_its_ranges() {
 #[test]
 fn quadratures_are_worth_what_they_say() {
     let mut random = Random(9);
-    let rules = [Quadrature::GaussLegendre, Quadrature::GaussLegendreInQuarters, Quadrature::FourPoint];
+    let rules = [Quadrature::GaussLegendre, Quadrature::GaussLegendreGraded, Quadrature::FourPoint];
     // All duties, and those of common cooling practice: range to 10 K, approach from 3 K.
     let mut off: [[Vec<f64>; 2]; 3] = Default::default();
     while off[0][0].len() < 422 {
@@ -105,7 +154,7 @@ fn quadratures_are_worth_what_they_say() {
         let entering = stream(wet_bulb, 1.0, 101_325.0, Formulation::IdealGas);
         let water =
             TowerWater { flow: flow(random.between(0.3, 2.2)), hot: celsius(cold + range), cold: celsius(cold) };
-        let Ok(first) = merkel::number(&entering, water, Quadrature::GaussLegendreInQuarters) else { continue };
+        let Ok(first) = merkel::number(&entering, water, Quadrature::GaussLegendreGraded) else { continue };
         if first.water_to_air > 0.9 * first.pinch.water_to_air {
             continue;
         }
