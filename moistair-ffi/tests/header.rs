@@ -85,6 +85,7 @@ fn rendered() -> String {
         "process/humidify",
         "process/mixing",
         "process/tower",
+        "process/tower_sizing",
         "process/compression",
         "signal",
         "account",
@@ -144,6 +145,11 @@ fn every_code_of_the_core_has_its_constant() {
 fn every_status_has_a_text() {
     let header = committed();
     let codes = header.lines().filter_map(|line| line.strip_prefix("#define MOISTAIR_")?.split_once(' '));
+    // Selectors of quantities reach beyond 100 too.
+    let is_quantity = |name: &str| {
+        Quantity::ALL.iter().any(|quantity| quantity.name().to_uppercase().replace([' ', '-'], "_") == name)
+    };
+    let codes = codes.filter(|(name, _)| !is_quantity(name));
     let codes: Vec<i32> = codes.filter_map(|(_, value)| value.parse().ok()).filter(|code| *code >= 100).collect();
     assert!(codes.len() > 15);
     let error = Error::Infeasible { quantity: Quantity::DewPoint, value: 0.0, min: 0.0, max: 0.0 };

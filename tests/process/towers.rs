@@ -26,9 +26,12 @@ macro_rules! feasible {
     };
 }
 
-/// Few of the real gas, whose states cost ten times as much.
+/// Few of the formulations whose states cost ten and a hundred times as much.
 fn sites() -> impl Strategy<Value = Basis> {
-    (60_000.0..110_000.0_f64, prop_oneof![4 => Just(Formulation::IdealGas), 1 => Just(Formulation::RealGas)])
+    let formulations = prop_oneof![
+        60 => Just(Formulation::IdealGas), 15 => Just(Formulation::RealGas), 1 => prop::sample::select(Formulation::ALL)
+    ];
+    (60_000.0..110_000.0_f64, formulations)
         .prop_map(|(pressure, formulation)| Basis::new(Pressure::from_pascals(pressure), formulation))
 }
 
@@ -359,14 +362,20 @@ fn liquid_entropy(t: f64, basis: Basis) -> f64 {
     of_vapor - (enthalpy - liquid) / (t + 273.15)
 }
 
-/// A tower makes entropy: on the real gas beyond rounding, on the ideal gas as far as its saturation agrees with its heats.
+/// A tower makes entropy, beyond rounding: on the real gas, whose saturation agrees with its heats.
 #[test]
 fn towers_make_entropy() {
-    let least = std::cell::Cell::new([f64::INFINITY; 2]);
+    let least = std::cell::Cell::new(f64::INFINITY);
     check(towers(), |(entering, water, number)| {
+        let air = entering.air();
+        let basis = Basis::real_gas(air.pressure());
+        let entering =
+            stream(at(air.dry_bulb().celsius(), air.relative_humidity().unwrap().fraction().min(1.0), basis), 1.0);
         let done = feasible!(poppe::rate(&entering, water, number, Transfer::Bosnjakovic));
-        let basis = entering.air().basis();
         let leaving = done.leaving.air();
+        if leaving.is_wet() && leaving.air().dry_bulb().celsius() < 0.0 {
+            return Err(TestCaseError::reject("no entropy for droplets below 0 °C here"));
+        }
         let entropy = |air: &MoistAir| air.specific_entropy().joules_per_kilogram_kelvin();
         let (m, e) = (water.flow.kilograms_per_second(), done.evaporation.kilograms_per_second());
         let droplets = leaving.liquid().kilograms_per_kilogram();
@@ -375,16 +384,11 @@ fn towers_make_entropy() {
         let into_air = entropy(&leaving.air()) + of_fog - entropy(&entering.air());
         let (s1, s2) = (liquid_entropy(done.water.hot.celsius(), basis), liquid_entropy(cold(done.water), basis));
         let made = into_air + (m - e) * s2 - m * s1;
-        let mut seen = least.get();
-        let slot = basis.formulation().code() as usize;
-        seen[slot] = seen[slot].min(made / (e.abs() + 1e-6));
-        least.set(seen);
-        // Hyland and Wexler's curve and constant heats leave up to 0.5 kJ/kg between the potentials of vapor and liquid.
-        let allowed = (e.abs() + 1e-6) * [1e-2, 2.0][slot];
-        prop_assert!(made > -allowed, "{made} W/K of {done:?}");
+        least.set(least.get().min(made / (e.abs() + 1e-6)));
+        prop_assert!(made > -1e-2 * (e.abs() + 1e-6), "{made} W/K of {done:?}");
         Ok(())
     });
-    println!("least entropy made, real and ideal gas: {:.3?} J/K per kilogram evaporated", least.get());
+    println!("least entropy made: {:.3} J/K per kilogram evaporated", least.get());
 }
 
 /// Cold water by a method.
@@ -469,8 +473,12 @@ fn limits() {
                 if 20.0 * (slope / 4_186.0 - m) > 8.0 {
                     prop_assert!(cold(endless.water) - limit.celsius() < 0.05, "{endless:?}");
                 } else if m * 4_186.0 > 1.5 * slope && cold(endless.water) - limit.celsius() > 0.1 {
-                    let pinch = merkel::pinch(&air, water.temperature, endless.water.cold).unwrap();
-                    prop_assert!((pinch.water_to_air / m - 1.0).abs() < 0.1, "{pinch:?} {m}");
+                    // Where the lines touch, the gap closes as the square of the number only.
+                    let gap = |number: f64| {
+                        let done = merkel::rate(&entering, water, number).unwrap();
+                        merkel::pinch(&air, water.temperature, done.water.cold).unwrap().water_to_air / m - 1.0
+                    };
+                    prop_assert!(gap(20.0) < 0.5 * gap(10.0) && gap(20.0) < 0.2, "{} {}", gap(10.0), gap(20.0));
                 }
             }
         }
@@ -522,7 +530,7 @@ fn freezing_is_refused_with_its_limit() {
 /// The same measured temperatures give a larger number by Poppe and a smaller by transfer units; the same number gives warmer water by Poppe.
 #[test]
 fn methods_beside_each_other() {
-    for formulation in BOTH {
+    for formulation in [Formulation::RealGas, Formulation::IdealGas] {
         let basis = sea_level(formulation);
         let air = MoistAir::from_dry_bulb(celsius(25.0), WetBulb::from_celsius(19.0), basis).unwrap();
         let entering = stream(air, 1.0);

@@ -11,6 +11,7 @@ pub mod reheat;
 pub mod sensible;
 pub mod stream;
 pub mod tower;
+pub mod tower_sizing;
 
 pub use coil::*;
 pub use compression::*;
@@ -20,6 +21,7 @@ pub use reheat::*;
 pub use sensible::*;
 pub use stream::*;
 pub use tower::*;
+pub use tower_sizing::*;
 
 use moistair_core::{HumidityRatio, MassFlow, SpecificEnthalpy, Temperature};
 

@@ -10,7 +10,7 @@ use crate::real::{Scalar, k};
 use crate::saturation::Surface;
 use crate::solve;
 use crate::state::condensate::condensed_enthalpy;
-use crate::state::property::{DEW_POINT_STEPS, dew_point};
+use crate::state::property::dew_point;
 
 /// Saturated air at the temperature of the water.
 #[derive(Clone, Copy, Debug)]
@@ -40,16 +40,16 @@ impl<S: Scalar> Site<S> {
         let (formulation, pressure) = (air.formulation(), air.pressure().pascals());
         let most = k::<S>(Quantity::HumidityRatio.limits().1);
         let full = with_mixture!(formulation, S, M => {
-            dew_point::<M<S>, S, DEW_POINT_STEPS>(<M<S> as Mixture<S>>::mole_fraction(most), pressure, Surface::Liquid)
+            dew_point::<M<S>, S>(<M<S> as Mixture<S>>::mole_fraction(most), pressure, Surface::Liquid)
         });
-        Self { formulation, pressure, warmest: full.at_most(k(Quantity::DryBulb.limits().1)) }
+        Self { formulation, pressure, warmest: full.at_most(k(formulation.limits(Quantity::DryBulb).1)) }
     }
 
     pub fn basis(&self) -> Basis<S> {
         Basis::new(Pressure::from_pascals(self.pressure), self.formulation)
     }
 
-    /// The warmest water: the film is a state below it, with a humidity ratio of 10 or 150 °C at it.
+    /// The warmest water: the film is a state below it, with a humidity ratio of 10 or the highest dry bulb at it.
     pub fn warmest(&self) -> S {
         self.warmest
     }
