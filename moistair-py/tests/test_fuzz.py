@@ -68,7 +68,7 @@ def arguments(function, rng, count):
             keywords[name] = streams(rng, count)
         elif name in state_names:
             keywords[name] = streams(rng, count).air
-        elif name in ("freezing", "formulation"):
+        elif name in ("freezing", "formulation", "quadrature", "transfer"):
             continue
         else:
             keywords[name] = odd_numbers(rng, count)
