@@ -337,7 +337,7 @@ def basin_after(
     >>> from moistair.process import tower
     >>> round(tower.basin_after(concentration=500.0, inventory=8000.0, duration=36_000.0, blowdown=0.0853, drift=0.03,
     ...                         make_up_flow=0.4613, make_up_concentration=500.0))
-    1108
+    1107
     """
     return run(
         "tower.basin_after",
