@@ -81,8 +81,18 @@ impl<S: Scalar> Basin<S> {
 /// (1 − e^−x) / x, by its series where the difference would cancel.
 pub(super) fn mean_decay<S: Scalar>(x: S) -> S {
     if x < k(0.125) {
-        let terms =
-            [1.0, -1.0 / 2.0, 1.0 / 6.0, -1.0 / 24.0, 1.0 / 120.0, -1.0 / 720.0, 1.0 / 5_040.0, -1.0 / 40_320.0];
+        let terms = [
+            1.0,
+            -1.0 / 2.0,
+            1.0 / 6.0,
+            -1.0 / 24.0,
+            1.0 / 120.0,
+            -1.0 / 720.0,
+            1.0 / 5_040.0,
+            -1.0 / 40_320.0,
+            1.0 / 362_880.0,
+            -1.0 / 3_628_800.0,
+        ];
         return polynomial(x, terms);
     }
     (k::<S>(1.0) - (-x).exp()) / x
