@@ -170,6 +170,24 @@ quantities! {
     PsychrometerWetBulb = 82, "psychrometer wet bulb", "°C", -40.0, 100.0;
     /// Coefficient of a psychrometer, over water that at 0 °C.
     PsychrometerCoefficient = 83, "psychrometer coefficient", "1/K", 3e-4, 2e-3;
+    /// Transfer units of a tower, K a V / L.
+    MerkelNumber = 96, "Merkel number", "1", 0.0, 20.0;
+    /// Water over dry air in a tower, L/G.
+    WaterToAirRatio = 97, "water-to-air ratio", "1", 0.001, 20.0;
+    /// Merkel number of a fill at a water-to-air ratio of one.
+    FillCoefficient = 98, "fill coefficient", "1", 1.0e-3, 20.0;
+    /// How the Merkel number of a fill falls with the water-to-air ratio.
+    FillExponent = 99, "fill exponent", "1", 0.0, 2.0;
+    /// Height of a fill.
+    FillHeight = 100, "fill height", "m", 0.0, 100.0;
+    /// Water in basin, pipes and plant together.
+    WaterInventory = 101, "water inventory", "kg", 1.0e-3, 1.0e9;
+    /// Of a dissolved salt; a conductivity serves as well.
+    Concentration = 102, "concentration", "mg/kg", 0.0, 1.0e6;
+    /// A span of time.
+    Duration = 103, "duration", "s", 0.0, 1.0e9;
+    /// Effectiveness of a tower as a heat exchanger of enthalpy.
+    EnthalpyEffectiveness = 104, "enthalpy effectiveness", "1", 0.0, 1.0;
     /// Temperature of a coolant other than water.
     CoolantTemperature = 106, "coolant temperature", "°C", -40.0, 200.0;
     /// Specific heat of a coolant other than water.

@@ -290,6 +290,32 @@
 
 // Conductance of the water side of a coil over that of its air side [1].
 #define MOISTAIR_CONDUCTANCE_RATIO 109
+// Transfer units of a tower, K a V / L [1].
+#define MOISTAIR_MERKEL_NUMBER 96
+
+// Water over dry air in a tower, L/G [1].
+#define MOISTAIR_WATER_TO_AIR_RATIO 97
+
+// Merkel number of a fill at a water-to-air ratio of one [1].
+#define MOISTAIR_FILL_COEFFICIENT 98
+
+// How the Merkel number of a fill falls with the water-to-air ratio [1].
+#define MOISTAIR_FILL_EXPONENT 99
+
+// Height of a fill [m].
+#define MOISTAIR_FILL_HEIGHT 100
+
+// Water in basin, pipes and plant together [kg].
+#define MOISTAIR_WATER_INVENTORY 101
+
+// Of a dissolved salt; a conductivity serves as well [mg/kg].
+#define MOISTAIR_CONCENTRATION 102
+
+// A span of time [s].
+#define MOISTAIR_DURATION 103
+
+// Effectiveness of a tower as a heat exchanger of enthalpy [1].
+#define MOISTAIR_ENTHALPY_EFFECTIVENESS 104
 
 // Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
 #define MOISTAIR_REAL_GAS 0
@@ -362,6 +388,30 @@
 
 // Most streams that one call takes.
 #define MOISTAIR_MOST_STREAMS 16
+
+// Merkel integral: eight points of Gauss and Legendre.
+#define MOISTAIR_QUADRATURE_GAUSS_LEGENDRE 0
+
+// Merkel integral: the same on seven parts of the range, for duties next to the limit or the pinch.
+#define MOISTAIR_QUADRATURE_GAUSS_LEGENDRE_GRADED 1
+
+// Merkel integral: the four-point rule of the trade, for comparison with contracts.
+#define MOISTAIR_QUADRATURE_FOUR_POINT 2
+
+// Poppe: Lewis factor of Bosnjakovic.
+#define MOISTAIR_TRANSFER_BOSNJAKOVIC 0
+
+// Poppe: Lewis factor one.
+#define MOISTAIR_TRANSFER_LEWIS_FACTOR_ONE 1
+
+// Poppe: evaporation left out of the balances, as Merkel does; a check of the methods, no tower.
+#define MOISTAIR_TRANSFER_EVAPORATION_SUPPRESSED 2
+
+// The air cools the water.
+#define MOISTAIR_TOWER_COOLING 0
+
+// The water enters colder than the limit that the air sets, and is warmed.
+#define MOISTAIR_TOWER_REVERSED 1
 
 // A temperature, °C.
 #define MOISTAIR_KIND_TEMPERATURE 1
@@ -886,6 +936,14 @@ typedef struct {
     int32_t reserved;
 } moistair_water_use;
 
+// Water in circulation and what is dissolved in it; the caller keeps it from step to step.
+typedef struct {
+    // Water in basin, pipes and plant together [kg], 0.001 to 1e9.
+    double inventory;
+    // Concentration [mg/kg, or any unit that the make-up's is in too], 0 to 1e6.
+    double concentration;
+} moistair_basin;
+
 // The water that a tower cools.
 typedef struct {
     // Flow that enters hot [kg/s].
@@ -913,6 +971,100 @@ typedef struct {
     // Range over range and approach [1]; NaN without either.
     double effectiveness;
 } moistair_tower_balance;
+
+// The least air that can do a duty.
+typedef struct {
+    // The greatest L/G [1]; 20 where nothing pinches.
+    double water_to_air;
+    // Water temperature where the enthalpies of air and film meet [°C].
+    double temperature;
+} moistair_pinch;
+
+// How much transfer a duty takes.
+typedef struct {
+    // Me = K a V / L [1].
+    double number;
+    // L/G, water over dry air [1].
+    double water_to_air;
+    // Where the driving force would vanish with less air.
+    moistair_pinch pinch;
+    // Heat that the water gives up [W].
+    double heat_rejected;
+    // Enthalpy of the leaving air [J/kg dry air].
+    double leaving_enthalpy;
+} moistair_merkel_number;
+
+// The water that enters a tower.
+typedef struct {
+    // Flow [kg/s].
+    double flow;
+    // Temperature [°C], 0 to 200.
+    double temperature;
+} moistair_hot_water;
+
+// What a tower does to the water.
+typedef struct {
+    // The water, with the temperature at which it leaves.
+    moistair_tower_water water;
+    // Heat that the water gives up [W]; negative where the tower is reversed.
+    double heat_rejected;
+    // Enthalpy of the leaving air [J/kg dry air].
+    double leaving_enthalpy;
+    // L/G, water over dry air [1].
+    double water_to_air;
+    // Hot less cold water temperature [K].
+    double range;
+    // Cold water over the wet bulb of the entering air [K].
+    double approach;
+    // Range over range and approach [1]; NaN without either.
+    double effectiveness;
+    // MOISTAIR_TOWER_COOLING or MOISTAIR_TOWER_REVERSED.
+    int32_t status;
+    // 0.
+    int32_t reserved;
+} moistair_tower_rating;
+
+// What a fill transfers: Me = coefficient (L/G)^-exponent.
+typedef struct {
+    // c [1], 0.001 to 20.
+    double coefficient;
+    // n [1], 0 to 2.
+    double exponent;
+} moistair_fill_law;
+
+// What a tower does to water and air, by Poppe's method.
+typedef struct {
+    // The air that leaves, with the droplets of its fog.
+    moistair_wet_stream leaving;
+    // Heat and water into the air.
+    moistair_exchange exchange;
+    // The water, with the temperature at which it leaves.
+    moistair_tower_water water;
+    // Water into the air [kg/s]; negative where vapor condenses on the water.
+    double evaporation;
+    // Heat that the water gives up [W]; negative where the tower is reversed.
+    double heat_rejected;
+    // L/G, water over dry air [1].
+    double water_to_air;
+    // Hot less cold water temperature [K].
+    double range;
+    // Cold water over the wet bulb of the entering air [K].
+    double approach;
+    // Range over range and approach [1]; NaN without either.
+    double effectiveness;
+    // MOISTAIR_TOWER_COOLING or MOISTAIR_TOWER_REVERSED.
+    int32_t status;
+    // 1 if the leaving air carries fog, else 0.
+    int32_t is_fogged;
+} moistair_poppe_rating;
+
+// One test of a fill.
+typedef struct {
+    // L/G, water over dry air [1].
+    double water_to_air;
+    // Merkel number found [1].
+    double number;
+} moistair_fill_test;
 
 // Air that was brought to another pressure and temperature.
 typedef struct {
@@ -1668,6 +1820,37 @@ int32_t moistair_tower_water_use(double evaporation,
                                  moistair_water_use *water,
                                  moistair_error *error);
 
+// Cycles of concentration as measured: circulating water over make-up, both in one unit.
+//
+// circulating, make_up: concentrations or conductivities, 0 to 1e6; cycles: output [1]; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (the circulating water is not the more concentrated).
+int32_t moistair_tower_cycles_of_concentration(double circulating,
+                                               double make_up,
+                                               double *cycles,
+                                               moistair_error *error);
+
+// Evaporation by the rule of thumb 0.00153 of the circulating flow for each kelvin of range (common practice, no source); the balances give
+// from 0.0012 to 0.0023.
+//
+// circulating: circulating water [kg/s], 0 to 1e6; range: [K], 0 to 200; evaporation: output [kg/s]; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_tower_evaporation_by_rule_of_thumb(double circulating,
+                                                    double range,
+                                                    double *evaporation,
+                                                    moistair_error *error);
+
+// A basin after a step with steady flows; exact, so that a step may be as long as the flows are steady.
+//
+// basin: as it was; seconds: 0 to 1e9; flows: of moistair_tower_water_use, or measured; make_up_concentration: in the unit of the basin's;
+// after: output, may be the same place as basin; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (the concentration would leave its range).
+int32_t moistair_tower_basin_after(const moistair_basin *basin,
+                                   double seconds,
+                                   const moistair_water_use *flows,
+                                   double make_up_concentration,
+                                   moistair_basin *after,
+                                   moistair_error *error);
+
 // Balance of a tower with a known air flow; the air is taken to leave saturated.
 //
 // entering: the air that enters; water: the water that is cooled; treatment: drift and concentration; balance: output; error: may be null.
@@ -1689,6 +1872,134 @@ int32_t moistair_tower_with_leaving_air(const moistair_state *entering,
                                         moistair_water_treatment treatment,
                                         moistair_tower_balance *balance,
                                         moistair_error *error);
+
+// L/G: the entering water over the dry air.
+//
+// entering: the air that enters; water_flow: [kg/s], 0 to 1e6; ratio: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207.
+int32_t moistair_tower_water_to_air(const moistair_stream *entering,
+                                    double water_flow,
+                                    double *ratio,
+                                    moistair_error *error);
+
+// The limit of cold water: where saturated air has the enthalpy of the entering air; a little below the wet bulb.
+//
+// entering: the state that enters; temperature: output [°C]; error: may be null.
+// Returns 0, 1xx, 2xx, 301.
+int32_t moistair_tower_coldest_water(const moistair_state *entering,
+                                     double *temperature,
+                                     moistair_error *error);
+
+// The greatest ratio of water to air with which a duty can be done at all; the least air is water flow / ratio.
+//
+// entering: the state that enters; hot, cold: water temperatures [°C]; pinch: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (cold water at or below its limit, or not below the hot).
+int32_t moistair_tower_merkel_pinch(const moistair_state *entering,
+                                    double hot,
+                                    double cold,
+                                    moistair_pinch *pinch,
+                                    moistair_error *error);
+
+// The Merkel number that a duty takes.
+//
+// entering: the air that enters; water: the water that is cooled; quadrature: MOISTAIR_QUADRATURE_...; needed: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301 (beyond the pinch, with the greatest L/G in the error; cold water at or below its limit).
+int32_t moistair_tower_merkel_number(const moistair_stream *entering,
+                                     moistair_tower_water water,
+                                     int32_t quadrature,
+                                     moistair_merkel_number *needed,
+                                     moistair_error *error);
+
+// The cold water of a tower of a given Merkel number.
+//
+// entering: the air that enters; water: the water that enters; number: Merkel number [1], 0 to 20; rating: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301 (the water would freeze, with the greatest number that does not freeze it in the error).
+int32_t moistair_tower_merkel_rate(const moistair_stream *entering,
+                                   moistair_hot_water water,
+                                   double number,
+                                   moistair_tower_rating *rating,
+                                   moistair_error *error);
+
+// The dry-air flow with which a fill does a duty.
+//
+// entering: the state that enters; water: the water that is cooled; fill: its law; stream: output, the air that it takes; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (the fill is too small with any air, or too large).
+int32_t moistair_tower_air_for_duty(const moistair_state *entering,
+                                    moistair_tower_water water,
+                                    moistair_fill_law fill,
+                                    moistair_stream *stream,
+                                    moistair_error *error);
+
+// The Merkel number that a duty takes, by effectiveness and transfer units.
+//
+// entering: the air that enters; water: the water that is cooled; number: output [1]; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301.
+int32_t moistair_tower_effectiveness_number(const moistair_stream *entering,
+                                            moistair_tower_water water,
+                                            double *number,
+                                            moistair_error *error);
+
+// The cold water of a tower of a given Merkel number, by effectiveness and transfer units.
+//
+// entering: the air that enters; water: the water that enters; number: Merkel number [1], 0 to 20; rating: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301 (the water would freeze, or enters below the limit of the air).
+int32_t moistair_tower_effectiveness_rate(const moistair_stream *entering,
+                                          moistair_hot_water water,
+                                          double number,
+                                          moistair_tower_rating *rating,
+                                          moistair_error *error);
+
+// The number that a duty takes, by Poppe's method.
+//
+// entering: the air that enters; water: the water that is cooled; transfer: MOISTAIR_TRANSFER_...; number: output [1]; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301.
+int32_t moistair_tower_poppe_number(const moistair_stream *entering,
+                                    moistair_tower_water water,
+                                    int32_t transfer,
+                                    double *number,
+                                    moistair_error *error);
+
+// Cold water, leaving air and evaporation of a tower of a given number, by Poppe's method.
+//
+// entering: the air that enters; water: the water that enters; number: found by the same method [1], 0 to 20; transfer: MOISTAIR_TRANSFER_...;
+// rating: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301 (the water would freeze, or all of it evaporate).
+int32_t moistair_tower_poppe_rate(const moistair_stream *entering,
+                                  moistair_hot_water water,
+                                  double number,
+                                  int32_t transfer,
+                                  moistair_poppe_rating *rating,
+                                  moistair_error *error);
+
+// The law of a fill through two tests.
+//
+// first, second: tests at different L/G; law: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (tests at one L/G, or an exponent outside 0 to 2).
+int32_t moistair_tower_fill_from_two_tests(moistair_fill_test first,
+                                           moistair_fill_test second,
+                                           moistair_fill_law *law,
+                                           moistair_error *error);
+
+// Merkel number of a fill at a ratio of water to air.
+//
+// fill: its law; water_to_air: L/G [1], 0.001 to 20; number: output [1]; error: may be null.
+// Returns 0, 1xx, 2xx, 301.
+int32_t moistair_tower_fill_number(moistair_fill_law fill,
+                                   double water_to_air,
+                                   double *number,
+                                   moistair_error *error);
+
+// The height that a Merkel number takes, of a fill tested at a height.
+//
+// fill: its law; number: wanted [1], 0 to 20; water_to_air: L/G [1], 0.001 to 20; tested_height: [m], 0 to 100; height: output [m];
+// error: may be null.
+// Returns 0, 1xx, 2xx, 301.
+int32_t moistair_tower_fill_height(moistair_fill_law fill,
+                                   double number,
+                                   double water_to_air,
+                                   double tested_height,
+                                   double *height,
+                                   moistair_error *error);
 
 // Brings air to a pressure and temperature, by whatever machine (compressor with aftercooler, dryer, expansion), and lets its water come to
 // equilibrium there; below the melting temperature what condenses is ice. Pressures are absolute. Vessels under pressure can burst, condensate

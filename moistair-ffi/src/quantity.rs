@@ -124,6 +124,24 @@ pub const MOISTAIR_LEAVING_ENTHALPY: i32 = 81;
 pub const MOISTAIR_PSYCHROMETER_WET_BULB: i32 = 82;
 /// Coefficient of a psychrometer, over water that at 0 °C [1/K].
 pub const MOISTAIR_PSYCHROMETER_COEFFICIENT: i32 = 83;
+/// Transfer units of a tower, K a V / L [1].
+pub const MOISTAIR_MERKEL_NUMBER: i32 = 96;
+/// Water over dry air in a tower, L/G [1].
+pub const MOISTAIR_WATER_TO_AIR_RATIO: i32 = 97;
+/// Merkel number of a fill at a water-to-air ratio of one [1].
+pub const MOISTAIR_FILL_COEFFICIENT: i32 = 98;
+/// How the Merkel number of a fill falls with the water-to-air ratio [1].
+pub const MOISTAIR_FILL_EXPONENT: i32 = 99;
+/// Height of a fill [m].
+pub const MOISTAIR_FILL_HEIGHT: i32 = 100;
+/// Water in basin, pipes and plant together [kg].
+pub const MOISTAIR_WATER_INVENTORY: i32 = 101;
+/// Of a dissolved salt; a conductivity serves as well [mg/kg].
+pub const MOISTAIR_CONCENTRATION: i32 = 102;
+/// A span of time [s].
+pub const MOISTAIR_DURATION: i32 = 103;
+/// Effectiveness of a tower as a heat exchanger of enthalpy [1].
+pub const MOISTAIR_ENTHALPY_EFFECTIVENESS: i32 = 104;
 /// Temperature of a coolant other than water [°C].
 pub const MOISTAIR_COOLANT_TEMPERATURE: i32 = 106;
 /// Specific heat of a coolant other than water [J/(kg K)].

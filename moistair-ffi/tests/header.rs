@@ -86,6 +86,7 @@ fn rendered() -> String {
         "process/humidify",
         "process/mixing",
         "process/tower",
+        "process/tower_sizing",
         "process/compression",
         "signal",
         "account",

@@ -74,6 +74,14 @@ words! {
     moistair_water_treatment, [], [], [];
     moistair_water_use, [4], [], [];
     moistair_tower_balance, [12, 21], [25], [0];
+    moistair_basin, [], [], [];
+    moistair_hot_water, [], [], [];
+    moistair_pinch, [], [], [];
+    moistair_merkel_number, [], [], [];
+    moistair_tower_rating, [9], [8], [];
+    moistair_poppe_rating, [12, 30], [29], [0];
+    moistair_fill_law, [], [], [];
+    moistair_fill_test, [], [], [];
     moistair_channel, [6, 7], [0, 1, 2, 3, 4, 5], [];
     moistair_channel_state, [0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11], [], [];
     moistair_checked, [1, 2], [0], [];
@@ -443,6 +451,14 @@ fn no_argument_upsets_an_export() {
 
     /// `run!(how name: |c, output, error| arguments…)`: one export by its name.
     macro_rules! run {
+        // A march takes as long as hundreds of states.
+        (march $name:ident: |$c:ident, $out:ident, $error:ident| $(let $before:pat = $value:expr;)* ($($argument:expr),*)) => {
+            exercise(&mut successes, stringify!($name), n / 50, caller, |$c, $out, $error| {
+                $(let $before = $value;)*
+                // SAFETY: pointers are valid, null or misaligned.
+                unsafe { $name($($argument),*) }
+            });
+        };
         ($how:ident $name:ident: |$c:ident, $out:ident, $error:ident| $(let $before:pat = $value:expr;)* ($($argument:expr),*)) => {
             $how(&mut successes, stringify!($name), n, caller, |$c, $out, $error| {
                 $(let $before = $value;)*
@@ -560,6 +576,36 @@ fn no_argument_upsets_an_export() {
         (c.pointer(&s), water(c), treatment(c), out, e));
     run!(exercise moistair_tower_with_leaving_air: |c, out, e| let entering = c.state(); let leaving = c.state();
         (c.pointer(&entering), c.pointer(&leaving), water(c), treatment(c), out, e));
+    run!(exercise moistair_tower_cycles_of_concentration: |c, out, e| (c.number(500.0, 3000.0), c.number(100.0, 500.0), out, e));
+    run!(exercise moistair_tower_evaporation_by_rule_of_thumb: |c, out, e| (c.number(0.0, 20.0), c.number(0.0, 20.0), out, e));
+    run!(exercise moistair_tower_basin_after: |c, out, e|
+        let basin = moistair_basin { inventory: c.number(1e3, 1e5), concentration: c.number(0.0, 3e3) };
+        let used = c.kept::<moistair_water_use>();
+        (c.pointer(&basin), c.number(0.0, 1e5), c.pointer(&used), c.number(0.0, 500.0), out, e));
+    let hot = |c: &Caller| moistair_hot_water { flow: c.number(0.1, 20.0), temperature: c.number(5.0, 50.0) };
+    let fill = |c: &Caller| moistair_fill_law { coefficient: c.number(0.5, 2.5), exponent: c.number(0.3, 0.9) };
+    let tested = |c: &Caller| moistair_fill_test { water_to_air: c.number(0.5, 2.0), number: c.number(0.5, 3.0) };
+    run!(exercise moistair_tower_water_to_air: |c, out, e| let s = c.stream(); (c.pointer(&s), c.number(0.1, 20.0), out, e));
+    run!(exercise moistair_tower_coldest_water: |c, out, e| let air = c.state(); (c.pointer(&air), out, e));
+    run!(exercise moistair_tower_merkel_pinch: |c, out, e| let air = c.state();
+        (c.pointer(&air), c.number(30.0, 45.0), c.number(22.0, 40.0), out, e));
+    run!(exercise moistair_tower_merkel_number: |c, out, e| let s = c.stream();
+        (c.pointer(&s), water(c), c.selector(3), out, e));
+    run!(march moistair_tower_merkel_rate: |c, out, e| let s = c.stream();
+        (c.pointer(&s), hot(c), c.number(0.0, 5.0), out, e));
+    run!(march moistair_tower_air_for_duty: |c, out, e| let air = c.state();
+        (c.pointer(&air), water(c), fill(c), out, e));
+    run!(exercise moistair_tower_effectiveness_number: |c, out, e| let s = c.stream(); (c.pointer(&s), water(c), out, e));
+    run!(exercise moistair_tower_effectiveness_rate: |c, out, e| let s = c.stream();
+        (c.pointer(&s), hot(c), c.number(0.0, 5.0), out, e));
+    run!(march moistair_tower_poppe_number: |c, out, e| let s = c.stream();
+        (c.pointer(&s), water(c), c.selector(3), out, e));
+    run!(march moistair_tower_poppe_rate: |c, out, e| let s = c.stream();
+        (c.pointer(&s), hot(c), c.number(0.0, 5.0), c.selector(3), out, e));
+    run!(exercise moistair_tower_fill_from_two_tests: |c, out, e| (tested(c), tested(c), out, e));
+    run!(exercise moistair_tower_fill_number: |c, out, e| (fill(c), c.number(0.1, 5.0), out, e));
+    run!(exercise moistair_tower_fill_height: |c, out, e|
+        (fill(c), c.number(0.0, 5.0), c.number(0.1, 5.0), c.number(0.1, 3.0), out, e));
     run!(exercise moistair_channel_new: |c, out, e|
         let (kind, unit) = if c.below(2) == 0 { (1, 1) } else { (c.selector(13), c.selector(30)) };
         (kind, unit, c.number(-50.0, 0.0), c.number(1.0, 60.0), out, e));

@@ -4,8 +4,9 @@ use moistair_core::columns::{Column, NAN};
 use moistair_core::process::{self, AirStream, Exchange, WetStream};
 use moistair_core::{
     AirWithCondensate, Basis, Bulb, Conductance, Density, Error, Formulation, Freezing, HeatFlow, HumidityRatio,
-    MassFlow, MoistAir as Air, Pressure, Psychrometer, PsychrometerReading, Quantity, RelativeHumidity,
-    SpecificEnthalpy, SpecificHeat, Temperature, VolumeFlow, liquid_water_enthalpy, saturation_temperature_after,
+    Length, MassFlow, MoistAir as Air, Pressure, Psychrometer, PsychrometerReading, Quantity, RelativeHumidity,
+    SpecificEnthalpy, SpecificHeat, Temperature, TemperatureDifference, VolumeFlow, liquid_water_enthalpy,
+    saturation_temperature_after,
 };
 use process::coil::{
     Apparatus, ApparatusDewPoints, Arrangement, CoilSurface, CoilWater, CondensateTemperature, Coolant, Cooling,
@@ -14,7 +15,11 @@ use process::coil::{
 use process::compression::Compressed;
 use process::humidify::{Absorption, EvaporatingWater, Humidified};
 use process::sensible::Sensible;
-use process::tower::{TowerBalance, TowerWater, WaterTreatment, WaterUse};
+use process::tower::basin::Basin;
+use process::tower::fill::{FillLaw, FillTest};
+use process::tower::merkel::{self, MerkelNumber, Pinch, Quadrature};
+use process::tower::poppe::{self, PoppeRating, Transfer};
+use process::tower::{HotWater, TowerBalance, TowerRating, TowerWater, WaterTreatment, WaterUse, effectiveness_ntu};
 use process::{books, coil, compression, humidify, mixing, reheat, sensible, tower};
 use pyo3::exceptions::PyTypeError;
 use pyo3::prelude::*;
@@ -210,6 +215,43 @@ impl Row<'_> {
         Ok(TowerWater { flow: self.mass_flow()?, hot: self.temperature()?, cold: self.temperature()? })
     }
 
+    fn hot_water(&mut self) -> Outcome<HotWater> {
+        Ok(HotWater { flow: self.mass_flow()?, temperature: self.temperature()? })
+    }
+
+    fn quadrature(&mut self) -> Outcome<Quadrature> {
+        match self.code()? {
+            0 => Ok(Quadrature::GaussLegendre),
+            1 => Ok(Quadrature::GaussLegendreGraded),
+            2 => Ok(Quadrature::FourPoint),
+            _ => Err(Failure::Arguments),
+        }
+    }
+
+    fn transfer(&mut self) -> Outcome<Transfer> {
+        match self.code()? {
+            0 => Ok(Transfer::Bosnjakovic),
+            1 => Ok(Transfer::LewisFactorOne),
+            2 => Ok(Transfer::EvaporationSuppressed),
+            _ => Err(Failure::Arguments),
+        }
+    }
+
+    fn fill(&mut self) -> Outcome<FillLaw> {
+        Ok(FillLaw::new(self.number()?, self.number()?)?)
+    }
+
+    fn fill_test(&mut self) -> Outcome<FillTest> {
+        Ok(FillTest { water_to_air: self.number()?, number: self.number()? })
+    }
+
+    /// The flows that a basin loses and gains.
+    fn basin_flows(&mut self) -> Outcome<WaterUse> {
+        let evaporation = MassFlow::from_kilograms_per_second(0.0);
+        let (blowdown, drift, make_up) = (self.mass_flow()?, self.mass_flow()?, self.mass_flow()?);
+        Ok(WaterUse { evaporation, drift, blowdown, make_up, limited_by_drift: false })
+    }
+
     fn water_treatment(&mut self) -> Outcome<WaterTreatment> {
         Ok(WaterTreatment { drift_fraction: self.number()?, cycles_of_concentration: self.number()? })
     }
@@ -305,6 +347,13 @@ emit_fields! {
     Humidified, |x| x.leaving, x.exchange, x.evaporated, x.carried;
     WaterUse, |x| x.evaporation, x.drift, x.blowdown, x.make_up, x.limited_by_drift;
     TowerBalance, |x| x.leaving, x.exchange, x.heat_rejected, x.water, x.range, x.approach, x.effectiveness();
+    Pinch, |x| x.water_to_air, x.temperature;
+    MerkelNumber, |x| x.number, x.water_to_air, x.pinch, x.heat_rejected, x.leaving_enthalpy;
+    TowerRating, |x| x.water.cold, x.heat_rejected, x.leaving_enthalpy, x.water_to_air, x.range, x.approach, x.effectiveness(),
+        f64::from(x.status as i32);
+    PoppeRating, |x| x.leaving, x.exchange, x.water.cold, x.evaporation, x.heat_rejected, x.water_to_air, x.range, x.approach,
+        x.effectiveness(), f64::from(x.status as i32), x.is_fogged();
+    FillLaw, |x| x.coefficient(), x.exponent();
     books::Books, |x| x.heat_residual, x.heat_scale, x.water_residual, x.water_scale, x.heat_resolution, x.close();
 }
 
@@ -420,6 +469,30 @@ processes! {
     "tower.with_air_flow", |r| tower::with_air_flow(&r.stream()?, r.tower_water()?, r.water_treatment()?)?;
     "tower.with_leaving_air", |r| {
         tower::with_leaving_air(&r.air()?, &r.air()?, r.tower_water()?, r.water_treatment()?)?
+    };
+    "tower.water_to_air_ratio", |r| tower::water_to_air_ratio(&r.stream()?, r.mass_flow()?)?;
+    "tower.coldest_water", |r| tower::coldest_water(&r.air()?)?;
+    "tower.merkel_pinch", |r| merkel::pinch(&r.air()?, r.temperature()?, r.temperature()?)?;
+    "tower.merkel_number", |r| merkel::number(&r.stream()?, r.tower_water()?, r.quadrature()?)?;
+    "tower.merkel_rate", |r| merkel::rate(&r.stream()?, r.hot_water()?, r.number()?)?;
+    "tower.air_for_duty", |r| merkel::air_for_duty(&r.air()?, r.tower_water()?, &r.fill()?)?;
+    "tower.effectiveness_number", |r| effectiveness_ntu::number(&r.stream()?, r.tower_water()?)?;
+    "tower.effectiveness_rate", |r| effectiveness_ntu::rate(&r.stream()?, r.hot_water()?, r.number()?)?;
+    "tower.poppe_number", |r| poppe::number(&r.stream()?, r.tower_water()?, r.transfer()?)?;
+    "tower.poppe_rate", |r| poppe::rate(&r.stream()?, r.hot_water()?, r.number()?, r.transfer()?)?;
+    "tower.fill_from_two_tests", |r| FillLaw::from_two_tests([r.fill_test()?, r.fill_test()?])?;
+    "tower.fill_number", |r| r.fill()?.number(r.number()?)?;
+    "tower.fill_height", |r| {
+        r.fill()?.height(r.number()?, r.number()?, Length::from_meters(r.number()?))?.meters()
+    };
+    "tower.cycles_of_concentration", |r| tower::cycles_of_concentration(r.number()?, r.number()?)?;
+    "tower.evaporation_by_rule_of_thumb", |r| {
+        tower::evaporation_by_rule_of_thumb(r.mass_flow()?, TemperatureDifference::from_kelvins(r.number()?))?
+    };
+    "tower.basin_after", |r| {
+        let (concentration, inventory, seconds) = (r.number()?, r.number()?, r.number()?);
+        let flows = r.basin_flows()?;
+        Basin::new(inventory, concentration)?.after(seconds, &flows, r.number()?)?.concentration()
     };
     "books.balance", |r| {
         let (exchange, leaving) = (r.exchange()?, r.wet_stream()?);

@@ -69,7 +69,7 @@ def arguments(function, rng, count):
             keywords[name] = streams(rng, count)
         elif name in state_names:
             keywords[name] = streams(rng, count).air
-        elif name in ("freezing", "formulation", "arrangement", "measured"):
+        elif name in ("freezing", "formulation", "arrangement", "measured", "quadrature", "transfer"):
             continue
         elif name == "rows":
             keywords[name] = 3

@@ -123,6 +123,43 @@ CASES = {
     "tower.with_leaving_air": lambda t, rh, x: tower.with_leaving_air(
         state(t, rh), leaving=state(45.0, 1.0), water_flow=10.0 + x, **WATER
     ),
+    "tower.water_to_air_ratio": lambda t, rh, x: tower.water_to_air_ratio(stream(t, rh, 10.0), water_flow=10.0 + x),
+    "tower.coldest_water": lambda t, rh, x: tower.coldest_water(state(t, rh + 0.1 * x)),
+    "tower.merkel_pinch": lambda t, rh, x: tower.merkel_pinch(state(t, rh), hot_water=40.0 + x, cold_water=33.0),
+    "tower.merkel_number": lambda t, rh, x: tower.merkel_number(
+        stream(t, rh, 12.0), water_flow=10.0 + x, hot_water=40.0, cold_water=33.0, quadrature="four_point"
+    ),
+    "tower.merkel_rate": lambda t, rh, x: tower.merkel_rate(stream(t, rh, 10.0), water_flow=10.0, hot_water=38.0, number=2 * x),
+    "tower.air_for_duty": lambda t, rh, x: tower.air_for_duty(
+        state(t, rh), water_flow=10.0 + x, hot_water=40.0, cold_water=33.0, coefficient=1.6, exponent=0.6
+    ),
+    "tower.effectiveness_number": lambda t, rh, x: tower.effectiveness_number(
+        stream(t, rh, 12.0), water_flow=10.0 + x, hot_water=40.0, cold_water=33.0
+    ),
+    "tower.effectiveness_rate": lambda t, rh, x: tower.effectiveness_rate(
+        stream(t, rh, 10.0), water_flow=10.0, hot_water=38.0, number=2 * x
+    ),
+    "tower.poppe_number": lambda t, rh, x: tower.poppe_number(
+        stream(t, rh, 12.0), water_flow=10.0 + x, hot_water=40.0, cold_water=33.0, transfer="lewis_factor_one"
+    ),
+    "tower.poppe_rate": lambda t, rh, x: tower.poppe_rate(stream(t, rh, 6.0), water_flow=10.0, hot_water=38.0, number=2 * x),
+    "tower.fill_from_two_tests": lambda t, rh, x: tower.fill_from_two_tests(
+        first_water_to_air=0.8, first_number=1.9 + x, second_water_to_air=1.6, second_number=1.25 + 0 * (t + rh)
+    ),
+    "tower.fill_number": lambda t, rh, x: tower.fill_number(coefficient=1.5 + 0 * t, exponent=rh, water_to_air=0.5 + x),
+    "tower.fill_height": lambda t, rh, x: tower.fill_height(
+        coefficient=1.5 + 0 * t, exponent=rh, number=1.0, water_to_air=0.5 + x, tested_height=1.2
+    ),
+    "tower.cycles_of_concentration": lambda t, rh, x: tower.cycles_of_concentration(
+        circulating=1e3 * (1.0 + x), make_up=500.0 + 0 * (t + rh)
+    ),
+    "tower.evaporation_by_rule_of_thumb": lambda t, rh, x: tower.evaporation_by_rule_of_thumb(
+        circulating_flow=10.0 + x, water_range=5.0 + 0 * (t + rh)
+    ),
+    "tower.basin_after": lambda t, rh, x: tower.basin_after(
+        concentration=500.0 + t + rh, inventory=8e3, duration=3600.0 * x, blowdown=0.09, drift=0.03, make_up_flow=0.46,
+        make_up_concentration=500.0,
+    ),
     "books.balance": lambda t, rh, x: books.balance(
         [stream(t, rh, 1.0 + x)],
         leaving=sensible.with_heat(stream(t, rh, 1.0 + x), heat=1e3).leaving,
@@ -159,7 +196,7 @@ def test_rows_are_scalar_calls_bit_for_bit(name):
             continue
         assert one.keys() == many.keys()
         for path, value in one.items():
-            assert isinstance(value, (float, bool, coil.CoilRegime)), path
+            assert isinstance(value, (float, bool, coil.CoilRegime, tower.TowerDirection)), path
             assert np.shape(many[path]) == (ROWS,)
             assert same_bits(float(many[path][row]), float(value)), (path, row)
             compared += 1

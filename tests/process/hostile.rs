@@ -7,7 +7,11 @@ use moistair_core::process::coil::{
 };
 use moistair_core::process::compression;
 use moistair_core::process::humidify::{self, Absorption, EvaporatingWater};
-use moistair_core::process::tower::{self, TowerWater, WaterTreatment};
+use moistair_core::process::tower::basin::Basin;
+use moistair_core::process::tower::fill::{FillLaw, FillTest};
+use moistair_core::process::tower::merkel::{self, Quadrature};
+use moistair_core::process::tower::poppe::{self, Transfer};
+use moistair_core::process::tower::{self, HotWater, TowerWater, WaterTreatment, WaterUse, effectiveness_ntu};
 use moistair_core::process::{AirStream, Exchange, WetStream, mixing, reheat, sensible};
 use moistair_core::*;
 use std::collections::BTreeMap;
@@ -303,6 +307,63 @@ fn no_argument_breaks_a_process() {
             ]);
         };
         seen.take("tower with air flow", tower::with_air_flow(&entering, water, treatment), cooled);
+        let hot = HotWater { flow: flow(x()), temperature: celsius(x()) };
+        let rated = |done: &tower::TowerRating| {
+            finite(&[
+                done.water.cold.celsius(),
+                done.heat_rejected.watts(),
+                done.leaving_enthalpy.joules_per_kilogram(),
+                done.approach.kelvins(),
+            ]);
+        };
+        let transfer = [Transfer::Bosnjakovic, Transfer::LewisFactorOne, Transfer::EvaporationSuppressed];
+        let transfer = transfer[(x().to_bits() % 3) as usize];
+        let rule = [Quadrature::GaussLegendre, Quadrature::GaussLegendreGraded, Quadrature::FourPoint];
+        let rule = rule[(x().to_bits() % 3) as usize];
+        seen.take("Merkel rating", merkel::rate(&entering, hot, x()), rated);
+        seen.take("transfer units rating", effectiveness_ntu::rate(&entering, hot, x()), rated);
+        seen.take("Poppe rating", poppe::rate(&entering, hot, x(), transfer), |done| {
+            outlet(&done.leaving, &done.exchange);
+            finite(&[done.water.cold.celsius(), done.heat_rejected.watts(), done.approach.kelvins()]);
+        });
+        let number = |number: &f64| assert!((0.0..=20.0).contains(number), "{number}");
+        seen.take("Merkel sizing", merkel::number(&entering, water, rule), |done| {
+            number(&done.number);
+            finite(&[done.pinch.water_to_air, done.leaving_enthalpy.joules_per_kilogram()]);
+        });
+        seen.take("transfer units sizing", effectiveness_ntu::number(&entering, water), number);
+        seen.take("Poppe sizing", poppe::number(&entering, water, transfer), number);
+        seen.take("pinch", merkel::pinch(&first, water.hot, water.cold), |pinch| {
+            finite(&[pinch.water_to_air, pinch.temperature.celsius()]);
+        });
+        seen.take("limit of cold water", tower::coldest_water(&first), |t| finite(&[t.celsius()]));
+        let law = FillLaw::new(x(), x());
+        seen.take("fill law", law, |law| finite(&[law.coefficient(), law.exponent()]));
+        let mut near = || if x() < 1.0 { x() } else { 1.5 };
+        let tests = [(); 2].map(|()| FillTest { water_to_air: near(), number: near() });
+        seen.take("fill law from tests", FillLaw::from_two_tests(tests), |law| finite(&[law.coefficient()]));
+        let law = law.unwrap_or(FillLaw::new(1.5, 0.6).unwrap());
+        seen.take("number of a fill", law.number(x()), number);
+        seen.take("height of a fill", law.height(x(), x(), Length::from_meters(x())), |z| finite(&[z.meters()]));
+        seen.take("air for a duty", merkel::air_for_duty(&first, water, &law), |air| {
+            finite(&[air.dry_air_flow().kilograms_per_second()]);
+        });
+        seen.take("cycles of concentration", tower::cycles_of_concentration(x(), x()), |cycles| finite(&[*cycles]));
+        let range = TemperatureDifference::from_kelvins(x());
+        seen.take("evaporation by rule of thumb", tower::evaporation_by_rule_of_thumb(flow(x()), range), |e| {
+            finite(&[e.kilograms_per_second()]);
+        });
+        let flows = WaterUse {
+            evaporation: flow(x()),
+            drift: flow(x()),
+            blowdown: flow(x()),
+            make_up: flow(x()),
+            limited_by_drift: false,
+        };
+        let basin = Basin::new(x(), x());
+        seen.take("basin", basin, |basin| finite(&[basin.concentration()]));
+        let basin = basin.unwrap_or(Basin::new(1e4, 500.0).unwrap());
+        seen.take("basin later", basin.after(x(), &flows, x()), |basin| finite(&[basin.concentration()]));
         seen.take("tower with leaving air", tower::with_leaving_air(&first, &second, water, treatment), cooled);
     }
     for (process, (given, errors)) in &seen.0 {

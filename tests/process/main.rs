@@ -13,4 +13,5 @@ mod facts;
 mod hostile;
 mod laws;
 mod support;
+mod towers;
 mod worked_examples;

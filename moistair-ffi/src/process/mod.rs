@@ -11,6 +11,7 @@ pub mod reheat;
 pub mod sensible;
 pub mod stream;
 pub mod tower;
+pub mod tower_sizing;
 pub mod water_coil;
 
 pub use coil::*;
@@ -21,6 +22,7 @@ pub use reheat::*;
 pub use sensible::*;
 pub use stream::*;
 pub use tower::*;
+pub use tower_sizing::*;
 pub use water_coil::*;
 
 use moistair_core::{HumidityRatio, MassFlow, SpecificEnthalpy, Temperature};

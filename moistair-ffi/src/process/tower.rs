@@ -1,6 +1,8 @@
 //! Wet cooling towers.
 
+use moistair_core::TemperatureDifference;
 use moistair_core::columns::NAN;
+use moistair_core::process::tower::basin::Basin;
 use moistair_core::process::tower::{self, TowerBalance, TowerWater, WaterTreatment, WaterUse};
 
 use super::stream::{moistair_exchange, moistair_stream};
@@ -47,6 +49,16 @@ pub struct moistair_water_use {
     pub limited_by_drift: i32,
     /// 0.
     pub reserved: i32,
+}
+
+/// Water in circulation and what is dissolved in it; the caller keeps it from step to step.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_basin {
+    /// Water in basin, pipes and plant together [kg], 0.001 to 1e9.
+    pub inventory: f64,
+    /// Concentration [mg/kg, or any unit that the make-up's is in too], 0 to 1e6.
+    pub concentration: f64,
 }
 
 /// The overall balance of a cooling tower.
@@ -96,8 +108,33 @@ impl From<TowerBalance> for moistair_tower_balance {
     }
 }
 
+impl From<TowerWater> for moistair_tower_water {
+    fn from(water: TowerWater) -> Self {
+        let TowerWater { flow, hot, cold } = water;
+        Self { flow: flow.kilograms_per_second(), hot: hot.celsius(), cold: cold.celsius() }
+    }
+}
+
+impl From<Basin> for moistair_basin {
+    fn from(basin: Basin) -> Self {
+        Self { inventory: basin.inventory(), concentration: basin.concentration() }
+    }
+}
+
+impl moistair_water_use {
+    fn to_core(self) -> WaterUse {
+        WaterUse {
+            evaporation: mass_flow(self.evaporation),
+            drift: mass_flow(self.drift),
+            blowdown: mass_flow(self.blowdown),
+            make_up: mass_flow(self.make_up),
+            limited_by_drift: self.limited_by_drift != 0,
+        }
+    }
+}
+
 impl moistair_tower_water {
-    fn to_core(self) -> TowerWater {
+    pub(super) fn to_core(self) -> TowerWater {
         TowerWater { flow: mass_flow(self.flow), hot: celsius(self.hot), cold: celsius(self.cold) }
     }
 }
@@ -106,6 +143,18 @@ impl moistair_water_treatment {
     fn to_core(self) -> WaterTreatment {
         let Self { drift_fraction, cycles_of_concentration } = self;
         WaterTreatment { drift_fraction, cycles_of_concentration }
+    }
+}
+
+impl Answer for moistair_tower_water {
+    fn is_finite(&self) -> bool {
+        finite([self.flow, self.hot, self.cold])
+    }
+}
+
+impl Answer for moistair_basin {
+    fn is_finite(&self) -> bool {
+        finite([self.inventory, self.concentration])
     }
 }
 
@@ -138,6 +187,65 @@ pub unsafe extern "C" fn moistair_tower_water_use(
     let call = || Ok(tower::water_use(mass_flow(evaporation), mass_flow(circulating), treatment.to_core())?.into());
     // SAFETY: the caller's pointers.
     unsafe { answer(water, error, call) }
+}
+
+/// Cycles of concentration as measured: circulating water over make-up, both in one unit.
+///
+/// circulating, make_up: concentrations or conductivities, 0 to 1e6; cycles: output [1]; error: may be null.
+/// Returns 0, 1xx, 2xx, 301 (the circulating water is not the more concentrated).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_tower_cycles_of_concentration(
+    circulating: f64,
+    make_up: f64,
+    cycles: *mut f64,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || Ok(tower::cycles_of_concentration(circulating, make_up)?);
+    // SAFETY: the caller's pointers.
+    unsafe { answer(cycles, error, call) }
+}
+
+/// Evaporation by the rule of thumb 0.00153 of the circulating flow for each kelvin of range (common practice, no source); the balances give
+/// from 0.0012 to 0.0023.
+///
+/// circulating: circulating water [kg/s], 0 to 1e6; range: [K], 0 to 200; evaporation: output [kg/s]; error: may be null.
+/// Returns 0, 1xx, 2xx.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_tower_evaporation_by_rule_of_thumb(
+    circulating: f64,
+    range: f64,
+    evaporation: *mut f64,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        let range = TemperatureDifference::from_kelvins(range);
+        Ok(tower::evaporation_by_rule_of_thumb(mass_flow(circulating), range)?.kilograms_per_second())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(evaporation, error, call) }
+}
+
+/// A basin after a step with steady flows; exact, so that a step may be as long as the flows are steady.
+///
+/// basin: as it was; seconds: 0 to 1e9; flows: of moistair_tower_water_use, or measured; make_up_concentration: in the unit of the basin's;
+/// after: output, may be the same place as basin; error: may be null.
+/// Returns 0, 1xx, 2xx, 301 (the concentration would leave its range).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_tower_basin_after(
+    basin: *const moistair_basin,
+    seconds: f64,
+    flows: *const moistair_water_use,
+    make_up_concentration: f64,
+    after: *mut moistair_basin,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        // SAFETY: the caller's pointers.
+        let (basin, flows) = (unsafe { read(basin) }?, unsafe { read(flows) }?.to_core());
+        Ok(Basin::new(basin.inventory, basin.concentration)?.after(seconds, &flows, make_up_concentration)?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(after, error, call) }
 }
 
 /// Balance of a tower with a known air flow; the air is taken to leave saturated.
@@ -185,5 +293,6 @@ pub unsafe extern "C" fn moistair_tower_with_leaving_air(
 
 const _: () = {
     assert!(size_of::<moistair_tower_water>() == 24 && size_of::<moistair_water_treatment>() == 16);
+    assert!(size_of::<moistair_basin>() == 16);
     assert!(size_of::<moistair_water_use>() == 40 && size_of::<moistair_tower_balance>() == 208);
 };

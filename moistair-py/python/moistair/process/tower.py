@@ -1,7 +1,11 @@
-"""Wet cooling towers: the overall balance of heat and water, and the use of water.
+"""Wet cooling towers: the overall balance of heat and water, how large a duty takes, what a tower does, the use of water.
 
-Towers spread Legionella if they are not treated, cleaned and fitted with drift eliminators: national hygiene rules and
-licensed practice govern. Not modeled: natural draft, by-pass, freezing basins.
+Merkel's method (`merkel_number`, `merkel_rate`) is the basis of contracts; Poppe's (`poppe_rate`) gives evaporation and the
+leaving air, fog included. A size found by one method is used with the same method.
+
+Towers spread Legionella if they are not treated, cleaned and fitted with drift eliminators; basins and fills freeze in winter
+before the mean cold water does: national hygiene rules, local codes and licensed practice govern. Not modeled: crossflow,
+natural draft, by-pass, ice.
 """
 
 from __future__ import annotations
@@ -15,8 +19,60 @@ from numpy.typing import ArrayLike, NDArray
 from .._core import MoistAir
 from .._rows import Array, Record, T, expect, run
 from ._streams import AirStream, Exchange
+from ._tower_sizing import (
+    FillLaw,
+    MerkelNumber,
+    Pinch,
+    PoppeRating,
+    TowerDirection,
+    TowerRating,
+    air_for_duty,
+    basin_after,
+    coldest_water,
+    cycles_of_concentration,
+    effectiveness_number,
+    effectiveness_rate,
+    evaporation_by_rule_of_thumb,
+    fill_from_two_tests,
+    fill_height,
+    fill_number,
+    merkel_number,
+    merkel_pinch,
+    merkel_rate,
+    poppe_number,
+    poppe_rate,
+    water_to_air_ratio,
+)
 
-__all__ = ["TowerBalance", "WaterUse", "water_use", "with_air_flow", "with_leaving_air"]
+__all__ = [
+    "FillLaw",
+    "MerkelNumber",
+    "Pinch",
+    "PoppeRating",
+    "TowerBalance",
+    "TowerDirection",
+    "TowerRating",
+    "WaterUse",
+    "air_for_duty",
+    "basin_after",
+    "coldest_water",
+    "cycles_of_concentration",
+    "effectiveness_number",
+    "effectiveness_rate",
+    "evaporation_by_rule_of_thumb",
+    "fill_from_two_tests",
+    "fill_height",
+    "fill_number",
+    "merkel_number",
+    "merkel_pinch",
+    "merkel_rate",
+    "poppe_number",
+    "poppe_rate",
+    "water_to_air_ratio",
+    "water_use",
+    "with_air_flow",
+    "with_leaving_air",
+]
 
 
 @dataclass(frozen=True, eq=False, init=False)

@@ -1,12 +1,11 @@
-//! Wet cooling towers: the overall balance of heat and water, and the use of water.
+//! The overall balance of heat and water.
 //!
 //! Water enters hot at t₁ and leaves cold at t₂; ṁ_w (h_w1 − h_w2) = ṁ_a ((h₂ − h₁) − (W₂ − W₁) h_w2): what evaporates is taken
-//! out of the cold end, and drift leaves with the enthalpy of the cold water.
-//!
-//! Towers spread *Legionella* if they are not treated, cleaned and fitted with drift eliminators: national hygiene rules and licensed
-//! practice govern. Not modeled: natural draft, by-pass, freezing basins.
+//! out of the cold end, and drift leaves with the enthalpy of the cold water. Nothing is said of how large the tower must be.
 
-use super::{AirStream, Exchange, WetStream, infeasible, parts};
+use super::rating::effectiveness;
+use super::water_use::{WaterTreatment, WaterUse, water_use};
+use super::{AirStream, Exchange, TowerWater, WetStream, infeasible, parts, same_formulation};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
@@ -18,26 +17,6 @@ use crate::solve;
 use crate::state::MoistAir;
 use crate::state::condensate::condensed_enthalpy;
 use crate::state::property::saturates;
-
-/// The water that a tower cools.
-#[derive(Clone, Copy, Debug, PartialEq)]
-pub struct TowerWater<S = f64> {
-    /// Flow that enters hot.
-    pub flow: MassFlow<S>,
-    /// Temperature of the hot water.
-    pub hot: Temperature<S>,
-    /// Temperature of the cold water.
-    pub cold: Temperature<S>,
-}
-
-/// How a tower loses and renews water besides evaporation.
-#[derive(Clone, Copy, Debug, PartialEq)]
-pub struct WaterTreatment<S = f64> {
-    /// Drift over the circulating flow. With eliminators 0.000 05 to 0.0002, without up to 0.003 (common practice, no source).
-    pub drift_fraction: S,
-    /// Concentration of the circulating water over that of the make-up, above one.
-    pub cycles_of_concentration: S,
-}
 
 /// The overall balance of a tower.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -61,66 +40,8 @@ impl<S: Scalar> TowerBalance<S> {
     /// Range over range and approach; `None` without either.
     #[must_use]
     pub fn effectiveness(&self) -> Option<S> {
-        let whole = self.range.kelvins() + self.approach.kelvins();
-        (whole != k(0.0)).then(|| self.range.kelvins() / whole)
+        effectiveness(self.range, self.approach)
     }
-}
-
-/// Evaporation, drift, blowdown and what makes up for them. All positive.
-#[derive(Clone, Copy, Debug, PartialEq)]
-#[must_use]
-pub struct WaterUse<S = f64> {
-    /// Evaporation E.
-    pub evaporation: MassFlow<S>,
-    /// Drift D.
-    pub drift: MassFlow<S>,
-    /// Blowdown B = E / (C − 1) − D, not below zero.
-    pub blowdown: MassFlow<S>,
-    /// Make-up M = E + D + B.
-    pub make_up: MassFlow<S>,
-    /// Drift alone already keeps the concentration below the one wanted: no blowdown is needed.
-    pub limited_by_drift: bool,
-}
-
-/// Water use for an evaporation, a circulating flow and the treatment; also for humidifiers with bleed.
-///
-/// # Errors
-/// [`Error::OutOfRange`], [`Error::NotFinite`]; [`Error::Infeasible`] at one cycle of concentration, which takes endless blowdown.
-///
-/// ```
-/// use moistair_core::MassFlow;
-/// use moistair_core::process::tower::{WaterTreatment, water_use};
-/// let flow = MassFlow::<f64>::from_kilograms_per_second;
-/// let treatment = WaterTreatment { drift_fraction: 0.002, cycles_of_concentration: 4.0 };
-/// let used = water_use(flow(0.346), flow(15.0), treatment)?;
-/// assert!((used.make_up.kilograms_per_second() - 0.4613).abs() < 1e-4);
-/// assert!(water_use(flow(0.346), flow(15.0), WaterTreatment { cycles_of_concentration: 1.0, ..treatment }).is_err());
-/// # Ok::<(), moistair_core::Error>(())
-/// ```
-pub fn water_use<S: Scalar>(
-    evaporation: MassFlow<S>,
-    circulating: MassFlow<S>,
-    treatment: WaterTreatment<S>,
-) -> Result<WaterUse<S>, Error> {
-    let evaporation = checked(Quantity::WaterFlow, evaporation.kilograms_per_second())?;
-    let circulating = checked(Quantity::WaterFlow, circulating.kilograms_per_second())?;
-    let fraction = checked(Quantity::DriftFraction, treatment.drift_fraction)?;
-    let cycles = checked(Quantity::CyclesOfConcentration, treatment.cycles_of_concentration)?;
-    if cycles <= k(1.0) {
-        let (_, max) = Quantity::CyclesOfConcentration.limits();
-        return Err(Error::Infeasible { quantity: Quantity::CyclesOfConcentration, value: 1.0, min: 1.0, max });
-    }
-    let drift = circulating * fraction;
-    let wanted = evaporation / (cycles - k(1.0)) - drift;
-    let blowdown = wanted.at_least(k(0.0));
-    let flow = MassFlow::from_kilograms_per_second;
-    Ok(WaterUse {
-        evaporation: flow(evaporation),
-        drift: flow(drift),
-        blowdown: flow(blowdown),
-        make_up: flow(evaporation + drift + blowdown),
-        limited_by_drift: wanted < k(0.0),
-    })
 }
 
 /// Balance with a known air flow: the air is taken to leave saturated, which over-predicts evaporation where it does
@@ -209,7 +130,7 @@ pub fn with_leaving_air<S: Scalar>(
     water: TowerWater<S>,
     treatment: WaterTreatment<S>,
 ) -> Result<TowerBalance<S>, Error> {
-    super::same_formulation(entering, leaving)?;
+    same_formulation(entering, leaving)?;
     let side = WaterSide::new(entering, water)?;
     let ((h1, w1), (h2, w2)) = (parts(entering), parts(leaving));
     let gain = (h2 - h1) - (w2 - w1) * side.cold;
