@@ -279,17 +279,6 @@
 // Coefficient of a psychrometer, over water that at 0 °C [1/K].
 #define MOISTAIR_PSYCHROMETER_COEFFICIENT 83
 
-// Temperature of a coolant other than water [°C].
-#define MOISTAIR_COOLANT_TEMPERATURE 106
-
-// Specific heat of a coolant other than water [J/(kg K)].
-#define MOISTAIR_COOLANT_SPECIFIC_HEAT 107
-
-// Thermal conductance of a coil: heat flow per difference of temperature [W/K].
-#define MOISTAIR_CONDUCTANCE 108
-
-// Conductance of the water side of a coil over that of its air side [1].
-#define MOISTAIR_CONDUCTANCE_RATIO 109
 // Transfer units of a tower, K a V / L [1].
 #define MOISTAIR_MERKEL_NUMBER 96
 
@@ -316,6 +305,18 @@
 
 // Effectiveness of a tower as a heat exchanger of enthalpy [1].
 #define MOISTAIR_ENTHALPY_EFFECTIVENESS 104
+
+// Temperature of a coolant other than water [°C].
+#define MOISTAIR_COOLANT_TEMPERATURE 106
+
+// Specific heat of a coolant other than water [J/(kg K)].
+#define MOISTAIR_COOLANT_SPECIFIC_HEAT 107
+
+// Thermal conductance of a coil: heat flow per difference of temperature [W/K].
+#define MOISTAIR_CONDUCTANCE 108
+
+// Conductance of the water side of a coil over that of its air side [1].
+#define MOISTAIR_CONDUCTANCE_RATIO 109
 
 // Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
 #define MOISTAIR_REAL_GAS 0
