@@ -252,7 +252,7 @@ def test_other_pressures():
     there = after(frost_point=-40.0, pressure=800e3, wanted="frost_point", new_pressure=100e3)
     assert after(frost_point=there, pressure=100e3, wanted="frost_point", new_pressure=800e3) == pytest.approx(-40.0, abs=1e-9)
     with pytest.raises(TypeError, match="exactly one"):
-        after(dew_point=1.0, frost_point=0.0, pressure=800e3, new_pressure=100e3)
+        after(dew_point=1.0, frost_point=0.0, pressure=800e3, wanted="dew_point", new_pressure=100e3)
     with pytest.raises(moistair.NoValueError):
         after(dew_point=3.0, pressure=1.1e6, wanted="dew_point", new_pressure=20e3)
 
