@@ -47,10 +47,10 @@ __all__ = [
 ]
 
 #: How the Merkel integral is evaluated; "four_point" is the rule of the trade, for comparison with contracts.
-Quadrature = Literal["gauss_legendre", "gauss_legendre_graded", "four_point"]
+Quadrature = Union[Literal["gauss_legendre"], Literal["gauss_legendre_graded"], Literal["four_point"]]
 
 #: How heat and vapor share the way in Poppe's method; "evaporation_suppressed" is a check against Merkel's, no tower.
-Transfer = Literal["bosnjakovic", "lewis_factor_one", "evaporation_suppressed"]
+Transfer = Union[Literal["bosnjakovic"], Literal["lewis_factor_one"], Literal["evaporation_suppressed"]]
 
 _QUADRATURE = {"gauss_legendre": 0, "gauss_legendre_graded": 1, "four_point": 2}
 _TRANSFER = {"bosnjakovic": 0, "lewis_factor_one": 1, "evaporation_suppressed": 2}
