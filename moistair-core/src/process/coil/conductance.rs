@@ -389,7 +389,9 @@ impl<S: Scalar> Coil<S> {
         let air = self.interface(dew, warm);
         let dry_share = self.dry_to(air, warm).share;
         let inlet = self.at(air);
-        let by_film = inlet.specific_heat().joules_per_kilogram_kelvin() * (self.inside / self.outside);
+        // Beyond, the metal is as warm as the water to the last bit, and infinity times no rise has no value.
+        let sides = (self.inside / self.outside).at_most(k(1e12));
+        let by_film = inlet.specific_heat().joules_per_kilogram_kelvin() * sides;
         let mut wet = Wet { share: dry_share, dry_share, inlet, by_film, stages: [Stage::none(); STAGES] };
         let (mut enthalpy, mut ratio) = parts(&inlet);
         let (mut water, mut at_water) = (warm, Saturated::at::<M>(warm, pressure));
