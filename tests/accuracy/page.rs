@@ -93,7 +93,7 @@ const HEAD: &str = "\
 Made by `tests/accuracy`; do not edit. Every figure is measured, but for those of the last section.
 
 **What is the truth?** IAPWS G8-10 in full (`Formulation::Helmholtz`), which reproduces the digits that the standard prints (`tests/published`, the unit
-tests of `moistair-core`). Publications differ from each other by far more than the first tables show: see the last section.
+tests of `moistair-core`). Publications differ from each other by far more than the first tables show: see “Publications beside each other”.
 
 **How.** Points of low discrepancy (Halton): dry bulb evenly, pressure evenly in its logarithm, vapor from dry to saturated (over liquid; over ice below
 −40 °C; to a humidity ratio of 10 above boiling). *Greatest*: over all points, with the place (dry bulb, pressure, share of the vapor that saturates).

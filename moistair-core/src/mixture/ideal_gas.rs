@@ -51,7 +51,7 @@ impl<R: Real> IdealGas<R> {
         let zero = k::<R>(ZERO_CELSIUS);
         let warming = (self.kelvins / zero).ln();
         let air_pressure = pressure * (k::<R>(1.0) - water_fraction);
-        // Without water the logarithm is bounded and multiplies nothing.
+        // Without water the logarithm multiplies nothing.
         let water_pressure = pressure * water_fraction;
         let water_pressure = R::select(k::<R>(0.0).lt(water_pressure), water_pressure, k(1.0));
         let saturation = hyland_wexler_liquid(zero).0;

@@ -20,7 +20,8 @@ use super::condensate::{checked_pressure, temperature_of_enthalpy};
 use super::construct::{EnergyLine, SecondProperty, vapor_ratio};
 use super::property::{dew_point, saturates};
 
-/// K. The fitted functions of the real gas may jump by some 1e-9 where their pieces meet, and a root may lie in a jump.
+/// K. The fitted functions of the real gas jump by some 1e-9 where their pieces meet, which moves a root by up to 2e-8 K: one that lies in a
+/// jump is taken. Far below what any reading tells, far above rounding.
 const JUMPS: f64 = 1e-6;
 
 /// What a property says of a state, in the order in which a pair is taken.
