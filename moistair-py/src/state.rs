@@ -269,16 +269,14 @@ impl MoistAir {
         formulation: &str,
     ) -> PyResult<Bound<'py, PyAny>> {
         let (bulb, coefficient) = psychrometer(py, bulb, coefficient)?;
-        let formulation = number(py, formulation_named(formulation)?.code())?;
         let arguments = [
             ("dry_bulb", dry_bulb),
             ("wet_bulb", wet_bulb),
             ("bulb", bulb),
             ("coefficient", coefficient),
             ("pressure", pressure),
-            ("formulation", formulation),
         ];
-        only_result(py, "air.from_psychrometer", "S", arguments)
+        only_result_of(py, "air.from_psychrometer", "S", arguments, formulation_named(formulation)?)
     }
 
     /// What the wetted bulb of a psychrometer would show in this air, °C: the inverse of `from_psychrometer`.
@@ -1189,16 +1187,28 @@ fn number(py: Python<'_>, value: impl Into<f64>) -> PyResult<Bound<'_, PyAny>> {
     Ok(value.into().into_pyobject(py)?.into_any())
 }
 
-/// Runs a process with one result.
+/// Runs a process on a state, with one result.
 fn only_result<'py, const N: usize>(
     py: Python<'py>,
     name: &str,
     layout: &str,
     arguments: [(&str, Bound<'py, PyAny>); N],
 ) -> PyResult<Bound<'py, PyAny>> {
-    let (labels, values): (Vec<_>, Vec<_>) = arguments.into_iter().unzip();
-    process::run(py, name, layout, PyList::new(py, labels)?.into_any(), values)?.0.get_item(0)
+    only_result_of(py, name, layout, arguments, Formulation::default())
 }
+
+fn only_result_of<'py, const N: usize>(
+    py: Python<'py>,
+    name: &str,
+    layout: &str,
+    arguments: [(&str, Bound<'py, PyAny>); N],
+    formulation: Formulation,
+) -> PyResult<Bound<'py, PyAny>> {
+    let (labels, values): (Vec<_>, Vec<_>) = arguments.into_iter().unzip();
+    let labels = PyList::new(py, labels)?.into_any();
+    process::run(py, name, layout, labels, values, formulation.code())?.0.get_item(0)
+}
+
 /// The formulations of this build by their names.
 const FORMULATIONS: &[(&str, Formulation)] = &[
     ("real_gas", Formulation::RealGas),

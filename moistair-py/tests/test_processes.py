@@ -3,6 +3,8 @@
 import dataclasses
 import math
 import pickle
+import re
+import typing
 
 import moistair
 import numpy as np
@@ -300,6 +302,61 @@ def test_coils_with_water():
         coil.surface_from_rating(entering, value=5.0, measured="load", conductance_ratio=2.0, **water)
     with pytest.raises(TypeError):
         coil.bypass_factor_of_rows(of_one_row=0.5, rows=2.5)
+
+
+def test_the_catalogue_names_what_the_classes_hold(monkeypatch):
+    """Codes of the core in the order of the fields here: the names of both must be the same."""
+    catalogue = {name: entry for _, name, *entry in moistair._core.process_table()}
+    calls, kinds = [], []
+    run, plan = moistair._core.run, moistair._rows._plan
+
+    def recorded_run(name, layout, labels, values, formulation=0):
+        calls.append((name, kinds[-1], list(zip(labels, values))))
+        return run(name, layout, labels, values, formulation)
+
+    def recorded_plan(kind):
+        result = plan(kind)
+        kinds.append(kind)
+        return result
+
+    monkeypatch.setattr(moistair._core, "run", recorded_run)
+    monkeypatch.setattr(moistair._rows, "_plan", recorded_plan)
+    for case in CASES.values():
+        case(30.0, 0.5, 0.5)
+    moistair.saturation_temperature_after(dew_point=10.0, pressure=SEA_LEVEL, new_pressure=2e5, wanted="dew_point")
+
+    state_fields = ["dry_bulb", "humidity_ratio", "pressure"]
+    for name, kind, arguments in calls:
+        inputs, repeated, outputs = catalogue[name]
+        given = []
+        for label, value in arguments:
+            label = re.sub(r"\[\d+\]", "", label)
+            given += [f"{label}.{part}" for part in state_fields] if isinstance(value, MoistAir) else [label]
+        fields = [field.removesuffix(".given") for field, _ in inputs]
+        while repeated and len(fields) < len(given):
+            fields += fields[len(fields) - repeated :]
+        if name == "saturation_temperature_after":
+            given[1] = "value"
+        assert given == fields, name
+        assert held(kind) == [field for field, _ in outputs] or len(outputs) == 1, name
+    assert {name for name, *_ in calls} == {name for name in catalogue if not name.startswith("air.")}
+
+
+def held(kind, path=""):
+    """The names of the numbers of a class of records."""
+    if isinstance(kind, type) and issubclass(kind, Record):
+        hints = typing.get_type_hints(kind)
+        fields = [(f"{path}.{field.name}", moistair._rows._kind(hints[field.name])) for field in dataclasses.fields(kind)]
+        return [name.lstrip(".") for inner, kind in fields for name in held(kind, inner)]
+    return [f"{path}.{part}" for part in ("dry_bulb", "humidity_ratio", "pressure")] if kind is MoistAir else [path]
+
+
+def test_more_streams_than_a_row_takes():
+    entering = stream(20.0, 0.5, 1.0)
+    most = moistair._core.MAX_STREAMS
+    assert mixing.adiabatic(*[entering] * most).leaving.dry_air_flow == most
+    with pytest.raises(ValueError, match=f"streams may be at most {most}, not {most + 1}"):
+        mixing.adiabatic(*[entering] * (most + 1))
 
 
 def test_arguments_of_another_class():

@@ -20,6 +20,7 @@ __all__ = [
     "CheckedColumns",
     "Counts",
     "Deviation",
+    "MAX_STREAMS",
     "MoistAir",
     "NUMERICS_VERSION",
     "Period",
@@ -33,6 +34,7 @@ __all__ = [
     "from_core",
     "limits",
     "pressure_at_elevation",
+    "process_table",
     "quantity_table",
     "restore_checked",
     "restore_owned",
@@ -43,6 +45,7 @@ __all__ = [
     "to_core",
 ]
 
+MAX_STREAMS: int
 NUMERICS_VERSION: int
 __version__: str
 
@@ -262,7 +265,10 @@ def elevation_at_pressure(pressure: float, *, geometric: bool = False) -> float:
 def elevation_at_pressure(pressure: ArrayLike, *, geometric: bool = False) -> _Array: ...
 def quantity_table() -> list[tuple[str, int, str, float, float, bool]]: ...
 def code_table() -> list[tuple[str, str, int, str]]: ...
-def run(name: str, layout: str, labels: list[str], values: list[Any]) -> tuple[list[Any], Union[int, _Codes]]: ...
+def process_table() -> list[tuple[int, str, list[tuple[str, str]], int, list[tuple[str, str]]]]: ...
+def run(
+    name: str, layout: str, labels: list[str], values: list[Any], formulation: int = ...
+) -> tuple[list[Any], Union[int, _Codes]]: ...
 def restore_state(
     formulation: int, shape: tuple[int, ...], dry_bulb: Any, pressure: Any, humidity_ratio: Any, status: Any
 ) -> MoistAir[Any]: ...

@@ -87,17 +87,21 @@ def expect(value: Any, kind: type, label: str) -> None:
 
 
 def run(process: str, result: type[R], *arguments: tuple[str, Any]) -> R:
-    """Runs a process of the core on named arguments and builds `result`, a class of records or `float`."""
+    """Runs a process of the core on named arguments and builds `result`, a class of records or `float`. `formulation`, a code, is that of
+    arguments that come without a state."""
     labels: list[str] = []
     values: list[Any] = []
+    formulation = 0
     for label, value in arguments:
-        if isinstance(value, Record):
+        if label == "formulation":
+            formulation = value
+        elif isinstance(value, Record):
             _take_apart(label, value, labels, values)
         else:
             labels.append(label)
             values.append(value)
     layout, build = _plan(result)
-    results, status = _core.run(process, layout, labels, values)
+    results, status = _core.run(process, layout, labels, values, formulation)
     built: R = build(iter(results), _freeze(status))
     return built
 

@@ -2,13 +2,14 @@
 
 from __future__ import annotations
 
+from collections.abc import Iterable
 from dataclasses import dataclass
 from typing import Any, Generic, Literal, Union, overload
 
 import numpy as np
 from numpy.typing import ArrayLike, NDArray
 
-from .._core import MoistAir
+from .._core import MAX_STREAMS, MoistAir
 from .._formulation import Formulation, formulation_code
 from .._rows import Array, Record, T, expect, run
 
@@ -367,6 +368,14 @@ def wet(stream: Union[AirStream[Any], WetStream[Any]], label: str) -> WetStream[
         return WetStream(stream.air, dry_air_flow=stream.dry_air_flow)
     expect(stream, WetStream, label)
     return stream
+
+
+def wet_all(streams: Iterable[Union[AirStream[Any], WetStream[Any]]], label: str) -> list[tuple[str, WetStream[Any]]]:
+    """Streams, named by their places."""
+    named = [(f"{label}[{i}]", wet(stream, f"{label}[{i}]")) for i, stream in enumerate(streams)]
+    if len(named) > MAX_STREAMS:
+        raise ValueError(f"{label} may be at most {MAX_STREAMS}, not {len(named)}")
+    return named
 
 
 @overload

@@ -10,7 +10,7 @@ import numpy as np
 from numpy.typing import NDArray
 
 from .._rows import Record, T, expect, run
-from ._streams import AirStream, Exchange, WetStream, wet
+from ._streams import AirStream, Exchange, WetStream, wet, wet_all
 
 __all__ = ["Books", "balance"]
 
@@ -77,7 +77,10 @@ def balance(
     True
     """
     expect(exchange, Exchange, "exchange")
-    streams = [(f"entering[{i}]", wet(stream, f"entering[{i}]")) for i, stream in enumerate(entering)]
     return run(
-        "books.balance", Books, ("exchange", exchange), ("leaving", wet(leaving, "leaving")), *streams
+        "books.balance",
+        Books,
+        ("exchange", exchange),
+        ("leaving", wet(leaving, "leaving")),
+        *wet_all(entering, "entering"),
     )

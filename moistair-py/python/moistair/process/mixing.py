@@ -9,7 +9,7 @@ from numpy.typing import ArrayLike
 
 from .._core import MoistAir
 from .._rows import Array, Record, T, expect, run
-from ._streams import AirStream, Exchange, Freezing, WetStream, freezing_code, wet
+from ._streams import AirStream, Exchange, Freezing, WetStream, freezing_code, wet_all
 
 __all__ = ["Mixed", "adiabatic", "adiabatic_at", "remainder"]
 
@@ -42,7 +42,7 @@ def adiabatic(*streams: Union[AirStream[Any], WetStream[Any]]) -> Mixed[Any]:
     Parameters
     ----------
     *streams : AirStream or WetStream
-        The streams that enter.
+        The streams that enter, at most 32.
 
     Returns
     -------
@@ -65,7 +65,7 @@ def adiabatic(*streams: Union[AirStream[Any], WetStream[Any]]) -> Mixed[Any]:
     >>> mixed.leaving.air.is_wet  # fog
     True
     """
-    return run("mixing.adiabatic", Mixed, *_named(streams))
+    return run("mixing.adiabatic", Mixed, *wet_all(streams, "streams"))
 
 
 @overload
@@ -84,7 +84,7 @@ def adiabatic_at(
     Parameters
     ----------
     *streams : AirStream or WetStream
-        The streams that enter.
+        The streams that enter, at most 32.
     pressure : float or array_like
         Of the outlet, Pa.
     freezing : {'equilibrium', 'supercooled'}
@@ -104,7 +104,7 @@ def adiabatic_at(
         The pressure.
     """
     outlet = ("pressure", pressure)
-    return run("mixing.adiabatic_at", Mixed, outlet, freezing_code(freezing), *_named(streams))
+    return run("mixing.adiabatic_at", Mixed, outlet, freezing_code(freezing), *wet_all(streams, "streams"))
 
 
 @overload
@@ -148,7 +148,3 @@ def remainder(*, total_flow: ArrayLike, part: AirStream[Any], air: MoistAir[Any]
     expect(part, AirStream, "part")
     expect(air, MoistAir, "air")
     return run("mixing.remainder", AirStream, ("total_flow", total_flow), ("part", part), ("air", air))
-
-
-def _named(streams: tuple[Union[AirStream[Any], WetStream[Any]], ...]) -> list[tuple[str, Any]]:
-    return [(f"streams[{i}]", wet(stream, f"streams[{i}]")) for i, stream in enumerate(streams)]

@@ -1,4 +1,8 @@
-//! Columns of states: slices in, slices out, a status for each row.
+//! Columns: slices in, slices out, a status for each row. [`StateColumns`] for states, [`ProcessColumns`] for every [`Process`].
+
+mod process;
+
+pub use process::{Field, MAX_INPUTS, MAX_OUTPUTS, MAX_STREAMS, Process, ProcessColumns, RowError, Value};
 
 use crate::basis::{Basis, Formulation};
 use crate::bounds::Quantity;
@@ -40,6 +44,10 @@ impl<'a> Column<'a> {
     pub fn get(&self, row: usize) -> Option<f64> {
         row.checked_mul(self.stride).and_then(|place| self.values.get(place)).copied()
     }
+
+    fn reaches(&self, rows: usize) -> bool {
+        rows.checked_sub(1).is_none_or(|last| self.get(last).is_some())
+    }
 }
 
 /// Columns that fix a state in each row: dry bulb, a second property, pressure.
@@ -74,11 +82,14 @@ pub enum ColumnMismatch {
     /// An input is shorter than the rows asked for.
     #[error("an input column is shorter than the rows asked for")]
     ShortInput,
+    /// There are not as many inputs as the process takes.
+    #[error("there are not as many input columns as the process takes")]
+    InputCount,
     /// An output or the status column does not have one place for each row.
     #[error("an output column does not have one place for each row")]
     OutputLength,
-    /// There is not one output for each property.
-    #[error("there is not one output column for each property")]
+    /// There is not one output for each property, or for each result of the process.
+    #[error("there is not one output column for each result")]
     OutputCount,
     /// A property that cannot be read from a state, or a second property that does not fix one.
     #[error("selector {code} does not name what is needed here")]
@@ -121,21 +132,10 @@ impl StateColumns<'_> {
         rows: usize,
         properties: &[Quantity],
         outputs: &mut [&mut [f64]],
-        mut status: Option<&mut [i32]>,
+        status: Option<&mut [i32]>,
     ) -> Result<ColumnReport, ColumnMismatch> {
         self.check(rows, properties, outputs, status.as_deref())?;
-        let mut report = ColumnReport::default();
-        for row in 0..rows {
-            let result = self.row(row, properties, outputs);
-            if let Some(place) = status.as_deref_mut().and_then(|column| column.get_mut(row)) {
-                *place = result.err().map_or(0, |error| error.code());
-            }
-            if let Err(error) = result {
-                report.failed += 1;
-                report.first = report.first.or(Some((row, error)));
-            }
-        }
-        Ok(report)
+        Ok(each_row(rows, status, |row| self.row(row, properties, outputs)))
     }
 
     fn check(
@@ -156,9 +156,7 @@ impl StateColumns<'_> {
         if !(outputs.iter().all(|output| fits(output.len())) && status.is_none_or(|column| fits(column.len()))) {
             return Err(ColumnMismatch::OutputLength);
         }
-        let last = rows.checked_sub(1);
-        let reaches = |column: &Column| last.is_none_or(|row| column.get(row).is_some());
-        if ![self.dry_bulb, self.second, self.pressure].iter().all(reaches) {
+        if ![self.dry_bulb, self.second, self.pressure].iter().all(|column| column.reaches(rows)) {
             return Err(ColumnMismatch::ShortInput);
         }
         Ok(())
@@ -196,6 +194,26 @@ impl StateColumns<'_> {
         let basis = Basis::new(Pressure::from_pascals(pressure), self.formulation);
         MoistAir::from_dry_bulb_and(Temperature::from_celsius(dry_bulb), self.property, second, basis)
     }
+}
+
+/// Runs row after row and notes how each went.
+fn each_row(
+    rows: usize,
+    mut status: Option<&mut [i32]>,
+    mut run: impl FnMut(usize) -> Result<(), Error>,
+) -> ColumnReport {
+    let mut report = ColumnReport::default();
+    for row in 0..rows {
+        let result = run(row);
+        if let Some(place) = status.as_deref_mut().and_then(|column| column.get_mut(row)) {
+            *place = result.err().map_or(0, |error| error.code());
+        }
+        if let Err(error) = result {
+            report.failed += 1;
+            report.first = report.first.or(Some((row, error)));
+        }
+    }
+    report
 }
 
 #[cfg(test)]
