@@ -417,7 +417,7 @@ fn responses_are_monotone() {
             prop_assert!(larger.is_err() || larger.unwrap() <= base + slack, "a larger tower, method {index}");
             let hotter = feasible!(method(&entering, hot_water(m, hot + 2.0), number));
             // A line over a long range leaves the curve, and the hotter water's range is the longer; much evaporation leaves less water to cool.
-            let applies = [true, hot + 2.0 - base < 15.0, hot < 45.0][index];
+            let applies = [true, hot + 2.0 - base < 11.9, hot < 45.0][index];
             prop_assert!(!applies || hotter >= base - slack, "hotter water, method {index}");
             let windier = method(&stream(air, more), water, number);
             prop_assert!(windier.is_err() || windier.unwrap() <= base + slack, "more air, method {index}");
