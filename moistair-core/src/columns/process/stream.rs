@@ -93,7 +93,7 @@ impl Argument for Streams {
         let mut read = None;
         while !row.is_finished() {
             let stream = WetStream::read(row)?;
-            let (streams, count) = read.get_or_insert(([stream; MAX_STREAMS], 0));
+            let (streams, count) = read.get_or_insert_with(|| ([stream; MAX_STREAMS], 0));
             *streams.get_mut(*count).ok_or(RowError::Misfit)? = stream;
             *count += 1;
         }
