@@ -90,13 +90,14 @@ impl Argument for Streams {
     }
 
     fn read(row: &mut Row<'_>) -> Outcome<Self> {
-        let mut read = None;
-        while !row.is_finished() {
-            let stream = WetStream::read(row)?;
-            let (streams, count) = read.get_or_insert_with(|| ([stream; MAX_STREAMS], 0));
-            *streams.get_mut(*count).ok_or(RowError::Misfit)? = stream;
-            *count += 1;
+        if row.is_finished() {
+            return Ok(Self(None));
         }
-        Ok(Self(read))
+        let (mut streams, mut count) = ([WetStream::read(row)?; MAX_STREAMS], 1);
+        while !row.is_finished() {
+            *streams.get_mut(count).ok_or(RowError::Misfit)? = WetStream::read(row)?;
+            count += 1;
+        }
+        Ok(Self(Some((streams, count))))
     }
 }
