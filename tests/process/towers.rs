@@ -413,8 +413,11 @@ fn responses_are_monotone() {
             let base = feasible!(method(&entering, water, number));
             // As near to the limit as this nothing moves any more.
             let slack = if index == 2 { 3e-5 } else { 1e-6 };
+            // Heat and vapor settle each at its own rate unless the Lewis factor is one: from a number of 4 on Poppe's exact solution
+            // may rise again, by 3.5e-5 K with eight times the steps as well.
+            let settling = if index == 2 && number * more > 4.0 { 1e-4 } else { slack };
             let larger = method(&entering, water, number * more);
-            prop_assert!(larger.is_err() || larger.unwrap() <= base + slack, "a larger tower, method {index}");
+            prop_assert!(larger.is_err() || larger.unwrap() <= base + settling, "a larger tower, method {index}");
             let hotter = feasible!(method(&entering, hot_water(m, hot + 2.0), number));
             // A line over a long range leaves the curve, and the hotter water's range is the longer; much evaporation leaves less water to cool.
             let applies = [true, hot + 2.0 - base < 11.9, hot < 45.0][index];
