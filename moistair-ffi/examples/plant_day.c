@@ -758,18 +758,19 @@ static const char tower_rating_head[] =
 
 static const char *const equipment_note[] = {
     "\n"
-    "Differences: the load by air less that by water, where both are there; else measured less predicted. All but the loads:\n"
-    "while water flows. The coil: ",
+    "Differences: the load by air less that by water, where both are there; else measured less predicted. Temperatures,\n"
+    "humidity ratios and Merkel numbers: while water flows. The coil: ",
     " kW/K on the side of the air and ",
-    " kW/K on that of the water explain the point at which\n"
-    "it was handed over; they go with the powers ",
+    " kW/K\n"
+    "on that of the water explain the point at which it was handed over; they go with the powers ",
     " and ",
-    " of the flows. Air and water should agree on the load within some per\n"
-    "cent, or a meter is off. The tower: Merkel number ",
+    " of the flows. Air\n"
+    "and water should agree on the load within some per cent, or a meter is off. The tower: Merkel number ",
     " (L/G)^-",
-    " as the fill was tested, by Merkel's method. What falls short\n"
-    "of the prediction asks for a look at the meters first, then at flows, fouling and scale. A tower that scales or fouls is\n"
-    "also a place where Legionella grows: hygiene rules govern its cleaning.\n"};
+    "\n"
+    "as the fill was tested, by Merkel's method. What falls short of the prediction asks for a look at the meters first,\n"
+    "then at flows, fouling and scale. A tower that scales or fouls is also a place where Legionella grows: hygiene rules\n"
+    "govern its cleaning.\n"};
 
 static const char checks_head[] =
     "\n"
@@ -790,8 +791,8 @@ static const char checks_note[] =
     "\n"
     "Mixed air is computed from the flows and states of outdoor and return air, supply air from the air off the heater\n"
     "and the metered steam. Residuals are in units of 2^-52 of the terms of a book; a book is closed within 8 of them\n"
-    "and what the last bit of the temperatures is worth. No result: a reading was refused, the tower rested\n"
-    "and nothing was predicted for it, or no process does that.\n";
+    "and what the last bit of the temperatures is worth. No result: a reading was refused, no process does\n"
+    "that, or the tower to predict was at rest.\n";
 
 static const char channels_head[] =
     "\n"

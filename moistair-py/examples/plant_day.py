@@ -512,18 +512,25 @@ hour  /air    measured  fill law    measured  predicted  difference
 EQUIPMENT_NOTE = (
     """\
 
-Differences: the load by air less that by water, where both are there; else measured less predicted. All but the loads:
-while water flows. The coil: """,
-    """ kW/K on the side of the air and """,
-    """ kW/K on that of the water explain the point at which
-it was handed over; they go with the powers """,
-    """ and """,
-    """ of the flows. Air and water should agree on the load within some per
-cent, or a meter is off. The tower: Merkel number """,
-    """ (L/G)^-""",
-    """ as the fill was tested, by Merkel's method. What falls short
-of the prediction asks for a look at the meters first, then at flows, fouling and scale. A tower that scales or fouls is
-also a place where Legionella grows: hygiene rules govern its cleaning.
+Differences: the load by air less that by water, where both are there; else measured less predicted. Temperatures,
+humidity ratios and Merkel numbers: while water flows. The coil: """,
+    """\
+ kW/K on the side of the air and """,
+    """\
+ kW/K
+on that of the water explain the point at which it was handed over; they go with the powers """,
+    """\
+ and """,
+    """\
+ of the flows. Air
+and water should agree on the load within some per cent, or a meter is off. The tower: Merkel number """,
+    """\
+ (L/G)^-""",
+    """\
+
+as the fill was tested, by Merkel's method. What falls short of the prediction asks for a look at the meters first,
+then at flows, fouling and scale. A tower that scales or fouls is also a place where Legionella grows: hygiene rules
+govern its cleaning.
 """,
 )
 
@@ -549,8 +556,8 @@ CHECKS_NOTE = """\
 
 Mixed air is computed from the flows and states of outdoor and return air, supply air from the air off the heater
 and the metered steam. Residuals are in units of 2^-52 of the terms of a book; a book is closed within 8 of them
-and what the last bit of the temperatures is worth. No result: a reading was refused, the tower rested
-and nothing was predicted for it, or no process does that.
+and what the last bit of the temperatures is worth. No result: a reading was refused, no process does
+that, or the tower to predict was at rest.
 """
 
 CHANNELS_HEAD = """\
