@@ -3,20 +3,26 @@
 //! One invented summer day, minute by minute, of an invented archive with reading rooms in an inland plain: a clear night
 //! with fog at dawn, a warm moist afternoon. Its air handler mixes outdoor with recirculated air and holds 21.5 °C and
 //! 8 g/kg: steam at night, a cooling coil with reheat in the afternoon, the heat of which a cooling tower rejects. The
-//! plant is computed with this library, so that the log is coherent; sensors add offset, noise and their resolution, and
-//! the logger its faults: lost rows, a row twice, empty fields, a stuck sensor, an hour in degrees Fahrenheit, values out
-//! of range.
+//! plant is computed with this library, so that the log is coherent: the coil from its conductances and the chilled water
+//! that its valve lets through, the tower by Merkel's method from the law of its fill, which has scaled since it was tested. Sensors
+//! add offset, noise and their resolution, and the logger its faults: lost rows, a row twice, empty fields, a stuck sensor,
+//! an hour in degrees Fahrenheit, values out of range.
 //!
 //! The parameters are invented, of the size that such plants have (common practice, no source). Nothing here depends on
 //! the machine: the same file comes out everywhere.
-use moistair_core::process::coil::{self, CondensateTemperature, Cooling};
+use moistair_core::process::coil::{
+    self, Arrangement, CoilFlows, CoilSurface, CoilWater, Coolant, FlowExponents, WaterCoil,
+};
+use moistair_core::process::tower::fill::FillLaw;
+use moistair_core::process::tower::{HotWater, merkel, water_to_air_ratio};
 use moistair_core::process::{AirStream, humidify, mixing, sensible};
 use moistair_core::*;
 
 /// The columns of the log, each with its unit.
 pub const HEADER: &str = "time_s,pressure_hPa,outdoor_degC,outdoor_rh_%,mixed_degC,mixed_rh_%,\
     coil_degC,coil_rh_%,heater_degC,supply_degC,supply_rh_%,return_degC,return_rh_%,supply_m3/h,outdoor_m3/h,valve_%,steam_kg/h,\
-    tower_water_kg/s,tower_hot_degC,tower_cold_degC,tower_air_m3/h";
+    tower_water_kg/s,tower_hot_degC,tower_cold_degC,tower_air_m3/h,\
+    chilled_water_kg/s,chilled_supply_degC,chilled_return_degC";
 
 /// Columns by their place after the time.
 mod column {
@@ -29,7 +35,8 @@ mod column {
     pub const RETURN: usize = 10;
     pub const RETURN_HUMIDITY: usize = 11;
     pub const VALVE: usize = 14;
-    pub const COUNT: usize = 20;
+    pub const CHILLED_WATER: usize = 20;
+    pub const COUNT: usize = 23;
 }
 
 #[allow(dead_code, reason = "a test takes this file as a module")]
@@ -82,6 +89,7 @@ fn spoil(minute: u32, fields: &mut [String; column::COUNT], stuck: &mut String) 
         805..=807 => replace(column::SUPPLY, "-999.0"),
         1100 => replace(column::RETURN, "-999.0"),
         930..=931 => replace(column::COIL, "850.0"),
+        1120..=1134 => replace(column::CHILLED_WATER, ""),
         _ => (),
     }
     if (600..660).contains(&minute) {
@@ -128,6 +136,9 @@ const SENSORS: [(f64, f64, usize); column::COUNT] = [
     (0.05, 0.03, 1),
     (0.0, 0.03, 1),
     (0.0, 60.0, 0),
+    (0.03, 0.03, 2),
+    (0.05, 0.03, 1),
+    (-0.05, 0.03, 1),
 ];
 
 impl Truth {
@@ -197,10 +208,21 @@ const ROOM_HEAT_CAPACITY: f64 = 9.0e7;
 const ROOM_MASS: f64 = 6.0e4;
 const FAN_RISE: f64 = 0.7;
 
+/// The coil at its rated flows: kW/K of the air side and of the water side, kg/s of dry air and of chilled water.
+const CONDUCTANCES: (f64, f64) = (21.0, 50.0);
+const RATED_FLOWS: (f64, f64) = (6.0, 6.0);
+const FLOW_EXPONENTS: FlowExponents = FlowExponents { air_side: 0.6, water_side: 0.8 };
+/// What the chiller makes, °C.
+const CHILLED_CELSIUS: f64 = 7.0;
+/// Water of the tower, kg/s, and its fill as it is now: Merkel number at L/G = 1, and exponent.
+const TOWER_WATER: f64 = 5.5;
+const FILL: (f64, f64) = (1.0, 0.6);
+
 /// What the plant remembers from minute to minute.
 struct Plant {
     room_celsius: f64,
     room_ratio: f64,
+    /// Of the coil; chilled water flows as it is open.
     valve: f64,
     /// Temperature rise in the heater, K.
     heater: f64,
@@ -208,14 +230,25 @@ struct Plant {
     steam: f64,
     drying: bool,
     chilling: bool,
+    /// Chilled water before and behind the coil, °C.
+    chilled: (f64, f64),
     /// Hot and cold water of the tower, °C.
     basin: (f64, f64),
 }
 
 impl Plant {
     fn at_midnight() -> Self {
-        let (drying, chilling, basin) = (false, false, (18.4, 18.1));
-        Self { room_celsius: 21.6, room_ratio: 0.0079, valve: 0.0, heater: 2.0, steam: 0.004, drying, chilling, basin }
+        Self {
+            room_celsius: 21.6,
+            room_ratio: 0.0079,
+            valve: 0.0,
+            heater: 2.0,
+            steam: 0.004,
+            drying: false,
+            chilling: false,
+            chilled: (19.2, 19.6),
+            basin: (18.4, 18.1),
+        }
     }
 
     /// One minute.
@@ -230,7 +263,7 @@ impl Plant {
 
         // What the controllers ask for.
         let supply_target = (ROOM_CELSIUS + 4.0 * (ROOM_CELSIUS - self.room_celsius)).clamp(14.0, 26.0);
-        self.drying = self.room_ratio > if self.drying { 0.0079 } else { 0.00815 };
+        self.drying = self.room_ratio > if self.drying { 0.0080 } else { 0.00815 };
         let dry_target = (ROOM_RATIO - 2.0 * (self.room_ratio - ROOM_RATIO)).clamp(0.0070, 0.0080);
         let dry_celsius = if self.drying { air(30.0, dry_target, basis)?.dew_point()?.celsius() } else { 50.0 };
         let coil_target = dry_celsius.min(supply_target - FAN_RISE + 0.3);
@@ -242,7 +275,8 @@ impl Plant {
         let total = AirStream::from_volume_flow(room, VolumeFlow::from_cubic_meters_per_hour(supply_flow))?;
         let recirculated = mixing::remainder(total.dry_air_flow(), &outdoor, room)?;
         let mixed = mixing::adiabatic(&[outdoor.into(), recirculated.into()])?.leaving.without_condensate();
-        let cooled = self.cool(&mixed, coil_target)?;
+        let coil = self.cool(&mixed, coil_target)?;
+        let cooled = coil.air;
         let off_coil = cooled.leaving.air().dry_bulb().celsius();
         self.heater += 0.3 * ((supply_target - off_coil - FAN_RISE).max(0.0) - self.heater);
         let heated_celsius = Temperature::from_celsius(off_coil + FAN_RISE + self.heater);
@@ -281,37 +315,60 @@ impl Plant {
             self.basin.0,
             self.basin.1,
             tower.air,
+            self.valve * RATED_FLOWS.1,
+            self.chilled.0,
+            self.chilled.1,
         ]))
     }
 
-    /// The coil under its valve: chilled water brings its surface from the temperature of the air down to 7.5 °C.
-    fn cool(&mut self, mixed: &AirStream, target: f64) -> Result<Cooling, Error> {
-        let entering = mixed.air().dry_bulb().celsius();
+    /// The coil under its valve, and the chiller, which runs while the valve is open.
+    fn cool(&mut self, mixed: &AirStream, target: f64) -> Result<WaterCoil, Error> {
+        self.chilling = self.valve > if self.chilling { 0.02 } else { 0.06 };
+        let (supply, back) = &mut self.chilled;
+        if self.chilling {
+            *supply += 0.3 * (CHILLED_CELSIUS - *supply);
+        } else {
+            // Standing water takes the temperature of the cellar.
+            *supply += 0.006 * (19.0 - *supply);
+            *back += 0.006 * (19.5 - *back);
+        }
+        let entering = Temperature::from_celsius(*supply);
         let coil = |valve: f64| {
-            let surface = Temperature::from_celsius(entering - valve * (entering - 7.5));
-            coil::by_bypass_factor(mixed, surface, 0.06, CondensateTemperature::LeavingAir)
+            let flow = MassFlow::from_kilograms_per_second(valve * RATED_FLOWS.1);
+            let surface = surface_at(CoilFlows { air: mixed.dry_air_flow(), water: flow })?;
+            let water = CoilWater { flow, entering, coolant: Coolant::Water };
+            coil::with_water(mixed, surface, water, coil::CondensateTemperature::LeavingAir)
         };
-        let error = coil(self.valve)?.leaving.air().dry_bulb().celsius() - target;
-        self.valve = (self.valve + 0.02 * error).clamp(0.0, 1.0);
-        coil(self.valve)
+        let error = coil(self.valve)?.air.leaving.air().dry_bulb().celsius() - target;
+        self.valve = (self.valve + 0.025 * error).clamp(0.0, 1.0);
+        let done = coil(self.valve)?;
+        if self.valve > 0.0 {
+            *back = done.leaving_water.celsius();
+        }
+        Ok(done)
     }
 
-    /// The chiller and its tower, for a load in W.
+    /// The chiller's heat and its tower, for a load in W.
     fn reject(&mut self, load: f64, outdoor: &MoistAir) -> Result<Tower, Error> {
-        self.chilling = load > if self.chilling { 5_000.0 } else { 9_000.0 };
-        let wet_bulb = outdoor.wet_bulb()?.celsius();
         let (hot, cold) = &mut self.basin;
         if !self.chilling {
             // Standing water follows the weather.
+            let wet_bulb = outdoor.wet_bulb()?.celsius();
             *hot += 0.004 * (wet_bulb + 1.5 - *hot);
             *cold += 0.005 * (wet_bulb + 1.0 - *cold);
             return Ok(Tower { water: 0.0, air: 0.0 });
         }
-        let rejected = 1.22 * load + 3_000.0;
-        let water = 5.5;
-        *cold += 0.3 * (wet_bulb + 2.5 + rejected / 40_000.0 - *cold);
-        *hot = *cold + rejected / (water * 4_186.0);
-        Ok(Tower { water, air: 9_000.0 + 0.1 * rejected })
+        let rejected = 1.22 * load.max(0.0) + 3_000.0;
+        let air = 9_000.0 + 0.1 * rejected;
+        *hot = *cold + rejected / (TOWER_WATER * 4_186.0);
+        let entering = AirStream::from_volume_flow(*outdoor, VolumeFlow::from_cubic_meters_per_hour(air))?;
+        let flow = MassFlow::from_kilograms_per_second(TOWER_WATER);
+        let number = FillLaw::new(FILL.0, FILL.1)?.number(water_to_air_ratio(&entering, flow)?)?;
+        let water = HotWater { flow, temperature: Temperature::from_celsius(*hot) };
+        let rated = merkel::rate(&entering, water, number)?;
+        // The basin holds the water of three minutes.
+        *cold += 0.3 * (rated.water.cold.celsius() - *cold);
+        Ok(Tower { water: TOWER_WATER, air })
     }
 
     /// A minute of the rooms.
@@ -334,6 +391,18 @@ impl Plant {
 struct Tower {
     water: f64,
     air: f64,
+}
+
+/// The coil at flows.
+fn surface_at(flows: CoilFlows) -> Result<CoilSurface, Error> {
+    let flow = MassFlow::from_kilograms_per_second;
+    let rated = CoilSurface {
+        air_side: Conductance::from_kilowatts_per_kelvin(CONDUCTANCES.0),
+        water_side: Conductance::from_kilowatts_per_kelvin(CONDUCTANCES.1),
+        arrangement: Arrangement::Counterflow,
+    };
+    let rated_at = CoilFlows { air: flow(RATED_FLOWS.0), water: flow(RATED_FLOWS.1) };
+    rated.at_flows(rated_at, flows, FLOW_EXPONENTS)
 }
 
 fn air(celsius: f64, ratio: f64, basis: Basis) -> Result<MoistAir, Error> {

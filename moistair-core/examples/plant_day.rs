@@ -1,5 +1,5 @@
-//! A day of an air handler and its cooling tower from a log of one-minute readings: states, loads, water, and how far
-//! all of it can be trusted. `cargo run --release --example plant_day [LOG.csv]`
+//! A day of an air handler and its cooling tower from a log of one-minute readings: states, loads, water, what coil and
+//! tower should have done, and how far all of it can be trusted. `cargo run --release --example plant_day [LOG.csv]`
 //!
 //! The program reads, calls the library, and prints. `moistair-ffi/examples/plant_day.c` and
 //! `moistair-py/examples/plant_day.py` print the same bytes. `make_plant_day_log.rs` made the log and tells its story.
@@ -10,8 +10,13 @@ use std::io::{BufRead, BufReader};
 
 use moistair_core::account::{Added, BooksTotal, Counts, Deviation, Periods, Rule, Total};
 use moistair_core::process::books::balance;
-use moistair_core::process::coil::{self, CondensateTemperature, Cooling};
-use moistair_core::process::tower::{self, TowerWater, WaterTreatment};
+use moistair_core::process::coil::{
+    self, Arrangement, CoilFlows, CoilSurface, CoilWater, CondensateTemperature, Coolant, Cooling, FlowExponents,
+    Measured,
+};
+use moistair_core::process::tower::fill::FillLaw;
+use moistair_core::process::tower::merkel::{self, Quadrature};
+use moistair_core::process::tower::{self, HotWater, TowerWater, WaterTreatment};
 use moistair_core::process::{AirStream, Exchange, WetStream, humidify, mixing, sensible};
 use moistair_core::signal::{Channel, ChannelState, Checked, Quality, Reason, Unit};
 use moistair_core::*;
@@ -31,6 +36,23 @@ const DEAD_BAND: f64 = 0.0003;
 const STEAM_TEMPERATURE: f64 = 100.0;
 const TREATMENT: WaterTreatment = WaterTreatment { drift_fraction: 0.0001, cycles_of_concentration: 4.0 };
 
+/// The coil on the day when it was handed over: what entered it, and how cold the air left.
+mod commissioning {
+    pub const PRESSURE: f64 = 98_500.0;
+    pub const AIR: f64 = 27.0;
+    pub const HUMIDITY: f64 = 0.5;
+    /// kg/s.
+    pub const DRY_AIR: f64 = 5.8;
+    pub const CHILLED_WATER: f64 = 6.0;
+    pub const CHILLED_SUPPLY: f64 = 7.0;
+    pub const LEAVING_AIR: f64 = 11.1;
+}
+/// Conductance of the water side of the coil over that of its air side, from its data sheet.
+const CONDUCTANCE_RATIO: f64 = 2.2;
+const FLOW_EXPONENTS: FlowExponents = FlowExponents { air_side: 0.6, water_side: 0.8 };
+/// The fill of the tower as its maker tested it, evaluated by Merkel's method: Merkel number at L/G = 1, and exponent.
+const FILL: (f64, f64) = (1.12, 0.6);
+
 /// Names for the places of an array.
 macro_rules! places {
     ($(#[$doc:meta])* $module:ident: $($name:ident)*) => {
@@ -49,6 +71,7 @@ places! {
     channel:
     PRESSURE OUTDOOR OUTDOOR_RH MIXED MIXED_RH COIL COIL_RH HEATER SUPPLY SUPPLY_RH RETURN RETURN_RH
     SUPPLY_FLOW OUTDOOR_FLOW VALVE STEAM TOWER_WATER TOWER_HOT TOWER_COLD TOWER_AIR
+    CHILLED_WATER CHILLED_SUPPLY CHILLED_RETURN
 }
 
 places! {
@@ -61,21 +84,25 @@ places! {
     MIXED MIXED_RATIO COIL COIL_RATIO SUPPLY_AIR OUTDOOR_AIR VALVE
     SENSIBLE LATENT COOLING CONDENSATE HEATING REHEAT STEAM
     TOWER_WATER REJECTED RANGE APPROACH EVAPORATION DRIFT BLOWDOWN MAKE_UP
+    CHILLED_WATER CHILLED_SUPPLY CHILLED_RETURN LOAD_BY_WATER AIR_LESS_WATER
+    PREDICTED_LOAD PREDICTED_COIL PREDICTED_COIL_RATIO
+    WATER_TO_AIR MERKEL_NUMBER MERKEL_NUMBER_BY_LAW COLD_WATER PREDICTED_COLD_WATER
 }
 
 places! {
     /// The processes whose books are kept.
     process:
-    MIXING COIL HEATER HUMIDIFIER TOWER
+    MIXING COIL HEATER HUMIDIFIER TOWER PREDICTED_COIL PREDICTED_TOWER
 }
 
 places! {
-    /// Where a measured state stands beside a computed one.
+    /// Where a measured value stands beside a computed one.
     check:
-    MIXED MIXED_RATIO SUPPLY SUPPLY_RATIO
+    MIXED MIXED_RATIO SUPPLY SUPPLY_RATIO COIL COIL_RATIO COIL_LOAD MERKEL_NUMBER COLD_WATER
 }
 
-const PROCESSES: [&str; process::COUNT] = ["mixing", "cooling coil", "fan and heater", "humidifier", "cooling tower"];
+const PROCESSES: [&str; process::COUNT] =
+    ["mixing", "cooling coil", "fan and heater", "humidifier", "cooling tower", "coil, predicted", "tower, predicted"];
 
 /// Name and unit; a difference in °C is one in K.
 const CHECKS: [(&str, &str, Unit); check::COUNT] = [
@@ -83,6 +110,11 @@ const CHECKS: [(&str, &str, Unit); check::COUNT] = [
     ("mixed air, humidity ratio", "g/kg", Unit::GramPerKilogram),
     ("supply air, dry bulb", "K", Unit::Celsius),
     ("supply air, humidity ratio", "g/kg", Unit::GramPerKilogram),
+    ("off coil, dry bulb", "K", Unit::Celsius),
+    ("off coil, humidity ratio", "g/kg", Unit::GramPerKilogram),
+    ("coil load", "kW", Unit::Kilowatt),
+    ("tower, Merkel number", "1", Unit::Fraction),
+    ("tower, cold water", "K", Unit::Celsius),
 ];
 
 /// Name and limits of each column, the limits in the unit of the library.
@@ -115,6 +147,9 @@ fn channels() -> [(&'static str, Channel); channel::COUNT] {
         ("tower water, hot", temperature(0.0, 60.0)),
         ("tower water, cold", temperature(0.0, 60.0)),
         ("tower air", air_flow(12.0)),
+        ("chilled water", Channel::mass_flow(0.0, 12.0).with_interval(INTERVAL)),
+        ("chilled water supply", temperature(0.0, 40.0)),
+        ("chilled water return", temperature(0.0, 40.0)),
     ]
 }
 
@@ -133,6 +168,54 @@ mod basis {
     pub const REHEAT: &[usize] =
         &[PRESSURE, SUPPLY, SUPPLY_RH, SUPPLY_FLOW, MIXED, MIXED_RH, COIL, COIL_RH, HEATER, VALVE];
     pub const TOWER: &[usize] = &[PRESSURE, OUTDOOR, OUTDOOR_RH, TOWER_WATER, TOWER_HOT, TOWER_COLD, TOWER_AIR];
+    pub const TOWER_INLETS: &[usize] = &[PRESSURE, OUTDOOR, OUTDOOR_RH, TOWER_WATER, TOWER_HOT, TOWER_AIR];
+    pub const COIL_INLETS: &[usize] =
+        &[PRESSURE, SUPPLY, SUPPLY_RH, SUPPLY_FLOW, MIXED, MIXED_RH, CHILLED_WATER, CHILLED_SUPPLY];
+    pub const COIL_SIDES: &[usize] = &[
+        PRESSURE,
+        SUPPLY,
+        SUPPLY_RH,
+        SUPPLY_FLOW,
+        MIXED,
+        MIXED_RH,
+        COIL,
+        COIL_RH,
+        CHILLED_WATER,
+        CHILLED_SUPPLY,
+        CHILLED_RETURN,
+    ];
+}
+
+// ---- The equipment ----
+
+/// What coil and tower should be able to do.
+struct Plant {
+    surface: CoilSurface,
+    found_at: CoilFlows,
+    fill: FillLaw,
+}
+
+impl Plant {
+    fn described() -> Result<Self, moistair_core::Error> {
+        use commissioning::*;
+        let air = MoistAir::from_dry_bulb(
+            Temperature::from_celsius(AIR),
+            RelativeHumidity::from_fraction(HUMIDITY),
+            Pressure::from_pascals(PRESSURE),
+        )?;
+        let flow = MassFlow::from_kilograms_per_second;
+        let found_at = CoilFlows { air: flow(DRY_AIR), water: flow(CHILLED_WATER) };
+        let water = chilled_water(found_at.water, Temperature::from_celsius(CHILLED_SUPPLY));
+        let measured = Measured::LeavingAir(Temperature::from_celsius(LEAVING_AIR));
+        let entering = AirStream::new(air, found_at.air)?;
+        let surface =
+            coil::surface_from_rating(&entering, water, measured, CONDUCTANCE_RATIO, Arrangement::Counterflow)?;
+        Ok(Self { surface, found_at, fill: FillLaw::new(FILL.0, FILL.1)? })
+    }
+}
+
+fn chilled_water(flow: MassFlow, entering: Temperature) -> CoilWater {
+    CoilWater { flow, entering, coolant: Coolant::Water }
 }
 
 // ---- One row of the log ----
@@ -220,7 +303,7 @@ impl Moment {
         AirStream::from_volume_flow(air?, VolumeFlow::from_cubic_meters_per_second(self.value(flow)?)).ok()
     }
 
-    fn evaluate(&mut self) {
+    fn evaluate(&mut self, plant: &Plant) {
         self.copy_readings();
         let outdoor = self.state(channel::OUTDOOR, channel::OUTDOOR_RH);
         let supply = self.state(channel::SUPPLY, channel::SUPPLY_RH);
@@ -253,9 +336,13 @@ impl Moment {
         let flow = supply_air.map(|stream| stream.dry_air_flow());
         self.mix(outdoor_air, room, flow, mixed).unwrap_or_else(|| self.checks.missing(process::MIXING));
         let cooled = self.cool(mixed, flow, off_coil);
+        let on_coil = mixed.zip(flow).and_then(|(air, flow)| AirStream::new(air, flow).ok());
+        self.meter_the_water(on_coil);
+        self.predict_coil(plant, on_coil, off_coil).unwrap_or_else(|| self.checks.missing(process::PREDICTED_COIL));
         let heated = self.heat(cooled);
         self.humidify(heated, supply).unwrap_or_else(|| self.checks.missing(process::HUMIDIFIER));
         self.reject(outdoor).unwrap_or_else(|| self.checks.missing(process::TOWER));
+        self.predict_tower(plant, outdoor).unwrap_or_else(|| self.checks.missing(process::PREDICTED_TOWER));
     }
 
     fn copy_readings(&mut self) {
@@ -272,6 +359,7 @@ impl Moment {
             (rate::VALVE, channel::VALVE),
             (rate::STEAM, channel::STEAM),
             (rate::TOWER_WATER, channel::TOWER_WATER),
+            (rate::CHILLED_WATER, channel::CHILLED_WATER),
         ] {
             self.set(rate, self.readings[channel].value_or(f64::NAN), &[channel]);
         }
@@ -368,6 +456,68 @@ impl Moment {
         }
         Some(())
     }
+
+    /// The load of the coil by its water, beside that by its air.
+    fn meter_the_water(&mut self, entering: Option<AirStream>) -> Option<()> {
+        let by_air = HeatFlow::from_watts(self.rates[rate::COOLING].value);
+        let flow = self.value(channel::CHILLED_WATER)?;
+        let supply = self.value(channel::CHILLED_SUPPLY)?;
+        let back = self.value(channel::CHILLED_RETURN)?;
+        if flow > 0.0 {
+            self.set(rate::CHILLED_SUPPLY, supply, &[channel::CHILLED_SUPPLY]);
+            self.set(rate::CHILLED_RETURN, back, &[channel::CHILLED_RETURN]);
+        }
+        let water = chilled_water(MassFlow::from_kilograms_per_second(flow), Temperature::from_celsius(supply));
+        let found = coil::load_by_water(&entering?, by_air, water, Temperature::from_celsius(back)).ok()?;
+        self.set(rate::LOAD_BY_WATER, found.load.watts(), basis::COIL_SIDES);
+        self.set(rate::AIR_LESS_WATER, found.air_less_water.watts(), basis::COIL_SIDES);
+        Some(())
+    }
+
+    /// What the coil should do with the air and the water that enter it, beside what it does.
+    fn predict_coil(&mut self, plant: &Plant, entering: Option<AirStream>, measured: Option<MoistAir>) -> Option<()> {
+        let flow = self.value(channel::CHILLED_WATER)?;
+        let supply = Temperature::from_celsius(self.value(channel::CHILLED_SUPPLY)?);
+        let flows = CoilFlows { air: entering?.dry_air_flow(), water: MassFlow::from_kilograms_per_second(flow) };
+        let surface = plant.surface.at_flows(plant.found_at, flows, FLOW_EXPONENTS).ok()?;
+        let water = chilled_water(flows.water, supply);
+        let coil = coil::with_water(&entering?, surface, water, CondensateTemperature::LeavingAir).ok()?.air;
+        self.checks.record(process::PREDICTED_COIL, &[entering?.into()], coil.leaving.into(), coil.exchange);
+        self.set(rate::PREDICTED_LOAD, coil.cooling_load.watts(), basis::COIL_INLETS);
+        if flow > 0.0 {
+            let air = coil.leaving.air();
+            self.set(rate::PREDICTED_COIL, air.dry_bulb().celsius(), basis::COIL_INLETS);
+            self.set(rate::PREDICTED_COIL_RATIO, ratio_of(&air), basis::COIL_INLETS);
+            self.checks.compare([check::COIL, check::COIL_RATIO], measured, &air);
+            self.checks.deviations[check::COIL_LOAD].add(self.rates[rate::COOLING].value, coil.cooling_load.watts());
+        }
+        Some(())
+    }
+
+    /// What the tower should do with the air and the water that enter it, beside what it does; nothing while it rests.
+    fn predict_tower(&mut self, plant: &Plant, outdoor: Option<MoistAir>) -> Option<()> {
+        let entering = self.stream(outdoor, channel::TOWER_AIR)?;
+        let flow = MassFlow::from_kilograms_per_second(self.value(channel::TOWER_WATER)?);
+        let hot = Temperature::from_celsius(self.value(channel::TOWER_HOT)?);
+        let water_to_air = tower::water_to_air_ratio(&entering, flow).ok()?;
+        let number = plant.fill.number(water_to_air).ok()?;
+        let rated = merkel::rate(&entering, HotWater { flow, temperature: hot }, number).ok()?.water;
+        let tower = tower::with_air_flow(&entering, rated, TREATMENT).ok()?;
+        self.checks.record(process::PREDICTED_TOWER, &[entering.into()], tower.leaving_stream(), tower.exchange);
+        self.set(rate::WATER_TO_AIR, water_to_air, basis::TOWER_INLETS);
+        self.set(rate::MERKEL_NUMBER_BY_LAW, number, basis::TOWER_INLETS);
+        self.set(rate::PREDICTED_COLD_WATER, rated.cold.celsius(), basis::TOWER_INLETS);
+        if let Some(cold) = self.value(channel::TOWER_COLD) {
+            self.set(rate::COLD_WATER, cold, &[channel::TOWER_COLD]);
+            self.checks.deviations[check::COLD_WATER].add(cold, rated.cold.celsius());
+            let done = TowerWater { flow, hot, cold: Temperature::from_celsius(cold) };
+            if let Ok(found) = merkel::number(&entering, done, Quadrature::GaussLegendre) {
+                self.set(rate::MERKEL_NUMBER, found.number, basis::TOWER);
+                self.checks.deviations[check::MERKEL_NUMBER].add(found.number, number);
+            }
+        }
+        Some(())
+    }
 }
 
 // ---- The log ----
@@ -412,7 +562,7 @@ fn parse(line: &str) -> Option<(f64, [f64; channel::COUNT])> {
     fields.next().is_none().then_some((time, raw))
 }
 
-fn read(file: impl BufRead) -> Result<Summary, Box<dyn Error>> {
+fn read(file: impl BufRead, plant: &Plant) -> Result<Summary, Box<dyn Error>> {
     let channels = channels();
     let empty = Total::new(Rule::Step, LONGEST_STEP);
     let mut log = empty;
@@ -437,7 +587,7 @@ fn read(file: impl BufRead) -> Result<Summary, Box<dyn Error>> {
         for (counts, reading) in counts.iter_mut().zip(&moment.readings) {
             counts.record(reading);
         }
-        moment.evaluate();
+        moment.evaluate(plant);
         let finished: [_; rate::COUNT] =
             core::array::from_fn(|i| periods[i].add(time, moment.rates[i].value, moment.rates[i].quality));
         // All of them finish at the same time.
@@ -469,7 +619,7 @@ Air handler and cooling tower: a day of one-minute readings
 const LOG_NOTE: &str = "
 Sums and means stand for the covered time only and are not extrapolated. cover: the share of the hour or of the
 day for which every reading that the result needs was there and plausible. rep.: minutes of it with a reading
-that was repaired, by the last good value or at saturation. Table 5 says what was refused, and why.
+that was repaired, by the last good value or at saturation. Table 6 says what was refused, and why.
 ";
 
 const AIR_HEAD: &str = "
@@ -513,8 +663,40 @@ and humidifiers can spread Legionella; hygiene rules and licensed practice gover
 ",
 ];
 
+const COIL_HEAD: &str = "
+4  Equipment: predicted beside measured
+
+      - chilled water --    --------- load of the coil ---------    ---- air off the coil -----  cover
+hour  flow supply return    by air by water difference predicted      predicted      difference
+      kg/s     °C     °C       kWh      kWh        kWh       kWh       °C  g/kg        K   g/kg      %
+";
+
+const TOWER_RATING_HEAD: &str = "
+     water     - Merkel number -     -- cold water of the tower ---   cover
+hour  /air    measured  fill law    measured  predicted  difference
+         1           1         1          °C         °C           K       %
+";
+
+const EQUIPMENT_NOTE: [&str; 7] = [
+    "
+Differences: the load by air less that by water, where both are there; else measured less predicted. Temperatures,
+humidity ratios and Merkel numbers: while water flows. The coil: ",
+    " kW/K on the side of the air and ",
+    " kW/K
+on that of the water explain the point at which it was handed over; they go with the powers ",
+    " and ",
+    " of the flows. Air
+and water should agree on the load within some per cent, or a meter is off. The tower: Merkel number ",
+    " (L/G)^-",
+    "
+as the fill was tested, by Merkel's method. What falls short of the prediction asks for a look at the meters first,
+then at flows, fouling and scale. A tower that scales or fouls is also a place where Legionella grows: hygiene rules
+govern its cleaning.
+",
+];
+
 const CHECKS_HEAD: &str = "
-4  Checks: means of measured less computed; books of heat and water of all processes
+5  Checks: means of measured less computed; books of heat and water of all processes
 
      -- mixed air -- --- supply air -- ------ books ----- largest residual
 hour        K    g/kg         K    g/kg  computed  closed     heat   water
@@ -531,11 +713,12 @@ books                   computed  closed  no result  largest residual: heat   wa
 const CHECKS_NOTE: &str = "
 Mixed air is computed from the flows and states of outdoor and return air, supply air from the air off the heater
 and the metered steam. Residuals are in units of 2^-52 of the terms of a book; a book is closed within 8 of them
-and what the last bit of the temperatures is worth. No result: a reading was refused, or no process does that.
+and what the last bit of the temperatures is worth. No result: a reading was refused, no process does
+that, or the tower to predict was at rest.
 ";
 
 const CHANNELS_HEAD: &str = "
-5  Readings
+6  Readings
 
 channel              unit     good repaired refused gaps  why
 ";
@@ -665,6 +848,35 @@ fn tower_cells(span: &Span) -> [Cell; 10] {
     ]
 }
 
+fn coil_cells(span: &Span) -> [Cell; 12] {
+    [
+        (span.mean(rate::CHILLED_WATER, Unit::KilogramPerSecond), 6, 2),
+        (span.mean(rate::CHILLED_SUPPLY, Unit::Celsius), 7, 1),
+        (span.mean(rate::CHILLED_RETURN, Unit::Celsius), 7, 1),
+        (span.kilowatt_hours(rate::COOLING), 10, 1),
+        (span.kilowatt_hours(rate::LOAD_BY_WATER), 9, 1),
+        (span.kilowatt_hours(rate::AIR_LESS_WATER), 11, 1),
+        (span.kilowatt_hours(rate::PREDICTED_LOAD), 10, 1),
+        (span.mean(rate::PREDICTED_COIL, Unit::Celsius), 9, 1),
+        (span.mean(rate::PREDICTED_COIL_RATIO, Unit::GramPerKilogram), 6, 2),
+        (span.deviation(check::COIL), 9, 2),
+        (span.deviation(check::COIL_RATIO), 7, 2),
+        (span.cover(rate::PREDICTED_LOAD), 7, 1),
+    ]
+}
+
+fn tower_rating_cells(span: &Span) -> [Cell; 7] {
+    [
+        (span.mean(rate::WATER_TO_AIR, Unit::Fraction), 6, 2),
+        (span.mean(rate::MERKEL_NUMBER, Unit::Fraction), 12, 2),
+        (span.mean(rate::MERKEL_NUMBER_BY_LAW, Unit::Fraction), 10, 2),
+        (span.mean(rate::COLD_WATER, Unit::Celsius), 12, 1),
+        (span.mean(rate::PREDICTED_COLD_WATER, Unit::Celsius), 11, 1),
+        (span.deviation(check::COLD_WATER), 12, 2),
+        (span.cover(rate::PREDICTED_COLD_WATER), 8, 1),
+    ]
+}
+
 fn check_cells(span: &Span) -> [Cell; 8] {
     let books = span.books();
     [
@@ -735,6 +947,19 @@ fn print_tower(summary: &Summary) {
     print!("{before}{drift}{between}{cycles}{after}");
 }
 
+fn print_equipment(summary: &Summary, plant: &Plant) {
+    print!("{COIL_HEAD}");
+    print_hours(summary, coil_cells);
+    print!("{TOWER_RATING_HEAD}");
+    print_hours(summary, tower_rating_cells);
+    let kilowatts = |side: Conductance| text((Unit::Kilowatt.from_core(side.watts_per_kelvin()), 0, 1));
+    let [coil, air, water, and, tower, law, after] = EQUIPMENT_NOTE;
+    print!("{coil}{}{air}{}{water}", kilowatts(plant.surface.air_side), kilowatts(plant.surface.water_side));
+    let exponents = [FLOW_EXPONENTS.air_side, FLOW_EXPONENTS.water_side].map(|exponent| text((exponent, 0, 1)));
+    print!("{}{and}{}{tower}", exponents[0], exponents[1]);
+    print!("{}{law}{}{after}", text((plant.fill.coefficient(), 0, 2)), text((plant.fill.exponent(), 0, 1)));
+}
+
 fn print_checks(summary: &Summary) {
     print!("{CHECKS_HEAD}");
     print_hours(summary, check_cells);
@@ -790,11 +1015,13 @@ fn print_reasons(counts: &Counts) {
 
 fn main() -> Result<(), Box<dyn Error>> {
     let path = std::env::args().nth(1).unwrap_or_else(|| LOG.to_owned());
-    let summary = read(BufReader::new(File::open(path)?))?;
+    let plant = Plant::described()?;
+    let summary = read(BufReader::new(File::open(path)?), &plant)?;
     print_log(&summary);
     print_air(&summary);
     print_handler(&summary);
     print_tower(&summary);
+    print_equipment(&summary, &plant);
     print_checks(&summary);
     print_channels(&summary);
     Ok(())

@@ -196,6 +196,8 @@ quantities! {
     Conductance = 108, "conductance", "W/K", 0.0, 1.0e9;
     /// Conductance of the water side of a coil over that of its air side.
     ConductanceRatio = 109, "conductance ratio", "1", 1.0e-3, 1.0e3;
+    /// Power of its flow that a conductance goes with.
+    FlowExponent = 110, "flow exponent", "1", 0.0, 1.0;
 }
 
 impl Quantity {

@@ -1,6 +1,6 @@
 /*
- * A day of an air handler and its cooling tower from a log of one-minute readings: states, loads, water, and how far
- * all of it can be trusted. It prints the same bytes as moistair-core/examples/plant_day.rs.
+ * A day of an air handler and its cooling tower from a log of one-minute readings: states, loads, water, what coil and
+ * tower should have done, and how far all of it can be trusted. It prints the same bytes as moistair-core/examples/plant_day.rs.
  *
  *     cargo build --release -p moistair-ffi
  *     gcc -std=c99 -I moistair-ffi/include moistair-ffi/examples/plant_day.c target/release/libmoistair.a -o plant_day
@@ -25,11 +25,22 @@ static const double dead_band = 0.0003;
 /* Steam comes saturated at about atmospheric pressure, °C. */
 static const double steam_temperature = 100.0;
 static const moistair_water_treatment treatment = {0.0001, 4.0};
+/* The coil on the day when it was handed over: what entered it, and how cold the air left. Pa, °C, kg/s. */
+static const struct {
+    double pressure, air, humidity, supply, leaving_air;
+    moistair_coil_flows flows;
+} commissioning = {98500.0, 27.0, 0.5, 7.0, 11.1, {5.8, 6.0}};
+/* Conductance of the water side of the coil over that of its air side, from its data sheet. */
+static const double conductance_ratio = 2.2;
+static const moistair_flow_exponents flow_exponents = {0.6, 0.8};
+/* The fill of the tower as its maker tested it, evaluated by Merkel's method: Merkel number at L/G = 1, and exponent. */
+static const moistair_fill_law fill = {1.12, 0.6};
 
 /* The columns of the log after the time. */
 enum channel {
     PRESSURE, OUTDOOR, OUTDOOR_RH, MIXED, MIXED_RH, COIL, COIL_RH, HEATER, SUPPLY, SUPPLY_RH, RETURN, RETURN_RH,
     SUPPLY_FLOW, OUTDOOR_FLOW, VALVE, STEAM, TOWER_WATER, TOWER_HOT, TOWER_COLD, TOWER_AIR,
+    CHILLED_WATER, CHILLED_SUPPLY, CHILLED_RETURN,
     CHANNELS
 };
 
@@ -42,17 +53,26 @@ enum rate {
     R_MIXED, R_MIXED_RATIO, R_COIL, R_COIL_RATIO, R_SUPPLY_AIR, R_OUTDOOR_AIR, R_VALVE,
     R_SENSIBLE, R_LATENT, R_COOLING, R_CONDENSATE, R_HEATING, R_REHEAT, R_STEAM,
     R_TOWER_WATER, R_REJECTED, R_RANGE, R_APPROACH, R_EVAPORATION, R_DRIFT, R_BLOWDOWN, R_MAKE_UP,
+    R_CHILLED_WATER, R_CHILLED_SUPPLY, R_CHILLED_RETURN, R_LOAD_BY_WATER, R_AIR_LESS_WATER,
+    R_PREDICTED_LOAD, R_PREDICTED_COIL, R_PREDICTED_COIL_RATIO,
+    R_WATER_TO_AIR, R_MERKEL_NUMBER, R_MERKEL_NUMBER_BY_LAW, R_COLD_WATER, R_PREDICTED_COLD_WATER,
     RATES
 };
 
 /* The processes whose books are kept. */
-enum process { P_MIXING, P_COIL, P_HEATER, P_HUMIDIFIER, P_TOWER, PROCESSES };
+enum process {
+    P_MIXING, P_COIL, P_HEATER, P_HUMIDIFIER, P_TOWER, P_PREDICTED_COIL, P_PREDICTED_TOWER,
+    PROCESSES
+};
 
-static const char *const process_names[PROCESSES] = {"mixing", "cooling coil", "fan and heater", "humidifier",
-                                                     "cooling tower"};
+static const char *const process_names[PROCESSES] = {"mixing",        "cooling coil",    "fan and heater",  "humidifier",
+                                                     "cooling tower", "coil, predicted", "tower, predicted"};
 
-/* Where a measured state stands beside a computed one. */
-enum check { C_MIXED, C_MIXED_RATIO, C_SUPPLY, C_SUPPLY_RATIO, CHECKS };
+/* Where a measured value stands beside a computed one. */
+enum check {
+    C_MIXED, C_MIXED_RATIO, C_SUPPLY, C_SUPPLY_RATIO, C_COIL, C_COIL_RATIO, C_COIL_LOAD, C_MERKEL_NUMBER, C_COLD_WATER,
+    CHECKS
+};
 
 /* A difference in °C is one in K. */
 static const struct {
@@ -63,6 +83,11 @@ static const struct {
     {"mixed air, humidity ratio", "g/kg", MOISTAIR_UNIT_GRAM_PER_KILOGRAM},
     {"supply air, dry bulb", "K", MOISTAIR_UNIT_CELSIUS},
     {"supply air, humidity ratio", "g/kg", MOISTAIR_UNIT_GRAM_PER_KILOGRAM},
+    {"off coil, dry bulb", "K", MOISTAIR_UNIT_CELSIUS},
+    {"off coil, humidity ratio", "g/kg", MOISTAIR_UNIT_GRAM_PER_KILOGRAM},
+    {"coil load", "kW", MOISTAIR_UNIT_KILOWATT},
+    {"tower, Merkel number", "1", MOISTAIR_UNIT_FRACTION},
+    {"tower, cold water", "K", MOISTAIR_UNIT_CELSIUS},
 };
 
 /* Name and limits of each column, the limits in the unit of the library. */
@@ -93,6 +118,9 @@ static const struct column columns[CHANNELS] = {
     {"tower water, hot", MOISTAIR_KIND_TEMPERATURE, MOISTAIR_UNIT_CELSIUS, 0.0, 60.0, 300.0},
     {"tower water, cold", MOISTAIR_KIND_TEMPERATURE, MOISTAIR_UNIT_CELSIUS, 0.0, 60.0, 300.0},
     {"tower air", MOISTAIR_KIND_VOLUME_FLOW, MOISTAIR_UNIT_CUBIC_METER_PER_HOUR, 0.0, 12.0, 0.0},
+    {"chilled water", MOISTAIR_KIND_MASS_FLOW, MOISTAIR_UNIT_KILOGRAM_PER_SECOND, 0.0, 12.0, 0.0},
+    {"chilled water supply", MOISTAIR_KIND_TEMPERATURE, MOISTAIR_UNIT_CELSIUS, 0.0, 40.0, 300.0},
+    {"chilled water return", MOISTAIR_KIND_TEMPERATURE, MOISTAIR_UNIT_CELSIUS, 0.0, 40.0, 300.0},
 };
 
 static int set_up(int i, moistair_channel *channel)
@@ -125,6 +153,33 @@ static const int on_heater[] = {PRESSURE, SUPPLY, SUPPLY_RH, SUPPLY_FLOW, MIXED,
 static const int on_reheat[] = {PRESSURE, SUPPLY, SUPPLY_RH, SUPPLY_FLOW, MIXED, MIXED_RH, COIL, COIL_RH, HEATER,
                                 VALVE, CHANNELS};
 static const int on_tower[] = {PRESSURE, OUTDOOR, OUTDOOR_RH, TOWER_WATER, TOWER_HOT, TOWER_COLD, TOWER_AIR, CHANNELS};
+static const int tower_inlets[] = {PRESSURE, OUTDOOR, OUTDOOR_RH, TOWER_WATER, TOWER_HOT, TOWER_AIR, CHANNELS};
+static const int coil_inlets[] = {PRESSURE, SUPPLY,   SUPPLY_RH,     SUPPLY_FLOW,    MIXED,
+                                  MIXED_RH, CHILLED_WATER, CHILLED_SUPPLY, CHANNELS};
+static const int coil_sides[] = {PRESSURE, SUPPLY,  SUPPLY_RH,     SUPPLY_FLOW,    MIXED,          MIXED_RH,
+                                 COIL,     COIL_RH, CHILLED_WATER, CHILLED_SUPPLY, CHILLED_RETURN, CHANNELS};
+
+/* ---- The equipment ---- */
+
+/* What the coil should be able to do. */
+static moistair_coil_surface surface;
+
+/* Finds the coil in the point at which it was handed over; 0 if that fails. */
+static int describe_coil(void)
+{
+    moistair_basis basis = {0.0, MOISTAIR_REAL_GAS, 0};
+    moistair_state air;
+    moistair_stream entering;
+    moistair_coil_water water = {0.0, 0.0, 0.0};
+    basis.pressure = commissioning.pressure;
+    water.flow = commissioning.flows.water;
+    water.entering = commissioning.supply;
+    return moistair_from_dry_bulb(commissioning.air, MOISTAIR_RELATIVE_HUMIDITY, commissioning.humidity, basis, &air,
+                                  NULL) == MOISTAIR_OK &&
+           moistair_stream_from_mass_flow(&air, commissioning.flows.air, &entering, NULL) == MOISTAIR_OK &&
+           moistair_coil_surface_from_rating(&entering, &water, MOISTAIR_MEASURED_LEAVING_AIR, commissioning.leaving_air,
+                                             conductance_ratio, MOISTAIR_COUNTERFLOW, &surface, NULL) == MOISTAIR_OK;
+}
 
 /* ---- One row of the log ---- */
 
@@ -363,12 +418,109 @@ static void reject(struct moment *moment, const struct state *outdoor)
     }
 }
 
+/* The load of the coil by its water, beside that by its air. */
+static void meter_the_water(struct moment *moment, const struct stream *entering)
+{
+    static const int supply[] = {CHILLED_SUPPLY, CHANNELS}, back[] = {CHILLED_RETURN, CHANNELS};
+    moistair_coil_water water = {0.0, 0.0, 0.0};
+    moistair_load_by_water found;
+    double leaving = value(moment, CHILLED_RETURN);
+    water.flow = value(moment, CHILLED_WATER);
+    water.entering = value(moment, CHILLED_SUPPLY);
+    if (water.flow > 0.0) {
+        set(moment, R_CHILLED_SUPPLY, water.entering, supply);
+        set(moment, R_CHILLED_RETURN, leaving, back);
+    }
+    if (entering->known && moistair_coil_load_by_water(&entering->air, moment->rates[R_COOLING], &water, leaving,
+                                                       &found, NULL) == MOISTAIR_OK) {
+        set(moment, R_LOAD_BY_WATER, found.load, coil_sides);
+        set(moment, R_AIR_LESS_WATER, found.air_less_water, coil_sides);
+    }
+}
+
+/* What the coil should do with the air and the water that enter it, beside what it does. */
+static void predict_coil(struct moment *moment, const struct stream *entering, const struct state *measured)
+{
+    moistair_coil_water water = {0.0, 0.0, 0.0};
+    moistair_coil_flows flows;
+    moistair_coil_surface now;
+    moistair_water_coil coil;
+    moistair_wet_stream before, behind;
+    water.flow = value(moment, CHILLED_WATER);
+    water.entering = value(moment, CHILLED_SUPPLY);
+    flows.air = entering->known ? entering->air.dry_air_flow : NAN;
+    flows.water = water.flow;
+    if (!(entering->known &&
+          moistair_coil_surface_at_flows(&surface, commissioning.flows, flows, flow_exponents, &now, NULL) ==
+              MOISTAIR_OK &&
+          moistair_coil_with_water(&entering->air, &now, &water, MOISTAIR_CONDENSATE_AT_LEAVING_AIR, 0.0, &coil,
+                                   NULL) == MOISTAIR_OK)) {
+        missing(moment, P_PREDICTED_COIL);
+        return;
+    }
+    before = wet(&entering->air);
+    behind = wet(&coil.air.leaving);
+    record(moment, P_PREDICTED_COIL, &before, 1, &behind, &coil.air.exchange);
+    set(moment, R_PREDICTED_LOAD, coil.air.cooling_load, coil_inlets);
+    if (water.flow > 0.0) {
+        const moistair_state *air = &coil.air.leaving.air;
+        set(moment, R_PREDICTED_COIL, air->dry_bulb, coil_inlets);
+        set(moment, R_PREDICTED_COIL_RATIO, air->humidity_ratio, coil_inlets);
+        compare(moment, C_COIL, C_COIL_RATIO, measured, air);
+        moistair_deviation_add(&moment->checks.deviations[C_COIL_LOAD], moment->rates[R_COOLING],
+                               coil.air.cooling_load, NULL);
+    }
+}
+
+/* What the tower should do with the air and the water that enter it, beside what it does; nothing while it rests. */
+static void predict_tower(struct moment *moment, const struct state *outdoor)
+{
+    static const int on_cold_water[] = {TOWER_COLD, CHANNELS};
+    struct stream entering = read_stream(moment, outdoor, TOWER_AIR);
+    moistair_deviation *deviations = moment->checks.deviations;
+    double water_to_air, number, cold = value(moment, TOWER_COLD);
+    moistair_hot_water water;
+    moistair_tower_rating rated;
+    moistair_tower_balance tower;
+    moistair_wet_stream before, behind;
+    moistair_tower_water done;
+    moistair_merkel_number found;
+    water.flow = value(moment, TOWER_WATER);
+    water.temperature = value(moment, TOWER_HOT);
+    if (!(entering.known &&
+          moistair_tower_water_to_air(&entering.air, water.flow, &water_to_air, NULL) == MOISTAIR_OK &&
+          moistair_tower_fill_number(fill, water_to_air, &number, NULL) == MOISTAIR_OK &&
+          moistair_tower_merkel_rate(&entering.air, water, number, &rated, NULL) == MOISTAIR_OK &&
+          moistair_tower_with_air_flow(&entering.air, rated.water, treatment, &tower, NULL) == MOISTAIR_OK)) {
+        missing(moment, P_PREDICTED_TOWER);
+        return;
+    }
+    before = wet(&entering.air);
+    behind = wet(&tower.leaving);
+    record(moment, P_PREDICTED_TOWER, &before, 1, &behind, &tower.exchange);
+    set(moment, R_WATER_TO_AIR, water_to_air, tower_inlets);
+    set(moment, R_MERKEL_NUMBER_BY_LAW, number, tower_inlets);
+    set(moment, R_PREDICTED_COLD_WATER, rated.water.cold, tower_inlets);
+    if (isnan(cold))
+        return;
+    set(moment, R_COLD_WATER, cold, on_cold_water);
+    moistair_deviation_add(&deviations[C_COLD_WATER], cold, rated.water.cold, NULL);
+    done = rated.water;
+    done.cold = cold;
+    if (moistair_tower_merkel_number(&entering.air, done, MOISTAIR_QUADRATURE_GAUSS_LEGENDRE, &found, NULL) ==
+        MOISTAIR_OK) {
+        set(moment, R_MERKEL_NUMBER, found.number, on_tower);
+        moistair_deviation_add(&deviations[C_MERKEL_NUMBER], found.number, number, NULL);
+    }
+}
+
 static void copy_readings(struct moment *moment)
 {
     static const int pairs[][2] = {
         {R_PRESSURE, PRESSURE}, {R_OUTDOOR, OUTDOOR},     {R_OUTDOOR_RH, OUTDOOR_RH}, {R_SUPPLY, SUPPLY},
         {R_SUPPLY_RH, SUPPLY_RH}, {R_RETURN, RETURN},     {R_RETURN_RH, RETURN_RH},   {R_MIXED, MIXED},
         {R_COIL, COIL},         {R_VALVE, VALVE},         {R_STEAM, STEAM},           {R_TOWER_WATER, TOWER_WATER},
+        {R_CHILLED_WATER, CHILLED_WATER},
     };
     size_t i;
     for (i = 0; i < sizeof pairs / sizeof pairs[0]; i++) {
@@ -381,7 +533,7 @@ static void copy_readings(struct moment *moment)
 static void evaluate(struct moment *moment)
 {
     struct state outdoor, supply, room, mixed, off_coil;
-    struct stream outdoor_air, supply_air, cooled, heated;
+    struct stream outdoor_air, supply_air, on_the_coil, cooled, heated;
     int i;
     memset(&moment->checks, 0, sizeof moment->checks);
     for (i = 0; i < RATES; i++) {
@@ -402,9 +554,15 @@ static void evaluate(struct moment *moment)
         set(moment, R_SUPPLY_AIR, supply_air.air.dry_air_flow, supply_stream);
     mix(moment, &outdoor_air, &room, &supply_air, &mixed);
     cooled = cool(moment, &mixed, &supply_air, &off_coil);
+    on_the_coil.known = mixed.known && supply_air.known &&
+                        moistair_stream_from_mass_flow(&mixed.air, supply_air.air.dry_air_flow, &on_the_coil.air,
+                                                       NULL) == MOISTAIR_OK;
+    meter_the_water(moment, &on_the_coil);
+    predict_coil(moment, &on_the_coil, &off_coil);
     heated = heat(moment, &cooled);
     humidify(moment, &heated, &supply);
     reject(moment, &outdoor);
+    predict_tower(moment, &outdoor);
 }
 
 /* ---- The log ---- */
@@ -545,7 +703,7 @@ static const char log_note[] =
     "\n"
     "Sums and means stand for the covered time only and are not extrapolated. cover: the share of the hour or of the\n"
     "day for which every reading that the result needs was there and plausible. rep.: minutes of it with a reading\n"
-    "that was repaired, by the last good value or at saturation. Table 5 says what was refused, and why.\n";
+    "that was repaired, by the last good value or at saturation. Table 6 says what was refused, and why.\n";
 
 static const char air_head[] =
     "\n"
@@ -584,9 +742,39 @@ static const char *const tower_note[] = {
     " cycles of concentration. Estimates: towers\n"
     "and humidifiers can spread Legionella; hygiene rules and licensed practice govern, not these numbers.\n"};
 
+static const char coil_head[] =
+    "\n"
+    "4  Equipment: predicted beside measured\n"
+    "\n"
+    "      - chilled water --    --------- load of the coil ---------    ---- air off the coil -----  cover\n"
+    "hour  flow supply return    by air by water difference predicted      predicted      difference\n"
+    "      kg/s     °C     °C       kWh      kWh        kWh       kWh       °C  g/kg        K   g/kg      %\n";
+
+static const char tower_rating_head[] =
+    "\n"
+    "     water     - Merkel number -     -- cold water of the tower ---   cover\n"
+    "hour  /air    measured  fill law    measured  predicted  difference\n"
+    "         1           1         1          °C         °C           K       %\n";
+
+static const char *const equipment_note[] = {
+    "\n"
+    "Differences: the load by air less that by water, where both are there; else measured less predicted. Temperatures,\n"
+    "humidity ratios and Merkel numbers: while water flows. The coil: ",
+    " kW/K on the side of the air and ",
+    " kW/K\n"
+    "on that of the water explain the point at which it was handed over; they go with the powers ",
+    " and ",
+    " of the flows. Air\n"
+    "and water should agree on the load within some per cent, or a meter is off. The tower: Merkel number ",
+    " (L/G)^-",
+    "\n"
+    "as the fill was tested, by Merkel's method. What falls short of the prediction asks for a look at the meters first,\n"
+    "then at flows, fouling and scale. A tower that scales or fouls is also a place where Legionella grows: hygiene rules\n"
+    "govern its cleaning.\n"};
+
 static const char checks_head[] =
     "\n"
-    "4  Checks: means of measured less computed; books of heat and water of all processes\n"
+    "5  Checks: means of measured less computed; books of heat and water of all processes\n"
     "\n"
     "     -- mixed air -- --- supply air -- ------ books ----- largest residual\n"
     "hour        K    g/kg         K    g/kg  computed  closed     heat   water\n";
@@ -603,11 +791,12 @@ static const char checks_note[] =
     "\n"
     "Mixed air is computed from the flows and states of outdoor and return air, supply air from the air off the heater\n"
     "and the metered steam. Residuals are in units of 2^-52 of the terms of a book; a book is closed within 8 of them\n"
-    "and what the last bit of the temperatures is worth. No result: a reading was refused, or no process does that.\n";
+    "and what the last bit of the temperatures is worth. No result: a reading was refused, no process does\n"
+    "that, or the tower to predict was at rest.\n";
 
 static const char channels_head[] =
     "\n"
-    "5  Readings\n"
+    "6  Readings\n"
     "\n"
     "channel              unit     good repaired refused gaps  why\n";
 
@@ -764,6 +953,11 @@ static moistair_deviation_values deviation(const struct span *span, int check)
     return values;
 }
 
+static double mean_deviation(const struct span *span, int check)
+{
+    return shown(check_names[check].core, deviation(span, check).mean);
+}
+
 static moistair_books_total_values books(const moistair_books_total *total)
 {
     moistair_books_total_values values;
@@ -772,14 +966,42 @@ static moistair_books_total_values books(const moistair_books_total *total)
     return values;
 }
 
+static void coil_cells(const struct span *span)
+{
+    cell(mean(span, R_CHILLED_WATER, MOISTAIR_UNIT_KILOGRAM_PER_SECOND), 6, 2);
+    cell(mean(span, R_CHILLED_SUPPLY, MOISTAIR_UNIT_CELSIUS), 7, 1);
+    cell(mean(span, R_CHILLED_RETURN, MOISTAIR_UNIT_CELSIUS), 7, 1);
+    cell(kilowatt_hours(span, R_COOLING), 10, 1);
+    cell(kilowatt_hours(span, R_LOAD_BY_WATER), 9, 1);
+    cell(kilowatt_hours(span, R_AIR_LESS_WATER), 11, 1);
+    cell(kilowatt_hours(span, R_PREDICTED_LOAD), 10, 1);
+    cell(mean(span, R_PREDICTED_COIL, MOISTAIR_UNIT_CELSIUS), 9, 1);
+    cell(mean(span, R_PREDICTED_COIL_RATIO, MOISTAIR_UNIT_GRAM_PER_KILOGRAM), 6, 2);
+    cell(mean_deviation(span, C_COIL), 9, 2);
+    cell(mean_deviation(span, C_COIL_RATIO), 7, 2);
+    cell(span_cover(span, R_PREDICTED_LOAD), 7, 1);
+}
+
+static void tower_rating_cells(const struct span *span)
+{
+    cell(mean(span, R_WATER_TO_AIR, MOISTAIR_UNIT_FRACTION), 6, 2);
+    cell(mean(span, R_MERKEL_NUMBER, MOISTAIR_UNIT_FRACTION), 12, 2);
+    cell(mean(span, R_MERKEL_NUMBER_BY_LAW, MOISTAIR_UNIT_FRACTION), 10, 2);
+    cell(mean(span, R_COLD_WATER, MOISTAIR_UNIT_CELSIUS), 12, 1);
+    cell(mean(span, R_PREDICTED_COLD_WATER, MOISTAIR_UNIT_CELSIUS), 11, 1);
+    cell(mean_deviation(span, C_COLD_WATER), 12, 2);
+    cell(span_cover(span, R_PREDICTED_COLD_WATER), 8, 1);
+}
+
 static void check_cells(const struct span *span)
 {
-    static const int widths[CHECKS] = {9, 8, 10, 8}, decimals[CHECKS] = {2, 3, 2, 3};
+    enum { SHOWN = 4 };
+    static const int widths[SHOWN] = {9, 8, 10, 8}, decimals[SHOWN] = {2, 3, 2, 3};
     moistair_books_total all = {{0}};
     moistair_books_total_values values;
     int i;
-    for (i = 0; i < CHECKS; i++)
-        cell(shown(check_names[i].core, deviation(span, i).mean), widths[i], decimals[i]);
+    for (i = 0; i < SHOWN; i++)
+        cell(mean_deviation(span, i), widths[i], decimals[i]);
     for (i = 0; i < PROCESSES; i++)
         moistair_books_total_merge(&all, &span->checks.books[i], NULL);
     values = books(&all);
@@ -838,6 +1060,27 @@ static void print_tower(void)
     fputs(tower_note[1], stdout);
     cell(treatment.cycles_of_concentration, 0, 1);
     fputs(tower_note[2], stdout);
+}
+
+static void print_equipment(void)
+{
+    fputs(coil_head, stdout);
+    print_hours(coil_cells);
+    fputs(tower_rating_head, stdout);
+    print_hours(tower_rating_cells);
+    fputs(equipment_note[0], stdout);
+    cell(shown(MOISTAIR_UNIT_KILOWATT, surface.air_side), 0, 1);
+    fputs(equipment_note[1], stdout);
+    cell(shown(MOISTAIR_UNIT_KILOWATT, surface.water_side), 0, 1);
+    fputs(equipment_note[2], stdout);
+    cell(flow_exponents.air_side, 0, 1);
+    fputs(equipment_note[3], stdout);
+    cell(flow_exponents.water_side, 0, 1);
+    fputs(equipment_note[4], stdout);
+    cell(fill.coefficient, 0, 2);
+    fputs(equipment_note[5], stdout);
+    cell(fill.exponent, 0, 1);
+    fputs(equipment_note[6], stdout);
 }
 
 static void print_checks(void)
@@ -906,7 +1149,7 @@ int main(int argc, char **argv)
 {
     const char *path = argc > 1 ? argv[1] : default_log;
     FILE *file = fopen(path, "r");
-    int fine = file != NULL && read_log(file);
+    int fine = file != NULL && describe_coil() && read_log(file);
     if (file == NULL)
         fprintf(stderr, "cannot read %s\n", path);
     else if (!fine)
@@ -919,6 +1162,7 @@ int main(int argc, char **argv)
     print_hours(air_cells);
     print_handler();
     print_tower();
+    print_equipment();
     print_checks();
     print_channels();
     return 0;

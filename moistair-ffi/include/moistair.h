@@ -318,6 +318,9 @@
 // Conductance of the water side of a coil over that of its air side [1].
 #define MOISTAIR_CONDUCTANCE_RATIO 109
 
+// Power of its flow that a conductance goes with [1].
+#define MOISTAIR_FLOW_EXPONENT 110
+
 // Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
 #define MOISTAIR_REAL_GAS 0
 
@@ -872,6 +875,30 @@ typedef struct {
     // 0.
     int32_t reserved;
 } moistair_water_coil;
+
+// What flows through a coil.
+typedef struct {
+    // Dry air [kg/s].
+    double air;
+    // Water or brine [kg/s].
+    double water;
+} moistair_coil_flows;
+
+// How conductances go with flows: UA = UA0 (flow / flow0)^n on each side.
+typedef struct {
+    // n of the air side, 0 to 1; 0.4 to 0.7 with fins (common practice, no source) [1].
+    double air_side;
+    // n of the water side, 0 to 1; 0.8 while the water is turbulent (Dittus and Boelter 1930; from memory) [1].
+    double water_side;
+} moistair_flow_exponents;
+
+// What the water of a coil says of its load.
+typedef struct {
+    // Heat that the water took up; negative in a coil that heats [W].
+    double load;
+    // The load by the air less that by the water [W].
+    double air_less_water;
+} moistair_load_by_water;
 
 // What a coil and the heater behind it did.
 typedef struct {
@@ -1678,6 +1705,30 @@ int32_t moistair_coil_surface_from_rating(const moistair_stream *entering,
                                           int32_t arrangement,
                                           moistair_coil_surface *surface,
                                           moistair_error *error);
+
+// The conductances of a coil at other flows than those that they were found at: within a few per cent down to half of them (common
+// practice, no source).
+//
+// surface: the coil; found_at: the flows of that; flows: those that its conductances are wanted at; scaled: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (a conductance beyond its range, as of one that was found without a flow).
+int32_t moistair_coil_surface_at_flows(const moistair_coil_surface *surface,
+                                       moistair_coil_flows found_at,
+                                       moistair_coil_flows flows,
+                                       moistair_flow_exponents exponents,
+                                       moistair_coil_surface *scaled,
+                                       moistair_error *error);
+
+// The load of a coil by its water, beside its load by the air. A steady coil gives the same on both sides.
+//
+// entering: the stream that enters; load_by_air: positive where the coil cools [W]; water: what enters the coil; leaving_water: its
+// temperature where it leaves [°C]; found: output; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_coil_load_by_water(const moistair_stream *entering,
+                                    double load_by_air,
+                                    const moistair_coil_water *water,
+                                    double leaving_water,
+                                    moistair_load_by_water *found,
+                                    moistair_error *error);
 
 // Reaches a state by cooling to its humidity ratio, then heating. Codes restrict simultaneous heating and cooling.
 //

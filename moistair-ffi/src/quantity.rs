@@ -150,6 +150,8 @@ pub const MOISTAIR_COOLANT_SPECIFIC_HEAT: i32 = 107;
 pub const MOISTAIR_CONDUCTANCE: i32 = 108;
 /// Conductance of the water side of a coil over that of its air side [1].
 pub const MOISTAIR_CONDUCTANCE_RATIO: i32 = 109;
+/// Power of its flow that a conductance goes with [1].
+pub const MOISTAIR_FLOW_EXPONENT: i32 = 110;
 
 /// Limits of a quantity as an input, both included.
 #[repr(C)]

@@ -68,6 +68,7 @@ words! {
     moistair_coil_surface, [2], [], [];
     moistair_coil_water, [], [], [];
     moistair_water_coil, [12, 26, 36, 40], [35], [0, 14];
+    moistair_load_by_water, [], [], [];
     moistair_compressed, [12], [], [0];
     moistair_books, [5], [], [];
     moistair_tower_water, [], [], [];
@@ -541,6 +542,18 @@ fn no_argument_upsets_an_export() {
         (c.pointer(&s), c.pointer(&surface), c.pointer(&water), c.selector(3), c.number(-5.0, 20.0), out, e));
     run!(exercise moistair_coil_surface_from_rating: |c, out, e| let s = c.stream(); let water = chilled(c);
         (c.pointer(&s), c.pointer(&water), c.selector(3), c.number(5.0, 20.0), c.number(0.5, 5.0), c.selector(2), out, e));
+    run!(exercise moistair_coil_surface_at_flows: |c, out, e|
+        let surface = moistair_coil_surface {
+            air_side: c.number(0.0, 1e4),
+            water_side: c.number(0.0, 1e4),
+            arrangement: c.selector(2),
+            reserved: 0,
+        };
+        let flows = |c: &Caller| moistair_coil_flows { air: c.number(0.0, 9.0), water: c.number(0.0, 9.0) };
+        let exponents = moistair_flow_exponents { air_side: c.number(0.0, 1.0), water_side: c.number(0.0, 1.0) };
+        (c.pointer(&surface), flows(c), flows(c), exponents, out, e));
+    run!(exercise moistair_coil_load_by_water: |c, out, e| let s = c.stream(); let water = chilled(c);
+        (c.pointer(&s), c.number(-1e4, 1e5), c.pointer(&water), c.number(0.0, 30.0), out, e));
     run!(exercise moistair_reheat_to_state: |c, out, e| let s = c.stream(); let target = c.state();
         (c.pointer(&s), c.pointer(&target), c.number(0.2, 1.0), c.selector(3), c.number(-5.0, 20.0), out, e));
     run!(exercise moistair_humidify_steam: |c, out, e| let s = c.stream();

@@ -1,6 +1,6 @@
 """A day of an air handler and its cooling tower from a log of one-minute readings.
 
-States, loads, water, and how far all of it can be trusted. It prints the same bytes as
+States, loads, water, what coil and tower should have done, and how far all of it can be trusted. It prints the same bytes as
 ``moistair-core/examples/plant_day.rs``::
 
     python moistair-py/examples/plant_day.py moistair-core/examples/plant_day.csv
@@ -37,6 +37,21 @@ DEAD_BAND = 0.0003
 # Steam comes saturated at about atmospheric pressure, °C.
 STEAM_TEMPERATURE = 100.0
 TREATMENT = {"drift_fraction": 0.0001, "cycles_of_concentration": 4.0}
+# The coil on the day when it was handed over: what entered it, and how cold the air left.
+COMMISSIONED_AIR = MoistAir(dry_bulb=27.0, relative_humidity=0.5, pressure=98_500.0)
+COMMISSIONED_AIR_FLOW, COMMISSIONED_WATER_FLOW = 5.8, 6.0
+SURFACE = coil.surface_from_rating(
+    AirStream(COMMISSIONED_AIR, dry_air_flow=COMMISSIONED_AIR_FLOW),
+    water_flow=COMMISSIONED_WATER_FLOW,
+    entering_water=7.0,
+    measured="leaving_air",
+    value=11.1,
+    # Water side over air side, from the data sheet.
+    conductance_ratio=2.2,
+)
+FLOW_EXPONENTS = {"air_side_exponent": 0.6, "water_side_exponent": 0.8}
+# The fill of the tower as its maker tested it, evaluated by Merkel's method: Merkel number at L/G = 1, and exponent.
+FILL = {"coefficient": 1.12, "exponent": 0.6}
 
 
 def temperature(minimum: float, maximum: float) -> Channel:
@@ -96,18 +111,34 @@ CHANNELS: list[tuple[str, str, Channel]] = [
     ("tower_hot", "tower water, hot", temperature(0.0, 60.0)),
     ("tower_cold", "tower water, cold", temperature(0.0, 60.0)),
     ("tower_air", "tower air", air_flow(12.0)),
+    ("chilled_water", "chilled water", flow(Kind.MASS_FLOW, Unit.KILOGRAM_PER_SECOND, 12.0)),
+    ("chilled_supply", "chilled water supply", temperature(0.0, 40.0)),
+    ("chilled_return", "chilled water return", temperature(0.0, 40.0)),
 ]
 
 COLUMNS = ("time", *(key for key, _, _ in CHANNELS))
 
-PROCESSES = ("mixing", "cooling coil", "fan and heater", "humidifier", "cooling tower")
+PROCESSES = (
+    "mixing",
+    "cooling coil",
+    "fan and heater",
+    "humidifier",
+    "cooling tower",
+    "coil, predicted",
+    "tower, predicted",
+)
 
-# Where a measured state stands beside a computed one; a difference in °C is one in K.
+# Where a measured value stands beside a computed one; a difference in °C is one in K.
 CHECKS = {
     "mixed": ("mixed air, dry bulb", "K", Unit.CELSIUS),
     "mixed_ratio": ("mixed air, humidity ratio", "g/kg", Unit.GRAM_PER_KILOGRAM),
     "supply": ("supply air, dry bulb", "K", Unit.CELSIUS),
     "supply_ratio": ("supply air, humidity ratio", "g/kg", Unit.GRAM_PER_KILOGRAM),
+    "coil": ("off coil, dry bulb", "K", Unit.CELSIUS),
+    "coil_ratio": ("off coil, humidity ratio", "g/kg", Unit.GRAM_PER_KILOGRAM),
+    "coil_load": ("coil load", "kW", Unit.KILOWATT),
+    "merkel_number": ("tower, Merkel number", "1", Unit.FRACTION),
+    "cold_water": ("tower, cold water", "K", Unit.CELSIUS),
 }
 
 # The channels that a result rests on: it can be trusted as far as the worst of them.
@@ -115,7 +146,10 @@ SUPPLY_STREAM = ("pressure", "supply", "supply_rh", "supply_flow")
 ON_COIL = (*SUPPLY_STREAM, "mixed", "mixed_rh", "coil", "coil_rh")
 ON_HEATER = (*ON_COIL, "heater")
 ON_REHEAT = (*ON_HEATER, "valve")
-ON_TOWER = ("pressure", "outdoor", "outdoor_rh", "tower_water", "tower_hot", "tower_cold", "tower_air")
+TOWER_INLETS = ("pressure", "outdoor", "outdoor_rh", "tower_water", "tower_hot", "tower_air")
+ON_TOWER = (*TOWER_INLETS, "tower_cold")
+COIL_INLETS = (*SUPPLY_STREAM, "mixed", "mixed_rh", "chilled_water", "chilled_supply")
+COIL_SIDES = (*ON_COIL, "chilled_water", "chilled_supply", "chilled_return")
 
 # ---- The readings of an hour ----
 
@@ -137,11 +171,10 @@ class Checks:
         """Adds the books of a process; a row without a result counts as refused."""
         self.books[process].record(books.balance(entering, leaving=done.leaving, exchange=done.exchange))
 
-    def compare(self, name: str, measured: MoistAir[Any], computed: MoistAir[Any]) -> None:
-        """Adds a measured state beside a computed one, dry bulb and humidity ratio."""
-        self.deviations[name].add(measured=measured.dry_bulb, computed=computed.dry_bulb)
-        ratios = (measured.humidity_ratio, computed.humidity_ratio)
-        self.deviations[f"{name}_ratio"].add(measured=ratios[0], computed=ratios[1])
+    def compare(self, name: str, measured: MoistAir[Any], dry_bulb: Array, humidity_ratio: Array) -> None:
+        """Adds a measured state beside what was computed of it."""
+        self.deviations[name].add(measured=measured.dry_bulb, computed=dry_bulb)
+        self.deviations[f"{name}_ratio"].add(measured=measured.humidity_ratio, computed=humidity_ratio)
 
 
 class Rows:
@@ -185,7 +218,8 @@ class Rows:
         recirculated = mixing.remainder(total_flow=total, part=outdoor_air, air=room)
         mixture = mixing.adiabatic(outdoor_air, recirculated)
         checks.record("mixing", [outdoor_air, recirculated], mixture)
-        checks.compare("mixed", mixed, mixture.leaving.air.air)
+        air = mixture.leaving.air.air
+        checks.compare("mixed", mixed, air.dry_bulb, air.humidity_ratio)
 
         # The cooling coil between the two measured states.
         entering = AirStream(mixed, dry_air_flow=total)
@@ -195,6 +229,8 @@ class Rows:
         self.set("latent", cooling.latent, ON_COIL)
         self.set("cooling", cooling.cooling_load, ON_COIL)
         self.set("condensate", cooling.condensate, ON_COIL)
+        self.meter_the_water(entering, cooling.cooling_load)
+        self.predict_coil(entering, off_coil, cooling.cooling_load)
 
         # Fan and heater, up to the temperature measured behind them. Heat counts as reheat while the valve is open.
         heating = sensible.to_temperature(cooling.leaving, leaving_temperature=value["heater"])
@@ -208,7 +244,8 @@ class Rows:
         enthalpy = humidify.saturated_steam_enthalpy(steam_temperature=STEAM_TEMPERATURE)
         humidified = humidify.steam(heating.leaving, steam_flow=value["steam"], steam_enthalpy=enthalpy)
         checks.record("humidifier", [heating.leaving], humidified)
-        checks.compare("supply", supply, humidified.leaving.air.air)
+        air = humidified.leaving.air.air
+        checks.compare("supply", supply, air.dry_bulb, air.humidity_ratio)
 
         # The cooling tower on outdoor air.
         tower_air = AirStream.from_volume_flow(outdoor, volume_flow=value["tower_air"])
@@ -224,6 +261,69 @@ class Rows:
         self.set("make_up", cooler.water.make_up, ON_TOWER)
         self.set("range", np.where(water > 0.0, cooler.range, NAN), ON_TOWER)
         self.set("approach", np.where(water > 0.0, cooler.approach, NAN), ON_TOWER)
+        self.predict_tower(tower_air)
+
+    def meter_the_water(self, entering: AirStream[Any], load: Array) -> None:
+        """The load of the coil by its water, beside that by its air."""
+        flow, supply, back = (self.values[f"chilled_{name}"] for name in ("water", "supply", "return"))
+        self.set("chilled_supply", np.where(flow > 0.0, supply, NAN), ("chilled_supply",))
+        self.set("chilled_return", np.where(flow > 0.0, back, NAN), ("chilled_return",))
+        found = coil.load_by_water(
+            entering, load_by_air=load, water_flow=flow, entering_water=supply, leaving_water=back
+        )
+        self.set("load_by_water", found.load, COIL_SIDES)
+        self.set("air_less_water", found.air_less_water, COIL_SIDES)
+
+    def predict_coil(self, entering: AirStream[Any], measured: MoistAir[Any], load: Array) -> None:
+        """What the coil should do with the air and the water that enter it, beside what it does."""
+        flow = self.values["chilled_water"]
+        surface = coil.surface_at_flows(
+            air_side=SURFACE.air_side,
+            water_side=SURFACE.water_side,
+            found_at_air_flow=COMMISSIONED_AIR_FLOW,
+            found_at_water_flow=COMMISSIONED_WATER_FLOW,
+            air_flow=entering.dry_air_flow,
+            water_flow=flow,
+            **FLOW_EXPONENTS,
+        )
+        predicted = coil.with_water(
+            entering,
+            air_side=surface.air_side,
+            water_side=surface.water_side,
+            water_flow=flow,
+            entering_water=self.values["chilled_supply"],
+        ).air
+        self.checks.record("coil, predicted", [entering], predicted)
+        self.set("predicted_load", predicted.cooling_load, COIL_INLETS)
+        air = predicted.leaving.air
+        dry_bulb, ratio, cooling_load = (
+            np.where(flow > 0.0, value, NAN) for value in (air.dry_bulb, air.humidity_ratio, predicted.cooling_load)
+        )
+        self.set("predicted_coil", dry_bulb, COIL_INLETS)
+        self.set("predicted_coil_ratio", ratio, COIL_INLETS)
+        self.checks.compare("coil", measured, dry_bulb, ratio)
+        self.checks.deviations["coil_load"].add(measured=load, computed=cooling_load)
+
+    def predict_tower(self, entering: AirStream[Any]) -> None:
+        """What the tower should do with the air and the water that enter it, beside what it does; nothing while it rests."""
+        flow, hot, cold = (self.values[f"tower_{name}"] for name in ("water", "hot", "cold"))
+        water_to_air = tower.water_to_air_ratio(entering, water_flow=flow)
+        law = tower.fill_number(water_to_air=water_to_air, **FILL)
+        rated = tower.merkel_rate(entering, water_flow=flow, hot_water=hot, number=law)
+        balance = tower.with_air_flow(
+            entering, water_flow=flow, hot_water=hot, cold_water=rated.cold_water, **TREATMENT
+        )
+        self.checks.record("tower, predicted", [entering], balance)
+        cools = np.isfinite(balance.heat_rejected)
+        number, predicted = (np.where(cools, value, NAN) for value in (law, rated.cold_water))
+        self.set("water_to_air", np.where(cools, water_to_air, NAN), TOWER_INLETS)
+        self.set("merkel_number_by_law", number, TOWER_INLETS)
+        self.set("predicted_cold_water", predicted, TOWER_INLETS)
+        self.set("cold_water", np.where(cools, cold, NAN), ("tower_cold",))
+        self.checks.deviations["cold_water"].add(measured=cold, computed=predicted)
+        found = tower.merkel_number(entering, water_flow=flow, hot_water=hot, cold_water=cold).number
+        self.set("merkel_number", np.where(cools, found, NAN), ON_TOWER)
+        self.checks.deviations["merkel_number"].add(measured=found, computed=number)
 
 
 # ---- The log ----
@@ -341,7 +441,7 @@ LOG_NOTE = """\
 
 Sums and means stand for the covered time only and are not extrapolated. cover: the share of the hour or of the
 day for which every reading that the result needs was there and plausible. rep.: minutes of it with a reading
-that was repaired, by the last good value or at saturation. Table 5 says what was refused, and why.
+that was repaired, by the last good value or at saturation. Table 6 says what was refused, and why.
 """
 
 AIR_HEAD = """\
@@ -393,9 +493,50 @@ and humidifiers can spread Legionella; hygiene rules and licensed practice gover
 """,
 )
 
+COIL_HEAD = """\
+
+4  Equipment: predicted beside measured
+
+      - chilled water --    --------- load of the coil ---------    ---- air off the coil -----  cover
+hour  flow supply return    by air by water difference predicted      predicted      difference
+      kg/s     °C     °C       kWh      kWh        kWh       kWh       °C  g/kg        K   g/kg      %
+"""
+
+TOWER_RATING_HEAD = """\
+
+     water     - Merkel number -     -- cold water of the tower ---   cover
+hour  /air    measured  fill law    measured  predicted  difference
+         1           1         1          °C         °C           K       %
+"""
+
+EQUIPMENT_NOTE = (
+    """\
+
+Differences: the load by air less that by water, where both are there; else measured less predicted. Temperatures,
+humidity ratios and Merkel numbers: while water flows. The coil: """,
+    """\
+ kW/K on the side of the air and """,
+    """\
+ kW/K
+on that of the water explain the point at which it was handed over; they go with the powers """,
+    """\
+ and """,
+    """\
+ of the flows. Air
+and water should agree on the load within some per cent, or a meter is off. The tower: Merkel number """,
+    """\
+ (L/G)^-""",
+    """\
+
+as the fill was tested, by Merkel's method. What falls short of the prediction asks for a look at the meters first,
+then at flows, fouling and scale. A tower that scales or fouls is also a place where Legionella grows: hygiene rules
+govern its cleaning.
+""",
+)
+
 CHECKS_HEAD = """\
 
-4  Checks: means of measured less computed; books of heat and water of all processes
+5  Checks: means of measured less computed; books of heat and water of all processes
 
      -- mixed air -- --- supply air -- ------ books ----- largest residual
 hour        K    g/kg         K    g/kg  computed  closed     heat   water
@@ -415,12 +556,13 @@ CHECKS_NOTE = """\
 
 Mixed air is computed from the flows and states of outdoor and return air, supply air from the air off the heater
 and the metered steam. Residuals are in units of 2^-52 of the terms of a book; a book is closed within 8 of them
-and what the last bit of the temperatures is worth. No result: a reading was refused, or no process does that.
+and what the last bit of the temperatures is worth. No result: a reading was refused, no process does
+that, or the tower to predict was at rest.
 """
 
 CHANNELS_HEAD = """\
 
-5  Readings
+6  Readings
 
 channel              unit     good repaired refused gaps  why
 """
@@ -550,16 +692,48 @@ def tower_peaks(day: Span) -> list[Cell]:
     ]
 
 
+def deviation(span: Span, check: str) -> Optional[float]:
+    return shown(span.checks.deviations[check].mean, CHECKS[check][2])
+
+
+def coil_cells(span: Span) -> list[Cell]:
+    return [
+        (mean(span, "chilled_water", Unit.KILOGRAM_PER_SECOND), 6, 2),
+        (mean(span, "chilled_supply", Unit.CELSIUS), 7, 1),
+        (mean(span, "chilled_return", Unit.CELSIUS), 7, 1),
+        (kilowatt_hours(span, "cooling"), 10, 1),
+        (kilowatt_hours(span, "load_by_water"), 9, 1),
+        (kilowatt_hours(span, "air_less_water"), 11, 1),
+        (kilowatt_hours(span, "predicted_load"), 10, 1),
+        (mean(span, "predicted_coil", Unit.CELSIUS), 9, 1),
+        (mean(span, "predicted_coil_ratio", Unit.GRAM_PER_KILOGRAM), 6, 2),
+        (deviation(span, "coil"), 9, 2),
+        (deviation(span, "coil_ratio"), 7, 2),
+        (cover(span, "predicted_load"), 7, 1),
+    ]
+
+
+def tower_rating_cells(span: Span) -> list[Cell]:
+    return [
+        (mean(span, "water_to_air", Unit.FRACTION), 6, 2),
+        (mean(span, "merkel_number", Unit.FRACTION), 12, 2),
+        (mean(span, "merkel_number_by_law", Unit.FRACTION), 10, 2),
+        (mean(span, "cold_water", Unit.CELSIUS), 12, 1),
+        (mean(span, "predicted_cold_water", Unit.CELSIUS), 11, 1),
+        (deviation(span, "cold_water"), 12, 2),
+        (cover(span, "predicted_cold_water"), 8, 1),
+    ]
+
+
 def check_cells(span: Span) -> list[Cell]:
     all_books = BooksTotal()
     for name in PROCESSES:
         all_books.merge(span.checks.books[name])
-    means = [shown(span.checks.deviations[name].mean, unit) for name, (_, _, unit) in CHECKS.items()]
     return [
-        (means[0], 9, 2),
-        (means[1], 8, 3),
-        (means[2], 10, 2),
-        (means[3], 8, 3),
+        (deviation(span, "mixed"), 9, 2),
+        (deviation(span, "mixed_ratio"), 8, 3),
+        (deviation(span, "supply"), 10, 2),
+        (deviation(span, "supply_ratio"), 8, 3),
         (all_books.heat.samples, 10, 0),
         (all_books.closed, 8, 0),
         (all_books.heat.largest_in_epsilons, 9, 2),
@@ -598,15 +772,32 @@ def print_tower(summary: Summary) -> None:
     print(TOWER_NOTE[0], drift, TOWER_NOTE[1], cycles, TOWER_NOTE[2], sep="", end="")
 
 
+def print_equipment(summary: Summary) -> None:
+    print(COIL_HEAD, end="")
+    print_hours(summary, coil_cells)
+    print(TOWER_RATING_HEAD, end="")
+    print_hours(summary, tower_rating_cells)
+    values = (
+        text(shown(SURFACE.air_side, Unit.KILOWATT), 0, 1),
+        text(shown(SURFACE.water_side, Unit.KILOWATT), 0, 1),
+        *(text(exponent, 0, 1) for exponent in FLOW_EXPONENTS.values()),
+        text(FILL["coefficient"], 0, 2),
+        text(FILL["exponent"], 0, 1),
+    )
+    print(EQUIPMENT_NOTE[0], end="")
+    for value, words in zip(values, EQUIPMENT_NOTE[1:]):
+        print(value, words, sep="", end="")
+
+
 def print_checks(summary: Summary) -> None:
     print(CHECKS_HEAD, end="")
     print_hours(summary, check_cells)
     print(DEVIATIONS_HEAD, end="")
     for key, (name, unit, core) in CHECKS.items():
-        deviation = summary.day.checks.deviations[key]
-        values = (deviation.mean, deviation.root_mean_square, deviation.lowest, deviation.highest)
+        found = summary.day.checks.deviations[key]
+        values = (found.mean, found.root_mean_square, found.lowest, found.highest)
         cells = [text(shown(value, core), 9, 3) for value in values]
-        print(f"{name:<28}{unit:<4}{deviation.samples:>9}", *cells, sep="")
+        print(f"{name:<28}{unit:<4}{found.samples:>9}", *cells, sep="")
     print(BOOKS_HEAD, end="")
     for name, total_books in summary.day.checks.books.items():
         heat, water = total_books.heat, total_books.water
@@ -643,6 +834,7 @@ def main() -> None:
     print_air(summary)
     print_handler(summary)
     print_tower(summary)
+    print_equipment(summary)
     print_checks(summary)
     print_channels(summary)
 

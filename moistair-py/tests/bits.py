@@ -74,6 +74,9 @@ CASES: dict[str, Callable[[Row], Any]] = {
     "coil.surface_from_rating": lambda r: coil.surface_from_rating(
         r.warm, water_flow=2.0, entering_water=6.0, value=6.0 + 10.0 * r.share, measured="leaving_water", conductance_ratio=2.0
     ),
+    "coil.load_by_water": lambda r: coil.load_by_water(
+        r.warm, load_by_air=r.heat, water_flow=2.0, entering_water=6.0, leaving_water=6.0 + 10.0 * r.share
+    ),
     "coil.between": lambda r: coil.between(r.warm, leaving=r.leaving, dead_band=2e-4),
     "reheat.to_state": lambda r: reheat.to_state(r.warm, target=r.leaving, coil_leaving_relative_humidity=1.0),
     "mixing.adiabatic": lambda r: mixing.adiabatic(r.warm, r.cold),

@@ -93,6 +93,19 @@ CASES = {
     "coil.surface_from_rating": lambda t, rh, x: coil.surface_from_rating(
         stream(t, rh, 2.0), water_flow=1.0 + x, entering_water=6.0, value=8.0, measured="leaving_water", conductance_ratio=2.0
     ),
+    "coil.surface_at_flows": lambda t, rh, x: coil.surface_at_flows(
+        air_side=6e3,
+        water_side=1e4,
+        found_at_air_flow=2.0,
+        found_at_water_flow=1.0,
+        air_flow=1.0 + x,
+        water_flow=0.5 + rh,
+        air_side_exponent=0.6 + 0.0 * t,
+        water_side_exponent=0.8,
+    ),
+    "coil.load_by_water": lambda t, rh, x: coil.load_by_water(
+        stream(t, rh, 2.0), load_by_air=2e4, water_flow=1.0, entering_water=6.0, leaving_water=10.0 + 5.0 * x
+    ),
     "coil.between": lambda t, rh, x: coil.between(stream(t, rh, 2.0 + x), leaving=state(5.0, 0.9), dead_band=1e-4),
     "reheat.to_state": lambda t, rh, x: reheat.to_state(
         stream(t, rh, 2.0), target=state(18.0, 0.3), coil_leaving_relative_humidity=0.9 + 0.1 * x
@@ -292,6 +305,12 @@ def test_coils_with_water():
     ):
         surface = coil.surface_from_rating(entering, value=value, measured=measured, conductance_ratio=2.0, **water)
         assert math.isclose(surface.air_side, 4e3, rel_tol=1e-6) and math.isclose(surface.water_side, 8e3, rel_tol=1e-6)
+    metered = coil.load_by_water(entering, load_by_air=done.air.cooling_load + 500.0, leaving_water=done.leaving_water, **water)
+    assert math.isclose(metered.load, done.air.cooling_load, rel_tol=1e-12)
+    assert math.isclose(metered.air_less_water, 500.0, rel_tol=1e-9)
+    flows = {"found_at_air_flow": 1.5, "found_at_water_flow": 2.0, "air_flow": 1.5, "water_flow": 1.0}
+    scaled = coil.surface_at_flows(air_side=4e3, water_side=8e3, air_side_exponent=0.6, water_side_exponent=0.8, **flows)
+    assert scaled.air_side == 4e3 and math.isclose(scaled.water_side, 8e3 * 0.5**0.8, rel_tol=1e-15)
     with pytest.raises(moistair.InfeasibleError):
         coil.with_water(entering, air_side=4e3, water_side=8e3, arrangement="cross_flow", **water)
     with pytest.raises(moistair.InfeasibleError):

@@ -444,6 +444,67 @@ fn rating_finds_the_coil() {
     assert!(tried.get() > 500);
 }
 
+/// What water takes up is what the air gives off, whatever the coil; heat that a meter adds comes back as the difference.
+#[test]
+fn both_sides_of_a_coil_say_the_same() {
+    let worst = core::cell::Cell::new(0.0_f64);
+    check((usual(), -1e4..1e4_f64), |(case, added)| {
+        let truth = done(&case);
+        let load = truth.air.cooling_load.watts();
+        let by = |watts: f64| {
+            coil::load_by_water(&case.entering, HeatFlow::from_watts(watts), case.water, truth.leaving_water).unwrap()
+        };
+        // What the last bits of the water's temperatures and enthalpies are worth.
+        let enthalpy = |t| liquid(&case.water, t, case.entering.air().basis());
+        let terms = 2.0 * (enthalpy(truth.leaving_water) + 4_200.0 * truth.leaving_water.kelvins());
+        let worth = f64::EPSILON * (case.water.flow.kilograms_per_second() * terms + 8.0 * (load.abs() + added.abs()));
+        let found = by(load);
+        let off = found.air_less_water.watts().abs() / worth;
+        worst.set(worst.get().max(off));
+        prop_assert!(off <= 1.0, "{off}: {found:?} {case:?}");
+        prop_assert!((by(load + added).air_less_water.watts() - added).abs() <= 2.0 * worth);
+        prop_assert_eq!(by(load + added).load, found.load);
+        Ok(())
+    });
+    println!("air and water apart by at most {:.2} of what the last bits are worth", worst.get());
+}
+
+/// There and back is where it was, by way of a third point is the straight way, and a doubled flow gives 2ⁿ.
+#[test]
+fn conductances_go_with_powers_of_the_flows() {
+    let flows = || (0.05..20.0_f64, 0.05..20.0_f64);
+    let exponents = (0.0..=1.0_f64, 0.0..=1.0_f64);
+    check((usual(), flows(), flows(), flows(), exponents), |(case, a, b, c, (outside, inside))| {
+        let exponents = coil::FlowExponents { air_side: outside, water_side: inside };
+        let at = |(air, water): (f64, f64)| coil::CoilFlows { air: flow(air), water: flow(water) };
+        let whole = surface(case.outside, case.inside);
+        let go = |surface: CoilSurface, from, to| surface.at_flows(at(from), at(to), exponents).unwrap();
+        let sides = |surface: CoilSurface| [surface.air_side, surface.water_side].map(Conductance::watts_per_kelvin);
+        let near = |left: CoilSurface, right: CoilSurface| {
+            sides(left).iter().zip(sides(right)).all(|(left, right)| (left / right - 1.0).abs() < 1e-14)
+        };
+        prop_assert!(near(go(go(whole, a, b), b, a), whole));
+        prop_assert!(near(go(go(whole, a, b), b, c), go(whole, a, c)));
+        let doubled = sides(go(whole, a, (2.0 * a.0, 2.0 * a.1)));
+        for ((doubled, side), exponent) in doubled.iter().zip(sides(whole)).zip([outside, inside]) {
+            prop_assert!((doubled / (side * 2.0_f64.powf(exponent)) - 1.0).abs() < 1e-14);
+        }
+        let more = sides(go(whole, a, (a.0 * 1.5, a.1 * 1.5)));
+        prop_assert!(more.iter().zip(sides(whole)).all(|(more, side)| *more >= side));
+        prop_assert_eq!(go(whole, a, a), whole);
+        Ok(())
+    });
+    let without = coil::CoilFlows { air: flow(0.0), water: flow(1.0) };
+    let with = coil::CoilFlows { air: flow(1.0), water: flow(0.0) };
+    let exponents = coil::FlowExponents { air_side: 0.6, water_side: 0.8 };
+    let none = surface(3e3, 6e3).at_flows(with, with, exponents).unwrap();
+    assert_eq!(none, surface(3e3, 6e3), "the same flows");
+    assert!(surface(3e3, 6e3).at_flows(without, with, exponents).is_err(), "found without air");
+    let constant = coil::FlowExponents { air_side: 0.0, water_side: 0.8 };
+    let still = surface(3e3, 6e3).at_flows(without, with, constant).unwrap();
+    assert_eq!(still, surface(3e3, 0.0), "no water conducts nothing");
+}
+
 /// Meetings of a line with saturation are those that a scan of the line finds.
 #[test]
 fn apparatus_dew_points_are_all_found() {

@@ -3,7 +3,7 @@
 use crate::checks::Random;
 use crate::support::*;
 use moistair_core::process::coil::{
-    self, Arrangement, CoilSurface, CoilWater, CondensateTemperature, Coolant, Measured,
+    self, Arrangement, CoilFlows, CoilSurface, CoilWater, CondensateTemperature, Coolant, FlowExponents, Measured,
 };
 use moistair_core::process::compression;
 use moistair_core::process::humidify::{self, Absorption, EvaporatingWater};
@@ -227,6 +227,22 @@ fn no_argument_breaks_a_process() {
                 });
             }
         }
+        let surface = CoilSurface {
+            air_side: conductance(or(3e3)),
+            water_side: conductance(or(6e3)),
+            arrangement: Arrangement::Counterflow,
+        };
+        let found_at = CoilFlows { air: flow(or(1.0)), water: flow(or(2.0)) };
+        let flows = CoilFlows { air: flow(or(0.5)), water: flow(or(0.0)) };
+        let exponents = FlowExponents { air_side: or(0.6), water_side: or(0.8) };
+        seen.take("coil at flows", surface.at_flows(found_at, flows, exponents), |surface| {
+            let sides = [surface.air_side, surface.water_side].map(Conductance::watts_per_kelvin);
+            assert!(sides.iter().all(|side| (0.0..=1e9).contains(side)), "{sides:?}");
+        });
+        let by_air = HeatFlow::from_watts(or(2e4));
+        seen.take("load by water", coil::load_by_water(&entering, by_air, water, celsius(or(12.0))), |found| {
+            finite(&[found.load.watts(), found.air_less_water.watts()])
+        });
         let mut x = || number(&mut random);
 
         let carried = AirWithCondensate::new(second, ratio(x()), ratio(x()));

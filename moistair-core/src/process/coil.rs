@@ -7,11 +7,13 @@
 mod apparatus;
 mod conductance;
 mod coolant;
+mod flows;
 mod rating;
 
 pub use apparatus::{Apparatus, ApparatusDewPoints, apparatus_dew_point, apparatus_dew_points};
 pub use conductance::{Arrangement, CoilSurface, WaterCoil, with_water};
-pub use coolant::{CoilWater, Coolant};
+pub use coolant::{CoilWater, Coolant, LoadByWater, load_by_water};
+pub use flows::{CoilFlows, FlowExponents};
 pub use rating::{Measured, surface_from_rating};
 
 use super::{AirStream, Exchange, infeasible, parts, same_formulation};

@@ -3,7 +3,9 @@
 //! A coil with air below freezing on it, or with water that stands still in it, can freeze and burst within minutes: a hard-wired
 //! freezestat protects it, never a computed temperature. Wet surfaces and pans that do not drain grow mould. Local codes govern.
 
-use moistair_core::process::coil::{self, Arrangement, CoilSurface, CoilWater, Coolant, Measured, WaterCoil};
+use moistair_core::process::coil::{
+    self, Arrangement, CoilFlows, CoilSurface, CoilWater, Coolant, FlowExponents, LoadByWater, Measured, WaterCoil,
+};
 use moistair_core::{Conductance, HeatFlow, SpecificHeat};
 
 use super::coil::{condensate, moistair_cooling};
@@ -66,6 +68,54 @@ pub struct moistair_water_coil {
     pub freezing: i32,
     /// 0.
     pub reserved: i32,
+}
+
+/// What flows through a coil.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_coil_flows {
+    /// Dry air [kg/s].
+    pub air: f64,
+    /// Water or brine [kg/s].
+    pub water: f64,
+}
+
+/// How conductances go with flows: UA = UA0 (flow / flow0)^n on each side.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_flow_exponents {
+    /// n of the air side, 0 to 1; 0.4 to 0.7 with fins (common practice, no source) [1].
+    pub air_side: f64,
+    /// n of the water side, 0 to 1; 0.8 while the water is turbulent (Dittus and Boelter 1930; from memory) [1].
+    pub water_side: f64,
+}
+
+/// What the water of a coil says of its load.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_load_by_water {
+    /// Heat that the water took up; negative in a coil that heats [W].
+    pub load: f64,
+    /// The load by the air less that by the water [W].
+    pub air_less_water: f64,
+}
+
+impl From<LoadByWater> for moistair_load_by_water {
+    fn from(found: LoadByWater) -> Self {
+        Self { load: found.load.watts(), air_less_water: found.air_less_water.watts() }
+    }
+}
+
+impl Answer for moistair_load_by_water {
+    fn is_finite(&self) -> bool {
+        finite([self.load, self.air_less_water])
+    }
+}
+
+impl moistair_coil_flows {
+    fn to_core(self) -> CoilFlows {
+        CoilFlows { air: mass_flow(self.air), water: mass_flow(self.water) }
+    }
 }
 
 impl From<WaterCoil> for moistair_water_coil {
@@ -197,7 +247,56 @@ pub unsafe extern "C" fn moistair_coil_surface_from_rating(
     unsafe { answer(surface, error, call) }
 }
 
+/// The conductances of a coil at other flows than those that they were found at: within a few per cent down to half of them (common
+/// practice, no source).
+///
+/// surface: the coil; found_at: the flows of that; flows: those that its conductances are wanted at; scaled: output; error: may be null.
+/// Returns 0, 1xx, 2xx, 301 (a conductance beyond its range, as of one that was found without a flow).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_coil_surface_at_flows(
+    surface: *const moistair_coil_surface,
+    found_at: moistair_coil_flows,
+    flows: moistair_coil_flows,
+    exponents: moistair_flow_exponents,
+    scaled: *mut moistair_coil_surface,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        // SAFETY: the caller's pointer.
+        let surface = unsafe { read(surface)?.to_core()? };
+        let exponents = FlowExponents { air_side: exponents.air_side, water_side: exponents.water_side };
+        Ok(surface.at_flows(found_at.to_core(), flows.to_core(), exponents)?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(scaled, error, call) }
+}
+
+/// The load of a coil by its water, beside its load by the air. A steady coil gives the same on both sides.
+///
+/// entering: the stream that enters; load_by_air: positive where the coil cools [W]; water: what enters the coil; leaving_water: its
+/// temperature where it leaves [°C]; found: output; error: may be null.
+/// Returns 0, 1xx, 2xx.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_coil_load_by_water(
+    entering: *const moistair_stream,
+    load_by_air: f64,
+    water: *const moistair_coil_water,
+    leaving_water: f64,
+    found: *mut moistair_load_by_water,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        // SAFETY: the caller's pointers.
+        let (entering, water) = unsafe { (read(entering)?.to_core()?, read(water)?.to_core()) };
+        Ok(coil::load_by_water(&entering, HeatFlow::from_watts(load_by_air), water, celsius(leaving_water))?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(found, error, call) }
+}
+
 const _: () = {
+    assert!(size_of::<moistair_coil_flows>() == 16 && size_of::<moistair_flow_exponents>() == 16);
+    assert!(size_of::<moistair_load_by_water>() == 16);
     assert!(size_of::<moistair_coil_surface>() == 24 && size_of::<moistair_coil_water>() == 24);
     assert!(size_of::<moistair_water_coil>() == 328 && core::mem::offset_of!(moistair_water_coil, freezing) == 320);
     assert!(Arrangement::Counterflow as i32 == MOISTAIR_COUNTERFLOW);

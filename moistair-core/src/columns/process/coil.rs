@@ -6,11 +6,11 @@ use super::row::{
 use crate::columns::NAN;
 use crate::process::AirStream;
 use crate::process::coil::{
-    Apparatus, ApparatusDewPoints, Arrangement, CoilRegime, CoilSurface, CoilWater, CondensateTemperature, Coolant,
-    Cooling, Measured, WaterCoil, apparatus_dew_point, apparatus_dew_points, between, by_bypass_factor,
-    bypass_factor_of_rows, surface_from_rating, to_state, with_water,
+    Apparatus, ApparatusDewPoints, Arrangement, CoilFlows, CoilRegime, CoilSurface, CoilWater, CondensateTemperature,
+    Coolant, Cooling, FlowExponents, LoadByWater, Measured, WaterCoil, apparatus_dew_point, apparatus_dew_points,
+    between, by_bypass_factor, bypass_factor_of_rows, load_by_water, surface_from_rating, to_state, with_water,
 };
-use crate::{HeatFlow, HumidityRatio, MoistAir, SpecificHeat, Temperature};
+use crate::{HeatFlow, HumidityRatio, MassFlow, MoistAir, SpecificHeat, Temperature};
 
 processes! {
     400 "coil.to_state":
@@ -42,10 +42,20 @@ processes! {
         (entering: AirStream, leaving: MoistAir, condensate_temperature: CondensateTemperature, dead_band: HumidityRatio) -> Cooling {
         between(&entering, &leaving, condensate_temperature, dead_band)?
     }
+    408 "coil.surface_at_flows":
+        (surface: CoilSurface, found_at_air_flow: MassFlow, found_at_water_flow: MassFlow, air_flow: MassFlow, water_flow: MassFlow, exponents: FlowExponents) -> CoilSurface {
+        let found_at = CoilFlows { air: found_at_air_flow, water: found_at_water_flow };
+        surface.at_flows(found_at, CoilFlows { air: air_flow, water: water_flow }, exponents)?
+    }
+    409 "coil.load_by_water":
+        (entering: AirStream, load_by_air: HeatFlow, water: CoilWater, leaving_water: Temperature) -> LoadByWater {
+        load_by_water(&entering, load_by_air, water, leaving_water)?
+    }
 }
 
 arguments! {
     CoilSurface { air_side: "air_side", water_side: "water_side", arrangement: "arrangement" }
+    FlowExponents { air_side: "air_side_exponent", water_side: "water_side_exponent" }
     CoilWater { flow: "water_flow", entering: "entering_water", coolant: "specific_heat" }
 }
 
@@ -79,6 +89,7 @@ answers! {
         freezing: x.freezing,
     }
     CoilSurface, |x| { air_side: x.air_side, water_side: x.water_side }
+    LoadByWater, |x| { load: x.load, air_less_water: x.air_less_water }
 }
 
 /// A number of equal things.
