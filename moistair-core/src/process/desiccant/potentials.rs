@@ -14,7 +14,7 @@
 //! The constants are from memory of the works named; no published example was at hand to check them. Between air of 30 °C and 14 g/kg and
 //! regeneration at 85 °C, F₁ moves by 2 % of its way along a line of enthalpy, F₂ by a fifth along 20 % relative humidity from 20 to 80 °C. The
 //! potentials close the balances only roughly: led by them on both sides, that wheel would leave over 10 % of the heat of the water it moves, and
-//! 20 % of the water; hotter and unlike streams, up to as much as is moved. What they leave over is reported ([`Imbalance`]); the process side is by the potentials and the regeneration side by the balances, so
+//! 20 % of the water; at 120 °C more than is moved. What they leave over is reported ([`Imbalance`]); the process side is by the potentials and the regeneration side by the balances, so
 //! that the books close. Expect 10 % of the drying, at best. Within 275 to 425 K, near standard pressure, for flows that do not differ much; not for
 //! other desiccants, purge sectors, or wheels that turn so slowly as to be a batch.
 //!
