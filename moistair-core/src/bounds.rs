@@ -188,6 +188,8 @@ quantities! {
     Duration = 103, "duration", "s", 0.0, 1.0e9;
     /// Effectiveness of a tower as a heat exchanger of enthalpy.
     EnthalpyEffectiveness = 104, "enthalpy effectiveness", "1", 0.0, 1.0;
+    /// Power of its flow that a conductance goes with.
+    FlowExponent = 105, "flow exponent", "1", 0.0, 1.0;
     /// Temperature of a coolant other than water.
     CoolantTemperature = 106, "coolant temperature", "°C", -40.0, 200.0;
     /// Specific heat of a coolant other than water.
@@ -196,8 +198,24 @@ quantities! {
     Conductance = 108, "conductance", "W/K", 0.0, 1.0e9;
     /// Conductance of the water side of a coil over that of its air side.
     ConductanceRatio = 109, "conductance ratio", "1", 1.0e-3, 1.0e3;
-    /// Power of its flow that a conductance goes with.
-    FlowExponent = 110, "flow exponent", "1", 0.0, 1.0;
+    /// Moisture that a room gives to its air.
+    MoistureGain = 135, "moisture gain", "kg/s", -1.0e6, 1.0e6;
+    /// Specific enthalpy of that moisture as it comes, from ice to steam.
+    MoistureEnthalpy = 136, "moisture enthalpy", "J/kg", -500_000.0, 4_000_000.0;
+    /// Sensible over total gain of a room; beyond 0 and 1 where one of the gains is negative.
+    SensibleHeatRatio = 137, "sensible heat ratio", "1", -1.0e9, 1.0e9;
+    /// Slope of a process line, change of enthalpy over change of humidity ratio.
+    ProcessSlope = 138, "process slope", "J/kg", -1.0e15, 1.0e15;
+    /// Heat of sorption over heat of vaporization.
+    SorptionHeatRatio = 139, "sorption heat ratio", "1", 0.5, 3.0;
+    /// Drying as a fraction of what a desiccant could do at best.
+    DryingEffectiveness = 140, "drying effectiveness", "1", 0.0, 1.0;
+    /// Effectiveness of a desiccant wheel in one of its two potentials.
+    PotentialEffectiveness = 141, "potential effectiveness", "1", 0.0, 1.0;
+    /// Rise of temperature by the heat that a wheel carries over from its regeneration.
+    CarryOverRise = 142, "carry-over rise", "K", -100.0, 200.0;
+    /// Temperature of air in the correlation of the wheel's potentials, 275 to 425 K.
+    PotentialTemperature = 143, "temperature of the potentials", "°C", 1.85, 151.85;
 }
 
 impl Quantity {

@@ -142,6 +142,8 @@ pub const MOISTAIR_CONCENTRATION: i32 = 102;
 pub const MOISTAIR_DURATION: i32 = 103;
 /// Effectiveness of a tower as a heat exchanger of enthalpy [1].
 pub const MOISTAIR_ENTHALPY_EFFECTIVENESS: i32 = 104;
+/// Power of its flow that a conductance goes with [1].
+pub const MOISTAIR_FLOW_EXPONENT: i32 = 105;
 /// Temperature of a coolant other than water [°C].
 pub const MOISTAIR_COOLANT_TEMPERATURE: i32 = 106;
 /// Specific heat of a coolant other than water [J/(kg K)].
@@ -150,8 +152,6 @@ pub const MOISTAIR_COOLANT_SPECIFIC_HEAT: i32 = 107;
 pub const MOISTAIR_CONDUCTANCE: i32 = 108;
 /// Conductance of the water side of a coil over that of its air side [1].
 pub const MOISTAIR_CONDUCTANCE_RATIO: i32 = 109;
-/// Power of its flow that a conductance goes with [1].
-pub const MOISTAIR_FLOW_EXPONENT: i32 = 110;
 
 /// Limits of a quantity as an input, both included.
 #[repr(C)]

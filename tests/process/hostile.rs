@@ -6,7 +6,11 @@ use moistair_core::process::coil::{
     self, Arrangement, CoilFlows, CoilSurface, CoilWater, CondensateTemperature, Coolant, FlowExponents, Measured,
 };
 use moistair_core::process::compression;
+use moistair_core::process::desiccant::potentials::{self, Effectiveness};
+use moistair_core::process::desiccant::{self, CarryOver, Regeneration, Sorption};
 use moistair_core::process::humidify::{self, Absorption, EvaporatingWater};
+use moistair_core::process::reheat::CoilLeaving;
+use moistair_core::process::room::{self, MoistureSource, RoomGains};
 use moistair_core::process::tower::basin::Basin;
 use moistair_core::process::tower::fill::{FillLaw, FillTest};
 use moistair_core::process::tower::merkel::{self, Quadrature};
@@ -243,6 +247,113 @@ fn no_argument_breaks_a_process() {
         seen.take("load by water", coil::load_by_water(&entering, by_air, water, celsius(or(12.0))), |found| {
             finite(&[found.load.watts(), found.air_less_water.watts()])
         });
+        let source = match random.bits() % 3 {
+            0 => MoistureSource::SaturatedVapor(celsius(number(&mut random))),
+            1 => MoistureSource::Liquid(celsius(number(&mut random))),
+            _ => MoistureSource::Enthalpy(joules(number(&mut random))),
+        };
+        let mut or = |usual: f64| if random.bits() & 1 == 0 { number(&mut random) } else { usual };
+        let source = if or(0.0) == 0.0 { MoistureSource::SaturatedVapor(celsius(30.0)) } else { source };
+        let gains = RoomGains { sensible: HeatFlow::from_watts(or(5e3)), moisture: flow(or(1e-3)), source };
+        let room_air = |done: &room::RoomAir| {
+            outlet(&done.room, &done.exchange);
+            outlet(&done.supply.into(), &Exchange::none());
+        };
+        seen.take(
+            "room supply at a temperature",
+            room::supply_at_temperature(&first, &gains, celsius(or(12.0))),
+            room_air,
+        );
+        seen.take("room supply at a flow", room::supply_at_flow(&first, &gains, flow(or(1.0))), room_air);
+        seen.take("room of a supply", room::room_of_supply(&entering, &gains), room_air);
+        seen.take("gains of a room", room::gains_between(&entering, &second, source), |gains| {
+            finite(&[gains.sensible.watts(), gains.moisture.kilograms_per_second()]);
+        });
+        seen.take("sensible heat ratio", room::sensible_heat_ratio(&first, &gains), |ratio| finite(&[*ratio]));
+        seen.take("slope of a room", room::process_slope(&gains, first.basis()), |h| {
+            finite(&[h.joules_per_kilogram()])
+        });
+        seen.take("slope of a ratio", room::slope_of_ratio(&first, or(0.8)), |h| finite(&[h.joules_per_kilogram()]));
+        seen.take("ratio of a slope", room::ratio_of_slope(&first, joules(or(1e7))), |ratio| finite(&[*ratio]));
+        seen.take("dew points of a room", room::apparatus_dew_points(&first, or(0.8)), |found| {
+            for met in [found.warmer, found.colder].into_iter().flatten() {
+                finite(&[met.celsius()]);
+            }
+        });
+        for coil in [
+            CoilLeaving::RelativeHumidity(RelativeHumidity::from_fraction(or(0.95))),
+            CoilLeaving::Bypass { factor: or(0.1), coldest: celsius(or(5.0)) },
+        ] {
+            let inlet = second.at_pressure(first.pressure()).unwrap_or(second);
+            seen.take("limiting line", room::limiting_line(&first, &inlet, coil), |limit| {
+                finite(&[limit.sensible_heat_ratio, limit.slope.joules_per_kilogram(), limit.touches.celsius()]);
+            });
+            seen.take("least reheat", room::least_reheat(&first, &gains, &inlet, coil), |least| {
+                finite(&[least.reheat.watts(), least.supply.dry_air_flow().kilograms_per_second()]);
+                outlet(&least.supply.into(), &Exchange::none());
+                outlet(&stream(least.coil_leaving, 1.0).into(), &Exchange::none());
+                assert!(least.reheat.watts() >= 0.0);
+            });
+            let drain = CondensateTemperature::LeavingAir;
+            let through = AirStream::new(inlet, entering.dry_air_flow()).unwrap();
+            seen.take("reheat behind a coil", reheat::with_coil(&through, &first, coil, drain), |done| {
+                outlet(&done.cooling.leaving.into(), &done.cooling.exchange);
+                outlet(&done.heating.leaving.into(), &done.heating.exchange);
+            });
+            seen.take("room conditioned", room::conditioned(&first, &gains, &through, coil, drain), |done| {
+                room_air(&done.room);
+                outlet(&done.reheat.heating.leaving.into(), &done.reheat.heating.exchange);
+            });
+        }
+        for carry_over in [
+            CarryOver::None,
+            CarryOver::Heat(HeatFlow::from_watts(or(1e3))),
+            CarryOver::Rise(TemperatureDifference::from_kelvins(or(4.0))),
+        ] {
+            let sorption = Sorption { heat_ratio: or(1.1), carry_over };
+            let sorbed = |done: &desiccant::Sorbed| {
+                outlet(&done.leaving.into(), &done.exchange);
+                finite(&[done.removed.kilograms_per_second(), done.sorption_heat.watts(), done.carried_heat.watts()]);
+            };
+            let target = ratio(or(0.5 * numbers(&first).1));
+            seen.take("desiccant", desiccant::to_humidity_ratio(&entering, target, sorption), sorbed);
+            let by_effectiveness = desiccant::by_effectiveness(&entering, or(0.5), ratio(or(0.0)), sorption);
+            seen.take("desiccant by effectiveness", by_effectiveness, sorbed);
+            let other = AirStream::new(second, flow(or(1.0))).unwrap_or_else(|_| stream(second, 1.0));
+            for known in [
+                Regeneration::Heat(HeatFlow::from_watts(or(3e4))),
+                Regeneration::Entering(celsius(or(100.0))),
+                Regeneration::Leaving(celsius(or(50.0))),
+            ] {
+                seen.take("desiccant wheel", desiccant::wheel(&entering, target, sorption, &other, known), |done| {
+                    sorbed(&done.process);
+                    outlet(&done.heater.leaving.into(), &done.heater.exchange);
+                    outlet(&done.regeneration.into(), &done.regeneration_exchange);
+                    finite(&[done.entropy_production]);
+                });
+            }
+        }
+        let share = Effectiveness { first: or(0.1), second: or(0.9) };
+        let hot = stream(
+            MoistAir::from_dry_bulb(
+                celsius(40.0 + 80.0 * or(0.5).clamp(0.0, 1.0).max(0.0)),
+                ratio(5e-4),
+                first.basis(),
+            )
+            .unwrap(),
+            1.0,
+        );
+        seen.take("wheel by potentials", potentials::wheel(&entering, &hot, share), |done| {
+            outlet(&done.process.into(), &done.exchange);
+            outlet(&done.regeneration.into(), &done.regeneration_exchange);
+            finite(&[done.entropy_production, done.removed.kilograms_per_second()]);
+            if let Some(left) = done.imbalance {
+                finite(&[left.heat.watts(), left.water.kilograms_per_second()]);
+            }
+        });
+        seen.take("potentials", potentials::potentials(&first), |(one, two)| finite(&[*one, *two]));
+        let tested = potentials::effectiveness_between(&first, &second, &hot.air());
+        seen.take("effectiveness of a wheel", tested, |found| finite(&[found.first, found.second]));
         let mut x = || number(&mut random);
 
         let carried = AirWithCondensate::new(second, ratio(x()), ratio(x()));

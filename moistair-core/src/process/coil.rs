@@ -10,6 +10,7 @@ mod coolant;
 mod flows;
 mod rating;
 
+pub(super) use apparatus::meetings_along;
 pub use apparatus::{Apparatus, ApparatusDewPoints, apparatus_dew_point, apparatus_dew_points};
 pub use conductance::{Arrangement, CoilSurface, WaterCoil, with_water};
 pub use coolant::{CoilWater, Coolant, LoadByWater, load_by_water};

@@ -12,9 +12,11 @@
 pub mod books;
 pub mod coil;
 pub mod compression;
+pub mod desiccant;
 pub mod humidify;
 pub mod mixing;
 pub mod reheat;
+pub mod room;
 pub mod sensible;
 pub mod tower;
 
@@ -22,10 +24,10 @@ use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
 use crate::mixture::Mixture;
-use crate::quantity::{Density, HeatFlow, MassFlow, VolumeFlow};
+use crate::quantity::{Density, HeatFlow, HumidityRatio, MassFlow, SpecificEnthalpy, VolumeFlow};
 use crate::real::{Scalar, k};
 use crate::state::construct::greatest_humidity_ratio;
-use crate::state::{AirWithCondensate, MoistAir};
+use crate::state::{AirWithCondensate, Freezing, MoistAir};
 
 /// Moist air with its dry-air mass flow.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -177,6 +179,31 @@ fn infeasible<S: Scalar>(quantity: Quantity, value: S, min: S, max: S) -> Error 
 fn capacity<S: Scalar>(air: &MoistAir<S>, celsius: S) -> S {
     let pressure = air.pressure().pascals();
     with_mixture!(air.formulation(), S, M => greatest_humidity_ratio(&M::<S>::at(celsius), celsius, pressure))
+}
+
+/// Vapor and condensate of an enthalpy and a total water that a process leaves, at the pressure of some air.
+fn equilibrium<S: Scalar>(enthalpy: S, water: S, air: &MoistAir<S>) -> Result<AirWithCondensate<S>, Error> {
+    let within = |quantity: Quantity, value: S| {
+        let (min, max) = quantity.limits();
+        if value < k(min) || value > k(max) { Err(infeasible(quantity, value, k(min), k(max))) } else { Ok(()) }
+    };
+    within(Quantity::TotalWater, water)?;
+    within(Quantity::LeavingEnthalpy, enthalpy)?;
+    AirWithCondensate::from_enthalpy_and_water(
+        SpecificEnthalpy::from_joules_per_kilogram(enthalpy),
+        HumidityRatio::from_kilograms_per_kilogram(water),
+        Freezing::Equilibrium,
+        air.basis(),
+    )
+}
+
+/// The same, refused where it would be fog.
+fn unsaturated<S: Scalar>(enthalpy: S, ratio: S, air: &MoistAir<S>) -> Result<MoistAir<S>, Error> {
+    let wet = equilibrium(enthalpy, ratio, air)?;
+    if wet.is_wet() {
+        return Err(infeasible(Quantity::HumidityRatio, ratio, k(0.0), parts(&wet.air()).1));
+    }
+    Ok(wet.air())
 }
 
 #[cfg(test)]

@@ -4,9 +4,11 @@ mod air;
 mod books;
 mod coil;
 mod compression;
+mod desiccant;
 mod humidify;
 mod mixing;
 mod reheat;
+mod room;
 mod row;
 mod sensible;
 mod stream;
@@ -39,6 +41,8 @@ const TRADES: &[&[Entry]] = &[
     compression::ENTRIES,
     books::ENTRIES,
     reheat::ENTRIES,
+    room::ENTRIES,
+    desiccant::ENTRIES,
 ];
 
 struct Entry {

@@ -3,7 +3,7 @@
 use super::row::{answers, processes};
 use crate::process::AirStream;
 use crate::process::coil::CondensateTemperature;
-use crate::process::reheat::{Reheat, to_state};
+use crate::process::reheat::{CoilLeaving, Reheat, to_state, with_coil};
 use crate::{MoistAir, RelativeHumidity};
 
 processes! {
@@ -14,6 +14,14 @@ processes! {
         condensate_temperature: CondensateTemperature,
     ) -> Reheat {
         to_state(&entering, &target, coil_leaving_relative_humidity, condensate_temperature)?
+    }
+    1001 "reheat.with_coil": (
+        entering: AirStream,
+        target: MoistAir,
+        coil_leaving: CoilLeaving,
+        condensate_temperature: CondensateTemperature,
+    ) -> Reheat {
+        with_coil(&entering, &target, coil_leaving, condensate_temperature)?
     }
 }
 

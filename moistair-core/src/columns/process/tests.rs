@@ -70,6 +70,8 @@ fn plausible(field: &Field, row: usize, random: &mut Random) -> f64 {
         ("cold_water", _) => random.between(30.0, 36.0),
         ("entering_water" | "given", "°C") => random.between(5.0, 15.0),
         ("specific_enthalpy", _) => random.between(2e4, 8e4),
+        ("slope", _) => random.between(3e6, 2e7),
+        ("moisture", _) => random.between(0.0, 0.004),
         ("steam_enthalpy", _) => random.between(2.6e6, 2.8e6),
         ("circulating", _) => 1500.0,
         ("make_up", _) => random.between(100.0, 1500.0),

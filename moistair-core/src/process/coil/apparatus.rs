@@ -103,23 +103,40 @@ pub fn apparatus_dew_points<S: Scalar>(
         let coldest = k(leaving.formulation().limits(Quantity::ApparatusDewPoint).0);
         return Err(infeasible(Quantity::LeavingTemperature, start, coldest, end));
     }
-    let line = Line { entering: parts(entering), leaving: parts(leaving), pressure: leaving.pressure().pascals() };
+    let ((h1, _), (h2, _)) = (parts(entering), parts(leaving));
+    let pressure = leaving.pressure().pascals();
+    let line = Line { from: parts(entering), drop: h1 - h2, dried: w1 - w2, leaving_ratio: w2, pressure };
     let coldest = k(leaving.formulation().limits(Quantity::ApparatusDewPoint).0);
     Ok(with_mixture!(leaving.formulation(), S, M => line.meetings::<M<S>>(start, coldest)))
 }
 
-/// The line between two states, each as enthalpy and humidity ratio.
+/// All meetings with saturation, below a temperature, of the line from a state along a fall of enthalpy and one of humidity ratio.
+pub(in crate::process) fn meetings_along<S: Scalar>(
+    air: &MoistAir<S>,
+    drop: S,
+    dried: S,
+    start: S,
+) -> ApparatusDewPoints<S> {
+    let pressure = air.pressure().pascals();
+    // There is no leaving air that might be saturated already.
+    let line = Line { from: parts(air), drop, dried, leaving_ratio: k(0.0), pressure };
+    let coldest = k(air.formulation().limits(Quantity::ApparatusDewPoint).0);
+    with_mixture!(air.formulation(), S, M => line.meetings::<M<S>>(start, coldest))
+}
+
+/// A line from a state, as enthalpy and humidity ratio, and how far it leads to the leaving air, if there is any.
 struct Line<S> {
-    entering: (S, S),
-    leaving: (S, S),
+    from: (S, S),
+    drop: S,
+    dried: S,
+    leaving_ratio: S,
     pressure: S,
 }
 
 impl<S: Scalar> Line<S> {
     /// How far saturation at t lies beyond the line, and the slope of that: convex on each surface.
     fn beyond<M: Mixture<S>>(&self, celsius: S, surface: Surface) -> (S, S) {
-        let ((h1, w1), (h2, w2)) = (self.entering, self.leaving);
-        let (drop, dried) = (h1 - h2, w1 - w2);
+        let ((h1, w1), drop, dried) = (self.from, self.drop, self.dried);
         let mixture = M::at(celsius);
         let saturation = mixture.saturation(self.pressure, surface);
         let ratio = saturation.humidity_ratio;
@@ -131,7 +148,7 @@ impl<S: Scalar> Line<S> {
 
     /// The coil that meets saturation at a temperature.
     fn apparatus<M: Mixture<S>>(&self, celsius: S, surface: Surface) -> Apparatus<S> {
-        let ((_, w1), (_, w2)) = (self.entering, self.leaving);
+        let ((_, w1), w2) = (self.from, self.leaving_ratio);
         let ratio = M::at(celsius).saturation(self.pressure, surface).humidity_ratio.at_most(w2);
         Apparatus { dew_point: Temperature::from_celsius(celsius), bypass_factor: (w2 - ratio) / (w1 - ratio) }
     }
@@ -139,7 +156,7 @@ impl<S: Scalar> Line<S> {
     /// From the leaving air's temperature down, over liquid and then over ice.
     fn meetings<M: Mixture<S>>(&self, start: S, coldest: S) -> ApparatusDewPoints<S> {
         let resolution = solve::temperature_resolution::<S>();
-        let (_, w2) = self.leaving;
+        let w2 = self.leaving_ratio;
         // Saturated air has met the surface, wherever its line leads.
         let rounding = k::<S>(SATURATION_TOLERANCE).at_least(S::epsilon() * k(64.0));
         let at_start = M::at(start).saturation(self.pressure, Surface::Stable);
