@@ -306,6 +306,9 @@
 // Effectiveness of a tower as a heat exchanger of enthalpy [1].
 #define MOISTAIR_ENTHALPY_EFFECTIVENESS 104
 
+// Power of its flow that a conductance goes with [1].
+#define MOISTAIR_FLOW_EXPONENT 105
+
 // Temperature of a coolant other than water [°C].
 #define MOISTAIR_COOLANT_TEMPERATURE 106
 
@@ -317,9 +320,6 @@
 
 // Conductance of the water side of a coil over that of its air side [1].
 #define MOISTAIR_CONDUCTANCE_RATIO 109
-
-// Power of its flow that a conductance goes with [1].
-#define MOISTAIR_FLOW_EXPONENT 110
 
 // Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
 #define MOISTAIR_REAL_GAS 0
