@@ -278,32 +278,79 @@ pub fn run<S: Scalar>(
 ) -> Result<Total<S>, SequenceError> {
     results.fill(None);
     let mut places = results.iter_mut();
-    let mut ledger = Ledger::empty();
-    ledger.entering(entering);
-    let mut total = Total {
-        leaving: *entering,
-        exchange: Exchange::none(),
-        loads: Loads::none(),
-        frost: false,
-        books: ledger.books(),
-    };
+    let mut sequence = Sequence::new(entering);
     for (index, step) in steps.iter().enumerate() {
-        let entering = total.leaving;
-        let done = step.done(&entering).map_err(|error| SequenceError { step: index, error })?;
-        ledger.exchange(&done.exchange);
-        ledger.solved(&done.leaving);
-        if let Some(other) = step.mixed_in() {
-            ledger.entering(&other);
-        }
+        let done = sequence.pass(step).map_err(|error| SequenceError { step: index, error })?;
         if let Some(place) = places.next() {
-            *place = Some(done.result(&entering, step.mixed_in()));
+            *place = Some(done);
         }
-        total.leaving = done.leaving;
-        total.exchange = total.exchange.plus(&done.exchange);
-        total.loads = total.loads.plus(&done.loads);
-        total.frost |= done.frost;
     }
-    ledger.leaving(&total.leaving);
-    total.books = ledger.books();
-    Ok(total)
+    Ok(sequence.total())
+}
+
+/// A chain that is built while it runs, for a caller without an array of its steps. [`run`] is this with each step of a slice.
+///
+/// ```
+/// use moistair_core::*;
+/// use moistair_core::process::AirStream;
+/// use moistair_core::sequence::{Sequence, Step};
+/// let air: MoistAir = MoistAir::from_dry_bulb(
+///     Temperature::from_celsius(5.0), RelativeHumidity::from_percent(70.0), Pressure::from_kilopascals(101.325))?;
+/// let mut sequence = Sequence::new(&AirStream::new(air, MassFlow::from_kilograms_per_second(1.0))?.into());
+/// let heater = sequence.pass(&Step::ToTemperature(Temperature::from_celsius(22.0)))?;
+/// assert_eq!(heater.loads.heating, sequence.total().loads.heating);
+/// // What a step refuses changes nothing.
+/// assert!(sequence.pass(&Step::ToTemperature(Temperature::from_celsius(900.0))).is_err());
+/// assert_eq!(sequence.total().leaving, heater.leaving);
+/// # Ok::<(), Error>(())
+/// ```
+#[derive(Clone, Copy, Debug)]
+pub struct Sequence<S = f64> {
+    leaving: WetStream<S>,
+    exchange: Exchange<S>,
+    loads: Loads<S>,
+    frost: bool,
+    ledger: Ledger<S>,
+}
+
+impl<S: Scalar> Sequence<S> {
+    /// With what enters the first step.
+    #[must_use]
+    pub fn new(entering: &WetStream<S>) -> Self {
+        let mut ledger = Ledger::empty();
+        ledger.entering(entering);
+        Self { leaving: *entering, exchange: Exchange::none(), loads: Loads::none(), frost: false, ledger }
+    }
+
+    /// Takes the air through one more step.
+    ///
+    /// # Errors
+    /// That of the process; the sequence then stands where it was.
+    pub fn pass(&mut self, step: &Step<S>) -> Result<StepResult<S>, Error> {
+        let done = step.done(&self.leaving)?;
+        let result = done.result(&self.leaving, step.mixed_in());
+        self.ledger.exchange(&done.exchange);
+        self.ledger.solved(&done.leaving);
+        if let Some(other) = step.mixed_in() {
+            self.ledger.entering(&other);
+        }
+        self.leaving = done.leaving;
+        self.exchange = self.exchange.plus(&done.exchange);
+        self.loads = self.loads.plus(&done.loads);
+        self.frost |= done.frost;
+        Ok(result)
+    }
+
+    /// What the steps did together so far.
+    pub fn total(&self) -> Total<S> {
+        let mut ledger = self.ledger;
+        ledger.leaving(&self.leaving);
+        Total {
+            leaving: self.leaving,
+            exchange: self.exchange,
+            loads: self.loads,
+            frost: self.frost,
+            books: ledger.books(),
+        }
+    }
 }

@@ -116,6 +116,28 @@ fn sprayed<S: Scalar>(done: Humidified<S>) -> Done<S> {
 }
 
 impl<S: Scalar> Step<S> {
+    /// The stable code of its kind, never re-used.
+    #[must_use]
+    pub const fn code(&self) -> i32 {
+        match self {
+            Self::ToTemperature(_) => 1,
+            Self::WithHeat(_) => 2,
+            Self::CoilToState { .. } => 10,
+            Self::CoilToTemperature { .. } => 11,
+            Self::CoilByBypassFactor { .. } => 12,
+            Self::CoilWithWater { .. } => 13,
+            Self::CoilWithReheat { .. } => 14,
+            Self::Steam { .. } => 20,
+            Self::SteamToHumidityRatio { .. } => 21,
+            Self::SteamToRelativeHumidity { .. } => 22,
+            Self::Spray { .. } => 23,
+            Self::Evaporative { .. } => 24,
+            Self::Mix(_) => 30,
+            Self::Eliminate => 31,
+            Self::Compress { .. } => 40,
+        }
+    }
+
     /// The stream that the step brings in.
     pub(super) fn mixed_in(&self) -> Option<WetStream<S>> {
         if let Self::Mix(other) = *self { Some(other) } else { None }
