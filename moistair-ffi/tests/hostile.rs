@@ -645,8 +645,10 @@ fn no_argument_upsets_an_export() {
         let count = [1, 1, 2, 3, usize::MAX][c.below(5) as usize];
         (c.pointer(&s), c.pointer(&steps).cast(), count, c.optional(&mut results).cast(), c.optional(&mut ran), out, e));
     run!(exercise moistair_sequence_solve: |c, out, e|
-        let s = carrying(c); let mut steps = [step(c), step(c), step(c)]; let mut results = empty();
+        let s = carrying(c); let mut results = empty();
         let (kind, quantity) = FREE[c.below(FREE.len() as u64) as usize];
+        let first = moistair_step { kind: if c.below(8) == 0 { c.selector(50) } else { kind }, ..step(c) };
+        let steps = [first, step(c), step(c)];
         let free = moistair_free {
             low: c.number(0.0, 10.0),
             high: c.number(10.0, 40.0),
@@ -656,7 +658,6 @@ fn no_argument_upsets_an_export() {
         let property = if c.below(2) == 0 { MOISTAIR_DRY_BULB } else { c.selector(MOISTAIR_PROPERTY_COUNT) };
         let target = moistair_target { value: c.value_of(property).1, after: [-1, -1, 0, c.selector(3)][c.below(4) as usize], property };
         let count = [1, 1, 1, 2, 3, 33, usize::MAX][c.below(7) as usize];
-        let _ = if c.below(8) != 0 { steps[0].kind = kind; };
         (c.pointer(&s), c.pointer(&steps).cast(), count, c.pointer(&free), c.pointer(&target),
             c.optional(&mut results).cast(), out, e));
     let treatment = |c: &Caller| moistair_water_treatment {

@@ -110,7 +110,7 @@ pub struct Solved<S = f64> {
 /// use moistair_core::*;
 /// use moistair_core::process::{AirStream, coil::CondensateTemperature};
 /// use moistair_core::sequence::{Free, SolveStatus, Step, Target, solve};
-/// let air = MoistAir::from_dry_bulb(
+/// let air: MoistAir = MoistAir::from_dry_bulb(
 ///     Temperature::from_celsius(27.0), RelativeHumidity::from_percent(52.0), Pressure::from_kilopascals(101.325))?;
 /// let entering = AirStream::new(air, MassFlow::from_kilograms_per_second(2.0))?.into();
 /// let mut steps = [
@@ -126,7 +126,7 @@ pub struct Solved<S = f64> {
 /// let supply = Target { after: None, quantity: Quantity::HumidityRatio, value: 0.0085 };
 /// let found = solve(&entering, &mut steps, &mut [], coil, supply)?;
 /// assert_eq!(found.status, SolveStatus::Solved);
-/// assert!((found.number - 12.46).abs() < 0.01 && found.residual.abs() < 1e-15);
+/// assert!((found.number - 12.31).abs() < 0.01 && found.residual.abs() < 1e-15);
 /// let supply = Target { value: 0.02, ..supply }; // moister than what enters
 /// assert_eq!(solve(&entering, &mut steps, &mut [], coil, supply)?.status, SolveStatus::NoCrossing);
 /// let coil = Free { number: Quantity::BypassFactor, ..coil }; // it has none
