@@ -57,6 +57,9 @@ pub enum Error {
     /// A process on no air at all.
     #[error("the dry-air mass flow is zero: heat or water would have nothing to go to")]
     NoFlow,
+    /// Air with droplets or ice where a process knows dry gas only.
+    #[error("the air carries droplets or ice, which this process does not describe: take them out before it")]
+    CarriesCondensate,
     /// A process cannot do what was asked; the value and the limits that bind it.
     #[error("{quantity} {value}{} cannot be reached by this process: {min} to {max}{}", Unit(*.quantity), Unit(*.quantity))]
     Infeasible {
@@ -202,6 +205,7 @@ impl Error {
             Self::NoFlow => 207,
             Self::Undetermined { .. } => 209,
             Self::UnattainableTogether { .. } => 210,
+            Self::CarriesCondensate => 211,
             Self::Infeasible { .. } => 301,
             Self::NoValue { reason, .. } => 310 + *reason as i32,
         }

@@ -18,6 +18,7 @@ pub mod process;
 mod quantity;
 mod real;
 mod saturation;
+pub mod sequence;
 pub mod signal;
 mod solve;
 mod state;

@@ -91,7 +91,7 @@ fn search<S: Scalar>(low: S, high: S, resolution: S, mut f: impl FnMut(S) -> (S,
 /// Interpolation kept within what halving would reach: Oliveira and Takahashi 2020, "An enhancement of the bisection method average
 /// performance preserving minmax optimality", ACM Trans. Math. Softw. 47(1), 5, with κ₁ = 0.2 / (b − a), κ₂ = 2, n₀ = 6: six
 /// evaluations more than halving at most.
-pub fn between<S: Scalar>(low: (S, S), high: (S, S), resolution: S, f: impl Fn(S) -> S) -> S {
+pub fn between<S: Scalar>(low: (S, S), high: (S, S), resolution: S, f: impl FnMut(S) -> S) -> S {
     let (x, _evaluations) = interpolate(low, high, resolution, f);
     #[cfg(test)]
     tests::MOST_EVALUATIONS.with(|most| most.set(most.get().max(_evaluations)));
@@ -99,7 +99,7 @@ pub fn between<S: Scalar>(low: (S, S), high: (S, S), resolution: S, f: impl Fn(S
 }
 
 /// The root and the evaluations that it took.
-fn interpolate<S: Scalar>(low: (S, S), high: (S, S), resolution: S, f: impl Fn(S) -> S) -> (S, u32) {
+fn interpolate<S: Scalar>(low: (S, S), high: (S, S), resolution: S, mut f: impl FnMut(S) -> S) -> (S, u32) {
     let ((mut a, mut below), (mut b, mut above)) = (low, high);
     let half = k::<S>(0.5);
     let shift = k::<S>(0.2) / (b - a);

@@ -84,6 +84,9 @@
 // No state at this pressure has both properties.
 #define MOISTAIR_UNATTAINABLE_TOGETHER 210
 
+// Air with droplets or ice where a process knows dry gas only.
+#define MOISTAIR_CARRIES_CONDENSATE 211
+
 // The process cannot reach what was asked.
 #define MOISTAIR_INFEASIBLE 301
 
@@ -416,6 +419,69 @@
 
 // The water enters colder than the limit that the air sets, and is warmed.
 #define MOISTAIR_TOWER_REVERSED 1
+
+// Heating or cooling to leaving_temperature, as moistair_sensible_to_temperature.
+#define MOISTAIR_STEP_TO_TEMPERATURE 1
+
+// Heating or cooling by heat_flow, as moistair_sensible_with_heat.
+#define MOISTAIR_STEP_WITH_HEAT 2
+
+// A coil that leaves state, as moistair_coil_to_state. Reads condensate and condensate_temperature, as all coils do.
+#define MOISTAIR_STEP_COIL_TO_STATE 10
+
+// A coil that leaves leaving_temperature and relative_humidity; where that would be moister than what enters, it stays dry and the air
+// keeps its humidity ratio.
+#define MOISTAIR_STEP_COIL_TO_TEMPERATURE 11
+
+// A coil by apparatus_dew_point and bypass_factor, as moistair_coil_by_bypass_factor.
+#define MOISTAIR_STEP_COIL_BY_BYPASS_FACTOR 12
+
+// A coil by surface and water, as moistair_coil_with_water.
+#define MOISTAIR_STEP_COIL_WITH_WATER 13
+
+// A coil that leaves relative_humidity and the heater behind it, to state, as moistair_reheat_to_state.
+#define MOISTAIR_STEP_COIL_WITH_REHEAT 14
+
+// Steam of water_flow and steam_enthalpy, as moistair_humidify_steam.
+#define MOISTAIR_STEP_STEAM 20
+
+// Steam of steam_enthalpy up to humidity_ratio, as moistair_humidify_steam_to_humidity_ratio.
+#define MOISTAIR_STEP_STEAM_TO_HUMIDITY_RATIO 21
+
+// Steam of steam_enthalpy up to relative_humidity, as moistair_humidify_steam_to_relative_humidity.
+#define MOISTAIR_STEP_STEAM_TO_RELATIVE_HUMIDITY 22
+
+// Water of water_flow and water_temperature sprayed in, as moistair_humidify_spray.
+#define MOISTAIR_STEP_SPRAY 23
+
+// Wetted media of saturation_effectiveness; evaporating_water says of what water, as moistair_humidify_evaporative. Reads
+// water_temperature for MOISTAIR_WATER_AT_GIVEN only.
+#define MOISTAIR_STEP_EVAPORATIVE 24
+
+// Mixing with stream, as moistair_mixing_adiabatic.
+#define MOISTAIR_STEP_MIX 30
+
+// All droplets and ice taken out of the air, at its own temperature: a perfect eliminator.
+#define MOISTAIR_STEP_ELIMINATE 31
+
+// Compression or expansion to pressure and leaving_temperature, as moistair_compress_to_pressure.
+#define MOISTAIR_STEP_COMPRESS 40
+
+// Most steps that a solve takes; a run takes any number.
+#define MOISTAIR_MOST_STEPS 32
+
+// The property has its value.
+#define MOISTAIR_SOLVE_SOLVED 0
+
+// The property is on one side of its value at both ends of the bracket, or of the part of it in which the chain runs; the nearer end is
+// returned.
+#define MOISTAIR_SOLVE_NO_CROSSING 1
+
+// The property jumps past its value; the nearer side is returned.
+#define MOISTAIR_SOLVE_JUMP 2
+
+// The chain fails between two ends at which it runs; the nearest value found is returned.
+#define MOISTAIR_SOLVE_INTERRUPTED 3
 
 // A temperature, °C.
 #define MOISTAIR_KIND_TEMPERATURE 1
@@ -1104,6 +1170,157 @@ typedef struct {
     // Liquid and ice in the leaving air, what a perfect separator drains [kg/s].
     double condensate;
 } moistair_compressed;
+
+// One process of a chain. Only what its kind names is read; zero the rest.
+typedef struct {
+    // The stream that is mixed in.
+    moistair_wet_stream stream;
+    // A state that leaves.
+    moistair_state state;
+    // A coil by its conductances.
+    moistair_coil_surface surface;
+    // The water of a coil.
+    moistair_coil_water water;
+    // [°C], -80 to 150.
+    double leaving_temperature;
+    // [W], positive into the air.
+    double heat_flow;
+    // [1].
+    double relative_humidity;
+    // [kg/kg].
+    double humidity_ratio;
+    // [°C], -40 to 150.
+    double apparatus_dew_point;
+    // [1], 0 to 1.
+    double bypass_factor;
+    // [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only.
+    double condensate_temperature;
+    // Of water or steam [kg/s].
+    double water_flow;
+    // [°C], 0 to 200.
+    double water_temperature;
+    // [J/kg].
+    double steam_enthalpy;
+    // [1], 0 to 1.
+    double saturation_effectiveness;
+    // Absolute [Pa].
+    double pressure;
+    // MOISTAIR_STEP_….
+    int32_t kind;
+    // MOISTAIR_CONDENSATE_AT_…, of coils.
+    int32_t condensate;
+    // MOISTAIR_WATER_AT_…, of wetted media.
+    int32_t evaporating_water;
+    // 0.
+    int32_t reserved;
+} moistair_step;
+
+// What a step, or a chain, asks of the plant by name; magnitudes, unless said otherwise.
+typedef struct {
+    // Heat from heaters and warm coils [W].
+    double heating;
+    // Heat taken out by coils and dry coolers [W].
+    double cooling;
+    // The sensible part of that [W].
+    double sensible_cooling;
+    // The rest of it [W].
+    double latent_cooling;
+    // Of compression and expansion: work less the heat of cooling, signed [W].
+    double compression;
+    // Water that drains from coils and eliminators [kg/s].
+    double condensate;
+    // Steam into the air [kg/s].
+    double steam;
+    // Liquid water into the air, with what it carries on as droplets [kg/s].
+    double humidifying_water;
+    // Dry air of other streams mixed in [kg/s].
+    double mixed_in;
+} moistair_loads;
+
+// What one step of a chain did.
+typedef struct {
+    // The air that enters.
+    moistair_wet_stream entering;
+    // The air that leaves.
+    moistair_wet_stream leaving;
+    // Heat and water into the air.
+    moistair_exchange exchange;
+    // The same by name.
+    moistair_loads loads;
+    // What enters, with a stream mixed in, against what leaves.
+    moistair_books books;
+    // Of a coil MOISTAIR_COIL_…; -1 of other steps.
+    int32_t regime;
+    // 1 if frost forms, or water in a coil may freeze; else 0. No freezestat.
+    int32_t frost;
+} moistair_step_result;
+
+// What all steps of a chain did together.
+typedef struct {
+    // The air that leaves the last step.
+    moistair_wet_stream leaving;
+    // The sum of all exchanges.
+    moistair_exchange exchange;
+    // The sum of all loads.
+    moistair_loads loads;
+    // What enters the first step and is mixed in, against what leaves the last and all that was exchanged.
+    moistair_books books;
+    // 1 if any step reports frost, else 0.
+    int32_t frost;
+    // 0.
+    int32_t reserved;
+} moistair_sequence_total;
+
+// The number of a step that is free, and where to look for it.
+typedef struct {
+    // Where to look from, in the unit of the quantity.
+    double low;
+    // Where to look to; above low.
+    double high;
+    // The step that it belongs to, from 0.
+    int32_t step;
+    // Which number, by its quantity, such as MOISTAIR_LEAVING_TEMPERATURE: one that the kind of the step reads. MOISTAIR_CONDUCTANCE is that
+    // of the air side of a coil, with the water side in proportion; MOISTAIR_DRY_AIR_FLOW that of a stream mixed in.
+    int32_t quantity;
+} moistair_free;
+
+// What the air is to have.
+typedef struct {
+    // The value wanted.
+    double value;
+    // The step whose leaving air is meant, from 0, at or after the free one; -1 for the last.
+    int32_t after;
+    // Selector of the property.
+    int32_t property;
+} moistair_target;
+
+// What a solve found.
+typedef struct {
+    // The chain with the free number in it.
+    moistair_sequence_total total;
+    // The free number.
+    double number;
+    // The property that the air has with it.
+    double reached;
+    // That less the wanted value.
+    double residual;
+    // The lower end of the bracket, or of the part of it in which the chain runs.
+    double low;
+    // The property there.
+    double reached_at_low;
+    // The upper end.
+    double high;
+    // The property there.
+    double reached_at_high;
+    // MOISTAIR_SOLVE_….
+    int32_t status;
+    // What stopped the chain where it does not run: a status, MOISTAIR_OK for nothing.
+    int32_t refused;
+    // The step that refused, from 0; -1 for none.
+    int32_t refused_step;
+    // How often the steps were evaluated for it.
+    uint32_t evaluations;
+} moistair_solved;
 
 // What is known about a channel before its first sample. Limits and resolutions are in the unit of the core, which the kinds name.
 // Make one with moistair_channel_new, then set what differs.
@@ -2065,6 +2282,43 @@ int32_t moistair_compression_to_pressure(const moistair_wet_stream *entering,
                                          double leaving_temperature,
                                          moistair_compressed *done,
                                          moistair_error *error);
+
+// Takes a stream through a chain of processes and adds up heat, water and work.
+//
+// entering: the stream that enters; steps: array of steps, in the order of the air; may be null for a count of 0; count: how many; results:
+// room for what each step did, count elements, may be null; ran: how many steps ran, written whenever it is given and the pointers are good,
+// also when a step fails: it is then the place of that step, and the results of those before it have been written; may be null; total: output;
+// error: may be null. Memory to be written may not overlap with any other memory of the call.
+// Returns 0, 1xx, 2xx, 3xx: the status of the first step that fails. Later steps are not run.
+int32_t moistair_sequence_run(const moistair_wet_stream *entering,
+                              const moistair_step *steps,
+                              size_t count,
+                              moistair_step_result *results,
+                              size_t *ran,
+                              moistair_sequence_total *total,
+                              moistair_error *error);
+
+// Finds the number of one step with which the air has a property, and runs the chain with it.
+//
+// The property need not be monotone: it is enough that it lies on two sides of its value at the ends of the bracket. Where the chain does not
+// run at an end, that is drawn in to where it does; where it runs at neither, 15 points between are tried. At most 179 evaluations of the
+// steps from the free one on, about ten where the chain runs at both ends. The steps stay as they are: put solved.number into its place.
+// The steps are copied to the stack, about 10 KiB.
+//
+// entering: the stream that enters; steps: array of steps, in the order of the air; count: how many, 1 to MOISTAIR_MOST_STEPS; free: which
+// number of which step, and where to look; target: the property and its value; results: room for what each step does with the number
+// found, count elements, may be null, written on success; solved: output; error: may be null. Memory to be written may not overlap with
+// any other memory of the call.
+// Returns 0 (see solved.status), 1xx, 2xx, 3xx: of a wrong argument, of a step before the free one, of the chain at the lower end of the
+// bracket when it runs nowhere, or of a step behind the one whose air is looked at.
+int32_t moistair_sequence_solve(const moistair_wet_stream *entering,
+                                const moistair_step *steps,
+                                size_t count,
+                                const moistair_free *free,
+                                const moistair_target *target,
+                                moistair_step_result *results,
+                                moistair_solved *solved,
+                                moistair_error *error);
 
 // A channel of a kind in a raw unit, with no stuck rule, no hold, no gap rule.
 //

@@ -37,6 +37,8 @@ pub const MOISTAIR_INVALID_CHANNEL: i32 = 208;
 pub const MOISTAIR_UNDETERMINED: i32 = 209;
 /// No state at this pressure has both properties.
 pub const MOISTAIR_UNATTAINABLE_TOGETHER: i32 = 210;
+/// Air with droplets or ice where a process knows dry gas only.
+pub const MOISTAIR_CARRIES_CONDENSATE: i32 = 211;
 /// The process cannot reach what was asked.
 pub const MOISTAIR_INFEASIBLE: i32 = 301;
 /// A sum would not be finite. Nothing was added.
@@ -165,6 +167,7 @@ pub fn text(code: i32) -> Option<&'static CStr> {
         MOISTAIR_INVALID_CHANNEL => c"the limits of a channel are not in order, or its unit is of another kind",
         MOISTAIR_UNDETERMINED => c"the two properties fix no state together, only badly, or their pair is not offered",
         MOISTAIR_UNATTAINABLE_TOGETHER => c"no state at this pressure has both properties",
+        MOISTAIR_CARRIES_CONDENSATE => c"the air carries droplets or ice, which this process does not describe",
         MOISTAIR_OVERFLOW => c"a sum would not be finite",
         MOISTAIR_INFEASIBLE => c"the process cannot reach what was asked",
         MOISTAIR_NO_VALUE_DRY_AIR => c"no value: there is no water vapor",
@@ -187,6 +190,7 @@ const _: () = {
     assert!(Error::MixedFormulations.code() == MOISTAIR_MIXED_FORMULATIONS);
     assert!(Error::MixedPressures.code() == MOISTAIR_MIXED_PRESSURES);
     assert!(Error::NoFlow.code() == MOISTAIR_NO_FLOW);
+    assert!(Error::CarriesCondensate.code() == MOISTAIR_CARRIES_CONDENSATE);
     let (first, second) = (moistair_core::Quantity::DewPoint, moistair_core::Quantity::DewPoint);
     let undetermined = Error::Undetermined { first, second, reason: moistair_core::Undetermined::Twice };
     assert!(undetermined.code() == MOISTAIR_UNDETERMINED);

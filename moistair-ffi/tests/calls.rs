@@ -269,3 +269,204 @@ fn derivatives() {
         assert!(compared > 20);
     }
 }
+
+/// A step of every kind, beside the same step of the core; a chain; what a failing step leaves; a number solved for.
+#[test]
+fn sequences() {
+    use moistair_core::process::coil::{Arrangement, CoilSurface, CoilWater, CondensateTemperature, Coolant};
+    use moistair_core::process::humidify::EvaporatingWater;
+    use moistair_core::sequence::{Free, Step, StepResult, Target, Total, run, solve};
+    use moistair_core::{Conductance, HeatFlow, RelativeHumidity, SpecificEnthalpy};
+
+    for (code, formulation) in FORMULATIONS {
+        let basis = moistair_core::Basis::new(pascals(101_325.0), formulation);
+        let air = |t, fraction| {
+            MoistAir::from_dry_bulb(celsius(t), RelativeHumidity::from_fraction(fraction), basis).unwrap()
+        };
+        let flow = MassFlow::from_kilograms_per_second;
+        let stream = |t, fraction, m| AirStream::new(air(t, fraction), flow(m)).unwrap();
+        let c_stream = |t, fraction, m| -> moistair_wet_stream {
+            let basis = moistair_basis { pressure: 101_325.0, formulation: code, reserved: 0 };
+            // SAFETY: valid places.
+            let gas = output(blank(), |out| unsafe {
+                moistair_from_dry_bulb(t, MOISTAIR_RELATIVE_HUMIDITY, fraction, basis, out, null_mut())
+            });
+            let gas = moistair_stream { air: gas, dry_air_flow: m };
+            // SAFETY: valid places.
+            output(blank(), |out| unsafe { moistair_wet_stream_from_stream(&gas, 0.0, 0.0, out, null_mut()) })
+        };
+        let of_kind = |kind| moistair_step {
+            kind,
+            stream: c_stream(5.0, 0.8, 0.5),
+            state: c_stream(14.0, 0.9, 1.0).mixture.air,
+            surface: moistair_coil_surface {
+                air_side: 2e3,
+                water_side: 3e3,
+                arrangement: MOISTAIR_COUNTERFLOW,
+                reserved: 0,
+            },
+            water: moistair_coil_water { flow: 0.8, entering: 6.0, specific_heat: 0.0 },
+            leaving_temperature: 16.0,
+            heat_flow: 4e3,
+            relative_humidity: 0.93,
+            humidity_ratio: 0.013,
+            apparatus_dew_point: 9.0,
+            bypass_factor: 0.1,
+            condensate_temperature: 11.0,
+            water_flow: 1e-3,
+            water_temperature: 15.0,
+            steam_enthalpy: 2.68e6,
+            saturation_effectiveness: 0.8,
+            pressure: 1.1e5,
+            condensate: MOISTAIR_CONDENSATE_AT_GIVEN,
+            evaporating_water: MOISTAIR_WATER_AT_GIVEN,
+            ..blank()
+        };
+        let condensate = CondensateTemperature::Given(celsius(11.0));
+        let (relative_humidity, leaving) = (RelativeHumidity::from_fraction(0.93), celsius(16.0));
+        let enthalpy = SpecificEnthalpy::from_joules_per_kilogram(2.68e6);
+        let surface = CoilSurface {
+            air_side: Conductance::from_watts_per_kelvin(2e3),
+            water_side: Conductance::from_watts_per_kelvin(3e3),
+            arrangement: Arrangement::Counterflow,
+        };
+        let water = CoilWater { flow: flow(0.8), entering: celsius(6.0), coolant: Coolant::Water };
+        let ratio = HumidityRatio::from_kilograms_per_kilogram(0.013);
+        let steps = [
+            Step::ToTemperature(leaving),
+            Step::WithHeat(HeatFlow::from_watts(4e3)),
+            Step::CoilToState { leaving: air(14.0, 0.9), condensate },
+            Step::CoilToTemperature { leaving, relative_humidity, condensate },
+            Step::CoilByBypassFactor { apparatus_dew_point: celsius(9.0), bypass_factor: 0.1, condensate },
+            Step::CoilWithWater { surface, water, condensate },
+            Step::CoilWithReheat { target: air(14.0, 0.9), coil_leaving: relative_humidity, condensate },
+            Step::Steam { flow: flow(1e-3), enthalpy },
+            Step::SteamToHumidityRatio { target: ratio, enthalpy },
+            Step::SteamToRelativeHumidity { target: relative_humidity, enthalpy },
+            Step::Spray { flow: flow(1e-3), temperature: celsius(15.0) },
+            Step::Evaporative { saturation_effectiveness: 0.8, water: EvaporatingWater::Given(celsius(15.0)) },
+            Step::Mix(stream(5.0, 0.8, 0.5).into()),
+            Step::Eliminate,
+            Step::Compress { pressure: pascals(1.1e5), leaving },
+        ];
+        let same_result = |done: &moistair_step_result, expected: &StepResult| {
+            same(&done.entering.mixture.air, &expected.entering.air().air());
+            same(&done.leaving.mixture.air, &expected.leaving.air().air());
+            assert_eq!(done.leaving.mixture.liquid, expected.leaving.air().liquid().kilograms_per_kilogram());
+            assert_eq!(done.leaving.dry_air_flow, expected.leaving.dry_air_flow().kilograms_per_second());
+            assert_eq!(done.exchange.heat, expected.exchange.heat.watts());
+            assert_eq!(done.exchange.water, expected.exchange.water.kilograms_per_second());
+            assert_eq!(done.exchange.water_enthalpy_flow, expected.exchange.water_enthalpy_flow.watts());
+            assert_eq!(done.loads.heating, expected.loads.heating.watts());
+            assert_eq!(done.loads.cooling, expected.loads.cooling.watts());
+            assert_eq!(done.loads.sensible_cooling, expected.loads.sensible_cooling.watts());
+            assert_eq!(done.loads.latent_cooling, expected.loads.latent_cooling.watts());
+            assert_eq!(done.loads.compression, expected.loads.compression.watts());
+            assert_eq!(done.loads.condensate, expected.loads.condensate.kilograms_per_second());
+            assert_eq!(done.loads.steam, expected.loads.steam.kilograms_per_second());
+            assert_eq!(done.loads.humidifying_water, expected.loads.humidifying_water.kilograms_per_second());
+            assert_eq!(done.loads.mixed_in, expected.loads.mixed_in.kilograms_per_second());
+            assert_eq!(done.books.heat_residual, expected.books.heat_residual.watts());
+            assert_eq!(done.books.close, 1);
+            assert_eq!(done.regime, expected.regime.map_or(-1, |regime| regime as i32));
+            assert_eq!(done.frost, i32::from(expected.frost));
+        };
+        let same_total = |total: &moistair_sequence_total, expected: &Total| {
+            same(&total.leaving.mixture.air, &expected.leaving.air().air());
+            assert_eq!(total.exchange.heat, expected.exchange.heat.watts());
+            assert_eq!(total.loads.cooling, expected.loads.cooling.watts());
+            assert_eq!(total.books.heat_residual, expected.books.heat_residual.watts());
+            assert_eq!((total.books.close, total.frost), (1, i32::from(expected.frost)));
+        };
+        let (entering, c_entering) = (stream(30.0, 0.4, 1.0).into(), c_stream(30.0, 0.4, 1.0));
+        let c_run = |steps: &[moistair_step], results: &mut [moistair_step_result], ran: &mut usize, total: *mut _| {
+            assert_eq!(steps.len(), results.len());
+            // SAFETY: valid places.
+            unsafe {
+                moistair_sequence_run(
+                    &c_entering,
+                    steps.as_ptr(),
+                    steps.len(),
+                    results.as_mut_ptr(),
+                    ran,
+                    total,
+                    null_mut(),
+                )
+            }
+        };
+        for step in &steps {
+            let mut results = [None];
+            let expected = run(&entering, &[*step], &mut results).unwrap();
+            let (mut done, mut ran) = ([blank()], 0);
+            let total = output(blank(), |out| c_run(&[of_kind(step.code())], &mut done, &mut ran, out));
+            assert_eq!(ran, 1);
+            same_result(&done[0], &results[0].unwrap());
+            same_total(&total, &expected);
+        }
+
+        let kinds = [
+            MOISTAIR_STEP_MIX,
+            MOISTAIR_STEP_COIL_TO_TEMPERATURE,
+            MOISTAIR_STEP_WITH_HEAT,
+            MOISTAIR_STEP_STEAM,
+            MOISTAIR_STEP_COIL_WITH_REHEAT,
+        ];
+        let mut c_chain = kinds.map(of_kind);
+        let mut chain = kinds.map(|kind| *steps.iter().find(|step| step.code() == kind).unwrap());
+        let mut results = [None; 5];
+        let expected = run(&entering, &chain[..4], &mut results).unwrap();
+        let (mut done, mut ran) = ([blank(); 5], 0);
+        let total = output(blank(), |out| c_run(&c_chain[..4], &mut done[..4], &mut ran, out));
+        assert_eq!(ran, 4);
+        same_total(&total, &expected);
+        done[..4].iter().zip(&results).for_each(|(done, expected)| same_result(done, &expected.unwrap()));
+        // The last step asks for moister air than there is: those before it stand.
+        c_chain[4].state = c_stream(25.0, 0.9, 1.0).mixture.air;
+        let (mut done, mut untouched) = ([blank(); 5], blank::<moistair_sequence_total>());
+        assert_eq!(c_run(&c_chain, &mut done, &mut ran, &mut untouched), MOISTAIR_INFEASIBLE);
+        assert_eq!((ran, untouched.loads.mixed_in), (4, 0.0));
+        done[..4].iter().zip(&results).for_each(|(done, expected)| same_result(done, &expected.unwrap()));
+        // No steps change nothing, and need no memory.
+        // SAFETY: valid places, no array.
+        let nothing = output(blank::<moistair_sequence_total>(), |out| unsafe {
+            moistair_sequence_run(&c_entering, core::ptr::null(), 0, null_mut(), &mut ran, out, null_mut())
+        });
+        assert_eq!((ran, nothing.leaving.dry_air_flow, nothing.exchange.heat), (0, 1.0, 0.0));
+        c_chain[1].kind = 99;
+        assert_eq!(c_run(&c_chain, &mut done, &mut ran, &mut untouched), MOISTAIR_UNKNOWN_SELECTOR);
+        assert_eq!(ran, 1);
+
+        let mut c_chain = kinds.map(of_kind);
+        let free = moistair_free { low: 5.0, high: 90.0, step: 1, quantity: MOISTAIR_LEAVING_TEMPERATURE };
+        let target = moistair_target { value: 0.0085, after: -1, property: MOISTAIR_HUMIDITY_RATIO };
+        // SAFETY: valid places.
+        let solved = output(blank::<moistair_solved>(), |out| unsafe {
+            moistair_sequence_solve(
+                &c_entering,
+                c_chain.as_ptr(),
+                4,
+                &free,
+                &target,
+                done.as_mut_ptr(),
+                out,
+                null_mut(),
+            )
+        });
+        let free = Free { step: 1, number: Quantity::LeavingTemperature, low: 5.0, high: 90.0 };
+        let target = Target { after: None, quantity: Quantity::HumidityRatio, value: 0.0085 };
+        let expected = solve(&entering, &mut chain[..4], &mut results, free, target).unwrap();
+        assert_eq!(
+            (solved.status, solved.number, solved.reached),
+            (MOISTAIR_SOLVE_SOLVED, expected.number, expected.reached)
+        );
+        assert_eq!((solved.low, solved.reached_at_low), (expected.low.number, expected.low.reached));
+        assert_eq!((solved.high, solved.reached_at_high), (expected.high.number, expected.high.reached));
+        assert_eq!((solved.refused, solved.refused_step), (MOISTAIR_INFEASIBLE, 1));
+        assert_eq!((solved.residual, solved.evaluations), (expected.residual, expected.evaluations));
+        same_total(&solved.total, &expected.total);
+        done[..4].iter().zip(&results).for_each(|(done, expected)| same_result(done, &expected.unwrap()));
+        c_chain[1].leaving_temperature = solved.number;
+        let total = output(blank(), |out| c_run(&c_chain[..4], &mut done[..4], &mut ran, out));
+        same_total(&total, &expected.total);
+    }
+}

@@ -88,6 +88,7 @@ fn rendered() -> String {
         "process/tower",
         "process/tower_sizing",
         "process/compression",
+        "process/sequence",
         "signal",
         "account",
     ] {

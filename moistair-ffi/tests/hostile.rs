@@ -71,6 +71,8 @@ words! {
     moistair_load_by_water, [], [], [];
     moistair_compressed, [12], [], [0];
     moistair_books, [5], [], [];
+    moistair_sequence_total, [12, 35, 36], [], [0];
+    moistair_solved, [12, 35, 36, 44, 45], [], [0];
     moistair_tower_water, [], [], [];
     moistair_water_treatment, [], [], [];
     moistair_water_use, [4], [], [];
@@ -439,6 +441,34 @@ fn change<T: Words>(
     successes.insert(name, (good, calls));
 }
 
+const KINDS: [i32; 15] = [
+    MOISTAIR_STEP_TO_TEMPERATURE,
+    MOISTAIR_STEP_WITH_HEAT,
+    MOISTAIR_STEP_COIL_TO_STATE,
+    MOISTAIR_STEP_COIL_TO_TEMPERATURE,
+    MOISTAIR_STEP_COIL_BY_BYPASS_FACTOR,
+    MOISTAIR_STEP_COIL_WITH_WATER,
+    MOISTAIR_STEP_COIL_WITH_REHEAT,
+    MOISTAIR_STEP_STEAM,
+    MOISTAIR_STEP_STEAM_TO_HUMIDITY_RATIO,
+    MOISTAIR_STEP_STEAM_TO_RELATIVE_HUMIDITY,
+    MOISTAIR_STEP_SPRAY,
+    MOISTAIR_STEP_EVAPORATIVE,
+    MOISTAIR_STEP_MIX,
+    MOISTAIR_STEP_ELIMINATE,
+    MOISTAIR_STEP_COMPRESS,
+];
+
+/// Numbers that may be free, and a step that has each.
+const FREE: [(i32, i32); 6] = [
+    (MOISTAIR_STEP_TO_TEMPERATURE, MOISTAIR_LEAVING_TEMPERATURE),
+    (MOISTAIR_STEP_COIL_TO_TEMPERATURE, MOISTAIR_LEAVING_TEMPERATURE),
+    (MOISTAIR_STEP_COIL_BY_BYPASS_FACTOR, MOISTAIR_APPARATUS_DEW_POINT),
+    (MOISTAIR_STEP_COIL_WITH_WATER, MOISTAIR_WATER_FLOW),
+    (MOISTAIR_STEP_MIX, MOISTAIR_DRY_AIR_MASS_FLOW),
+    (MOISTAIR_STEP_SPRAY, MOISTAIR_WATER_TEMPERATURE),
+];
+
 fn calls() -> u64 {
     env::var("MOISTAIR_CASES").map_or(10_000, |text| text.parse().unwrap())
 }
@@ -575,6 +605,61 @@ fn no_argument_upsets_an_export() {
     run!(exercise moistair_books_balance: |c, out, e|
         let s = [c.wet_stream(), c.wet_stream()]; let leaving = c.wet_stream(); let exchange = c.kept::<moistair_exchange>();
         (c.pointer(&s).cast(), 1 + c.below(2) as usize, c.pointer(&leaving), c.pointer(&exchange), out, e));
+    let carrying = |c: &Caller| {
+        let (gas, liquid) = (c.stream(), if c.below(4) == 0 { c.number(0.0, 1e-3) } else { 0.0 });
+        let mixture =
+            moistair_air_with_condensate { air: gas.air, liquid, ice: 0.0, total_water: 0.0, specific_enthalpy: 0.0 };
+        moistair_wet_stream { mixture, dry_air_flow: gas.dry_air_flow }
+    };
+    let step = |c: &Caller| moistair_step {
+        stream: carrying(c),
+        state: c.state(),
+        surface: moistair_coil_surface {
+            air_side: c.number(0.0, 1e4),
+            water_side: c.number(0.0, 1e4),
+            arrangement: c.selector(2),
+            reserved: 0,
+        },
+        water: chilled(c),
+        leaving_temperature: c.number(-20.0, 60.0),
+        heat_flow: c.number(-2e4, 2e5),
+        relative_humidity: c.number(0.5, 1.0),
+        humidity_ratio: c.number(0.0, 0.03),
+        apparatus_dew_point: c.number(-10.0, 20.0),
+        bypass_factor: c.number(0.0, 1.0),
+        condensate_temperature: c.number(-5.0, 20.0),
+        water_flow: c.number(0.0, 0.05),
+        water_temperature: c.number(0.0, 90.0),
+        steam_enthalpy: c.number(2.5e6, 2.8e6),
+        saturation_effectiveness: c.number(0.0, 1.0),
+        pressure: c.number(7e4, 3e5),
+        kind: if c.below(16) == 0 { c.selector(50) } else { KINDS[c.below(KINDS.len() as u64) as usize] },
+        condensate: c.selector(3),
+        evaporating_water: c.selector(2),
+        reserved: c.bits() as i32,
+    };
+    // SAFETY: numbers.
+    let empty = || unsafe { core::mem::zeroed::<[moistair_step_result; 3]>() };
+    run!(exercise moistair_sequence_run: |c, out, e|
+        let s = carrying(c); let steps = [step(c), step(c), step(c)]; let mut results = empty(); let mut ran = 0;
+        let count = [1, 1, 2, 3, usize::MAX][c.below(5) as usize];
+        (c.pointer(&s), c.pointer(&steps).cast(), count, c.optional(&mut results).cast(), c.optional(&mut ran), out, e));
+    run!(exercise moistair_sequence_solve: |c, out, e|
+        let s = carrying(c); let mut results = empty();
+        let (kind, quantity) = FREE[c.below(FREE.len() as u64) as usize];
+        let first = moistair_step { kind: if c.below(8) == 0 { c.selector(50) } else { kind }, ..step(c) };
+        let steps = [first, step(c), step(c)];
+        let free = moistair_free {
+            low: c.number(0.0, 10.0),
+            high: c.number(10.0, 40.0),
+            step: c.selector(1),
+            quantity: if c.below(8) == 0 { c.selector(120) } else { quantity },
+        };
+        let property = if c.below(2) == 0 { MOISTAIR_DRY_BULB } else { c.selector(MOISTAIR_PROPERTY_COUNT) };
+        let target = moistair_target { value: c.value_of(property).1, after: [-1, -1, 0, c.selector(3)][c.below(4) as usize], property };
+        let count = [1, 1, 1, 2, 3, 33, usize::MAX][c.below(7) as usize];
+        (c.pointer(&s), c.pointer(&steps).cast(), count, c.pointer(&free), c.pointer(&target),
+            c.optional(&mut results).cast(), out, e));
     let treatment = |c: &Caller| moistair_water_treatment {
         drift_fraction: c.number(0.0, 0.01),
         cycles_of_concentration: c.number(1.0, 8.0),

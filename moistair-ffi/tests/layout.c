@@ -34,6 +34,17 @@ _Static_assert(offsetof(moistair_water_coil, freezing) == 320, "moistair_water_c
 _Static_assert(sizeof(moistair_reheat) == 440, "moistair_reheat");
 _Static_assert(sizeof(moistair_humidified) == 184, "moistair_humidified");
 _Static_assert(sizeof(moistair_books) == 48, "moistair_books");
+_Static_assert(sizeof(moistair_step) == 408, "moistair_step");
+_Static_assert(offsetof(moistair_step, leaving_temperature) == 296, "moistair_step");
+_Static_assert(offsetof(moistair_step, kind) == 392, "moistair_step");
+_Static_assert(sizeof(moistair_loads) == 72, "moistair_loads");
+_Static_assert(sizeof(moistair_step_result) == 440, "moistair_step_result");
+_Static_assert(offsetof(moistair_step_result, regime) == 432, "moistair_step_result");
+_Static_assert(sizeof(moistair_sequence_total) == 296, "moistair_sequence_total");
+_Static_assert(sizeof(moistair_free) == 24, "moistair_free");
+_Static_assert(sizeof(moistair_target) == 16, "moistair_target");
+_Static_assert(sizeof(moistair_solved) == 368, "moistair_solved");
+_Static_assert(offsetof(moistair_solved, status) == 352, "moistair_solved");
 _Static_assert(sizeof(moistair_tower_water) == 24, "moistair_tower_water");
 _Static_assert(sizeof(moistair_water_treatment) == 16, "moistair_water_treatment");
 _Static_assert(sizeof(moistair_water_use) == 40, "moistair_water_use");

@@ -12,11 +12,17 @@ pub fn identifier(quantity: Quantity) -> String {
 
 /// The exception for an error.
 pub fn exception(py: Python<'_>, error: &Error) -> PyErr {
+    exception_at(py, error, "")
+}
+
+/// The exception for an error, whose text begins with the place where it arose.
+pub fn exception_at(py: Python<'_>, error: &Error, place: &str) -> PyErr {
     let (value, minimum, maximum) = match error.value_and_limits() {
         Some((value, minimum, maximum)) => (Some(value), Some(minimum), Some(maximum)),
         None => (None, None, None),
     };
-    from_parts(py, (error.code(), error.to_string(), error.quantity().map(identifier), value, minimum, maximum))
+    let text = format!("{place}{error}");
+    from_parts(py, (error.code(), text, error.quantity().map(identifier), value, minimum, maximum))
 }
 
 type Parts = (i32, String, Option<String>, Option<f64>, Option<f64>, Option<f64>);

@@ -25,7 +25,7 @@ mod _core {
     #[pymodule_export]
     use crate::atmosphere::{elevation_at_pressure, pressure_at_elevation, temperature_at_elevation};
     #[pymodule_export]
-    use crate::process::{process_table, run};
+    use crate::process::{process_table, run, run_sequence};
     #[pymodule_export]
     use crate::signal::{
         Channel, ChannelState, Checked, CheckedColumns, code_table, from_core, restore_checked, to_core,
@@ -35,6 +35,7 @@ mod _core {
 
     #[pymodule_init]
     fn init(module: &Bound<'_, PyModule>) -> PyResult<()> {
+        module.add("MAX_STEPS", moistair_core::columns::MAX_STEPS)?;
         module.add("MAX_STREAMS", moistair_core::columns::MAX_STREAMS)?;
         module.add("NUMERICS_VERSION", moistair_core::NUMERICS_VERSION)?;
         module.add("__version__", env!("CARGO_PKG_VERSION"))

@@ -1,18 +1,20 @@
 //! Processes, row by row: the catalogue of the core on what Python holds. `moistair._rows` makes objects of what comes back.
 
-use moistair_core::columns::{Column, Field, NAN, Process, RowError, Value};
-use moistair_core::{Error, Formulation, MoistAir as Air};
+use moistair_core::columns::{Column, Field, NAN, Process, RowError, SequenceRowError, SequenceRows, Value, Wanted};
+use moistair_core::{Error, Formulation, MoistAir as Air, Quantity};
 use pyo3::exceptions::PyTypeError;
 use pyo3::prelude::*;
 use pyo3::types::PyList;
 
 use crate::column::{self, Arguments, plain_number};
-use crate::error::{exception, internal};
+use crate::error::{exception, exception_at, internal};
 use crate::state::{Content, MoistAir, States, restore};
 
 /// Why a row has no result.
 enum Failure {
     Row(RowError),
+    /// The same of a step of a chain.
+    Step(usize, RowError),
     /// A state of this row has failed before, with this status.
     Before(i32),
 }
@@ -29,19 +31,59 @@ impl From<RowError> for Failure {
     }
 }
 
-/// A process of the catalogue, and the formulation of what is given without a state.
+impl From<SequenceRowError> for Failure {
+    fn from(error: SequenceRowError) -> Self {
+        match error {
+            SequenceRowError::Step { step, error } => Self::Step(step, error),
+            other => Self::Row(other.error()),
+        }
+    }
+}
+
+impl Failure {
+    /// The status of the row; `None` for what the Python side rules out.
+    fn status(&self) -> Option<i32> {
+        match self {
+            Self::Row(RowError::Process(error)) | Self::Step(_, RowError::Process(error)) => Some(error.code()),
+            Self::Before(status) => Some(*status),
+            _ => None,
+        }
+    }
+}
+
+/// What is run on each row.
+#[derive(Clone, Copy)]
+enum Work<'a> {
+    /// A process of the catalogue, and the formulation of what is given without a state.
+    Process(Process, Formulation),
+    Sequence(SequenceRows<'a>),
+    Solve(SequenceRows<'a>, Wanted),
+}
+
+/// That, and what it gives.
 #[derive(Clone, Copy)]
 struct Call<'a> {
-    process: Process,
-    formulation: Formulation,
+    work: Work<'a>,
     layout: &'a str,
 }
 
 impl Call<'_> {
     /// Runs it on the arguments of a row.
     fn row(&self, items: &[Value], out: &mut [Value]) -> Result<(), Failure> {
-        let written = self.process.evaluate_values(self.formulation, items, out)?;
+        let written = match self.work {
+            Work::Process(process, formulation) => process.evaluate_values(formulation, items, out)?,
+            Work::Sequence(rows) => rows.run(items, out)?,
+            Work::Solve(rows, wanted) => rows.solve(wanted, items, out)?,
+        };
         if written == out.len() { Ok(()) } else { Err(RowError::Misfit.into()) }
+    }
+
+    /// Of what is given without a state.
+    fn formulation(&self) -> Formulation {
+        match self.work {
+            Work::Process(_, formulation) => formulation,
+            Work::Sequence(rows) | Work::Solve(rows, _) => rows.formulation,
+        }
     }
 
     /// Room for its results.
@@ -65,13 +107,45 @@ pub fn run<'py>(
 ) -> PyResult<(Bound<'py, PyList>, Bound<'py, PyAny>)> {
     let process = Process::from_name(name).ok_or_else(|| internal(format!("no process {name:?}")))?;
     let formulation = Formulation::from_code(formulation).ok_or_else(unfit)?;
-    let call = Call { process, formulation, layout };
+    run_rows(py, Call { work: Work::Process(process, formulation), layout }, &labels, &values)
+}
+
+/// Runs a chain of steps of these kinds on the entering stream and the numbers of each step; with `wanted`, solves it: the step whose number is
+/// free, that quantity, the step whose air is looked at, that property.
+#[pyfunction]
+#[pyo3(signature = (kinds, layout, labels, values, wanted=None))]
+pub fn run_sequence<'py>(
+    py: Python<'py>,
+    kinds: Vec<i32>,
+    layout: &str,
+    labels: Bound<'py, PyAny>,
+    values: Vec<Bound<'py, PyAny>>,
+    wanted: Option<(usize, i32, usize, i32)>,
+) -> PyResult<(Bound<'py, PyList>, Bound<'py, PyAny>)> {
+    let rows = SequenceRows { kinds: &kinds, formulation: Formulation::RealGas };
+    let work = match wanted {
+        None => Work::Sequence(rows),
+        Some((step, number, after, quantity)) => {
+            let named = |code| Quantity::from_code(code).ok_or_else(unfit);
+            let (number, quantity) = (named(number)?, named(quantity)?);
+            Work::Solve(rows, Wanted { step, number, after: Some(after), quantity })
+        }
+    };
+    run_rows(py, Call { work, layout }, &labels, &values)
+}
+
+fn run_rows<'py>(
+    py: Python<'py>,
+    call: Call<'_>,
+    labels: &Bound<'py, PyAny>,
+    values: &[Bound<'py, PyAny>],
+) -> PyResult<(Bound<'py, PyList>, Bound<'py, PyAny>)> {
     let plain = values.iter().map(plain_item).collect::<Option<PyResult<Vec<Value>>>>();
     if let Some(items) = plain {
         return run_once(py, &call, &items?);
     }
     let labels = labels.extract::<Vec<String>>()?;
-    let (sources, names, flat) = flatten(py, &labels, &values)?;
+    let (sources, names, flat) = flatten(py, &labels, values)?;
     let names: Vec<&str> = names.iter().map(String::as_str).collect();
     let arguments = Arguments::read(py, &names, &flat)?;
     let table = Table { sources, columns: arguments.columns()? };
@@ -80,9 +154,9 @@ pub fn run<'py>(
         table.read(0, &mut items).map_err(|failure| raise(py, &failure))?;
         return run_once(py, &call, &items);
     }
-    let mut results = Results::new(layout, arguments.rows)?;
+    let mut results = Results::new(call.layout, arguments.rows)?;
     py.detach(|| results.fill(&call, &table));
-    results.finish(py, table.formulation().unwrap_or(formulation), &arguments.shape)
+    results.finish(py, table.formulation().unwrap_or(call.formulation()), &arguments.shape)
 }
 
 type Fields = Vec<(String, &'static str)>;
@@ -134,9 +208,10 @@ fn run_once<'py>(
 fn raise(py: Python<'_>, failure: &Failure) -> PyErr {
     match failure {
         Failure::Row(RowError::Process(error)) => exception(py, error),
+        Failure::Step(step, RowError::Process(error)) => exception_at(py, error, &format!("step {step} (from 0): ")),
         Failure::Before(code) => internal(format!("a state has failed with status {code}")),
         // The Python side rules that out.
-        Failure::Row(_) => unfit(),
+        Failure::Row(_) | Failure::Step(..) => unfit(),
     }
 }
 
@@ -256,12 +331,13 @@ impl Results {
                     self.store(row, &out);
                     0
                 }
-                Err(Failure::Row(RowError::Process(error))) => error.code(),
-                Err(Failure::Before(status)) => status,
-                Err(Failure::Row(_)) => {
-                    self.misfit = true;
-                    continue;
-                }
+                Err(failure) => match failure.status() {
+                    Some(status) => status,
+                    None => {
+                        self.misfit = true;
+                        continue;
+                    }
+                },
             };
             if let Some(place) = self.status.get_mut(row) {
                 *place = code;

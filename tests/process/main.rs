@@ -14,6 +14,7 @@ mod facts;
 mod hostile;
 mod laws;
 mod rooms;
+mod sequences;
 mod support;
 mod towers;
 mod worked_examples;

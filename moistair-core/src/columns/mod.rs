@@ -2,7 +2,10 @@
 
 mod process;
 
-pub use process::{Field, MAX_INPUTS, MAX_OUTPUTS, MAX_STREAMS, Process, ProcessColumns, RowError, Value};
+pub use process::{
+    Field, MAX_INPUTS, MAX_OUTPUTS, MAX_STEPS, MAX_STREAMS, Process, ProcessColumns, RowError, SequenceRowError,
+    SequenceRows, Value, Wanted,
+};
 
 use crate::basis::{Basis, Formulation};
 use crate::bounds::Quantity;

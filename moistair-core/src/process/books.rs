@@ -47,35 +47,68 @@ impl<S: Scalar> Books<S> {
 ///
 /// Enthalpies are computed anew from temperature, pressure and humidity ratio, not taken from the process.
 pub fn balance<S: Scalar>(entering: &[WetStream<S>], leaving: &WetStream<S>, exchange: &Exchange<S>) -> Books<S> {
-    let zero = k::<S>(0.0);
-    let mut sum = Sum { heat: zero, heat_scale: zero, water: zero, water_scale: zero };
-    sum.add(leaving, k(1.0));
+    let mut ledger = Ledger::empty();
+    ledger.leaving(leaving);
     for stream in entering {
-        sum.add(stream, k(-1.0));
+        ledger.entering(stream);
     }
-    let outlet = leaving.air().air();
-    let capacity = leaving.dry_air_flow().kilograms_per_second() * outlet.specific_heat().joules_per_kilogram_kelvin();
-    let (heat, water) = (exchange.heat.watts(), exchange.water.kilograms_per_second());
-    let carried = exchange.water_enthalpy_flow.watts();
-    Books {
-        heat_residual: HeatFlow::from_watts(sum.heat - heat - carried),
-        heat_scale: HeatFlow::from_watts(sum.heat_scale + magnitude(heat) + magnitude(carried)),
-        water_residual: MassFlow::from_kilograms_per_second(sum.water - water),
-        water_scale: MassFlow::from_kilograms_per_second(sum.water_scale + magnitude(water)),
-        heat_resolution: HeatFlow::from_watts(
-            capacity * outlet.dry_bulb().kelvins() * S::epsilon() * k(resolution(outlet.formulation())),
-        ),
-    }
+    ledger.exchange(exchange);
+    ledger.solved(leaving);
+    ledger.books()
 }
 
-struct Sum<S> {
+/// What comes in, goes out and is exchanged, added up.
+#[derive(Clone, Copy, Debug)]
+pub(crate) struct Ledger<S> {
     heat: S,
     heat_scale: S,
     water: S,
     water_scale: S,
+    heat_resolution: S,
 }
 
-impl<S: Scalar> Sum<S> {
+impl<S: Scalar> Ledger<S> {
+    pub fn empty() -> Self {
+        let zero = k::<S>(0.0);
+        Self { heat: zero, heat_scale: zero, water: zero, water_scale: zero, heat_resolution: zero }
+    }
+
+    pub fn entering(&mut self, stream: &WetStream<S>) {
+        self.add(stream, k(-1.0));
+    }
+
+    pub fn leaving(&mut self, stream: &WetStream<S>) {
+        self.add(stream, k(1.0));
+    }
+
+    pub fn exchange(&mut self, exchange: &Exchange<S>) {
+        let (heat, water) = (exchange.heat.watts(), exchange.water.kilograms_per_second());
+        let carried = exchange.water_enthalpy_flow.watts();
+        self.heat = self.heat - heat - carried;
+        self.heat_scale = self.heat_scale + magnitude(heat) + magnitude(carried);
+        self.water = self.water - water;
+        self.water_scale = self.water_scale + magnitude(water);
+    }
+
+    /// The temperature of this stream was solved for.
+    pub fn solved(&mut self, stream: &WetStream<S>) {
+        let outlet = stream.air().air();
+        let capacity =
+            stream.dry_air_flow().kilograms_per_second() * outlet.specific_heat().joules_per_kilogram_kelvin();
+        let rounding = S::epsilon() * k(resolution(outlet.formulation()));
+        self.heat_resolution = self.heat_resolution + capacity * outlet.dry_bulb().kelvins() * rounding;
+    }
+
+    pub fn books(&self) -> Books<S> {
+        Books {
+            heat_residual: HeatFlow::from_watts(self.heat),
+            heat_scale: HeatFlow::from_watts(self.heat_scale),
+            water_residual: MassFlow::from_kilograms_per_second(self.water),
+            water_scale: MassFlow::from_kilograms_per_second(self.water_scale),
+            heat_resolution: HeatFlow::from_watts(self.heat_resolution),
+        }
+    }
+
     fn add(&mut self, stream: &WetStream<S>, sign: S) {
         let flow = stream.dry_air_flow().kilograms_per_second();
         let wet = stream.air();

@@ -123,6 +123,10 @@ impl<S: Scalar> WetStream<S> {
         MassFlow::from_kilograms_per_second(self.dry_air_flow)
     }
 
+    pub(crate) fn with_air(&self, air: AirWithCondensate<S>) -> Self {
+        Self { air, dry_air_flow: self.dry_air_flow }
+    }
+
     /// The stream of the gas alone.
     pub fn without_condensate(&self) -> AirStream<S> {
         AirStream { air: self.air.air(), dry_air_flow: self.dry_air_flow }
@@ -153,11 +157,25 @@ impl<S: Scalar> Exchange<S> {
         Self::new(k(0.0), k(0.0), k(0.0))
     }
 
-    fn new(heat: S, water: S, water_enthalpy_flow: S) -> Self {
+    pub(crate) fn new(heat: S, water: S, water_enthalpy_flow: S) -> Self {
         Self {
             heat: HeatFlow::from_watts(heat),
             water: MassFlow::from_kilograms_per_second(water),
             water_enthalpy_flow: HeatFlow::from_watts(water_enthalpy_flow),
+        }
+    }
+
+    /// Heat alone.
+    pub(crate) fn of_heat(heat: HeatFlow<S>) -> Self {
+        Self { heat, ..Self::none() }
+    }
+
+    /// Both together.
+    pub(crate) fn plus(&self, other: &Self) -> Self {
+        Self {
+            heat: self.heat + other.heat,
+            water: self.water + other.water,
+            water_enthalpy_flow: self.water_enthalpy_flow + other.water_enthalpy_flow,
         }
     }
 }
@@ -171,7 +189,7 @@ fn same_formulation<S: Scalar>(a: &MoistAir<S>, b: &MoistAir<S>) -> Result<(), E
     if a.formulation() == b.formulation() { Ok(()) } else { Err(Error::MixedFormulations) }
 }
 
-fn infeasible<S: Scalar>(quantity: Quantity, value: S, min: S, max: S) -> Error {
+pub(crate) fn infeasible<S: Scalar>(quantity: Quantity, value: S, min: S, max: S) -> Error {
     Error::Infeasible { quantity, value: value.to_f64(), min: min.to_f64(), max: max.to_f64() }
 }
 

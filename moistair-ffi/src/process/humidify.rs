@@ -181,6 +181,14 @@ pub unsafe extern "C" fn moistair_humidify_spray(
     unsafe { answer(done, error, call) }
 }
 
+pub(super) fn evaporating_water(selector: i32, temperature: f64) -> Result<EvaporatingWater, Failure> {
+    match selector {
+        MOISTAIR_WATER_AT_WET_BULB => Ok(EvaporatingWater::AtWetBulb),
+        MOISTAIR_WATER_AT_GIVEN => Ok(EvaporatingWater::Given(celsius(temperature))),
+        _ => Err(Failure::UnknownSelector(selector)),
+    }
+}
+
 /// A wetted medium or full spray of a known saturation effectiveness.
 ///
 /// entering: the stream that enters; saturation_effectiveness: [1], 0 to 1; water: MOISTAIR_WATER_AT_WET_BULB or MOISTAIR_WATER_AT_GIVEN;
@@ -196,11 +204,7 @@ pub unsafe extern "C" fn moistair_humidify_evaporative(
     error: *mut moistair_error,
 ) -> i32 {
     let call = || {
-        let water = match water {
-            MOISTAIR_WATER_AT_WET_BULB => EvaporatingWater::AtWetBulb,
-            MOISTAIR_WATER_AT_GIVEN => EvaporatingWater::Given(celsius(water_temperature)),
-            _ => return Err(Failure::UnknownSelector(water)),
-        };
+        let water = evaporating_water(water, water_temperature)?;
         // SAFETY: the caller's pointers.
         Ok(humidify::evaporative(&unsafe { read(entering) }?.to_core()?, saturation_effectiveness, water)?.into())
     };

@@ -1,7 +1,8 @@
 //! Adiabatic mixing, and whether the books of a process close.
 
 use moistair_core::Pressure;
-use moistair_core::process::{WetStream, books, mixing};
+use moistair_core::process::books::{self, Books};
+use moistair_core::process::{WetStream, mixing};
 
 use super::stream::{moistair_exchange, moistair_stream, moistair_wet_stream};
 use super::{finite, mass_flow};
@@ -30,6 +31,20 @@ pub struct moistair_books {
     pub close: i32,
     /// 0.
     pub reserved: i32,
+}
+
+impl From<Books> for moistair_books {
+    fn from(books: Books) -> Self {
+        Self {
+            heat_residual: books.heat_residual.watts(),
+            heat_scale: books.heat_scale.watts(),
+            heat_resolution: books.heat_resolution.watts(),
+            water_residual: books.water_residual.kilograms_per_second(),
+            water_scale: books.water_scale.kilograms_per_second(),
+            close: books.close().into(),
+            reserved: 0,
+        }
+    }
 }
 
 impl Answer for moistair_books {
@@ -163,15 +178,7 @@ pub unsafe extern "C" fn moistair_books_balance(
         }
         // SAFETY: the caller's pointers.
         let books = books::balance(streams, &unsafe { read(leaving) }?.to_core()?, &exchange.into());
-        Ok(moistair_books {
-            heat_residual: books.heat_residual.watts(),
-            heat_scale: books.heat_scale.watts(),
-            heat_resolution: books.heat_resolution.watts(),
-            water_residual: books.water_residual.kilograms_per_second(),
-            water_scale: books.water_scale.kilograms_per_second(),
-            close: books.close().into(),
-            reserved: 0,
-        })
+        Ok(books.into())
     };
     // SAFETY: the caller's pointers.
     unsafe { answer(books, error, call) }

@@ -155,7 +155,7 @@ impl Answer for moistair_coil_surface {
 }
 
 impl moistair_coil_surface {
-    fn to_core(self) -> Result<CoilSurface, Failure> {
+    pub(super) fn to_core(self) -> Result<CoilSurface, Failure> {
         let conductance = Conductance::from_watts_per_kelvin;
         Ok(CoilSurface {
             air_side: conductance(self.air_side),
@@ -166,7 +166,7 @@ impl moistair_coil_surface {
 }
 
 impl moistair_coil_water {
-    fn to_core(self) -> CoilWater {
+    pub(super) fn to_core(self) -> CoilWater {
         let coolant = if self.specific_heat == 0.0 {
             Coolant::Water
         } else {

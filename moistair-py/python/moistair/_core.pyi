@@ -20,6 +20,7 @@ __all__ = [
     "CheckedColumns",
     "Counts",
     "Deviation",
+    "MAX_STEPS",
     "MAX_STREAMS",
     "MoistAir",
     "NUMERICS_VERSION",
@@ -41,10 +42,12 @@ __all__ = [
     "restore_period",
     "restore_state",
     "run",
+    "run_sequence",
     "temperature_at_elevation",
     "to_core",
 ]
 
+MAX_STEPS: int
 MAX_STREAMS: int
 NUMERICS_VERSION: int
 __version__: str
@@ -268,6 +271,13 @@ def code_table() -> list[tuple[str, str, int, str]]: ...
 def process_table() -> list[tuple[int, str, list[tuple[str, str]], int, list[tuple[str, str]]]]: ...
 def run(
     name: str, layout: str, labels: list[str], values: list[Any], formulation: int = ...
+) -> tuple[list[Any], Union[int, _Codes]]: ...
+def run_sequence(
+    kinds: list[int],
+    layout: str,
+    labels: list[str],
+    values: list[Any],
+    wanted: Union[tuple[int, int, int, int], None] = None,
 ) -> tuple[list[Any], Union[int, _Codes]]: ...
 def restore_state(
     formulation: int, shape: tuple[int, ...], dry_bulb: Any, pressure: Any, humidity_ratio: Any, status: Any

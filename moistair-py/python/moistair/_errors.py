@@ -110,6 +110,7 @@ _CLASSES: dict[int, type[MoistAirError]] = {
     207: ProcessError,
     209: UndeterminedError,
     210: UnattainableError,
+    211: ProcessError,
     301: InfeasibleError,
 }
 

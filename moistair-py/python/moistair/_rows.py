@@ -4,14 +4,14 @@ from __future__ import annotations
 
 import enum
 from collections.abc import Callable, Iterator
-from typing import Any, TypeVar, Union, get_args, get_origin, get_type_hints
+from typing import Any, Optional, TypeVar, Union, get_args, get_origin, get_type_hints
 
 import numpy as np
 from numpy.typing import NDArray
 
 from . import _core
 
-__all__ = ["Array", "Record", "T", "choice", "run"]
+__all__ = ["Array", "Record", "T", "choice", "run", "run_sequence"]
 
 Array = NDArray[np.float64]
 Status = Union[int, NDArray[np.int32]]
@@ -106,6 +106,28 @@ def run(process: str, result: type[R], *arguments: tuple[str, Any]) -> R:
     return built
 
 
+def run_sequence(
+    kinds: list[int],
+    results: list[Any],
+    arguments: list[tuple[str, Any]],
+    wanted: Optional[tuple[int, int, int, int]] = None,
+) -> list[Any]:
+    """Runs a chain of steps of the core and builds `results`, classes of records, one after the other."""
+    labels: list[str] = []
+    values: list[Any] = []
+    for label, value in arguments:
+        if isinstance(value, Record):
+            _take_apart(label, value, labels, values)
+        else:
+            labels.append(label)
+            values.append(value)
+    plans = [_plan(result) for result in results]
+    layout = "".join(layout for layout, _ in plans)
+    found, status = _core.run_sequence(kinds, layout, labels, values, wanted)
+    each, status = iter(found), _freeze(status)
+    return [build(each, status) for _, build in plans]
+
+
 def _take_apart(label: str, record: Any, labels: list[str], values: list[Any]) -> None:
     for name in record._inputs or record.__dataclass_fields__:
         value = getattr(record, name)
@@ -132,6 +154,8 @@ def _make_plan(kind: Any) -> tuple[str, Build]:
         return "S", lambda values, _: next(values)
     if kind is bool:
         return "N", lambda values, _: _truth(next(values))
+    if kind is int:
+        return "N", lambda values, _: _whole(next(values))
     if issubclass(kind, enum.IntEnum):
         return "N", lambda values, _: _member(kind, next(values))
     if not issubclass(kind, Record):
@@ -163,6 +187,10 @@ def _kind(hint: Any) -> Any:
 
 def _truth(value: Any) -> Any:
     return value == 1.0 if isinstance(value, float) else _freeze(value == 1.0)
+
+
+def _whole(value: Any) -> Any:
+    return int(value) if isinstance(value, float) else _freeze(_codes(value))
 
 
 def _member(kind: Any, value: Any) -> Any:

@@ -11,10 +11,12 @@ mod reheat;
 mod room;
 mod row;
 mod sensible;
+mod sequence;
 mod stream;
 mod tower;
 
 pub use row::{Field, RowError, Value};
+pub use sequence::{MAX_STEPS, SequenceRowError, SequenceRows, Wanted};
 pub use stream::MAX_STREAMS;
 
 use row::{Out, Outcome, Places, Row, Source, Walk};

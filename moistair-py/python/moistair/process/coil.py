@@ -48,7 +48,7 @@ Arrangement = Union[Literal["counterflow"], Literal["cross_flow"]]
 #: What was measured behind a coil.
 Measured = Union[Literal["leaving_air"], Literal["leaving_water"], Literal["heat"]]
 
-_ARRANGEMENTS = {"counterflow": 0, "cross_flow": 1}
+ARRANGEMENTS = {"counterflow": 0, "cross_flow": 1}
 _MEASURED = {"leaving_air": 0, "leaving_water": 1, "heat": 2}
 
 
@@ -494,7 +494,7 @@ def with_water(
         ("entering", entering),
         ("air_side", air_side),
         ("water_side", water_side),
-        code(_ARRANGEMENTS, arrangement, "arrangement"),
+        code(ARRANGEMENTS, arrangement, "arrangement"),
         ("water_flow", water_flow),
         ("entering_water", entering_water),
         *choice(specific_heat, {"water": 0}, "specific_heat"),
@@ -608,7 +608,7 @@ def surface_from_rating(
         code(_MEASURED, measured, "measured"),
         ("value", value),
         ("conductance_ratio", conductance_ratio),
-        code(_ARRANGEMENTS, arrangement, "arrangement"),
+        code(ARRANGEMENTS, arrangement, "arrangement"),
     )
 
 
