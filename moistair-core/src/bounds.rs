@@ -215,7 +215,7 @@ quantities! {
     /// Rise of temperature by the heat that a wheel carries over from its regeneration.
     CarryOverRise = 142, "carry-over rise", "K", -100.0, 200.0;
     /// Temperature of air in the correlation of the wheel's potentials, 275 to 425 K.
-    PotentialTemperature = 143, "temperature of the potentials", "°C", 1.85, 151.85;
+    DesiccantTemperature = 143, "desiccant temperature", "°C", 1.85, 151.85;
 }
 
 impl Quantity {

@@ -152,6 +152,24 @@ pub const MOISTAIR_COOLANT_SPECIFIC_HEAT: i32 = 107;
 pub const MOISTAIR_CONDUCTANCE: i32 = 108;
 /// Conductance of the water side of a coil over that of its air side [1].
 pub const MOISTAIR_CONDUCTANCE_RATIO: i32 = 109;
+/// Moisture that a room gives to its air [kg/s].
+pub const MOISTAIR_MOISTURE_GAIN: i32 = 135;
+/// Specific enthalpy of that moisture as it comes, from ice to steam [J/kg].
+pub const MOISTAIR_MOISTURE_ENTHALPY: i32 = 136;
+/// Sensible over total gain of a room [1].
+pub const MOISTAIR_SENSIBLE_HEAT_RATIO: i32 = 137;
+/// Slope of a process line [J/kg].
+pub const MOISTAIR_PROCESS_SLOPE: i32 = 138;
+/// Heat of sorption over heat of vaporization [1].
+pub const MOISTAIR_SORPTION_HEAT_RATIO: i32 = 139;
+/// Drying as a fraction of what a desiccant could do at best [1].
+pub const MOISTAIR_DRYING_EFFECTIVENESS: i32 = 140;
+/// Effectiveness of a desiccant wheel in one of its two potentials [1].
+pub const MOISTAIR_POTENTIAL_EFFECTIVENESS: i32 = 141;
+/// Rise of temperature by the heat that a wheel carries over [K].
+pub const MOISTAIR_CARRY_OVER_RISE: i32 = 142;
+/// Temperature of air in the correlation of a wheel's potentials, 275 to 425 K [°C].
+pub const MOISTAIR_DESICCANT_TEMPERATURE: i32 = 143;
 
 /// Limits of a quantity as an input, both included.
 #[repr(C)]

@@ -468,5 +468,95 @@ fn sequences() {
         c_chain[1].leaving_temperature = solved.number;
         let total = output(blank(), |out| c_run(&c_chain[..4], &mut done[..4], &mut ran, out));
         same_total(&total, &expected.total);
+}
+
+/// Rooms and desiccants: what the core gives.
+#[test]
+fn rooms_and_desiccants() {
+    use moistair_core::process::desiccant::{self, CarryOver, Regeneration, Sorption, potentials};
+    use moistair_core::process::reheat::CoilLeaving;
+    use moistair_core::process::room::{self, MoistureSource, RoomGains};
+
+    let ratio = moistair_core::HumidityRatio::from_kilograms_per_kilogram;
+    for (code, formulation) in FORMULATIONS {
+        let of_core = moistair_core::Basis::new(pascals(101_325.0), formulation);
+        let basis = moistair_basis { pressure: 101_325.0, formulation: code, reserved: 0 };
+        let both = |t: f64, w: f64| {
+            let air = MoistAir::from_dry_bulb(celsius(t), ratio(w), of_core).unwrap();
+            // SAFETY: valid places.
+            let state = output(blank::<moistair_state>(), |out| unsafe {
+                moistair_from_dry_bulb(t, MOISTAIR_HUMIDITY_RATIO, w, basis, out, null_mut())
+            });
+            (air, state)
+        };
+        let ((space, room), (outdoor, outside)) = (both(24.0, 0.0093), both(31.0, 0.014));
+        let of_core = RoomGains {
+            sensible: moistair_core::HeatFlow::from_watts(3e3),
+            moisture: MassFlow::from_kilograms_per_second(1.5e-3),
+            source: MoistureSource::SaturatedVapor(celsius(32.0)),
+        };
+        let gains = moistair_room_gains {
+            sensible: 3e3,
+            moisture: 1.5e-3,
+            source_value: 32.0,
+            source: MOISTAIR_SOURCE_SATURATED_VAPOR,
+            reserved: 0,
+        };
+        let expected = room::supply_at_temperature(&space, &of_core, celsius(14.0)).unwrap();
+        // SAFETY: valid places.
+        let supplied = output(blank::<moistair_room_air>(), |out| unsafe {
+            moistair_room_supply_at_temperature(&room, &gains, 14.0, out, null_mut())
+        });
+        same(&supplied.supply.air, &expected.supply.air());
+        assert_eq!(supplied.supply.dry_air_flow, expected.supply.dry_air_flow().kilograms_per_second());
+        // SAFETY: valid places.
+        let found = output(blank::<moistair_room_dew_points>(), |out| unsafe {
+            moistair_room_apparatus_dew_points(&room, 0.65, out, null_mut())
+        });
+        let expected = room::apparatus_dew_points(&space, 0.65).unwrap();
+        assert_eq!((found.count, found.warmer), (2, expected.warmer.unwrap().celsius()));
+        let coil =
+            moistair_coil_leaving { fraction: 0.1, coldest: 4.0, kind: MOISTAIR_COIL_LEAVES_BYPASS, reserved: 0 };
+        let leaving = CoilLeaving::Bypass { factor: 0.1, coldest: celsius(4.0) };
+        let expected = room::least_reheat(&space, &of_core, &outdoor, leaving).unwrap();
+        // SAFETY: valid places.
+        let least = output(blank::<moistair_least_reheat>(), |out| unsafe {
+            moistair_room_least_reheat(&room, &gains, &outside, &coil, out, null_mut())
+        });
+        assert_eq!((least.reheat, least.cause), (expected.reheat.watts(), MOISTAIR_REHEAT_COLDEST_COIL));
+        same(&least.coil_leaving, &expected.coil_leaving);
+
+        let stream = |air| AirStream::new(air, MassFlow::from_kilograms_per_second(1.0)).unwrap();
+        let [process, other] = [room, outside].map(|air| moistair_stream { air, dry_air_flow: 1.0 });
+        let rise = moistair_core::TemperatureDifference::from_kelvins(4.0);
+        let how = Sorption { heat_ratio: 1.1, carry_over: CarryOver::Rise(rise) };
+        let sorption = moistair_sorption {
+            heat_ratio: 1.1,
+            carry_over_value: 4.0,
+            carry_over: MOISTAIR_CARRIES_RISE,
+            reserved: 0,
+        };
+        let known = Regeneration::Entering(celsius(90.0));
+        let expected = desiccant::wheel(&stream(space), ratio(0.005), how, &stream(outdoor), known).unwrap();
+        // SAFETY: valid places.
+        let wheel = output(blank::<moistair_wheel>(), |out| unsafe {
+            let known = MOISTAIR_REGENERATION_ENTERING;
+            moistair_desiccant_wheel(&process, 0.005, &sorption, &other, known, 90.0, out, null_mut())
+        });
+        same(&wheel.regeneration.air, &expected.regeneration.air());
+        assert_eq!(wheel.regeneration_heat, expected.regeneration_heat().watts());
+        assert_eq!((wheel.status, wheel.entropy_production), (MOISTAIR_WHEEL_POSSIBLE, expected.entropy_production));
+
+        let share = moistair_potentials { first: 0.07, second: 0.9 };
+        let hot = moistair_stream { air: wheel.heater.leaving.air, dry_air_flow: 1.0 };
+        let effectiveness = potentials::Effectiveness { first: 0.07, second: 0.9 };
+        let expected = potentials::wheel(&stream(space), &expected.heater.leaving, effectiveness).unwrap();
+        // SAFETY: valid places.
+        let turned = output(blank::<moistair_potential_wheel>(), |out| unsafe {
+            moistair_desiccant_wheel_by_potentials(&process, &hot, &share, out, null_mut())
+        });
+        same(&turned.process.air, &expected.process.air());
+        assert_eq!(turned.imbalance_heat, expected.imbalance.unwrap().heat.watts());
+        assert_eq!(turned.correlation, MOISTAIR_CORRELATION_WITHIN);
     }
 }

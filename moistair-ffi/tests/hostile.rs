@@ -70,6 +70,18 @@ words! {
     moistair_water_coil, [12, 26, 36, 40], [35], [0, 14];
     moistair_load_by_water, [], [], [];
     moistair_compressed, [12], [], [0];
+    moistair_room_gains, [3], [], [];
+    moistair_room_air, [12, 26], [], [0, 14];
+    moistair_room_dew_points, [2], [0, 1], [];
+    moistair_coil_leaving, [2], [], [];
+    moistair_limiting_line, [3], [], [];
+    moistair_least_reheat, [12, 26, 30, 32], [], [0, 14];
+    moistair_conditioned, [12, 26, 47, 61, 71, 84], [70, 89], [0, 14, 35, 49, 72];
+    moistair_sorption, [2], [], [];
+    moistair_sorbed, [12], [], [0];
+    moistair_wheel, [12, 32, 49, 57], [55], [0, 20, 37];
+    moistair_potentials, [], [], [];
+    moistair_potential_wheel, [12, 29, 38], [35, 36], [0, 17];
     moistair_books, [5], [], [];
     moistair_sequence_total, [12, 35, 36], [], [0];
     moistair_solved, [12, 35, 36, 44, 45], [], [0];
@@ -586,6 +598,90 @@ fn no_argument_upsets_an_export() {
         (c.pointer(&s), c.number(-1e4, 1e5), c.pointer(&water), c.number(0.0, 30.0), out, e));
     run!(exercise moistair_reheat_to_state: |c, out, e| let s = c.stream(); let target = c.state();
         (c.pointer(&s), c.pointer(&target), c.number(0.2, 1.0), c.selector(3), c.number(-5.0, 20.0), out, e));
+    let room_gains = |c: &Caller| {
+        c.structure(moistair_room_gains {
+            sensible: c.number(-5e3, 2e4),
+            moisture: c.number(0.0, 5e-3),
+            source_value: c.number(0.0, 100.0),
+            source: c.selector(3),
+            reserved: 0,
+        })
+    };
+    let leaves = |c: &Caller| {
+        let kind = c.selector(2);
+        let fraction = if kind == 0 { c.number(0.8, 1.0) } else { c.number(0.0, 0.3) };
+        c.structure(moistair_coil_leaving { fraction, coldest: c.number(-20.0, 15.0), kind, reserved: 0 })
+    };
+    // Where rooms and plant are, mostly.
+    let usual = |c: &Caller, low: f64, high: f64, humidity: f64| {
+        let mut air = c.state();
+        if c.below(4) != 0 {
+            let basis = moistair_basis { pressure: 101_325.0, formulation: MOISTAIR_REAL_GAS, reserved: 0 };
+            let (t, x) = (c.number(low, high), c.number(humidity - 0.1, humidity + 0.1));
+            // SAFETY: valid places.
+            unsafe { moistair_from_dry_bulb(t, MOISTAIR_RELATIVE_HUMIDITY, x, basis, &mut air, core::ptr::null_mut()) };
+        }
+        air
+    };
+    let outdoor = |c: &Caller| moistair_stream { air: usual(c, 24.0, 32.0, 0.7), dry_air_flow: c.number(0.1, 2.0) };
+    run!(exercise moistair_reheat_with_coil: |c, out, e| let s = outdoor(c); let target = usual(c, 18.0, 26.0, 0.5); let coil = leaves(c);
+        (c.pointer(&s), c.pointer(&target), c.pointer(&coil), c.selector(3), c.number(-5.0, 20.0), out, e));
+    run!(exercise moistair_room_supply_at_temperature: |c, out, e| let room = usual(c, 20.0, 27.0, 0.5); let gains = room_gains(c);
+        (c.pointer(&room), c.pointer(&gains), c.number(-20.0, 40.0), out, e));
+    run!(exercise moistair_room_supply_at_flow: |c, out, e| let room = c.state(); let gains = room_gains(c);
+        (c.pointer(&room), c.pointer(&gains), c.number(0.1, 10.0), out, e));
+    run!(exercise moistair_room_of_supply: |c, out, e| let s = c.stream(); let gains = room_gains(c);
+        (c.pointer(&s), c.pointer(&gains), out, e));
+    run!(exercise moistair_room_gains_between: |c, out, e| let s = c.stream(); let room = c.state();
+        (c.pointer(&s), c.pointer(&room), c.selector(3), c.number(0.0, 100.0), out, e));
+    run!(exercise moistair_room_latent_heat: |c, out, e| let room = c.state(); (c.pointer(&room), out, e));
+    run!(exercise moistair_room_sensible_heat_ratio: |c, out, e| let room = c.state(); let gains = room_gains(c);
+        (c.pointer(&room), c.pointer(&gains), out, e));
+    run!(exercise moistair_room_process_slope: |c, out, e| let gains = room_gains(c); (c.pointer(&gains), c.basis(), out, e));
+    run!(exercise moistair_room_slope_of_ratio: |c, out, e| let room = c.state(); (c.pointer(&room), c.number(-1.0, 2.0), out, e));
+    run!(exercise moistair_room_ratio_of_slope: |c, out, e| let room = c.state(); (c.pointer(&room), c.number(-1e7, 1e7), out, e));
+    run!(exercise moistair_room_apparatus_dew_points: |c, out, e| let room = c.state();
+        (c.pointer(&room), c.number(-1.0, 2.0), out, e));
+    run!(exercise moistair_room_limiting_line: |c, out, e| let (room, air) = (usual(c, 20.0, 27.0, 0.5), usual(c, 24.0, 32.0, 0.6)); let coil = leaves(c);
+        (c.pointer(&room), c.pointer(&air), c.pointer(&coil), out, e));
+    run!(exercise moistair_room_least_reheat: |c, out, e| let (room, air) = (usual(c, 20.0, 27.0, 0.5), usual(c, 24.0, 32.0, 0.6)); let gains = room_gains(c);
+        let coil = leaves(c);
+        (c.pointer(&room), c.pointer(&gains), c.pointer(&air), c.pointer(&coil), out, e));
+    run!(exercise moistair_room_conditioned: |c, out, e| let room = usual(c, 20.0, 27.0, 0.5); let gains = room_gains(c); let s = outdoor(c);
+        let coil = leaves(c);
+        (c.pointer(&room), c.pointer(&gains), c.pointer(&s), c.pointer(&coil), c.selector(3), c.number(-5.0, 20.0), out, e));
+    let sorption = |c: &Caller| {
+        c.structure(moistair_sorption {
+            heat_ratio: c.number(0.8, 1.5),
+            carry_over_value: c.number(0.0, 10.0),
+            carry_over: c.selector(3),
+            reserved: 0,
+        })
+    };
+    let hot = |c: &Caller| {
+        let mut stream = c.stream();
+        let basis = moistair_basis { pressure: 101_325.0, formulation: MOISTAIR_REAL_GAS, reserved: 0 };
+        let t = c.number(60.0, 120.0);
+        // SAFETY: valid places.
+        unsafe {
+            moistair_from_dry_bulb(t, MOISTAIR_HUMIDITY_RATIO, 0.01, basis, &mut stream.air, core::ptr::null_mut())
+        };
+        stream
+    };
+    run!(exercise moistair_desiccant_to_humidity_ratio: |c, out, e| let s = c.stream(); let how = sorption(c);
+        (c.pointer(&s), c.number(0.0, 0.02), c.pointer(&how), out, e));
+    run!(exercise moistair_desiccant_by_effectiveness: |c, out, e| let s = c.stream(); let how = sorption(c);
+        (c.pointer(&s), c.number(0.0, 1.0), c.number(0.0, 0.002), c.pointer(&how), out, e));
+    run!(exercise moistair_desiccant_wheel: |c, out, e| let (s, other) = (c.stream(), hot(c)); let how = sorption(c);
+        let known = c.selector(3); let value = if known == 0 { c.number(0.0, 5e4) } else { c.number(40.0, 140.0) };
+        (c.pointer(&s), c.number(0.0, 0.01), c.pointer(&how), c.pointer(&other), known, value, out, e));
+    run!(exercise moistair_desiccant_potentials: |c, out, e| let air = c.state(); (c.pointer(&air), out, e));
+    run!(exercise moistair_desiccant_wheel_by_potentials: |c, out, e| let (s, other) = (c.stream(), hot(c));
+        let share = c.structure(moistair_potentials { first: c.number(0.0, 0.2), second: c.number(0.5, 1.0) });
+        (c.pointer(&s), c.pointer(&other), c.pointer(&share), out, e));
+    run!(exercise moistair_desiccant_effectiveness_between: |c, out, e| let other = hot(c);
+        let done = c.kept::<moistair_potential_wheel>(); let air = c.state();
+        (c.pointer(&air), c.pointer(&done.process.air), c.pointer(&other.air), out, e));
     run!(exercise moistair_humidify_steam: |c, out, e| let s = c.stream();
         (c.pointer(&s), c.number(0.0, 0.05), c.number(2.5e6, 2.8e6), out, e));
     run!(exercise moistair_humidify_steam_to_humidity_ratio: |c, out, e| let s = c.stream();

@@ -287,7 +287,7 @@ fn range_of_the_correlation() {
     assert!(potentials::wheel(&process, &hot, good).is_ok());
     let code = |process: &AirStream, hot: &AirStream| potentials::wheel(process, hot, good).unwrap_err();
     let cold = stream(at(1.8, 0.5, site), 1.0);
-    assert!(matches!(code(&cold, &hot), Error::OutOfRange { quantity: Quantity::PotentialTemperature, .. }));
+    assert!(matches!(code(&cold, &hot), Error::OutOfRange { quantity: Quantity::DesiccantTemperature, .. }));
     let dry = stream(at(30.0, 0.0, site), 1.0);
     assert!(matches!(code(&dry, &hot), Error::Infeasible { quantity: Quantity::HumidityRatio, .. }));
     let idle = stream(at(85.0, 0.03, site), 0.0);

@@ -5,9 +5,11 @@
 
 pub mod coil;
 pub mod compression;
+pub mod desiccant;
 pub mod humidify;
 pub mod mixing;
 pub mod reheat;
+pub mod room;
 pub mod sensible;
 pub mod sequence;
 pub mod stream;
@@ -17,9 +19,11 @@ pub mod water_coil;
 
 pub use coil::*;
 pub use compression::*;
+pub use desiccant::*;
 pub use humidify::*;
 pub use mixing::*;
 pub use reheat::*;
+pub use room::*;
 pub use sensible::*;
 pub use sequence::*;
 pub use stream::*;

@@ -2,7 +2,7 @@
 
 use moistair_core::RelativeHumidity;
 use moistair_core::columns::NAN;
-use moistair_core::process::reheat;
+use moistair_core::process::reheat::{self, Reheat};
 
 use super::coil::moistair_cooling;
 use super::sensible::moistair_sensible;
@@ -21,6 +21,13 @@ pub struct moistair_reheat {
     pub heating: moistair_sensible,
     /// Heat of the heater over the cooling load [1]; NaN without a load.
     pub reheat_fraction: f64,
+}
+
+impl From<Reheat> for moistair_reheat {
+    fn from(done: Reheat) -> Self {
+        let reheat_fraction = done.reheat_fraction().unwrap_or(NAN);
+        Self { cooling: done.cooling.into(), heating: done.heating.into(), reheat_fraction }
+    }
 }
 
 impl Answer for moistair_reheat {
@@ -49,14 +56,8 @@ pub unsafe extern "C" fn moistair_reheat_to_state(
         let condensate = super::coil::condensate(condensate, condensate_temperature)?;
         let humidity = RelativeHumidity::from_fraction(coil_leaving_relative_humidity);
         // SAFETY: the caller's pointers.
-        let done = reheat::to_state(
-            &unsafe { read(entering) }?.to_core()?,
-            &unsafe { read(target) }?.to_core()?,
-            humidity,
-            condensate,
-        )?;
-        let reheat_fraction = done.reheat_fraction().unwrap_or(NAN);
-        Ok(moistair_reheat { cooling: done.cooling.into(), heating: done.heating.into(), reheat_fraction })
+        let (entering, target) = unsafe { (read(entering)?.to_core()?, read(target)?.to_core()?) };
+        Ok(reheat::to_state(&entering, &target, humidity, condensate)?.into())
     };
     // SAFETY: the caller's pointers.
     unsafe { answer(done, error, call) }

@@ -103,7 +103,7 @@ pub struct PotentialWheel<S = f64> {
 /// # Ok::<(), Error>(())
 /// ```
 pub fn potentials<S: Scalar>(air: &MoistAir<S>) -> Result<(S, S), Error> {
-    let celsius = checked(Quantity::PotentialTemperature, air.dry_bulb().celsius())?;
+    let celsius = checked(Quantity::DesiccantTemperature, air.dry_bulb().celsius())?;
     let (_, ratio) = parts(air);
     if ratio <= k(0.0) {
         let (_, most) = Quantity::HumidityRatio.limits();
@@ -137,7 +137,7 @@ fn log_ratio<S: Scalar>(first: S, x: S) -> S {
 /// Temperature, °C, and humidity ratio of given potentials. With w from F₁, which falls as T rises, F₂ rises with T: one root in the range,
 /// bracketed; at most [`solve::ITERATION_CAP`] evaluations.
 pub(super) fn state<S: Scalar>(first: S, second_potential: S) -> Result<(S, S), Error> {
-    let (min, max) = Quantity::PotentialTemperature.limits();
+    let (min, max) = Quantity::DesiccantTemperature.limits();
     let (coldest, warmest) = (k::<S>(min + ZERO_CELSIUS), k::<S>(max + ZERO_CELSIUS));
     let excess = |kelvins: S| {
         let x = temperature_term(kelvins);
@@ -155,7 +155,7 @@ pub(super) fn state<S: Scalar>(first: S, second_potential: S) -> Result<(S, S), 
     let (low, high) = (coldest - margin, warmest + margin);
     if excess(low).0 > k(0.0) || excess(high).0 < k(0.0) {
         let beyond = if excess(high).0 < k(0.0) { max + 1.0 } else { min - 1.0 };
-        return Err(infeasible(Quantity::PotentialTemperature, k::<S>(beyond), k(min), k(max)));
+        return Err(infeasible(Quantity::DesiccantTemperature, k::<S>(beyond), k(min), k(max)));
     }
     let kelvins = solve::increasing(low, high, resolution, excess).at_least(coldest).at_most(warmest);
     let ratio = log_ratio(first, temperature_term(kelvins)).exp();
@@ -171,7 +171,7 @@ pub(super) fn state<S: Scalar>(first: S, second_potential: S) -> Result<(S, S), 
 ///
 /// # Errors
 /// [`Error::NoFlow`]; [`Error::OutOfRange`] for air outside 275 to 425 K; [`Error::Infeasible`]: of the humidity ratio, where a stream is without
-/// vapor, or would be fog behind the wheel; of the temperature of the potentials, where the process air would leave outside the correlation;
+/// vapor, or would be fog behind the wheel; of the desiccant temperature, where the process air would leave outside the correlation;
 /// [`Error::MixedFormulations`], [`Error::NotFinite`].
 ///
 /// ```
