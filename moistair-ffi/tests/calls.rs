@@ -468,6 +468,7 @@ fn sequences() {
         c_chain[1].leaving_temperature = solved.number;
         let total = output(blank(), |out| c_run(&c_chain[..4], &mut done[..4], &mut ran, out));
         same_total(&total, &expected.total);
+    }
 }
 
 /// Rooms and desiccants: what the core gives.

@@ -9,7 +9,7 @@ import moistair
 import numpy as np
 import pytest
 from moistair import MoistAir, account, signal
-from moistair.process import AirStream, AirWithCondensate, WetStream, books, coil, compression, humidify, mixing, reheat, sensible, tower
+from moistair.process import AirStream, AirWithCondensate, WetStream, books, coil, compression, desiccant, humidify, mixing, reheat, room, sensible, tower
 from moistair.process import liquid_water_enthalpy
 from support import FORMULATIONS, FUZZ, SEA_LEVEL, SECOND, odd_numbers, random
 
@@ -57,19 +57,22 @@ def streams(rng, count):
 def arguments(function, rng, count):
     """Odd numbers for the numbers of a process, states and streams for the rest."""
     positional, keywords = [], {}
-    state_names = {"leaving", "target", "air"}
+    # The target of a desiccant is a humidity ratio.
+    state_names = {"leaving", "air", "room", "dried"} | ({"target"} if function.__module__.endswith("reheat") else set())
     for name, parameter in inspect.signature(function).parameters.items():
         if parameter.kind is inspect.Parameter.VAR_POSITIONAL:
             positional.extend(streams(rng, count) for _ in range(3))
         elif name == "entering":
             whole = streams(rng, count)
             of_state = (tower.with_leaving_air, coil.apparatus_dew_point, coil.apparatus_dew_points)
-            positional.append(whole.air if function in of_state else whole)
-        elif name == "part":
-            keywords[name] = streams(rng, count)
+            of_state += (room.limiting_line, room.least_reheat)
+            keywords[name] = whole.air if function in of_state else whole
+        elif name in ("part", "supply", "regeneration"):
+            whole = streams(rng, count)
+            keywords[name] = whole.air if function is desiccant.effectiveness_between else whole
         elif name in state_names:
             keywords[name] = streams(rng, count).air
-        elif name in ("freezing", "formulation", "arrangement", "measured", "quadrature", "transfer"):
+        elif name in ("freezing", "formulation", "arrangement", "measured", "quadrature", "transfer", "source", "characteristic", "carry_over", "heater"):
             continue
         elif name == "rows":
             keywords[name] = 3
@@ -80,7 +83,7 @@ def arguments(function, rng, count):
 
 PROCESSES = [
     getattr(module, name)
-    for module in (coil, compression, humidify, mixing, reheat, sensible, tower)
+    for module in (coil, compression, desiccant, humidify, mixing, reheat, room, sensible, tower)
     for name in module.__all__
     if name[0].islower()
 ]

@@ -1,6 +1,7 @@
 """Processes: one row and many, the books, choices, and objects."""
 
 import dataclasses
+import enum
 import math
 import pickle
 import re
@@ -17,10 +18,12 @@ from moistair.process import (
     books,
     coil,
     compression,
+    desiccant,
     humidify,
     liquid_water_enthalpy,
     mixing,
     reheat,
+    room,
     sensible,
     tower,
 )
@@ -109,6 +112,63 @@ CASES = {
     "coil.between": lambda t, rh, x: coil.between(stream(t, rh, 2.0 + x), leaving=state(5.0, 0.9), dead_band=1e-4),
     "reheat.to_state": lambda t, rh, x: reheat.to_state(
         stream(t, rh, 2.0), target=state(18.0, 0.3), coil_leaving_relative_humidity=0.9 + 0.1 * x
+    ),
+    "reheat.with_coil": lambda t, rh, x: reheat.with_coil(
+        stream(t, rh, 2.0), target=state(18.0, 0.5), coil_leaving=0.1 * x, characteristic="bypass", coldest=2.0
+    ),
+    "room.supply_at_temperature": lambda t, rh, x: room.supply_at_temperature(
+        state(t, rh), sensible=5e3 + 5e3 * x, moisture=1e-3, source_value=32.0, supply_temperature=t - 8.0
+    ),
+    "room.supply_at_flow": lambda t, rh, x: room.supply_at_flow(
+        state(t, rh), sensible=5e3, moisture=1e-3 * x, source_value=15.0, source="liquid", dry_air_flow=1.0
+    ),
+    "room.room_of_supply": lambda t, rh, x: room.room_of_supply(
+        stream(t, rh, 1.0), sensible=5e3, moisture=1e-3 * x, source_value=2.55e6, source="enthalpy"
+    ),
+    "room.gains_between": lambda t, rh, x: room.gains_between(stream(t, rh, 1.0 + x), room=state(24.0, 0.5), source_value=32.0),
+    "room.latent_heat": lambda t, rh, x: room.latent_heat(state(t, rh + 0.1 * x)),
+    "room.sensible_heat_ratio": lambda t, rh, x: room.sensible_heat_ratio(
+        state(t, rh), sensible=5e3, moisture=1e-2 * x, source_value=32.0
+    ),
+    "room.process_slope": lambda t, rh, x: room.process_slope(
+        sensible=5e3 * rh, moisture=1e-3 + 1e-2 * x, source_value=t, pressure=SEA_LEVEL
+    ),
+    "room.slope_of_ratio": lambda t, rh, x: room.slope_of_ratio(state(t, rh), sensible_heat_ratio=x),
+    "room.ratio_of_slope": lambda t, rh, x: room.ratio_of_slope(state(t, rh), slope=3e6 + 1e7 * x),
+    "room.apparatus_dew_points": lambda t, rh, x: room.apparatus_dew_points(state(t, rh), sensible_heat_ratio=0.5 + 0.5 * x),
+    "room.limiting_line": lambda t, rh, x: room.limiting_line(state(t, rh), entering=state(32.0, 0.5), coil_leaving=0.9 + 0.1 * x),
+    "room.least_reheat": lambda t, rh, x: room.least_reheat(
+        state(t, rh), sensible=8e3 * x, moisture=1.5e-3, source_value=32.0, entering=state(t, rh), coil_leaving=0.95
+    ),
+    "room.conditioned": lambda t, rh, x: room.conditioned(
+        state(t, rh),
+        sensible=3e3,
+        moisture=2e-3,
+        source_value=32.0,
+        entering=stream(t + 5.0, rh, 0.5 + x),
+        coil_leaving=0.05,
+        characteristic="bypass",
+        condensate_temperature="apparatus",
+    ),
+    "desiccant.to_humidity_ratio": lambda t, rh, x: desiccant.to_humidity_ratio(
+        stream(t, rh, 1.0), target=0.002 + 0.004 * x, sorption_heat_ratio=1.1
+    ),
+    "desiccant.by_effectiveness": lambda t, rh, x: desiccant.by_effectiveness(
+        stream(t, rh, 1.0), effectiveness=x, sorption_heat_ratio=1.1, carried=4.0, carry_over="rise"
+    ),
+    "desiccant.wheel": lambda t, rh, x: desiccant.wheel(
+        stream(t, rh, 1.0),
+        target=0.004 + 0.002 * x,
+        sorption_heat_ratio=1.1,
+        regeneration=stream(30.0, 0.4, 1.0),
+        value=80.0 + 30.0 * x,
+    ),
+    "desiccant.potentials": lambda t, rh, x: desiccant.potentials(state(t, rh * (1.0 - 0.5 * x))),
+    "desiccant.wheel_by_potentials": lambda t, rh, x: desiccant.wheel_by_potentials(
+        stream(t, rh, 1.0), regeneration=stream(85.0, 0.03, 1.0), first_effectiveness=0.1 * x, second_effectiveness=0.9
+    ),
+    "desiccant.effectiveness_between": lambda t, rh, x: desiccant.effectiveness_between(
+        state(t, rh), dried=state(60.0, 0.04 + 0.01 * x), regeneration=state(90.0, 0.03)
     ),
     "mixing.adiabatic": lambda t, rh, x: mixing.adiabatic(stream(t, rh, 1.0), stream(-10.0, 0.8, 0.1 + x), stream(5.0, 0.5, 1.0)),
     "mixing.adiabatic_at": lambda t, rh, x: mixing.adiabatic_at(
@@ -211,7 +271,7 @@ def test_rows_are_scalar_calls_bit_for_bit(name):
             continue
         assert one.keys() == many.keys()
         for path, value in one.items():
-            assert isinstance(value, (float, bool, coil.CoilRegime, tower.TowerDirection)), path
+            assert isinstance(value, (float, bool, enum.IntEnum)), path
             assert np.shape(many[path]) == (ROWS,)
             assert same_bits(float(many[path][row]), float(value)), (path, row)
             compared += 1
@@ -221,7 +281,7 @@ def test_rows_are_scalar_calls_bit_for_bit(name):
 def test_every_process_is_covered():
     public = {
         f"{module.__name__.rpartition('.')[2]}.{name}"
-        for module in (books, coil, humidify, mixing, reheat, sensible, tower)
+        for module in (books, coil, desiccant, humidify, mixing, reheat, room, sensible, tower)
         for name in module.__all__
         if name[0].islower()
     }
@@ -447,3 +507,54 @@ def test_outlets_beyond_saturation_by_a_rounding_keep_their_bits():
     for name in ("humidity_ratio", "specific_enthalpy", "relative_humidity"):
         assert same_bits(getattr(again, name), getattr(fog.air, name))
     assert fog.air.failed == 0
+
+
+def test_rooms_and_reheat():
+    space, outdoor = state(24.0, 0.5), state(32.0, 0.5)
+    gains = {"sensible": 3e3, "moisture": 1.5e-3, "source_value": 32.0}
+    supplied = room.supply_at_flow(space, dry_air_flow=0.5, **gains)
+    again = room.room_of_supply(supplied.supply, **gains).room.air.air
+    assert math.isclose(again.dry_bulb, 24.0, abs_tol=1e-9) and math.isclose(again.relative_humidity, 0.5, rel_tol=1e-9)
+    found = room.gains_between(supplied.supply, room=space, source_value=32.0)
+    assert math.isclose(found.sensible, 3e3, rel_tol=1e-9) and math.isclose(found.moisture, 1.5e-3, rel_tol=1e-9)
+    assert books.balance([supplied.supply], leaving=supplied.room, exchange=supplied.exchange).close
+
+    ratio = room.sensible_heat_ratio(space, **gains)
+    slope = room.slope_of_ratio(space, sensible_heat_ratio=ratio)
+    assert math.isclose(slope, room.process_slope(pressure=SEA_LEVEL, **gains), rel_tol=1e-12)
+    limit = room.limiting_line(space, entering=outdoor, coil_leaving=0.95)
+    least = room.least_reheat(space, entering=outdoor, coil_leaving=0.95, **gains)
+    assert ratio < limit.sensible_heat_ratio and least.cause is room.ReheatCause.LINE_MISSES_COIL
+    assert math.isclose(least.reheat, 1.5e-3 * (limit.slope - slope), rel_tol=1e-6)
+    entering = AirStream(outdoor, dry_air_flow=least.supply.dry_air_flow)
+    kept = room.conditioned(space, entering=entering, coil_leaving=0.95, **gains)
+    assert math.isclose(kept.reheat.reheat, least.reheat, rel_tol=1e-4)
+    with pytest.raises(moistair.InfeasibleError) as refused:
+        reheat.with_coil(entering, target=state(20.0, 0.5), coil_leaving=0.1, characteristic="bypass", coldest=9.0)
+    assert refused.value.quantity == "apparatus_dew_point"
+    with pytest.raises(ValueError, match="characteristic must be 'relative_humidity' or 'bypass'"):
+        room.limiting_line(space, entering=outdoor, coil_leaving=0.95, characteristic="wet")
+    with pytest.raises(ValueError, match="source must be"):
+        room.sensible_heat_ratio(space, sensible=1.0, moisture=0.0, source_value=30.0, source="people")
+
+
+def test_desiccants():
+    process, outdoor = stream(26.0, 0.55, 1.0), stream(32.0, 0.45, 0.8)
+    wheel = desiccant.wheel(process, target=0.007, sorption_heat_ratio=1.1, regeneration=outdoor, value=90.0)
+    assert wheel.wheel is desiccant.WheelStatus.POSSIBLE and wheel.entropy_production > 0.0
+    assert books.balance([process], leaving=wheel.process.leaving, exchange=wheel.process.exchange).close
+    hot = wheel.heater.leaving
+    assert books.balance([hot], leaving=wheel.regeneration, exchange=wheel.regeneration_exchange).close
+    by_heat = desiccant.wheel(
+        process, target=0.007, sorption_heat_ratio=1.1, regeneration=outdoor, value=wheel.regeneration_heat, heater="heat"
+    )
+    assert math.isclose(by_heat.heater.leaving.air.dry_bulb, 90.0, abs_tol=1e-9)
+    turned = desiccant.wheel_by_potentials(process, regeneration=hot, first_effectiveness=0.07, second_effectiveness=0.9)
+    assert turned.correlation is desiccant.CorrelationStatus.WITHIN and math.isfinite(turned.imbalance.heat)
+    tested = desiccant.effectiveness_between(process.air, dried=turned.process.air, regeneration=hot.air)
+    assert math.isclose(tested.first, 0.07, abs_tol=1e-9) and math.isclose(tested.second, 0.9, abs_tol=1e-9)
+    with pytest.raises(ValueError, match="heater must be"):
+        desiccant.wheel(process, target=0.007, sorption_heat_ratio=1.1, regeneration=outdoor, value=1.0, heater="cold")
+    cold = stream(-5.0, 0.5, 1.0)
+    with pytest.raises(moistair.OutOfRangeError):
+        desiccant.wheel_by_potentials(cold, regeneration=hot, first_effectiveness=0.07, second_effectiveness=0.9)
