@@ -324,6 +324,33 @@
 // Conductance of the water side of a coil over that of its air side [1].
 #define MOISTAIR_CONDUCTANCE_RATIO 109
 
+// Moisture that a room gives to its air [kg/s].
+#define MOISTAIR_MOISTURE_GAIN 135
+
+// Specific enthalpy of that moisture as it comes, from ice to steam [J/kg].
+#define MOISTAIR_MOISTURE_ENTHALPY 136
+
+// Sensible over total gain of a room [1].
+#define MOISTAIR_SENSIBLE_HEAT_RATIO 137
+
+// Slope of a process line [J/kg].
+#define MOISTAIR_PROCESS_SLOPE 138
+
+// Heat of sorption over heat of vaporization [1].
+#define MOISTAIR_SORPTION_HEAT_RATIO 139
+
+// Drying as a fraction of what a desiccant could do at best [1].
+#define MOISTAIR_DRYING_EFFECTIVENESS 140
+
+// Effectiveness of a desiccant wheel in one of its two potentials [1].
+#define MOISTAIR_POTENTIAL_EFFECTIVENESS 141
+
+// Rise of temperature by the heat that a wheel carries over [K].
+#define MOISTAIR_CARRY_OVER_RISE 142
+
+// Temperature of air in the correlation of a wheel's potentials, 275 to 425 K [°C].
+#define MOISTAIR_DESICCANT_TEMPERATURE 143
+
 // Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
 #define MOISTAIR_REAL_GAS 0
 
@@ -386,6 +413,30 @@
 
 // The heat into the air was measured, negative where the coil cools [W].
 #define MOISTAIR_MEASURED_HEAT 2
+
+// Moisture comes as saturated vapor of a temperature [°C], 0 to 200.
+#define MOISTAIR_SOURCE_SATURATED_VAPOR 0
+
+// Moisture comes as liquid water of a temperature [°C], 0 to 200, which the heat of the room evaporates.
+#define MOISTAIR_SOURCE_LIQUID 1
+
+// Moisture comes with a stated enthalpy [J/kg].
+#define MOISTAIR_SOURCE_ENTHALPY 2
+
+// A coil leaves air of a relative humidity.
+#define MOISTAIR_COIL_LEAVES_RELATIVE_HUMIDITY 0
+
+// A coil leaves a mixture of air that passed untouched and air saturated at the apparatus dew point.
+#define MOISTAIR_COIL_LEAVES_BYPASS 1
+
+// A room needs no reheat.
+#define MOISTAIR_REHEAT_NOT_NEEDED 0
+
+// The line of the room misses what any setting of the coil leaves.
+#define MOISTAIR_REHEAT_LINE_MISSES_COIL 1
+
+// The line of the room would meet the coil below the coldest that the coil can hold.
+#define MOISTAIR_REHEAT_COLDEST_COIL 2
 
 // A wetted medium evaporates water at the wet bulb, where recirculated water settles.
 #define MOISTAIR_WATER_AT_WET_BULB 0
@@ -482,6 +533,36 @@
 
 // The chain fails between two ends at which it runs; the nearest value found is returned.
 #define MOISTAIR_SOLVE_INTERRUPTED 3
+
+// The matrix of a wheel carries no heat over.
+#define MOISTAIR_CARRIES_NOTHING 0
+
+// The matrix carries a heat flow into the air [W].
+#define MOISTAIR_CARRIES_HEAT 1
+
+// The matrix warms the leaving air by so much beyond the line of sorption [K].
+#define MOISTAIR_CARRIES_RISE 2
+
+// The heat of the regeneration is given [W].
+#define MOISTAIR_REGENERATION_HEAT 0
+
+// The temperature of the air between heater and wheel is given [°C].
+#define MOISTAIR_REGENERATION_ENTERING 1
+
+// The temperature of the air behind the wheel is given [°C].
+#define MOISTAIR_REGENERATION_LEAVING 2
+
+// Nothing forbids such a wheel.
+#define MOISTAIR_WHEEL_POSSIBLE 0
+
+// Such a wheel would destroy entropy.
+#define MOISTAIR_WHEEL_AGAINST_SECOND_LAW 1
+
+// The correlation was made for this.
+#define MOISTAIR_CORRELATION_WITHIN 0
+
+// The pressure is more than 5 % off 101 325 Pa, for which the correlation was made.
+#define MOISTAIR_CORRELATION_OFF_STANDARD_PRESSURE 1
 
 // A temperature, °C.
 #define MOISTAIR_KIND_TEMPERATURE 1
@@ -976,6 +1057,92 @@ typedef struct {
     double reheat_fraction;
 } moistair_reheat;
 
+// What a room gives to its air.
+typedef struct {
+    // Heat that comes without water [W]; negative in a room that loses heat.
+    double sensible;
+    // Water [kg/s]; negative where it is taken out.
+    double moisture;
+    // Temperature [°C] or enthalpy [J/kg] of that water.
+    double source_value;
+    // How the water comes: MOISTAIR_SOURCE_…
+    int32_t source;
+    // 0.
+    int32_t reserved;
+} moistair_room_gains;
+
+// A room and the air that is supplied to it.
+typedef struct {
+    // The air that is supplied.
+    moistair_stream supply;
+    // The air of the room, which leaves it; with fog, if the gains are more than the air holds.
+    moistair_wet_stream room;
+    // The gains.
+    moistair_exchange exchange;
+} moistair_room_air;
+
+// Where the line of a room meets saturation: nowhere, once, or twice.
+typedef struct {
+    // The warmer meeting, which is the coil's [°C]; NaN for a line that misses saturation: such a room needs reheat.
+    double warmer;
+    // The colder, where the line comes out of saturation again [°C]; NaN where it does not down to -40 °C.
+    double colder;
+    // Number of meetings: 0, 1 or 2.
+    int32_t count;
+    // 0.
+    int32_t reserved;
+} moistair_room_dew_points;
+
+// What a cooling coil can leave, whatever its control.
+typedef struct {
+    // Relative humidity of the leaving air [1], 0.2 to 1; or the bypass factor [1], 0 to below 1.
+    double fraction;
+    // The coldest apparatus dew point that the coil can hold [°C], -40 to 150; read for MOISTAIR_COIL_LEAVES_BYPASS only.
+    double coldest;
+    // MOISTAIR_COIL_LEAVES_RELATIVE_HUMIDITY or MOISTAIR_COIL_LEAVES_BYPASS.
+    int32_t kind;
+    // 0.
+    int32_t reserved;
+} moistair_coil_leaving;
+
+// The steepest line through a room that a coil still serves without reheat.
+typedef struct {
+    // Its sensible heat ratio [1]: below it reheat is unavoidable.
+    double sensible_heat_ratio;
+    // Its slope, change of enthalpy over change of humidity ratio [J/kg].
+    double slope;
+    // Where it touches the curve of the coil: temperature of the leaving air, or the apparatus dew point of a coil with bypass [°C].
+    double touches;
+    // 1 if the coldest that the coil can hold binds, 0 if the curvature of saturation does.
+    int32_t at_coldest;
+    // 0.
+    int32_t reserved;
+} moistair_limiting_line;
+
+// The least reheat of a room, over all flows of supply air.
+typedef struct {
+    // The supply behind the heater, at the flow with the least reheat.
+    moistair_stream supply;
+    // The air that leaves the coil.
+    moistair_state coil_leaving;
+    // The limit of the room.
+    moistair_limiting_line limit;
+    // Heat of the heater [W]; 0 where none is needed.
+    double reheat;
+    // MOISTAIR_REHEAT_NOT_NEEDED, MOISTAIR_REHEAT_LINE_MISSES_COIL or MOISTAIR_REHEAT_COLDEST_COIL.
+    int32_t cause;
+    // 0.
+    int32_t reserved;
+} moistair_least_reheat;
+
+// A room and the coil and heater that keep it.
+typedef struct {
+    // The room and its supply.
+    moistair_room_air room;
+    // Coil and heater, whose leaving air is the supply.
+    moistair_reheat reheat;
+} moistair_conditioned;
+
 // What a humidifier did.
 typedef struct {
     // The air that leaves, with what it could not take up.
@@ -1321,6 +1488,86 @@ typedef struct {
     // How often the steps were evaluated for it.
     uint32_t evaluations;
 } moistair_solved;
+
+// What a desiccant does beside taking up water.
+typedef struct {
+    // Heat of sorption over heat of vaporization [1], 0.5 to 3; about 1.05 to 1.15 for silica gel, 1.2 and more for zeolites.
+    double heat_ratio;
+    // Heat [W] or rise [K] that the matrix carries over.
+    double carry_over_value;
+    // MOISTAIR_CARRIES_NOTHING, MOISTAIR_CARRIES_HEAT or MOISTAIR_CARRIES_RISE.
+    int32_t carry_over;
+    // 0.
+    int32_t reserved;
+} moistair_sorption;
+
+// Air that gave water to a desiccant, or took it back.
+typedef struct {
+    // The air that leaves.
+    moistair_stream leaving;
+    // The heat carried over, and the water with what is left of its enthalpy.
+    moistair_exchange exchange;
+    // Water that went into the desiccant [kg/s]; negative where it came out.
+    double removed;
+    // Heat of sorption that the air took up [W].
+    double sorption_heat;
+    // Heat that the matrix carried over [W].
+    double carried_heat;
+} moistair_sorbed;
+
+// A desiccant wheel with the heater of its regeneration.
+typedef struct {
+    // The side that is dried.
+    moistair_sorbed process;
+    // The heater in the regeneration air; its leaving air enters the wheel.
+    moistair_sensible heater;
+    // The regeneration air behind the wheel.
+    moistair_stream regeneration;
+    // What the wheel gave to it.
+    moistair_exchange regeneration_exchange;
+    // Heat of the regeneration [W].
+    double regeneration_heat;
+    // Heat of the regeneration per water removed [J/kg]; NaN where none is.
+    double heat_per_water;
+    // Entropy that the wheel produces [W/K]; below zero against the second law.
+    double entropy_production;
+    // MOISTAIR_WHEEL_POSSIBLE or MOISTAIR_WHEEL_AGAINST_SECOND_LAW.
+    int32_t status;
+    // 0.
+    int32_t reserved;
+} moistair_wheel;
+
+// Of the two potentials of air, or of the effectiveness of a wheel in them, one each.
+typedef struct {
+    // Near enthalpy [1].
+    double first;
+    // Near relative humidity [1].
+    double second;
+} moistair_potentials;
+
+// A wheel by its potentials.
+typedef struct {
+    // The process air behind the wheel.
+    moistair_stream process;
+    // What it exchanged.
+    moistair_exchange exchange;
+    // The regeneration air behind the wheel, by the balance of both sides.
+    moistair_stream regeneration;
+    // What it exchanged.
+    moistair_exchange regeneration_exchange;
+    // Water that went from the process to the regeneration air [kg/s]; negative where it went the other way.
+    double removed;
+    // Heat that both streams would leave with beyond what they entered with, were both led by the potentials [W]; NaN where they give no state.
+    double imbalance_heat;
+    // Water, likewise [kg/s].
+    double imbalance_water;
+    // Entropy that the wheel produces [W/K].
+    double entropy_production;
+    // MOISTAIR_WHEEL_POSSIBLE or MOISTAIR_WHEEL_AGAINST_SECOND_LAW.
+    int32_t status;
+    // MOISTAIR_CORRELATION_WITHIN or MOISTAIR_CORRELATION_OFF_STANDARD_PRESSURE.
+    int32_t correlation;
+} moistair_potential_wheel;
 
 // What is known about a channel before its first sample. Limits and resolutions are in the unit of the core, which the kinds name.
 // Make one with moistair_channel_new, then set what differs.
@@ -1961,6 +2208,152 @@ int32_t moistair_reheat_to_state(const moistair_stream *entering,
                                  moistair_reheat *done,
                                  moistair_error *error);
 
+// The flow and the humidity ratio of supply air of a given temperature.
+//
+// room: the state of the room; gains: what the room gives to the air; supply_temperature: [°C], -80 to 150; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (such air would have to flow backwards or without end, be drier than dry or more than saturated).
+int32_t moistair_room_supply_at_temperature(const moistair_state *room,
+                                            const moistair_room_gains *gains,
+                                            double supply_temperature,
+                                            moistair_room_air *done,
+                                            moistair_error *error);
+
+// The supply air of a given dry-air flow.
+//
+// room: the state of the room; gains: what the room gives to the air; dry_air_flow: [kg/s], 0 to 1e6; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207 (no flow), 301 (so little air would have to be drier than dry, or the supply would be fog).
+int32_t moistair_room_supply_at_flow(const moistair_state *room,
+                                     const moistair_room_gains *gains,
+                                     double dry_air_flow,
+                                     moistair_room_air *done,
+                                     moistair_error *error);
+
+// The room that a supply and the gains make.
+//
+// supply: the stream that is supplied; gains: what the room gives to it; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207 (no flow), 301 (more water is taken out than there is; outside the range of states).
+int32_t moistair_room_of_supply(const moistair_stream *supply,
+                                const moistair_room_gains *gains,
+                                moistair_room_air *done,
+                                moistair_error *error);
+
+// The gains of a room, from supply and room air.
+//
+// supply: the stream that is supplied; room: the state of the room; source: how its moisture comes, MOISTAIR_SOURCE_…; source_value:
+// temperature [°C] or enthalpy [J/kg] of that moisture; gains: output; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_room_gains_between(const moistair_stream *supply,
+                                    const moistair_state *room,
+                                    int32_t source,
+                                    double source_value,
+                                    moistair_room_gains *gains,
+                                    moistair_error *error);
+
+// The latent heat by which a room's gains are told apart: the enthalpy of the vapor in its own air.
+//
+// room: the state of the room; latent_heat: output [J/kg]; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_room_latent_heat(const moistair_state *room, double *latent_heat, moistair_error *error);
+
+// Sensible over total gain by moistair_room_latent_heat; below 0 or above 1 where one gain is negative or water evaporates in the room.
+//
+// room: the state of the room; gains: what the room gives to the air; sensible_heat_ratio: output [1]; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (the gains cancel, or there are none).
+int32_t moistair_room_sensible_heat_ratio(const moistair_state *room,
+                                          const moistair_room_gains *gains,
+                                          double *sensible_heat_ratio,
+                                          moistair_error *error);
+
+// Slope of the line of a room, change of enthalpy over change of humidity ratio.
+//
+// gains: what the room gives to the air; basis: pressure and formulation; slope: output [J/kg]; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (no moisture: the slope has no bound).
+int32_t moistair_room_process_slope(const moistair_room_gains *gains,
+                                    moistair_basis basis,
+                                    double *slope,
+                                    moistair_error *error);
+
+// Slope of the line of a sensible heat ratio through a room.
+//
+// room: the state of the room; sensible_heat_ratio: [1]; slope: output [J/kg]; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (a ratio of one, whose slope has no bound).
+int32_t moistair_room_slope_of_ratio(const moistair_state *room,
+                                     double sensible_heat_ratio,
+                                     double *slope,
+                                     moistair_error *error);
+
+// Sensible heat ratio of a slope through a room.
+//
+// room: the state of the room; slope: [J/kg]; sensible_heat_ratio: output [1]; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (a slope of zero).
+int32_t moistair_room_ratio_of_slope(const moistair_state *room,
+                                     double slope,
+                                     double *sensible_heat_ratio,
+                                     moistair_error *error);
+
+// The apparatus dew points of a room that is cooled: where the line of its supply states meets saturation.
+//
+// room: the state of the room; sensible_heat_ratio: [1] by moistair_room_latent_heat; found: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (a room of a dew point below -40 °C).
+int32_t moistair_room_apparatus_dew_points(const moistair_state *room,
+                                           double sensible_heat_ratio,
+                                           moistair_room_dew_points *found,
+                                           moistair_error *error);
+
+// The limit of a room: the steepest line that a coil still serves without reheat.
+//
+// room: the state of the room; entering: the state that enters the coil, of account with a bypass; coil: what the coil can leave; limit: output;
+// error: may be null.
+// Returns 0, 1xx, 2xx, 301 (the coil cannot get as dry as the room, or cannot cool it).
+int32_t moistair_room_limiting_line(const moistair_state *room,
+                                    const moistair_state *entering,
+                                    const moistair_coil_leaving *coil,
+                                    moistair_limiting_line *limit,
+                                    moistair_error *error);
+
+// The least reheat with which coil and heater keep a room, over all flows of supply air.
+//
+// room: the state of the room; gains: what the room gives to the air; entering: the state that enters the coil, of account with a bypass; coil: what
+// the coil can leave; least: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (no moisture to take out; the coil cannot get as dry as the room, or cannot cool it).
+int32_t moistair_room_least_reheat(const moistair_state *room,
+                                   const moistair_room_gains *gains,
+                                   const moistair_state *entering,
+                                   const moistair_coil_leaving *coil,
+                                   moistair_least_reheat *least,
+                                   moistair_error *error);
+
+// What coil and heater have to do to the air that enters them so that a room is kept at a state.
+//
+// room: the state of the room; gains: what the room gives to the air; entering: the stream that enters the coil, of the flow of the supply; coil: what
+// the coil can leave; condensate: where the condensate temperature comes from, MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150,
+// read for MOISTAIR_CONDENSATE_AT_GIVEN only; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207 (no flow), 301 (as moistair_room_supply_at_flow and moistair_reheat_with_coil).
+int32_t moistair_room_conditioned(const moistair_state *room,
+                                  const moistair_room_gains *gains,
+                                  const moistair_stream *entering,
+                                  const moistair_coil_leaving *coil,
+                                  int32_t condensate,
+                                  double condensate_temperature,
+                                  moistair_conditioned *done,
+                                  moistair_error *error);
+
+// Reaches a state by cooling to its humidity ratio on the characteristic of a coil, then heating. Codes restrict simultaneous heating and
+// cooling.
+//
+// entering: the stream that enters; target: the state to reach; coil: what the coil can leave; condensate: where the condensate temperature comes
+// from, MOISTAIR_CONDENSATE_AT_…; condensate_temperature: [°C], -40 to 150, read for MOISTAIR_CONDENSATE_AT_GIVEN only; done: output; error:
+// may be null.
+// Returns 0, 1xx, 2xx, 301 (the quantity of the error says what binds: the target is moister; the bypass is too large; the apparatus dew point
+// lies below the coldest; the target is cooler than what the coil leaves).
+int32_t moistair_reheat_with_coil(const moistair_stream *entering,
+                                  const moistair_state *target,
+                                  const moistair_coil_leaving *coil,
+                                  int32_t condensate,
+                                  double condensate_temperature,
+                                  moistair_reheat *done,
+                                  moistair_error *error);
+
 // Specific enthalpy of saturated steam, IAPWS-95, on the datum of liquid water at the triple point.
 //
 // temperature: [°C], 0 to 200; specific_enthalpy: output [J/kg]; error: may be null.
@@ -2319,6 +2712,71 @@ int32_t moistair_sequence_solve(const moistair_wet_stream *entering,
                                 moistair_step_result *results,
                                 moistair_solved *solved,
                                 moistair_error *error);
+
+// Leads air along the line of sorption to a humidity ratio. A moister target runs the line backwards, as in regeneration.
+//
+// entering: the stream that enters; target: humidity ratio [kg/kg]; sorption: what the desiccant does; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207 (no flow), 301 (the leaving air would be fog, or outside the range of states).
+int32_t moistair_desiccant_to_humidity_ratio(const moistair_stream *entering,
+                                             double target,
+                                             const moistair_sorption *sorption,
+                                             moistair_sorbed *done,
+                                             moistair_error *error);
+
+// Dries by an effectiveness on humidity ratio.
+//
+// entering: the stream that enters; effectiveness: [1], 0 to 1; driest: humidity ratio that the desiccant could reach at best [kg/kg]; sorption:
+// what the desiccant does; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207 (no flow), 301 (the air enters drier).
+int32_t moistair_desiccant_by_effectiveness(const moistair_stream *entering,
+                                            double effectiveness,
+                                            double driest,
+                                            const moistair_sorption *sorption,
+                                            moistair_sorbed *done,
+                                            moistair_error *error);
+
+// A wheel that dries air to a humidity ratio, both sides by balances, with the heater of its regeneration.
+//
+// entering: the stream that is dried; target: humidity ratio [kg/kg]; sorption: what the desiccant does; regeneration: the stream that enters the
+// heater; known: what of the heater is given, MOISTAIR_REGENERATION_…; value: that [W] or [°C]; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207 (no flow), 301 (the heater would have to cool; the regeneration air cannot take the water up).
+int32_t moistair_desiccant_wheel(const moistair_stream *entering,
+                                 double target,
+                                 const moistair_sorption *sorption,
+                                 const moistair_stream *regeneration,
+                                 int32_t known,
+                                 double value,
+                                 moistair_wheel *done,
+                                 moistair_error *error);
+
+// The potentials of air over silica gel.
+//
+// air: a state, of 275 to 425 K; found: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (air without vapor).
+int32_t moistair_desiccant_potentials(const moistair_state *air,
+                                      moistair_potentials *found,
+                                      moistair_error *error);
+
+// A wheel of silica gel by its potentials: rough, see what they leave over. The heater before it is moistair_sensible_….
+//
+// entering: the stream that is dried; regeneration: the hot stream; effectiveness: [1] in each potential, 0 to 1; done: output; error: may be
+// null.
+// Returns 0, 1xx, 2xx, 207 (no flow), 301 (air without vapor, fog, or a result outside 275 to 425 K).
+int32_t moistair_desiccant_wheel_by_potentials(const moistair_stream *entering,
+                                               const moistair_stream *regeneration,
+                                               const moistair_potentials *effectiveness,
+                                               moistair_potential_wheel *done,
+                                               moistair_error *error);
+
+// The effectiveness of a wheel in each potential, from a test.
+//
+// air: the state that is dried; dried: that behind the wheel; regeneration: the hot state before the wheel; found: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (a result outside 0 to 1, air without vapor).
+int32_t moistair_desiccant_effectiveness_between(const moistair_state *air,
+                                                 const moistair_state *dried,
+                                                 const moistair_state *regeneration,
+                                                 moistair_potentials *found,
+                                                 moistair_error *error);
 
 // A channel of a kind in a raw unit, with no stuck rule, no hold, no gap rule.
 //
