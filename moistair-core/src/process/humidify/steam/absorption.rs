@@ -169,7 +169,6 @@ fn leaves_saturation<S: Scalar>(air: &MoistAir<S>, enthalpy: S, first: S) -> Opt
         };
         // To the end of the range of states: the greatest humidity ratio, or saturation at the highest dry bulb.
         let most = greatest_humidity_ratio(&M::<S>::at(k(warmest)), k(warmest), pressure) - w1 - first;
-        let step = ((most / k(CROSSING_LEAST)).ln() / k(f64::from(grid))).exp();
         let (near, end) = (first + k(CROSSING_LEAST), first + most);
         let (least, reached) = (excess(near), excess(end));
         let leaves = near < end && reached > k(0.0);
