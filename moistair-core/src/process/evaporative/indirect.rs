@@ -30,7 +30,7 @@ pub enum IndirectEffectiveness<S = f64> {
 pub struct IndirectCooler<S = f64> {
     /// How far the primary air is cooled, if it stays dry.
     pub effectiveness: IndirectEffectiveness<S>,
-    /// At which the secondary air leaves, unless it enters so moist that heating alone leaves it moister: near one (common practice, no source).
+    /// At which the secondary air leaves, over liquid: near one (common practice, no source).
     pub exhaust_humidity: RelativeHumidity<S>,
     /// Power of the pump, which goes into the secondary air.
     pub pump_heat: HeatFlow<S>,
@@ -74,16 +74,16 @@ pub struct IndirectCooled<S = f64> {
 ///
 /// t₂ = t₁ − ε (t₁ − t*) at constant humidity ratio; where that is below the dew point, the heat of that cooling is kept and equilibrium
 /// decides how much of it condenses, so that the air leaves warmer (dry effectiveness understates a wet wall). The secondary air leaves
-/// with that heat and that of the pump at the stated humidity, h(t, W) − (W − W_s1) h_w = h_s1 + (Q + P) / ṁ_s, and no warmer than the primary air
-/// enters.
+/// with that heat and that of the pump at the stated humidity, h(t, W) − (W − W_s1) h_w = h_s1 + (Q + P) / ṁ_s, and no drier than a wet wall as
+/// warm as the entering primary air makes it.
 ///
 /// Accuracy: an effectiveness model; whether the wall could do it in between (a pinch inside) is not looked at, nor how the effectiveness
 /// changes with the flows. Maclaine-cross and Banks 1983 give the theory, Duan et al. 2012 (Renew. Sust. Energy Rev. 16:6823)
 /// a review. Bounded work: at most two searches of 80 evaluations.
 ///
 /// # Errors
-/// [`Error::Infeasible`] where the water would freeze, for an effectiveness beyond the dew point of the secondary air, and where the
-/// secondary air cannot take the heat; [`Error::MixedFormulations`], [`Error::NoFlow`], [`Error::OutOfRange`], [`Error::NotFinite`].
+/// [`Error::Infeasible`] where the water would freeze, for an effectiveness beyond the dew point of the secondary air, where the
+/// secondary air cannot take the heat, and for an exhaust drier than it can be with that heat; [`Error::MixedFormulations`], [`Error::NoFlow`], [`Error::OutOfRange`], [`Error::NotFinite`].
 ///
 /// ```
 /// use moistair_core::*;
@@ -139,7 +139,8 @@ pub fn indirect<S: Scalar>(
     limit_of_working_air(&working, cooler.effectiveness, start, wet_bulb, leaving)?;
     let cooled = Cooled::to(&air, leaving)?;
     let heat = flow * cooled.heat;
-    let exhaust = exhaust(&working, Taken { heat: (heat + pump) / exhaust_flow, water, humidity: wanted }, start)?;
+    let taken = Taken { heat: heat + pump, flow: exhaust_flow, water, humidity: wanted, wall: start };
+    let exhaust = exhaust(&working, taken)?;
     let evaporated = exhaust_flow * (parts(&exhaust).1 - parts(&working).1);
     let flow_of = MassFlow::from_kilograms_per_second;
     let condensate = flow * cooled.condensate;
@@ -229,7 +230,13 @@ impl<S: Scalar> Cooled<S> {
         let (h1, w1) = parts(air);
         if let Ok(dry) = at_same_ratio(air, leaving) {
             let none = k(0.0);
-            return Ok(Self { air: dry, heat: h1 - parts(&dry).0, condensate: none, condensate_enthalpy: none, freezes: false });
+            return Ok(Self {
+                air: dry,
+                heat: h1 - parts(&dry).0,
+                condensate: none,
+                condensate_enthalpy: none,
+                freezes: false,
+            });
         }
         let dew_point = air.dew_point()?.celsius();
         let at_dew = MoistAir::assemble(dew_point, air.pressure().pascals(), w1, air.formulation());
@@ -252,44 +259,71 @@ impl<S: Scalar> Cooled<S> {
     }
 }
 
-/// What the secondary air takes up per dry air.
+/// What the secondary air takes up.
 struct Taken<S> {
+    /// W
     heat: S,
+    /// Dry air that takes it, kg/s.
+    flow: S,
     /// Enthalpy of the water that evaporates.
     water: S,
     /// At which it leaves.
     humidity: S,
+    /// The warmest that the wet wall can be, °C.
+    wall: S,
 }
 
-/// The secondary air after it took heat at a stated humidity, at most as warm as the primary air enters.
-fn exhaust<S: Scalar>(working: &MoistAir<S>, taken: Taken<S>, warmest: S) -> Result<MoistAir<S>, Error> {
+/// The secondary air after it took heat at a stated humidity.
+fn exhaust<S: Scalar>(working: &MoistAir<S>, taken: Taken<S>) -> Result<MoistAir<S>, Error> {
     let (h1, w1) = parts(working);
     let (pressure, formulation) = (working.pressure().pascals(), working.formulation());
-    let at = |celsius: S| {
+    let most_ratio = k::<S>(Quantity::HumidityRatio.limits().1);
+    let at = |celsius: S, humidity: S| {
         let ratio = with_mixture!(formulation, S, M => {
             let saturated = M::<S>::at(celsius).saturation(pressure, Surface::Liquid).mole_fraction;
-            let fraction = (taken.humidity * saturated).at_most(k(Quantity::WaterMoleFraction.limits().1));
-            let held = <M<S> as Mixture<S>>::humidity_ratio(fraction);
-            S::select(saturates(saturated), held, k(Quantity::HumidityRatio.limits().1))
+            let fraction = (humidity * saturated).at_most(k(Quantity::WaterMoleFraction.limits().1));
+            S::select(saturates(saturated), <M<S> as Mixture<S>>::humidity_ratio(fraction), most_ratio)
         });
-        MoistAir::assemble(celsius, pressure, ratio.at_least(w1).at_most(k(Quantity::HumidityRatio.limits().1)), formulation)
+        MoistAir::assemble(celsius, pressure, ratio.at_most(most_ratio), formulation)
     };
-    let excess = |air: &MoistAir<S>| {
+    let heat = taken.heat / taken.flow;
+    // Heat that it took to come there, with the water that evaporated on the way.
+    let heat_to = |air: &MoistAir<S>| {
         let (h, w) = parts(air);
-        h - h1 - (w - w1) * taken.water - taken.heat
+        h - h1 - (w - w1) * taken.water
     };
-    let at_wet_bulb = working.wet_bulb()?.celsius();
-    let (cold, warm) = (at(at_wet_bulb.at_most(working.dry_bulb().celsius())), at(warmest));
-    let (least, most) = (excess(&cold), excess(&warm));
+    let excess = |celsius: S| heat_to(&at(celsius, taken.humidity)) - heat;
+    let cold = working.wet_bulb()?.celsius();
+    let warm = taken.wall.at_least(working.dry_bulb().celsius());
+    let (least, most) = (excess(cold), excess(warm));
     if most < k(0.0) {
-        let able = (most + taken.heat).at_least(k(0.0));
+        let able = (heat_to(&at(warm, taken.humidity)) * taken.flow).at_least(k(0.0));
         return Err(infeasible(Quantity::HeatFlow, taken.heat, k(0.0), able));
     }
-    if least >= k(0.0) {
-        return Ok(cold);
+    let celsius = if least < k(0.0) {
+        solve::between((cold, least), (warm, most), solve::temperature_resolution(), excess)
+    } else {
+        cold
+    };
+    let near = at(celsius, taken.humidity);
+    // What the last unit of the temperature leaves over goes into the vapor, so that the book closes.
+    let latent = with_mixture!(formulation, S, M =>
+        M::<S>::at(celsius).gas(pressure, parts(&near).1).enthalpy_of_water)
+        - taken.water;
+    let rest = heat_to(&near) - heat;
+    let ratio = if least < k(0.0) { parts(&near).1 - rest / latent } else { parts(&near).1 };
+    let wall = at(taken.wall, k(1.0));
+    // No wet wall of at most that temperature gives so much heat with so little vapor.
+    let evaporated = heat * (parts(&wall).1 - w1) / heat_to(&wall);
+    if ratio - w1 < evaporated - most_ratio * S::epsilon() {
+        let driest = AirWithCondensate::from_enthalpy_and_water(
+            SpecificEnthalpy::from_joules_per_kilogram(h1 + heat + evaporated * taken.water),
+            HumidityRatio::from_kilograms_per_kilogram(w1 + evaporated),
+            Freezing::Equilibrium,
+            working.basis(),
+        )?;
+        let least = driest.air().relative_humidity()?.fraction();
+        return Err(infeasible(Quantity::RelativeHumidity, taken.humidity, least, k(1.0)));
     }
-    let low = cold.dry_bulb().celsius();
-    let celsius =
-        solve::between((low, least), (warmest, most), solve::temperature_resolution(), |celsius| excess(&at(celsius)));
-    Ok(at(celsius))
+    Ok(MoistAir::assemble(celsius, pressure, ratio, formulation))
 }

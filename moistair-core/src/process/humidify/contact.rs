@@ -7,7 +7,7 @@
 use super::{Humidified, infeasible, parts};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
-use crate::error::Error;
+use crate::error::{Error, checked};
 use crate::mixture::Mixture;
 use crate::process::film::Site;
 use crate::process::{AirStream, Exchange, WetStream};
@@ -37,7 +37,7 @@ pub(in crate::process) struct Met<S> {
     /// Leaving humidity ratio, fog included.
     ratio: S,
     /// Whether there is none.
-    unsaturated: bool,
+    clear: bool,
     /// Heat into the air, W, besides the enthalpy of the water taken up.
     pub heat: S,
     /// Water taken up, kg/s; negative where vapor of the air condenses on it.
@@ -78,13 +78,14 @@ impl<S: Scalar> Contact<S> {
         let start = air.dry_bulb().celsius();
         let leaving = start - self.effectiveness * (start - water);
         let gain = self.effectiveness * (film.enthalpy - h1 - (film.humidity_ratio - w1) * water_enthalpy);
-        let (ratio, limit) = ratio_with_fog(&air, leaving, water_enthalpy, gain);
+        let idle = self.effectiveness == k(0.0);
+        let (ratio, limit) = if idle { (w1, w1) } else { ratio_with_fog(&air, leaving, water_enthalpy, gain) };
         Met {
             water,
             water_enthalpy,
             leaving,
             ratio,
-            unsaturated: ratio <= limit && self.melting <= leaving,
+            clear: ratio <= limit && (idle || self.melting <= leaving),
             heat: self.flow * gain,
             evaporated: self.flow * (ratio - w1),
         }
@@ -118,15 +119,16 @@ impl<S: Scalar> Contact<S> {
         let water = met.evaporated + droplets;
         let heat = met.heat + met.heat_of_droplets(self, droplets);
         let exchange = Exchange::new(heat, water, water * met.water_enthalpy);
-        let ratio = HumidityRatio::from_kilograms_per_kilogram;
-        let wet = if met.unsaturated {
+        let total = checked(Quantity::TotalWater, w1 + water / self.flow)?;
+        // Droplets that freeze come to equilibrium.
+        let wet = if met.clear && (droplets == k(0.0) || self.melting <= met.leaving) {
             let leaving = MoistAir::assemble(met.leaving, air.pressure().pascals(), met.ratio, air.formulation());
             AirWithCondensate::carrying(leaving, droplets / self.flow, k(0.0))
         } else {
             let enthalpy = h1 + (heat + water * met.water_enthalpy) / self.flow;
             AirWithCondensate::from_enthalpy_and_water(
                 SpecificEnthalpy::from_joules_per_kilogram(enthalpy),
-                ratio(w1 + water / self.flow),
+                HumidityRatio::from_kilograms_per_kilogram(total),
                 Freezing::Equilibrium,
                 air.basis(),
             )?

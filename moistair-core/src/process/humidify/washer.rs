@@ -91,9 +91,8 @@ pub fn wash<S: Scalar>(entering: &AirStream<S>, washer: Washer<S>) -> Result<Was
     let brought = water_enthalpy(&entering.air(), washer.temperature)?;
     let contact = Contact::new(entering, effectiveness)?;
     let droplets = fraction * sprayed;
-    let met = contact.balanced(|met| {
-        pump + sprayed * (brought - met.water_enthalpy) - met.heat_of_droplets(&contact, droplets)
-    });
+    let met = contact
+        .balanced(|met| pump + sprayed * (brought - met.water_enthalpy) - met.heat_of_droplets(&contact, droplets));
     let met = met.map_err(|why| match why {
         Unbalanced::Freezes => contact.freezes(),
         Unbalanced::TooMuchHeat => {

@@ -17,7 +17,8 @@ fn left_over<const STEPS: usize>() -> f64 {
         let most = if celsius < 201.0 { saturation(celsius).min(1.6e6) } else { 1.6e6 };
         for share in 0..=20 {
             let pascals = 500.0 * (most / 500.0).powf(f64::from(share) / 20.0);
-            let off = at_after::<f64, STEPS>(celsius, pascals).enthalpy - at_after::<f64, 12>(celsius, pascals).enthalpy;
+            let off =
+                at_after::<f64, STEPS>(celsius, pascals).enthalpy - at_after::<f64, 12>(celsius, pascals).enthalpy;
             worst = worst.max(off.abs());
         }
     }
