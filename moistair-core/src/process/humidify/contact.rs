@@ -80,6 +80,8 @@ impl<S: Scalar> Contact<S> {
         let gain = self.effectiveness * (film.enthalpy - h1 - (film.humidity_ratio - w1) * water_enthalpy);
         let idle = self.effectiveness == k(0.0);
         let (ratio, limit) = if idle { (w1, w1) } else { ratio_with_fog(&air, leaving, water_enthalpy, gain) };
+        // In nearly dry air rounding may carry it below zero.
+        let ratio = ratio.at_least(k(0.0));
         Met {
             water,
             water_enthalpy,
