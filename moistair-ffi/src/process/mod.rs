@@ -5,6 +5,7 @@
 
 pub mod coil;
 pub mod compression;
+pub mod evaporative;
 pub mod humidify;
 pub mod mixing;
 pub mod reheat;
@@ -17,6 +18,7 @@ pub mod water_coil;
 
 pub use coil::*;
 pub use compression::*;
+pub use evaporative::*;
 pub use humidify::*;
 pub use mixing::*;
 pub use reheat::*;
