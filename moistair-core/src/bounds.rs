@@ -198,6 +198,16 @@ quantities! {
     Conductance = 108, "conductance", "W/K", 0.0, 1.0e9;
     /// Conductance of the water side of a coil over that of its air side.
     ConductanceRatio = 109, "conductance ratio", "1", 1.0e-3, 1.0e3;
+    /// Vapor over all of the water in wet steam, by mass.
+    SteamQuality = 110, "steam quality", "1", 0.0, 1.0;
+    /// Absolute pressure of steam; saturated at 7 to 201 °C.
+    SteamPressure = 111, "steam pressure", "Pa", 1_000.0, 1_600_000.0;
+    /// Temperature of superheated steam.
+    SteamTemperature = 112, "steam temperature", "°C", 0.0, 400.0;
+    /// (t₁ − t₂) over the drive of an indirect evaporative cooler; above one where the working air is cooled on the way.
+    IndirectEffectiveness = 113, "indirect effectiveness", "1", 0.0, 2.0;
+    /// Power of a pump, which ends as heat in its water.
+    PumpHeat = 114, "pump heat", "W", 0.0, 1.0e9;
     /// Moisture that a room gives to its air.
     MoistureGain = 135, "moisture gain", "kg/s", -1.0e6, 1.0e6;
     /// Specific enthalpy of that moisture as it comes, from ice to steam.

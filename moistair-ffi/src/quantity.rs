@@ -152,6 +152,16 @@ pub const MOISTAIR_COOLANT_SPECIFIC_HEAT: i32 = 107;
 pub const MOISTAIR_CONDUCTANCE: i32 = 108;
 /// Conductance of the water side of a coil over that of its air side [1].
 pub const MOISTAIR_CONDUCTANCE_RATIO: i32 = 109;
+/// Vapor over all of the water in wet steam, by mass [1].
+pub const MOISTAIR_STEAM_QUALITY: i32 = 110;
+/// Absolute pressure of steam [Pa].
+pub const MOISTAIR_STEAM_PRESSURE: i32 = 111;
+/// Temperature of superheated steam [°C].
+pub const MOISTAIR_STEAM_TEMPERATURE: i32 = 112;
+/// (t1 - t2) over the drive of an indirect evaporative cooler [1].
+pub const MOISTAIR_INDIRECT_EFFECTIVENESS: i32 = 113;
+/// Power of a pump, which ends as heat in its water [W].
+pub const MOISTAIR_PUMP_HEAT: i32 = 114;
 /// Moisture that a room gives to its air [kg/s].
 pub const MOISTAIR_MOISTURE_GAIN: i32 = 135;
 /// Specific enthalpy of that moisture as it comes, from ice to steam [J/kg].

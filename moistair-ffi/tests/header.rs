@@ -87,6 +87,7 @@ fn rendered() -> String {
         "process/humidify",
         "process/mixing",
         "process/tower",
+        "process/evaporative",
         "process/tower_sizing",
         "process/compression",
         "process/sequence",

@@ -63,6 +63,12 @@ words! {
     moistair_cooling, [12, 26, 36], [35], [0, 14];
     moistair_reheat, [12, 26, 36, 49], [35, 54], [0, 14, 37];
     moistair_humidified, [12], [], [0];
+    moistair_steam_absorption, [], [0, 1], [];
+    moistair_throttled_steam, [3], [], [];
+    moistair_washed, [12, 26], [], [0];
+    moistair_direct_cooled, [12, 28, 29], [], [0];
+    moistair_indirect_cooled, [12, 29, 42], [], [0, 17];
+    moistair_two_stage_cooled, [12, 29, 42, 55, 71, 72], [], [0, 17, 43];
     moistair_apparatus, [], [], [];
     moistair_apparatus_dew_points, [5], [0, 1, 2, 3], [];
     moistair_coil_surface, [2], [], [];
@@ -694,6 +700,49 @@ fn no_argument_upsets_an_export() {
         (c.pointer(&s), c.number(0.0, 0.05), c.number(0.0, 90.0), out, e));
     run!(exercise moistair_humidify_evaporative: |c, out, e| let s = c.stream();
         (c.pointer(&s), c.number(0.0, 1.0), c.selector(2), c.number(0.0, 90.0), out, e));
+    run!(exercise moistair_humidify_steam_absorption: |c, out, e| let s = c.stream();
+        (c.pointer(&s), c.number(2.5e6, 3.2e6), out, e));
+    run!(exercise moistair_steam_saturated: |c, out, e| (c.number(1e3, 1.6e6), out, e));
+    run!(exercise moistair_steam_wet: |c, out, e| (c.number(1e5, 1.6e6), c.number(0.0, 1.0), out, e));
+    run!(exercise moistair_steam_superheated: |c, out, e| (c.number(150.0, 400.0), c.number(1e5, 1.6e6), out, e));
+    run!(exercise moistair_steam_throttled: |c, out, e| (c.number(1e6, 3.2e6), c.number(1e3, 1.6e6), out, e));
+    run!(exercise moistair_humidify_wash: |c, out, e| let s = c.stream();
+        let washer = moistair_washer {
+            water: c.number(0.1, 20.0),
+            temperature: c.number(1.0, 40.0),
+            effectiveness: c.number(0.0, 1.0),
+            pump_heat: c.number(0.0, 500.0),
+            carry_over_fraction: c.number(0.0, 0.01),
+        };
+        (c.pointer(&s), c.pointer(&washer), out, e));
+    let direct = |c: &Caller| moistair_direct_cooler {
+        saturation_effectiveness: c.number(0.1, 1.0),
+        circulating: c.number(0.1, 2.0),
+        pump_heat: c.number(0.0, 300.0),
+        make_up_temperature: c.number(1.0, 30.0),
+        treatment: moistair_water_treatment {
+            drift_fraction: c.number(0.0, 0.001),
+            cycles_of_concentration: c.number(1.5, 8.0),
+        },
+        make_up: c.selector(2),
+        reserved: 0,
+    };
+    let indirect = |c: &Caller| moistair_indirect_cooler {
+        effectiveness: c.number(0.1, 0.9),
+        exhaust_humidity: c.number(0.9, 1.0),
+        pump_heat: c.number(0.0, 300.0),
+        water_temperature: c.number(1.0, 30.0),
+        effectiveness_of: c.selector(2),
+        water: c.selector(2),
+    };
+    run!(exercise moistair_evaporative_direct: |c, out, e| let s = c.stream(); let cooler = direct(c);
+        (c.pointer(&s), c.pointer(&cooler), out, e));
+    run!(exercise moistair_evaporative_indirect: |c, out, e|
+        let first = c.stream(); let second = c.stream(); let cooler = indirect(c);
+        (c.pointer(&first), c.pointer(&second), c.pointer(&cooler), out, e));
+    run!(exercise moistair_evaporative_two_stage: |c, out, e|
+        let first = c.stream(); let second = c.stream(); let (stage, next) = (indirect(c), direct(c));
+        (c.pointer(&first), c.pointer(&second), c.pointer(&stage), c.pointer(&next), out, e));
     run!(exercise moistair_mixing_adiabatic: |c, out, e| let s = [c.wet_stream(), c.wet_stream()];
         (c.pointer(&s).cast(), [1, 2, 2, usize::MAX][c.below(4) as usize], out, e));
     run!(exercise moistair_mixing_adiabatic_at: |c, out, e| let s = [c.wet_stream(), c.wet_stream()];

@@ -8,7 +8,10 @@ use moistair_core::process::coil::{
 use moistair_core::process::compression;
 use moistair_core::process::desiccant::potentials::{self, Effectiveness};
 use moistair_core::process::desiccant::{self, CarryOver, Regeneration, Sorption};
-use moistair_core::process::humidify::{self, Absorption, EvaporatingWater};
+use moistair_core::process::evaporative::{
+    self, DirectCooled, DirectCooler, IndirectCooled, IndirectCooler, IndirectEffectiveness,
+};
+use moistair_core::process::humidify::{self, EvaporatingWater, Steam, Washer};
 use moistair_core::process::reheat::CoilLeaving;
 use moistair_core::process::room::{self, MoistureSource, RoomGains};
 use moistair_core::process::tower::basin::Basin;
@@ -134,10 +137,16 @@ impl Seen {
     }
 }
 
+fn usual_steam() -> Steam {
+    Steam::saturated_at_temperature(celsius(110.0)).unwrap()
+}
+
+#[track_caller]
 fn finite(numbers: &[f64]) {
     assert!(numbers.iter().all(|x| x.is_finite()), "{numbers:?}");
 }
 
+#[track_caller]
 fn outlet(leaving: &WetStream, exchange: &Exchange) {
     sound(leaving).unwrap_or_else(|error| panic!("{error}"));
     let water = exchange.water.kilograms_per_second();
@@ -414,12 +423,28 @@ fn no_argument_breaks_a_process() {
         let wanted = RelativeHumidity::from_fraction(x());
         seen.take("steam to relative humidity", humidify::steam_to_relative_humidity(&entering, wanted, steam), humid);
         seen.take("limit of steam", humidify::steam_limit(&entering, steam), |limit| {
-            if let Absorption::UpTo(most) = limit {
-                assert!(most.kilograms_per_second() >= 0.0 && most.kilograms_per_second().is_finite());
-            }
+            let flows = [limit.first_saturation(), limit.unsaturated_again()];
+            assert!(flows.into_iter().flatten().all(|m| m.kilograms_per_second() >= 0.0));
+            finite(&flows.map(|m| m.map_or(0.0, MassFlow::kilograms_per_second)));
         });
         seen.take("enthalpy of steam", humidify::saturated_steam_enthalpy(celsius(x())), |h| {
             finite(&[h.joules_per_kilogram()])
+        });
+        let supply = |steam: &Steam| finite(&[steam.specific_enthalpy().joules_per_kilogram()]);
+        let pascals = if x() < 1.0 { x() } else { 3e5 };
+        let pressure = Pressure::from_pascals(pascals);
+        seen.take("saturated steam", Steam::saturated_at_pressure(Pressure::from_pascals(x())), supply);
+        seen.take("steam by temperature", Steam::saturated_at_temperature(celsius(x())), supply);
+        seen.take("wet steam", Steam::wet(pressure, x()), supply);
+        let hot = if x() < 1.0 { x() } else { 250.0 };
+        let superheated = Steam::superheated(celsius(hot), pressure);
+        seen.take("superheated steam", superheated, supply);
+        let known = Steam::from_specific_enthalpy(joules(x()));
+        seen.take("steam by enthalpy", known, supply);
+        let some = superheated.or(known).or(Steam::from_specific_enthalpy(steam)).unwrap_or(usual_steam());
+        seen.take("throttling", some.throttled_to(Pressure::from_pascals(x())), |state| {
+            finite(&[state.temperature.celsius(), state.superheat.kelvins()]);
+            assert!((0.0..=1.0).contains(&state.quality) && state.superheat.kelvins() >= 0.0);
         });
         seen.take("enthalpy of water", liquid_water_enthalpy(celsius(x()), first.basis()), |h| {
             finite(&[h.joules_per_kilogram()])
@@ -428,6 +453,57 @@ fn no_argument_breaks_a_process() {
         for water in [EvaporatingWater::AtWetBulb, EvaporatingWater::Given(celsius(x()))] {
             seen.take("wetted media", humidify::evaporative(&entering, x(), water), humid);
         }
+        let mut or = |usual: f64| if random.bits() & 1 == 0 { number(&mut random) } else { usual };
+        let washer = Washer {
+            water: flow(or(1.0)),
+            temperature: celsius(or(12.0)),
+            effectiveness: or(0.8),
+            pump_heat: HeatFlow::from_watts(or(200.0)),
+            carry_over_fraction: or(1e-3),
+        };
+        seen.take("washer", humidify::wash(&entering, washer), |done| {
+            humid(&done.air);
+            finite(&[done.leaving_water_temperature.celsius(), done.heat_to_water.watts()]);
+            assert!(done.leaving_water.kilograms_per_second() >= 0.0);
+        });
+        let mut water =
+            |t: f64| if t < 20.0 { EvaporatingWater::AtWetBulb } else { EvaporatingWater::Given(celsius(or(t))) };
+        let (make_up, evaporating) = (water(if second.dry_bulb().celsius() < 20.0 { 5.0 } else { 25.0 }), water(30.0));
+        let mut or = |usual: f64| if random.bits() & 1 == 0 { number(&mut random) } else { usual };
+        let direct = DirectCooler {
+            saturation_effectiveness: or(0.8),
+            circulating: flow(or(1.0)),
+            pump_heat: HeatFlow::from_watts(or(200.0)),
+            make_up,
+            treatment: WaterTreatment { drift_fraction: or(1e-4), cycles_of_concentration: or(3.0) },
+        };
+        let cooled = |done: &DirectCooled| {
+            humid(&done.air);
+            finite(&[done.water_temperature.celsius(), done.water.make_up.kilograms_per_second()]);
+        };
+        seen.take("direct evaporative cooling", evaporative::direct(&entering, direct), cooled);
+        let indirect = IndirectCooler {
+            effectiveness: if or(1.0) > 0.5 {
+                IndirectEffectiveness::OfWetBulb(or(0.7))
+            } else {
+                IndirectEffectiveness::OfDewPoint(or(0.7))
+            },
+            exhaust_humidity: RelativeHumidity::from_fraction(or(0.95)),
+            pump_heat: HeatFlow::from_watts(or(200.0)),
+            water: evaporating,
+        };
+        let working = AirStream::new(second, flow(or(2.0))).unwrap_or_else(|_| stream(second, 2.0));
+        let both = |done: &IndirectCooled| {
+            outlet(&done.primary.into(), &done.primary_exchange);
+            humid(&done.secondary);
+            finite(&[done.heat.watts(), done.condensate.kilograms_per_second()]);
+        };
+        seen.take("indirect evaporative cooling", evaporative::indirect(&entering, &working, indirect), both);
+        seen.take("two-stage cooling", evaporative::two_stage(&entering, &working, indirect, direct), |done| {
+            both(&done.indirect);
+            cooled(&done.direct);
+        });
+        let mut x = || number(&mut random);
 
         let treatment = WaterTreatment { drift_fraction: x(), cycles_of_concentration: x() };
         seen.take("water use", tower::water_use(flow(x()), flow(x()), treatment), |used| {

@@ -12,6 +12,7 @@ mod compression;
 mod desiccants;
 mod facts;
 mod hostile;
+mod humidifiers;
 mod laws;
 mod rooms;
 mod sequences;

@@ -4,7 +4,7 @@ use crate::checks::{Row, Table, Tally};
 use crate::support::*;
 use moistair_core::process::coil::{self, Arrangement, CoilSurface, CoilWater, CondensateTemperature, Coolant};
 use moistair_core::process::desiccant::potentials::{self, Effectiveness};
-use moistair_core::process::humidify::{self, Absorption, EvaporatingWater};
+use moistair_core::process::humidify::{self, Absorption, EvaporatingWater, Steam};
 use moistair_core::process::reheat::CoilLeaving;
 use moistair_core::process::room::{self, MoistureSource, RoomGains};
 use moistair_core::process::tower::merkel::{self, Quadrature};
@@ -146,14 +146,25 @@ fn computed(row: Row<'_>) -> f64 {
             let entering = given.stream(1);
             match humidify::steam_limit(&entering, given.steam()).unwrap() {
                 Absorption::Unlimited => vec![("unlimited", 1.0)],
-                Absorption::UpTo(most) => {
+                limit @ (Absorption::UpTo(most) | Absorption::UpToAndFrom { up_to: most, .. }) => {
                     let done = humidify::steam(&entering, most, given.steam()).unwrap();
+                    let again = limit.unsaturated_again().map_or(f64::NAN, |from| from.kilograms_per_second() * 1e3);
                     vec![
                         ("limit", most.kilograms_per_second() * 1e3),
+                        ("again", again),
                         ("t2", done.leaving.air().air().dry_bulb().celsius()),
                     ]
                 }
             }
+        }
+        "steam supply" => {
+            let pressure = Pressure::from_pascals(row.input("p"));
+            let superheated = given.has("t").then(|| Steam::superheated(celsius(row.input("t")), pressure).unwrap());
+            let steam = superheated.unwrap_or_else(|| Steam::saturated_at_pressure(pressure).unwrap());
+            vec![
+                ("h", steam.specific_enthalpy().kilojoules_per_kilogram()),
+                ("t", steam.throttled_to(pressure).unwrap().temperature.celsius()),
+            ]
         }
         "steam to dew point" => {
             let entering = given.stream(1);
@@ -300,7 +311,7 @@ fn worked_examples() {
     for row in table.rows() {
         tally.within(row.text("process"), row.text("id"), computed(row), row.value(), row.number("tolerance"));
     }
-    tally.finish(115);
+    tally.finish(121);
 }
 
 /// Examples 1 to 6 of the handbook chapter as its text solves them, on both formulations: within half a unit of

@@ -13,7 +13,7 @@ use crate::quantity::ZERO_CELSIUS;
 use crate::real::{Choose, Real, k};
 use crate::saturation::{Surface, hyland_wexler_ice, hyland_wexler_liquid};
 use crate::solve;
-use crate::substance::liquid_water::Condensed;
+use crate::substance::pure_phase::PurePhase;
 use crate::substance::{DensityDerivatives, Fluid, Jet, TemperatureOrder, dry_air, ice, liquid_water, water_vapor};
 
 /// Newton steps for the melting temperature; see the tests of the models.
@@ -84,7 +84,7 @@ pub struct Phase<R> {
 }
 
 impl<R: Real> Phase<R> {
-    pub fn of(celsius: R, condensed: Condensed<R>) -> Self {
+    pub fn of(celsius: R, condensed: PurePhase<R>) -> Self {
         let kelvins = celsius + k(ZERO_CELSIUS);
         let reduced = condensed.gibbs / (kelvins * k(water_vapor::GAS_CONSTANT));
         let potential = reduced - water_vapor::ideal(kelvins).value - k(1.0);

@@ -13,12 +13,15 @@ pub mod books;
 pub mod coil;
 pub mod compression;
 pub mod desiccant;
+pub mod evaporative;
+mod film;
 pub mod humidify;
 pub mod mixing;
 pub mod reheat;
 pub mod room;
 pub mod sensible;
 pub mod tower;
+pub mod water_use;
 
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;

@@ -85,7 +85,7 @@ fn evaluations_stay_below_the_cap() {
 
     MOST_EVALUATIONS.set(0);
     let mut random = Random(3);
-    let mut worst = [("", 0); 7];
+    let mut worst = [("", 0); 11];
     let mut note = |slot: usize, name: &'static str| {
         let taken = MOST_EVALUATIONS.replace(0);
         if taken > worst[slot].1 {
@@ -160,6 +160,38 @@ fn evaluations_stay_below_the_cap() {
         let _ =
             tower::with_air_flow(&stream, water, WaterTreatment { drift_fraction: 0.0, cycles_of_concentration: 3.0 });
         note(6, "tower");
+        let steam =
+            humidify::Steam::from_specific_enthalpy(SpecificEnthalpy::from_joules_per_kilogram(1e6 + 2.2e6 * x));
+        let duct = crate::Pressure::from_pascals(1e3 * 1.6e3_f64.powf(y));
+        let _ = steam.and_then(|steam| steam.throttled_to(duct));
+        note(7, "throttling");
+        let (heat, celsius) = (HeatFlow::from_watts(3e3 * y), Temperature::from_celsius(60.0 * x));
+        let washer = humidify::Washer {
+            water: MassFlow::from_kilograms_per_second(3.0 * y),
+            temperature: celsius,
+            effectiveness: x,
+            pump_heat: heat,
+            carry_over_fraction: 1e-3 * y,
+        };
+        let _ = humidify::wash(&stream, washer);
+        note(8, "washer");
+        let direct = evaporative::DirectCooler {
+            saturation_effectiveness: x,
+            circulating: MassFlow::from_kilograms_per_second(1.0),
+            pump_heat: heat,
+            make_up: humidify::EvaporatingWater::Given(celsius),
+            treatment: WaterTreatment { drift_fraction: 1e-3 * y, cycles_of_concentration: 1.1 + 5.0 * y },
+        };
+        let _ = evaporative::direct(&stream, direct);
+        note(9, "direct cooler");
+        let indirect = evaporative::IndirectCooler {
+            effectiveness: evaporative::IndirectEffectiveness::OfWetBulb(x),
+            exhaust_humidity: crate::RelativeHumidity::from_fraction(1.0 - 0.2 * y),
+            pump_heat: heat,
+            water: humidify::EvaporatingWater::AtWetBulb,
+        };
+        let _ = evaporative::indirect(&stream, &AirStream { air: second, dry_air_flow: 5.0 }, indirect);
+        note(10, "indirect cooler");
     }
     println!("most evaluations of one search, of {ITERATION_CAP}: {worst:?}");
     assert!(worst.iter().all(|&(_, taken)| taken > 0 && taken < ITERATION_CAP));
@@ -218,7 +250,45 @@ fn single_precision() {
         let water = TowerWater { flow: MassFlow::from_kilograms_per_second(s(2.0)), hot: t(38.0), cold: t(28.0) };
         let treatment = WaterTreatment { drift_fraction: s(1e-4), cycles_of_concentration: s(3.0) };
         let cooled = tower::with_air_flow(&warm, water, treatment).unwrap();
+        let bar = |x: f64| crate::Pressure::from_pascals(s(1e5 * x));
+        let superheated = humidify::Steam::superheated(t(200.0), bar(4.0)).unwrap();
+        let wet_steam = humidify::Steam::wet(bar(4.0), s(0.9)).unwrap();
+        let limit = humidify::steam_limit(&dry, SpecificEnthalpy::from_joules_per_kilogram(s(2.76e6))).unwrap();
+        let flow = |x: f64| MassFlow::from_kilograms_per_second(s(x));
+        let washer = humidify::Washer {
+            water: flow(2.0),
+            temperature: t(8.0),
+            effectiveness: s(0.8),
+            pump_heat: HeatFlow::from_watts(s(300.0)),
+            carry_over_fraction: s(0.0),
+        };
+        let washed = humidify::wash(&warm, washer).unwrap();
+        let direct = evaporative::DirectCooler {
+            saturation_effectiveness: s(0.85),
+            circulating: flow(1.0),
+            pump_heat: HeatFlow::from_watts(s(300.0)),
+            make_up: EvaporatingWater::Given(t(12.0)),
+            treatment,
+        };
+        let indirect = evaporative::IndirectCooler {
+            effectiveness: evaporative::IndirectEffectiveness::OfWetBulb(s(0.6)),
+            exhaust_humidity: RelativeHumidity::from_fraction(s(0.95)),
+            pump_heat: HeatFlow::from_watts(s(100.0)),
+            water: EvaporatingWater::AtWetBulb,
+        };
+        let staged = evaporative::two_stage(&dry, &warm, indirect, direct).unwrap();
         [
+            superheated.specific_enthalpy().kilojoules_per_kilogram(),
+            superheated.throttled_to(bar(1.0)).unwrap().temperature.celsius(),
+            wet_steam.throttled_to(bar(1.0)).unwrap().quality,
+            limit.first_saturation().unwrap().kilograms_per_second(),
+            washed.leaving_water_temperature.celsius(),
+            washed.air.leaving.air().air().dry_bulb().celsius(),
+            staged.indirect.heat.kilowatts(),
+            staged.indirect.primary.air().dry_bulb().celsius(),
+            staged.indirect.secondary.leaving.air().air().dry_bulb().celsius(),
+            staged.direct.water_temperature.celsius(),
+            staged.direct.water.make_up.kilograms_per_second() * s(1e3),
             watered.air.leaving.air().dry_bulb().celsius(),
             watered.leaving_water.celsius(),
             watered.air.cooling_load.kilowatts(),

@@ -1,6 +1,6 @@
 //! Ice Ih: IAPWS R10-06(2009), the Gibbs energy g(T, p).
 
-use super::liquid_water::Condensed;
+use super::pure_phase::PurePhase;
 use crate::quantity::ZERO_CELSIUS;
 use crate::real::{Real, k, polynomial};
 
@@ -56,11 +56,11 @@ impl<R: Real> Complex<R> {
 }
 
 /// Ice at `celsius`, `pascals`: R10-06 Eq. (1), (2), (3) with its derivatives g_T and g_p (Table 4).
-pub fn at<R: Real>(celsius: R, pascals: R) -> Condensed<R> {
+pub fn at<R: Real>(celsius: R, pascals: R) -> PurePhase<R> {
     equation(celsius.at_least(k(RANGE.0)).at_most(k(RANGE.1)), pascals)
 }
 
-fn equation<R: Real>(celsius: R, pascals: R) -> Condensed<R> {
+fn equation<R: Real>(celsius: R, pascals: R) -> PurePhase<R> {
     let tau = (celsius + k(ZERO_CELSIUS)) / k(TRIPLE_TEMPERATURE);
     // π − π₀
     let y = (pascals - k(NORMAL_PRESSURE)) / k(TRIPLE_PRESSURE);
@@ -74,7 +74,7 @@ fn equation<R: Real>(celsius: R, pascals: R) -> Condensed<R> {
     let gibbs = g0 - tau * k(S0 * TRIPLE_TEMPERATURE) + sum.re * k(TRIPLE_TEMPERATURE);
     let entropy = k::<R>(S0) - slope.re; // s = −g_T
     let volume = (g0_y + r2_y.times(second.value).re * k(TRIPLE_TEMPERATURE)) / k(TRIPLE_PRESSURE);
-    Condensed { gibbs, enthalpy: gibbs + entropy * tau * k(TRIPLE_TEMPERATURE), volume }
+    PurePhase { gibbs, enthalpy: gibbs + entropy * tau * k(TRIPLE_TEMPERATURE), volume }
 }
 
 /// `(t−τ) ln(t−τ) + (t+τ) ln(t+τ) − 2t ln t − τ²/t` and its derivative in τ.

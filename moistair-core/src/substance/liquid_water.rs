@@ -1,9 +1,8 @@
 //! Liquid water: IAPWS R6-95(2018) at given temperature and pressure, supercooled and superheated included.
 
-use super::{Fluid, TemperatureOrder, Terms, water, water_vapor};
+use super::pure_phase::{PurePhase, water_at_pressure};
 use crate::quantity::ZERO_CELSIUS;
-use crate::real::{Choose, Real, k, polynomial};
-use crate::solve;
+use crate::real::{Real, k, polynomial};
 
 /// Liquid water is evaluated between these, °C; outside, at the nearer end.
 pub const RANGE: (f64, f64) = (-45.0, 205.0);
@@ -17,64 +16,29 @@ const HEAT_CAPACITY_AT_LIMIT: f64 = 5_707.6;
 /// Newton steps for the density. See the test of this module.
 const DENSITY_STEPS: usize = 2;
 
-/// A condensed phase per kilogram: Gibbs energy and enthalpy [J/kg], volume [m³/kg].
-#[derive(Clone, Copy, Debug)]
-pub struct Condensed<R> {
-    pub gibbs: R,
-    pub enthalpy: R,
-    pub volume: R,
-}
-
-impl<R: Real> Choose<R> for Condensed<R> {
-    fn choose(mask: R::Mask, a: Self, b: Self) -> Self {
-        Self {
-            gibbs: R::select(mask, a.gibbs, b.gibbs),
-            enthalpy: R::select(mask, a.enthalpy, b.enthalpy),
-            volume: R::select(mask, a.volume, b.volume),
-        }
-    }
-}
-
 /// Liquid water at `celsius`, `pascals`.
-pub fn at<R: Real>(celsius: R, pascals: R) -> Condensed<R> {
+pub fn at<R: Real>(celsius: R, pascals: R) -> PurePhase<R> {
     at_after::<R, DENSITY_STEPS>(celsius, pascals)
 }
 
-fn at_after<R: Real, const STEPS: usize>(celsius: R, pascals: R) -> Condensed<R> {
+fn at_after<R: Real, const STEPS: usize>(celsius: R, pascals: R) -> PurePhase<R> {
     let celsius = celsius.at_least(k(RANGE.0)).at_most(k(RANGE.1));
     let within = celsius.at_least(k(STABILITY_LIMIT));
     colder(equation::<R, STEPS>(within, pascals), within, celsius)
 }
 
 /// R6-95 itself.
-fn equation<R: Real, const STEPS: usize>(celsius: R, pascals: R) -> Condensed<R> {
-    let kelvins = celsius + k(ZERO_CELSIUS);
-    let rt = kelvins * k(water::GAS_CONSTANT);
-    let tau = k::<R>(water::CRITICAL_TEMPERATURE) / kelvins;
-    let terms = Terms::at(water_vapor::ideal(kelvins), &water::TERMS, tau);
-    let delta = solve::repeated(STEPS, density_start(celsius, pascals), |delta| {
-        // p = ρ R T (1 + δφʳ_δ) and its slope in density: R6-95 Table 3.
-        let residual = terms.residual(delta, TemperatureOrder::Value);
-        let pressure = delta * rt * (residual.first + k(1.0)) * k(water::CRITICAL_DENSITY);
-        let slope = rt * (residual.first * k(2.0) + residual.second + k(1.0)) * k(water::CRITICAL_DENSITY);
-        delta - (pressure - pascals) / slope
-    });
-    let residual = terms.residual(delta, TemperatureOrder::Value);
-    let thermal = terms.residual(delta, TemperatureOrder::First);
-    let volume = k::<R>(1.0) / (delta * k(water::CRITICAL_DENSITY));
-    let helmholtz = rt * (delta.ln() + terms.ideal(TemperatureOrder::Value) + residual.value);
-    let energy = rt * (terms.ideal(TemperatureOrder::First) + thermal.value);
-    // With p for ρRT(1 + δφʳ_δ), the Gibbs energy is stationary in what is left of the error of density.
-    Condensed { gibbs: helmholtz + pascals * volume, enthalpy: energy + pascals * volume, volume }
+fn equation<R: Real, const STEPS: usize>(celsius: R, pascals: R) -> PurePhase<R> {
+    water_at_pressure::<R, STEPS>(celsius + k(ZERO_CELSIUS), pascals, |_| density_start(celsius, pascals))
 }
 
 /// Continues below [`STABILITY_LIMIT`] with a constant heat capacity and volume.
-fn colder<R: Real>(at_limit: Condensed<R>, limit: R, celsius: R) -> Condensed<R> {
+fn colder<R: Real>(at_limit: PurePhase<R>, limit: R, celsius: R) -> PurePhase<R> {
     let difference = celsius - limit;
     let (kelvins, limit) = (celsius + k(ZERO_CELSIUS), limit + k(ZERO_CELSIUS));
     let entropy = (at_limit.enthalpy - at_limit.gibbs) / limit;
     let heat_capacity = k::<R>(HEAT_CAPACITY_AT_LIMIT);
-    Condensed {
+    PurePhase {
         gibbs: at_limit.gibbs - entropy * difference + heat_capacity * (difference - kelvins * (kelvins / limit).ln()),
         enthalpy: at_limit.enthalpy + heat_capacity * difference,
         volume: at_limit.volume,

@@ -9,6 +9,8 @@ pub mod critical_region;
 pub mod dry_air;
 pub mod ice;
 pub mod liquid_water;
+pub mod pure_phase;
+pub mod superheated_steam;
 pub mod transport;
 pub mod water;
 pub mod water_vapor;

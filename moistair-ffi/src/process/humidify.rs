@@ -1,7 +1,9 @@
 //! Humidifying by steam, spray and wetted media.
 
-use moistair_core::RelativeHumidity;
-use moistair_core::process::humidify::{self, Absorption, EvaporatingWater, Humidified};
+use moistair_core::process::humidify::{
+    self, Absorption, EvaporatingWater, Humidified, Steam, ThrottledSteam, Washed, Washer,
+};
+use moistair_core::{Error, HeatFlow, MassFlow, Pressure, RelativeHumidity};
 
 use super::stream::{moistair_exchange, moistair_stream, moistair_wet_stream};
 use super::{celsius, enthalpy, finite, mass_flow, ratio};
@@ -52,6 +54,138 @@ struct Limit(f64);
 impl Answer for Limit {
     fn is_finite(&self) -> bool {
         !self.0.is_nan()
+    }
+}
+
+/// The air takes up water of the washer, or none.
+pub const MOISTAIR_HUMIDIFIES: i32 = 0;
+/// Vapor of the air condenses on the water.
+pub const MOISTAIR_DEHUMIDIFIES: i32 = 1;
+
+/// Steam is superheated, or saturated without water.
+pub const MOISTAIR_STEAM_SUPERHEATED: i32 = 0;
+/// Steam carries water.
+pub const MOISTAIR_STEAM_WET: i32 = 1;
+
+/// How much steam air takes up.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_steam_absorption {
+    /// Flow at which the air first saturates, 0 where it enters saturated; infinite where it never does [kg/s].
+    pub up_to: f64,
+    /// Flow from which on it is no longer saturated; infinite where there is none [kg/s].
+    pub unsaturated_from: f64,
+}
+
+/// Steam at a pressure.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_throttled_steam {
+    /// [°C]
+    pub temperature: f64,
+    /// Above the temperature of boiling; 0 where it is wet [K].
+    pub superheat: f64,
+    /// Vapor over all of it by mass; 1 where it is superheated [1].
+    pub quality: f64,
+    /// MOISTAIR_STEAM_SUPERHEATED or MOISTAIR_STEAM_WET.
+    pub condition: i32,
+    /// 0.
+    pub reserved: i32,
+}
+
+/// A washer and its water.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_washer {
+    /// Water sprayed [kg/s].
+    pub water: f64,
+    /// Its temperature, 0 to 200 [°C].
+    pub temperature: f64,
+    /// How far the air comes toward the temperature of the water that leaves, 0 to 1 [1].
+    pub effectiveness: f64,
+    /// Power of the pump [W].
+    pub pump_heat: f64,
+    /// Droplets that pass the eliminators over the water sprayed, 0 to 0.05 [1].
+    pub carry_over_fraction: f64,
+}
+
+/// What a washer did.
+#[repr(C)]
+#[derive(Clone, Copy, Debug)]
+pub struct moistair_washed {
+    /// The air with its books.
+    pub air: moistair_humidified,
+    /// Water that falls back [kg/s].
+    pub leaving_water: f64,
+    /// Its temperature [°C].
+    pub leaving_water_temperature: f64,
+    /// What the water gains, its pump counted; negative where the air cools it [W].
+    pub heat_to_water: f64,
+    /// MOISTAIR_HUMIDIFIES or MOISTAIR_DEHUMIDIFIES.
+    pub moistening: i32,
+    /// 0.
+    pub reserved: i32,
+}
+
+impl From<Absorption> for moistair_steam_absorption {
+    fn from(found: Absorption) -> Self {
+        let flow = |found: Option<MassFlow>| found.map_or(f64::INFINITY, MassFlow::kilograms_per_second);
+        Self { up_to: flow(found.first_saturation()), unsaturated_from: flow(found.unsaturated_again()) }
+    }
+}
+
+impl Answer for moistair_steam_absorption {
+    fn is_finite(&self) -> bool {
+        !self.up_to.is_nan() && !self.unsaturated_from.is_nan()
+    }
+}
+
+impl From<ThrottledSteam> for moistair_throttled_steam {
+    fn from(steam: ThrottledSteam) -> Self {
+        Self {
+            temperature: steam.temperature.celsius(),
+            superheat: steam.superheat.kelvins(),
+            quality: steam.quality,
+            condition: steam.condition as i32,
+            reserved: 0,
+        }
+    }
+}
+
+impl Answer for moistair_throttled_steam {
+    fn is_finite(&self) -> bool {
+        finite([self.temperature, self.superheat, self.quality])
+    }
+}
+
+impl moistair_washer {
+    fn to_core(self) -> Washer {
+        Washer {
+            water: mass_flow(self.water),
+            temperature: celsius(self.temperature),
+            effectiveness: self.effectiveness,
+            pump_heat: HeatFlow::from_watts(self.pump_heat),
+            carry_over_fraction: self.carry_over_fraction,
+        }
+    }
+}
+
+impl From<Washed> for moistair_washed {
+    fn from(done: Washed) -> Self {
+        Self {
+            air: done.air.into(),
+            leaving_water: done.leaving_water.kilograms_per_second(),
+            leaving_water_temperature: done.leaving_water_temperature.celsius(),
+            heat_to_water: done.heat_to_water.watts(),
+            moistening: done.moistening as i32,
+            reserved: 0,
+        }
+    }
+}
+
+impl Answer for moistair_washed {
+    fn is_finite(&self) -> bool {
+        self.air.is_finite() && finite([self.leaving_water, self.leaving_water_temperature, self.heat_to_water])
     }
 }
 
@@ -151,13 +285,121 @@ pub unsafe extern "C" fn moistair_humidify_steam_limit(
     let call = || {
         // SAFETY: the caller's pointers.
         let limit = humidify::steam_limit(&unsafe { read(entering) }?.to_core()?, enthalpy(steam_enthalpy))?;
-        Ok(Limit(match limit {
-            Absorption::UpTo(flow) => flow.kilograms_per_second(),
-            Absorption::Unlimited => f64::INFINITY,
-        }))
+        Ok(Limit(moistair_steam_absorption::from(limit).up_to))
     };
     // SAFETY: the caller's pointers.
     unsafe { answer(limit.cast::<Limit>(), error, call) }
+}
+
+/// The steam flow at which the air first saturates, and that from which on it no longer is: superheated steam may lead into saturation and out
+/// of it again. Between the two a part of the steam condenses.
+///
+/// entering: the stream that enters; steam_enthalpy: specific enthalpy of the steam [J/kg], 251e3 to 4e6; absorption: output; error: may be
+/// null.
+/// Returns 0, 1xx, 2xx, 207.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_humidify_steam_absorption(
+    entering: *const moistair_stream,
+    steam_enthalpy: f64,
+    absorption: *mut moistair_steam_absorption,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        // SAFETY: the caller's pointers.
+        Ok(humidify::steam_limit(&unsafe { read(entering) }?.to_core()?, enthalpy(steam_enthalpy))?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(absorption, error, call) }
+}
+
+/// Specific enthalpy of dry saturated steam of a pressure, on the datum of liquid water at the triple point.
+///
+/// pressure: absolute [Pa], 1e3 to 1.6e6; specific_enthalpy: output [J/kg]; error: may be null.
+/// Returns 0, 1xx, 2xx.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_steam_saturated(
+    pressure: f64,
+    specific_enthalpy: *mut f64,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || joules(Steam::saturated_at_pressure(Pressure::from_pascals(pressure)));
+    // SAFETY: the caller's pointers.
+    unsafe { answer(specific_enthalpy, error, call) }
+}
+
+/// Specific enthalpy of wet steam, h = h_f + x h_fg.
+///
+/// pressure: absolute [Pa], 1e3 to 1.6e6; quality: x, vapor over all of it by mass [1]; specific_enthalpy: output [J/kg]; error: may be null.
+/// Returns 0, 1xx, 2xx.
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_steam_wet(
+    pressure: f64,
+    quality: f64,
+    specific_enthalpy: *mut f64,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || joules(Steam::wet(Pressure::from_pascals(pressure), quality));
+    // SAFETY: the caller's pointers.
+    unsafe { answer(specific_enthalpy, error, call) }
+}
+
+/// Specific enthalpy of superheated steam.
+///
+/// temperature: [°C], to 400; pressure: absolute [Pa], 1e3 to 1.6e6; specific_enthalpy: output [J/kg]; error: may be null.
+/// Returns 0, 1xx, 2xx, 301 (below the temperature of boiling).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_steam_superheated(
+    temperature: f64,
+    pressure: f64,
+    specific_enthalpy: *mut f64,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || joules(Steam::superheated(celsius(temperature), Pressure::from_pascals(pressure)));
+    // SAFETY: the caller's pointers.
+    unsafe { answer(specific_enthalpy, error, call) }
+}
+
+/// Steam after throttling, such as to the pressure of the duct: its enthalpy is kept.
+///
+/// specific_enthalpy: of the steam [J/kg], 251e3 to 4e6; pressure: absolute, after it [Pa], 1e3 to 1.6e6; steam: output; error: may be null.
+/// Returns 0, 1xx, 2xx, 301 (liquid, or hotter than 400 °C).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_steam_throttled(
+    specific_enthalpy: f64,
+    pressure: f64,
+    steam: *mut moistair_throttled_steam,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        let known = Steam::from_specific_enthalpy(enthalpy(specific_enthalpy))?;
+        Ok(known.throttled_to(Pressure::from_pascals(pressure))?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(steam, error, call) }
+}
+
+/// Washes air with water of any temperature: below the dew point it takes water out of the air.
+///
+/// entering: the stream that enters; washer: the washer; done: output; error: may be null.
+/// Returns 0, 1xx, 2xx, 207, 301 (the water would freeze, is hotter than the air takes, or would all evaporate).
+#[unsafe(no_mangle)]
+pub unsafe extern "C" fn moistair_humidify_wash(
+    entering: *const moistair_stream,
+    washer: *const moistair_washer,
+    done: *mut moistair_washed,
+    error: *mut moistair_error,
+) -> i32 {
+    let call = || {
+        // SAFETY: the caller's pointers.
+        let (entering, washer) = (unsafe { read(entering) }?.to_core()?, unsafe { read(washer) }?.to_core());
+        Ok(humidify::wash(&entering, washer)?.into())
+    };
+    // SAFETY: the caller's pointers.
+    unsafe { answer(done, error, call) }
+}
+
+fn joules(steam: Result<Steam, Error>) -> Result<f64, Failure> {
+    Ok(steam?.specific_enthalpy().joules_per_kilogram())
 }
 
 /// Sprays liquid water; what equilibrium does not evaporate is carried.
@@ -212,4 +454,8 @@ pub unsafe extern "C" fn moistair_humidify_evaporative(
     unsafe { answer(done, error, call) }
 }
 
-const _: () = assert!(size_of::<moistair_humidified>() == 184);
+const _: () = {
+    assert!(size_of::<moistair_humidified>() == 184 && size_of::<moistair_washed>() == 216);
+    assert!(size_of::<moistair_steam_absorption>() == 16 && size_of::<moistair_throttled_steam>() == 32);
+    assert!(size_of::<moistair_washer>() == 40);
+};

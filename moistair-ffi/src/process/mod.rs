@@ -6,6 +6,7 @@
 pub mod coil;
 pub mod compression;
 pub mod desiccant;
+pub mod evaporative;
 pub mod humidify;
 pub mod mixing;
 pub mod reheat;
@@ -20,6 +21,7 @@ pub mod water_coil;
 pub use coil::*;
 pub use compression::*;
 pub use desiccant::*;
+pub use evaporative::*;
 pub use humidify::*;
 pub use mixing::*;
 pub use reheat::*;

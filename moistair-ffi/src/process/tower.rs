@@ -140,7 +140,7 @@ impl moistair_tower_water {
 }
 
 impl moistair_water_treatment {
-    fn to_core(self) -> WaterTreatment {
+    pub(super) fn to_core(self) -> WaterTreatment {
         let Self { drift_fraction, cycles_of_concentration } = self;
         WaterTreatment { drift_fraction, cycles_of_concentration }
     }

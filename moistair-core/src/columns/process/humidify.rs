@@ -1,12 +1,13 @@
 //! Humidifying with steam and with water.
 
-use super::row::{Answer, Argument, Out, Outcome, Row, RowError, Walk, answers, processes};
+use super::row::{Answer, Argument, Out, Outcome, Row, RowError, Walk, answers, arguments, processes, statuses};
 use crate::process::AirStream;
 use crate::process::humidify::{
-    Absorption, EvaporatingWater, Humidified, evaporative, saturated_steam_enthalpy, spray, steam, steam_limit,
-    steam_to_humidity_ratio, steam_to_relative_humidity,
+    Absorption, EvaporatingWater, Humidified, Moistening, Steam, SteamCondition, ThrottledSteam, Washed, Washer,
+    evaporative, saturated_steam_enthalpy, spray, steam, steam_limit, steam_to_humidity_ratio,
+    steam_to_relative_humidity, wash,
 };
-use crate::{HumidityRatio, MassFlow, RelativeHumidity, SpecificEnthalpy, Temperature};
+use crate::{HumidityRatio, MassFlow, Pressure, RelativeHumidity, SpecificEnthalpy, Temperature};
 
 processes! {
     600 "humidify.saturated_steam_enthalpy": (steam_temperature: Temperature) -> "specific_enthalpy" SpecificEnthalpy {
@@ -33,9 +34,63 @@ processes! {
         (entering: AirStream, saturation_effectiveness: f64, water_temperature: EvaporatingWater) -> Humidified {
         evaporative(&entering, saturation_effectiveness, water_temperature)?
     }
+    607 "humidify.steam_absorption": (entering: AirStream, steam_enthalpy: SpecificEnthalpy) -> SteamAbsorption {
+        steam_limit(&entering, steam_enthalpy)?.into()
+    }
+    608 "humidify.saturated_steam": (steam_pressure: Pressure) -> "specific_enthalpy" SpecificEnthalpy {
+        Steam::saturated_at_pressure(steam_pressure)?.specific_enthalpy()
+    }
+    609 "humidify.wet_steam": (steam_pressure: Pressure, quality: f64) -> "specific_enthalpy" SpecificEnthalpy {
+        Steam::wet(steam_pressure, quality)?.specific_enthalpy()
+    }
+    610 "humidify.superheated_steam":
+        (steam_temperature: Temperature, steam_pressure: Pressure) -> "specific_enthalpy" SpecificEnthalpy {
+        Steam::superheated(steam_temperature, steam_pressure)?.specific_enthalpy()
+    }
+    611 "humidify.throttled_steam": (steam_enthalpy: SpecificEnthalpy, pressure: Pressure) -> ThrottledSteam {
+        Steam::from_specific_enthalpy(steam_enthalpy)?.throttled_to(pressure)?
+    }
+    612 "humidify.wash": (entering: AirStream, washer: Washer) -> Washed { wash(&entering, washer)? }
+}
+
+/// Both crossings of saturation.
+struct SteamAbsorption {
+    up_to: Absorption,
+    from: MassFlow,
+}
+
+impl From<Absorption> for SteamAbsorption {
+    fn from(up_to: Absorption) -> Self {
+        let never = MassFlow::from_kilograms_per_second(f64::INFINITY);
+        Self { up_to, from: up_to.unsaturated_again().unwrap_or(never) }
+    }
+}
+
+arguments! {
+    Washer {
+        water: "water_flow",
+        temperature: "water_temperature",
+        effectiveness: "effectiveness",
+        pump_heat: "pump_heat",
+        carry_over_fraction: "carry_over_fraction",
+    }
+}
+
+statuses! {
+    Moistening { "0 humidifies" => Humidifies, "1 dehumidifies" => Dehumidifies }
+    SteamCondition { "0 superheated" => Superheated, "1 wet" => Wet }
 }
 
 answers! {
+    SteamAbsorption, |x| { up_to: x.up_to, unsaturated_from: x.from }
+    ThrottledSteam, |x| { temperature: x.temperature, superheat: x.superheat, quality: x.quality, condition: x.condition }
+    Washed, |x| {
+        air: x.air,
+        leaving_water: x.leaving_water,
+        leaving_water_temperature: x.leaving_water_temperature,
+        heat_to_water: x.heat_to_water,
+        moistening: x.moistening,
+    }
     Humidified, |x| { leaving: x.leaving, exchange: x.exchange, evaporated: x.evaporated, carried: x.carried }
 }
 
@@ -46,10 +101,7 @@ impl Answer for Absorption {
     }
 
     fn write(&self, out: &mut Out<'_>) {
-        match self {
-            Self::UpTo(flow) => flow.write(out),
-            Self::Unlimited => f64::INFINITY.write(out),
-        }
+        self.first_saturation().map_or(f64::INFINITY, MassFlow::kilograms_per_second).write(out);
     }
 }
 

@@ -99,7 +99,7 @@ fn fluids() -> Vec<Target> {
     ]
 }
 
-type Condensed = fn(f64, f64) -> crate::substance::liquid_water::Condensed<f64>;
+type Condensed = fn(f64, f64) -> crate::substance::pure_phase::PurePhase<f64>;
 
 /// The fields of [`Curves`].
 fn phase(domain: Domain, phase: Condensed) -> [Target; 4] {

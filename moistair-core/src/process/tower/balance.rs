@@ -4,8 +4,8 @@
 //! out of the cold end, and drift leaves with the enthalpy of the cold water. Nothing is said of how large the tower must be.
 
 use super::rating::effectiveness;
-use super::water_use::{WaterTreatment, WaterUse, water_use};
 use super::{AirStream, Exchange, TowerWater, WetStream, infeasible, parts, same_formulation};
+use super::{WaterTreatment, WaterUse, water_use};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};

@@ -144,8 +144,8 @@ impl<S: Scalar> Duty<S> {
             (self.site.film(celsius).enthalpy - self.enthalpy) / (self.heat_capacity * (celsius - self.cold));
         let most = k::<S>(Quantity::WaterToAirRatio.limits().1);
         Pinch {
-            // Without a range nothing pinches.
-            water_to_air: if steepest <= most { steepest } else { most },
+            // Without a range nothing pinches, whatever the signs of its zeros.
+            water_to_air: if self.cold < celsius && steepest <= most { steepest } else { most },
             temperature: Temperature::from_celsius(celsius),
         }
     }

@@ -27,16 +27,16 @@ pub mod merkel;
 pub mod poppe;
 
 mod balance;
-mod film;
 mod march;
 mod rating;
-mod water_use;
+mod rule_of_thumb;
 
 pub use balance::{TowerBalance, with_air_flow, with_leaving_air};
 pub use rating::{TowerRating, TowerStatus};
-pub use water_use::{WaterTreatment, WaterUse, cycles_of_concentration, evaporation_by_rule_of_thumb, water_use};
+pub use rule_of_thumb::evaporation_by_rule_of_thumb;
 
-use super::{AirStream, Exchange, WetStream, infeasible, parts, same_formulation};
+pub use super::water_use::{WaterTreatment, WaterUse, cycles_of_concentration, water_use};
+use super::{AirStream, Exchange, WetStream, film, infeasible, parts, same_formulation};
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
 use crate::quantity::{MassFlow, Temperature};

@@ -3,6 +3,7 @@
 use std::println;
 
 use super::*;
+use crate::substance::water;
 
 const PRESSURES: [f64; 5] = [20e3, 101_325.0, 300e3, 700e3, 1.1e6];
 

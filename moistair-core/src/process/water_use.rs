@@ -1,14 +1,14 @@
-//! Evaporation, drift, blowdown, make-up, and how far the water concentrates.
+//! Evaporation, drift, blowdown, make-up, and how far the water concentrates: of towers, of humidifiers with bleed, of evaporative coolers.
 
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
-use crate::quantity::{MassFlow, TemperatureDifference};
+use crate::quantity::MassFlow;
 use crate::real::{Scalar, k};
 
-/// How a tower loses and renews water besides evaporation.
+/// How a tower, or a humidifier whose water circulates, loses and renews water besides evaporation.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct WaterTreatment<S = f64> {
-    /// Drift over the circulating flow. With eliminators 0.000 05 to 0.0002, without up to 0.003 (common practice, no source).
+    /// Drift (carry-over of a humidifier) over the circulating flow. With eliminators 0.000 05 to 0.0002, without up to 0.003 (common practice, no source).
     pub drift_fraction: S,
     /// Concentration of the circulating water over that of the make-up, above one.
     pub cycles_of_concentration: S,
@@ -22,7 +22,7 @@ pub struct WaterUse<S = f64> {
     pub evaporation: MassFlow<S>,
     /// Drift D.
     pub drift: MassFlow<S>,
-    /// Blowdown B = E / (C − 1) − D, not below zero.
+    /// Blowdown (bleed) B = E / (C − 1) − D, not below zero.
     pub blowdown: MassFlow<S>,
     /// Make-up M = E + D + B.
     pub make_up: MassFlow<S>,
@@ -94,21 +94,4 @@ pub fn cycles_of_concentration<S: Scalar>(circulating: S, make_up: S) -> Result<
     }
     let value = if cycles < k(min) { cycles.to_f64() } else { f64::INFINITY };
     Err(Error::Infeasible { quantity: Quantity::CyclesOfConcentration, value, min, max })
-}
-
-/// Evaporation by the rule of thumb 0.00153 of the circulating flow for each kelvin of range (common practice, no source): to set a
-/// valve before anything is known.
-///
-/// The balance gives from 0.0012 per kelvin at a wet bulb of 10 °C to 0.0023 in air of 35 °C with a wet bulb of 18 °C: use
-/// [`with_air_flow`](super::with_air_flow) or [`poppe`](super::poppe) where the number matters.
-///
-/// # Errors
-/// [`Error::OutOfRange`], [`Error::NotFinite`].
-pub fn evaporation_by_rule_of_thumb<S: Scalar>(
-    circulating: MassFlow<S>,
-    range: TemperatureDifference<S>,
-) -> Result<MassFlow<S>, Error> {
-    let circulating = checked(Quantity::WaterFlow, circulating.kilograms_per_second())?;
-    let range = checked(Quantity::TowerRange, range.kelvins())?;
-    Ok(MassFlow::from_kilograms_per_second(circulating * range * k(0.000_85 * 1.8)))
 }

@@ -1,6 +1,6 @@
-//! The film of saturated air on the water, on which every method here stands.
+//! The film of saturated air on water, on which towers, washers and wetted media stand.
 
-use super::{MoistAir, infeasible, parts};
+use super::{infeasible, parts};
 use crate::basis::{Basis, Formulation, with_mixture};
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
@@ -9,12 +9,13 @@ use crate::quantity::{Pressure, Temperature};
 use crate::real::{Scalar, k};
 use crate::saturation::Surface;
 use crate::solve;
+use crate::state::MoistAir;
 use crate::state::condensate::condensed_enthalpy;
 use crate::state::property::dew_point;
 
 /// Saturated air at the temperature of the water.
 #[derive(Clone, Copy, Debug)]
-pub(super) struct Film<S> {
+pub(in crate::process) struct Film<S> {
     /// h_s, J/kg
     pub enthalpy: S,
     /// dh_s/dT, J/(kg K)
@@ -29,7 +30,7 @@ pub(super) struct Film<S> {
 
 /// Pressure and formulation, and the temperatures at which water can lie under such air.
 #[derive(Clone, Copy, Debug)]
-pub(super) struct Site<S> {
+pub(in crate::process) struct Site<S> {
     formulation: Formulation,
     pressure: S,
     warmest: S,
@@ -117,7 +118,7 @@ impl<S: Scalar> Site<S> {
 }
 
 /// The limit that the entering air sets, T*, no colder than −40 °C: there the water has long been ice.
-pub(super) fn limit<S: Scalar>(site: &Site<S>, air: &MoistAir<S>) -> Result<S, Error> {
+pub(in crate::process) fn limit<S: Scalar>(site: &Site<S>, air: &MoistAir<S>) -> Result<S, Error> {
     let (enthalpy, _) = parts(air);
     let (least, most) = site.enthalpies();
     if enthalpy < least {
