@@ -413,9 +413,9 @@ fn responses_are_monotone() {
             let base = feasible!(method(&entering, water, number));
             // As near to the limit as this nothing moves any more.
             let slack = if index == 2 { 3e-5 } else { 1e-6 };
-            // Heat and vapor settle each at its own rate unless the Lewis factor is one: from a number of 4 on Poppe's exact solution
-            // may rise again, by 3.5e-5 K with eight times the steps as well.
-            let settling = if index == 2 && number * more > 4.0 { 1e-4 } else { slack };
+            // Heat and vapor settle each at its own rate unless the Lewis factor is one: from a number of 3 on, water that comes in next to its
+            // limit may leave a larger tower warmer again. Eight times the steps show the same, 2.5e-4 K is the most of 15 000 towers.
+            let settling = if index == 2 && number * more > 3.0 { 5e-4 } else { slack };
             let larger = method(&entering, water, number * more);
             prop_assert!(larger.is_err() || larger.unwrap() <= base + settling, "a larger tower, method {index}");
             let hotter = feasible!(method(&entering, hot_water(m, hot + 2.0), number));

@@ -15,8 +15,8 @@
 //! # Accuracy
 //! [`rate`] finds the cold water to 5e-5 K, and the evaporation to 5e-5 of itself, of the exact solution of these equations up to Me 5, L/G 3 and water of 60 °C. It
 //! needs a number found by the same method: Poppe's is 7 to 15 % above Merkel's for one test, and for one number its
-//! water is some 0.3 K warmer. Where the Lewis factor is not one, heat and vapor settle each at its own rate: from Me 4 on a larger tower
-//! may leave the water warmer again, by 1e-4 K. The droplets of fog are taken to move with
+//! water is some 0.3 K warmer. Where the Lewis factor is not one, heat and vapor settle each at its own rate: from Me 3 on, water
+//! that comes in within some 2 K of its limit may leave a larger tower warmer again, by 2.5e-4 K in 15 000 towers. The droplets of fog are taken to move with
 //! the air, in equilibrium with it, and to be liquid whatever the temperature.
 
 use core::cell::Cell;
