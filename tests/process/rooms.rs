@@ -433,3 +433,29 @@ fn reheat_behind_a_bypass() {
         Ok(())
     });
 }
+
+/// A saturated room has the direction of saturation itself for its limit; a coil that gets as dry as the room and no drier has none.
+#[test]
+fn rooms_at_the_ends_of_the_curve() {
+    for &formulation in Formulation::ALL {
+        let site = sea_level(formulation);
+        let full = CoilLeaving::RelativeHumidity(RelativeHumidity::from_fraction(1.0));
+        let saturated = at(20.0, 1.0, site);
+        let limit = room::limiting_line(&saturated, &saturated, full).unwrap();
+        let (one, other) = (numbers(&at(19.999, 1.0, site)), numbers(&at(20.001, 1.0, site)));
+        let slope = (other.2 - one.2) / (other.1 - one.1);
+        assert!((limit.slope.joules_per_kilogram() / slope - 1.0).abs() < 1e-6, "{limit:?} {slope}");
+        // Nearly so: the line to the curve turns into its direction.
+        let nearly = at(20.0, 1.0 - 1e-7, site);
+        let near = room::limiting_line(&nearly, &nearly, full).unwrap().slope;
+        assert!((near.joules_per_kilogram() / slope - 1.0).abs() < 1e-3, "{near:?} {slope}");
+
+        let space = at(24.0, 0.5, site);
+        let dew_point = space.dew_point().unwrap().celsius();
+        let down_to = |t| CoilLeaving::Bypass { factor: 0.0, coldest: celsius(t) };
+        let just = room::limiting_line(&space, &space, down_to(dew_point - 1e-6)).unwrap();
+        assert!(just.at_coldest && just.sensible_heat_ratio > 0.999, "{just:?}");
+        let error = room::limiting_line(&space, &space, down_to(dew_point + 1e-9)).unwrap_err();
+        assert!(matches!(error, Error::Infeasible { quantity: Quantity::ApparatusDewPoint, .. }), "{error:?}");
+    }
+}

@@ -100,7 +100,7 @@ pub struct LimitingLine<S = f64> {
 /// Bounded work: two searches, 160 evaluations at most.
 ///
 /// # Errors
-/// [`Error::Infeasible`]: of the apparatus dew point, where the coil cannot get as dry as the room; of the relative humidity or the bypass factor,
+/// [`Error::Infeasible`]: of the apparatus dew point, where the coil cannot get drier than the room; of the relative humidity or the bypass factor,
 /// where it leaves air of the room's humidity ratio warmer than the room, so that it cannot cool the room at all; of the humidity ratio, where what
 /// passes and what the surface leaves would mix to fog; [`Error::MixedFormulations`], [`Error::OutOfRange`], [`Error::NotFinite`].
 ///
@@ -147,9 +147,10 @@ struct Branch<S> {
 
 /// The curve of a coil as seen from a room, in its parts from warm to cold.
 struct Tangents<S> {
-    curve: Curve<S>,
-    room: (S, S),
+    sight: Sight<S>,
     branches: [Option<Branch<S>>; 2],
+    /// The least slope of all.
+    least: Chord<S>,
 }
 
 impl<S: Scalar> Tangents<S> {
@@ -157,13 +158,13 @@ impl<S: Scalar> Tangents<S> {
         same_formulation(room, entering)?;
         let mut curve = Curve::of(coil, entering, room)?;
         // No surface of liquid or ice is looked for below.
-        let (coldest, _) = room.formulation().limits(Quantity::ApparatusDewPoint);
+        let (coldest, warmest) = room.formulation().limits(Quantity::ApparatusDewPoint);
         curve.coldest = curve.coldest.at_least(k(coldest));
         let top = curve.parameter()?;
         let (enthalpy, ratio) = parts(room);
         // The coil would leave the room's humidity ratio warmer than the room; rounding apart.
-        let rounding =
-            room.specific_heat().joules_per_kilogram_kelvin() * solve::temperature_resolution::<S>() * k(1e3);
+        let capacity = room.specific_heat().joules_per_kilogram_kelvin();
+        let rounding = capacity * solve::temperature_resolution::<S>() * k(1e3);
         if curve.point(top, Surface::Stable).enthalpy > enthalpy + rounding {
             return Err(match coil {
                 CoilLeaving::RelativeHumidity(humidity) => {
@@ -173,21 +174,53 @@ impl<S: Scalar> Tangents<S> {
                 CoilLeaving::Bypass { factor, .. } => infeasible(Quantity::BypassFactor, factor, k(0.0), factor),
             });
         }
-        let mut tangents = Self { curve, room: (enthalpy, ratio), branches: [None, None] };
-        let melting = tangents.curve.melting_temperature();
-        let coldest = tangents.curve.coldest;
-        let liquid = tangents.branch(Surface::Liquid, coldest.at_least(melting), top);
-        let ice = tangents.branch(Surface::Ice, coldest, top.at_most(melting));
-        tangents.branches = [liquid, ice];
-        // The room is as dry as the coldest of the coil: its line is horizontal.
-        if liquid.is_none() && ice.is_none() {
-            let surface = Surface::Stable;
-            let tangent = tangents.chord(top, surface);
-            tangents.branches = [Some(Branch { surface, high: top, tangent }), None];
-        }
-        Ok(tangents)
+        let sight = Sight { curve, room: (enthalpy, ratio), near: capacity * S::epsilon().sqrt() * k(100.0) };
+        let (coldest, melting) = (sight.curve.coldest, sight.curve.melting_temperature());
+        let branches = [
+            sight.branch(Surface::Liquid, coldest.at_least(melting), top),
+            sight.branch(Surface::Ice, coldest, top.at_most(melting)),
+        ];
+        let chords = branches.iter().flatten().map(|branch| branch.tangent);
+        let least = chords.reduce(|least, other| if other.slope < least.slope { other } else { least });
+        // The coil gets as dry as the room, and no drier.
+        let least = least.ok_or_else(|| infeasible(Quantity::ApparatusDewPoint, top, coldest, k(warmest)))?;
+        Ok(Self { sight, branches, least })
     }
 
+    fn limit(&self, room: &MoistAir<S>) -> LimitingLine<S> {
+        let Chord { slope, celsius, at_coldest, leaving } = self.least;
+        LimitingLine {
+            sensible_heat_ratio: k::<S>(1.0) - vapor_enthalpy(room) / slope,
+            slope: SpecificEnthalpy::from_joules_per_kilogram(slope),
+            touches: Temperature::from_celsius(celsius),
+            at_coldest,
+            leaving,
+        }
+    }
+
+    /// The warmest meeting of a line from the room, of so much enthalpy over so much water, with the curve.
+    fn meeting(&self, total: S, water: S) -> Option<Point<S>> {
+        let Sight { curve, room: (enthalpy, ratio), .. } = &self.sight;
+        let branch = self.branches.iter().flatten().find(|branch| branch.tangent.slope * water <= total)?;
+        let celsius = solve::increasing(branch.tangent.celsius, branch.high, solve::temperature_resolution(), |t| {
+            let point = curve.point(t, branch.surface);
+            let beyond = (point.ratio - *ratio) * total - (point.enthalpy - *enthalpy) * water;
+            (beyond, point.ratio_slope * total - point.enthalpy_slope * water)
+        });
+        Some(curve.point(celsius, branch.surface))
+    }
+}
+
+/// The curve of a coil, and the room that it is seen from.
+struct Sight<S> {
+    curve: Curve<S>,
+    /// Enthalpy and humidity ratio.
+    room: (S, S),
+    /// A difference of enthalpy within which the room lies on the curve.
+    near: S,
+}
+
+impl<S: Scalar> Sight<S> {
     /// Where on a part of the curve the slope from the room is least: W′ (h_r − h) = h′ (W_r − W), which rises along a convex curve.
     fn branch(&self, surface: Surface, low: S, high: S) -> Option<Branch<S>> {
         if low >= high {
@@ -205,50 +238,15 @@ impl<S: Scalar> Tangents<S> {
     fn chord(&self, celsius: S, surface: Surface) -> Chord<S> {
         let (enthalpy, ratio) = self.room;
         let point = self.curve.point(celsius, surface);
-        let dried = ratio - point.ratio;
+        let drop = enthalpy - point.enthalpy;
         // A room on the curve has the curve's own direction for its limit.
-        let near = ratio * S::epsilon().sqrt();
-        let slope =
-            if dried > near { (enthalpy - point.enthalpy) / dried } else { point.enthalpy_slope / point.ratio_slope };
+        let slope = if drop > self.near {
+            drop / (ratio - point.ratio).at_least(ratio * S::epsilon())
+        } else {
+            point.enthalpy_slope / point.ratio_slope
+        };
         let at_coldest = celsius - self.curve.coldest <= solve::temperature_resolution::<S>() * k(64.0);
         Chord { slope, celsius, at_coldest, leaving: (point.enthalpy, point.ratio) }
-    }
-
-    /// The least slope of all.
-    fn least(&self) -> Option<Chord<S>> {
-        let mut tangents = self.branches.iter().flatten().map(|branch| branch.tangent);
-        let first = tangents.next()?;
-        Some(tangents.fold(first, |least, other| if other.slope < least.slope { other } else { least }))
-    }
-
-    fn limit(&self, room: &MoistAir<S>) -> LimitingLine<S> {
-        let nothing = Chord { slope: S::infinity(), celsius: self.curve.coldest, at_coldest: true, leaving: self.room };
-        let Chord { slope, celsius, at_coldest, leaving } = self.least().unwrap_or(nothing);
-        LimitingLine {
-            sensible_heat_ratio: k::<S>(1.0) - vapor_enthalpy(room) / slope,
-            slope: SpecificEnthalpy::from_joules_per_kilogram(slope),
-            touches: Temperature::from_celsius(celsius),
-            at_coldest,
-            leaving,
-        }
-    }
-
-    /// The warmest meeting of a line from the room, of so much enthalpy over so much water, with the curve.
-    fn meeting(&self, total: S, water: S) -> Option<Point<S>> {
-        let (enthalpy, ratio) = self.room;
-        for branch in self.branches.iter().flatten() {
-            if branch.tangent.slope * water > total {
-                continue;
-            }
-            let celsius =
-                solve::increasing(branch.tangent.celsius, branch.high, solve::temperature_resolution(), |t| {
-                    let point = self.curve.point(t, branch.surface);
-                    let beyond = (point.ratio - ratio) * total - (point.enthalpy - enthalpy) * water;
-                    (beyond, point.ratio_slope * total - point.enthalpy_slope * water)
-                });
-            return Some(self.curve.point(celsius, branch.surface));
-        }
-        None
     }
 }
 

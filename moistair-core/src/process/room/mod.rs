@@ -269,8 +269,8 @@ pub fn room_of_supply<S: Scalar>(supply: &AirStream<S>, gains: &RoomGains<S>) ->
 
 /// The gains of a room, from supply and room air: ṁ_w = ṁ (W_r − W₁), Q = ṁ (h_r − h₁) − ṁ_w h_w.
 ///
-/// Differences of measured states: at 10 K between supply and room, 0.3 K and 3 % relative humidity are worth some 3 % of the sensible heat
-/// and some 20 to 40 % of the moisture.
+/// Differences of measured states: at 10 K and 1 to 2 g/kg between supply and room, 0.3 K and 3 % relative humidity are worth some 4 % of the
+/// sensible heat and a third to two thirds of the moisture.
 ///
 /// # Errors
 /// [`Error::MixedFormulations`]; as [`RoomGains`] for the source.

@@ -14,7 +14,8 @@ use crate::state::MoistAir;
 /// pressure; 2546 kJ/kg at 24 °C.
 ///
 /// What a gain brings beyond it is sensible, wherever the water comes from: SHR = 1 − ṁ_w h_v / (Q + ṁ_w h_w), so that the ratio and
-/// the slope of the line say the same. Other definitions (2501 kJ/kg, or the heat of vaporization) differ by half a percent to 2 % in the latent part.
+/// the slope of the line say the same. Other definitions differ in the latent part: 2501 kJ/kg by 2 %, the heat of vaporization by 4 %; with the
+/// enthalpy of the source (ASHRAE Fundamentals 2021 ch. 1, Example 6: 0.701, here 0.702) lines of one ratio would differ by source.
 pub fn latent_heat<S: Scalar>(room: &MoistAir<S>) -> SpecificEnthalpy<S> {
     SpecificEnthalpy::from_joules_per_kilogram(vapor_enthalpy(room))
 }

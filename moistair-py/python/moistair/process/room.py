@@ -429,8 +429,8 @@ def gains_between(
 ) -> Gains[Any]:
     """The gains of a room, from supply and room air.
 
-    Differences of measured states: at 10 K between supply and room, 0.3 K and 3 % relative humidity are worth some 3 % of the
-    sensible heat and some 20 to 40 % of the moisture.
+    Differences of measured states: at 10 K and 1 to 2 g/kg between supply and room, 0.3 K and 3 % relative humidity are worth
+    some 4 % of the sensible heat and a third to two thirds of the moisture.
 
     Parameters
     ----------
@@ -479,8 +479,8 @@ def latent_heat(
 ) -> Any:
     """The latent heat by which a room's gains are told apart, J/kg: the enthalpy of the vapor in its own air.
 
-    What a gain brings beyond it is sensible, wherever the water comes from. Other definitions (2501 kJ/kg, or the heat of
-    vaporization) differ by half a percent to 2 % in the latent part.
+    What a gain brings beyond it is sensible, wherever the water comes from. Other definitions differ in the latent part:
+    2501 kJ/kg by 2 %, the heat of vaporization by 4 %.
 
     Parameters
     ----------
