@@ -145,7 +145,7 @@ impl<S: Scalar> Duty<S> {
         let most = k::<S>(Quantity::WaterToAirRatio.limits().1);
         Pinch {
             // Without a range nothing pinches.
-            water_to_air: if steepest <= most { steepest } else { most },
+            water_to_air: if self.cold < celsius && steepest <= most { steepest } else { most },
             temperature: Temperature::from_celsius(celsius),
         }
     }
