@@ -5,6 +5,7 @@ mod books;
 mod coil;
 mod compression;
 mod desiccant;
+mod economizer;
 mod humidify;
 mod mixing;
 mod reheat;
@@ -45,6 +46,7 @@ const TRADES: &[&[Entry]] = &[
     reheat::ENTRIES,
     room::ENTRIES,
     desiccant::ENTRIES,
+    economizer::ENTRIES,
 ];
 
 struct Entry {
