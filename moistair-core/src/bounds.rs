@@ -226,6 +226,18 @@ quantities! {
     CarryOverRise = 142, "carry-over rise", "K", -100.0, 200.0;
     /// Temperature of air in the correlation of the wheel's potentials, 275 to 425 K.
     DesiccantTemperature = 143, "desiccant temperature", "°C", 1.85, 151.85;
+    /// Dry air from outdoors over the dry air of a mixture.
+    OutdoorAirFraction = 150, "outdoor-air fraction", "1", 0.0, 1.0;
+    /// Standard uncertainty of a reading, in the unit of the reading.
+    StandardUncertainty = 151, "standard uncertainty", "1", 0.0, 1.0e9;
+    /// Share of a tracer gas, such as carbon dioxide, in dry air.
+    TracerConcentration = 152, "tracer concentration", "µmol/mol", 0.0, 1.0e6;
+    /// What a temperature must pass a limit by before a control switches on.
+    TemperatureHysteresis = 153, "temperature hysteresis", "K", 0.0, 50.0;
+    /// What an enthalpy must pass a limit by before a control switches on.
+    EnthalpyHysteresis = 154, "enthalpy hysteresis", "J/kg", 0.0, 100_000.0;
+    /// Heat that a coil takes out per dry air.
+    CoilEnergy = 155, "coil energy", "J/kg", -INFINITY, INFINITY;
 }
 
 impl Quantity {

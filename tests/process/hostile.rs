@@ -8,10 +8,13 @@ use moistair_core::process::coil::{
 use moistair_core::process::compression;
 use moistair_core::process::desiccant::potentials::{self, Effectiveness};
 use moistair_core::process::desiccant::{self, CarryOver, Regeneration, Sorption};
+use moistair_core::process::economizer::{self, Economizer, EconomizerState, Fallback, Rule, Supply};
 use moistair_core::process::evaporative::{
     self, DirectCooled, DirectCooler, IndirectCooled, IndirectCooler, IndirectEffectiveness,
 };
 use moistair_core::process::humidify::{self, EvaporatingWater, Steam, Washer};
+use moistair_core::process::measured::{MeasuredAir, Reading};
+use moistair_core::process::mixing::outdoor_air::{self, FractionLimits, OtherFlow};
 use moistair_core::process::reheat::CoilLeaving;
 use moistair_core::process::room::{self, MoistureSource, RoomGains};
 use moistair_core::process::tower::basin::Basin;
@@ -21,6 +24,7 @@ use moistair_core::process::tower::poppe::{self, Transfer};
 use moistair_core::process::tower::{self, HotWater, TowerWater, WaterTreatment, WaterUse, effectiveness_ntu};
 use moistair_core::process::{AirStream, Exchange, WetStream, mixing, reheat, sensible};
 use moistair_core::sequence::{EVALUATION_CAP, Free, SequenceError, Step, StepResult, Target, Total, run, solve};
+use moistair_core::signal::Quality;
 use moistair_core::*;
 use std::collections::BTreeMap;
 
@@ -162,6 +166,7 @@ fn outlet(leaving: &WetStream, exchange: &Exchange) {
 fn no_argument_breaks_a_process() {
     let mut random = Random(11);
     let mut seen = Seen::default();
+    let mut decisions = [0_u32; 2];
     let cases = std::env::var("MOISTAIR_CASES").map_or(2_000, |cases| cases.parse().unwrap());
     for _ in 0..cases {
         let (first, second) = (any_air(&mut random), any_air(&mut random));
@@ -390,6 +395,80 @@ fn no_argument_breaks_a_process() {
             seen.take("equilibrium", made, |wet| outlet(&WetStream::new(*wet, flow(1.0)).unwrap(), &Exchange::none()));
         }
 
+        // Hardly any nine random numbers make a fraction: half of them are usual.
+        let mut or = |usual: f64| if random.bits() & 1 == 0 { number(&mut random) } else { usual };
+        let mut reading = |usual: f64, uncertainty: f64| {
+            let quality = if or(0.0) == 1.0 { Quality::Refused } else { Quality::Good };
+            Reading::new(or(usual), or(uncertainty)).with_quality(quality)
+        };
+        let readings = [reading(4.0, 0.2), reading(24.0, 0.2), reading(19.0, 0.2)];
+        let flows = [reading(1.5, 0.1), reading(6.0, 0.1)];
+        let mut measured = |t: f64, rh: f64| MeasuredAir::from_relative_humidity(reading(t, 0.2), reading(rh, 0.01));
+        let airs = [measured(16.0, 0.5), measured(24.0, 0.5), measured(18.0, 0.5)];
+        let quantity = Quantity::ALL[(or(0.0).to_bits() % Quantity::ALL.len() as u64) as usize];
+        let airs =
+            airs.map(|air| if or(0.0) == 0.0 { air } else { MeasuredAir { humidity_quantity: quantity, ..air } });
+        let sound = |done: &outdoor_air::OutdoorAirFraction| {
+            finite(&[done.fraction.unwrap_or(0.0), done.standard_uncertainty.unwrap_or(0.0)]);
+            assert!(done.standard_uncertainty.is_none_or(|u| u >= 0.0), "{done:?}");
+        };
+        let [outdoor, returned, mixed] = readings;
+        let wanted = or(0.05);
+        for by in [Quantity::DryBulb, Quantity::TracerConcentration, quantity] {
+            let found = outdoor_air::from_readings(by, outdoor, returned, mixed, wanted);
+            seen.take("fraction of readings", found, sound);
+        }
+        for other in [OtherFlow::Total(flows[1]), OtherFlow::Recirculated(flows[1])] {
+            seen.take("fraction of flows", outdoor_air::from_flows(flows[0], other, wanted), sound);
+        }
+        let site = second.basis();
+        for by in [Quantity::SpecificEnthalpy, Quantity::HumidityRatio] {
+            let found = outdoor_air::from_air(by, &airs[0], &airs[1], &airs[2], site, wanted);
+            seen.take("fraction of states", found, sound);
+        }
+        let limits = FractionLimits { least: or(0.2), most: or(1.0) };
+        let blend = |done: &outdoor_air::Blend| {
+            outlet(&done.mixed.leaving, &done.mixed.exchange);
+            assert!(limits.least <= done.fraction && done.fraction <= limits.most, "{done:?}");
+        };
+        let blended = outdoor_air::for_mixed_temperature(&first, &second, celsius(or(14.0)), limits);
+        seen.take("fraction for a temperature", blended, blend);
+        let supply = Supply { dry_bulb: celsius(or(13.0)), coil_leaving: RelativeHumidity::from_fraction(or(0.95)) };
+        seen.take("coil load", economizer::coil_load(&first, supply), |load| {
+            finite(&[load.heat.joules_per_kilogram()]);
+            assert!(load.heat.joules_per_kilogram() >= 0.0);
+        });
+        let mut state = EconomizerState::default();
+        for _ in 0..2 {
+            let rule = Rule::ALL[(or(0.0).to_bits() % Rule::ALL.len() as u64) as usize];
+            let usual = Economizer::new(rule, site);
+            let mut rarely = |usual: f64| if or(0.0) == 0.0 { usual } else { or(usual) };
+            let settings = Economizer {
+                supply,
+                dry_bulb_limit: celsius(rarely(23.0)),
+                enthalpy_limit: joules(rarely(47e3)),
+                dew_point_limit: DewPoint::from_celsius(rarely(13.0)),
+                temperature_hysteresis: TemperatureDifference::from_kelvins(rarely(1.0)),
+                enthalpy_hysteresis: joules(rarely(1e3)),
+                least_time_on: rarely(0.0),
+                least_time_off: rarely(0.0),
+                freeze_limit: celsius(rarely(0.0)),
+                fallback: if rarely(0.0) == 0.0 { Fallback::DryBulb } else { Fallback::LeastOutdoorAir },
+                ..usual
+            };
+            seen.take("economizer settings", settings.check(), |()| ());
+            let decision = settings.decide(&mut state, rarely(0.0), &airs[0], &airs[1]);
+            finite(&[decision.margin, decision.margin_uncertainty, decision.confidence]);
+            assert!((0.0..=1.0).contains(&decision.confidence) && decision.margin_uncertainty >= 0.0, "{decision:?}");
+            // On only with a usable outdoor dry bulb.
+            let usable = airs[0].dry_bulb.quality != Quality::Refused && airs[0].dry_bulb.value.is_finite();
+            assert!(!decision.enabled || (usable && settings.check().is_ok()), "{decision:?}");
+            let blended = decision.outdoor_air(&first, &second, celsius(rarely(14.0)), limits);
+            seen.take("outdoor air of a decision", blended, blend);
+            decisions[usize::from(decision.enabled)] += 1;
+        }
+        let mut x = || number(&mut random);
+
         let compressed = compression::to_pressure(&other, Pressure::from_pascals(x()), celsius(x()));
         seen.take("compression", compressed, |done| {
             outlet(&done.leaving, &done.exchange);
@@ -581,6 +660,8 @@ fn no_argument_breaks_a_process() {
         seen.take("basin later", basin.after(x(), &flows, x()), |basin| finite(&[basin.concentration()]));
         seen.take("tower with leaving air", tower::with_leaving_air(&first, &second, water, treatment), cooled);
     }
+    println!("economizer: {} decisions off, {} on", decisions[0], decisions[1]);
+    assert!(decisions.iter().all(|count| *count > 0));
     seen.report();
 }
 

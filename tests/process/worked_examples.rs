@@ -4,7 +4,10 @@ use crate::checks::{Row, Table, Tally};
 use crate::support::*;
 use moistair_core::process::coil::{self, Arrangement, CoilSurface, CoilWater, CondensateTemperature, Coolant};
 use moistair_core::process::desiccant::potentials::{self, Effectiveness};
+use moistair_core::process::economizer::{self, Economizer, EconomizerState, Rule};
 use moistair_core::process::humidify::{self, Absorption, EvaporatingWater, Steam};
+use moistair_core::process::measured::{MeasuredAir, Reading};
+use moistair_core::process::mixing::outdoor_air;
 use moistair_core::process::reheat::CoilLeaving;
 use moistair_core::process::room::{self, MoistureSource, RoomGains};
 use moistair_core::process::tower::merkel::{self, Quadrature};
@@ -33,6 +36,8 @@ impl Given<'_> {
             MoistAir::from_dry_bulb(t, WetBulb::from_celsius(number("wb")), self.basis())
         } else if self.has(&format!("rhl{n}")) {
             MoistAir::from_dry_bulb(t, RelativeHumidityOverLiquid::from_fraction(number("rhl")), self.basis())
+        } else if self.has(&format!("w{n}")) {
+            MoistAir::from_dry_bulb(t, ratio(number("w")), self.basis())
         } else {
             MoistAir::from_dry_bulb(t, RelativeHumidity::from_fraction(number("rh")), self.basis())
         }
@@ -250,6 +255,31 @@ fn computed(row: Row<'_>) -> f64 {
                 ("evaporation by Merkel", saturated_exit(&entering, merkel.leaving_enthalpy)),
             ]
         }
+        "economizer" => {
+            let air = |t, rh| {
+                MeasuredAir::from_relative_humidity(
+                    Reading::within(row.input(t), 0.5),
+                    Reading::within(row.input(rh), 0.03),
+                )
+            };
+            let (outdoor, returned) = (air("t1", "rh1"), air("t2", "rh2"));
+            let settings = Economizer::new(Rule::DifferentialEnthalpy, given.basis());
+            let decision = settings.decide(&mut EconomizerState::default(), 0.0, &outdoor, &returned);
+            vec![("margin", decision.margin / 1e3), ("uncertainty", decision.margin_uncertainty / 1e3)]
+        }
+        "enthalpy limit" => {
+            let site = Pressure::at_elevation(Length::from_meters(row.input("z"))).unwrap();
+            let limit = economizer::enthalpy_limit(Basis::ideal_gas(site)).unwrap();
+            // On the handbook's other datum: dry air at 0 °F.
+            let dry_air = 1.006 * 32.0 / 1.8;
+            vec![("limit", (limit.kilojoules_per_kilogram() + dry_air) / 2.326)]
+        }
+        "outdoor-air fraction" => {
+            let reading = |name| Reading::new(row.input(name), row.input("u"));
+            let (outdoor, returned, mixed) = (reading("t1"), reading("t2"), reading("t3"));
+            let found = outdoor_air::from_readings(Quantity::DryBulb, outdoor, returned, mixed, 0.05).unwrap();
+            vec![("uncertainty of fraction", found.standard_uncertainty.unwrap())]
+        }
         "limit" => vec![("T*", tower::coldest_water(&given.air(1)).unwrap().celsius())],
         "treybal" => {
             let (air, water) = (given.air(1), given.tower());
@@ -311,7 +341,7 @@ fn worked_examples() {
     for row in table.rows() {
         tally.within(row.text("process"), row.text("id"), computed(row), row.value(), row.number("tolerance"));
     }
-    tally.finish(121);
+    tally.finish(128);
 }
 
 /// Examples 1 to 6 of the handbook chapter as its text solves them, on both formulations: within half a unit of

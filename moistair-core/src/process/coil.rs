@@ -233,7 +233,7 @@ pub fn between<S: Scalar>(
     Ok(account(entering, &held, drain_between(entering, &held, condensate)?))
 }
 
-fn account<S: Scalar>(entering: &AirStream<S>, leaving: &MoistAir<S>, drain: S) -> Cooling<S> {
+pub(super) fn account<S: Scalar>(entering: &AirStream<S>, leaving: &MoistAir<S>, drain: S) -> Cooling<S> {
     let (flow, air) = (entering.dry_air_flow, entering.air());
     let ((h1, w1), (h2, w2)) = (parts(&air), parts(leaving));
     let condensate = flow * (w1 - w2);

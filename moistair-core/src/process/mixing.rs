@@ -1,5 +1,7 @@
 //! Adiabatic mixing of any number of streams, with fog and ice where they form.
 
+pub mod outdoor_air;
+
 use super::{AirStream, Exchange, WetStream};
 use crate::basis::Basis;
 use crate::bounds::Quantity;

@@ -8,6 +8,7 @@ mod coefficients;
 mod dual;
 mod elementary;
 mod lanes;
+mod normal;
 mod scalar;
 
 #[cfg(test)]
@@ -18,6 +19,7 @@ use core::ops::{Add, Div, Mul, Neg, Sub};
 pub use dual::Dual;
 #[allow(unused_imports, reason = "so far only the tests run formulas on lanes")]
 pub use lanes::Lanes;
+pub use normal::normal_probability;
 pub use scalar::Scalar;
 
 /// The result of a comparison: one truth value, or one per lane.

@@ -81,7 +81,7 @@ impl Clock {
     }
 
     #[cfg(test)]
-    pub(super) fn from_parts([now, candidate]: [i64; 2], [candidates, started]: [u32; 2]) -> Self {
+    pub(crate) fn from_parts([now, candidate]: [i64; 2], [candidates, started]: [u32; 2]) -> Self {
         Self { now, candidate, candidates, started }
     }
 

@@ -5,6 +5,7 @@ mod books;
 mod coil;
 mod compression;
 mod desiccant;
+mod economizer;
 mod evaporative;
 mod humidify;
 mod mixing;
@@ -47,6 +48,7 @@ const TRADES: &[&[Entry]] = &[
     room::ENTRIES,
     desiccant::ENTRIES,
     evaporative::ENTRIES,
+    economizer::ENTRIES,
 ];
 
 struct Entry {

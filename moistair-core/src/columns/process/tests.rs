@@ -62,11 +62,15 @@ fn plausible(process: Process, field: &Field, row: usize, random: &mut Random) -
     let leaves_tower = name.starts_with("leaving") && process.name().starts_with("tower");
     match (last, field.unit()) {
         ("given" | "wanted", unit) if unit.starts_with("choice: code") => [21.0, 22.0][row % 2],
+        ("humidity_quantity", _) => 12.0,
+        ("quantity", _) => [0.0, 2.0, 7.0, 0.0][row % 4],
         (_, unit) if unit.starts_with("choice") => [0.0, 0.0, 1.0, 2.0][row % 4],
         ("dry_bulb", _) if leaves_tower => random.between(30.0, 35.0),
         ("humidity_ratio", _) if leaves_tower => random.between(0.02, 0.025),
         ("dry_bulb", _) if name.starts_with("leaving") => random.between(7.0, 13.0),
         ("humidity_ratio", _) if name.starts_with("leaving") => random.between(0.004, 0.006),
+        ("value", _) if name.contains("humidity") => random.between(0.2, 0.8),
+        ("standard_uncertainty", _) => random.between(0.0, 0.1),
         ("dry_bulb" | "value", _) => random.between(15.0, 40.0),
         ("ice", _) => [0.0, 0.0, 0.0, 0.001][row % 4],
         ("hot_water", _) => random.between(36.0, 45.0),
