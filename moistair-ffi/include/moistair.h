@@ -366,6 +366,24 @@
 // Temperature of air in the correlation of a wheel's potentials, 275 to 425 K [°C].
 #define MOISTAIR_DESICCANT_TEMPERATURE 143
 
+// Dry air from outdoors over the dry air of a mixture [1].
+#define MOISTAIR_OUTDOOR_AIR_FRACTION 150
+
+// Standard uncertainty of a reading, in the unit of the reading [1].
+#define MOISTAIR_STANDARD_UNCERTAINTY 151
+
+// Share of a tracer gas, such as carbon dioxide, in dry air [µmol/mol].
+#define MOISTAIR_TRACER_CONCENTRATION 152
+
+// What a temperature must pass a limit by before a control switches on [K].
+#define MOISTAIR_TEMPERATURE_HYSTERESIS 153
+
+// What an enthalpy must pass a limit by before a control switches on [J/kg].
+#define MOISTAIR_ENTHALPY_HYSTERESIS 154
+
+// Heat that a coil takes out per dry air [J/kg].
+#define MOISTAIR_COIL_ENERGY 155
+
 // Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
 #define MOISTAIR_REAL_GAS 0
 
@@ -614,6 +632,111 @@
 
 // The pressure is more than 5 % off 101 325 Pa, for which the correlation was made.
 #define MOISTAIR_CORRELATION_OFF_STANDARD_PRESSURE 1
+
+// As certain as was asked.
+#define MOISTAIR_FRACTION_DETERMINED 0
+
+// Less certain than was asked, or from a difference within twice its own uncertainty.
+#define MOISTAIR_FRACTION_UNCERTAIN 1
+
+// Below zero by more than twice its uncertainty: a sensor fault.
+#define MOISTAIR_FRACTION_BELOW_ZERO 2
+
+// Above one by more than twice its uncertainty: a sensor fault.
+#define MOISTAIR_FRACTION_ABOVE_ONE 3
+
+// Outdoor and return air read the same, or no air flows: any fraction would do.
+#define MOISTAIR_FRACTION_INDETERMINATE 4
+
+// The mixture has the wanted temperature.
+#define MOISTAIR_REACH_REACHED 0
+
+// The nearest that the dampers allow, at their least outdoor air.
+#define MOISTAIR_REACH_AT_LEAST 1
+
+// The nearest that the dampers allow, at their most outdoor air.
+#define MOISTAIR_REACH_AT_MOST 2
+
+// The other flow is that of all the air: the supply air.
+#define MOISTAIR_FLOW_TOTAL 0
+
+// The other flow is what outdoor air mixes with: the recirculated air.
+#define MOISTAIR_FLOW_RECIRCULATED 1
+
+// Outdoor dry bulb not above the limit.
+#define MOISTAIR_ECONOMIZER_RULE_FIXED_DRY_BULB 0
+
+// Outdoor dry bulb not above that of the return air.
+#define MOISTAIR_ECONOMIZER_RULE_DIFFERENTIAL_DRY_BULB 1
+
+// Outdoor enthalpy not above the limit.
+#define MOISTAIR_ECONOMIZER_RULE_FIXED_ENTHALPY 2
+
+// Outdoor enthalpy not above that of the return air.
+#define MOISTAIR_ECONOMIZER_RULE_DIFFERENTIAL_ENTHALPY 3
+
+// Outdoor enthalpy and dry bulb not above their limits.
+#define MOISTAIR_ECONOMIZER_RULE_FIXED_ENTHALPY_AND_DRY_BULB 4
+
+// Outdoor enthalpy not above that of the return air, dry bulb not above its limit.
+#define MOISTAIR_ECONOMIZER_RULE_DIFFERENTIAL_ENTHALPY_AND_DRY_BULB 5
+
+// Outdoor dew point and dry bulb not above their limits.
+#define MOISTAIR_ECONOMIZER_RULE_DEW_POINT_AND_DRY_BULB 6
+
+// The coil takes no more out of outdoor air than out of return air.
+#define MOISTAIR_ECONOMIZER_RULE_LEAST_COIL_ENERGY 7
+
+// Least outdoor air when a humidity is missing.
+#define MOISTAIR_ECONOMIZER_FALLBACK_LEAST_OUTDOOR_AIR 0
+
+// Decide by dry bulb when a humidity is missing.
+#define MOISTAIR_ECONOMIZER_FALLBACK_DRY_BULB 1
+
+// On: outdoor air is favorable.
+#define MOISTAIR_ECONOMIZER_REASON_FAVORABLE 0
+
+// On: no longer favorable, but on for less than the least time.
+#define MOISTAIR_ECONOMIZER_REASON_LEAST_TIME_ON 1
+
+// Off: the outdoor dry bulb is too high.
+#define MOISTAIR_ECONOMIZER_REASON_DRY_BULB_HIGH 2
+
+// Off: the outdoor enthalpy is too high.
+#define MOISTAIR_ECONOMIZER_REASON_ENTHALPY_HIGH 3
+
+// Off: the outdoor dew point is too high.
+#define MOISTAIR_ECONOMIZER_REASON_DEW_POINT_HIGH 4
+
+// Off: outdoor air would cost the coil as much or more.
+#define MOISTAIR_ECONOMIZER_REASON_COIL_ENERGY_HIGH 5
+
+// Off: favorable, but not yet by the hysteresis.
+#define MOISTAIR_ECONOMIZER_REASON_WITHIN_HYSTERESIS 6
+
+// Off: favorable, but off for less than the least time.
+#define MOISTAIR_ECONOMIZER_REASON_LEAST_TIME_OFF 7
+
+// Off: outdoor air so cold that the dampers stay at their least.
+#define MOISTAIR_ECONOMIZER_REASON_FREEZE_LOCKOUT 8
+
+// Off: no usable outdoor dry bulb.
+#define MOISTAIR_ECONOMIZER_REASON_OUTDOOR_DRY_BULB_BAD 9
+
+// Off: no usable outdoor humidity, or none at this dry bulb.
+#define MOISTAIR_ECONOMIZER_REASON_OUTDOOR_HUMIDITY_BAD 10
+
+// Off: no usable return dry bulb.
+#define MOISTAIR_ECONOMIZER_REASON_RETURN_DRY_BULB_BAD 11
+
+// Off: no usable return humidity, or none at this dry bulb.
+#define MOISTAIR_ECONOMIZER_REASON_RETURN_HUMIDITY_BAD 12
+
+// Off: the settings make no sense; moistair_economizer_check says which.
+#define MOISTAIR_ECONOMIZER_REASON_SETTINGS_INVALID 13
+
+// Off: the time is no number or beyond 1e11 s.
+#define MOISTAIR_ECONOMIZER_REASON_CLOCK_INVALID 14
 
 // A temperature, °C.
 #define MOISTAIR_KIND_TEMPERATURE 1
@@ -1747,6 +1870,122 @@ typedef struct {
     // MOISTAIR_CORRELATION_WITHIN or MOISTAIR_CORRELATION_OFF_STANDARD_PRESSURE.
     int32_t correlation;
 } moistair_potential_wheel;
+
+// A reading, its standard uncertainty and how far it can be trusted at all.
+typedef struct {
+    // The value in the unit of the library; NaN when there is none.
+    double value;
+    // One standard deviation, in the same unit, 0 or more. Of a reading that is stated as ± a, a / sqrt(3).
+    double standard_uncertainty;
+    // MOISTAIR_QUALITY_…; a refused reading counts as missing, whatever its value is.
+    int32_t quality;
+    // Set to 0; not read.
+    int32_t reserved;
+} moistair_reading;
+
+// A measured outdoor-air fraction.
+typedef struct {
+    // Raw, not clamped to 0 … 1 [1]; NaN when indeterminate.
+    double fraction;
+    // Its standard uncertainty [1]; NaN when indeterminate.
+    double standard_uncertainty;
+    // What it is worth, MOISTAIR_FRACTION_…
+    int32_t status;
+    // The worst quality of the readings, MOISTAIR_QUALITY_…
+    int32_t quality;
+} moistair_outdoor_air_fraction;
+
+// Air as a temperature and a humidity sensor see it.
+typedef struct {
+    // Dry bulb [°C].
+    moistair_reading dry_bulb;
+    // The humidity, in the unit of its quantity.
+    moistair_reading humidity;
+    // What the humidity sensor measures: a selector that fixes a state, such as MOISTAIR_RELATIVE_HUMIDITY.
+    int32_t humidity_quantity;
+    // Set to 0; not read.
+    int32_t reserved;
+} moistair_measured_air;
+
+// An outdoor-air fraction and what it mixes.
+typedef struct {
+    // The mixture: 1 kg/s of dry air.
+    moistair_wet_stream leaving;
+    // Outdoor-air fraction, within the limits [1].
+    double fraction;
+    // Whether it has the wanted temperature, MOISTAIR_REACH_…
+    int32_t reach;
+    // 0.
+    int32_t reserved;
+} moistair_blend;
+
+// The settings of an economizer. Make them with moistair_economizer_new, then set what differs.
+typedef struct {
+    // Pressure of the site and formulation.
+    moistair_basis basis;
+    // Fixed limit of the outdoor dry bulb [°C].
+    double dry_bulb_limit;
+    // Fixed limit of the outdoor enthalpy [J/kg].
+    double enthalpy_limit;
+    // Fixed limit of the outdoor dew point [°C].
+    double dew_point_limit;
+    // What the coil is to supply, for MOISTAIR_ECONOMIZER_RULE_LEAST_COIL_ENERGY: dry bulb [°C].
+    double supply_dry_bulb;
+    // Relative humidity at which it leaves the air when it is wet [1].
+    double supply_coil_leaving;
+    // By how much a dry bulb or dew point must be below its limit before it switches on [K]; it switches off at the limit.
+    double temperature_hysteresis;
+    // The same of an enthalpy or a coil energy [J/kg].
+    double enthalpy_hysteresis;
+    // Least time on [s]; a bad reading and the freeze lockout do not wait for it.
+    double least_time_on;
+    // Least time off [s].
+    double least_time_off;
+    // Below this outdoor dry bulb the dampers stay at their least [°C].
+    double freeze_limit;
+    // MOISTAIR_ECONOMIZER_RULE_…
+    int32_t rule;
+    // When a humidity is missing: MOISTAIR_ECONOMIZER_FALLBACK_…
+    int32_t fallback;
+} moistair_economizer;
+
+// What an economizer remembers from call to call. Zeroed at first: off; may be copied and stored, not looked into.
+typedef struct {
+    // Zero at first.
+    uint64_t words[6];
+} moistair_economizer_state;
+
+// What was decided. All numbers are finite, always.
+typedef struct {
+    // How far the outdoor air is below what it must not exceed: positive speaks for outdoor air. 0 where nothing could be compared.
+    double margin;
+    // Standard uncertainty of the margin by that of the readings.
+    double margin_uncertainty;
+    // Probability that the air truly lies on the side that was decided for [1]; 0 where nothing could be compared.
+    double confidence;
+    // 1 if outdoor air beyond the least may be taken, else 0.
+    int32_t enabled;
+    // Why, MOISTAIR_ECONOMIZER_REASON_…
+    int32_t reason;
+    // What the margin is a difference of: MOISTAIR_DRY_BULB, MOISTAIR_SPECIFIC_ENTHALPY, MOISTAIR_DEW_POINT or MOISTAIR_COIL_ENERGY.
+    int32_t margin_quantity;
+    // The worst quality of the readings that were used, MOISTAIR_QUALITY_…
+    int32_t quality;
+    // 1 if the dry bulbs alone decided, for want of a humidity; else 0.
+    int32_t fallback;
+    // 0.
+    int32_t reserved;
+} moistair_decision;
+
+// What a coil takes out of air.
+typedef struct {
+    // Heat per mass of dry air, 0 or more [J/kg].
+    double heat;
+    // 1 if water condenses, else 0.
+    int32_t wet;
+    // 0.
+    int32_t reserved;
+} moistair_coil_load;
 
 // What is known about a channel before its first sample. Limits and resolutions are in the unit of the core, which the kinds name.
 // Make one with moistair_channel_new, then set what differs.
@@ -3040,6 +3279,134 @@ int32_t moistair_desiccant_effectiveness_between(const moistair_state *air,
                                                  const moistair_state *regeneration,
                                                  moistair_potentials *found,
                                                  moistair_error *error);
+
+// The outdoor-air fraction (m - r) / (o - r) from readings of one quantity. Exact by enthalpy, humidity ratio and tracer; by dry
+// bulbs nearly, and wrong in fog.
+//
+// quantity: MOISTAIR_DRY_BULB, MOISTAIR_HUMIDITY_RATIO, MOISTAIR_SPECIFIC_ENTHALPY or MOISTAIR_TRACER_CONCENTRATION; outdoor,
+// returned, mixed: readings; acceptable: standard uncertainty of the fraction up to which it counts as determined [1]; found:
+// output; error: may be null.
+// Returns 0 (also for a fraction that is worth nothing: its status says so), 1xx, 2xx.
+int32_t moistair_outdoor_air_from_readings(int32_t quantity,
+                                           const moistair_reading *outdoor,
+                                           const moistair_reading *returned,
+                                           const moistair_reading *mixed,
+                                           double acceptable,
+                                           moistair_outdoor_air_fraction *found,
+                                           moistair_error *error);
+
+// The same from measured states, by enthalpy or humidity ratio, with the uncertainty that the sensors of temperature and humidity
+// leave in it.
+//
+// quantity: MOISTAIR_HUMIDITY_RATIO or MOISTAIR_SPECIFIC_ENTHALPY; outdoor, returned, mixed: measured air without condensate;
+// basis: pressure and formulation; acceptable: standard uncertainty of the fraction up to which it counts as determined [1];
+// found: output; error: may be null.
+// Returns 0 (also for a fraction that is worth nothing: its status says so), 1xx, 2xx, 31x.
+int32_t moistair_outdoor_air_from_air(int32_t quantity,
+                                      const moistair_measured_air *outdoor,
+                                      const moistair_measured_air *returned,
+                                      const moistair_measured_air *mixed,
+                                      moistair_basis basis,
+                                      double acceptable,
+                                      moistair_outdoor_air_fraction *found,
+                                      moistair_error *error);
+
+// The outdoor-air fraction from measured dry-air flows.
+//
+// outdoor: [kg/s]; other: [kg/s]; other_is: MOISTAIR_FLOW_TOTAL or MOISTAIR_FLOW_RECIRCULATED; acceptable: standard uncertainty of
+// the fraction up to which it counts as determined [1]; found: output; error: may be null.
+// Returns 0 (also for a fraction that is worth nothing: its status says so), 1xx, 2xx.
+int32_t moistair_outdoor_air_from_flows(const moistair_reading *outdoor,
+                                        const moistair_reading *other,
+                                        int32_t other_is,
+                                        double acceptable,
+                                        moistair_outdoor_air_fraction *found,
+                                        moistair_error *error);
+
+// The outdoor-air fraction that mixes to a wanted temperature, or comes nearest to it within the limits, with moisture and fog.
+//
+// outdoor, returned: states; wanted: mixed dry bulb [°C]; least, most: limits of the fraction [1]; blend: output; error: may be null.
+// Returns 0, 1xx, 2xx, 205, 206, 301.
+int32_t moistair_outdoor_air_for_temperature(const moistair_state *outdoor,
+                                             const moistair_state *returned,
+                                             double wanted,
+                                             double least,
+                                             double most,
+                                             moistair_blend *blend,
+                                             moistair_error *error);
+
+// What a fraction is worth in words: static, lower case. Empty for an unknown code.
+const char *moistair_fraction_status_text(int32_t status);
+
+// Usual settings of a rule at a site: the limits of ASHRAE 90.1 (from memory), a supply of 13 °C off a coil at 95 %, hysteresis of
+// 1 K and 1 kJ/kg, least times of 300 s, lockout below 0 °C, least outdoor air when a humidity is missing.
+//
+// rule: MOISTAIR_ECONOMIZER_RULE_…; basis: pressure and formulation; settings: output; error: may be null.
+// Returns 0, 1xx, 2xx, 31x.
+int32_t moistair_economizer_new(int32_t rule,
+                                moistair_basis basis,
+                                moistair_economizer *settings,
+                                moistair_error *error);
+
+// What is wrong with the settings, if anything.
+//
+// settings: to be checked; error: may be null.
+// Returns 0 (in order), 1xx, 2xx, 31x.
+int32_t moistair_economizer_check(const moistair_economizer *settings, moistair_error *error);
+
+// Decides whether outdoor air beyond the least may be taken, and remembers it. Whatever is wrong with settings, time or readings,
+// also selectors that name nothing: off, with the reason.
+//
+// settings: of the economizer; state: its memory, read and written; time: [s] since any fixed instant; outdoor, returned: measured
+// air, read as far as the rule needs; decision: output; error: may be null.
+// Returns 0 (also for a bad reading), 101, 103.
+int32_t moistair_economizer_decide(const moistair_economizer *settings,
+                                   moistair_economizer_state *state,
+                                   double time,
+                                   const moistair_measured_air *outdoor,
+                                   const moistair_measured_air *returned,
+                                   moistair_decision *decision,
+                                   moistair_error *error);
+
+// How much outdoor air to take by a decision: the least when off; when on, what mixes to the wanted temperature. Where that is
+// colder than both airs, outdoor air as far as the dampers go; where it is warmer than both, the nearest.
+//
+// decision: as decided; outdoor, returned: states; wanted: mixed dry bulb [°C]; least, most: limits of the outdoor-air fraction
+// [1], the least by ventilation codes; blend: output; error: may be null.
+// Returns 0, 1xx, 2xx, 205, 206, 301.
+int32_t moistair_economizer_outdoor_air(const moistair_decision *decision,
+                                        const moistair_state *outdoor,
+                                        const moistair_state *returned,
+                                        double wanted,
+                                        double least,
+                                        double most,
+                                        moistair_blend *blend,
+                                        moistair_error *error);
+
+// Heat that a coil has to take out of air to supply it: the larger of that of a dry and that of a wet coil, 0 where none is needed.
+//
+// air: what enters; supply_dry_bulb: behind the coil [°C]; supply_coil_leaving: relative humidity at which a wet coil leaves the
+// air [1]; load: output; error: may be null.
+// Returns 0, 1xx, 2xx, 31x.
+int32_t moistair_economizer_coil_load(const moistair_state *air,
+                                      double supply_dry_bulb,
+                                      double supply_coil_leaving,
+                                      moistair_coil_load *load,
+                                      moistair_error *error);
+
+// The fixed enthalpy limit at a pressure: that of air of 75 °F and 50 %, as ASHRAE 90.1 has it away from sea level (from memory).
+//
+// basis: pressure and formulation; limit: output [J/kg]; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_economizer_enthalpy_limit(moistair_basis basis,
+                                           double *limit,
+                                           moistair_error *error);
+
+// The reason of a decision in words: static, lower case. Empty for an unknown code.
+const char *moistair_economizer_reason_text(int32_t reason);
+
+// A rule in words: static, lower case. Empty for an unknown code.
+const char *moistair_economizer_rule_text(int32_t rule);
 
 // A channel of a kind in a raw unit, with no stuck rule, no hold, no gap rule.
 //

@@ -180,6 +180,18 @@ pub const MOISTAIR_POTENTIAL_EFFECTIVENESS: i32 = 141;
 pub const MOISTAIR_CARRY_OVER_RISE: i32 = 142;
 /// Temperature of air in the correlation of a wheel's potentials, 275 to 425 K [°C].
 pub const MOISTAIR_DESICCANT_TEMPERATURE: i32 = 143;
+/// Dry air from outdoors over the dry air of a mixture [1].
+pub const MOISTAIR_OUTDOOR_AIR_FRACTION: i32 = 150;
+/// Standard uncertainty of a reading, in the unit of the reading [1].
+pub const MOISTAIR_STANDARD_UNCERTAINTY: i32 = 151;
+/// Share of a tracer gas, such as carbon dioxide, in dry air [µmol/mol].
+pub const MOISTAIR_TRACER_CONCENTRATION: i32 = 152;
+/// What a temperature must pass a limit by before a control switches on [K].
+pub const MOISTAIR_TEMPERATURE_HYSTERESIS: i32 = 153;
+/// What an enthalpy must pass a limit by before a control switches on [J/kg].
+pub const MOISTAIR_ENTHALPY_HYSTERESIS: i32 = 154;
+/// Heat that a coil takes out per dry air [J/kg].
+pub const MOISTAIR_COIL_ENERGY: i32 = 155;
 
 /// Limits of a quantity as an input, both included.
 #[repr(C)]

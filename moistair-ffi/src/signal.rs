@@ -405,7 +405,7 @@ fn converted(value: f64) -> Result<f64, Failure> {
     if value.is_finite() { Ok(value) } else { Err(Failure::NotFinite) }
 }
 
-fn place(found: Option<usize>, table: &'static [Text]) -> *const c_char {
+pub(crate) fn place(found: Option<usize>, table: &'static [Text]) -> *const c_char {
     found.and_then(|place| table.get(place)).map_or(c"".as_ptr(), Text::as_ptr)
 }
 

@@ -561,3 +561,107 @@ fn rooms_and_desiccants() {
         assert_eq!(turned.correlation, MOISTAIR_CORRELATION_WITHIN);
     }
 }
+
+/// An economizer through C beside that of the core: the same bits, with hysteresis and least times, and safe where a selector names nothing.
+#[test]
+fn economizer() {
+    use moistair_core::process::economizer::{Economizer, EconomizerState, Rule};
+    use moistair_core::process::measured::{MeasuredAir, Reading};
+    use moistair_core::process::mixing::outdoor_air::{FractionLimits, from_readings};
+
+    let reading =
+        |value, standard_uncertainty, quality| moistair_reading { value, standard_uncertainty, quality, reserved: 0 };
+    let air = |t, rh, quality| moistair_measured_air {
+        dry_bulb: reading(t, 0.3, quality),
+        humidity: reading(rh, 0.02, MOISTAIR_QUALITY_GOOD),
+        humidity_quantity: MOISTAIR_RELATIVE_HUMIDITY,
+        reserved: 0,
+    };
+    let of_core = |t, rh| MeasuredAir::from_relative_humidity(Reading::new(t, 0.3), Reading::new(rh, 0.02));
+    let (mut compared, mut switched) = (0, 0);
+    for (code, formulation) in FORMULATIONS {
+        let basis = moistair_basis { pressure: 95e3, formulation: code, reserved: 0 };
+        let site = moistair_core::Basis::new(pascals(95e3), formulation);
+        for rule in Rule::ALL {
+            let core = Economizer::new(rule, site);
+            // SAFETY: valid places.
+            let settings = output(blank::<moistair_economizer>(), |out| unsafe {
+                moistair_economizer_new(rule.code(), basis, out, null_mut())
+            });
+            // SAFETY: a valid place.
+            assert_eq!(unsafe { moistair_economizer_check(&settings, null_mut()) }, MOISTAIR_OK);
+            let (mut memory, mut state) = (EconomizerState::default(), moistair_economizer_state { words: [0; 6] });
+            for step in 0..60 {
+                let swing = f64::from(30 - (step % 60_i32 - 30).abs());
+                let (t, rh, time) = (8.0 + 0.8 * swing, 0.5, 200.0 * f64::from(step));
+                let decided = core.decide(&mut memory, time, &of_core(t, rh), &of_core(24.0, 0.5));
+                let (outdoor, returned) = (air(t, rh, 0), air(24.0, 0.5, 0));
+                // SAFETY: valid places.
+                let decision = output(blank::<moistair_decision>(), |out| unsafe {
+                    moistair_economizer_decide(&settings, &mut state, time, &outdoor, &returned, out, null_mut())
+                });
+                let ours = [decision.margin, decision.margin_uncertainty, decision.confidence].map(f64::to_bits);
+                let cores = [decided.margin, decided.margin_uncertainty, decided.confidence].map(f64::to_bits);
+                assert_eq!(ours, cores);
+                assert_eq!(decision.reason, decided.reason.code());
+                assert_eq!(decision.enabled != 0, decided.enabled);
+                compared += 1;
+                // SAFETY: valid places.
+                let [warm, room] = [t, 24.0].map(|t| {
+                    output(blank::<moistair_state>(), |out| unsafe {
+                        moistair_from_dry_bulb(t, MOISTAIR_RELATIVE_HUMIDITY, 0.5, basis, out, null_mut())
+                    })
+                });
+                if step % 20 == 0 {
+                    // SAFETY: valid places.
+                    let blend = output(blank::<moistair_blend>(), |out| unsafe {
+                        moistair_economizer_outdoor_air(&decision, &warm, &room, 16.0, 0.2, 0.9, out, null_mut())
+                    });
+                    let states = [t, 24.0].map(|t| of_core(t, 0.5).state(site).unwrap());
+                    let limits = FractionLimits { least: 0.2, most: 0.9 };
+                    let expected = decided.outdoor_air(&states[0], &states[1], celsius(16.0), limits).unwrap();
+                    assert_eq!(blend.fraction.to_bits(), expected.fraction.to_bits());
+                    same(&blend.leaving.mixture.air, &expected.mixed.leaving.air().air());
+                }
+            }
+            switched += memory.switches();
+
+            // Off at once for a quality, a quantity or a rule that names nothing.
+            let mut hidden = air(12.0, 0.5, 0);
+            hidden.humidity_quantity = 99;
+            let strange = moistair_economizer { rule: 77, ..settings };
+            let needs_humidity = !matches!(rule, Rule::FixedDryBulb | Rule::DifferentialDryBulb);
+            let without = if needs_humidity { MOISTAIR_ECONOMIZER_REASON_OUTDOOR_HUMIDITY_BAD } else { 0 };
+            for (settings, outdoor, reason) in [
+                (settings, hidden, without),
+                (settings, air(12.0, 0.5, 7), MOISTAIR_ECONOMIZER_REASON_OUTDOOR_DRY_BULB_BAD),
+                (strange, air(12.0, 0.5, 0), MOISTAIR_ECONOMIZER_REASON_SETTINGS_INVALID),
+            ] {
+                let returned = air(24.0, 0.5, 0);
+                // SAFETY: valid places.
+                let decision = output(blank::<moistair_decision>(), |out| unsafe {
+                    moistair_economizer_decide(&settings, &mut state, 1e6, &outdoor, &returned, out, null_mut())
+                });
+                assert_eq!((decision.enabled != 0, decision.reason), (reason == 0, reason));
+            }
+        }
+    }
+    println!("economizer: {compared} decisions compared, {switched} switches");
+    assert!(switched > 30);
+
+    let found = from_readings(
+        Quantity::DryBulb,
+        Reading::new(4.0, 0.2),
+        Reading::new(24.0, 0.2),
+        Reading::new(19.0, 0.2),
+        0.05,
+    );
+    let [outdoor, returned, mixed] = [4.0, 24.0, 19.0].map(|t| reading(t, 0.2, 0));
+    // SAFETY: valid places.
+    let same_one = output(blank::<moistair_outdoor_air_fraction>(), |out| unsafe {
+        moistair_outdoor_air_from_readings(MOISTAIR_DRY_BULB, &outdoor, &returned, &mixed, 0.05, out, null_mut())
+    });
+    assert_eq!(same_one.fraction, 0.25);
+    assert_eq!(same_one.standard_uncertainty, found.unwrap().standard_uncertainty.unwrap());
+    assert_eq!(same_one.status, MOISTAIR_FRACTION_DETERMINED);
+}

@@ -11,6 +11,8 @@ use std::{env, fs};
 
 use libtest_mimic::Arguments;
 use moistair_core::account::{Added, Rule};
+use moistair_core::process::economizer;
+use moistair_core::process::mixing::outdoor_air::{FractionStatus, Reach};
 use moistair_core::signal::{Kind, Quality, Reason, Unit};
 use moistair_core::{Error, Quantity};
 use moistair_tests::toolchain::{Face, c_compiler, cpp_compiler, trial};
@@ -92,6 +94,8 @@ fn rendered() -> String {
         "process/compression",
         "process/sequence",
         "process/desiccant",
+        "process/outdoor_air",
+        "process/economizer",
         "signal",
         "account",
     ] {
@@ -144,6 +148,8 @@ fn every_code_of_the_core_has_its_constant() {
         )*};
     }
     enumeration!(Kind: "KIND", Unit: "UNIT", Quality: "QUALITY", Reason: "REASON", Rule: "RULE", Added: "ADDED");
+    enumeration!(economizer::Rule: "ECONOMIZER_RULE", economizer::Reason: "ECONOMIZER_REASON");
+    enumeration!(economizer::Fallback: "ECONOMIZER_FALLBACK", FractionStatus: "FRACTION", Reach: "REACH");
 }
 
 /// Every status of the header has a text, and so has every error of the core.

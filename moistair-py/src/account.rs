@@ -9,6 +9,7 @@ use pyo3::exceptions::{PyTypeError, PyValueError};
 use pyo3::prelude::*;
 
 use crate::column::{self, Arguments};
+use crate::economizer::EconomizerState;
 use crate::error::internal;
 use crate::owned::{Samples, coded, member, number, owned, qualities, quality_code, restored};
 use crate::signal::{ChannelState, Checked, CheckedColumns};
@@ -647,7 +648,7 @@ pub fn restore_owned<'py>(py: Python<'py>, class: &str, byte_order: &str, bytes:
             }
         };
     }
-    restore!(ChannelState, Sum, Total, Periods, Counts, Residuals, BooksTotal, Deviation)
+    restore!(ChannelState, EconomizerState, Sum, Total, Periods, Counts, Residuals, BooksTotal, Deviation)
 }
 
 /// Does something with each row, whatever became of the others; whether all of it was taken.

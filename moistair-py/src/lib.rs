@@ -4,6 +4,7 @@ mod account;
 mod atmosphere;
 mod column;
 mod derivatives;
+mod economizer;
 mod error;
 mod memory;
 mod owned;
@@ -24,6 +25,10 @@ mod _core {
     };
     #[pymodule_export]
     use crate::atmosphere::{elevation_at_pressure, pressure_at_elevation, temperature_at_elevation};
+    #[pymodule_export]
+    use crate::economizer::{
+        EconomizerState, economizer_check, economizer_codes, economizer_decide, economizer_default,
+    };
     #[pymodule_export]
     use crate::process::{process_table, run, run_sequence};
     #[pymodule_export]

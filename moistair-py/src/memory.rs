@@ -2,6 +2,7 @@
 
 use core::mem::{MaybeUninit, size_of};
 
+use moistair_core::process::economizer;
 use moistair_core::{account, signal};
 
 /// A structure of numbers only, without padding, of which any bits are a valid value.
@@ -31,6 +32,7 @@ const RESIDUALS: usize = 2 * SUM + 3 * 8;
 
 plain! {
     signal::ChannelState, CLOCK + 7 * 8 + 4 * 4;
+    economizer::EconomizerState, CLOCK + 8 + 4 * 4;
     account::Sum, SUM;
     account::Total, TOTAL;
     account::Periods, TOTAL + 2 * 8;

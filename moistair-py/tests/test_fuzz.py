@@ -9,8 +9,9 @@ import moistair
 import numpy as np
 import pytest
 from moistair import MoistAir, account, signal
-from moistair.process import AirStream, AirWithCondensate, WetStream, books, coil, compression, desiccant, humidify, mixing, reheat, room, sensible, tower
-from moistair.process import liquid_water_enthalpy
+from moistair.process import AirStream, AirWithCondensate, WetStream, books, coil, compression, desiccant, economizer, humidify, mixing
+from moistair.process import liquid_water_enthalpy, reheat, room, sensible, tower
+from moistair.process.measured import MeasuredAir, Reading
 from support import FORMULATIONS, FUZZ, SEA_LEVEL, SECOND, odd_numbers, random
 
 
@@ -54,11 +55,24 @@ def streams(rng, count):
     return AirStream(MoistAir(dry_bulb=t, relative_humidity_over_liquid=rh, pressure=SEA_LEVEL), dry_air_flow=flow)
 
 
+def reading(rng, count, near, uncertainty):
+    value, doubt = odd_numbers(rng, count), odd_numbers(rng, count)
+    value = np.where(rng.random(count) < 0.7, near, value)
+    doubt = np.where(rng.random(count) < 0.7, uncertainty, doubt)
+    return Reading(value, standard_uncertainty=doubt, quality=rng.choice([0, 0, 0, 1, 2], count))
+
+
+def measured(rng, count):
+    return MeasuredAir(dry_bulb=reading(rng, count, 20.0, 0.2), relative_humidity=reading(rng, count, 0.5, 0.02))
+
+
 def arguments(function, rng, count):
     """Odd numbers for the numbers of a process, states and streams for the rest."""
     positional, keywords = [], {}
     # The target of a desiccant is a humidity ratio.
     state_names = {"leaving", "air", "room", "dried"} | ({"target"} if function.__module__.endswith("reheat") else set())
+    mixing_names = {"outdoor", "returned", "mixed", "other"}
+    of_readings = (mixing.outdoor_air_from_readings, mixing.outdoor_air_from_flows)
     for name, parameter in inspect.signature(function).parameters.items():
         if parameter.kind is inspect.Parameter.VAR_POSITIONAL:
             positional.extend(streams(rng, count) for _ in range(3))
@@ -72,7 +86,15 @@ def arguments(function, rng, count):
             keywords[name] = whole.air if function is desiccant.effectiveness_between else whole
         elif name in state_names:
             keywords[name] = streams(rng, count).air
-        elif name in ("freezing", "formulation", "arrangement", "measured", "quadrature", "transfer", "source", "characteristic", "carry_over", "heater"):
+        elif name in mixing_names and function in of_readings:
+            keywords[name] = reading(rng, count, 20.0 * rng.random(), 0.2)
+        elif name in mixing_names and function is mixing.outdoor_air_from_air:
+            keywords[name] = measured(rng, count)
+        elif name in mixing_names:
+            keywords[name] = streams(rng, count).air
+        elif name == "quantity":
+            keywords[name] = "specific_enthalpy" if function is mixing.outdoor_air_from_air else "dry_bulb"
+        elif name in ("other_is", "freezing", "formulation", "arrangement", "measured", "quadrature", "transfer", "source", "characteristic", "carry_over", "heater"):
             continue
         elif name == "rows":
             keywords[name] = 3
@@ -83,7 +105,7 @@ def arguments(function, rng, count):
 
 PROCESSES = [
     getattr(module, name)
-    for module in (coil, compression, desiccant, humidify, mixing, reheat, room, sensible, tower)
+    for module in (coil, compression, desiccant, economizer, humidify, mixing, reheat, room, sensible, tower)
     for name in module.__all__
     if name[0].islower()
 ]
@@ -102,6 +124,37 @@ def test_processes(function):
     allowed = {0, 102, 201, 202, 203, 205, 206, 207, 301, 310, 311, 312, 313}
     assert set(np.unique(many.status).tolist()) <= allowed
     assert many.failed == np.count_nonzero(many.status)
+
+
+@pytest.mark.parametrize("rule", economizer.EconomizerRule)
+def test_an_economizer_always_decides(rule):
+    rng = random(38)
+    for _ in range(20):
+        numbers = odd_numbers(rng, 9) if rng.random() < 0.5 else np.array([1.0, 1e3, 0.0, 0.0, 0.0, 24.0, 47e3, 13.0, 14.0])
+        kelvins, joules, on, off, freeze, dry_bulb, enthalpy, dew_point, supply = (float(number) for number in numbers)
+        settings = economizer.Economizer(
+            rule=rule,
+            pressure=SEA_LEVEL,
+            dry_bulb_limit=dry_bulb,
+            enthalpy_limit=enthalpy,
+            dew_point_limit=dew_point,
+            supply_temperature=supply,
+            temperature_hysteresis=kelvins,
+            enthalpy_hysteresis=joules,
+            least_time_on=on,
+            least_time_off=off,
+            freeze_limit=freeze,
+            fallback="dry_bulb",
+        )
+        count = max(FUZZ // 20, 10)
+        time = np.where(rng.random(count) < 0.5, np.arange(count) * 60.0, odd_numbers(rng, count))
+        outdoor, returned = measured(rng, count), measured(rng, count)
+        many = settings.decide(economizer.EconomizerState(), time=time, outdoor=outdoor, returned=returned)
+        for values in (many.margin, many.margin_uncertainty, many.confidence):
+            assert np.isfinite(values).all()
+        assert ((many.confidence >= 0.0) & (many.confidence <= 1.0)).all()
+        value, quality = np.asarray(outdoor.dry_bulb.value), np.asarray(outdoor.dry_bulb.quality)
+        assert not many.enabled[~np.isfinite(value) | (quality == 2)].any()
 
 
 @pytest.mark.parametrize("formulation", FORMULATIONS)

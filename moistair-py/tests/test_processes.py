@@ -19,6 +19,7 @@ from moistair.process import (
     coil,
     compression,
     desiccant,
+    economizer,
     humidify,
     liquid_water_enthalpy,
     mixing,
@@ -27,6 +28,7 @@ from moistair.process import (
     sensible,
     tower,
 )
+from moistair.process.measured import MeasuredAir, Reading
 from moistair._rows import Record
 from support import FORMULATIONS, SEA_LEVEL, same_bits
 
@@ -46,6 +48,24 @@ def state(t, rh, **more):
 WATER = {"hot_water": 35.0, "cold_water": 27.0, "drift_fraction": 1e-4, "cycles_of_concentration": 4.0}
 
 #: Each process as a function of three columns: dry bulb, relative humidity, and a share between 0 and 1.
+def reading(value, uncertainty):
+    return Reading(value, standard_uncertainty=uncertainty)
+
+
+def decision(t, rh):
+    outdoor = MeasuredAir(dry_bulb=reading(t, 0.2), relative_humidity=reading(rh, 0.02))
+    rule = economizer.EconomizerRule.FIXED_DRY_BULB
+    settings = economizer.Economizer(rule=rule, pressure=SEA_LEVEL, dry_bulb_limit=30.0, least_time_on=0.0, least_time_off=0.0)
+    if np.ndim(t) == 0:
+        return settings.decide(economizer.EconomizerState(), time=0.0, outdoor=outdoor)
+    # One that has been off before each row.
+    made = [decision(float(a), float(b)) for a, b in zip(np.ravel(t), np.ravel(rh))]
+    many = settings.decide(economizer.EconomizerState(), time=np.arange(len(made)), outdoor=outdoor)
+    assert [one.margin for one in made] == list(many.margin)
+    object.__setattr__(many, "enabled", np.array([one.enabled for one in made]))
+    return many
+
+
 CASES = {
     "stream": lambda t, rh, x: stream(t, rh, 1.0 + x),
     "stream.volume": lambda t, rh, x: AirStream.from_volume_flow(state(t, rh), volume_flow=1.0 + x),
@@ -175,6 +195,30 @@ CASES = {
         stream(t, rh, 1.0), stream(-25.0, 0.8, 2.0 + x), pressure=100e3, freezing="supercooled"
     ),
     "mixing.remainder": lambda t, rh, x: mixing.remainder(total_flow=2.0, part=stream(t, rh, x), air=state(20.0, 0.5)),
+    "mixing.outdoor_air_from_readings": lambda t, rh, x: mixing.outdoor_air_from_readings(
+        quantity="dry_bulb", outdoor=reading(t, 0.2), returned=reading(24.0 + rh, 0.2), mixed=reading(20.0 + 10.0 * x, 0.2)
+    ),
+    "mixing.outdoor_air_from_air": lambda t, rh, x: mixing.outdoor_air_from_air(
+        quantity="specific_enthalpy",
+        outdoor=MeasuredAir(dry_bulb=reading(t, 0.2), relative_humidity=reading(rh, 0.02)),
+        returned=MeasuredAir(dry_bulb=reading(24.0, 0.2), relative_humidity=reading(0.5, 0.02)),
+        mixed=MeasuredAir(dry_bulb=reading(20.0 + 10.0 * x, 0.2), relative_humidity=reading(0.5, 0.02)),
+        pressure=SEA_LEVEL,
+    ),
+    "mixing.outdoor_air_from_flows": lambda t, rh, x: mixing.outdoor_air_from_flows(
+        outdoor=reading(x, 0.05), other=reading(1.0 + rh, 0.1), other_is="recirculated", acceptable=0.01 * t
+    ),
+    "mixing.outdoor_air_for_temperature": lambda t, rh, x: mixing.outdoor_air_for_temperature(
+        outdoor=state(t, rh), returned=state(22.0, 0.5), wanted_temperature=20.0 + 10.0 * x, least=0.1
+    ),
+    "mixing.with_outdoor_air": lambda t, rh, x: mixing.with_outdoor_air(
+        outdoor=state(t, rh), returned=state(-10.0, 0.8), fraction=x
+    ),
+    "economizer.coil_load": lambda t, rh, x: economizer.coil_load(state(t, rh), supply_temperature=8.0 + 12.0 * x),
+    "economizer.enthalpy_limit": lambda t, rh, x: economizer.enthalpy_limit(pressure=9e4 + 1e3 * x + 0.0 * (t + rh)),
+    "economizer.outdoor_air": lambda t, rh, x: decision(t, rh).outdoor_air(
+        outdoor=state(t, rh), returned=state(24.0, 0.5), wanted_temperature=14.0 + 10.0 * x, least=0.2, most=0.9
+    ),
     "humidify.saturated_steam_enthalpy": lambda t, rh, x: humidify.saturated_steam_enthalpy(
         steam_temperature=100.0 + x + 0 * (t + rh)
     ),

@@ -12,7 +12,21 @@ Results are estimates for engineering; they are not a safety function. Towers, s
 Legionella, wet surfaces grow mould, cold coils freeze, steam burns: local codes and licensed practice govern.
 """
 
-from . import books, coil, compression, desiccant, humidify, mixing, reheat, room, sensible, sequence, tower
+from . import (
+    books,
+    coil,
+    compression,
+    desiccant,
+    economizer,
+    humidify,
+    measured,
+    mixing,
+    reheat,
+    room,
+    sensible,
+    sequence,
+    tower,
+)
 from ._streams import AirStream, AirWithCondensate, Exchange, WetStream, liquid_water_enthalpy
 
 __all__ = [
@@ -24,8 +38,10 @@ __all__ = [
     "coil",
     "compression",
     "desiccant",
+    "economizer",
     "humidify",
     "liquid_water_enthalpy",
+    "measured",
     "mixing",
     "reheat",
     "room",

@@ -2,16 +2,88 @@
 
 from __future__ import annotations
 
+import enum
 from dataclasses import dataclass
-from typing import Any, Generic, Union, overload
+from typing import Any, Generic, Literal, Union, overload
 
-from numpy.typing import ArrayLike
+import numpy as np
+from numpy.typing import ArrayLike, NDArray
 
 from .._core import MoistAir
+from .._formulation import Formulation, formulation_code
 from .._rows import Array, Record, T, expect, run
-from ._streams import AirStream, Exchange, Freezing, WetStream, freezing_code, wet_all
+from ..signal import Quality
+from ._streams import AirStream, Exchange, Freezing, WetStream, code, freezing_code, wet_all
+from .measured import MeasuredAir, Reading, air_parts, quantity_code, reading_parts
 
-__all__ = ["Mixed", "adiabatic", "adiabatic_at", "remainder"]
+__all__ = [
+    "Blend",
+    "FractionStatus",
+    "Mixed",
+    "OutdoorAirFraction",
+    "Reach",
+    "adiabatic",
+    "adiabatic_at",
+    "outdoor_air_for_temperature",
+    "outdoor_air_from_air",
+    "outdoor_air_from_flows",
+    "outdoor_air_from_readings",
+    "remainder",
+    "with_outdoor_air",
+]
+
+#: What the flow beside that of the outdoor air is: all the air, or what outdoor air mixes with.
+OtherFlow = Union[Literal["total"], Literal["recirculated"]]
+
+_OTHER = {"total": 0, "recirculated": 1}
+
+
+class FractionStatus(enum.IntEnum):
+    """What a measured outdoor-air fraction is worth."""
+
+    DETERMINED = 0
+    """As certain as was asked."""
+    UNCERTAIN = 1
+    """Less certain than was asked, or from a difference within twice its own uncertainty."""
+    BELOW_ZERO = 2
+    """Below zero by more than twice its uncertainty: a sensor fault."""
+    ABOVE_ONE = 3
+    """Above one by more than twice its uncertainty: a sensor fault."""
+    INDETERMINATE = 4
+    """Outdoor and return air read the same, or no air flows: any fraction would do."""
+
+
+class Reach(enum.IntEnum):
+    """Whether an outdoor-air fraction gives the wanted temperature."""
+
+    REACHED = 0
+    """The mixture has it."""
+    AT_LEAST = 1
+    """The nearest that the dampers allow, at their least outdoor air."""
+    AT_MOST = 2
+    """The nearest that the dampers allow, at their most outdoor air."""
+
+
+@dataclass(frozen=True, eq=False, init=False)
+class OutdoorAirFraction(Record, Generic[T]):
+    """A measured outdoor-air fraction.
+
+    Attributes
+    ----------
+    fraction : float or numpy.ndarray
+        Raw, not clamped to 0 … 1; NaN when indeterminate.
+    standard_uncertainty : float or numpy.ndarray
+        Of the fraction; NaN when indeterminate.
+    fraction_status : FractionStatus or numpy.ndarray
+        What it is worth.
+    quality : Quality or numpy.ndarray
+        The worst of the readings.
+    """
+
+    fraction: T
+    standard_uncertainty: T
+    fraction_status: Union[FractionStatus, NDArray[np.int32]]
+    quality: Union[Quality, NDArray[np.int32]]
 
 
 @dataclass(frozen=True, eq=False, init=False)
@@ -148,3 +220,247 @@ def remainder(*, total_flow: ArrayLike, part: AirStream[Any], air: MoistAir[Any]
     expect(part, AirStream, "part")
     expect(air, MoistAir, "air")
     return run("mixing.remainder", AirStream, ("total_flow", total_flow), ("part", part), ("air", air))
+
+
+@dataclass(frozen=True, eq=False, init=False)
+class Blend(Record, Generic[T]):
+    """An outdoor-air fraction and what it mixes.
+
+    Attributes
+    ----------
+    fraction : float or numpy.ndarray
+        Outdoor-air fraction of the dry air, within the limits.
+    mixed : Mixed
+        The mixture, of 1 kg/s of dry air.
+    reach : Reach or numpy.ndarray
+        Whether it has the wanted temperature.
+    """
+
+    fraction: T
+    mixed: Mixed[T]
+    reach: Union[Reach, NDArray[np.int32]]
+
+
+def outdoor_air_from_readings(
+    *, quantity: str, outdoor: Reading, returned: Reading, mixed: Reading, acceptable: ArrayLike = 0.05
+) -> OutdoorAirFraction[Any]:
+    """The outdoor-air fraction x = (m − r) / (o − r) from readings of one quantity, with its standard uncertainty.
+
+    Exact by enthalpy, humidity ratio and tracer; by dry bulbs off by up to 0.005 for airs that differ by 10 g/kg, and wrong in fog.
+    Differences of less than 3 to 5 K say little (common practice, no source). Stratification in a mixing box can exceed all of
+    this.
+
+    Parameters
+    ----------
+    quantity : {'dry_bulb', 'humidity_ratio', 'specific_enthalpy', 'tracer_concentration'}
+        What is read.
+    outdoor, returned, mixed : Reading
+        The readings, or columns of them.
+    acceptable : float or array_like
+        Standard uncertainty of the fraction up to which it counts as determined.
+
+    Returns
+    -------
+    OutdoorAirFraction
+
+    Raises
+    ------
+    ValueError
+        Another quantity.
+    NotFiniteError, OutOfRangeError
+        A missing or refused reading.
+
+    Examples
+    --------
+    >>> from moistair.process import mixing
+    >>> from moistair.process.measured import Reading
+    >>> outdoor, room, mixed = (Reading(t, standard_uncertainty=0.2) for t in (4.0, 24.0, 19.0))
+    >>> found = mixing.outdoor_air_from_readings(quantity="dry_bulb", outdoor=outdoor, returned=room, mixed=mixed)
+    >>> found.fraction, round(found.standard_uncertainty, 4), found.fraction_status.name
+    (0.25, 0.0127, 'DETERMINED')
+    """
+    if quantity not in ("dry_bulb", "humidity_ratio", "specific_enthalpy", "tracer_concentration"):
+        raise ValueError(f"quantity must be a dry bulb, humidity ratio, specific enthalpy or tracer, not {quantity!r}")
+    readings = (("outdoor", outdoor), ("returned", returned), ("mixed", mixed))
+    parts = [part for label, reading in readings for part in reading_parts(label, reading)]
+    chosen = ("quantity", quantity_code(quantity))
+    return run("mixing.outdoor_air_from_readings", OutdoorAirFraction, chosen, *parts, ("acceptable", acceptable))
+
+
+def outdoor_air_from_air(
+    *,
+    quantity: str,
+    outdoor: MeasuredAir,
+    returned: MeasuredAir,
+    mixed: MeasuredAir,
+    pressure: ArrayLike,
+    acceptable: ArrayLike = 0.05,
+    formulation: Formulation = "real_gas",
+) -> OutdoorAirFraction[Any]:
+    """The same from measured states, by enthalpy or humidity ratio, with the uncertainty that temperature and humidity sensors leave in it.
+
+    Parameters
+    ----------
+    quantity : {'humidity_ratio', 'specific_enthalpy'}
+        By what.
+    outdoor, returned, mixed : MeasuredAir
+        The readings of air without condensate, or columns of them.
+    pressure : float or array_like
+        Pa.
+    acceptable : float or array_like
+        Standard uncertainty of the fraction up to which it counts as determined.
+    formulation : {'real_gas', 'ideal_gas', 'helmholtz'}
+        Formulation.
+
+    Returns
+    -------
+    OutdoorAirFraction
+
+    Raises
+    ------
+    ValueError
+        Another quantity.
+    NotFiniteError, OutOfRangeError, StateError
+        Readings that make no state.
+    """
+    if quantity not in ("humidity_ratio", "specific_enthalpy"):
+        raise ValueError(f"quantity must be a humidity ratio or specific enthalpy, not {quantity!r}")
+    airs = (("outdoor", outdoor), ("returned", returned), ("mixed", mixed))
+    parts = [part for label, air in airs for part in air_parts(label, air)]
+    return run(
+        "mixing.outdoor_air_from_air",
+        OutdoorAirFraction,
+        formulation_code(formulation),
+        ("quantity", quantity_code(quantity)),
+        *parts,
+        ("pressure", pressure),
+        ("acceptable", acceptable),
+    )
+
+
+def outdoor_air_from_flows(
+    *, outdoor: Reading, other: Reading, other_is: OtherFlow = "total", acceptable: ArrayLike = 0.05
+) -> OutdoorAirFraction[Any]:
+    """The outdoor-air fraction from measured dry-air flows.
+
+    Parameters
+    ----------
+    outdoor, other : Reading
+        kg/s.
+    other_is : {'total', 'recirculated'}
+        Whether the other flow is that of all the air, or what outdoor air mixes with.
+    acceptable : float or array_like
+        Standard uncertainty of the fraction up to which it counts as determined.
+
+    Returns
+    -------
+    OutdoorAirFraction
+
+    Raises
+    ------
+    NotFiniteError, OutOfRangeError
+        A flow.
+    """
+    parts = reading_parts("outdoor", outdoor) + reading_parts("other", other)
+    chosen = code(_OTHER, other_is, "other_is")
+    return run("mixing.outdoor_air_from_flows", OutdoorAirFraction, *parts, chosen, ("acceptable", acceptable))
+
+
+@overload
+def outdoor_air_for_temperature(
+    *, outdoor: MoistAir[float], returned: MoistAir[float], wanted_temperature: float, least: float = ..., most: float = ...
+) -> Blend[float]: ...
+@overload
+def outdoor_air_for_temperature(
+    *,
+    outdoor: MoistAir[Any],
+    returned: MoistAir[Any],
+    wanted_temperature: ArrayLike,
+    least: ArrayLike = ...,
+    most: ArrayLike = ...,
+) -> Blend[Array]: ...
+def outdoor_air_for_temperature(
+    *,
+    outdoor: MoistAir[Any],
+    returned: MoistAir[Any],
+    wanted_temperature: ArrayLike,
+    least: ArrayLike = 0.0,
+    most: ArrayLike = 1.0,
+) -> Blend[Any]:
+    """The outdoor-air fraction that mixes to a wanted temperature, or comes nearest to it within the limits, with moisture and fog.
+
+    Parameters
+    ----------
+    outdoor, returned : MoistAir
+        The states.
+    wanted_temperature : float or array_like
+        Mixed dry bulb, °C.
+    least, most : float or array_like
+        Limits of the outdoor-air fraction.
+
+    Returns
+    -------
+    Blend
+
+    Raises
+    ------
+    ProcessError
+        Different formulations or pressures.
+    InfeasibleError
+        Limits the wrong way round.
+    NotFiniteError, OutOfRangeError
+        The temperature or a limit.
+
+    Examples
+    --------
+    >>> from moistair import MoistAir
+    >>> from moistair.process import mixing
+    >>> cold = MoistAir(dry_bulb=5.0, relative_humidity=0.7, pressure=101_325.0)
+    >>> room = MoistAir(dry_bulb=24.0, relative_humidity=0.45, pressure=101_325.0)
+    >>> blend = mixing.outdoor_air_for_temperature(outdoor=cold, returned=room, wanted_temperature=14.0)
+    >>> round(blend.fraction, 2), blend.reach.name
+    (0.53, 'REACHED')
+    """
+    expect(outdoor, MoistAir, "outdoor")
+    expect(returned, MoistAir, "returned")
+    return run(
+        "mixing.outdoor_air_for_temperature",
+        Blend,
+        ("outdoor", outdoor),
+        ("returned", returned),
+        ("wanted_temperature", wanted_temperature),
+        ("least", least),
+        ("most", most),
+    )
+
+
+@overload
+def with_outdoor_air(*, outdoor: MoistAir[float], returned: MoistAir[float], fraction: float) -> Mixed[float]: ...
+@overload
+def with_outdoor_air(*, outdoor: MoistAir[Any], returned: MoistAir[Any], fraction: ArrayLike) -> Mixed[Array]: ...
+def with_outdoor_air(*, outdoor: MoistAir[Any], returned: MoistAir[Any], fraction: ArrayLike) -> Mixed[Any]:
+    """Mixes so much outdoor air with return air: 1 kg/s of dry air of the mixture.
+
+    Parameters
+    ----------
+    outdoor, returned : MoistAir
+        The states.
+    fraction : float or array_like
+        Outdoor-air fraction of the dry air.
+
+    Returns
+    -------
+    Mixed
+
+    Raises
+    ------
+    ProcessError
+        Different formulations or pressures.
+    NotFiniteError, OutOfRangeError
+        The fraction.
+    """
+    expect(outdoor, MoistAir, "outdoor")
+    expect(returned, MoistAir, "returned")
+    return run(
+        "mixing.with_outdoor_air", Mixed, ("outdoor", outdoor), ("returned", returned), ("fraction", fraction)
+    )
