@@ -606,8 +606,8 @@ fn economizer() {
                 assert_eq!(decision.reason, decided.reason.code());
                 assert_eq!(decision.enabled != 0, decided.enabled);
                 compared += 1;
-                // SAFETY: valid places.
                 let [warm, room] = [t, 24.0].map(|t| {
+                    // SAFETY: valid places.
                     output(blank::<moistair_state>(), |out| unsafe {
                         moistair_from_dry_bulb(t, MOISTAIR_RELATIVE_HUMIDITY, 0.5, basis, out, null_mut())
                     })

@@ -7,9 +7,9 @@ use crate::process::mixing::outdoor_air::{Blend, FractionLimits};
 use crate::{Basis, MoistAir, SpecificEnthalpy, Temperature};
 
 processes! {
-    1500 "economizer.coil_load": (air: MoistAir, supply: Supply) -> CoilLoad { coil_load(&air, supply)? }
-    1501 "economizer.enthalpy_limit": (pressure: Basis) -> "enthalpy_limit" SpecificEnthalpy { enthalpy_limit(pressure)? }
-    1502 "economizer.outdoor_air":
+    1900 "economizer.coil_load": (air: MoistAir, supply: Supply) -> CoilLoad { coil_load(&air, supply)? }
+    1901 "economizer.enthalpy_limit": (pressure: Basis) -> "enthalpy_limit" SpecificEnthalpy { enthalpy_limit(pressure)? }
+    1902 "economizer.outdoor_air":
         (enabled: Flag, outdoor: MoistAir, returned: MoistAir, wanted_temperature: Temperature, least: f64, most: f64) -> Blend {
         outdoor_air(enabled.0, &outdoor, &returned, wanted_temperature, FractionLimits { least, most })?
     }
