@@ -407,6 +407,10 @@ fn what_binds() {
     assert_eq!(binding(&at(26.0, 0.95, site), bypass(0.1, 4.0)), Some(Quantity::HumidityRatio));
     assert_eq!(binding(&at(9.5, 0.97, site), bypass(0.3, -10.0)), Some(Quantity::LeavingTemperature));
     assert_eq!(binding(&target, bypass(1.0, 4.0)), Some(Quantity::BypassFactor));
+    // Dry air to dry air: no number without a meaning in the error.
+    let dry = at(20.0, 0.0, site);
+    let error = reheat::with_coil(&stream(dry, 1.0), &dry, bypass(0.1, 4.0), DRAIN).unwrap_err();
+    assert!(matches!(error, Error::Infeasible { max, .. } if !max.is_nan()), "{error:?}");
 }
 
 /// With one bypass factor and no limit, a target on the line of the coil needs no reheat: by_bypass_factor there and back.

@@ -102,7 +102,9 @@ impl<S: Scalar> Curve<S> {
         let w1 = self.entering.1;
         let at_surface = (self.target_ratio - self.bypass * w1) / (one - self.bypass);
         if self.bypass > zero && at_surface <= zero {
-            return Err(infeasible(Quantity::BypassFactor, self.bypass, zero, self.target_ratio / w1));
+            // Dry air stays dry, whatever passes.
+            let most = if w1 > zero { self.target_ratio / w1 } else { zero };
+            return Err(infeasible(Quantity::BypassFactor, self.bypass, zero, most));
         }
         let celsius = self.saturation_temperature(at_surface)?;
         if celsius < self.coldest {
