@@ -324,6 +324,21 @@
 // Conductance of the water side of a coil over that of its air side [1].
 #define MOISTAIR_CONDUCTANCE_RATIO 109
 
+// Vapor over all of the water in wet steam, by mass [1].
+#define MOISTAIR_STEAM_QUALITY 110
+
+// Absolute pressure of steam [Pa].
+#define MOISTAIR_STEAM_PRESSURE 111
+
+// Temperature of superheated steam [°C].
+#define MOISTAIR_STEAM_TEMPERATURE 112
+
+// (t1 - t2) over the drive of an indirect evaporative cooler [1].
+#define MOISTAIR_INDIRECT_EFFECTIVENESS 113
+
+// Power of a pump, which ends as heat in its water [W].
+#define MOISTAIR_PUMP_HEAT 114
+
 // Dry air and water vapor as a virial mixture after IAPWS G8-10: the default.
 #define MOISTAIR_REAL_GAS 0
 
@@ -393,8 +408,44 @@
 // A wetted medium evaporates water of a given temperature.
 #define MOISTAIR_WATER_AT_GIVEN 1
 
+// The air takes up water of the washer, or none.
+#define MOISTAIR_HUMIDIFIES 0
+
+// Vapor of the air condenses on the water.
+#define MOISTAIR_DEHUMIDIFIES 1
+
+// Steam is superheated, or saturated without water.
+#define MOISTAIR_STEAM_SUPERHEATED 0
+
+// Steam carries water.
+#define MOISTAIR_STEAM_WET 1
+
 // Most streams that one call takes.
 #define MOISTAIR_MOST_STREAMS 16
+
+// The effectiveness of an indirect cooler counts toward the wet bulb of the secondary air.
+#define MOISTAIR_EFFECTIVENESS_OF_WET_BULB 0
+
+// It counts toward the dew point of the secondary air.
+#define MOISTAIR_EFFECTIVENESS_OF_DEW_POINT 1
+
+// Water evaporates.
+#define MOISTAIR_EVAPORATING 0
+
+// The air enters saturated: nothing evaporates but by the heat of pump and make-up.
+#define MOISTAIR_ALREADY_SATURATED 1
+
+// The primary air is cooled and stays dry.
+#define MOISTAIR_INDIRECT_COOLING 0
+
+// The secondary air is no colder than the primary where it is wet: nothing happens.
+#define MOISTAIR_INDIRECT_NO_DRIVE 1
+
+// Water condenses out of the primary air.
+#define MOISTAIR_INDIRECT_CONDENSING 2
+
+// The same below the melting temperature: frost, which no steady state describes.
+#define MOISTAIR_INDIRECT_FROSTING 3
 
 // Merkel integral: eight points of Gauss and Legendre.
 #define MOISTAIR_QUADRATURE_GAUSS_LEGENDRE 0
@@ -988,6 +1039,58 @@ typedef struct {
     double carried;
 } moistair_humidified;
 
+// How much steam air takes up.
+typedef struct {
+    // Flow at which the air first saturates, 0 where it enters saturated; infinite where it never does [kg/s].
+    double up_to;
+    // Flow from which on it is no longer saturated; infinite where there is none [kg/s].
+    double unsaturated_from;
+} moistair_steam_absorption;
+
+// Steam at a pressure.
+typedef struct {
+    // [°C]
+    double temperature;
+    // Above the temperature of boiling; 0 where it is wet [K].
+    double superheat;
+    // Vapor over all of it by mass; 1 where it is superheated [1].
+    double quality;
+    // MOISTAIR_STEAM_SUPERHEATED or MOISTAIR_STEAM_WET.
+    int32_t condition;
+    // 0.
+    int32_t reserved;
+} moistair_throttled_steam;
+
+// A washer and its water.
+typedef struct {
+    // Water sprayed [kg/s].
+    double water;
+    // Its temperature, 0 to 200 [°C].
+    double temperature;
+    // How far the air comes toward the temperature of the water that leaves, 0 to 1 [1].
+    double effectiveness;
+    // Power of the pump [W].
+    double pump_heat;
+    // Droplets that pass the eliminators over the water sprayed, 0 to 0.05 [1].
+    double carry_over_fraction;
+} moistair_washer;
+
+// What a washer did.
+typedef struct {
+    // The air with its books.
+    moistair_humidified air;
+    // Water that falls back [kg/s].
+    double leaving_water;
+    // Its temperature [°C].
+    double leaving_water_temperature;
+    // What the water gains, its pump counted; negative where the air cools it [W].
+    double heat_to_water;
+    // MOISTAIR_HUMIDIFIES or MOISTAIR_DEHUMIDIFIES.
+    int32_t moistening;
+    // 0.
+    int32_t reserved;
+} moistair_washed;
+
 // Whether heat and water close over a process.
 typedef struct {
     // Heat out less heat in less heat exchanged [W].
@@ -1065,6 +1168,82 @@ typedef struct {
     // Range over range and approach [1]; NaN without either.
     double effectiveness;
 } moistair_tower_balance;
+
+// A direct evaporative cooler, or a humidifier of wetted media, with its circulating water.
+typedef struct {
+    // Toward the temperature of the circulating water, 0 to 1 [1].
+    double saturation_effectiveness;
+    // Water over the medium [kg/s].
+    double circulating;
+    // Power of the pump [W].
+    double pump_heat;
+    // Temperature of the make-up, 0 to 200, read for MOISTAIR_WATER_AT_GIVEN only [°C].
+    double make_up_temperature;
+    // Carry-over and cycles of concentration.
+    moistair_water_treatment treatment;
+    // Make-up as warm as the circulating water, MOISTAIR_WATER_AT_WET_BULB, or MOISTAIR_WATER_AT_GIVEN.
+    int32_t make_up;
+    // 0.
+    int32_t reserved;
+} moistair_direct_cooler;
+
+// What a direct evaporative cooler did.
+typedef struct {
+    // The air with its books.
+    moistair_humidified air;
+    // Of the circulating water [°C].
+    double water_temperature;
+    // Evaporation, carry-over, bleed and make-up.
+    moistair_water_use water;
+    // MOISTAIR_EVAPORATING or MOISTAIR_ALREADY_SATURATED.
+    int32_t condition;
+    // 0.
+    int32_t reserved;
+} moistair_direct_cooled;
+
+// An indirect evaporative cooler.
+typedef struct {
+    // How far the primary air is cooled, if it stays dry: 0 to 2 toward the wet bulb, 0 to 1 toward the dew point [1].
+    double effectiveness;
+    // Relative humidity over liquid at which the secondary air leaves, 0 to 1 [1].
+    double exhaust_humidity;
+    // Power of the pump [W].
+    double pump_heat;
+    // Of the water that evaporates, 0 to 200, read for MOISTAIR_WATER_AT_GIVEN only [°C].
+    double water_temperature;
+    // MOISTAIR_EFFECTIVENESS_OF_WET_BULB or MOISTAIR_EFFECTIVENESS_OF_DEW_POINT.
+    int32_t effectiveness_of;
+    // MOISTAIR_WATER_AT_WET_BULB, of the secondary air, or MOISTAIR_WATER_AT_GIVEN.
+    int32_t water;
+} moistair_indirect_cooler;
+
+// What an indirect evaporative cooler did.
+typedef struct {
+    // The primary air that leaves, without its condensate.
+    moistair_stream primary;
+    // Heat and water into the primary air, none of them above zero.
+    moistair_exchange primary_exchange;
+    // The secondary air with its books.
+    moistair_humidified secondary;
+    // Heat through the wall [W].
+    double heat;
+    // Water that drains from the primary side [kg/s].
+    double condensate;
+    // MOISTAIR_INDIRECT_COOLING, _NO_DRIVE, _CONDENSING or _FROSTING.
+    int32_t condition;
+    // 0.
+    int32_t reserved;
+} moistair_indirect_cooled;
+
+// What a two-stage evaporative cooler did.
+typedef struct {
+    // The first stage.
+    moistair_indirect_cooled indirect;
+    // The second stage, on the primary air that the first leaves.
+    moistair_direct_cooled direct;
+    // Water that evaporates in both [kg/s].
+    double evaporated;
+} moistair_two_stage_cooled;
 
 // The least air that can do a duty.
 typedef struct {
@@ -2012,6 +2191,59 @@ int32_t moistair_humidify_steam_limit(const moistair_stream *entering,
                                       double *limit,
                                       moistair_error *error);
 
+// The steam flow at which the air first saturates, and that from which on it no longer is: superheated steam may lead into saturation and out
+// of it again. Between the two a part of the steam condenses.
+//
+// entering: the stream that enters; steam_enthalpy: specific enthalpy of the steam [J/kg], 251e3 to 4e6; absorption: output; error: may be
+// null.
+// Returns 0, 1xx, 2xx, 207.
+int32_t moistair_humidify_steam_absorption(const moistair_stream *entering,
+                                           double steam_enthalpy,
+                                           moistair_steam_absorption *absorption,
+                                           moistair_error *error);
+
+// Specific enthalpy of dry saturated steam of a pressure, on the datum of liquid water at the triple point.
+//
+// pressure: absolute [Pa], 1e3 to 1.6e6; specific_enthalpy: output [J/kg]; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_steam_saturated(double pressure, double *specific_enthalpy, moistair_error *error);
+
+// Specific enthalpy of wet steam, h = h_f + x h_fg.
+//
+// pressure: absolute [Pa], 1e3 to 1.6e6; quality: x, vapor over all of it by mass [1]; specific_enthalpy: output [J/kg]; error: may be null.
+// Returns 0, 1xx, 2xx.
+int32_t moistair_steam_wet(double pressure,
+                           double quality,
+                           double *specific_enthalpy,
+                           moistair_error *error);
+
+// Specific enthalpy of superheated steam.
+//
+// temperature: [°C], to 400; pressure: absolute [Pa], 1e3 to 1.6e6; specific_enthalpy: output [J/kg]; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (below the temperature of boiling).
+int32_t moistair_steam_superheated(double temperature,
+                                   double pressure,
+                                   double *specific_enthalpy,
+                                   moistair_error *error);
+
+// Steam after throttling, such as to the pressure of the duct: its enthalpy is kept.
+//
+// specific_enthalpy: of the steam [J/kg], 251e3 to 4e6; pressure: absolute, after it [Pa], 1e3 to 1.6e6; steam: output; error: may be null.
+// Returns 0, 1xx, 2xx, 301 (liquid, or hotter than 400 °C).
+int32_t moistair_steam_throttled(double specific_enthalpy,
+                                 double pressure,
+                                 moistair_throttled_steam *steam,
+                                 moistair_error *error);
+
+// Washes air with water of any temperature: below the dew point it takes water out of the air.
+//
+// entering: the stream that enters; washer: the washer; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301 (the water would freeze, is hotter than the air takes, or would all evaporate).
+int32_t moistair_humidify_wash(const moistair_stream *entering,
+                               const moistair_washer *washer,
+                               moistair_washed *done,
+                               moistair_error *error);
+
 // Sprays liquid water; what equilibrium does not evaporate is carried.
 //
 // entering: the stream that enters; water: [kg/s], 0 to 1e6; water_temperature: [°C], 0 to 200; done: output; error: may be null.
@@ -2141,6 +2373,37 @@ int32_t moistair_tower_with_leaving_air(const moistair_state *entering,
                                         moistair_water_treatment treatment,
                                         moistair_tower_balance *balance,
                                         moistair_error *error);
+
+// Cools and humidifies air over a wetted medium whose water circulates, with its pump, carry-over, bleed and make-up.
+//
+// entering: the stream that enters; cooler: the cooler; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301 (the water would freeze, more pump heat than the air takes, one cycle of concentration), 31x.
+int32_t moistair_evaporative_direct(const moistair_stream *entering,
+                                    const moistair_direct_cooler *cooler,
+                                    moistair_direct_cooled *done,
+                                    moistair_error *error);
+
+// Cools the primary air by a wetted secondary stream behind a wall, without moistening it.
+//
+// primary, secondary: the streams that enter; cooler: the cooler; done: output; error: may be null.
+// Returns 0, 1xx, 2xx, 207, 301 (the water would freeze, an effectiveness beyond the dew point of the secondary air, a secondary air that
+// cannot take the heat or leaves drier than it can), 31x.
+int32_t moistair_evaporative_indirect(const moistair_stream *primary,
+                                      const moistair_stream *secondary,
+                                      const moistair_indirect_cooler *cooler,
+                                      moistair_indirect_cooled *done,
+                                      moistair_error *error);
+
+// Cools the primary air indirectly, then directly.
+//
+// primary, secondary: the streams that enter; first: the indirect stage; second: the direct one; done: output; error: may be null.
+// Returns as either stage does.
+int32_t moistair_evaporative_two_stage(const moistair_stream *primary,
+                                       const moistair_stream *secondary,
+                                       const moistair_indirect_cooler *first,
+                                       const moistair_direct_cooler *second,
+                                       moistair_two_stage_cooled *done,
+                                       moistair_error *error);
 
 // L/G: the entering water over the dry air.
 //

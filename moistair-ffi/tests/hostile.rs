@@ -645,7 +645,13 @@ fn no_argument_upsets_an_export() {
         let first = c.stream(); let second = c.stream(); let cooler = indirect(c);
         (c.pointer(&first), c.pointer(&second), c.pointer(&cooler), out, e));
     run!(exercise moistair_evaporative_two_stage: |c, out, e|
-        let first = c.stream(); let second = c.stream(); let (stage, next) = (indirect(c), direct(c));
+        let first = c.stream(); let second = c.stream(); let (mut stage, mut next) = (indirect(c), direct(c));
+        if c.below(2) == 0 {
+            // Hardly any ten numbers of which one in eight is wild make two stages.
+            (stage.effectiveness, stage.exhaust_humidity, stage.pump_heat, stage.effectiveness_of) = (0.6, 1.0, 50.0, 0);
+            (next.saturation_effectiveness, next.circulating, next.pump_heat, next.treatment) =
+                (0.8, 1.0, 50.0, moistair_water_treatment { drift_fraction: 0.0, cycles_of_concentration: 3.0 });
+        }
         (c.pointer(&first), c.pointer(&second), c.pointer(&stage), c.pointer(&next), out, e));
     run!(exercise moistair_mixing_adiabatic: |c, out, e| let s = [c.wet_stream(), c.wet_stream()];
         (c.pointer(&s).cast(), [1, 2, 2, usize::MAX][c.below(4) as usize], out, e));
