@@ -9,7 +9,7 @@ import moistair
 import numpy as np
 import pytest
 from moistair import MoistAir, account, signal
-from moistair.process import AirStream, AirWithCondensate, WetStream, books, coil, compression, humidify, mixing, reheat, sensible, tower
+from moistair.process import AirStream, AirWithCondensate, WetStream, books, coil, compression, evaporative, humidify, mixing, reheat, sensible, tower
 from moistair.process import liquid_water_enthalpy
 from support import FORMULATIONS, FUZZ, SEA_LEVEL, SECOND, odd_numbers, random
 
@@ -65,11 +65,13 @@ def arguments(function, rng, count):
             whole = streams(rng, count)
             of_state = (tower.with_leaving_air, coil.apparatus_dew_point, coil.apparatus_dew_points)
             positional.append(whole.air if function in of_state else whole)
+        elif name in ("primary", "secondary"):
+            positional.append(streams(rng, count))
         elif name == "part":
             keywords[name] = streams(rng, count)
         elif name in state_names:
             keywords[name] = streams(rng, count).air
-        elif name in ("freezing", "formulation", "arrangement", "measured", "quadrature", "transfer"):
+        elif name in ("freezing", "formulation", "arrangement", "measured", "quadrature", "transfer", "effectiveness_of"):
             continue
         elif name == "rows":
             keywords[name] = 3
@@ -80,7 +82,7 @@ def arguments(function, rng, count):
 
 PROCESSES = [
     getattr(module, name)
-    for module in (coil, compression, humidify, mixing, reheat, sensible, tower)
+    for module in (coil, compression, evaporative, humidify, mixing, reheat, sensible, tower)
     for name in module.__all__
     if name[0].islower()
 ]

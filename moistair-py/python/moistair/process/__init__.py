@@ -12,7 +12,7 @@ Results are estimates for engineering; they are not a safety function. Towers, s
 Legionella, wet surfaces grow mould, cold coils freeze, steam burns: local codes and licensed practice govern.
 """
 
-from . import books, coil, compression, humidify, mixing, reheat, sensible, sequence, tower
+from . import books, coil, compression, evaporative, humidify, mixing, reheat, sensible, sequence, tower
 from ._streams import AirStream, AirWithCondensate, Exchange, WetStream, liquid_water_enthalpy
 
 __all__ = [
@@ -23,6 +23,8 @@ __all__ = [
     "books",
     "coil",
     "compression",
+    "evaporative",
+    "evaporative",
     "humidify",
     "liquid_water_enthalpy",
     "mixing",
