@@ -149,19 +149,19 @@ def test_superheated_and_throttled_steam(tally, water):
         saturated = saturated_steam(steam_pressure=p)
         boiling = throttled_steam(steam_enthalpy=wet_steam(steam_pressure=p, quality=0.9), pressure=p)
         beside = water.vapor_beside(boiling.temperature + ZERO_CELSIUS, water.liquid)
-        tally.within("pressure of boiling", boiling.temperature, p, beside.pressure / p - 1.0, 4e-9)
+        tally.within("pressure of boiling", boiling.temperature, p, beside.pressure / p - 1.0, 2e-8)
         tally.within("enthalpy of saturated steam, J/kg", boiling.temperature, p, saturated - beside.enthalpy, 1e-2)
         liquid = water.liquid(boiling.temperature + ZERO_CELSIUS, p)
         wet = liquid.enthalpy + 0.9 * (beside.enthalpy - liquid.enthalpy)
-        tally.within("enthalpy of wet steam, J/kg", boiling.temperature, p, wet_steam(steam_pressure=p, quality=0.9) - wet, 2e-2)
+        tally.within("enthalpy of wet steam, J/kg", boiling.temperature, p, wet_steam(steam_pressure=p, quality=0.9) - wet, 1e-2)
         for t in np.linspace(boiling.temperature + 0.01, 400.0, 15):
             own = water.gas(t + ZERO_CELSIUS, p)
             enthalpy = superheated_steam(steam_temperature=t, steam_pressure=p)
-            tally.within("enthalpy, J/kg", t, p, enthalpy - own.enthalpy, 1e-3)
+            tally.within("enthalpy, J/kg", t, p, enthalpy - own.enthalpy, 4e-3)
             duct = throttled_steam(steam_enthalpy=enthalpy, pressure=min(p, SEA_LEVEL))
             after = water.gas(duct.temperature + ZERO_CELSIUS, min(p, SEA_LEVEL))
             assert duct.quality == 1.0
-            tally.within("throttled, J/kg", duct.temperature, p, after.enthalpy - own.enthalpy, 1e-2)
+            tally.within("throttled, J/kg", duct.temperature, p, after.enthalpy - own.enthalpy, 4e-3)
     tally.finish("superheated steam", 13 * (3 + 2 * 15))
 
 
