@@ -9,7 +9,7 @@ import moistair
 import numpy as np
 import pytest
 from moistair import MoistAir, account, signal
-from moistair.process import AirStream, AirWithCondensate, WetStream, books, coil, compression, desiccant, economizer, humidify, mixing
+from moistair.process import AirStream, AirWithCondensate, WetStream, books, coil, compression, desiccant, economizer, evaporative, humidify, mixing
 from moistair.process import liquid_water_enthalpy, reheat, room, sensible, tower
 from moistair.process.measured import MeasuredAir, Reading
 from support import FORMULATIONS, FUZZ, SEA_LEVEL, SECOND, odd_numbers, random
@@ -81,6 +81,8 @@ def arguments(function, rng, count):
             of_state = (tower.with_leaving_air, coil.apparatus_dew_point, coil.apparatus_dew_points)
             of_state += (room.limiting_line, room.least_reheat)
             keywords[name] = whole.air if function in of_state else whole
+        elif name in ("primary", "secondary"):
+            keywords[name] = streams(rng, count)
         elif name in ("part", "supply", "regeneration"):
             whole = streams(rng, count)
             keywords[name] = whole.air if function is desiccant.effectiveness_between else whole
@@ -94,7 +96,7 @@ def arguments(function, rng, count):
             keywords[name] = streams(rng, count).air
         elif name == "quantity":
             keywords[name] = "specific_enthalpy" if function is mixing.outdoor_air_from_air else "dry_bulb"
-        elif name in ("other_is", "freezing", "formulation", "arrangement", "measured", "quadrature", "transfer", "source", "characteristic", "carry_over", "heater"):
+        elif name in ("other_is", "freezing", "formulation", "arrangement", "measured", "quadrature", "transfer", "source", "characteristic", "carry_over", "heater", "effectiveness_of"):
             continue
         elif name == "rows":
             keywords[name] = 3
@@ -105,7 +107,7 @@ def arguments(function, rng, count):
 
 PROCESSES = [
     getattr(module, name)
-    for module in (coil, compression, desiccant, economizer, humidify, mixing, reheat, room, sensible, tower)
+    for module in (coil, compression, desiccant, economizer, evaporative, humidify, mixing, reheat, room, sensible, tower)
     for name in module.__all__
     if name[0].islower()
 ]

@@ -14,7 +14,7 @@ import numpy as np
 import pytest
 from moistair import MoistAir
 from moistair.process import AirWithCondensate, liquid_water_enthalpy
-from moistair.process.humidify import saturated_steam_enthalpy
+from moistair.process.humidify import saturated_steam, saturated_steam_enthalpy, superheated_steam, throttled_steam, wet_steam
 from pure_substances import DRY_AIR, WATER, ice
 from support import SEA_LEVEL
 
@@ -142,6 +142,29 @@ def test_saturated_steam(tally, water):
 
 
 @pytest.mark.filterwarnings("ignore:Metastable ice")
+@both_packages
+def test_superheated_and_throttled_steam(tally, water):
+    """IAPWS-95 vapor up to 400 °C and 1.6 MPa; throttled, the temperature at which it has that enthalpy."""
+    for p in np.geomspace(1e3, 1.6e6, 13):
+        saturated = saturated_steam(steam_pressure=p)
+        boiling = throttled_steam(steam_enthalpy=wet_steam(steam_pressure=p, quality=0.9), pressure=p)
+        beside = water.vapor_beside(boiling.temperature + ZERO_CELSIUS, water.liquid)
+        tally.within("pressure of boiling", boiling.temperature, p, beside.pressure / p - 1.0, 2e-8)
+        tally.within("enthalpy of saturated steam, J/kg", boiling.temperature, p, saturated - beside.enthalpy, 1e-2)
+        liquid = water.liquid(boiling.temperature + ZERO_CELSIUS, p)
+        wet = liquid.enthalpy + 0.9 * (beside.enthalpy - liquid.enthalpy)
+        tally.within("enthalpy of wet steam, J/kg", boiling.temperature, p, wet_steam(steam_pressure=p, quality=0.9) - wet, 1e-2)
+        for t in np.linspace(boiling.temperature + 0.01, 400.0, 15):
+            own = water.gas(t + ZERO_CELSIUS, p)
+            enthalpy = superheated_steam(steam_temperature=t, steam_pressure=p)
+            tally.within("enthalpy, J/kg", t, p, enthalpy - own.enthalpy, 4e-3)
+            duct = throttled_steam(steam_enthalpy=enthalpy, pressure=min(p, SEA_LEVEL))
+            after = water.gas(duct.temperature + ZERO_CELSIUS, min(p, SEA_LEVEL))
+            assert duct.quality == 1.0
+            tally.within("throttled, J/kg", duct.temperature, p, after.enthalpy - own.enthalpy, 4e-3)
+    tally.finish("superheated steam", 13 * (3 + 2 * 15))
+
+
 @both_packages
 def test_ice(tally, water):
     """IAPWS R10-06, and IAPWS-95 vapor in equilibrium with it."""

@@ -20,6 +20,7 @@ from moistair.process import (
     compression,
     desiccant,
     economizer,
+    evaporative,
     humidify,
     liquid_water_enthalpy,
     mixing,
@@ -46,8 +47,8 @@ def state(t, rh, **more):
 
 
 WATER = {"hot_water": 35.0, "cold_water": 27.0, "drift_fraction": 1e-4, "cycles_of_concentration": 4.0}
+CIRCULATING = {"circulating_flow": 0.5, "drift_fraction": 1e-4, "cycles_of_concentration": 3.0}
 
-#: Each process as a function of three columns: dry bulb, relative humidity, and a share between 0 and 1.
 def reading(value, uncertainty):
     return Reading(value, standard_uncertainty=uncertainty)
 
@@ -66,6 +67,7 @@ def decision(t, rh):
     return many
 
 
+#: Each process as a function of three columns: dry bulb, relative humidity, and a share between 0 and 1.
 CASES = {
     "stream": lambda t, rh, x: stream(t, rh, 1.0 + x),
     "stream.volume": lambda t, rh, x: AirStream.from_volume_flow(state(t, rh), volume_flow=1.0 + x),
@@ -235,6 +237,35 @@ CASES = {
     "humidify.evaporative.given": lambda t, rh, x: humidify.evaporative(
         stream(t, rh, 1.0), saturation_effectiveness=0.5, water_temperature=10.0 + x
     ),
+    "humidify.steam_absorption": lambda t, rh, x: humidify.steam_absorption(
+        stream(t, rh, 1.0), steam_enthalpy=2.7e6 + 3e5 * x
+    ),
+    "humidify.saturated_steam": lambda t, rh, x: humidify.saturated_steam(steam_pressure=2e5 + 1e5 * x + 0 * (t + rh)),
+    "humidify.wet_steam": lambda t, rh, x: humidify.wet_steam(steam_pressure=2e5 + 1e5 * x + 0 * t, quality=0.5 + rh / 2),
+    "humidify.superheated_steam": lambda t, rh, x: humidify.superheated_steam(
+        steam_temperature=170.0 + t + 0 * rh, steam_pressure=2e5 + 1e5 * x
+    ),
+    "humidify.throttled_steam": lambda t, rh, x: humidify.throttled_steam(
+        steam_enthalpy=2.6e6 + 2e5 * x, pressure=1e5 + 1e3 * t + 0 * rh
+    ),
+    "humidify.wash": lambda t, rh, x: humidify.wash(
+        stream(t, rh, 2.0), water_flow=2.0, water_temperature=8.0 + 10.0 * x, effectiveness=0.8, pump_heat=300.0
+    ),
+    "evaporative.direct": lambda t, rh, x: evaporative.direct(
+        stream(t, rh, 1.0), saturation_effectiveness=0.1 + 0.9 * x, make_up_temperature=12.0, pump_heat=100.0, **CIRCULATING
+    ),
+    "evaporative.direct.plain": lambda t, rh, x: evaporative.direct(
+        stream(t, rh, 1.0), saturation_effectiveness=0.1 + 0.9 * x, **CIRCULATING
+    ),
+    "evaporative.indirect": lambda t, rh, x: evaporative.indirect(
+        stream(t, rh, 1.0), stream(t - 5.0, 0.4, 3.0), effectiveness=x, exhaust_humidity=1.0
+    ),
+    "evaporative.indirect.dew_point": lambda t, rh, x: evaporative.indirect(
+        stream(t, rh, 1.0), stream(t, rh, 3.0), effectiveness=0.5 * x, effectiveness_of="dew_point", exhaust_humidity=1.0
+    ),
+    "evaporative.two_stage": lambda t, rh, x: evaporative.two_stage(
+        stream(t, rh, 1.0), stream(t, rh, 3.0), effectiveness=x, exhaust_humidity=1.0, saturation_effectiveness=0.8, **CIRCULATING
+    ),
     "tower.water_use": lambda t, rh, x: tower.water_use(
         evaporation=x + 0 * (t + rh), circulating_flow=20.0, drift_fraction=1e-4, cycles_of_concentration=4.0
     ),
@@ -325,7 +356,7 @@ def test_rows_are_scalar_calls_bit_for_bit(name):
 def test_every_process_is_covered():
     public = {
         f"{module.__name__.rpartition('.')[2]}.{name}"
-        for module in (books, coil, desiccant, humidify, mixing, reheat, room, sensible, tower)
+        for module in (books, coil, desiccant, evaporative, humidify, mixing, reheat, room, sensible, tower)
         for name in module.__all__
         if name[0].islower()
     }

@@ -11,7 +11,7 @@ use super::water;
 const DENSITY_STEPS: usize = 2;
 
 /// Steam at `celsius`, `pascals`; on the side of the liquid no result has a meaning. The terms that shape the critical region (see
-/// `water.rs`) leave less than 1e-10 of its energy here.
+/// `water.rs`) leave less than 1e-9 of its energy here.
 pub fn at<R: Real>(celsius: R, pascals: R) -> PurePhase<R> {
     at_after::<R, DENSITY_STEPS>(celsius, pascals)
 }

@@ -6,6 +6,8 @@ use crate::process::evaporative::{
     DirectCooled, DirectCooler, DirectStatus, IndirectCooled, IndirectCooler, IndirectEffectiveness, IndirectStatus,
     TwoStageCooled, direct, indirect, two_stage,
 };
+use crate::process::humidify::EvaporatingWater;
+use crate::{HeatFlow, RelativeHumidity};
 
 processes! {
     1700 "evaporative.direct": (entering: AirStream, cooler: DirectCooler) -> DirectCooled { direct(&entering, cooler)? }
@@ -34,12 +36,15 @@ arguments! {
     }
 }
 
-/// The first of two stages: its fields stand apart from those of the second.
+/// The first of two stages: its pump has a name of its own.
 struct First(IndirectCooler);
 
 impl Argument for First {
-    fn describe(walk: &mut Walk<'_>, name: &'static str) {
-        walk.within(name, |walk| IndirectCooler::describe(walk, ""));
+    fn describe(walk: &mut Walk<'_>, _: &'static str) {
+        IndirectEffectiveness::describe(walk, "effectiveness");
+        <RelativeHumidity as Argument>::describe(walk, "exhaust_humidity");
+        <HeatFlow as Argument>::describe(walk, "indirect_pump_heat");
+        EvaporatingWater::describe(walk, "water_temperature");
     }
 
     fn read(row: &mut Row<'_>) -> Outcome<Self> {

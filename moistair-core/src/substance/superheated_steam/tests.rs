@@ -7,7 +7,7 @@ use crate::checks::{Table, Tally};
 
 /// Saturation pressure, Pa, by Hyland and Wexler 1983: near enough for the edge of the domain.
 fn saturation(celsius: f64) -> f64 {
-    crate::saturation::hyland_wexler_liquid(celsius + ZERO_CELSIUS).0.exp()
+    Real::exp(crate::saturation::hyland_wexler_liquid(celsius + ZERO_CELSIUS).0)
 }
 
 /// What a few Newton steps leave of the enthalpy, J/kg, against many: 0 to 400 °C, 500 Pa to 1.6 MPa, up to saturation.
@@ -16,7 +16,7 @@ fn left_over<const STEPS: usize>() -> f64 {
     for celsius in (0..=400).map(f64::from) {
         let most = if celsius < 201.0 { saturation(celsius).min(1.6e6) } else { 1.6e6 };
         for share in 0..=20 {
-            let pascals = 500.0 * (most / 500.0).powf(f64::from(share) / 20.0);
+            let pascals = 500.0 * Real::exp(Real::ln(most / 500.0) * f64::from(share) / 20.0);
             let off =
                 at_after::<f64, STEPS>(celsius, pascals).enthalpy - at_after::<f64, 12>(celsius, pascals).enthalpy;
             worst = worst.max(off.abs());

@@ -1,4 +1,8 @@
-"""Humidifying by steam, by evaporating spray, and by wetted media.
+"""Humidifying by steam, by evaporating spray, in washers, and by wetted media.
+
+`saturated_steam`, `wet_steam` and `superheated_steam` give the enthalpy of what the plant delivers, `throttled_steam` what it is
+in the duct; `steam_absorption` says how much of it the air takes up. Wetted media with pump, bleed and carry-over: `evaporative`
+of `moistair.process`.
 
 Water systems can grow and spread Legionella; steam burns and stands under pressure; droplets and condensate in ducts grow
 mould: hygiene rules and local codes govern design and operation.
@@ -6,23 +10,36 @@ mould: hygiene rules and local codes govern design and operation.
 
 from __future__ import annotations
 
+import enum
 from dataclasses import dataclass
 from typing import Any, Generic, Literal, Union, overload
 
-from numpy.typing import ArrayLike
+import numpy as np
+from numpy.typing import ArrayLike, NDArray
 
 from .._rows import Array, Record, T, choice, expect, run
 from ._streams import AirStream, Exchange, WetStream
 
 __all__ = [
     "Humidified",
+    "Moistening",
+    "SteamAbsorption",
+    "SteamCondition",
+    "ThrottledSteam",
+    "Washed",
     "evaporative",
+    "saturated_steam",
     "saturated_steam_enthalpy",
     "spray",
     "steam",
+    "steam_absorption",
     "steam_limit",
     "steam_to_humidity_ratio",
     "steam_to_relative_humidity",
+    "superheated_steam",
+    "throttled_steam",
+    "wash",
+    "wet_steam",
 ]
 
 
@@ -46,6 +63,87 @@ class Humidified(Record, Generic[T]):
     exchange: Exchange[T]
     evaporated: T
     carried: T
+
+
+class SteamCondition(enum.IntEnum):
+    """Whether steam carries water."""
+
+    SUPERHEATED = 0
+    """Warmer than it boils at this pressure; saturated at the least."""
+    WET = 1
+    """Vapor and liquid."""
+
+
+class Moistening(enum.IntEnum):
+    """Whether a washer gives water to the air or takes it."""
+
+    HUMIDIFIES = 0
+    """The air takes up water, or none."""
+    DEHUMIDIFIES = 1
+    """Vapor of the air condenses on water below its dew point."""
+
+
+@dataclass(frozen=True, eq=False, init=False)
+class SteamAbsorption(Record, Generic[T]):
+    """How much steam air takes up. Between the two flows a part of it condenses.
+
+    Attributes
+    ----------
+    up_to : float or numpy.ndarray
+        Flow at which the air first saturates, kg/s: zero where it enters saturated, infinite where it never does.
+    unsaturated_from : float or numpy.ndarray
+        Flow from which on it is no longer saturated, kg/s; infinite where there is none.
+    """
+
+    up_to: T
+    unsaturated_from: T
+
+
+@dataclass(frozen=True, eq=False, init=False)
+class ThrottledSteam(Record, Generic[T]):
+    """Steam at a pressure.
+
+    Attributes
+    ----------
+    temperature : float or numpy.ndarray
+        °C.
+    superheat : float or numpy.ndarray
+        Above the temperature of boiling, K; zero where it is wet.
+    quality : float or numpy.ndarray
+        Vapor over all of it by mass; one where it is superheated.
+    condition : SteamCondition or numpy.ndarray
+        Superheated or wet; the code in an array, −1 without a result.
+    """
+
+    temperature: T
+    superheat: T
+    quality: T
+    condition: Union[SteamCondition, NDArray[np.int32]]
+
+
+@dataclass(frozen=True, eq=False, init=False)
+class Washed(Record, Generic[T]):
+    """What a washer did.
+
+    Attributes
+    ----------
+    air : Humidified
+        The air with its books: heat and water of the spray.
+    leaving_water : float or numpy.ndarray
+        Water that falls back, kg/s.
+    leaving_water_temperature : float or numpy.ndarray
+        Its temperature, °C.
+    heat_to_water : float or numpy.ndarray
+        What the water gains, its pump counted, W; negative where the air cools it.
+    moistening : Moistening or numpy.ndarray
+        Which way the water goes; the code in an array, −1 without a result.
+    """
+
+    air: Humidified[T]
+    leaving_water: T
+    leaving_water_temperature: T
+    heat_to_water: T
+    moistening: Union[Moistening, NDArray[np.int32]]
 
 
 @overload
@@ -74,6 +172,129 @@ def saturated_steam_enthalpy(*, steam_temperature: ArrayLike) -> Any:
     True
     """
     return run("humidify.saturated_steam_enthalpy", float, ("steam_temperature", steam_temperature))
+
+
+@overload
+def saturated_steam(*, steam_pressure: float) -> float: ...
+@overload
+def saturated_steam(*, steam_pressure: ArrayLike) -> Array: ...
+def saturated_steam(*, steam_pressure: ArrayLike) -> Any:
+    """Enthalpy of dry saturated steam of a pressure, J/kg, IAPWS-95, on the datum of liquid water at the triple point.
+
+    Steam burns, its pipes and vessels stand under pressure: codes for pressure equipment govern.
+
+    Parameters
+    ----------
+    steam_pressure : float or array_like
+        Absolute, Pa, 1e3 to 1.6e6. Gauges show the excess over the atmosphere.
+
+    Returns
+    -------
+    float or numpy.ndarray
+        J/kg; NaN where a row of an array is out of range.
+
+    Examples
+    --------
+    >>> from moistair.process import humidify
+    >>> round(humidify.saturated_steam(steam_pressure=4e5), -2)
+    2738100.0
+    """
+    return run("humidify.saturated_steam", float, ("steam_pressure", steam_pressure))
+
+
+@overload
+def wet_steam(*, steam_pressure: float, quality: float) -> float: ...
+@overload
+def wet_steam(*, steam_pressure: ArrayLike, quality: ArrayLike) -> Array: ...
+def wet_steam(*, steam_pressure: ArrayLike, quality: ArrayLike) -> Any:
+    """Enthalpy of wet steam, J/kg: h = h_f + x h_fg.
+
+    Parameters
+    ----------
+    steam_pressure : float or array_like
+        Absolute, Pa, 1e3 to 1.6e6.
+    quality : float or array_like
+        x, vapor over all of it by mass, 0 to 1.
+
+    Returns
+    -------
+    float or numpy.ndarray
+        J/kg; NaN where a row of an array has no result.
+
+    Raises
+    ------
+    NotFiniteError, OutOfRangeError
+        An input; so little vapor at low pressure is no steam to this library.
+    """
+    return run("humidify.wet_steam", float, ("steam_pressure", steam_pressure), ("quality", quality))
+
+
+@overload
+def superheated_steam(*, steam_temperature: float, steam_pressure: float) -> float: ...
+@overload
+def superheated_steam(*, steam_temperature: ArrayLike, steam_pressure: ArrayLike) -> Array: ...
+def superheated_steam(*, steam_temperature: ArrayLike, steam_pressure: ArrayLike) -> Any:
+    """Enthalpy of superheated steam, J/kg, IAPWS-95.
+
+    Parameters
+    ----------
+    steam_temperature : float or array_like
+        °C, to 400.
+    steam_pressure : float or array_like
+        Absolute, Pa, 1e3 to 1.6e6.
+
+    Returns
+    -------
+    float or numpy.ndarray
+        J/kg; NaN where a row of an array has no result.
+
+    Raises
+    ------
+    InfeasibleError
+        Below the temperature of boiling.
+    NotFiniteError, OutOfRangeError
+        An input.
+    """
+    arguments = ("steam_temperature", steam_temperature), ("steam_pressure", steam_pressure)
+    return run("humidify.superheated_steam", float, *arguments)
+
+
+@overload
+def throttled_steam(*, steam_enthalpy: float, pressure: float) -> ThrottledSteam[float]: ...
+@overload
+def throttled_steam(*, steam_enthalpy: ArrayLike, pressure: ArrayLike) -> ThrottledSteam[Array]: ...
+def throttled_steam(*, steam_enthalpy: ArrayLike, pressure: ArrayLike) -> ThrottledSteam[Any]:
+    """Steam after throttling, such as to the pressure of the duct: its enthalpy is kept.
+
+    Parameters
+    ----------
+    steam_enthalpy : float or array_like
+        J/kg.
+    pressure : float or array_like
+        Absolute, after it, Pa, 1e3 to 1.6e6.
+
+    Returns
+    -------
+    ThrottledSteam
+
+    Raises
+    ------
+    InfeasibleError
+        It would be liquid there, or hotter than 400 °C.
+    NotFiniteError, OutOfRangeError
+        An input.
+
+    Examples
+    --------
+    Saturated steam of 4 bar comes into the duct superheated by 31 K.
+
+    >>> from moistair.process import humidify
+    >>> steam = humidify.saturated_steam(steam_pressure=4e5)
+    >>> duct = humidify.throttled_steam(steam_enthalpy=steam, pressure=101_325.0)
+    >>> duct.condition.name, round(duct.superheat)
+    ('SUPERHEATED', 31)
+    """
+    return run("humidify.throttled_steam", ThrottledSteam, ("steam_enthalpy", steam_enthalpy), ("pressure", pressure))
 
 
 @overload
@@ -220,14 +441,44 @@ def steam_limit(entering: AirStream[Any], *, steam_enthalpy: ArrayLike) -> Any:
 
 
 @overload
+def steam_absorption(entering: AirStream[float], *, steam_enthalpy: float) -> SteamAbsorption[float]: ...
+@overload
+def steam_absorption(entering: AirStream[Any], *, steam_enthalpy: ArrayLike) -> SteamAbsorption[Array]: ...
+def steam_absorption(entering: AirStream[Any], *, steam_enthalpy: ArrayLike) -> SteamAbsorption[Any]:
+    """The steam flow at which the air first saturates, and that from which on it no longer is.
+
+    Not monotone: superheated steam may lead into saturation and out of it again, or miss it.
+
+    Parameters
+    ----------
+    entering : AirStream
+        The air that enters.
+    steam_enthalpy : float or array_like
+        J/kg.
+
+    Returns
+    -------
+    SteamAbsorption
+
+    Raises
+    ------
+    ProcessError
+        No air flows.
+    NotFiniteError, OutOfRangeError
+        The enthalpy.
+    """
+    expect(entering, AirStream, "entering")
+    return run("humidify.steam_absorption", SteamAbsorption, ("entering", entering), ("steam_enthalpy", steam_enthalpy))
+
+
+@overload
 def spray(entering: AirStream[float], *, water_flow: float, water_temperature: float) -> Humidified[float]: ...
 @overload
 def spray(entering: AirStream[Any], *, water_flow: ArrayLike, water_temperature: ArrayLike) -> Humidified[Array]: ...
 def spray(entering: AirStream[Any], *, water_flow: ArrayLike, water_temperature: ArrayLike) -> Humidified[Any]:
     """Sprays liquid water of any temperature into the air; what equilibrium does not evaporate is carried as droplets.
 
-    Nearly along the wet-bulb line. All of the water comes to equilibrium with all of the air; a washer, which circulates
-    many times more, is not modeled here.
+    Nearly along the wet-bulb line. All of the water comes to equilibrium with all of the air; see `wash` for short contact.
 
     Parameters
     ----------
@@ -303,4 +554,86 @@ def evaporative(
         ("entering", entering),
         ("saturation_effectiveness", saturation_effectiveness),
         *choice(water_temperature, {"wet_bulb": 0}, "water_temperature"),
+    )
+
+
+@overload
+def wash(
+    entering: AirStream[float],
+    *,
+    water_flow: float,
+    water_temperature: float,
+    effectiveness: float,
+    pump_heat: float = ...,
+    carry_over_fraction: float = ...,
+) -> Washed[float]: ...
+@overload
+def wash(
+    entering: AirStream[Any],
+    *,
+    water_flow: ArrayLike,
+    water_temperature: ArrayLike,
+    effectiveness: ArrayLike,
+    pump_heat: ArrayLike = ...,
+    carry_over_fraction: ArrayLike = ...,
+) -> Washed[Array]: ...
+def wash(
+    entering: AirStream[Any],
+    *,
+    water_flow: ArrayLike,
+    water_temperature: ArrayLike,
+    effectiveness: ArrayLike,
+    pump_heat: ArrayLike = 0.0,
+    carry_over_fraction: ArrayLike = 0.0,
+) -> Washed[Any]:
+    """Washes air: heats or cools, humidifies or dehumidifies, by the temperature of the water.
+
+    The water is well mixed, of the temperature at which it leaves; full effectiveness is equilibrium. Washers spread Legionella
+    where their water is not kept clean; droplets behind eliminators grow mould.
+
+    Parameters
+    ----------
+    entering : AirStream
+        The air that enters.
+    water_flow : float or array_like
+        Water sprayed, kg/s.
+    water_temperature : float or array_like
+        °C; below the dew point it takes water out of the air.
+    effectiveness : float or array_like
+        How far the air comes toward the temperature of the water that leaves, 0 to 1.
+    pump_heat : float or array_like, default 0
+        Power of the pump, W.
+    carry_over_fraction : float or array_like, default 0
+        Droplets that pass the eliminators over the water sprayed.
+
+    Returns
+    -------
+    Washed
+
+    Raises
+    ------
+    InfeasibleError
+        The water would freeze, is hotter than the air takes, or would all evaporate.
+    ProcessError, NotFiniteError, OutOfRangeError
+        As `steam`.
+
+    Examples
+    --------
+    >>> from moistair import MoistAir
+    >>> from moistair.process import AirStream, humidify
+    >>> entering = AirStream(MoistAir(dry_bulb=30.0, relative_humidity=0.5, pressure=101_325.0), dry_air_flow=2.0)
+    >>> washer = {"water_flow": 3.0, "effectiveness": 0.9}
+    >>> [humidify.wash(entering, water_temperature=t, **washer).moistening.name for t in (25.0, 7.0)]
+    ['HUMIDIFIES', 'DEHUMIDIFIES']
+    """
+    expect(entering, AirStream, "entering")
+    return run(
+        "humidify.wash",
+        Washed,
+        ("entering", entering),
+        ("water_flow", water_flow),
+        ("water_temperature", water_temperature),
+        ("effectiveness", effectiveness),
+        ("pump_heat", pump_heat),
+        ("carry_over_fraction", carry_over_fraction),
     )

@@ -199,7 +199,8 @@ impl<S: Scalar> Boiling<S> {
         let celsius = solve::between(ends.0, ends.1, solve::temperature_resolution(), excess);
         Ok(Self {
             celsius,
-            liquid: <RealGas<S> as Mixture<S>>::condensed_enthalpy(celsius, pascals, Surface::Liquid),
+            // The fit of the real gas is made for the pressures of air.
+            liquid: liquid_water::at(celsius, pascals).enthalpy,
             vapor: RealGas::at(celsius).saturated_steam_enthalpy(),
         })
     }

@@ -6,6 +6,7 @@ use super::*;
 use crate::Formulation;
 use crate::checks::Random;
 use crate::quantity::HumidityRatio;
+use crate::real::Real;
 use crate::state::{AirWithCondensate, Freezing};
 
 fn cases(random: &mut Random) -> (MoistAir<f64>, f64) {
@@ -54,7 +55,7 @@ fn lines_leave_saturation_once() {
         leaving += u32::from(again.is_some());
         staying += u32::from(again.is_none());
         for step in 0..200 {
-            let s = first + 1e-5 * 1e6_f64.powf(f64::from(step) / 200.0);
+            let s = first + Real::exp(f64::from(step) * 0.069 - 11.5);
             let made = AirWithCondensate::from_enthalpy_and_water(
                 SpecificEnthalpy::from_joules_per_kilogram(h1 + s * steam),
                 HumidityRatio::from_kilograms_per_kilogram(w1 + s),
