@@ -300,7 +300,7 @@ fn sequences() {
         };
         let of_kind = |kind| moistair_step {
             kind,
-            stream: c_stream(5.0, 0.8, 0.5),
+            stream: c_stream(20.0, 0.4, 1.0),
             state: c_stream(14.0, 0.9, 1.0).mixture.air,
             surface: moistair_coil_surface {
                 air_side: 2e3,
@@ -312,7 +312,7 @@ fn sequences() {
             leaving_temperature: 16.0,
             heat_flow: 4e3,
             relative_humidity: 0.93,
-            humidity_ratio: 0.013,
+            humidity_ratio: if kind == MOISTAIR_STEP_DESICCANT_BY_EFFECTIVENESS { 0.002 } else { 0.013 },
             apparatus_dew_point: 9.0,
             bypass_factor: 0.1,
             condensate_temperature: 11.0,
@@ -388,7 +388,7 @@ fn sequences() {
             Step::SteamToRelativeHumidity { target: relative_humidity, enthalpy },
             Step::Spray { flow: flow(1e-3), temperature: celsius(15.0) },
             Step::Evaporative { saturation_effectiveness: 0.8, water: EvaporatingWater::Given(celsius(15.0)) },
-            Step::Mix(stream(5.0, 0.8, 0.5).into()),
+            Step::Mix(stream(20.0, 0.4, 1.0).into()),
             Step::Eliminate,
             Step::Compress { pressure: pascals(1.1e5), leaving },
             Step::DirectCooler(DirectCooler {
@@ -420,7 +420,11 @@ fn sequences() {
                 source: MoistureSource::SaturatedVapor(celsius(32.0)),
             }),
             Step::DesiccantToHumidityRatio { target: ratio, sorption },
-            Step::DesiccantByEffectiveness { effectiveness: 0.5, driest: ratio, sorption },
+            Step::DesiccantByEffectiveness {
+                effectiveness: 0.5,
+                driest: HumidityRatio::from_kilograms_per_kilogram(0.002),
+                sorption,
+            },
         ];
         let same_result = |done: &moistair_step_result, expected: &StepResult| {
             same(&done.entering.mixture.air, &expected.entering.air().air());
@@ -528,7 +532,7 @@ fn sequences() {
 
         let mut c_chain = kinds.map(of_kind);
         let free = moistair_free { low: 5.0, high: 90.0, step: 1, quantity: MOISTAIR_LEAVING_TEMPERATURE };
-        let target = moistair_target { value: 0.0085, after: -1, property: MOISTAIR_HUMIDITY_RATIO };
+        let target = moistair_target { value: 0.0075, after: -1, property: MOISTAIR_HUMIDITY_RATIO };
         // SAFETY: valid places.
         let solved = output(blank::<moistair_solved>(), |out| unsafe {
             moistair_sequence_solve(
@@ -543,7 +547,7 @@ fn sequences() {
             )
         });
         let free = Free { step: 1, number: Quantity::LeavingTemperature, low: 5.0, high: 90.0 };
-        let target = Target { after: None, quantity: Quantity::HumidityRatio, value: 0.0085 };
+        let target = Target { after: None, quantity: Quantity::HumidityRatio, value: 0.0075 };
         let expected = solve(&entering, &mut chain[..4], &mut results, free, target).unwrap();
         assert_eq!(
             (solved.status, solved.number, solved.reached),
