@@ -13,8 +13,8 @@
 //! - every other step refuses them with [`Error::CarriesCondensate`]: its model has no droplets. Put [`Step::Eliminate`] before it.
 //!
 //! A chain is a steady state. It knows no control, no dynamics and no order of starting; what a step leaves out, the chain leaves out.
-//! Results are estimates for engineering, not a safety function: each process names its own cautions, of which [`StepResult::frost`] is
-//! carried along. A frost flag is no freezestat.
+//! Results are estimates for engineering, not a safety function: each process names its own cautions, of which [`StepResult::frost`]
+//! and [`StepResult::condenses`] are carried along. A frost flag is no freezestat.
 
 mod solve;
 mod step;
@@ -24,8 +24,11 @@ pub use solve::{EVALUATION_CAP, End, Free, SolveStatus, Solved, Target, solve};
 use crate::error::Error;
 use crate::process::books::{Books, Ledger};
 use crate::process::coil::{CoilRegime, CoilSurface, CoilWater, CondensateTemperature};
-use crate::process::humidify::EvaporatingWater;
-use crate::process::{Exchange, WetStream};
+use crate::process::desiccant::Sorption;
+use crate::process::evaporative::{DirectCooler, IndirectCooler};
+use crate::process::humidify::{EvaporatingWater, Washer};
+use crate::process::room::RoomGains;
+use crate::process::{AirStream, Exchange, WetStream};
 use crate::quantity::{HeatFlow, HumidityRatio, MassFlow, Pressure, RelativeHumidity, SpecificEnthalpy, Temperature};
 use crate::real::{Scalar, k};
 use crate::state::MoistAir;
@@ -118,6 +121,10 @@ pub enum Step<S = f64> {
         /// Temperature of the water.
         water: EvaporatingWater<S>,
     },
+    /// Wetted media with circulating water, pump and bleed: [`crate::process::evaporative::direct`].
+    DirectCooler(DirectCooler<S>),
+    /// A washer: [`crate::process::humidify::wash`].
+    Wash(Washer<S>),
     /// Another stream mixed in, outdoor air or return air: [`crate::process::mixing::adiabatic`].
     Mix(WetStream<S>),
     /// All droplets and ice taken out of the air at its own temperature: a perfect eliminator. Real ones pass the finest droplets.
@@ -129,62 +136,93 @@ pub enum Step<S = f64> {
         /// Leaving temperature.
         leaving: Temperature<S>,
     },
+    /// Indirect evaporative cooling, as the primary side of [`crate::process::evaporative::indirect`].
+    IndirectCooler {
+        /// The air that is wetted behind the wall.
+        secondary: AirStream<S>,
+        /// The cooler.
+        cooler: IndirectCooler<S>,
+    },
+    /// A room and its gains; its air leaves: [`crate::process::room::room_of_supply`].
+    Room(RoomGains<S>),
+    /// A desiccant, to a humidity ratio: [`crate::process::desiccant::to_humidity_ratio`].
+    DesiccantToHumidityRatio {
+        /// The humidity ratio that leaves.
+        target: HumidityRatio<S>,
+        /// What the desiccant does beside.
+        sorption: Sorption<S>,
+    },
+    /// A desiccant by its effectiveness: [`crate::process::desiccant::by_effectiveness`].
+    DesiccantByEffectiveness {
+        /// (W₁ − W₂) / (W₁ − W_least).
+        effectiveness: S,
+        /// What the desiccant could reach at best.
+        driest: HumidityRatio<S>,
+        /// What the desiccant does beside.
+        sorption: Sorption<S>,
+    },
 }
 
-/// What a step asks of the plant, or all steps together, by name. Magnitudes, unless said otherwise.
-#[derive(Clone, Copy, Debug, PartialEq)]
-#[must_use]
-pub struct Loads<S = f64> {
+/// Declares [`Loads`].
+macro_rules! loads {
+    ($($(#[$doc:meta])* $field:ident: $type:ident::$from:ident;)*) => {
+        /// What a step asks of the plant, or all steps together, by name. Magnitudes, unless they are said to be signed: then into the air.
+        ///
+        /// Heat of an exchange is heating − cooling + recovered + gains + water heat + fan work + compression; its water is steam + humidifying
+        /// water + moisture gain + recovered water − condensate.
+        #[derive(Clone, Copy, Debug, PartialEq)]
+        #[must_use]
+        pub struct Loads<S = f64> {
+            $($(#[$doc])* pub $field: $type<S>,)*
+        }
+
+        impl<S: Scalar> Loads<S> {
+            /// Nothing.
+            pub fn none() -> Self {
+                Self { $($field: $type::$from(k(0.0)),)* }
+            }
+
+            fn plus(&self, other: &Self) -> Self {
+                Self { $($field: self.$field + other.$field,)* }
+            }
+        }
+    };
+}
+loads! {
     /// Heat from heaters and warm coils.
-    pub heating: HeatFlow<S>,
+    heating: HeatFlow::from_watts;
     /// Heat taken out by coils and dry coolers.
-    pub cooling: HeatFlow<S>,
+    cooling: HeatFlow::from_watts;
     /// The sensible part of that.
-    pub sensible_cooling: HeatFlow<S>,
+    sensible_cooling: HeatFlow::from_watts;
     /// The rest of it.
-    pub latent_cooling: HeatFlow<S>,
-    /// Water that drains from coils and eliminators.
-    pub condensate: MassFlow<S>,
+    latent_cooling: HeatFlow::from_watts;
+    /// Heat from another stream through a heat recovery or an indirect cooler, or carried over by a desiccant; signed.
+    recovered: HeatFlow::from_watts;
+    /// Sensible heat of rooms, and heat through the walls of ducts; signed.
+    gains: HeatFlow::from_watts;
+    /// Heat that circulating water brings with it: of its pump, of its make-up, of chilled spray; signed.
+    water_heat: HeatFlow::from_watts;
+    /// Power of fans that reaches the air.
+    fan_work: HeatFlow::from_watts;
+    /// Electric power of fans, that part of it included.
+    fan_power: HeatFlow::from_watts;
+    /// Of compression and expansion: work less the heat of cooling; signed.
+    compression: HeatFlow::from_watts;
+    /// Water that drains from coils, eliminators, coolers and washers.
+    condensate: MassFlow::from_kilograms_per_second;
     /// Steam into the air.
-    pub steam: MassFlow<S>,
+    steam: MassFlow::from_kilograms_per_second;
     /// Liquid water into the air, with what it carries on as droplets.
-    pub humidifying_water: MassFlow<S>,
+    humidifying_water: MassFlow::from_kilograms_per_second;
+    /// Moisture of rooms; signed.
+    moisture_gain: MassFlow::from_kilograms_per_second;
+    /// Vapor from another stream through a heat recovery, or from a desiccant; signed.
+    recovered_water: MassFlow::from_kilograms_per_second;
+    /// Water that evaporates into a secondary stream, not into this one.
+    secondary_water: MassFlow::from_kilograms_per_second;
     /// Dry air of other streams mixed in.
-    pub mixed_in: MassFlow<S>,
-    /// Of compression and expansion: work less the heat of cooling, signed.
-    pub compression: HeatFlow<S>,
-}
-
-impl<S: Scalar> Loads<S> {
-    /// Nothing.
-    pub fn none() -> Self {
-        let (heat, mass) = (HeatFlow::from_watts(k(0.0)), MassFlow::from_kilograms_per_second(k(0.0)));
-        Self {
-            heating: heat,
-            cooling: heat,
-            sensible_cooling: heat,
-            latent_cooling: heat,
-            condensate: mass,
-            steam: mass,
-            humidifying_water: mass,
-            mixed_in: mass,
-            compression: heat,
-        }
-    }
-
-    fn plus(&self, other: &Self) -> Self {
-        Self {
-            heating: self.heating + other.heating,
-            cooling: self.cooling + other.cooling,
-            sensible_cooling: self.sensible_cooling + other.sensible_cooling,
-            latent_cooling: self.latent_cooling + other.latent_cooling,
-            condensate: self.condensate + other.condensate,
-            steam: self.steam + other.steam,
-            humidifying_water: self.humidifying_water + other.humidifying_water,
-            mixed_in: self.mixed_in + other.mixed_in,
-            compression: self.compression + other.compression,
-        }
-    }
+    mixed_in: MassFlow::from_kilograms_per_second;
 }
 
 /// What one step did.
@@ -203,6 +241,8 @@ pub struct StepResult<S = f64> {
     pub regime: Option<CoilRegime>,
     /// Frost forms, or water in a coil may freeze.
     pub frost: bool,
+    /// Water condenses where no coil drains it: on or in a duct, in a heat recovery or an indirect cooler.
+    pub condenses: bool,
     /// What enters, with a stream mixed in, against what leaves.
     pub books: Books<S>,
 }
@@ -219,6 +259,8 @@ pub struct Total<S = f64> {
     pub loads: Loads<S>,
     /// Whether any step reports frost.
     pub frost: bool,
+    /// Whether any step reports condensation.
+    pub condenses: bool,
     /// What enters the first step and is mixed in, against what leaves the last and all that was exchanged; measured against the terms of
     /// these ends alone, and the rounding of each temperature that was solved for on the way.
     pub books: Books<S>,
@@ -310,6 +352,7 @@ pub struct Sequence<S = f64> {
     exchange: Exchange<S>,
     loads: Loads<S>,
     frost: bool,
+    condenses: bool,
     ledger: Ledger<S>,
 }
 
@@ -319,7 +362,14 @@ impl<S: Scalar> Sequence<S> {
     pub fn new(entering: &WetStream<S>) -> Self {
         let mut ledger = Ledger::empty();
         ledger.entering(entering);
-        Self { leaving: *entering, exchange: Exchange::none(), loads: Loads::none(), frost: false, ledger }
+        Self {
+            leaving: *entering,
+            exchange: Exchange::none(),
+            loads: Loads::none(),
+            frost: false,
+            condenses: false,
+            ledger,
+        }
     }
 
     /// Takes the air through one more step.
@@ -338,6 +388,7 @@ impl<S: Scalar> Sequence<S> {
         self.exchange = self.exchange.plus(&done.exchange);
         self.loads = self.loads.plus(&done.loads);
         self.frost |= done.frost;
+        self.condenses |= done.condenses;
         Ok(result)
     }
 
@@ -350,6 +401,7 @@ impl<S: Scalar> Sequence<S> {
             exchange: self.exchange,
             loads: self.loads,
             frost: self.frost,
+            condenses: self.condenses,
             books: ledger.books(),
         }
     }

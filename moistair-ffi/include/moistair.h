@@ -1115,6 +1115,12 @@
 // water_temperature for MOISTAIR_WATER_AT_GIVEN only.
 #define MOISTAIR_STEP_EVAPORATIVE 24
 
+// Wetted media with circulating water, pump and bleed, by direct_cooler.
+#define MOISTAIR_STEP_DIRECT_COOLER 25
+
+// A washer, by washer.
+#define MOISTAIR_STEP_WASH 26
+
 // Mixing with stream, as moistair_mixing_adiabatic.
 #define MOISTAIR_STEP_MIX 30
 
@@ -1123,6 +1129,18 @@
 
 // Compression or expansion to pressure and leaving_temperature, as moistair_compress_to_pressure.
 #define MOISTAIR_STEP_COMPRESS 40
+
+// Indirect evaporative cooling by the gas of stream, the secondary air, and indirect_cooler.
+#define MOISTAIR_STEP_INDIRECT_COOLER 61
+
+// A room, by gains; what leaves is its air, as moistair_room_of_supply.
+#define MOISTAIR_STEP_ROOM 70
+
+// A desiccant, by sorption to humidity_ratio, as moistair_desiccant_to_humidity_ratio.
+#define MOISTAIR_STEP_DESICCANT_TO_HUMIDITY_RATIO 80
+
+// A desiccant of drying_effectiveness toward humidity_ratio, the driest, by sorption, as moistair_desiccant_by_effectiveness.
+#define MOISTAIR_STEP_DESICCANT_BY_EFFECTIVENESS 81
 
 // Most steps that a solve takes; a run takes any number.
 #define MOISTAIR_MOST_STEPS 32
@@ -2185,9 +2203,21 @@ typedef struct {
     double condensate;
 } moistair_compressed;
 
+// What a desiccant does beside taking up water.
+typedef struct {
+    // Heat of sorption over heat of vaporization [1], 0.5 to 3; about 1.05 to 1.15 for silica gel, 1.2 and more for zeolites.
+    double heat_ratio;
+    // Heat [W] or rise [K] that the matrix carries over.
+    double carry_over_value;
+    // MOISTAIR_CARRIES_NOTHING, MOISTAIR_CARRIES_HEAT or MOISTAIR_CARRIES_RISE.
+    int32_t carry_over;
+    // 0.
+    int32_t reserved;
+} moistair_sorption;
+
 // One process of a chain. Only what its kind names is read; zero the rest.
 typedef struct {
-    // The stream that is mixed in.
+    // The stream that is mixed in, or the secondary air of an indirect cooler.
     moistair_wet_stream stream;
     // A state that leaves.
     moistair_state state;
@@ -2195,6 +2225,16 @@ typedef struct {
     moistair_coil_surface surface;
     // The water of a coil.
     moistair_coil_water water;
+    // Wetted media with their water.
+    moistair_direct_cooler direct_cooler;
+    // An indirect evaporative cooler.
+    moistair_indirect_cooler indirect_cooler;
+    // A washer.
+    moistair_washer washer;
+    // What a room gives to its air.
+    moistair_room_gains gains;
+    // A desiccant.
+    moistair_sorption sorption;
     // [°C], -80 to 150.
     double leaving_temperature;
     // [W], positive into the air.
@@ -2219,6 +2259,8 @@ typedef struct {
     double saturation_effectiveness;
     // Absolute [Pa].
     double pressure;
+    // [1], 0 to 1.
+    double drying_effectiveness;
     // MOISTAIR_STEP_….
     int32_t kind;
     // MOISTAIR_CONDENSATE_AT_…, of coils.
@@ -2229,7 +2271,7 @@ typedef struct {
     int32_t reserved;
 } moistair_step;
 
-// What a step, or a chain, asks of the plant by name; magnitudes, unless said otherwise.
+// What a step, or a chain, asks of the plant by name. Magnitudes, unless they are said to be signed: then into the air.
 typedef struct {
     // Heat from heaters and warm coils [W].
     double heating;
@@ -2239,14 +2281,30 @@ typedef struct {
     double sensible_cooling;
     // The rest of it [W].
     double latent_cooling;
-    // Of compression and expansion: work less the heat of cooling, signed [W].
+    // Heat from another stream through a heat recovery or an indirect cooler, or carried over by a desiccant; signed [W].
+    double recovered;
+    // Sensible heat of rooms, and heat through the walls of ducts; signed [W].
+    double gains;
+    // Heat that circulating water brings with it: of its pump, of its make-up, of chilled spray; signed [W].
+    double water_heat;
+    // Power of fans that reaches the air [W].
+    double fan_work;
+    // Electric power of fans, that part of it included [W].
+    double fan_power;
+    // Of compression and expansion: work less the heat of cooling; signed [W].
     double compression;
-    // Water that drains from coils and eliminators [kg/s].
+    // Water that drains from coils, eliminators, coolers and washers [kg/s].
     double condensate;
     // Steam into the air [kg/s].
     double steam;
     // Liquid water into the air, with what it carries on as droplets [kg/s].
     double humidifying_water;
+    // Moisture of rooms; signed [kg/s].
+    double moisture_gain;
+    // Vapor from another stream through a heat recovery, or from a desiccant; signed [kg/s].
+    double recovered_water;
+    // Water that evaporates into a secondary stream, not into this one [kg/s].
+    double secondary_water;
     // Dry air of other streams mixed in [kg/s].
     double mixed_in;
 } moistair_loads;
@@ -2267,6 +2325,10 @@ typedef struct {
     int32_t regime;
     // 1 if frost forms, or water in a coil may freeze; else 0. No freezestat.
     int32_t frost;
+    // 1 if water condenses where no coil drains it: on or in a duct, in a heat recovery or an indirect cooler; else 0.
+    int32_t condenses;
+    // 0.
+    int32_t reserved;
 } moistair_step_result;
 
 // What all steps of a chain did together.
@@ -2281,8 +2343,8 @@ typedef struct {
     moistair_books books;
     // 1 if any step reports frost, else 0.
     int32_t frost;
-    // 0.
-    int32_t reserved;
+    // 1 if any step reports condensation, else 0.
+    int32_t condenses;
 } moistair_sequence_total;
 
 // The number of a step that is free, and where to look for it.
@@ -2335,18 +2397,6 @@ typedef struct {
     // How often the steps were evaluated for it.
     uint32_t evaluations;
 } moistair_solved;
-
-// What a desiccant does beside taking up water.
-typedef struct {
-    // Heat of sorption over heat of vaporization [1], 0.5 to 3; about 1.05 to 1.15 for silica gel, 1.2 and more for zeolites.
-    double heat_ratio;
-    // Heat [W] or rise [K] that the matrix carries over.
-    double carry_over_value;
-    // MOISTAIR_CARRIES_NOTHING, MOISTAIR_CARRIES_HEAT or MOISTAIR_CARRIES_RISE.
-    int32_t carry_over;
-    // 0.
-    int32_t reserved;
-} moistair_sorption;
 
 // Air that gave water to a desiccant, or took it back.
 typedef struct {

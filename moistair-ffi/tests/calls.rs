@@ -274,9 +274,12 @@ fn derivatives() {
 #[test]
 fn sequences() {
     use moistair_core::process::coil::{Arrangement, CoilSurface, CoilWater, CondensateTemperature, Coolant};
-    use moistair_core::process::humidify::EvaporatingWater;
+    use moistair_core::process::desiccant::{CarryOver, Sorption};
+    use moistair_core::process::evaporative::{DirectCooler, IndirectCooler, IndirectEffectiveness, WaterTreatment};
+    use moistair_core::process::humidify::{EvaporatingWater, Washer};
+    use moistair_core::process::room::{MoistureSource, RoomGains};
     use moistair_core::sequence::{Free, Step, StepResult, Target, Total, run, solve};
-    use moistair_core::{Conductance, HeatFlow, RelativeHumidity, SpecificEnthalpy};
+    use moistair_core::{Conductance, HeatFlow, RelativeHumidity, SpecificEnthalpy, TemperatureDifference};
 
     for (code, formulation) in FORMULATIONS {
         let basis = moistair_core::Basis::new(pascals(101_325.0), formulation);
@@ -297,7 +300,7 @@ fn sequences() {
         };
         let of_kind = |kind| moistair_step {
             kind,
-            stream: c_stream(5.0, 0.8, 0.5),
+            stream: c_stream(20.0, 0.4, 1.0),
             state: c_stream(14.0, 0.9, 1.0).mixture.air,
             surface: moistair_coil_surface {
                 air_side: 2e3,
@@ -309,7 +312,7 @@ fn sequences() {
             leaving_temperature: 16.0,
             heat_flow: 4e3,
             relative_humidity: 0.93,
-            humidity_ratio: 0.013,
+            humidity_ratio: if kind == MOISTAIR_STEP_DESICCANT_BY_EFFECTIVENESS { 0.002 } else { 0.013 },
             apparatus_dew_point: 9.0,
             bypass_factor: 0.1,
             condensate_temperature: 11.0,
@@ -318,6 +321,44 @@ fn sequences() {
             steam_enthalpy: 2.68e6,
             saturation_effectiveness: 0.8,
             pressure: 1.1e5,
+            direct_cooler: moistair_direct_cooler {
+                saturation_effectiveness: 0.85,
+                circulating: 0.9,
+                pump_heat: 200.0,
+                make_up_temperature: 15.0,
+                treatment: moistair_water_treatment { drift_fraction: 1e-4, cycles_of_concentration: 3.0 },
+                make_up: MOISTAIR_WATER_AT_GIVEN,
+                reserved: 0,
+            },
+            indirect_cooler: moistair_indirect_cooler {
+                effectiveness: 0.6,
+                exhaust_humidity: 0.95,
+                pump_heat: 150.0,
+                water_temperature: 0.0,
+                effectiveness_of: MOISTAIR_EFFECTIVENESS_OF_WET_BULB,
+                water: MOISTAIR_WATER_AT_WET_BULB,
+            },
+            washer: moistair_washer {
+                water: 2.0,
+                temperature: 25.0,
+                effectiveness: 0.8,
+                pump_heat: 900.0,
+                carry_over_fraction: 1e-4,
+            },
+            gains: moistair_room_gains {
+                sensible: 5e3,
+                moisture: 1e-3,
+                source_value: 32.0,
+                source: MOISTAIR_SOURCE_SATURATED_VAPOR,
+                reserved: 0,
+            },
+            sorption: moistair_sorption {
+                heat_ratio: 1.1,
+                carry_over_value: 4.0,
+                carry_over: MOISTAIR_CARRIES_RISE,
+                reserved: 0,
+            },
+            drying_effectiveness: 0.5,
             condensate: MOISTAIR_CONDENSATE_AT_GIVEN,
             evaporating_water: MOISTAIR_WATER_AT_GIVEN,
             ..blank()
@@ -332,6 +373,8 @@ fn sequences() {
         };
         let water = CoilWater { flow: flow(0.8), entering: celsius(6.0), coolant: Coolant::Water };
         let ratio = HumidityRatio::from_kilograms_per_kilogram(0.013);
+        let carry_over = CarryOver::Rise(TemperatureDifference::from_kelvins(4.0));
+        let sorption = Sorption { heat_ratio: 1.1, carry_over };
         let steps = [
             Step::ToTemperature(leaving),
             Step::WithHeat(HeatFlow::from_watts(4e3)),
@@ -345,9 +388,43 @@ fn sequences() {
             Step::SteamToRelativeHumidity { target: relative_humidity, enthalpy },
             Step::Spray { flow: flow(1e-3), temperature: celsius(15.0) },
             Step::Evaporative { saturation_effectiveness: 0.8, water: EvaporatingWater::Given(celsius(15.0)) },
-            Step::Mix(stream(5.0, 0.8, 0.5).into()),
+            Step::Mix(stream(20.0, 0.4, 1.0).into()),
             Step::Eliminate,
             Step::Compress { pressure: pascals(1.1e5), leaving },
+            Step::DirectCooler(DirectCooler {
+                saturation_effectiveness: 0.85,
+                circulating: flow(0.9),
+                pump_heat: HeatFlow::from_watts(200.0),
+                make_up: EvaporatingWater::Given(celsius(15.0)),
+                treatment: WaterTreatment { drift_fraction: 1e-4, cycles_of_concentration: 3.0 },
+            }),
+            Step::Wash(Washer {
+                water: flow(2.0),
+                temperature: celsius(25.0),
+                effectiveness: 0.8,
+                pump_heat: HeatFlow::from_watts(900.0),
+                carry_over_fraction: 1e-4,
+            }),
+            Step::IndirectCooler {
+                secondary: stream(20.0, 0.4, 1.0),
+                cooler: IndirectCooler {
+                    effectiveness: IndirectEffectiveness::OfWetBulb(0.6),
+                    exhaust_humidity: RelativeHumidity::from_fraction(0.95),
+                    pump_heat: HeatFlow::from_watts(150.0),
+                    water: EvaporatingWater::AtWetBulb,
+                },
+            },
+            Step::Room(RoomGains {
+                sensible: HeatFlow::from_watts(5e3),
+                moisture: flow(1e-3),
+                source: MoistureSource::SaturatedVapor(celsius(32.0)),
+            }),
+            Step::DesiccantToHumidityRatio { target: ratio, sorption },
+            Step::DesiccantByEffectiveness {
+                effectiveness: 0.5,
+                driest: HumidityRatio::from_kilograms_per_kilogram(0.002),
+                sorption,
+            },
         ];
         let same_result = |done: &moistair_step_result, expected: &StepResult| {
             same(&done.entering.mixture.air, &expected.entering.air().air());
@@ -357,19 +434,36 @@ fn sequences() {
             assert_eq!(done.exchange.heat, expected.exchange.heat.watts());
             assert_eq!(done.exchange.water, expected.exchange.water.kilograms_per_second());
             assert_eq!(done.exchange.water_enthalpy_flow, expected.exchange.water_enthalpy_flow.watts());
-            assert_eq!(done.loads.heating, expected.loads.heating.watts());
-            assert_eq!(done.loads.cooling, expected.loads.cooling.watts());
-            assert_eq!(done.loads.sensible_cooling, expected.loads.sensible_cooling.watts());
-            assert_eq!(done.loads.latent_cooling, expected.loads.latent_cooling.watts());
-            assert_eq!(done.loads.compression, expected.loads.compression.watts());
-            assert_eq!(done.loads.condensate, expected.loads.condensate.kilograms_per_second());
-            assert_eq!(done.loads.steam, expected.loads.steam.kilograms_per_second());
-            assert_eq!(done.loads.humidifying_water, expected.loads.humidifying_water.kilograms_per_second());
-            assert_eq!(done.loads.mixed_in, expected.loads.mixed_in.kilograms_per_second());
+            let (found, loads) = (&done.loads, &expected.loads);
+            for (found, expected) in [
+                (found.heating, loads.heating),
+                (found.cooling, loads.cooling),
+                (found.sensible_cooling, loads.sensible_cooling),
+                (found.latent_cooling, loads.latent_cooling),
+                (found.recovered, loads.recovered),
+                (found.gains, loads.gains),
+                (found.water_heat, loads.water_heat),
+                (found.fan_work, loads.fan_work),
+                (found.fan_power, loads.fan_power),
+                (found.compression, loads.compression),
+            ] {
+                assert_eq!(found, expected.watts());
+            }
+            for (found, expected) in [
+                (found.condensate, loads.condensate),
+                (found.steam, loads.steam),
+                (found.humidifying_water, loads.humidifying_water),
+                (found.moisture_gain, loads.moisture_gain),
+                (found.recovered_water, loads.recovered_water),
+                (found.secondary_water, loads.secondary_water),
+                (found.mixed_in, loads.mixed_in),
+            ] {
+                assert_eq!(found, expected.kilograms_per_second());
+            }
             assert_eq!(done.books.heat_residual, expected.books.heat_residual.watts());
             assert_eq!(done.books.close, 1);
             assert_eq!(done.regime, expected.regime.map_or(-1, |regime| regime as i32));
-            assert_eq!(done.frost, i32::from(expected.frost));
+            assert_eq!((done.frost, done.condenses), (i32::from(expected.frost), i32::from(expected.condenses)));
         };
         let same_total = |total: &moistair_sequence_total, expected: &Total| {
             same(&total.leaving.mixture.air, &expected.leaving.air().air());
@@ -438,7 +532,7 @@ fn sequences() {
 
         let mut c_chain = kinds.map(of_kind);
         let free = moistair_free { low: 5.0, high: 90.0, step: 1, quantity: MOISTAIR_LEAVING_TEMPERATURE };
-        let target = moistair_target { value: 0.0085, after: -1, property: MOISTAIR_HUMIDITY_RATIO };
+        let target = moistair_target { value: 0.0075, after: -1, property: MOISTAIR_HUMIDITY_RATIO };
         // SAFETY: valid places.
         let solved = output(blank::<moistair_solved>(), |out| unsafe {
             moistair_sequence_solve(
@@ -453,7 +547,7 @@ fn sequences() {
             )
         });
         let free = Free { step: 1, number: Quantity::LeavingTemperature, low: 5.0, high: 90.0 };
-        let target = Target { after: None, quantity: Quantity::HumidityRatio, value: 0.0085 };
+        let target = Target { after: None, quantity: Quantity::HumidityRatio, value: 0.0075 };
         let expected = solve(&entering, &mut chain[..4], &mut results, free, target).unwrap();
         assert_eq!(
             (solved.status, solved.number, solved.reached),

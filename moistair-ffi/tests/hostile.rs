@@ -93,8 +93,8 @@ words! {
     moistair_potentials, [], [], [];
     moistair_potential_wheel, [12, 29, 38], [35, 36], [0, 17];
     moistair_books, [5], [], [];
-    moistair_sequence_total, [12, 35, 36], [], [0];
-    moistair_solved, [12, 35, 36, 44, 45], [], [0];
+    moistair_sequence_total, [12, 43, 44], [], [0];
+    moistair_solved, [12, 43, 44, 52, 53], [], [0];
     moistair_tower_water, [], [], [];
     moistair_water_treatment, [], [], [];
     moistair_water_use, [4], [], [];
@@ -478,7 +478,7 @@ fn change<T: Words>(
     successes.insert(name, (good, calls));
 }
 
-const KINDS: [i32; 15] = [
+const KINDS: [i32; 21] = [
     MOISTAIR_STEP_TO_TEMPERATURE,
     MOISTAIR_STEP_WITH_HEAT,
     MOISTAIR_STEP_COIL_TO_STATE,
@@ -494,6 +494,12 @@ const KINDS: [i32; 15] = [
     MOISTAIR_STEP_MIX,
     MOISTAIR_STEP_ELIMINATE,
     MOISTAIR_STEP_COMPRESS,
+    MOISTAIR_STEP_DIRECT_COOLER,
+    MOISTAIR_STEP_WASH,
+    MOISTAIR_STEP_INDIRECT_COOLER,
+    MOISTAIR_STEP_ROOM,
+    MOISTAIR_STEP_DESICCANT_TO_HUMIDITY_RATIO,
+    MOISTAIR_STEP_DESICCANT_BY_EFFECTIVENESS,
 ];
 
 /// Numbers that may be free, and a step that has each.
@@ -810,6 +816,47 @@ fn no_argument_upsets_an_export() {
         steam_enthalpy: c.number(2.5e6, 2.8e6),
         saturation_effectiveness: c.number(0.0, 1.0),
         pressure: c.number(7e4, 3e5),
+        direct_cooler: moistair_direct_cooler {
+            saturation_effectiveness: c.number(0.0, 1.0),
+            circulating: c.number(0.0, 5.0),
+            pump_heat: c.number(0.0, 500.0),
+            make_up_temperature: c.number(0.0, 30.0),
+            treatment: moistair_water_treatment {
+                drift_fraction: c.number(0.0, 0.01),
+                cycles_of_concentration: c.number(1.0, 8.0),
+            },
+            make_up: c.selector(2),
+            reserved: 0,
+        },
+        indirect_cooler: moistair_indirect_cooler {
+            effectiveness: c.number(0.0, 1.0),
+            exhaust_humidity: c.number(0.8, 1.0),
+            pump_heat: c.number(0.0, 500.0),
+            water_temperature: c.number(0.0, 30.0),
+            effectiveness_of: c.selector(2),
+            water: c.selector(2),
+        },
+        washer: moistair_washer {
+            water: c.number(0.0, 20.0),
+            temperature: c.number(0.0, 50.0),
+            effectiveness: c.number(0.0, 1.0),
+            pump_heat: c.number(0.0, 500.0),
+            carry_over_fraction: c.number(0.0, 0.01),
+        },
+        gains: moistair_room_gains {
+            sensible: c.number(-1e4, 5e4),
+            moisture: c.number(-1e-3, 1e-2),
+            source_value: c.number(5.0, 40.0),
+            source: c.selector(3),
+            reserved: 0,
+        },
+        sorption: moistair_sorption {
+            heat_ratio: c.number(1.0, 1.3),
+            carry_over_value: c.number(0.0, 10.0),
+            carry_over: c.selector(3),
+            reserved: 0,
+        },
+        drying_effectiveness: c.number(0.0, 1.0),
         kind: if c.below(16) == 0 { c.selector(50) } else { KINDS[c.below(KINDS.len() as u64) as usize] },
         condensate: c.selector(3),
         evaporating_water: c.selector(2),

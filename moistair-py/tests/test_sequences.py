@@ -45,14 +45,37 @@ EACH = [
     (sequence.Evaporative(0.8), lambda s: humidify.evaporative(s, saturation_effectiveness=0.8)),
     (sequence.Evaporative(0.8, 15.0), lambda s: humidify.evaporative(s, saturation_effectiveness=0.8, water_temperature=15.0)),
     (sequence.Mix(stream(5.0, 0.8, 0.5)), lambda s: mixing.adiabatic(s, stream(5.0, 0.8, 0.5))),
+    (sequence.DirectCooler(0.85, 0.9, pump_heat=200.0, make_up_temperature=15.0, drift_fraction=1e-4), None),
+    (sequence.Wash(2.0, 25.0, 0.8, pump_heat=900.0, carry_over_fraction=1e-4), None),
+    (sequence.IndirectCooler(stream(20.0, 0.4), effectiveness=0.6, exhaust_humidity=0.95, effectiveness_of="wet_bulb"), None),
+    (sequence.Room(5e3, 1e-3), None),
+    (sequence.Room(5e3, 1e-3, moisture_source="enthalpy", source_value=2.55e6), None),
+    (sequence.DesiccantToHumidityRatio(0.006, sorption_heat_ratio=1.1, carry_over="rise", carry_over_value=4.0), None),
+    (sequence.DesiccantByEffectiveness(0.5, sorption_heat_ratio=1.1, driest=0.001), None),
     (sequence.Compress(1.1e5, 40.0), lambda s: compression.to_pressure(s, pressure=1.1e5, leaving_temperature=40.0)),
 ]
+
+
+def assert_balance(entering, step, done):
+    """What the step says by name is what it says by exchange and what the air shows."""
+    loads, result, leaving = done.total.loads, done.steps[0], done.total.leaving
+    heat = loads.recovered + loads.gains + loads.water_heat + loads.fan_work
+    water = loads.humidifying_water + loads.moisture_gain + loads.recovered_water - loads.condensate
+    assert (heat, water) == (result.exchange.heat, result.exchange.water) and result.books.close
+    before = entering.air.humidity_ratio
+    assert abs(leaving.air.total_water - before - water) < 1e-15
+    changed = heat != 0.0 or water != 0.0 or leaving.air.air.pressure != entering.air.pressure
+    assert changed and not result.frost
+    assert not result.condenses
 
 
 @pytest.mark.parametrize("step, alone", EACH, ids=lambda value: type(value).__name__)
 def test_each_step_is_its_process(step, alone):
     entering = stream(30.0, 0.4)
     done = sequence.run(entering, [step])
+    if alone is None:
+        assert_balance(entering, step, done)
+        return
     expected = alone(entering)
     leaving = expected.leaving if isinstance(expected.leaving, WetStream) else WetStream(expected.leaving.air, dry_air_flow=expected.leaving.dry_air_flow)
     assert done.total.leaving == leaving == done.steps[0].leaving
@@ -152,6 +175,22 @@ def test_solve():
     assert np.isnan(many.number[3]) and many.refused.code.tolist() == [301, 301, 301, -1]
 
 
+def test_cautions():
+    frosting = sequence.CoilByBypassFactor(apparatus_dew_point=np.array([-8.0, 8.0]), bypass_factor=0.1)
+    done = sequence.run(stream(22.0, 0.45), [frosting, sequence.WithHeat(100.0)])
+    assert done.steps[0].frost.tolist() == [True, False] and done.total.frost.tolist() == [True, False]
+    assert not done.steps[1].frost.any() and not done.total.condenses.any()
+    cooler = sequence.IndirectCooler(stream(22.0, 0.45), effectiveness=0.9, exhaust_humidity=0.95)
+    assert sequence.run(stream(33.0, 0.85), [cooler]).total.condenses
+    for step in (
+        sequence.Room(1e3, 0.0, moisture_source="people"),
+        sequence.DesiccantByEffectiveness(0.5, sorption_heat_ratio=1.1, carry_over="some"),
+        sequence.IndirectCooler(stream(20.0, 0.4), effectiveness=0.6, exhaust_humidity=0.95, effectiveness_of="dry_bulb"),
+    ):
+        with pytest.raises(ValueError, match="must be"):
+            sequence.run(stream(20.0, 0.5), [step])
+
+
 def test_refused_solves():
     entering, chain = stream(33.0, 0.45, 0.6), CHAIN[:3]
     right = {"free": (1, "leaving_temperature"), "low": 5.0, "high": 20.0, "wanted": "humidity_ratio", "value": 0.008}
@@ -182,12 +221,16 @@ def test_refused_solves():
     assert sequence.run(entering, [sequence.WithHeat(1.0)] * 100).total.loads.heating == 100.0
 
 
+NAMED = {"arrangement", "motor", "effectiveness_of", "moisture_source", "carry_over"}
+OTHERS = {"leaving": air(14.0, 0.9), "target": air(14.0, 0.9), "surroundings": air(40.0, 0.3)}
+OTHERS |= {name: stream(20.0, 0.4, np.abs(odd_numbers(random(42), FUZZ))) for name in ("stream", "exhaust", "secondary")}
+
+
 @pytest.mark.parametrize("kind", [type(step) for step, _ in EACH], ids=lambda kind: kind.__name__)
 def test_odd_numbers(kind):
     rng = random(41)
-    numbers = {name: odd_numbers(rng, FUZZ) for name in kind.__dataclass_fields__ if name not in ("leaving", "target", "stream", "arrangement")}
-    states = {"leaving": air(14.0, 0.9), "target": air(14.0, 0.9), "stream": stream(5.0, 0.8, np.abs(odd_numbers(rng, FUZZ)))}
-    step = kind(**numbers, **{name: value for name, value in states.items() if name in kind.__dataclass_fields__})
+    numbers = {name: odd_numbers(rng, FUZZ) for name in kind.__dataclass_fields__ if name not in NAMED | set(OTHERS)}
+    step = kind(**numbers, **{name: value for name, value in OTHERS.items() if name in kind.__dataclass_fields__})
     entering = stream(rng.uniform(-40.0, 60.0, FUZZ), rng.uniform(0.0, 0.9, FUZZ))
     done = sequence.run(entering, [step, sequence.Eliminate()])
     allowed = {0, 201, 202, 203, 206, 207, 211, 301, 310, 311, 312, 313}

@@ -23,13 +23,12 @@ use moistair_core::process::tower::merkel::{self, Quadrature};
 use moistair_core::process::tower::poppe::{self, Transfer};
 use moistair_core::process::tower::{self, HotWater, TowerWater, WaterTreatment, WaterUse, effectiveness_ntu};
 use moistair_core::process::{AirStream, Exchange, WetStream, mixing, reheat, sensible};
-use moistair_core::sequence::{EVALUATION_CAP, Free, SequenceError, Step, StepResult, Target, Total, run, solve};
 use moistair_core::signal::Quality;
 use moistair_core::*;
 use std::collections::BTreeMap;
 
 /// Every class of `f64`, limits of quantities and their neighbors, common slips of units, and random bits.
-fn number(random: &mut Random) -> f64 {
+pub fn number(random: &mut Random) -> f64 {
     const CLASSES: [f64; 42] = [
         f64::NAN,
         f64::INFINITY,
@@ -87,7 +86,7 @@ fn number(random: &mut Random) -> f64 {
     }
 }
 
-fn any_air(random: &mut Random) -> MoistAir {
+pub fn any_air(random: &mut Random) -> MoistAir {
     loop {
         let formulation = Formulation::ALL[(random.bits() % Formulation::ALL.len() as u64) as usize];
         let pressure = if random.bits() & 1 == 0 { 101_325.0 } else { number(random) };
@@ -109,10 +108,10 @@ fn any_air(random: &mut Random) -> MoistAir {
 
 /// Calls made, results given, and errors by their code.
 #[derive(Default)]
-struct Seen(BTreeMap<&'static str, (u32, BTreeMap<i32, u32>)>);
+pub struct Seen(BTreeMap<&'static str, (u32, BTreeMap<i32, u32>)>);
 
 impl Seen {
-    fn take<T>(&mut self, process: &'static str, result: Result<T, Error>, check: impl FnOnce(&T)) {
+    pub fn take<T>(&mut self, process: &'static str, result: Result<T, Error>, check: impl FnOnce(&T)) {
         let (given, errors) = self.0.entry(process).or_default();
         match result {
             Ok(done) => {
@@ -132,7 +131,7 @@ impl Seen {
 
 impl Seen {
     /// Prints, and fails where a process always did the same.
-    fn report(&self) {
+    pub fn report(&self) {
         for (process, (given, errors)) in &self.0 {
             println!("{process}: {given} results, errors by code {errors:?}");
             assert!(*given > 0, "{process} never gave a result: nothing was tried");
@@ -146,12 +145,12 @@ fn usual_steam() -> Steam {
 }
 
 #[track_caller]
-fn finite(numbers: &[f64]) {
+pub fn finite(numbers: &[f64]) {
     assert!(numbers.iter().all(|x| x.is_finite()), "{numbers:?}");
 }
 
 #[track_caller]
-fn outlet(leaving: &WetStream, exchange: &Exchange) {
+pub fn outlet(leaving: &WetStream, exchange: &Exchange) {
     sound(leaving).unwrap_or_else(|error| panic!("{error}"));
     let water = exchange.water.kilograms_per_second();
     finite(&[
@@ -664,178 +663,3 @@ fn no_argument_breaks_a_process() {
     assert!(decisions.iter().all(|count| *count > 0));
     seen.report();
 }
-
-/// A number of any bits, or one that may do.
-fn often(random: &mut Random, likely: f64) -> f64 {
-    if random.bits().is_multiple_of(3) { number(random) } else { likely * random.between(0.9, 1.1) }
-}
-
-fn any_step(random: &mut Random, basis: Basis) -> Step {
-    let condensate = match random.bits() % 3 {
-        0 => CondensateTemperature::LeavingAir,
-        1 => CondensateTemperature::Apparatus,
-        _ => CondensateTemperature::Given(celsius(often(random, 10.0))),
-    };
-    let air = any_air(random);
-    let air = MoistAir::restore(air.dry_bulb(), air.humidity_ratio(), basis).unwrap_or(air);
-    let wet = AirWithCondensate::new(air, ratio(often(random, 1e-3)), ratio(0.0)).unwrap_or(air.into());
-    let mut x = |likely| often(random, likely);
-    match x(1.0).to_bits() % 15 {
-        0 => Step::ToTemperature(celsius(x(30.0))),
-        1 => Step::WithHeat(HeatFlow::from_watts(x(1e3))),
-        2 => Step::CoilToState { leaving: air, condensate },
-        3 => {
-            let relative_humidity = RelativeHumidity::from_fraction(x(0.9));
-            Step::CoilToTemperature { leaving: celsius(x(10.0)), relative_humidity, condensate }
-        }
-        4 => Step::CoilByBypassFactor { apparatus_dew_point: celsius(x(8.0)), bypass_factor: x(0.1), condensate },
-        5 => {
-            let coolant = match x(1.0).to_bits() % 2 {
-                0 => Coolant::Water,
-                _ => Coolant::Brine(SpecificHeat::from_joules_per_kilogram_kelvin(x(3e3))),
-            };
-            let surface = CoilSurface {
-                air_side: Conductance::from_watts_per_kelvin(x(2e3)),
-                water_side: Conductance::from_watts_per_kelvin(x(2e3)),
-                arrangement: Arrangement::Counterflow,
-            };
-            let water = CoilWater { flow: flow(x(1.0)), entering: celsius(x(8.0)), coolant };
-            Step::CoilWithWater { surface, water, condensate }
-        }
-        6 => Step::CoilWithReheat { target: air, coil_leaving: RelativeHumidity::from_fraction(x(0.9)), condensate },
-        7 => Step::Steam { flow: flow(x(1e-3)), enthalpy: joules(x(2.7e6)) },
-        8 => Step::SteamToHumidityRatio { target: ratio(x(0.02)), enthalpy: joules(x(2.7e6)) },
-        9 => {
-            let target = RelativeHumidity::from_fraction(x(0.9));
-            Step::SteamToRelativeHumidity { target, enthalpy: joules(x(2.7e6)) }
-        }
-        10 => Step::Spray { flow: flow(x(1e-3)), temperature: celsius(x(15.0)) },
-        11 => Step::Evaporative { saturation_effectiveness: x(0.8), water: EvaporatingWater::Given(celsius(x(15.0))) },
-        12 => Step::Mix(WetStream::new(wet, flow(x(1.0))).unwrap_or(stream(air, 1.0).into())),
-        13 => Step::Eliminate,
-        _ => Step::Compress { pressure: Pressure::from_pascals(x(1e5)), leaving: celsius(x(40.0)) },
-    }
-}
-
-fn sound_chain(total: &Total, results: &[Option<StepResult>]) {
-    outlet(&total.leaving, &total.exchange);
-    // Subnormal flows have no digits left to close with.
-    let normal = |stream: &WetStream| stream.dry_air_flow().kilograms_per_second() > 1e-290;
-    assert!(total.books.close() || !normal(&total.leaving), "{total:?}");
-    for result in results.iter().flatten() {
-        outlet(&result.leaving, &result.exchange);
-        assert!(result.books.close() || !normal(&result.entering), "{result:?}");
-        let loads = result.loads;
-        finite(&[
-            loads.heating.watts(),
-            loads.cooling.watts(),
-            loads.sensible_cooling.watts(),
-            loads.latent_cooling.watts(),
-            loads.compression.watts(),
-            loads.condensate.kilograms_per_second(),
-            loads.steam.kilograms_per_second(),
-            loads.humidifying_water.kilograms_per_second(),
-            loads.mixed_in.kilograms_per_second(),
-        ]);
-    }
-}
-
-#[test]
-fn no_argument_breaks_a_chain() {
-    let mut random = Random(12);
-    let mut seen = Seen::default();
-    let mut most = 0;
-    let cases = std::env::var("MOISTAIR_CASES").map_or(2_000, |cases| cases.parse().unwrap());
-    for _ in 0..cases {
-        let air = any_air(&mut random);
-        let carried = AirWithCondensate::new(air, ratio(often(&mut random, 1e-3)), ratio(0.0));
-        let wet = if random.bits().is_multiple_of(4) { carried.unwrap_or(air.into()) } else { air.into() };
-        let entering = WetStream::new(wet, flow(often(&mut random, 1.0))).unwrap_or(stream(air, 1.0).into());
-        let mut steps: [Step; 4] = core::array::from_fn(|_| any_step(&mut random, air.basis()));
-        let mut results = [None; 4];
-        let length = 1 + (random.bits() % 4) as usize;
-        let steps = &mut steps[..length];
-        let names: Vec<_> = steps.iter().map(|step| format!("{step:?}")).collect();
-        let step_of = |error: SequenceError| {
-            assert!(error.step < length && !error.to_string().is_empty());
-            error.error
-        };
-        for (step, name) in steps.iter().zip(&names) {
-            let name = name.split(['(', ' ']).next().unwrap();
-            let alone = run(&entering, &[*step], &mut results);
-            seen.take(NAMES.iter().find(|known| **known == name).unwrap(), alone.map_err(step_of), |total| {
-                sound_chain(total, &results);
-            });
-        }
-        let total = run(&entering, steps, &mut results);
-        seen.take("chain", total.map_err(step_of), |total| sound_chain(total, &results));
-        let index = |random: &mut Random| match random.bits() % 8 {
-            0 => random.bits() as usize,
-            _ => (random.bits() % 4) as usize,
-        };
-        let quantity = |random: &mut Random| Quantity::ALL[(random.bits() % Quantity::ALL.len() as u64) as usize];
-        let place = (random.bits() % length as u64) as usize;
-        let own = |quantity: &&Quantity| steps[place].with_number(**quantity, 1.0).is_ok();
-        let own: Vec<_> = Quantity::ALL.iter().filter(own).collect();
-        let free_number = match own[..] {
-            [] => quantity(&mut random),
-            _ if random.bits().is_multiple_of(8) => quantity(&mut random),
-            _ => *own[(random.bits() % own.len() as u64) as usize],
-        };
-        let (least, most_of_it) = air.formulation().limits(free_number);
-        let mut end = |limit: f64| {
-            if random.bits().is_multiple_of(3) { limit } else { often(&mut random, limit.clamp(0.0, 30.0)) }
-        };
-        let (low, high) = (end(least), end(most_of_it));
-        let free = Free {
-            step: if random.bits().is_multiple_of(16) { index(&mut random) } else { place },
-            number: free_number,
-            low,
-            high,
-        };
-        let after = index(&mut random);
-        let target = Target {
-            after: (random.bits() & 1 == 0).then_some(if random.bits().is_multiple_of(16) {
-                after
-            } else {
-                length - 1
-            }),
-            quantity: match random.bits() % 4 {
-                0 => Quantity::DryBulb,
-                1 => quantity(&mut random),
-                _ => Quantity::ALL[(random.bits() % 35) as usize],
-            },
-            value: often(&mut random, 15.0),
-        };
-        let solved = solve(&entering, steps, &mut results, free, target).map_err(|error| error.error);
-        seen.take("solve", solved, |solved| {
-            sound_chain(&solved.total, &results);
-            finite(&[solved.number, solved.reached, solved.low.number, solved.high.number, solved.high.reached]);
-            assert!(!solved.residual.is_nan());
-            most = most.max(solved.evaluations);
-        });
-        let made = steps[0].with_number(quantity(&mut random), number(&mut random));
-        seen.take("number of a step", made, |_| ());
-    }
-    println!("most evaluations of a solve: {most} of {EVALUATION_CAP}");
-    assert!(most <= EVALUATION_CAP);
-    seen.report();
-}
-
-const NAMES: [&str; 15] = [
-    "ToTemperature",
-    "WithHeat",
-    "CoilToState",
-    "CoilToTemperature",
-    "CoilByBypassFactor",
-    "CoilWithWater",
-    "CoilWithReheat",
-    "Steam",
-    "SteamToHumidityRatio",
-    "SteamToRelativeHumidity",
-    "Spray",
-    "Evaporative",
-    "Mix",
-    "Eliminate",
-    "Compress",
-];

@@ -13,6 +13,7 @@ mod desiccants;
 mod economizer;
 mod facts;
 mod hostile;
+mod hostile_sequences;
 mod humidifiers;
 mod laws;
 mod outdoor_air;

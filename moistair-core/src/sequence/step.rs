@@ -5,8 +5,11 @@ use crate::bounds::Quantity;
 use crate::error::{Error, checked, checked_for};
 use crate::process::books::Ledger;
 use crate::process::coil::{self, CoilRegime, CondensateTemperature, Coolant, Cooling, WaterCoil};
+use crate::process::desiccant::{self, Sorbed};
+use crate::process::evaporative::{self, IndirectCooled, IndirectEffectiveness, IndirectStatus};
 use crate::process::humidify::{self, EvaporatingWater, Humidified};
 use crate::process::reheat::{self, Reheat};
+use crate::process::room::{self, RoomAir};
 use crate::process::sensible::{self, Sensible};
 use crate::process::{AirStream, Exchange, WetStream, compression, infeasible, mixing};
 use crate::quantity::{
@@ -23,11 +26,12 @@ pub(super) struct Done<S> {
     pub loads: Loads<S>,
     pub regime: Option<CoilRegime>,
     pub frost: bool,
+    pub condenses: bool,
 }
 
 impl<S: Scalar> Done<S> {
     fn new(leaving: WetStream<S>, exchange: Exchange<S>, loads: Loads<S>) -> Self {
-        Self { leaving, exchange, loads, regime: None, frost: false }
+        Self { leaving, exchange, loads, regime: None, frost: false, condenses: false }
     }
 
     pub fn result(&self, entering: &WetStream<S>, mixed_in: Option<WetStream<S>>) -> StepResult<S> {
@@ -46,6 +50,7 @@ impl<S: Scalar> Done<S> {
             loads: self.loads,
             regime: self.regime,
             frost: self.frost,
+            condenses: self.condenses,
             books: ledger.books(),
         }
     }
@@ -75,6 +80,7 @@ impl<S: Scalar> From<Cooling<S>> for Done<S> {
             loads: Loads { condensate: done.condensate, ..loads },
             regime: Some(done.regime),
             frost: done.regime == CoilRegime::Frost,
+            condenses: false,
         }
     }
 }
@@ -98,6 +104,37 @@ impl<S: Scalar> From<Reheat<S>> for Done<S> {
     }
 }
 
+impl<S: Scalar> From<IndirectCooled<S>> for Done<S> {
+    fn from(done: IndirectCooled<S>) -> Self {
+        let exchange = done.primary_exchange;
+        let loads = Loads {
+            recovered: exchange.heat,
+            condensate: done.condensate,
+            secondary_water: done.secondary.exchange.water,
+            ..Loads::none()
+        };
+        Self {
+            frost: done.status == IndirectStatus::Frosting,
+            condenses: done.condensate.kilograms_per_second() > k(0.0),
+            ..Self::new(done.primary.into(), exchange, loads)
+        }
+    }
+}
+
+impl<S: Scalar> From<RoomAir<S>> for Done<S> {
+    fn from(done: RoomAir<S>) -> Self {
+        let (gains, moisture_gain) = (done.exchange.heat, done.exchange.water);
+        Self::new(done.room, done.exchange, Loads { gains, moisture_gain, ..Loads::none() })
+    }
+}
+
+impl<S: Scalar> From<Sorbed<S>> for Done<S> {
+    fn from(done: Sorbed<S>) -> Self {
+        let (recovered, recovered_water) = (done.exchange.heat, done.exchange.water);
+        Self::new(done.leaving.into(), done.exchange, Loads { recovered, recovered_water, ..Loads::none() })
+    }
+}
+
 /// Heat by its sign: a heater's or a dry cooler's.
 fn heat_loads<S: Scalar>(heat: HeatFlow<S>) -> Loads<S> {
     if heat.watts() < k(0.0) {
@@ -109,6 +146,17 @@ fn heat_loads<S: Scalar>(heat: HeatFlow<S>) -> Loads<S> {
 
 fn steamed<S: Scalar>(done: Humidified<S>) -> Done<S> {
     Done::new(done.leaving, done.exchange, Loads { steam: done.exchange.water, ..Loads::none() })
+}
+
+/// Media and washers, whose water brings heat and may take vapor out of the air.
+fn washed<S: Scalar>(done: Humidified<S>) -> Done<S> {
+    let water = done.exchange.water;
+    let loads = if water.kilograms_per_second() < k(0.0) {
+        Loads { condensate: -water, ..Loads::none() }
+    } else {
+        Loads { humidifying_water: water, ..Loads::none() }
+    };
+    Done::new(done.leaving, done.exchange, Loads { water_heat: done.exchange.heat, ..loads })
 }
 
 fn sprayed<S: Scalar>(done: Humidified<S>) -> Done<S> {
@@ -132,9 +180,15 @@ impl<S: Scalar> Step<S> {
             Self::SteamToRelativeHumidity { .. } => 22,
             Self::Spray { .. } => 23,
             Self::Evaporative { .. } => 24,
+            Self::DirectCooler(_) => 25,
+            Self::Wash(_) => 26,
             Self::Mix(_) => 30,
             Self::Eliminate => 31,
             Self::Compress { .. } => 40,
+            Self::IndirectCooler { .. } => 61,
+            Self::Room(_) => 70,
+            Self::DesiccantToHumidityRatio { .. } => 80,
+            Self::DesiccantByEffectiveness { .. } => 81,
         }
     }
 
@@ -175,6 +229,16 @@ impl<S: Scalar> Step<S> {
             Self::Evaporative { saturation_effectiveness, water } => {
                 sprayed(humidify::evaporative(&gas()?, saturation_effectiveness, water)?)
             }
+            Self::DirectCooler(cooler) => washed(evaporative::direct(&gas()?, cooler)?.air),
+            Self::Wash(washer) => washed(humidify::wash(&gas()?, washer)?.air),
+            Self::IndirectCooler { secondary, cooler } => evaporative::indirect(&gas()?, &secondary, cooler)?.into(),
+            Self::Room(gains) => room::room_of_supply(&gas()?, &gains)?.into(),
+            Self::DesiccantToHumidityRatio { target, sorption } => {
+                desiccant::to_humidity_ratio(&gas()?, target, sorption)?.into()
+            }
+            Self::DesiccantByEffectiveness { effectiveness, driest, sorption } => {
+                desiccant::by_effectiveness(&gas()?, effectiveness, driest, sorption)?.into()
+            }
             Self::Mix(other) => {
                 let done = mixing::adiabatic(&[*entering, other])?;
                 Done::new(done.leaving, done.exchange, Loads { mixed_in: other.dry_air_flow(), ..Loads::none() })
@@ -196,6 +260,7 @@ impl<S: Scalar> Step<S> {
     pub fn with_number(mut self, quantity: Quantity, value: S) -> Result<Self, Error> {
         let celsius = Temperature::from_celsius(value);
         let mass = MassFlow::from_kilograms_per_second(value);
+        let watts = HeatFlow::from_watts(value);
         let joules = SpecificEnthalpy::from_joules_per_kilogram(value);
         let unknown = Err(Error::UnknownSelector { code: quantity.code() });
         match (&mut self, quantity) {
@@ -203,7 +268,7 @@ impl<S: Scalar> Step<S> {
                 Self::ToTemperature(leaving) | Self::CoilToTemperature { leaving, .. } | Self::Compress { leaving, .. },
                 Quantity::LeavingTemperature,
             ) => *leaving = celsius,
-            (Self::WithHeat(heat), Quantity::HeatFlow) => *heat = HeatFlow::from_watts(value),
+            (Self::WithHeat(heat), Quantity::HeatFlow) => *heat = watts,
             (
                 Self::CoilToTemperature { relative_humidity: humidity, .. }
                 | Self::CoilWithReheat { coil_leaving: humidity, .. }
@@ -252,6 +317,42 @@ impl<S: Scalar> Step<S> {
                 *saturation_effectiveness = value;
             }
             (Self::Evaporative { water, .. }, Quantity::WaterTemperature) => *water = EvaporatingWater::Given(celsius),
+            (Self::DirectCooler(cooler), Quantity::SaturationEffectiveness) => cooler.saturation_effectiveness = value,
+            (Self::DirectCooler(cooler), Quantity::WaterFlow) => cooler.circulating = mass,
+            (Self::DirectCooler(cooler), Quantity::PumpHeat) => cooler.pump_heat = watts,
+            (Self::DirectCooler(cooler), Quantity::WaterTemperature) => {
+                cooler.make_up = EvaporatingWater::Given(celsius)
+            }
+            (Self::Wash(washer), Quantity::WaterFlow) => washer.water = mass,
+            (Self::Wash(washer), Quantity::WaterTemperature) => washer.temperature = celsius,
+            (Self::Wash(washer), Quantity::SaturationEffectiveness) => washer.effectiveness = value,
+            (Self::Wash(washer), Quantity::PumpHeat) => washer.pump_heat = watts,
+            (Self::IndirectCooler { secondary: other, .. }, Quantity::DryAirFlow) => {
+                *other = AirStream::new(other.air(), mass)?;
+            }
+            (Self::IndirectCooler { cooler, .. }, Quantity::IndirectEffectiveness) => {
+                cooler.effectiveness = match cooler.effectiveness {
+                    IndirectEffectiveness::OfWetBulb(_) => IndirectEffectiveness::OfWetBulb(value),
+                    IndirectEffectiveness::OfDewPoint(_) => IndirectEffectiveness::OfDewPoint(value),
+                };
+            }
+            (Self::IndirectCooler { cooler, .. }, Quantity::PumpHeat) => cooler.pump_heat = watts,
+            (Self::Room(gains), Quantity::HeatFlow) => gains.sensible = watts,
+            (Self::Room(gains), Quantity::MoistureGain) => gains.moisture = mass,
+            (
+                Self::DesiccantToHumidityRatio { target: ratio, .. }
+                | Self::DesiccantByEffectiveness { driest: ratio, .. },
+                Quantity::HumidityRatio,
+            ) => {
+                *ratio = HumidityRatio::from_kilograms_per_kilogram(value);
+            }
+            (Self::DesiccantByEffectiveness { effectiveness, .. }, Quantity::DryingEffectiveness) => {
+                *effectiveness = value
+            }
+            (
+                Self::DesiccantToHumidityRatio { sorption, .. } | Self::DesiccantByEffectiveness { sorption, .. },
+                Quantity::SorptionHeatRatio,
+            ) => sorption.heat_ratio = value,
             (Self::Mix(other), Quantity::DryAirFlow) => *other = WetStream::new(other.air(), mass)?,
             (Self::Compress { pressure, .. }, Quantity::Pressure) => *pressure = Pressure::from_pascals(value),
             _ => return unknown,

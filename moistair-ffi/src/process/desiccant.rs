@@ -56,7 +56,7 @@ pub struct moistair_sorption {
 }
 
 impl moistair_sorption {
-    fn to_core(self) -> Result<Sorption, Failure> {
+    pub(super) fn to_core(self) -> Result<Sorption, Failure> {
         let value = self.carry_over_value;
         let carry_over = match self.carry_over {
             MOISTAIR_CARRIES_NOTHING => CarryOver::None,

@@ -120,7 +120,7 @@ pub struct moistair_two_stage_cooled {
 }
 
 impl moistair_direct_cooler {
-    fn to_core(self) -> Result<DirectCooler, Failure> {
+    pub(super) fn to_core(self) -> Result<DirectCooler, Failure> {
         Ok(DirectCooler {
             saturation_effectiveness: self.saturation_effectiveness,
             circulating: mass_flow(self.circulating),
@@ -132,7 +132,7 @@ impl moistair_direct_cooler {
 }
 
 impl moistair_indirect_cooler {
-    fn to_core(self) -> Result<IndirectCooler, Failure> {
+    pub(super) fn to_core(self) -> Result<IndirectCooler, Failure> {
         Ok(IndirectCooler {
             effectiveness: match self.effectiveness_of {
                 MOISTAIR_EFFECTIVENESS_OF_WET_BULB => IndirectEffectiveness::OfWetBulb(self.effectiveness),

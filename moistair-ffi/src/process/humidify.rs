@@ -159,7 +159,7 @@ impl Answer for moistair_throttled_steam {
 }
 
 impl moistair_washer {
-    fn to_core(self) -> Washer {
+    pub(super) fn to_core(self) -> Washer {
         Washer {
             water: mass_flow(self.water),
             temperature: celsius(self.temperature),

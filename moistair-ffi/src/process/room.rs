@@ -53,7 +53,7 @@ pub struct moistair_room_gains {
 }
 
 impl moistair_room_gains {
-    fn to_core(self) -> Result<RoomGains, Failure> {
+    pub(super) fn to_core(self) -> Result<RoomGains, Failure> {
         Ok(RoomGains {
             sensible: HeatFlow::from_watts(self.sensible),
             moisture: mass_flow(self.moisture),

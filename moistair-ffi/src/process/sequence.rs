@@ -8,8 +8,11 @@ use moistair_core::sequence::{self, Free, Loads, Sequence, SolveStatus, Solved, 
 use moistair_core::{HeatFlow, Pressure, RelativeHumidity};
 
 use super::coil::condensate;
-use super::humidify::evaporating_water;
+use super::desiccant::moistair_sorption;
+use super::evaporative::{moistair_direct_cooler, moistair_indirect_cooler};
+use super::humidify::{evaporating_water, moistair_washer};
 use super::mixing::moistair_books;
+use super::room::moistair_room_gains;
 use super::stream::{moistair_exchange, moistair_wet_stream};
 use super::water_coil::{moistair_coil_surface, moistair_coil_water};
 use super::{celsius, enthalpy, finite, mass_flow, ratio};
@@ -44,12 +47,24 @@ pub const MOISTAIR_STEP_SPRAY: i32 = 23;
 /// Wetted media of saturation_effectiveness; evaporating_water says of what water, as moistair_humidify_evaporative. Reads
 /// water_temperature for MOISTAIR_WATER_AT_GIVEN only.
 pub const MOISTAIR_STEP_EVAPORATIVE: i32 = 24;
+/// Wetted media with circulating water, pump and bleed, by direct_cooler.
+pub const MOISTAIR_STEP_DIRECT_COOLER: i32 = 25;
+/// A washer, by washer.
+pub const MOISTAIR_STEP_WASH: i32 = 26;
 /// Mixing with stream, as moistair_mixing_adiabatic.
 pub const MOISTAIR_STEP_MIX: i32 = 30;
 /// All droplets and ice taken out of the air, at its own temperature: a perfect eliminator.
 pub const MOISTAIR_STEP_ELIMINATE: i32 = 31;
 /// Compression or expansion to pressure and leaving_temperature, as moistair_compress_to_pressure.
 pub const MOISTAIR_STEP_COMPRESS: i32 = 40;
+/// Indirect evaporative cooling by the gas of stream, the secondary air, and indirect_cooler.
+pub const MOISTAIR_STEP_INDIRECT_COOLER: i32 = 61;
+/// A room, by gains; what leaves is its air, as moistair_room_of_supply.
+pub const MOISTAIR_STEP_ROOM: i32 = 70;
+/// A desiccant, by sorption to humidity_ratio, as moistair_desiccant_to_humidity_ratio.
+pub const MOISTAIR_STEP_DESICCANT_TO_HUMIDITY_RATIO: i32 = 80;
+/// A desiccant of drying_effectiveness toward humidity_ratio, the driest, by sorption, as moistair_desiccant_by_effectiveness.
+pub const MOISTAIR_STEP_DESICCANT_BY_EFFECTIVENESS: i32 = 81;
 
 /// Most steps that a solve takes; a run takes any number.
 pub const MOISTAIR_MOST_STEPS: i32 = 32;
@@ -68,7 +83,7 @@ pub const MOISTAIR_SOLVE_INTERRUPTED: i32 = 3;
 #[repr(C)]
 #[derive(Clone, Copy, Debug)]
 pub struct moistair_step {
-    /// The stream that is mixed in.
+    /// The stream that is mixed in, or the secondary air of an indirect cooler.
     pub stream: moistair_wet_stream,
     /// A state that leaves.
     pub state: moistair_state,
@@ -76,6 +91,16 @@ pub struct moistair_step {
     pub surface: moistair_coil_surface,
     /// The water of a coil.
     pub water: moistair_coil_water,
+    /// Wetted media with their water.
+    pub direct_cooler: moistair_direct_cooler,
+    /// An indirect evaporative cooler.
+    pub indirect_cooler: moistair_indirect_cooler,
+    /// A washer.
+    pub washer: moistair_washer,
+    /// What a room gives to its air.
+    pub gains: moistair_room_gains,
+    /// A desiccant.
+    pub sorption: moistair_sorption,
     /// [°C], -80 to 150.
     pub leaving_temperature: f64,
     /// [W], positive into the air.
@@ -100,6 +125,8 @@ pub struct moistair_step {
     pub saturation_effectiveness: f64,
     /// Absolute [Pa].
     pub pressure: f64,
+    /// [1], 0 to 1.
+    pub drying_effectiveness: f64,
     /// MOISTAIR_STEP_….
     pub kind: i32,
     /// MOISTAIR_CONDENSATE_AT_…, of coils.
@@ -110,7 +137,7 @@ pub struct moistair_step {
     pub reserved: i32,
 }
 
-/// What a step, or a chain, asks of the plant by name; magnitudes, unless said otherwise.
+/// What a step, or a chain, asks of the plant by name. Magnitudes, unless they are said to be signed: then into the air.
 #[repr(C)]
 #[derive(Clone, Copy, Debug)]
 pub struct moistair_loads {
@@ -122,14 +149,30 @@ pub struct moistair_loads {
     pub sensible_cooling: f64,
     /// The rest of it [W].
     pub latent_cooling: f64,
-    /// Of compression and expansion: work less the heat of cooling, signed [W].
+    /// Heat from another stream through a heat recovery or an indirect cooler, or carried over by a desiccant; signed [W].
+    pub recovered: f64,
+    /// Sensible heat of rooms, and heat through the walls of ducts; signed [W].
+    pub gains: f64,
+    /// Heat that circulating water brings with it: of its pump, of its make-up, of chilled spray; signed [W].
+    pub water_heat: f64,
+    /// Power of fans that reaches the air [W].
+    pub fan_work: f64,
+    /// Electric power of fans, that part of it included [W].
+    pub fan_power: f64,
+    /// Of compression and expansion: work less the heat of cooling; signed [W].
     pub compression: f64,
-    /// Water that drains from coils and eliminators [kg/s].
+    /// Water that drains from coils, eliminators, coolers and washers [kg/s].
     pub condensate: f64,
     /// Steam into the air [kg/s].
     pub steam: f64,
     /// Liquid water into the air, with what it carries on as droplets [kg/s].
     pub humidifying_water: f64,
+    /// Moisture of rooms; signed [kg/s].
+    pub moisture_gain: f64,
+    /// Vapor from another stream through a heat recovery, or from a desiccant; signed [kg/s].
+    pub recovered_water: f64,
+    /// Water that evaporates into a secondary stream, not into this one [kg/s].
+    pub secondary_water: f64,
     /// Dry air of other streams mixed in [kg/s].
     pub mixed_in: f64,
 }
@@ -152,6 +195,10 @@ pub struct moistair_step_result {
     pub regime: i32,
     /// 1 if frost forms, or water in a coil may freeze; else 0. No freezestat.
     pub frost: i32,
+    /// 1 if water condenses where no coil drains it: on or in a duct, in a heat recovery or an indirect cooler; else 0.
+    pub condenses: i32,
+    /// 0.
+    pub reserved: i32,
 }
 
 /// What all steps of a chain did together.
@@ -168,8 +215,8 @@ pub struct moistair_sequence_total {
     pub books: moistair_books,
     /// 1 if any step reports frost, else 0.
     pub frost: i32,
-    /// 0.
-    pub reserved: i32,
+    /// 1 if any step reports condensation, else 0.
+    pub condenses: i32,
 }
 
 /// The number of a step that is free, and where to look for it.
@@ -272,6 +319,22 @@ impl moistair_step {
             MOISTAIR_STEP_MIX => Step::Mix(self.stream.to_core()?),
             MOISTAIR_STEP_ELIMINATE => Step::Eliminate,
             MOISTAIR_STEP_COMPRESS => Step::Compress { pressure: Pressure::from_pascals(self.pressure), leaving },
+            MOISTAIR_STEP_DIRECT_COOLER => Step::DirectCooler(self.direct_cooler.to_core()?),
+            MOISTAIR_STEP_WASH => Step::Wash(self.washer.to_core()),
+            MOISTAIR_STEP_INDIRECT_COOLER => Step::IndirectCooler {
+                secondary: self.stream.to_core()?.without_condensate(),
+                cooler: self.indirect_cooler.to_core()?,
+            },
+            MOISTAIR_STEP_ROOM => Step::Room(self.gains.to_core()?),
+            MOISTAIR_STEP_DESICCANT_TO_HUMIDITY_RATIO => Step::DesiccantToHumidityRatio {
+                target: ratio(self.humidity_ratio),
+                sorption: self.sorption.to_core()?,
+            },
+            MOISTAIR_STEP_DESICCANT_BY_EFFECTIVENESS => Step::DesiccantByEffectiveness {
+                effectiveness: self.drying_effectiveness,
+                driest: ratio(self.humidity_ratio),
+                sorption: self.sorption.to_core()?,
+            },
             _ => return Err(Failure::UnknownSelector(self.kind)),
         })
     }
@@ -284,10 +347,18 @@ impl From<Loads> for moistair_loads {
             cooling: loads.cooling.watts(),
             sensible_cooling: loads.sensible_cooling.watts(),
             latent_cooling: loads.latent_cooling.watts(),
+            recovered: loads.recovered.watts(),
+            gains: loads.gains.watts(),
+            water_heat: loads.water_heat.watts(),
+            fan_work: loads.fan_work.watts(),
+            fan_power: loads.fan_power.watts(),
             compression: loads.compression.watts(),
             condensate: loads.condensate.kilograms_per_second(),
             steam: loads.steam.kilograms_per_second(),
             humidifying_water: loads.humidifying_water.kilograms_per_second(),
+            moisture_gain: loads.moisture_gain.kilograms_per_second(),
+            recovered_water: loads.recovered_water.kilograms_per_second(),
+            secondary_water: loads.secondary_water.kilograms_per_second(),
             mixed_in: loads.mixed_in.kilograms_per_second(),
         }
     }
@@ -303,6 +374,8 @@ impl From<StepResult> for moistair_step_result {
             books: done.books.into(),
             regime: done.regime.map_or(-1, |regime| regime as i32),
             frost: done.frost.into(),
+            condenses: done.condenses.into(),
+            reserved: 0,
         }
     }
 }
@@ -315,7 +388,7 @@ impl From<Total> for moistair_sequence_total {
             loads: total.loads.into(),
             books: total.books.into(),
             frost: total.frost.into(),
-            reserved: 0,
+            condenses: total.condenses.into(),
         }
     }
 }
@@ -341,8 +414,10 @@ impl From<Solved> for moistair_solved {
 
 impl Answer for moistair_loads {
     fn is_finite(&self) -> bool {
-        finite([self.heating, self.cooling, self.sensible_cooling, self.latent_cooling, self.compression])
-            && finite([self.condensate, self.steam, self.humidifying_water, self.mixed_in])
+        finite([self.heating, self.cooling, self.sensible_cooling, self.latent_cooling, self.recovered])
+            && finite([self.gains, self.water_heat, self.fan_work, self.fan_power, self.compression])
+            && finite([self.condensate, self.steam, self.humidifying_water, self.moisture_gain])
+            && finite([self.recovered_water, self.secondary_water, self.mixed_in])
     }
 }
 
@@ -513,10 +588,10 @@ pub unsafe extern "C" fn moistair_sequence_solve(
 }
 
 const _: () = {
-    assert!(size_of::<moistair_step>() == 408 && core::mem::offset_of!(moistair_step, kind) == 392);
-    assert!(size_of::<moistair_loads>() == 72 && size_of::<moistair_step_result>() == 440);
-    assert!(core::mem::offset_of!(moistair_step_result, regime) == 432);
-    assert!(size_of::<moistair_sequence_total>() == 296 && size_of::<moistair_solved>() == 368);
+    assert!(size_of::<moistair_step>() == 608 && core::mem::offset_of!(moistair_step, kind) == 592);
+    assert!(size_of::<moistair_loads>() == 136 && size_of::<moistair_step_result>() == 512);
+    assert!(core::mem::offset_of!(moistair_step_result, regime) == 496);
+    assert!(size_of::<moistair_sequence_total>() == 360 && size_of::<moistair_solved>() == 432);
     assert!(size_of::<moistair_free>() == 24 && size_of::<moistair_target>() == 16);
     assert!(sequence::EVALUATION_CAP == 179);
     assert!(Step::<f64>::Eliminate.code() == MOISTAIR_STEP_ELIMINATE);

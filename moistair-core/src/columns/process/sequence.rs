@@ -187,9 +187,19 @@ fn read(kind: i32, row: &mut Row<'_>) -> Outcome<Step> {
         22 => Step::SteamToRelativeHumidity { target: Argument::read(row)?, enthalpy: Argument::read(row)? },
         23 => Step::Spray { flow: Argument::read(row)?, temperature: Argument::read(row)? },
         24 => Step::Evaporative { saturation_effectiveness: Argument::read(row)?, water: Argument::read(row)? },
+        25 => Step::DirectCooler(Argument::read(row)?),
+        26 => Step::Wash(Argument::read(row)?),
         30 => Step::Mix(Argument::read(row)?),
         31 => Step::Eliminate,
         40 => Step::Compress { pressure: Argument::read(row)?, leaving: Argument::read(row)? },
+        61 => Step::IndirectCooler { secondary: Argument::read(row)?, cooler: Argument::read(row)? },
+        70 => Step::Room(Argument::read(row)?),
+        80 => Step::DesiccantToHumidityRatio { target: Argument::read(row)?, sorption: Argument::read(row)? },
+        81 => Step::DesiccantByEffectiveness {
+            effectiveness: Argument::read(row)?,
+            driest: Argument::read(row)?,
+            sorption: Argument::read(row)?,
+        },
         other => return Err(RowError::Choice(other)),
     })
 }
@@ -200,11 +210,19 @@ answers! {
         cooling: x.cooling,
         sensible_cooling: x.sensible_cooling,
         latent_cooling: x.latent_cooling,
+        recovered: x.recovered,
+        gains: x.gains,
+        water_heat: x.water_heat,
+        fan_work: x.fan_work,
+        fan_power: x.fan_power,
+        compression: x.compression,
         condensate: x.condensate,
         steam: x.steam,
         humidifying_water: x.humidifying_water,
+        moisture_gain: x.moisture_gain,
+        recovered_water: x.recovered_water,
+        secondary_water: x.secondary_water,
         mixed_in: x.mixed_in,
-        compression: x.compression,
     }
     StepResult, |x| {
         entering: x.entering,
@@ -213,9 +231,10 @@ answers! {
         loads: x.loads,
         regime: x.regime,
         frost: x.frost,
+        condenses: x.condenses,
         books: x.books,
     }
-    Total, |x| { leaving: x.leaving, exchange: x.exchange, loads: x.loads, frost: x.frost, books: x.books }
+    Total, |x| { leaving: x.leaving, exchange: x.exchange, loads: x.loads, frost: x.frost, condenses: x.condenses, books: x.books }
     End, |x| { number: x.number, reached: x.reached }
     Solved, |x| {
         how: x.status,

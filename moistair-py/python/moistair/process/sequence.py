@@ -36,13 +36,18 @@ __all__ = [
     "CoilWithReheat",
     "CoilWithWater",
     "Compress",
+    "DesiccantByEffectiveness",
+    "DesiccantToHumidityRatio",
+    "DirectCooler",
     "Done",
     "Eliminate",
     "End",
     "Evaporative",
+    "IndirectCooler",
     "Loads",
     "Mix",
     "Refusal",
+    "Room",
     "SolveStatus",
     "Solved",
     "Spray",
@@ -54,10 +59,22 @@ __all__ = [
     "StepResult",
     "ToTemperature",
     "Total",
+    "Wash",
     "WithHeat",
     "run",
     "solve",
 ]
+
+#: Toward which temperature of the secondary air an indirect cooler is counted.
+EffectivenessOf = Union[Literal["wet_bulb"], Literal["dew_point"]]
+
+#: Where the moisture of a room comes from.
+MoistureSource = Union[Literal["saturated_vapor"], Literal["liquid"], Literal["enthalpy"]]
+
+#: What the matrix of a desiccant wheel brings from the regeneration.
+CarryOver = Union[Literal["none"], Literal["heat"], Literal["rise"]]
+
+_CARRY_OVER = {"none": 0, "heat": 1, "rise": 2}
 
 Arguments = tuple[tuple[str, Any], ...]
 
@@ -344,6 +361,80 @@ class Evaporative(Step):
 
 
 @dataclass(frozen=True, eq=False)
+class DirectCooler(Step):
+    """Wetted media with circulating water, pump and bleed: a direct evaporative cooler, or a humidifier.
+
+    Parameters
+    ----------
+    saturation_effectiveness : float or array_like
+        Toward the temperature of the circulating water, 0 to 1.
+    circulating_flow : float or array_like
+        Water over the medium, kg/s.
+    pump_heat : float or array_like
+        Power of the pump, W.
+    make_up_temperature : 'wet_bulb', float or array_like
+        Of the make-up: that of the circulating water, or stated, °C.
+    drift_fraction : float or array_like
+        Droplets carried over, as a share of the circulating water.
+    cycles_of_concentration : float or array_like
+        That the bleed keeps.
+    """
+
+    _kind = 25
+    saturation_effectiveness: ArrayLike
+    circulating_flow: ArrayLike
+    pump_heat: ArrayLike = 0.0
+    make_up_temperature: Union[Literal["wet_bulb"], ArrayLike] = "wet_bulb"
+    drift_fraction: ArrayLike = 0.0
+    cycles_of_concentration: ArrayLike = 3.0
+
+    def _arguments(self) -> Arguments:
+        return (
+            ("saturation_effectiveness", self.saturation_effectiveness),
+            ("circulating_flow", self.circulating_flow),
+            ("pump_heat", self.pump_heat),
+            *choice(self.make_up_temperature, {"wet_bulb": 0}, "make_up_temperature"),
+            ("drift_fraction", self.drift_fraction),
+            ("cycles_of_concentration", self.cycles_of_concentration),
+        )
+
+
+@dataclass(frozen=True, eq=False)
+class Wash(Step):
+    """A washer: much water, of any temperature, in short contact with the air.
+
+    Parameters
+    ----------
+    water_flow : float or array_like
+        Water sprayed, kg/s.
+    water_temperature : float or array_like
+        °C; chilled below the dew point it takes water out of the air.
+    effectiveness : float or array_like
+        How far the air comes toward the temperature of the water that leaves, 0 to 1.
+    pump_heat : float or array_like
+        Power of the pump, W.
+    carry_over_fraction : float or array_like
+        Droplets that pass the eliminators, over the water sprayed.
+    """
+
+    _kind = 26
+    water_flow: ArrayLike
+    water_temperature: ArrayLike
+    effectiveness: ArrayLike
+    pump_heat: ArrayLike = 0.0
+    carry_over_fraction: ArrayLike = 0.0
+
+    def _arguments(self) -> Arguments:
+        return (
+            ("water_flow", self.water_flow),
+            ("water_temperature", self.water_temperature),
+            ("effectiveness", self.effectiveness),
+            ("pump_heat", self.pump_heat),
+            ("carry_over_fraction", self.carry_over_fraction),
+        )
+
+
+@dataclass(frozen=True, eq=False)
 class Mix(Step):
     """Another stream mixed in, outdoor air or return air, as `mixing.adiabatic`.
 
@@ -390,6 +481,143 @@ class Compress(Step):
         return ("pressure", self.pressure), ("leaving_temperature", self.leaving_temperature)
 
 
+@dataclass(frozen=True, eq=False)
+class IndirectCooler(Step):
+    """Indirect evaporative cooling, of which this air is the primary side.
+
+    Parameters
+    ----------
+    secondary : AirStream
+        The air that is wetted behind the wall.
+    effectiveness : float or array_like
+        How far the primary air is cooled, if it stays dry.
+    exhaust_humidity : float or array_like
+        Relative humidity over liquid at which the secondary air leaves.
+    effectiveness_of : {'wet_bulb', 'dew_point'}
+        Toward which temperature of the secondary air.
+    pump_heat : float or array_like
+        Power of the pump, W.
+    water_temperature : 'wet_bulb', float or array_like
+        Of the water that evaporates, °C.
+    """
+
+    _kind = 61
+    secondary: AirStream[Any]
+    effectiveness: ArrayLike
+    exhaust_humidity: ArrayLike
+    effectiveness_of: EffectivenessOf = "wet_bulb"
+    pump_heat: ArrayLike = 0.0
+    water_temperature: Union[Literal["wet_bulb"], ArrayLike] = "wet_bulb"
+
+    def _arguments(self) -> Arguments:
+        expect(self.secondary, AirStream, "secondary")
+        return (
+            ("secondary", self.secondary),
+            code({"wet_bulb": 0, "dew_point": 1}, self.effectiveness_of, "effectiveness_of"),
+            ("effectiveness", self.effectiveness),
+            ("exhaust_humidity", self.exhaust_humidity),
+            ("pump_heat", self.pump_heat),
+            *choice(self.water_temperature, {"wet_bulb": 0}, "water_temperature"),
+        )
+
+
+@dataclass(frozen=True, eq=False)
+class Room(Step):
+    """A room and its gains; what leaves is its air.
+
+    Parameters
+    ----------
+    sensible : float or array_like
+        Heat that comes without water, W; negative in a room that loses heat.
+    moisture : float or array_like
+        Water, kg/s; negative where it is taken out.
+    moisture_source : {'saturated_vapor', 'liquid', 'enthalpy'}
+        Where the water comes from.
+    source_value : float or array_like
+        Temperature of that vapor or liquid, °C, or its enthalpy, J/kg.
+    """
+
+    _kind = 70
+    sensible: ArrayLike
+    moisture: ArrayLike
+    moisture_source: MoistureSource = "saturated_vapor"
+    source_value: ArrayLike = 32.0
+
+    def _arguments(self) -> Arguments:
+        return (
+            ("sensible", self.sensible),
+            ("moisture", self.moisture),
+            code({"saturated_vapor": 0, "liquid": 1, "enthalpy": 2}, self.moisture_source, "moisture_source"),
+            ("source_value", self.source_value),
+        )
+
+
+@dataclass(frozen=True, eq=False)
+class DesiccantToHumidityRatio(Step):
+    """A desiccant, to a humidity ratio.
+
+    Parameters
+    ----------
+    humidity_ratio : float or array_like
+        kg/kg.
+    sorption_heat_ratio : float or array_like
+        Heat of sorption over heat of vaporization; about 1.05 to 1.15 for silica gel (common practice, no source).
+    carry_over : {'none', 'heat', 'rise'}
+        What the matrix of a wheel brings from the regeneration: nothing, a heat, W, or a rise of the leaving temperature, K.
+    carry_over_value : float or array_like
+        How much.
+    """
+
+    _kind = 80
+    humidity_ratio: ArrayLike
+    sorption_heat_ratio: ArrayLike
+    carry_over: CarryOver = "none"
+    carry_over_value: ArrayLike = 0.0
+
+    def _arguments(self) -> Arguments:
+        return (
+            ("humidity_ratio", self.humidity_ratio),
+            ("sorption_heat_ratio", self.sorption_heat_ratio),
+            code(_CARRY_OVER, self.carry_over, "carry_over"),
+            ("carry_over_value", self.carry_over_value),
+        )
+
+
+@dataclass(frozen=True, eq=False)
+class DesiccantByEffectiveness(Step):
+    """A desiccant by its effectiveness, (W₁ − W₂) / (W₁ − W_least).
+
+    Parameters
+    ----------
+    drying_effectiveness : float or array_like
+        0 to 1.
+    sorption_heat_ratio : float or array_like
+        Heat of sorption over heat of vaporization.
+    driest : float or array_like
+        Humidity ratio that the desiccant could reach at best, kg/kg; 0 for the common definition.
+    carry_over : {'none', 'heat', 'rise'}
+        As in `DesiccantToHumidityRatio`.
+    carry_over_value : float or array_like
+        How much.
+    """
+
+    _kind = 81
+    drying_effectiveness: ArrayLike
+    sorption_heat_ratio: ArrayLike
+    driest: ArrayLike = 0.0
+    carry_over: CarryOver = "none"
+    carry_over_value: ArrayLike = 0.0
+
+    def _arguments(self) -> Arguments:
+        return (
+            ("drying_effectiveness", self.drying_effectiveness),
+            ("driest", self.driest),
+            ("sorption_heat_ratio", self.sorption_heat_ratio),
+            code(_CARRY_OVER, self.carry_over, "carry_over"),
+            ("carry_over_value", self.carry_over_value),
+        )
+
+
 class StepRegime(enum.IntEnum):
     """Whether and how water condensed in a step."""
 
@@ -407,7 +635,9 @@ class StepRegime(enum.IntEnum):
 
 @dataclass(frozen=True, eq=False, init=False)
 class Loads(Record, Generic[T]):
-    """What a step asks of the plant, or all steps together, by name. Magnitudes, unless said otherwise.
+    """What a step asks of the plant, or all steps together, by name.
+
+    Magnitudes, unless they are said to be signed: then into the air.
 
     Attributes
     ----------
@@ -417,27 +647,52 @@ class Loads(Record, Generic[T]):
         Heat taken out by coils and dry coolers, W.
     sensible_cooling, latent_cooling : float or numpy.ndarray
         Its parts, W.
+    recovered : float or numpy.ndarray
+        Heat from another stream through a heat recovery or an indirect cooler, or carried over by a desiccant, W;
+        signed.
+    gains : float or numpy.ndarray
+        Sensible heat of rooms, and heat through the walls of ducts, W; signed.
+    water_heat : float or numpy.ndarray
+        Heat that circulating water brings with it: of its pump, of its make-up, of chilled spray, W; signed.
+    fan_work : float or numpy.ndarray
+        Power of fans that reaches the air, W.
+    fan_power : float or numpy.ndarray
+        Electric power of fans, that part of it included, W.
+    compression : float or numpy.ndarray
+        Of compression and expansion: work less the heat of cooling, W; signed.
     condensate : float or numpy.ndarray
-        Water that drains from coils and eliminators, kg/s.
+        Water that drains from coils, eliminators, coolers and washers, kg/s.
     steam : float or numpy.ndarray
         Steam into the air, kg/s.
     humidifying_water : float or numpy.ndarray
         Liquid water into the air, with what it carries on as droplets, kg/s.
+    moisture_gain : float or numpy.ndarray
+        Moisture of rooms, kg/s; signed.
+    recovered_water : float or numpy.ndarray
+        Vapor from another stream through a heat recovery, or from a desiccant, kg/s; signed.
+    secondary_water : float or numpy.ndarray
+        Water that evaporates into a secondary stream, not into this one, kg/s.
     mixed_in : float or numpy.ndarray
         Dry air of other streams mixed in, kg/s.
-    compression : float or numpy.ndarray
-        Of compression and expansion: work less the heat of cooling, signed, W.
     """
 
     heating: T
     cooling: T
     sensible_cooling: T
     latent_cooling: T
+    recovered: T
+    gains: T
+    water_heat: T
+    fan_work: T
+    fan_power: T
+    compression: T
     condensate: T
     steam: T
     humidifying_water: T
+    moisture_gain: T
+    recovered_water: T
+    secondary_water: T
     mixed_in: T
-    compression: T
 
 
 @dataclass(frozen=True, eq=False, init=False)
@@ -456,6 +711,8 @@ class StepResult(Record, Generic[T]):
         Of a coil: dry, wet or frosting; an int32 array of the codes for many rows, −1 also where a row has no result.
     frost : bool or numpy.ndarray
         Frost forms, or water in a coil may freeze. No freezestat.
+    condenses : bool or numpy.ndarray
+        Water condenses where no coil drains it: on or in a duct, in a heat recovery or an indirect cooler.
     books : Books
         What enters, with a stream mixed in, against what leaves.
     """
@@ -466,6 +723,7 @@ class StepResult(Record, Generic[T]):
     loads: Loads[T]
     regime: Union[StepRegime, NDArray[np.int32]]
     frost: Union[bool, NDArray[np.bool_]]
+    condenses: Union[bool, NDArray[np.bool_]]
     books: Books[T]
 
 
@@ -483,6 +741,8 @@ class Total(Record, Generic[T]):
         The sum of all loads.
     frost : bool or numpy.ndarray
         Whether any step reports frost.
+    condenses : bool or numpy.ndarray
+        Whether any step reports condensation.
     books : Books
         What enters the first step and is mixed in, against what leaves the last and all that was exchanged; measured against
         the terms of these ends alone, and the rounding of each temperature that was solved for on the way.
@@ -492,6 +752,7 @@ class Total(Record, Generic[T]):
     exchange: Exchange[T]
     loads: Loads[T]
     frost: Union[bool, NDArray[np.bool_]]
+    condenses: Union[bool, NDArray[np.bool_]]
     books: Books[T]
 
 
