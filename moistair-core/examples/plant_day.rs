@@ -14,6 +14,10 @@ use moistair_core::process::coil::{
     self, Arrangement, CoilFlows, CoilSurface, CoilWater, CondensateTemperature, Coolant, Cooling, FlowExponents,
     Measured,
 };
+use moistair_core::process::economizer::{Economizer, EconomizerState, Rule as EconomizerRule, Supply};
+use moistair_core::process::measured::{MeasuredAir, Reading};
+use moistair_core::process::mixing::outdoor_air::{self, FractionStatus, OtherFlow, OutdoorAirFraction};
+use moistair_core::process::room::{self, MoistureSource, RoomGains};
 use moistair_core::process::tower::fill::FillLaw;
 use moistair_core::process::tower::merkel::{self, Quadrature};
 use moistair_core::process::tower::{self, HotWater, TowerWater, WaterTreatment};
@@ -36,9 +40,10 @@ const DEAD_BAND: f64 = 0.0003;
 const STEAM_TEMPERATURE: f64 = 100.0;
 const TREATMENT: WaterTreatment = WaterTreatment { drift_fraction: 0.0001, cycles_of_concentration: 4.0 };
 
+/// At this elevation, Pa.
+const PRESSURE: f64 = 98_500.0;
 /// The coil on the day when it was handed over: what entered it, and how cold the air left.
 mod commissioning {
-    pub const PRESSURE: f64 = 98_500.0;
     pub const AIR: f64 = 27.0;
     pub const HUMIDITY: f64 = 0.5;
     /// kg/s.
@@ -52,6 +57,16 @@ const CONDUCTANCE_RATIO: f64 = 2.2;
 const FLOW_EXPONENTS: FlowExponents = FlowExponents { air_side: 0.6, water_side: 0.8 };
 /// The fill of the tower as its maker tested it, evaluated by Merkel's method: Merkel number at L/G = 1, and exponent.
 const FILL: (f64, f64) = (1.12, 0.6);
+/// Standard uncertainties of thermometers, K, hygrometers, and flows of dry air, kg/s.
+const THERMOMETER: f64 = 0.2;
+const HYGROMETER: f64 = 0.01;
+const AIR_FLOW: f64 = 0.05;
+/// That of a share of outdoor air up to which it says something.
+const ACCEPTABLE: f64 = 0.05;
+/// What the coil is to make of any air, °C and relative humidity.
+const OFF_COIL: (f64, f64) = (10.0, 0.97);
+/// The moisture of the rooms comes from people, as vapor of this temperature, °C.
+const PEOPLE: f64 = 32.0;
 
 /// Names for the places of an array.
 macro_rules! places {
@@ -86,6 +101,7 @@ places! {
     TOWER_WATER REJECTED RANGE APPROACH EVAPORATION DRIFT BLOWDOWN MAKE_UP
     CHILLED_WATER CHILLED_SUPPLY CHILLED_RETURN LOAD_BY_WATER AIR_LESS_WATER
     PREDICTED_LOAD PREDICTED_COIL PREDICTED_COIL_RATIO
+    SHARE_BY_FLOWS SHARE_BY_TEMPERATURES OUTDOOR_CHEAPER ROOM_SENSIBLE ROOM_MOISTURE
     WATER_TO_AIR MERKEL_NUMBER MERKEL_NUMBER_BY_LAW COLD_WATER PREDICTED_COLD_WATER
 }
 
@@ -168,6 +184,10 @@ mod basis {
     pub const REHEAT: &[usize] =
         &[PRESSURE, SUPPLY, SUPPLY_RH, SUPPLY_FLOW, MIXED, MIXED_RH, COIL, COIL_RH, HEATER, VALVE];
     pub const TOWER: &[usize] = &[PRESSURE, OUTDOOR, OUTDOOR_RH, TOWER_WATER, TOWER_HOT, TOWER_COLD, TOWER_AIR];
+    pub const AIR_FLOWS: &[usize] = &[PRESSURE, OUTDOOR, OUTDOOR_RH, OUTDOOR_FLOW, SUPPLY, SUPPLY_RH, SUPPLY_FLOW];
+    pub const DRY_BULBS: &[usize] = &[OUTDOOR, RETURN, MIXED];
+    pub const ECONOMIZER: &[usize] = &[OUTDOOR, OUTDOOR_RH, RETURN, RETURN_RH, CHILLED_WATER];
+    pub const ROOMS: &[usize] = &[PRESSURE, SUPPLY, SUPPLY_RH, SUPPLY_FLOW, RETURN, RETURN_RH];
     pub const TOWER_INLETS: &[usize] = &[PRESSURE, OUTDOOR, OUTDOOR_RH, TOWER_WATER, TOWER_HOT, TOWER_AIR];
     pub const COIL_INLETS: &[usize] =
         &[PRESSURE, SUPPLY, SUPPLY_RH, SUPPLY_FLOW, MIXED, MIXED_RH, CHILLED_WATER, CHILLED_SUPPLY];
@@ -193,6 +213,7 @@ struct Plant {
     surface: CoilSurface,
     found_at: CoilFlows,
     fill: FillLaw,
+    economizer: Economizer,
 }
 
 impl Plant {
@@ -210,7 +231,13 @@ impl Plant {
         let entering = AirStream::new(air, found_at.air)?;
         let surface =
             coil::surface_from_rating(&entering, water, measured, CONDUCTANCE_RATIO, Arrangement::Counterflow)?;
-        Ok(Self { surface, found_at, fill: FillLaw::new(FILL.0, FILL.1)? })
+        let supply = Supply {
+            dry_bulb: Temperature::from_celsius(OFF_COIL.0),
+            coil_leaving: RelativeHumidity::from_fraction(OFF_COIL.1),
+        };
+        let economizer = Economizer::new(EconomizerRule::LeastCoilEnergy, Pressure::from_pascals(PRESSURE));
+        let economizer = Economizer { supply, ..economizer };
+        Ok(Self { surface, found_at, fill: FillLaw::new(FILL.0, FILL.1)?, economizer })
     }
 }
 
@@ -254,6 +281,10 @@ impl Checks {
             self.deviations[ratio].add(ratio_of(&measured), ratio_of(computed));
         }
     }
+}
+
+fn people() -> MoistureSource {
+    MoistureSource::SaturatedVapor(Temperature::from_celsius(PEOPLE))
 }
 
 fn ratio_of(air: &MoistAir) -> f64 {
@@ -303,7 +334,7 @@ impl Moment {
         AirStream::from_volume_flow(air?, VolumeFlow::from_cubic_meters_per_second(self.value(flow)?)).ok()
     }
 
-    fn evaluate(&mut self, plant: &Plant) {
+    fn evaluate(&mut self, plant: &Plant, time: f64, economizer: &mut EconomizerState) {
         self.copy_readings();
         let outdoor = self.state(channel::OUTDOOR, channel::OUTDOOR_RH);
         let supply = self.state(channel::SUPPLY, channel::SUPPLY_RH);
@@ -334,6 +365,9 @@ impl Moment {
             }
         }
         let flow = supply_air.map(|stream| stream.dry_air_flow());
+        self.compare_outdoor_air(outdoor_air, supply_air);
+        self.decide(plant, time, economizer);
+        self.gain(supply_air, room);
         self.mix(outdoor_air, room, flow, mixed).unwrap_or_else(|| self.checks.missing(process::MIXING));
         let cooled = self.cool(mixed, flow, off_coil);
         let on_coil = mixed.zip(flow).and_then(|(air, flow)| AirStream::new(air, flow).ok());
@@ -378,6 +412,48 @@ impl Moment {
         let mixing = mixing::adiabatic(&entering).ok()?;
         self.checks.record(process::MIXING, &entering, mixing.leaving, mixing.exchange);
         self.checks.compare([check::MIXED, check::MIXED_RATIO], measured, &mixing.leaving.air().air());
+        Some(())
+    }
+
+    /// The share of outdoor air in the supply air, by flows and by temperatures, where they are sure enough.
+    fn compare_outdoor_air(&mut self, outdoor: Option<AirStream>, supply: Option<AirStream>) {
+        let flow = |stream: AirStream| Reading::new(stream.dry_air_flow().kilograms_per_second(), AIR_FLOW);
+        let by_flows = outdoor.zip(supply).and_then(|(outdoor, supply)| {
+            outdoor_air::from_flows(flow(outdoor), OtherFlow::Total(flow(supply)), ACCEPTABLE).ok()
+        });
+        let reading = |channel: usize| Reading::from_checked(&self.readings[channel], THERMOMETER);
+        let [outdoor, returned, mixed] = [channel::OUTDOOR, channel::RETURN, channel::MIXED].map(reading);
+        let by_temperatures = outdoor_air::from_readings(Quantity::DryBulb, outdoor, returned, mixed, ACCEPTABLE).ok();
+        let share = |found: Option<OutdoorAirFraction>| {
+            found.filter(|found| found.status == FractionStatus::Determined).and_then(|found| found.fraction)
+        };
+        self.set(rate::SHARE_BY_FLOWS, share(by_flows).unwrap_or(f64::NAN), basis::AIR_FLOWS);
+        self.set(rate::SHARE_BY_TEMPERATURES, share(by_temperatures).unwrap_or(f64::NAN), basis::DRY_BULBS);
+    }
+
+    /// Whether the coil, while it works, would have had less to do with outdoor air than with return air: 1 or 0.
+    fn decide(&mut self, plant: &Plant, time: f64, economizer: &mut EconomizerState) {
+        let air = |dry_bulb: usize, humidity: usize| {
+            MeasuredAir::from_relative_humidity(
+                Reading::from_checked(&self.readings[dry_bulb], THERMOMETER),
+                Reading::from_checked(&self.readings[humidity], HYGROMETER),
+            )
+        };
+        let outdoor = air(channel::OUTDOOR, channel::OUTDOOR_RH);
+        let returned = air(channel::RETURN, channel::RETURN_RH);
+        let decision = plant.economizer.decide(economizer, time, &outdoor, &returned);
+        let Some(flow) = self.value(channel::CHILLED_WATER) else { return };
+        if decision.quality != Quality::Refused {
+            let cheaper = decision.enabled && flow > 0.0;
+            self.set(rate::OUTDOOR_CHEAPER, if cheaper { 1.0 } else { 0.0 }, basis::ECONOMIZER);
+        }
+    }
+
+    /// What the rooms, and all that stores heat and water in them, give to the air.
+    fn gain(&mut self, supply: Option<AirStream>, room: Option<MoistAir>) -> Option<()> {
+        let gains = room::gains_between(&supply?, &room?, people()).ok()?;
+        self.set(rate::ROOM_SENSIBLE, gains.sensible.watts(), basis::ROOMS);
+        self.set(rate::ROOM_MOISTURE, gains.moisture.kilograms_per_second(), basis::ROOMS);
         Some(())
     }
 
@@ -570,6 +646,7 @@ fn read(file: impl BufRead, plant: &Plant) -> Result<Summary, Box<dyn Error>> {
     let mut counts = [Counts::default(); channel::COUNT];
     let mut periods = [Periods::new(HOUR, empty); rate::COUNT];
     let mut checks = Checks::default();
+    let mut economizer = EconomizerState::default();
     let mut hours = Vec::new();
     let (mut rows, mut not_in_time, mut unreadable) = (0, 0, 0);
 
@@ -587,7 +664,7 @@ fn read(file: impl BufRead, plant: &Plant) -> Result<Summary, Box<dyn Error>> {
         for (counts, reading) in counts.iter_mut().zip(&moment.readings) {
             counts.record(reading);
         }
-        moment.evaluate(plant);
+        moment.evaluate(plant, time, &mut economizer);
         let finished: [_; rate::COUNT] =
             core::array::from_fn(|i| periods[i].add(time, moment.rates[i].value, moment.rates[i].quality));
         // All of them finish at the same time.
@@ -619,7 +696,7 @@ Air handler and cooling tower: a day of one-minute readings
 const LOG_NOTE: &str = "
 Sums and means stand for the covered time only and are not extrapolated. cover: the share of the hour or of the
 day for which every reading that the result needs was there and plausible. rep.: minutes of it with a reading
-that was repaired, by the last good value or at saturation. Table 6 says what was refused, and why.
+that was repaired, by the last good value or at saturation. Table 7 says what was refused, and why.
 ";
 
 const AIR_HEAD: &str = "
@@ -682,21 +759,43 @@ const EQUIPMENT_NOTE: [&str; 7] = [
 Differences: the load by air less that by water, where both are there; else measured less predicted. Temperatures,
 humidity ratios and Merkel numbers: while water flows. The coil: ",
     " kW/K on the side of the air and ",
-    " kW/K
-on that of the water explain the point at which it was handed over; they go with the powers ",
+    " kW/K on
+that of the water explain the point at which it was handed over; they go with the powers ",
     " and ",
-    " of the flows. Air
-and water should agree on the load within some per cent, or a meter is off. The tower: Merkel number ",
-    " (L/G)^-",
+    " of the flows.
+Air and water should agree on the load within some per cent, or a meter is off. The tower: Merkel number ",
     "
-as the fill was tested, by Merkel's method. What falls short of the prediction asks for a look at the meters first,
-then at flows, fouling and scale. A tower that scales or fouls is also a place where Legionella grows: hygiene rules
-govern its cleaning.
+(L/G)^-",
+    " as the fill was tested, by Merkel's method. What falls short of the prediction asks for a look at the
+meters first, then at flows, fouling and scale. A tower that scales or fouls is also a place where Legionella grows:
+hygiene rules govern its cleaning.
+",
+];
+
+const ROOMS_HEAD: &str = "
+5  Outdoor air and rooms
+
+      ---- share of outdoor air ----    outdoor     --------- rooms ---------   cover
+hour  by flows  by dry bulbs    sure    cheaper    sensible  moisture   ratio
+             %             %       %        min         kWh        kg       1       %
+";
+
+const ROOMS_NOTE: [&str; 5] = [
+    "
+Share of outdoor air in the dry air of the supply: by the flows, and by the dry bulbs of outdoor, return and mixed air
+for as much of the time as thermometers good to ",
+    " K make sure of it to ",
+    " %. Outdoor cheaper: while the coil works,
+to bring outdoor air to ",
+    " °C would have cost it less than return air. Rooms: what they give to the air, with what
+walls and paper store; moisture as vapor of ",
+    " °C. Ratio: sensible to all heat, by the means; where the two cancel it
+says nothing. How much outdoor air people need is a matter of ventilation codes.
 ",
 ];
 
 const CHECKS_HEAD: &str = "
-5  Checks: means of measured less computed; books of heat and water of all processes
+6  Checks: means of measured less computed; books of heat and water of all processes
 
      -- mixed air -- --- supply air -- ------ books ----- largest residual
 hour        K    g/kg         K    g/kg  computed  closed     heat   water
@@ -718,7 +817,7 @@ that, or the tower to predict was at rest.
 ";
 
 const CHANNELS_HEAD: &str = "
-6  Readings
+7  Readings
 
 channel              unit     good repaired refused gaps  why
 ";
@@ -877,6 +976,35 @@ fn tower_rating_cells(span: &Span) -> [Cell; 7] {
     ]
 }
 
+/// Of the means of a span: of minutes in which hardly any heat comes in it says nothing.
+fn sensible_heat_ratio(span: &Span) -> f64 {
+    let mean = |rate: usize| span.totals[rate].mean().unwrap_or(f64::NAN);
+    let room = MoistAir::from_dry_bulb(
+        Temperature::from_celsius(mean(rate::RETURN)),
+        HumidityRatio::from_kilograms_per_kilogram(mean(rate::RETURN_RATIO)),
+        Pressure::from_pascals(mean(rate::PRESSURE)),
+    );
+    let gains = RoomGains {
+        sensible: HeatFlow::from_watts(mean(rate::ROOM_SENSIBLE)),
+        moisture: MassFlow::from_kilograms_per_second(mean(rate::ROOM_MOISTURE)),
+        source: people(),
+    };
+    room.and_then(|room| room::sensible_heat_ratio(&room, &gains)).unwrap_or(f64::NAN)
+}
+
+fn room_cells(span: &Span) -> [Cell; 8] {
+    [
+        (span.mean(rate::SHARE_BY_FLOWS, Unit::Percent), 10, 1),
+        (span.mean(rate::SHARE_BY_TEMPERATURES, Unit::Percent), 14, 1),
+        (span.cover(rate::SHARE_BY_TEMPERATURES), 8, 1),
+        (Unit::Minute.from_core(span.total(rate::OUTDOOR_CHEAPER)), 11, 0),
+        (span.kilowatt_hours(rate::ROOM_SENSIBLE), 12, 1),
+        (span.total(rate::ROOM_MOISTURE), 10, 1),
+        (sensible_heat_ratio(span), 8, 2),
+        (span.cover(rate::ROOM_SENSIBLE), 8, 1),
+    ]
+}
+
 fn check_cells(span: &Span) -> [Cell; 8] {
     let books = span.books();
     [
@@ -960,6 +1088,14 @@ fn print_equipment(summary: &Summary, plant: &Plant) {
     print!("{}{law}{}{after}", text((plant.fill.coefficient(), 0, 2)), text((plant.fill.exponent(), 0, 1)));
 }
 
+fn print_rooms(summary: &Summary) {
+    print!("{ROOMS_HEAD}");
+    print_hours(summary, room_cells);
+    let [share, sure, cheaper, rooms, after] = ROOMS_NOTE;
+    print!("{share}{}{sure}{}", text((THERMOMETER, 0, 1)), text((Unit::Percent.from_core(ACCEPTABLE), 0, 0)));
+    print!("{cheaper}{}{rooms}{}{after}", text((OFF_COIL.0, 0, 0)), text((PEOPLE, 0, 0)));
+}
+
 fn print_checks(summary: &Summary) {
     print!("{CHECKS_HEAD}");
     print_hours(summary, check_cells);
@@ -1022,6 +1158,7 @@ fn main() -> Result<(), Box<dyn Error>> {
     print_handler(&summary);
     print_tower(&summary);
     print_equipment(&summary, &plant);
+    print_rooms(&summary);
     print_checks(&summary);
     print_channels(&summary);
     Ok(())

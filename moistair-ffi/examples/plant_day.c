@@ -25,16 +25,26 @@ static const double dead_band = 0.0003;
 /* Steam comes saturated at about atmospheric pressure, °C. */
 static const double steam_temperature = 100.0;
 static const moistair_water_treatment treatment = {0.0001, 4.0};
-/* The coil on the day when it was handed over: what entered it, and how cold the air left. Pa, °C, kg/s. */
+/* At this elevation, Pa. */
+static const double site_pressure = 98500.0;
+/* The coil on the day when it was handed over: what entered it, and how cold the air left. °C, kg/s. */
 static const struct {
-    double pressure, air, humidity, supply, leaving_air;
+    double air, humidity, supply, leaving_air;
     moistair_coil_flows flows;
-} commissioning = {98500.0, 27.0, 0.5, 7.0, 11.1, {5.8, 6.0}};
+} commissioning = {27.0, 0.5, 7.0, 11.1, {5.8, 6.0}};
 /* Conductance of the water side of the coil over that of its air side, from its data sheet. */
 static const double conductance_ratio = 2.2;
 static const moistair_flow_exponents flow_exponents = {0.6, 0.8};
 /* The fill of the tower as its maker tested it, evaluated by Merkel's method: Merkel number at L/G = 1, and exponent. */
 static const moistair_fill_law fill = {1.12, 0.6};
+/* Standard uncertainties of thermometers, K, hygrometers, and flows of dry air, kg/s. */
+static const double thermometer = 0.2, hygrometer = 0.01, air_flow = 0.05;
+/* That of a share of outdoor air up to which it says something. */
+static const double acceptable = 0.05;
+/* What the coil is to make of any air, °C and relative humidity. */
+static const double off_coil_celsius = 10.0, off_coil_humidity = 0.97;
+/* The moisture of the rooms comes from people, as vapor of this temperature, °C. */
+static const double people = 32.0;
 
 /* The columns of the log after the time. */
 enum channel {
@@ -55,6 +65,7 @@ enum rate {
     R_TOWER_WATER, R_REJECTED, R_RANGE, R_APPROACH, R_EVAPORATION, R_DRIFT, R_BLOWDOWN, R_MAKE_UP,
     R_CHILLED_WATER, R_CHILLED_SUPPLY, R_CHILLED_RETURN, R_LOAD_BY_WATER, R_AIR_LESS_WATER,
     R_PREDICTED_LOAD, R_PREDICTED_COIL, R_PREDICTED_COIL_RATIO,
+    R_SHARE_BY_FLOWS, R_SHARE_BY_TEMPERATURES, R_OUTDOOR_CHEAPER, R_ROOM_SENSIBLE, R_ROOM_MOISTURE,
     R_WATER_TO_AIR, R_MERKEL_NUMBER, R_MERKEL_NUMBER_BY_LAW, R_COLD_WATER, R_PREDICTED_COLD_WATER,
     RATES
 };
@@ -153,6 +164,10 @@ static const int on_heater[] = {PRESSURE, SUPPLY, SUPPLY_RH, SUPPLY_FLOW, MIXED,
 static const int on_reheat[] = {PRESSURE, SUPPLY, SUPPLY_RH, SUPPLY_FLOW, MIXED, MIXED_RH, COIL, COIL_RH, HEATER,
                                 VALVE, CHANNELS};
 static const int on_tower[] = {PRESSURE, OUTDOOR, OUTDOOR_RH, TOWER_WATER, TOWER_HOT, TOWER_COLD, TOWER_AIR, CHANNELS};
+static const int air_flows[] = {PRESSURE, OUTDOOR, OUTDOOR_RH, OUTDOOR_FLOW, SUPPLY, SUPPLY_RH, SUPPLY_FLOW, CHANNELS};
+static const int dry_bulbs[] = {OUTDOOR, RETURN, MIXED, CHANNELS};
+static const int on_economizer[] = {OUTDOOR, OUTDOOR_RH, RETURN, RETURN_RH, CHILLED_WATER, CHANNELS};
+static const int on_rooms[] = {PRESSURE, SUPPLY, SUPPLY_RH, SUPPLY_FLOW, RETURN, RETURN_RH, CHANNELS};
 static const int tower_inlets[] = {PRESSURE, OUTDOOR, OUTDOOR_RH, TOWER_WATER, TOWER_HOT, TOWER_AIR, CHANNELS};
 static const int coil_inlets[] = {PRESSURE, SUPPLY,   SUPPLY_RH,     SUPPLY_FLOW,    MIXED,
                                   MIXED_RH, CHILLED_WATER, CHILLED_SUPPLY, CHANNELS};
@@ -164,6 +179,22 @@ static const int coil_sides[] = {PRESSURE, SUPPLY,  SUPPLY_RH,     SUPPLY_FLOW, 
 /* What the coil should be able to do. */
 static moistair_coil_surface surface;
 
+/* When outdoor air would cost it less than return air, and what that rests on. */
+static moistair_economizer economizer;
+static moistair_economizer_state economizer_state;
+
+/* 0 if the settings make no sense. */
+static int describe_economizer(void)
+{
+    moistair_basis basis = {0.0, MOISTAIR_REAL_GAS, 0};
+    int32_t status;
+    basis.pressure = site_pressure;
+    status = moistair_economizer_new(MOISTAIR_ECONOMIZER_RULE_LEAST_COIL_ENERGY, basis, &economizer, NULL);
+    economizer.supply_dry_bulb = off_coil_celsius;
+    economizer.supply_coil_leaving = off_coil_humidity;
+    return status == MOISTAIR_OK && moistair_economizer_check(&economizer, NULL) == MOISTAIR_OK;
+}
+
 /* Finds the coil in the point at which it was handed over; 0 if that fails. */
 static int describe_coil(void)
 {
@@ -171,7 +202,7 @@ static int describe_coil(void)
     moistair_state air;
     moistair_stream entering;
     moistair_coil_water water = {0.0, 0.0, 0.0};
-    basis.pressure = commissioning.pressure;
+    basis.pressure = site_pressure;
     water.flow = commissioning.flows.water;
     water.entering = commissioning.supply;
     return moistair_from_dry_bulb(commissioning.air, MOISTAIR_RELATIVE_HUMIDITY, commissioning.humidity, basis, &air,
@@ -319,6 +350,75 @@ static void mix(struct moment *moment, const struct stream *outdoor, const struc
     }
     record(moment, P_MIXING, entering, 2, &mixed, &none);
     compare(moment, C_MIXED, C_MIXED_RATIO, measured, &mixed.mixture.air);
+}
+
+static moistair_reading reading(const struct moment *moment, int channel, double uncertainty)
+{
+    moistair_reading reading = {0.0, 0.0, 0, 0};
+    reading.value = value(moment, channel);
+    reading.standard_uncertainty = uncertainty;
+    reading.quality = moment->readings[channel].quality;
+    return reading;
+}
+
+static moistair_reading flow_reading(const struct stream *stream)
+{
+    moistair_reading reading = {0.0, 0.0, MOISTAIR_QUALITY_GOOD, 0};
+    reading.value = stream->air.dry_air_flow;
+    reading.standard_uncertainty = air_flow;
+    return reading;
+}
+
+/* The share of outdoor air in the supply air, by flows and by temperatures, where they are sure enough. */
+static void compare_outdoor_air(struct moment *moment, const struct stream *outdoor, const struct stream *supply)
+{
+    moistair_outdoor_air_fraction found;
+    moistair_reading part = flow_reading(outdoor), whole = flow_reading(supply);
+    moistair_reading outside = reading(moment, OUTDOOR, thermometer), back = reading(moment, RETURN, thermometer);
+    moistair_reading mixed = reading(moment, MIXED, thermometer);
+    if (outdoor->known && supply->known &&
+        moistair_outdoor_air_from_flows(&part, &whole, MOISTAIR_FLOW_TOTAL, acceptable, &found, NULL) == MOISTAIR_OK &&
+        found.status == MOISTAIR_FRACTION_DETERMINED)
+        set(moment, R_SHARE_BY_FLOWS, found.fraction, air_flows);
+    if (moistair_outdoor_air_from_readings(MOISTAIR_DRY_BULB, &outside, &back, &mixed, acceptable, &found, NULL) ==
+            MOISTAIR_OK &&
+        found.status == MOISTAIR_FRACTION_DETERMINED)
+        set(moment, R_SHARE_BY_TEMPERATURES, found.fraction, dry_bulbs);
+}
+
+static moistair_measured_air measured_air(const struct moment *moment, int dry_bulb, int humidity)
+{
+    moistair_measured_air air;
+    memset(&air, 0, sizeof air);
+    air.dry_bulb = reading(moment, dry_bulb, thermometer);
+    air.humidity = reading(moment, humidity, hygrometer);
+    air.humidity_quantity = MOISTAIR_RELATIVE_HUMIDITY;
+    return air;
+}
+
+/* Whether the coil, while it works, would have had less to do with outdoor air than with return air: 1 or 0. */
+static void decide(struct moment *moment, double time)
+{
+    moistair_decision decision;
+    moistair_measured_air outdoor = measured_air(moment, OUTDOOR, OUTDOOR_RH);
+    moistair_measured_air returned = measured_air(moment, RETURN, RETURN_RH);
+    double flow = value(moment, CHILLED_WATER);
+    if (moistair_economizer_decide(&economizer, &economizer_state, time, &outdoor, &returned, &decision, NULL) ==
+            MOISTAIR_OK &&
+        decision.quality != MOISTAIR_QUALITY_REFUSED && !isnan(flow))
+        set(moment, R_OUTDOOR_CHEAPER, decision.enabled && flow > 0.0 ? 1.0 : 0.0, on_economizer);
+}
+
+/* What the rooms, and all that stores heat and water in them, give to the air. */
+static void gain(struct moment *moment, const struct stream *supply, const struct state *room)
+{
+    moistair_room_gains gains;
+    if (supply->known && room->known &&
+        moistair_room_gains_between(&supply->air, &room->air, MOISTAIR_SOURCE_SATURATED_VAPOR, people, &gains, NULL) ==
+            MOISTAIR_OK) {
+        set(moment, R_ROOM_SENSIBLE, gains.sensible, on_rooms);
+        set(moment, R_ROOM_MOISTURE, gains.moisture, on_rooms);
+    }
 }
 
 /* The cooling coil between the two measured states. */
@@ -530,7 +630,7 @@ static void copy_readings(struct moment *moment)
     }
 }
 
-static void evaluate(struct moment *moment)
+static void evaluate(struct moment *moment, double time)
 {
     struct state outdoor, supply, room, mixed, off_coil;
     struct stream outdoor_air, supply_air, on_the_coil, cooled, heated;
@@ -552,6 +652,9 @@ static void evaluate(struct moment *moment)
         set(moment, R_OUTDOOR_AIR, outdoor_air.air.dry_air_flow, outdoor_stream);
     if (supply_air.known)
         set(moment, R_SUPPLY_AIR, supply_air.air.dry_air_flow, supply_stream);
+    compare_outdoor_air(moment, &outdoor_air, &supply_air);
+    decide(moment, time);
+    gain(moment, &supply_air, &room);
     mix(moment, &outdoor_air, &room, &supply_air, &mixed);
     cooled = cool(moment, &mixed, &supply_air, &off_coil);
     on_the_coil.known = mixed.known && supply_air.known &&
@@ -669,7 +772,7 @@ static int read_log(FILE *file)
             moistair_channel_check(&channels[i], &states[i], fields[0], fields[1 + i], &moment.readings[i], NULL);
             moistair_counts_record(&summary.counts[i], &moment.readings[i], NULL);
         }
-        evaluate(&moment);
+        evaluate(&moment, fields[0]);
         for (i = 0; i < RATES; i++)
             moistair_periods_add(&periods[i], fields[0], moment.rates[i], moment.qualities[i], &finished[i], &done,
                                  NULL);
@@ -703,7 +806,7 @@ static const char log_note[] =
     "\n"
     "Sums and means stand for the covered time only and are not extrapolated. cover: the share of the hour or of the\n"
     "day for which every reading that the result needs was there and plausible. rep.: minutes of it with a reading\n"
-    "that was repaired, by the last good value or at saturation. Table 6 says what was refused, and why.\n";
+    "that was repaired, by the last good value or at saturation. Table 7 says what was refused, and why.\n";
 
 static const char air_head[] =
     "\n"
@@ -761,20 +864,40 @@ static const char *const equipment_note[] = {
     "Differences: the load by air less that by water, where both are there; else measured less predicted. Temperatures,\n"
     "humidity ratios and Merkel numbers: while water flows. The coil: ",
     " kW/K on the side of the air and ",
-    " kW/K\n"
-    "on that of the water explain the point at which it was handed over; they go with the powers ",
+    " kW/K on\n"
+    "that of the water explain the point at which it was handed over; they go with the powers ",
     " and ",
-    " of the flows. Air\n"
-    "and water should agree on the load within some per cent, or a meter is off. The tower: Merkel number ",
-    " (L/G)^-",
+    " of the flows.\n"
+    "Air and water should agree on the load within some per cent, or a meter is off. The tower: Merkel number ",
     "\n"
-    "as the fill was tested, by Merkel's method. What falls short of the prediction asks for a look at the meters first,\n"
-    "then at flows, fouling and scale. A tower that scales or fouls is also a place where Legionella grows: hygiene rules\n"
-    "govern its cleaning.\n"};
+    "(L/G)^-",
+    " as the fill was tested, by Merkel's method. What falls short of the prediction asks for a look at the\n"
+    "meters first, then at flows, fouling and scale. A tower that scales or fouls is also a place where Legionella grows:\n"
+    "hygiene rules govern its cleaning.\n"};
+
+static const char rooms_head[] =
+    "\n"
+    "5  Outdoor air and rooms\n"
+    "\n"
+    "      ---- share of outdoor air ----    outdoor     --------- rooms ---------   cover\n"
+    "hour  by flows  by dry bulbs    sure    cheaper    sensible  moisture   ratio\n"
+    "             %             %       %        min         kWh        kg       1       %\n";
+
+static const char *const rooms_note[] = {
+    "\n"
+    "Share of outdoor air in the dry air of the supply: by the flows, and by the dry bulbs of outdoor, return and mixed air\n"
+    "for as much of the time as thermometers good to ",
+    " K make sure of it to ",
+    " %. Outdoor cheaper: while the coil works,\n"
+    "to bring outdoor air to ",
+    " °C would have cost it less than return air. Rooms: what they give to the air, with what\n"
+    "walls and paper store; moisture as vapor of ",
+    " °C. Ratio: sensible to all heat, by the means; where the two cancel it\n"
+    "says nothing. How much outdoor air people need is a matter of ventilation codes.\n"};
 
 static const char checks_head[] =
     "\n"
-    "5  Checks: means of measured less computed; books of heat and water of all processes\n"
+    "6  Checks: means of measured less computed; books of heat and water of all processes\n"
     "\n"
     "     -- mixed air -- --- supply air -- ------ books ----- largest residual\n"
     "hour        K    g/kg         K    g/kg  computed  closed     heat   water\n";
@@ -796,7 +919,7 @@ static const char checks_note[] =
 
 static const char channels_head[] =
     "\n"
-    "6  Readings\n"
+    "7  Readings\n"
     "\n"
     "channel              unit     good repaired refused gaps  why\n";
 
@@ -953,6 +1076,24 @@ static moistair_deviation_values deviation(const struct span *span, int check)
     return values;
 }
 
+/* Of the means of a span: of minutes in which hardly any heat comes in it says nothing. */
+static double sensible_heat_ratio(const struct span *span)
+{
+    moistair_basis basis = {0.0, MOISTAIR_REAL_GAS, 0};
+    moistair_state room;
+    moistair_room_gains gains = {0.0, 0.0, 0.0, MOISTAIR_SOURCE_SATURATED_VAPOR, 0};
+    double ratio;
+    basis.pressure = totals(span, R_PRESSURE).mean;
+    gains.sensible = totals(span, R_ROOM_SENSIBLE).mean;
+    gains.moisture = totals(span, R_ROOM_MOISTURE).mean;
+    gains.source_value = people;
+    if (moistair_from_dry_bulb(totals(span, R_RETURN).mean, MOISTAIR_HUMIDITY_RATIO, totals(span, R_RETURN_RATIO).mean,
+                               basis, &room, NULL) == MOISTAIR_OK &&
+        moistair_room_sensible_heat_ratio(&room, &gains, &ratio, NULL) == MOISTAIR_OK)
+        return ratio;
+    return NAN;
+}
+
 static double mean_deviation(const struct span *span, int check)
 {
     return shown(check_names[check].core, deviation(span, check).mean);
@@ -991,6 +1132,18 @@ static void tower_rating_cells(const struct span *span)
     cell(mean(span, R_PREDICTED_COLD_WATER, MOISTAIR_UNIT_CELSIUS), 11, 1);
     cell(mean_deviation(span, C_COLD_WATER), 12, 2);
     cell(span_cover(span, R_PREDICTED_COLD_WATER), 8, 1);
+}
+
+static void room_cells(const struct span *span)
+{
+    cell(mean(span, R_SHARE_BY_FLOWS, MOISTAIR_UNIT_PERCENT), 10, 1);
+    cell(mean(span, R_SHARE_BY_TEMPERATURES, MOISTAIR_UNIT_PERCENT), 14, 1);
+    cell(span_cover(span, R_SHARE_BY_TEMPERATURES), 8, 1);
+    cell(shown(MOISTAIR_UNIT_MINUTE, total(span, R_OUTDOOR_CHEAPER)), 11, 0);
+    cell(kilowatt_hours(span, R_ROOM_SENSIBLE), 12, 1);
+    cell(total(span, R_ROOM_MOISTURE), 10, 1);
+    cell(sensible_heat_ratio(span), 8, 2);
+    cell(span_cover(span, R_ROOM_SENSIBLE), 8, 1);
 }
 
 static void check_cells(const struct span *span)
@@ -1083,6 +1236,21 @@ static void print_equipment(void)
     fputs(equipment_note[6], stdout);
 }
 
+static void print_rooms(void)
+{
+    fputs(rooms_head, stdout);
+    print_hours(room_cells);
+    fputs(rooms_note[0], stdout);
+    cell(thermometer, 0, 1);
+    fputs(rooms_note[1], stdout);
+    cell(shown(MOISTAIR_UNIT_PERCENT, acceptable), 0, 0);
+    fputs(rooms_note[2], stdout);
+    cell(off_coil_celsius, 0, 0);
+    fputs(rooms_note[3], stdout);
+    cell(people, 0, 0);
+    fputs(rooms_note[4], stdout);
+}
+
 static void print_checks(void)
 {
     int i;
@@ -1149,7 +1317,7 @@ int main(int argc, char **argv)
 {
     const char *path = argc > 1 ? argv[1] : default_log;
     FILE *file = fopen(path, "r");
-    int fine = file != NULL && describe_coil() && read_log(file);
+    int fine = file != NULL && describe_coil() && describe_economizer() && read_log(file);
     if (file == NULL)
         fprintf(stderr, "cannot read %s\n", path);
     else if (!fine)
@@ -1163,6 +1331,7 @@ int main(int argc, char **argv)
     print_handler();
     print_tower();
     print_equipment();
+    print_rooms();
     print_checks();
     print_channels();
     return 0;

@@ -18,9 +18,11 @@ from pathlib import Path
 from typing import Any, Callable, Optional
 
 import numpy as np
-from moistair import MoistAir
+from moistair import MoistAir, MoistAirError
 from moistair.account import Added, BooksTotal, Counts, Deviation, Period, Periods, Rule, Total
-from moistair.process import AirStream, books, coil, humidify, mixing, sensible, tower
+from moistair.process import AirStream, books, coil, humidify, mixing, room, sensible, tower
+from moistair.process.economizer import Economizer, EconomizerRule, EconomizerState
+from moistair.process.measured import MeasuredAir, Reading
 from moistair.signal import Channel, ChannelState, CheckedColumns, Kind, Quality, Reason, Unit, from_core
 from numpy.typing import NDArray
 
@@ -37,8 +39,10 @@ DEAD_BAND = 0.0003
 # Steam comes saturated at about atmospheric pressure, °C.
 STEAM_TEMPERATURE = 100.0
 TREATMENT = {"drift_fraction": 0.0001, "cycles_of_concentration": 4.0}
+# At this elevation, Pa.
+PRESSURE = 98_500.0
 # The coil on the day when it was handed over: what entered it, and how cold the air left.
-COMMISSIONED_AIR = MoistAir(dry_bulb=27.0, relative_humidity=0.5, pressure=98_500.0)
+COMMISSIONED_AIR = MoistAir(dry_bulb=27.0, relative_humidity=0.5, pressure=PRESSURE)
 COMMISSIONED_AIR_FLOW, COMMISSIONED_WATER_FLOW = 5.8, 6.0
 SURFACE = coil.surface_from_rating(
     AirStream(COMMISSIONED_AIR, dry_air_flow=COMMISSIONED_AIR_FLOW),
@@ -52,6 +56,20 @@ SURFACE = coil.surface_from_rating(
 FLOW_EXPONENTS = {"air_side_exponent": 0.6, "water_side_exponent": 0.8}
 # The fill of the tower as its maker tested it, evaluated by Merkel's method: Merkel number at L/G = 1, and exponent.
 FILL = {"coefficient": 1.12, "exponent": 0.6}
+# Standard uncertainties of thermometers, K, hygrometers, and flows of dry air, kg/s.
+THERMOMETER, HYGROMETER, AIR_FLOW = 0.2, 0.01, 0.05
+# That of a share of outdoor air up to which it says something.
+ACCEPTABLE = 0.05
+# What the coil is to make of any air, °C and relative humidity.
+OFF_COIL, OFF_COIL_HUMIDITY = 10.0, 0.97
+ECONOMIZER = Economizer(
+    rule=EconomizerRule.LEAST_COIL_ENERGY,
+    pressure=PRESSURE,
+    supply_temperature=OFF_COIL,
+    coil_leaving_humidity=OFF_COIL_HUMIDITY,
+)
+# The moisture of the rooms comes from people, as vapor of this temperature, °C.
+PEOPLE = 32.0
 
 
 def temperature(minimum: float, maximum: float) -> Channel:
@@ -146,6 +164,9 @@ SUPPLY_STREAM = ("pressure", "supply", "supply_rh", "supply_flow")
 ON_COIL = (*SUPPLY_STREAM, "mixed", "mixed_rh", "coil", "coil_rh")
 ON_HEATER = (*ON_COIL, "heater")
 ON_REHEAT = (*ON_HEATER, "valve")
+AIR_FLOWS = (*SUPPLY_STREAM, "outdoor", "outdoor_rh", "outdoor_flow")
+ON_ECONOMIZER = ("outdoor", "outdoor_rh", "return", "return_rh", "chilled_water")
+ON_ROOMS = (*SUPPLY_STREAM, "return", "return_rh")
 TOWER_INLETS = ("pressure", "outdoor", "outdoor_rh", "tower_water", "tower_hot", "tower_air")
 ON_TOWER = (*TOWER_INLETS, "tower_cold")
 COIL_INLETS = (*SUPPLY_STREAM, "mixed", "mixed_rh", "chilled_water", "chilled_supply")
@@ -201,12 +222,19 @@ class Rows:
         self.set(f"{name}_enthalpy", air.specific_enthalpy, channels)
         return air
 
-    def evaluate(self) -> None:
+    def reading(self, name: str, uncertainty: float) -> Reading:
+        return Reading(self.values[name], standard_uncertainty=uncertainty, quality=self.qualities[name])
+
+    def measured_air(self, name: str) -> MeasuredAir:
+        humidity = self.reading(f"{name}_rh", HYGROMETER)
+        return MeasuredAir(dry_bulb=self.reading(name, THERMOMETER), relative_humidity=humidity)
+
+    def evaluate(self, time: Array, economizer: EconomizerState) -> None:
         """The whole plant."""
         value, checks = self.values, self.checks
         for name in value:
             self.set(name, value[name], (name,))
-        outdoor, supply, room = self.state("outdoor"), self.state("supply"), self.state("return")
+        outdoor, supply, returned = self.state("outdoor"), self.state("supply"), self.state("return")
         mixed, off_coil = self.state("mixed"), self.state("coil")
         outdoor_air = AirStream.from_volume_flow(outdoor, volume_flow=value["outdoor_flow"])
         supply_air = AirStream.from_volume_flow(supply, volume_flow=value["supply_flow"])
@@ -214,8 +242,15 @@ class Rows:
         self.set("supply_air", total, SUPPLY_STREAM)
         self.set("outdoor_air", outdoor_air.dry_air_flow, ("pressure", "outdoor", "outdoor_rh", "outdoor_flow"))
 
+        self.compare_outdoor_air(outdoor_air, supply_air)
+        self.decide(time, economizer)
+        # What the rooms, and all that stores heat and water in them, give to the air.
+        gains = room.gains_between(supply_air, room=returned, source_value=PEOPLE)
+        self.set("room_sensible", gains.sensible, ON_ROOMS)
+        self.set("room_moisture", gains.moisture, ON_ROOMS)
+
         # Outdoor and recirculated air as the flows say, beside the state measured behind the mixing box.
-        recirculated = mixing.remainder(total_flow=total, part=outdoor_air, air=room)
+        recirculated = mixing.remainder(total_flow=total, part=outdoor_air, air=returned)
         mixture = mixing.adiabatic(outdoor_air, recirculated)
         checks.record("mixing", [outdoor_air, recirculated], mixture)
         air = mixture.leaving.air.air
@@ -262,6 +297,33 @@ class Rows:
         self.set("range", np.where(water > 0.0, cooler.range, NAN), ON_TOWER)
         self.set("approach", np.where(water > 0.0, cooler.approach, NAN), ON_TOWER)
         self.predict_tower(tower_air)
+
+    def compare_outdoor_air(self, outdoor: AirStream[Any], supply: AirStream[Any]) -> None:
+        """The share of outdoor air in the supply air, by flows and by temperatures, where they are sure enough."""
+        part, whole = (Reading(air.dry_air_flow, standard_uncertainty=AIR_FLOW) for air in (outdoor, supply))
+        by_flows = mixing.outdoor_air_from_flows(outdoor=part, other=whole, acceptable=ACCEPTABLE)
+        by_temperatures = mixing.outdoor_air_from_readings(
+            quantity="dry_bulb",
+            outdoor=self.reading("outdoor", THERMOMETER),
+            returned=self.reading("return", THERMOMETER),
+            mixed=self.reading("mixed", THERMOMETER),
+            acceptable=ACCEPTABLE,
+        )
+        for name, found, channels in (
+            ("share_by_flows", by_flows, AIR_FLOWS),
+            ("share_by_temperatures", by_temperatures, ("outdoor", "return", "mixed")),
+        ):
+            determined = found.fraction_status == mixing.FractionStatus.DETERMINED
+            self.set(name, np.where(determined, found.fraction, NAN), channels)
+
+    def decide(self, time: Array, economizer: EconomizerState) -> None:
+        """Whether the coil, while it works, would have had less to do with outdoor air than with return air: 1 or 0."""
+        outdoor, returned = self.measured_air("outdoor"), self.measured_air("return")
+        decision = ECONOMIZER.decide(economizer, time=time, outdoor=outdoor, returned=returned)
+        flow = self.values["chilled_water"]
+        cheaper = np.where(decision.enabled, np.where(flow > 0.0, 1.0, 0.0), 0.0)
+        known = np.where(decision.quality != Quality.REFUSED, cheaper, NAN)
+        self.set("outdoor_cheaper", np.where(np.isnan(flow), NAN, known), ON_ECONOMIZER)
 
     def meter_the_water(self, entering: AirStream[Any], load: Array) -> None:
         """The load of the coil by its water, beside that by its air."""
@@ -408,10 +470,10 @@ def spans(time: Array, readings: dict[str, CheckedColumns]) -> Iterator[Span]:
     starts = [row for row, instant in enumerate(time.tolist()) if clock.add(time=instant, rate=1.0)]
     edges = [0, *starts, len(time)]
     periods: dict[str, Periods] = defaultdict(empty_periods)
-    checks = Checks()
+    checks, economizer = Checks(), EconomizerState()
     for start, end in zip(edges, edges[1:]):
         rows = Rows(readings, slice(start, end))
-        rows.evaluate()
+        rows.evaluate(time[start:end], economizer)
         finished = {}
         for rate, (value, quality) in rows.rates.items():
             # The first row of an hour finishes the hour before.
@@ -441,7 +503,7 @@ LOG_NOTE = """\
 
 Sums and means stand for the covered time only and are not extrapolated. cover: the share of the hour or of the
 day for which every reading that the result needs was there and plausible. rep.: minutes of it with a reading
-that was repaired, by the last good value or at saturation. Table 6 says what was refused, and why.
+that was repaired, by the last good value or at saturation. Table 7 says what was refused, and why.
 """
 
 AIR_HEAD = """\
@@ -517,26 +579,54 @@ humidity ratios and Merkel numbers: while water flows. The coil: """,
     """\
  kW/K on the side of the air and """,
     """\
- kW/K
-on that of the water explain the point at which it was handed over; they go with the powers """,
+ kW/K on
+that of the water explain the point at which it was handed over; they go with the powers """,
     """\
  and """,
     """\
- of the flows. Air
-and water should agree on the load within some per cent, or a meter is off. The tower: Merkel number """,
-    """\
- (L/G)^-""",
+ of the flows.
+Air and water should agree on the load within some per cent, or a meter is off. The tower: Merkel number """,
     """\
 
-as the fill was tested, by Merkel's method. What falls short of the prediction asks for a look at the meters first,
-then at flows, fouling and scale. A tower that scales or fouls is also a place where Legionella grows: hygiene rules
-govern its cleaning.
+(L/G)^-""",
+    """\
+ as the fill was tested, by Merkel's method. What falls short of the prediction asks for a look at the
+meters first, then at flows, fouling and scale. A tower that scales or fouls is also a place where Legionella grows:
+hygiene rules govern its cleaning.
+""",
+)
+
+ROOMS_HEAD = """\
+
+5  Outdoor air and rooms
+
+      ---- share of outdoor air ----    outdoor     --------- rooms ---------   cover
+hour  by flows  by dry bulbs    sure    cheaper    sensible  moisture   ratio
+             %             %       %        min         kWh        kg       1       %
+"""
+
+ROOMS_NOTE = (
+    """\
+
+Share of outdoor air in the dry air of the supply: by the flows, and by the dry bulbs of outdoor, return and mixed air
+for as much of the time as thermometers good to """,
+    """\
+ K make sure of it to """,
+    """\
+ %. Outdoor cheaper: while the coil works,
+to bring outdoor air to """,
+    """\
+ °C would have cost it less than return air. Rooms: what they give to the air, with what
+walls and paper store; moisture as vapor of """,
+    """\
+ °C. Ratio: sensible to all heat, by the means; where the two cancel it
+says nothing. How much outdoor air people need is a matter of ventilation codes.
 """,
 )
 
 CHECKS_HEAD = """\
 
-5  Checks: means of measured less computed; books of heat and water of all processes
+6  Checks: means of measured less computed; books of heat and water of all processes
 
      -- mixed air -- --- supply air -- ------ books ----- largest residual
 hour        K    g/kg         K    g/kg  computed  closed     heat   water
@@ -562,7 +652,7 @@ that, or the tower to predict was at rest.
 
 CHANNELS_HEAD = """\
 
-6  Readings
+7  Readings
 
 channel              unit     good repaired refused gaps  why
 """
@@ -692,6 +782,30 @@ def tower_peaks(day: Span) -> list[Cell]:
     ]
 
 
+def sensible_heat_ratio(span: Span) -> Optional[float]:
+    """Of the means of a span: of minutes in which hardly any heat comes in it says nothing."""
+    means = [span.totals[rate].mean for rate in ("return", "return_ratio", "pressure", "room_sensible", "room_moisture")]
+    dry_bulb, ratio, pressure, sensible_gain, moisture = (NAN if value is None else value for value in means)
+    try:
+        air = MoistAir(dry_bulb=dry_bulb, humidity_ratio=ratio, pressure=pressure)
+        return room.sensible_heat_ratio(air, sensible=sensible_gain, moisture=moisture, source_value=PEOPLE)
+    except MoistAirError:
+        return None
+
+
+def room_cells(span: Span) -> list[Cell]:
+    return [
+        (mean(span, "share_by_flows", Unit.PERCENT), 10, 1),
+        (mean(span, "share_by_temperatures", Unit.PERCENT), 14, 1),
+        (cover(span, "share_by_temperatures"), 8, 1),
+        (shown(total(span, "outdoor_cheaper"), Unit.MINUTE), 11, 0),
+        (kilowatt_hours(span, "room_sensible"), 12, 1),
+        (total(span, "room_moisture"), 10, 1),
+        (sensible_heat_ratio(span), 8, 2),
+        (cover(span, "room_sensible"), 8, 1),
+    ]
+
+
 def deviation(span: Span, check: str) -> Optional[float]:
     return shown(span.checks.deviations[check].mean, CHECKS[check][2])
 
@@ -789,6 +903,20 @@ def print_equipment(summary: Summary) -> None:
         print(value, words, sep="", end="")
 
 
+def print_rooms(summary: Summary) -> None:
+    print(ROOMS_HEAD, end="")
+    print_hours(summary, room_cells)
+    values = (
+        text(THERMOMETER, 0, 1),
+        text(shown(ACCEPTABLE, Unit.PERCENT), 0, 0),
+        text(OFF_COIL, 0, 0),
+        text(PEOPLE, 0, 0),
+    )
+    print(ROOMS_NOTE[0], end="")
+    for value, words in zip(values, ROOMS_NOTE[1:]):
+        print(value, words, sep="", end="")
+
+
 def print_checks(summary: Summary) -> None:
     print(CHECKS_HEAD, end="")
     print_hours(summary, check_cells)
@@ -835,6 +963,7 @@ def main() -> None:
     print_handler(summary)
     print_tower(summary)
     print_equipment(summary)
+    print_rooms(summary)
     print_checks(summary)
     print_channels(summary)
 
