@@ -57,6 +57,9 @@
 // A structure holds what the library cannot have written.
 #define MOISTAIR_DAMAGED 106
 
+// There are not as many columns as the process takes or gives.
+#define MOISTAIR_WRONG_COUNT 107
+
 // A value is NaN or infinite.
 #define MOISTAIR_NOT_FINITE 201
 
@@ -404,6 +407,484 @@
 
 // Coefficient of an aspirated psychrometer over ice [1/K]: WMO-No. 8 (from memory).
 #define MOISTAIR_ASPIRATED_OVER_ICE 5.75e-4
+
+// air.from_psychrometer. Takes 0 dry_bulb [°C], 1 wet_bulb [°C], 2 bulb [choice: 0 water 1 ice], 3 coefficient [1/K], 4 pressure [Pa];
+// gives 0–2 air (state).
+#define MOISTAIR_PROCESS_AIR_FROM_PSYCHROMETER 100
+
+// air.psychrometer_reading. Takes 0–2 air (state), 3 bulb [choice: 0 water 1 ice], 4 coefficient [1/K]; gives 0 wet_bulb [°C].
+#define MOISTAIR_PROCESS_AIR_PSYCHROMETER_READING 101
+
+// air.at_pressure. Takes 0–2 air (state), 3 pressure [Pa]; gives 0–2 air (state).
+#define MOISTAIR_PROCESS_AIR_AT_PRESSURE 102
+
+// air.at_temperature_and_pressure. Takes 0–2 air (state), 3 dry_bulb [°C], 4 pressure [Pa]; gives 0–2 air (state).
+#define MOISTAIR_PROCESS_AIR_AT_TEMPERATURE_AND_PRESSURE 103
+
+// air.dew_point_at. Takes 0–2 air (state), 3 pressure [Pa]; gives 0 dew_point [°C].
+#define MOISTAIR_PROCESS_AIR_DEW_POINT_AT 104
+
+// air.frost_point_at. Takes 0–2 air (state), 3 pressure [Pa]; gives 0 frost_point [°C].
+#define MOISTAIR_PROCESS_AIR_FROST_POINT_AT 105
+
+// saturation_temperature_after. Takes 0 given [choice: code of a quantity], 1 value [°C], 2 pressure [Pa], 3 wanted [choice: code of a
+// quantity], 4 new_pressure [Pa]; gives 0 wanted [°C].
+#define MOISTAIR_PROCESS_SATURATION_TEMPERATURE_AFTER 106
+
+// stream. Takes 0–2 air (state), 3 dry_air_flow [kg/s]; gives 0–2 air (state), 3 dry_air_flow [kg/s], 4 volume_flow [m³/s].
+#define MOISTAIR_PROCESS_STREAM 200
+
+// stream.from_volume_flow. Takes 0–2 air (state), 3 volume_flow [m³/s]; gives 0–2 air (state), 3 dry_air_flow [kg/s], 4 volume_flow
+// [m³/s].
+#define MOISTAIR_PROCESS_STREAM_FROM_VOLUME_FLOW 201
+
+// stream.from_standard_volume_flow. Takes 0–2 air (state), 3 volume_flow [m³/s], 4 reference_density [kg/m³]; gives 0–2 air (state),
+// 3 dry_air_flow [kg/s], 4 volume_flow [m³/s].
+#define MOISTAIR_PROCESS_STREAM_FROM_STANDARD_VOLUME_FLOW 202
+
+// wet_stream. Takes 0–2 air.air (state), 3 air.liquid [kg/kg], 4 air.ice [kg/kg], 5 dry_air_flow [kg/s]; gives 0–2 air.air (state),
+// 3 air.liquid [kg/kg], 4 air.ice [kg/kg], 5 air.total_water [kg/kg], 6 air.specific_enthalpy [J/kg], 7 air.is_wet [flag], 8 dry_air_flow
+// [kg/s].
+#define MOISTAIR_PROCESS_WET_STREAM 203
+
+// wet_air. Takes 0–2 air (state), 3 liquid [kg/kg], 4 ice [kg/kg]; gives 0–2 air (state), 3 liquid [kg/kg], 4 ice [kg/kg], 5 total_water
+// [kg/kg], 6 specific_enthalpy [J/kg], 7 is_wet [flag].
+#define MOISTAIR_PROCESS_WET_AIR 204
+
+// wet_air.from_enthalpy_and_water. Takes 0 specific_enthalpy [J/kg], 1 total_water [kg/kg], 2 freezing [choice: 0 equilibrium 1
+// supercooled], 3 pressure [Pa]; gives 0–2 air (state), 3 liquid [kg/kg], 4 ice [kg/kg], 5 total_water [kg/kg], 6 specific_enthalpy
+// [J/kg], 7 is_wet [flag].
+#define MOISTAIR_PROCESS_WET_AIR_FROM_ENTHALPY_AND_WATER 205
+
+// wet_air.from_dry_bulb_and_water. Takes 0 dry_bulb [°C], 1 total_water [kg/kg], 2 freezing [choice: 0 equilibrium 1 supercooled],
+// 3 pressure [Pa]; gives 0–2 air (state), 3 liquid [kg/kg], 4 ice [kg/kg], 5 total_water [kg/kg], 6 specific_enthalpy [J/kg], 7 is_wet
+// [flag].
+#define MOISTAIR_PROCESS_WET_AIR_FROM_DRY_BULB_AND_WATER 206
+
+// liquid_water_enthalpy. Takes 0 water_temperature [°C], 1 pressure [Pa]; gives 0 specific_enthalpy [J/kg].
+#define MOISTAIR_PROCESS_LIQUID_WATER_ENTHALPY 207
+
+// sensible.to_temperature. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 leaving_temperature [°C]; gives
+// 0–2 leaving.air (state), 3 leaving.dry_air_flow [kg/s], 4 leaving.volume_flow [m³/s], 5 exchange.heat [W], 6 exchange.water [kg/s],
+// 7 exchange.water_enthalpy_flow [W].
+#define MOISTAIR_PROCESS_SENSIBLE_TO_TEMPERATURE 300
+
+// sensible.with_heat. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 heat [W]; gives 0–2 leaving.air (state),
+// 3 leaving.dry_air_flow [kg/s], 4 leaving.volume_flow [m³/s], 5 exchange.heat [W], 6 exchange.water [kg/s],
+// 7 exchange.water_enthalpy_flow [W].
+#define MOISTAIR_PROCESS_SENSIBLE_WITH_HEAT 301
+
+// coil.to_state. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4–6 leaving (state), 7 condensate_temperature [choice: 0
+// leaving air, 1 apparatus, 2 given], 8 condensate_temperature.given [°C]; gives 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s],
+// 4 entering.volume_flow [m³/s], 5–7 leaving.air (state), 8 leaving.dry_air_flow [kg/s], 9 leaving.volume_flow [m³/s], 10 exchange.heat
+// [W], 11 exchange.water [kg/s], 12 exchange.water_enthalpy_flow [W], 13 cooling_load [W], 14 sensible [W], 15 latent [W], 16 condensate
+// [kg/s], 17 regime [choice, 0 dry, 1 wet, 2 frost, 3 partly wet], 18 sensible_heat_ratio [1].
+#define MOISTAIR_PROCESS_COIL_TO_STATE 400
+
+// coil.by_bypass_factor. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 apparatus_dew_point [°C], 5 bypass_factor [1],
+// 6 condensate_temperature [choice: 0 leaving air, 1 apparatus, 2 given], 7 condensate_temperature.given [°C]; gives 0–2 entering.air
+// (state), 3 entering.dry_air_flow [kg/s], 4 entering.volume_flow [m³/s], 5–7 leaving.air (state), 8 leaving.dry_air_flow [kg/s],
+// 9 leaving.volume_flow [m³/s], 10 exchange.heat [W], 11 exchange.water [kg/s], 12 exchange.water_enthalpy_flow [W], 13 cooling_load [W],
+// 14 sensible [W], 15 latent [W], 16 condensate [kg/s], 17 regime [choice, 0 dry, 1 wet, 2 frost, 3 partly wet], 18 sensible_heat_ratio
+// [1].
+#define MOISTAIR_PROCESS_COIL_BY_BYPASS_FACTOR 401
+
+// coil.apparatus_dew_point. Takes 0–2 entering (state), 3–5 leaving (state); gives 0 dew_point [°C], 1 bypass_factor [1].
+#define MOISTAIR_PROCESS_COIL_APPARATUS_DEW_POINT 402
+
+// coil.apparatus_dew_points. Takes 0–2 entering (state), 3–5 leaving (state); gives 0 warmer.dew_point [°C], 1 warmer.bypass_factor [1],
+// 2 colder.dew_point [°C], 3 colder.bypass_factor [1], 4 nearest [°C].
+#define MOISTAIR_PROCESS_COIL_APPARATUS_DEW_POINTS 403
+
+// coil.bypass_factor_of_rows. Takes 0 of_one_row [1], 1 rows [1]; gives 0 bypass_factor [1].
+#define MOISTAIR_PROCESS_COIL_BYPASS_FACTOR_OF_ROWS 404
+
+// coil.with_water. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 air_side [W/K], 5 water_side [W/K], 6 arrangement
+// [choice: 0 counterflow 1 cross flow], 7 water_flow [kg/s], 8 entering_water [°C], 9 specific_heat [choice: 0 of water, 2 given],
+// 10 specific_heat.given [J/(kg K)], 11 condensate_temperature [choice: 0 leaving air, 1 apparatus, 2 given],
+// 12 condensate_temperature.given [°C]; gives 0–2 air.entering.air (state), 3 air.entering.dry_air_flow [kg/s], 4 air.entering.volume_flow
+// [m³/s], 5–7 air.leaving.air (state), 8 air.leaving.dry_air_flow [kg/s], 9 air.leaving.volume_flow [m³/s], 10 air.exchange.heat [W],
+// 11 air.exchange.water [kg/s], 12 air.exchange.water_enthalpy_flow [W], 13 air.cooling_load [W], 14 air.sensible [W], 15 air.latent [W],
+// 16 air.condensate [kg/s], 17 air.regime [choice, 0 dry, 1 wet, 2 frost, 3 partly wet], 18 air.sensible_heat_ratio [1], 19 leaving_water
+// [°C], 20 dry_fraction [1], 21 coldest_surface [°C], 22 freezing [flag].
+#define MOISTAIR_PROCESS_COIL_WITH_WATER 405
+
+// coil.surface_from_rating. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 water_flow [kg/s], 5 entering_water [°C],
+// 6 specific_heat [choice: 0 of water, 2 given], 7 specific_heat.given [J/(kg K)], 8 measured [choice: 0 leaving air, 1 leaving water, 2
+// heat], 9 value [°C or W], 10 conductance_ratio [1], 11 arrangement [choice: 0 counterflow 1 cross flow]; gives 0 air_side [W/K],
+// 1 water_side [W/K].
+#define MOISTAIR_PROCESS_COIL_SURFACE_FROM_RATING 406
+
+// coil.between. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4–6 leaving (state), 7 condensate_temperature [choice: 0
+// leaving air, 1 apparatus, 2 given], 8 condensate_temperature.given [°C], 9 dead_band [kg/kg]; gives 0–2 entering.air (state),
+// 3 entering.dry_air_flow [kg/s], 4 entering.volume_flow [m³/s], 5–7 leaving.air (state), 8 leaving.dry_air_flow [kg/s],
+// 9 leaving.volume_flow [m³/s], 10 exchange.heat [W], 11 exchange.water [kg/s], 12 exchange.water_enthalpy_flow [W], 13 cooling_load [W],
+// 14 sensible [W], 15 latent [W], 16 condensate [kg/s], 17 regime [choice, 0 dry, 1 wet, 2 frost, 3 partly wet], 18 sensible_heat_ratio
+// [1].
+#define MOISTAIR_PROCESS_COIL_BETWEEN 407
+
+// coil.surface_at_flows. Takes 0 air_side [W/K], 1 water_side [W/K], 2 arrangement [choice: 0 counterflow 1 cross flow],
+// 3 found_at_air_flow [kg/s], 4 found_at_water_flow [kg/s], 5 air_flow [kg/s], 6 water_flow [kg/s], 7 air_side_exponent [1],
+// 8 water_side_exponent [1]; gives 0 air_side [W/K], 1 water_side [W/K].
+#define MOISTAIR_PROCESS_COIL_SURFACE_AT_FLOWS 408
+
+// coil.load_by_water. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 load_by_air [W], 5 water_flow [kg/s],
+// 6 entering_water [°C], 7 specific_heat [choice: 0 of water, 2 given], 8 specific_heat.given [J/(kg K)], 9 leaving_water [°C]; gives
+// 0 load [W], 1 air_less_water [W].
+#define MOISTAIR_PROCESS_COIL_LOAD_BY_WATER 409
+
+// mixing.adiabatic. Takes any number of times: 0–2 streams.air.air (state), 3 streams.air.liquid [kg/kg], 4 streams.air.ice [kg/kg],
+// 5 streams.dry_air_flow [kg/s]; gives 0–2 leaving.air.air (state), 3 leaving.air.liquid [kg/kg], 4 leaving.air.ice [kg/kg],
+// 5 leaving.air.total_water [kg/kg], 6 leaving.air.specific_enthalpy [J/kg], 7 leaving.air.is_wet [flag], 8 leaving.dry_air_flow [kg/s],
+// 9 exchange.heat [W], 10 exchange.water [kg/s], 11 exchange.water_enthalpy_flow [W].
+#define MOISTAIR_PROCESS_MIXING_ADIABATIC 500
+
+// mixing.adiabatic_at. Takes 0 pressure [Pa], 1 freezing [choice: 0 equilibrium 1 supercooled], any number of times: 2–4 streams.air.air
+// (state), 5 streams.air.liquid [kg/kg], 6 streams.air.ice [kg/kg], 7 streams.dry_air_flow [kg/s]; gives 0–2 leaving.air.air (state),
+// 3 leaving.air.liquid [kg/kg], 4 leaving.air.ice [kg/kg], 5 leaving.air.total_water [kg/kg], 6 leaving.air.specific_enthalpy [J/kg],
+// 7 leaving.air.is_wet [flag], 8 leaving.dry_air_flow [kg/s], 9 exchange.heat [W], 10 exchange.water [kg/s],
+// 11 exchange.water_enthalpy_flow [W].
+#define MOISTAIR_PROCESS_MIXING_ADIABATIC_AT 501
+
+// mixing.remainder. Takes 0 total_flow [kg/s], 1–3 part.air (state), 4 part.dry_air_flow [kg/s], 5–7 air (state); gives 0–2 air (state),
+// 3 dry_air_flow [kg/s], 4 volume_flow [m³/s].
+#define MOISTAIR_PROCESS_MIXING_REMAINDER 502
+
+// humidify.saturated_steam_enthalpy. Takes 0 steam_temperature [°C]; gives 0 specific_enthalpy [J/kg].
+#define MOISTAIR_PROCESS_HUMIDIFY_SATURATED_STEAM_ENTHALPY 600
+
+// humidify.steam. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 steam_flow [kg/s], 5 steam_enthalpy [J/kg]; gives
+// 0–2 leaving.air.air (state), 3 leaving.air.liquid [kg/kg], 4 leaving.air.ice [kg/kg], 5 leaving.air.total_water [kg/kg],
+// 6 leaving.air.specific_enthalpy [J/kg], 7 leaving.air.is_wet [flag], 8 leaving.dry_air_flow [kg/s], 9 exchange.heat [W],
+// 10 exchange.water [kg/s], 11 exchange.water_enthalpy_flow [W], 12 evaporated [kg/s], 13 carried [kg/s].
+#define MOISTAIR_PROCESS_HUMIDIFY_STEAM 601
+
+// humidify.steam_to_humidity_ratio. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 humidity_ratio [kg/kg],
+// 5 steam_enthalpy [J/kg]; gives 0–2 leaving.air.air (state), 3 leaving.air.liquid [kg/kg], 4 leaving.air.ice [kg/kg],
+// 5 leaving.air.total_water [kg/kg], 6 leaving.air.specific_enthalpy [J/kg], 7 leaving.air.is_wet [flag], 8 leaving.dry_air_flow [kg/s],
+// 9 exchange.heat [W], 10 exchange.water [kg/s], 11 exchange.water_enthalpy_flow [W], 12 evaporated [kg/s], 13 carried [kg/s].
+#define MOISTAIR_PROCESS_HUMIDIFY_STEAM_TO_HUMIDITY_RATIO 602
+
+// humidify.steam_to_relative_humidity. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 relative_humidity [1],
+// 5 steam_enthalpy [J/kg]; gives 0–2 leaving.air.air (state), 3 leaving.air.liquid [kg/kg], 4 leaving.air.ice [kg/kg],
+// 5 leaving.air.total_water [kg/kg], 6 leaving.air.specific_enthalpy [J/kg], 7 leaving.air.is_wet [flag], 8 leaving.dry_air_flow [kg/s],
+// 9 exchange.heat [W], 10 exchange.water [kg/s], 11 exchange.water_enthalpy_flow [W], 12 evaporated [kg/s], 13 carried [kg/s].
+#define MOISTAIR_PROCESS_HUMIDIFY_STEAM_TO_RELATIVE_HUMIDITY 603
+
+// humidify.steam_limit. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 steam_enthalpy [J/kg]; gives 0 steam_flow
+// [kg/s].
+#define MOISTAIR_PROCESS_HUMIDIFY_STEAM_LIMIT 604
+
+// humidify.spray. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 water_flow [kg/s], 5 water_temperature [°C]; gives
+// 0–2 leaving.air.air (state), 3 leaving.air.liquid [kg/kg], 4 leaving.air.ice [kg/kg], 5 leaving.air.total_water [kg/kg],
+// 6 leaving.air.specific_enthalpy [J/kg], 7 leaving.air.is_wet [flag], 8 leaving.dry_air_flow [kg/s], 9 exchange.heat [W],
+// 10 exchange.water [kg/s], 11 exchange.water_enthalpy_flow [W], 12 evaporated [kg/s], 13 carried [kg/s].
+#define MOISTAIR_PROCESS_HUMIDIFY_SPRAY 605
+
+// humidify.evaporative. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 saturation_effectiveness [1],
+// 5 water_temperature [choice: 0 wet bulb, 2 given], 6 water_temperature.given [°C]; gives 0–2 leaving.air.air (state),
+// 3 leaving.air.liquid [kg/kg], 4 leaving.air.ice [kg/kg], 5 leaving.air.total_water [kg/kg], 6 leaving.air.specific_enthalpy [J/kg],
+// 7 leaving.air.is_wet [flag], 8 leaving.dry_air_flow [kg/s], 9 exchange.heat [W], 10 exchange.water [kg/s],
+// 11 exchange.water_enthalpy_flow [W], 12 evaporated [kg/s], 13 carried [kg/s].
+#define MOISTAIR_PROCESS_HUMIDIFY_EVAPORATIVE 606
+
+// humidify.steam_absorption. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 steam_enthalpy [J/kg]; gives 0 up_to
+// [kg/s], 1 unsaturated_from [kg/s].
+#define MOISTAIR_PROCESS_HUMIDIFY_STEAM_ABSORPTION 607
+
+// humidify.saturated_steam. Takes 0 steam_pressure [Pa]; gives 0 specific_enthalpy [J/kg].
+#define MOISTAIR_PROCESS_HUMIDIFY_SATURATED_STEAM 608
+
+// humidify.wet_steam. Takes 0 steam_pressure [Pa], 1 quality [1]; gives 0 specific_enthalpy [J/kg].
+#define MOISTAIR_PROCESS_HUMIDIFY_WET_STEAM 609
+
+// humidify.superheated_steam. Takes 0 steam_temperature [°C], 1 steam_pressure [Pa]; gives 0 specific_enthalpy [J/kg].
+#define MOISTAIR_PROCESS_HUMIDIFY_SUPERHEATED_STEAM 610
+
+// humidify.throttled_steam. Takes 0 steam_enthalpy [J/kg], 1 pressure [Pa]; gives 0 temperature [°C], 1 superheat [K], 2 quality [1],
+// 3 condition [choice, 0 superheated, 1 wet].
+#define MOISTAIR_PROCESS_HUMIDIFY_THROTTLED_STEAM 611
+
+// humidify.wash. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 water_flow [kg/s], 5 water_temperature [°C],
+// 6 effectiveness [1], 7 pump_heat [W], 8 carry_over_fraction [1]; gives 0–2 air.leaving.air.air (state), 3 air.leaving.air.liquid
+// [kg/kg], 4 air.leaving.air.ice [kg/kg], 5 air.leaving.air.total_water [kg/kg], 6 air.leaving.air.specific_enthalpy [J/kg],
+// 7 air.leaving.air.is_wet [flag], 8 air.leaving.dry_air_flow [kg/s], 9 air.exchange.heat [W], 10 air.exchange.water [kg/s],
+// 11 air.exchange.water_enthalpy_flow [W], 12 air.evaporated [kg/s], 13 air.carried [kg/s], 14 leaving_water [kg/s],
+// 15 leaving_water_temperature [°C], 16 heat_to_water [W], 17 moistening [choice, 0 humidifies, 1 dehumidifies].
+#define MOISTAIR_PROCESS_HUMIDIFY_WASH 612
+
+// tower.water_use. Takes 0 evaporation [kg/s], 1 circulating_flow [kg/s], 2 drift_fraction [1], 3 cycles_of_concentration [1]; gives
+// 0 evaporation [kg/s], 1 drift [kg/s], 2 blowdown [kg/s], 3 make_up [kg/s], 4 limited_by_drift [flag].
+#define MOISTAIR_PROCESS_TOWER_WATER_USE 700
+
+// tower.with_air_flow. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 water_flow [kg/s], 5 hot_water [°C], 6 cold_water
+// [°C], 7 drift_fraction [1], 8 cycles_of_concentration [1]; gives 0–2 leaving.air (state), 3 leaving.dry_air_flow [kg/s],
+// 4 leaving.volume_flow [m³/s], 5 exchange.heat [W], 6 exchange.water [kg/s], 7 exchange.water_enthalpy_flow [W], 8 heat_rejected [W],
+// 9 water.evaporation [kg/s], 10 water.drift [kg/s], 11 water.blowdown [kg/s], 12 water.make_up [kg/s], 13 water.limited_by_drift [flag],
+// 14 range [K], 15 approach [K], 16 effectiveness [1].
+#define MOISTAIR_PROCESS_TOWER_WITH_AIR_FLOW 701
+
+// tower.with_leaving_air. Takes 0–2 entering (state), 3–5 leaving (state), 6 water_flow [kg/s], 7 hot_water [°C], 8 cold_water [°C],
+// 9 drift_fraction [1], 10 cycles_of_concentration [1]; gives 0–2 leaving.air (state), 3 leaving.dry_air_flow [kg/s],
+// 4 leaving.volume_flow [m³/s], 5 exchange.heat [W], 6 exchange.water [kg/s], 7 exchange.water_enthalpy_flow [W], 8 heat_rejected [W],
+// 9 water.evaporation [kg/s], 10 water.drift [kg/s], 11 water.blowdown [kg/s], 12 water.make_up [kg/s], 13 water.limited_by_drift [flag],
+// 14 range [K], 15 approach [K], 16 effectiveness [1].
+#define MOISTAIR_PROCESS_TOWER_WITH_LEAVING_AIR 702
+
+// tower.water_to_air_ratio. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 water_flow [kg/s]; gives 0 water_to_air [1].
+#define MOISTAIR_PROCESS_TOWER_WATER_TO_AIR_RATIO 703
+
+// tower.coldest_water. Takes 0–2 air (state); gives 0 water_temperature [°C].
+#define MOISTAIR_PROCESS_TOWER_COLDEST_WATER 704
+
+// tower.merkel_pinch. Takes 0–2 air (state), 3 hot_water [°C], 4 cold_water [°C]; gives 0 water_to_air [1], 1 temperature [°C].
+#define MOISTAIR_PROCESS_TOWER_MERKEL_PINCH 705
+
+// tower.merkel_number. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 water_flow [kg/s], 5 hot_water [°C], 6 cold_water
+// [°C], 7 quadrature [choice: 0 Gauss-Legendre 1 Gauss-Legendre graded 2 four points]; gives 0 number [1], 1 water_to_air [1],
+// 2 pinch.water_to_air [1], 3 pinch.temperature [°C], 4 heat_rejected [W], 5 leaving_enthalpy [J/kg].
+#define MOISTAIR_PROCESS_TOWER_MERKEL_NUMBER 706
+
+// tower.merkel_rate. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 water_flow [kg/s], 5 hot_water [°C], 6 number [1];
+// gives 0 cold_water [°C], 1 heat_rejected [W], 2 leaving_enthalpy [J/kg], 3 water_to_air [1], 4 range [K], 5 approach [K],
+// 6 effectiveness [1], 7 direction [choice, 0 cooling, 1 reversed].
+#define MOISTAIR_PROCESS_TOWER_MERKEL_RATE 707
+
+// tower.air_for_duty. Takes 0–2 air (state), 3 water_flow [kg/s], 4 hot_water [°C], 5 cold_water [°C], 6 coefficient [1], 7 exponent [1];
+// gives 0–2 air (state), 3 dry_air_flow [kg/s], 4 volume_flow [m³/s].
+#define MOISTAIR_PROCESS_TOWER_AIR_FOR_DUTY 708
+
+// tower.effectiveness_number. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 water_flow [kg/s], 5 hot_water [°C],
+// 6 cold_water [°C]; gives 0 number [1].
+#define MOISTAIR_PROCESS_TOWER_EFFECTIVENESS_NUMBER 709
+
+// tower.effectiveness_rate. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 water_flow [kg/s], 5 hot_water [°C],
+// 6 number [1]; gives 0 cold_water [°C], 1 heat_rejected [W], 2 leaving_enthalpy [J/kg], 3 water_to_air [1], 4 range [K], 5 approach [K],
+// 6 effectiveness [1], 7 direction [choice, 0 cooling, 1 reversed].
+#define MOISTAIR_PROCESS_TOWER_EFFECTIVENESS_RATE 710
+
+// tower.poppe_number. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 water_flow [kg/s], 5 hot_water [°C], 6 cold_water
+// [°C], 7 transfer [choice: 0 Bosnjakovic 1 Lewis factor one 2 evaporation suppressed]; gives 0 number [1].
+#define MOISTAIR_PROCESS_TOWER_POPPE_NUMBER 711
+
+// tower.poppe_rate. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 water_flow [kg/s], 5 hot_water [°C], 6 number [1],
+// 7 transfer [choice: 0 Bosnjakovic 1 Lewis factor one 2 evaporation suppressed]; gives 0–2 leaving.air.air (state), 3 leaving.air.liquid
+// [kg/kg], 4 leaving.air.ice [kg/kg], 5 leaving.air.total_water [kg/kg], 6 leaving.air.specific_enthalpy [J/kg], 7 leaving.air.is_wet
+// [flag], 8 leaving.dry_air_flow [kg/s], 9 exchange.heat [W], 10 exchange.water [kg/s], 11 exchange.water_enthalpy_flow [W], 12 cold_water
+// [°C], 13 evaporation [kg/s], 14 heat_rejected [W], 15 water_to_air [1], 16 range [K], 17 approach [K], 18 effectiveness [1],
+// 19 direction [choice, 0 cooling, 1 reversed], 20 is_fogged [flag].
+#define MOISTAIR_PROCESS_TOWER_POPPE_RATE 712
+
+// tower.fill_from_two_tests. Takes 0 first_water_to_air [1], 1 first_number [1], 2 second_water_to_air [1], 3 second_number [1]; gives
+// 0 coefficient [1], 1 exponent [1].
+#define MOISTAIR_PROCESS_TOWER_FILL_FROM_TWO_TESTS 713
+
+// tower.fill_number. Takes 0 coefficient [1], 1 exponent [1], 2 water_to_air [1]; gives 0 number [1].
+#define MOISTAIR_PROCESS_TOWER_FILL_NUMBER 714
+
+// tower.fill_height. Takes 0 coefficient [1], 1 exponent [1], 2 number [1], 3 water_to_air [1], 4 tested_height [m]; gives 0 height [m].
+#define MOISTAIR_PROCESS_TOWER_FILL_HEIGHT 715
+
+// tower.cycles_of_concentration. Takes 0 circulating [mg/kg], 1 make_up [mg/kg]; gives 0 cycles [1].
+#define MOISTAIR_PROCESS_TOWER_CYCLES_OF_CONCENTRATION 716
+
+// tower.evaporation_by_rule_of_thumb. Takes 0 circulating_flow [kg/s], 1 water_range [K]; gives 0 evaporation [kg/s].
+#define MOISTAIR_PROCESS_TOWER_EVAPORATION_BY_RULE_OF_THUMB 717
+
+// tower.basin_after. Takes 0 concentration [mg/kg], 1 inventory [kg], 2 duration [s], 3 blowdown [kg/s], 4 drift [kg/s], 5 make_up_flow
+// [kg/s], 6 make_up_concentration [mg/kg]; gives 0 concentration [mg/kg].
+#define MOISTAIR_PROCESS_TOWER_BASIN_AFTER 718
+
+// compression.to_pressure. Takes 0–2 entering.air.air (state), 3 entering.air.liquid [kg/kg], 4 entering.air.ice [kg/kg],
+// 5 entering.dry_air_flow [kg/s], 6 pressure [Pa], 7 leaving_temperature [°C]; gives 0–2 leaving.air.air (state), 3 leaving.air.liquid
+// [kg/kg], 4 leaving.air.ice [kg/kg], 5 leaving.air.total_water [kg/kg], 6 leaving.air.specific_enthalpy [J/kg], 7 leaving.air.is_wet
+// [flag], 8 leaving.dry_air_flow [kg/s], 9 exchange.heat [W], 10 exchange.water [kg/s], 11 exchange.water_enthalpy_flow [W], 12 condensate
+// [kg/s].
+#define MOISTAIR_PROCESS_COMPRESSION_TO_PRESSURE 800
+
+// books.balance. Takes 0 exchange.heat [W], 1 exchange.water [kg/s], 2 exchange.water_enthalpy_flow [W], 3–5 leaving.air.air (state),
+// 6 leaving.air.liquid [kg/kg], 7 leaving.air.ice [kg/kg], 8 leaving.dry_air_flow [kg/s], any number of times: 9–11 entering.air.air
+// (state), 12 entering.air.liquid [kg/kg], 13 entering.air.ice [kg/kg], 14 entering.dry_air_flow [kg/s]; gives 0 heat_residual [W],
+// 1 heat_scale [W], 2 water_residual [kg/s], 3 water_scale [kg/s], 4 heat_resolution [W], 5 close [flag].
+#define MOISTAIR_PROCESS_BOOKS_BALANCE 900
+
+// reheat.to_state. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4–6 target (state), 7 coil_leaving_relative_humidity
+// [1], 8 condensate_temperature [choice: 0 leaving air, 1 apparatus, 2 given], 9 condensate_temperature.given [°C]; gives
+// 0–2 cooling.entering.air (state), 3 cooling.entering.dry_air_flow [kg/s], 4 cooling.entering.volume_flow [m³/s], 5–7 cooling.leaving.air
+// (state), 8 cooling.leaving.dry_air_flow [kg/s], 9 cooling.leaving.volume_flow [m³/s], 10 cooling.exchange.heat [W],
+// 11 cooling.exchange.water [kg/s], 12 cooling.exchange.water_enthalpy_flow [W], 13 cooling.cooling_load [W], 14 cooling.sensible [W],
+// 15 cooling.latent [W], 16 cooling.condensate [kg/s], 17 cooling.regime [choice, 0 dry, 1 wet, 2 frost, 3 partly wet],
+// 18 cooling.sensible_heat_ratio [1], 19–21 heating.leaving.air (state), 22 heating.leaving.dry_air_flow [kg/s],
+// 23 heating.leaving.volume_flow [m³/s], 24 heating.exchange.heat [W], 25 heating.exchange.water [kg/s],
+// 26 heating.exchange.water_enthalpy_flow [W], 27 reheat [W], 28 reheat_fraction [1].
+#define MOISTAIR_PROCESS_REHEAT_TO_STATE 1000
+
+// reheat.with_coil. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4–6 target (state), 7 coil_leaving [choice: 0 relative
+// humidity, 1 bypass], 8 coil_leaving.fraction [1], 9 coil_leaving.coldest [°C], 10 condensate_temperature [choice: 0 leaving air, 1
+// apparatus, 2 given], 11 condensate_temperature.given [°C]; gives 0–2 cooling.entering.air (state), 3 cooling.entering.dry_air_flow
+// [kg/s], 4 cooling.entering.volume_flow [m³/s], 5–7 cooling.leaving.air (state), 8 cooling.leaving.dry_air_flow [kg/s],
+// 9 cooling.leaving.volume_flow [m³/s], 10 cooling.exchange.heat [W], 11 cooling.exchange.water [kg/s],
+// 12 cooling.exchange.water_enthalpy_flow [W], 13 cooling.cooling_load [W], 14 cooling.sensible [W], 15 cooling.latent [W],
+// 16 cooling.condensate [kg/s], 17 cooling.regime [choice, 0 dry, 1 wet, 2 frost, 3 partly wet], 18 cooling.sensible_heat_ratio [1],
+// 19–21 heating.leaving.air (state), 22 heating.leaving.dry_air_flow [kg/s], 23 heating.leaving.volume_flow [m³/s],
+// 24 heating.exchange.heat [W], 25 heating.exchange.water [kg/s], 26 heating.exchange.water_enthalpy_flow [W], 27 reheat [W],
+// 28 reheat_fraction [1].
+#define MOISTAIR_PROCESS_REHEAT_WITH_COIL 1001
+
+// room.supply_at_temperature. Takes 0–2 room (state), 3 gains.sensible [W], 4 gains.moisture [kg/s], 5 gains.moisture_source [choice: 0
+// saturated vapor, 1 liquid, 2 enthalpy], 6 gains.moisture_source.value [°C or J/kg], 7 supply_temperature [°C]; gives 0–2 supply.air
+// (state), 3 supply.dry_air_flow [kg/s], 4 supply.volume_flow [m³/s], 5–7 room.air.air (state), 8 room.air.liquid [kg/kg], 9 room.air.ice
+// [kg/kg], 10 room.air.total_water [kg/kg], 11 room.air.specific_enthalpy [J/kg], 12 room.air.is_wet [flag], 13 room.dry_air_flow [kg/s],
+// 14 exchange.heat [W], 15 exchange.water [kg/s], 16 exchange.water_enthalpy_flow [W].
+#define MOISTAIR_PROCESS_ROOM_SUPPLY_AT_TEMPERATURE 1500
+
+// room.supply_at_flow. Takes 0–2 room (state), 3 gains.sensible [W], 4 gains.moisture [kg/s], 5 gains.moisture_source [choice: 0 saturated
+// vapor, 1 liquid, 2 enthalpy], 6 gains.moisture_source.value [°C or J/kg], 7 dry_air_flow [kg/s]; gives 0–2 supply.air (state),
+// 3 supply.dry_air_flow [kg/s], 4 supply.volume_flow [m³/s], 5–7 room.air.air (state), 8 room.air.liquid [kg/kg], 9 room.air.ice [kg/kg],
+// 10 room.air.total_water [kg/kg], 11 room.air.specific_enthalpy [J/kg], 12 room.air.is_wet [flag], 13 room.dry_air_flow [kg/s],
+// 14 exchange.heat [W], 15 exchange.water [kg/s], 16 exchange.water_enthalpy_flow [W].
+#define MOISTAIR_PROCESS_ROOM_SUPPLY_AT_FLOW 1501
+
+// room.room_of_supply. Takes 0–2 supply.air (state), 3 supply.dry_air_flow [kg/s], 4 gains.sensible [W], 5 gains.moisture [kg/s],
+// 6 gains.moisture_source [choice: 0 saturated vapor, 1 liquid, 2 enthalpy], 7 gains.moisture_source.value [°C or J/kg]; gives
+// 0–2 supply.air (state), 3 supply.dry_air_flow [kg/s], 4 supply.volume_flow [m³/s], 5–7 room.air.air (state), 8 room.air.liquid [kg/kg],
+// 9 room.air.ice [kg/kg], 10 room.air.total_water [kg/kg], 11 room.air.specific_enthalpy [J/kg], 12 room.air.is_wet [flag],
+// 13 room.dry_air_flow [kg/s], 14 exchange.heat [W], 15 exchange.water [kg/s], 16 exchange.water_enthalpy_flow [W].
+#define MOISTAIR_PROCESS_ROOM_ROOM_OF_SUPPLY 1502
+
+// room.gains_between. Takes 0–2 supply.air (state), 3 supply.dry_air_flow [kg/s], 4–6 room (state), 7 moisture_source [choice: 0 saturated
+// vapor, 1 liquid, 2 enthalpy], 8 moisture_source.value [°C or J/kg]; gives 0 sensible [W], 1 moisture [kg/s].
+#define MOISTAIR_PROCESS_ROOM_GAINS_BETWEEN 1503
+
+// room.latent_heat. Takes 0–2 room (state); gives 0 latent_heat [J/kg].
+#define MOISTAIR_PROCESS_ROOM_LATENT_HEAT 1504
+
+// room.sensible_heat_ratio. Takes 0–2 room (state), 3 gains.sensible [W], 4 gains.moisture [kg/s], 5 gains.moisture_source [choice: 0
+// saturated vapor, 1 liquid, 2 enthalpy], 6 gains.moisture_source.value [°C or J/kg]; gives 0 sensible_heat_ratio [1].
+#define MOISTAIR_PROCESS_ROOM_SENSIBLE_HEAT_RATIO 1505
+
+// room.process_slope. Takes 0 gains.sensible [W], 1 gains.moisture [kg/s], 2 gains.moisture_source [choice: 0 saturated vapor, 1 liquid, 2
+// enthalpy], 3 gains.moisture_source.value [°C or J/kg], 4 pressure [Pa]; gives 0 slope [J/kg].
+#define MOISTAIR_PROCESS_ROOM_PROCESS_SLOPE 1506
+
+// room.slope_of_ratio. Takes 0–2 room (state), 3 sensible_heat_ratio [1]; gives 0 slope [J/kg].
+#define MOISTAIR_PROCESS_ROOM_SLOPE_OF_RATIO 1507
+
+// room.ratio_of_slope. Takes 0–2 room (state), 3 slope [J/kg]; gives 0 sensible_heat_ratio [1].
+#define MOISTAIR_PROCESS_ROOM_RATIO_OF_SLOPE 1508
+
+// room.apparatus_dew_points. Takes 0–2 room (state), 3 sensible_heat_ratio [1]; gives 0 warmer [°C], 1 colder [°C].
+#define MOISTAIR_PROCESS_ROOM_APPARATUS_DEW_POINTS 1509
+
+// room.limiting_line. Takes 0–2 room (state), 3–5 entering (state), 6 coil_leaving [choice: 0 relative humidity, 1 bypass],
+// 7 coil_leaving.fraction [1], 8 coil_leaving.coldest [°C]; gives 0 sensible_heat_ratio [1], 1 slope [J/kg], 2 touches [°C], 3 at_coldest
+// [flag].
+#define MOISTAIR_PROCESS_ROOM_LIMITING_LINE 1510
+
+// room.least_reheat. Takes 0–2 room (state), 3 gains.sensible [W], 4 gains.moisture [kg/s], 5 gains.moisture_source [choice: 0 saturated
+// vapor, 1 liquid, 2 enthalpy], 6 gains.moisture_source.value [°C or J/kg], 7–9 entering (state), 10 coil_leaving [choice: 0 relative
+// humidity, 1 bypass], 11 coil_leaving.fraction [1], 12 coil_leaving.coldest [°C]; gives 0 reheat [W], 1 cause [choice, 0 not needed, 1
+// line misses the coil, 2 coldest of the coil], 2–4 supply.air (state), 5 supply.dry_air_flow [kg/s], 6 supply.volume_flow [m³/s],
+// 7–9 coil_leaving (state), 10 limit.sensible_heat_ratio [1], 11 limit.slope [J/kg], 12 limit.touches [°C], 13 limit.at_coldest [flag].
+#define MOISTAIR_PROCESS_ROOM_LEAST_REHEAT 1511
+
+// room.conditioned. Takes 0–2 room (state), 3 gains.sensible [W], 4 gains.moisture [kg/s], 5 gains.moisture_source [choice: 0 saturated
+// vapor, 1 liquid, 2 enthalpy], 6 gains.moisture_source.value [°C or J/kg], 7–9 entering.air (state), 10 entering.dry_air_flow [kg/s],
+// 11 coil_leaving [choice: 0 relative humidity, 1 bypass], 12 coil_leaving.fraction [1], 13 coil_leaving.coldest [°C],
+// 14 condensate_temperature [choice: 0 leaving air, 1 apparatus, 2 given], 15 condensate_temperature.given [°C]; gives 0–2 room.supply.air
+// (state), 3 room.supply.dry_air_flow [kg/s], 4 room.supply.volume_flow [m³/s], 5–7 room.room.air.air (state), 8 room.room.air.liquid
+// [kg/kg], 9 room.room.air.ice [kg/kg], 10 room.room.air.total_water [kg/kg], 11 room.room.air.specific_enthalpy [J/kg],
+// 12 room.room.air.is_wet [flag], 13 room.room.dry_air_flow [kg/s], 14 room.exchange.heat [W], 15 room.exchange.water [kg/s],
+// 16 room.exchange.water_enthalpy_flow [W], 17–19 reheat.cooling.entering.air (state), 20 reheat.cooling.entering.dry_air_flow [kg/s],
+// 21 reheat.cooling.entering.volume_flow [m³/s], 22–24 reheat.cooling.leaving.air (state), 25 reheat.cooling.leaving.dry_air_flow [kg/s],
+// 26 reheat.cooling.leaving.volume_flow [m³/s], 27 reheat.cooling.exchange.heat [W], 28 reheat.cooling.exchange.water [kg/s],
+// 29 reheat.cooling.exchange.water_enthalpy_flow [W], 30 reheat.cooling.cooling_load [W], 31 reheat.cooling.sensible [W],
+// 32 reheat.cooling.latent [W], 33 reheat.cooling.condensate [kg/s], 34 reheat.cooling.regime [choice, 0 dry, 1 wet, 2 frost, 3 partly
+// wet], 35 reheat.cooling.sensible_heat_ratio [1], 36–38 reheat.heating.leaving.air (state), 39 reheat.heating.leaving.dry_air_flow
+// [kg/s], 40 reheat.heating.leaving.volume_flow [m³/s], 41 reheat.heating.exchange.heat [W], 42 reheat.heating.exchange.water [kg/s],
+// 43 reheat.heating.exchange.water_enthalpy_flow [W], 44 reheat.reheat [W], 45 reheat.reheat_fraction [1].
+#define MOISTAIR_PROCESS_ROOM_CONDITIONED 1512
+
+// desiccant.to_humidity_ratio. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 target [kg/kg], 5 sorption_heat_ratio
+// [1], 6 carry_over [choice: 0 none, 1 heat, 2 rise], 7 carry_over.value [W or K]; gives 0–2 leaving.air (state), 3 leaving.dry_air_flow
+// [kg/s], 4 leaving.volume_flow [m³/s], 5 exchange.heat [W], 6 exchange.water [kg/s], 7 exchange.water_enthalpy_flow [W], 8 removed
+// [kg/s], 9 sorption_heat [W], 10 carried_heat [W].
+#define MOISTAIR_PROCESS_DESICCANT_TO_HUMIDITY_RATIO 1600
+
+// desiccant.by_effectiveness. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 effectiveness [1], 5 driest [kg/kg],
+// 6 sorption_heat_ratio [1], 7 carry_over [choice: 0 none, 1 heat, 2 rise], 8 carry_over.value [W or K]; gives 0–2 leaving.air (state),
+// 3 leaving.dry_air_flow [kg/s], 4 leaving.volume_flow [m³/s], 5 exchange.heat [W], 6 exchange.water [kg/s],
+// 7 exchange.water_enthalpy_flow [W], 8 removed [kg/s], 9 sorption_heat [W], 10 carried_heat [W].
+#define MOISTAIR_PROCESS_DESICCANT_BY_EFFECTIVENESS 1601
+
+// desiccant.wheel. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 target [kg/kg], 5 sorption_heat_ratio [1],
+// 6 carry_over [choice: 0 none, 1 heat, 2 rise], 7 carry_over.value [W or K], 8–10 regeneration.air (state), 11 regeneration.dry_air_flow
+// [kg/s], 12 heater [choice: 0 heat, 1 entering temperature, 2 leaving temperature], 13 heater.value [W or °C]; gives
+// 0–2 process.leaving.air (state), 3 process.leaving.dry_air_flow [kg/s], 4 process.leaving.volume_flow [m³/s], 5 process.exchange.heat
+// [W], 6 process.exchange.water [kg/s], 7 process.exchange.water_enthalpy_flow [W], 8 process.removed [kg/s], 9 process.sorption_heat [W],
+// 10 process.carried_heat [W], 11–13 heater.leaving.air (state), 14 heater.leaving.dry_air_flow [kg/s], 15 heater.leaving.volume_flow
+// [m³/s], 16 heater.exchange.heat [W], 17 heater.exchange.water [kg/s], 18 heater.exchange.water_enthalpy_flow [W], 19–21 regeneration.air
+// (state), 22 regeneration.dry_air_flow [kg/s], 23 regeneration.volume_flow [m³/s], 24 regeneration_exchange.heat [W],
+// 25 regeneration_exchange.water [kg/s], 26 regeneration_exchange.water_enthalpy_flow [W], 27 regeneration_heat [W], 28 heat_per_water
+// [J/kg], 29 entropy_production [1], 30 wheel [choice, 0 possible, 1 against the second law].
+#define MOISTAIR_PROCESS_DESICCANT_WHEEL 1602
+
+// desiccant.potentials. Takes 0–2 air (state); gives 0 first [1], 1 second [1].
+#define MOISTAIR_PROCESS_DESICCANT_POTENTIALS 1603
+
+// desiccant.wheel_by_potentials. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4–6 regeneration.air (state),
+// 7 regeneration.dry_air_flow [kg/s], 8 first_effectiveness [1], 9 second_effectiveness [1]; gives 0–2 process.air (state),
+// 3 process.dry_air_flow [kg/s], 4 process.volume_flow [m³/s], 5 exchange.heat [W], 6 exchange.water [kg/s],
+// 7 exchange.water_enthalpy_flow [W], 8–10 regeneration.air (state), 11 regeneration.dry_air_flow [kg/s], 12 regeneration.volume_flow
+// [m³/s], 13 regeneration_exchange.heat [W], 14 regeneration_exchange.water [kg/s], 15 regeneration_exchange.water_enthalpy_flow [W],
+// 16 removed [kg/s], 17 imbalance.heat [W], 18 imbalance.water [kg/s], 19 entropy_production [1], 20 wheel [choice, 0 possible, 1 against
+// the second law], 21 correlation [choice, 0 within, 1 off standard pressure].
+#define MOISTAIR_PROCESS_DESICCANT_WHEEL_BY_POTENTIALS 1604
+
+// desiccant.effectiveness_between. Takes 0–2 air (state), 3–5 dried (state), 6–8 regeneration (state); gives 0 first [1], 1 second [1].
+#define MOISTAIR_PROCESS_DESICCANT_EFFECTIVENESS_BETWEEN 1605
+
+// evaporative.direct. Takes 0–2 entering.air (state), 3 entering.dry_air_flow [kg/s], 4 saturation_effectiveness [1], 5 circulating_flow
+// [kg/s], 6 pump_heat [W], 7 make_up_temperature [choice: 0 wet bulb, 2 given], 8 make_up_temperature.given [°C], 9 drift_fraction [1],
+// 10 cycles_of_concentration [1]; gives 0–2 air.leaving.air.air (state), 3 air.leaving.air.liquid [kg/kg], 4 air.leaving.air.ice [kg/kg],
+// 5 air.leaving.air.total_water [kg/kg], 6 air.leaving.air.specific_enthalpy [J/kg], 7 air.leaving.air.is_wet [flag],
+// 8 air.leaving.dry_air_flow [kg/s], 9 air.exchange.heat [W], 10 air.exchange.water [kg/s], 11 air.exchange.water_enthalpy_flow [W],
+// 12 air.evaporated [kg/s], 13 air.carried [kg/s], 14 water_temperature [°C], 15 water.evaporation [kg/s], 16 water.drift [kg/s],
+// 17 water.blowdown [kg/s], 18 water.make_up [kg/s], 19 water.limited_by_drift [flag], 20 condition [choice, 0 evaporating, 1 already
+// saturated].
+#define MOISTAIR_PROCESS_EVAPORATIVE_DIRECT 1700
+
+// evaporative.indirect. Takes 0–2 primary.air (state), 3 primary.dry_air_flow [kg/s], 4–6 secondary.air (state), 7 secondary.dry_air_flow
+// [kg/s], 8 effectiveness_of [choice: 0 wet bulb, 1 dew point], 9 effectiveness [1], 10 exhaust_humidity [1], 11 pump_heat [W],
+// 12 water_temperature [choice: 0 wet bulb, 2 given], 13 water_temperature.given [°C]; gives 0–2 primary.air (state),
+// 3 primary.dry_air_flow [kg/s], 4 primary.volume_flow [m³/s], 5 primary_exchange.heat [W], 6 primary_exchange.water [kg/s],
+// 7 primary_exchange.water_enthalpy_flow [W], 8–10 secondary.leaving.air.air (state), 11 secondary.leaving.air.liquid [kg/kg],
+// 12 secondary.leaving.air.ice [kg/kg], 13 secondary.leaving.air.total_water [kg/kg], 14 secondary.leaving.air.specific_enthalpy [J/kg],
+// 15 secondary.leaving.air.is_wet [flag], 16 secondary.leaving.dry_air_flow [kg/s], 17 secondary.exchange.heat [W],
+// 18 secondary.exchange.water [kg/s], 19 secondary.exchange.water_enthalpy_flow [W], 20 secondary.evaporated [kg/s], 21 secondary.carried
+// [kg/s], 22 heat [W], 23 condensate [kg/s], 24 condition [choice, 0 cooling, 1 no drive, 2 condensing, 3 frosting].
+#define MOISTAIR_PROCESS_EVAPORATIVE_INDIRECT 1701
+
+// evaporative.two_stage. Takes 0–2 primary.air (state), 3 primary.dry_air_flow [kg/s], 4–6 secondary.air (state), 7 secondary.dry_air_flow
+// [kg/s], 8 first.effectiveness_of [choice: 0 wet bulb, 1 dew point], 9 first.effectiveness [1], 10 first.exhaust_humidity [1],
+// 11 first.pump_heat [W], 12 first.water_temperature [choice: 0 wet bulb, 2 given], 13 first.water_temperature.given [°C],
+// 14 saturation_effectiveness [1], 15 circulating_flow [kg/s], 16 pump_heat [W], 17 make_up_temperature [choice: 0 wet bulb, 2 given],
+// 18 make_up_temperature.given [°C], 19 drift_fraction [1], 20 cycles_of_concentration [1]; gives 0–2 indirect.primary.air (state),
+// 3 indirect.primary.dry_air_flow [kg/s], 4 indirect.primary.volume_flow [m³/s], 5 indirect.primary_exchange.heat [W],
+// 6 indirect.primary_exchange.water [kg/s], 7 indirect.primary_exchange.water_enthalpy_flow [W], 8–10 indirect.secondary.leaving.air.air
+// (state), 11 indirect.secondary.leaving.air.liquid [kg/kg], 12 indirect.secondary.leaving.air.ice [kg/kg],
+// 13 indirect.secondary.leaving.air.total_water [kg/kg], 14 indirect.secondary.leaving.air.specific_enthalpy [J/kg],
+// 15 indirect.secondary.leaving.air.is_wet [flag], 16 indirect.secondary.leaving.dry_air_flow [kg/s], 17 indirect.secondary.exchange.heat
+// [W], 18 indirect.secondary.exchange.water [kg/s], 19 indirect.secondary.exchange.water_enthalpy_flow [W],
+// 20 indirect.secondary.evaporated [kg/s], 21 indirect.secondary.carried [kg/s], 22 indirect.heat [W], 23 indirect.condensate [kg/s],
+// 24 indirect.condition [choice, 0 cooling, 1 no drive, 2 condensing, 3 frosting], 25–27 direct.air.leaving.air.air (state),
+// 28 direct.air.leaving.air.liquid [kg/kg], 29 direct.air.leaving.air.ice [kg/kg], 30 direct.air.leaving.air.total_water [kg/kg],
+// 31 direct.air.leaving.air.specific_enthalpy [J/kg], 32 direct.air.leaving.air.is_wet [flag], 33 direct.air.leaving.dry_air_flow [kg/s],
+// 34 direct.air.exchange.heat [W], 35 direct.air.exchange.water [kg/s], 36 direct.air.exchange.water_enthalpy_flow [W],
+// 37 direct.air.evaporated [kg/s], 38 direct.air.carried [kg/s], 39 direct.water_temperature [°C], 40 direct.water.evaporation [kg/s],
+// 41 direct.water.drift [kg/s], 42 direct.water.blowdown [kg/s], 43 direct.water.make_up [kg/s], 44 direct.water.limited_by_drift [flag],
+// 45 direct.condition [choice, 0 evaporating, 1 already saturated], 46 evaporated [kg/s].
+#define MOISTAIR_PROCESS_EVAPORATIVE_TWO_STAGE 1702
 
 // Water below the melting temperature freezes.
 #define MOISTAIR_FREEZING_EQUILIBRIUM 0
@@ -980,7 +1461,7 @@ typedef struct {
 // The detail of an error. Written whenever a place for it is given; after a success code is 0 and quantity is -1.
 typedef struct {
     // The offending value in the unit of its quantity; NaN where there is none. For a selector of something else than a quantity
-    // (MOISTAIR_UNKNOWN_SELECTOR) the selector given.
+    // (MOISTAIR_UNKNOWN_SELECTOR) the selector given; for MOISTAIR_WRONG_COUNT the count given.
     double value;
     // The least value allowed; NaN where there is none.
     double min;
@@ -1063,6 +1544,14 @@ typedef struct {
     // The first of them, from 0; the number of rows when there is none.
     size_t first_failed;
 } moistair_column_report;
+
+// What a column of a process holds.
+typedef struct {
+    // Its name, with those of the records that it stands in, such as "leaving.air.dry_bulb".
+    char name[64];
+    // Its unit, UTF-8, such as "°C"; "choice: " with the meaning of each code; "flag" for 0 or 1.
+    char unit[128];
+} moistair_field;
 
 // Moist air with its dry-air mass flow.
 typedef struct {
@@ -2395,6 +2884,118 @@ int32_t moistair_state_columns(size_t rows,
                                int32_t *status,
                                moistair_column_report *report,
                                moistair_error *error);
+
+// The name of a process, its trade and what is done, such as "coil.to_state": static. Empty for an unknown selector.
+const char *moistair_process_name(int32_t process);
+
+// How many columns a process takes, with those that repeat counted once; 0 for an unknown selector.
+size_t moistair_process_input_count(int32_t process);
+
+// How many of the last columns that a process takes are a group that may stand there any number of times, from none to 32 times: the streams
+// that are mixed. 0 for most processes and for an unknown selector.
+size_t moistair_process_repeated_count(int32_t process);
+
+// How many columns a process gives; 0 for an unknown selector.
+size_t moistair_process_output_count(int32_t process);
+
+// What a column that a process takes holds.
+//
+// process: selector; place: of the column, from 0 to one less than moistair_process_input_count; field: output; error: may be null.
+// Returns 0, 101, 102 (also for a place that it does not have), 103.
+int32_t moistair_process_input(int32_t process,
+                               size_t place,
+                               moistair_field *field,
+                               moistair_error *error);
+
+// What a column that a process gives holds.
+//
+// process: selector; place: of the column, from 0 to one less than moistair_process_output_count; field: output; error: may be null.
+// Returns 0, 101, 102 (also for a place that it does not have), 103.
+int32_t moistair_process_output(int32_t process,
+                                size_t place,
+                                moistair_field *field,
+                                moistair_error *error);
+
+// A process on many rows at once: row by row the same results, bit for bit, as its call for one row. A bad row costs only itself.
+//
+// The constants MOISTAIR_PROCESS_… say what each column holds. A state is three columns: dry bulb [°C], humidity ratio [kg/kg], pressure [Pa];
+// its formulation is that of the call. Choices and statuses are whole numbers.
+//
+// rows: number of rows, 0 allowed; process: MOISTAIR_PROCESS_…; inputs: the columns that it takes; input_count: how many they are,
+// moistair_process_input_count unless a group repeats; formulation: of all rows; outputs: array with the output column of each result, each with
+// room for rows doubles, null where it is not wanted, NaN where there is no value; output_count: moistair_process_output_count; status:
+// room for the status of each row (102 for a choice that its input does not have), may be null; report: output, may be null; error: the
+// detail of the first row that failed, may be null. Columns to be written may not overlap with any other memory of the call. With no rows
+// the arrays are not read and may be null. Takes some 20 kB of stack.
+// Returns 0 when every row is good, else the status of the first row that is not (all outputs and report are written then as well); 101,
+// 102, 103, 104, 105, 107 when an argument is wrong (nothing is written). Where 102 may be either, report tells: it is written only when the rows
+// have been run.
+int32_t moistair_process_columns(size_t rows,
+                                 int32_t process,
+                                 const moistair_column *inputs,
+                                 size_t input_count,
+                                 int32_t formulation,
+                                 double *const *outputs,
+                                 size_t output_count,
+                                 int32_t *status,
+                                 moistair_column_report *report,
+                                 moistair_error *error);
+
+// The name of a process, its trade and what is done, such as "coil.to_state": static. Empty for an unknown selector.
+const char *moistair_process_name(int32_t process);
+
+// How many columns a process takes, with those that repeat counted once; 0 for an unknown selector.
+size_t moistair_process_input_count(int32_t process);
+
+// How many of the last columns that a process takes are a group that may stand there any number of times, from none to 32 times: the streams
+// that are mixed. 0 for most processes and for an unknown selector.
+size_t moistair_process_repeated_count(int32_t process);
+
+// How many columns a process gives; 0 for an unknown selector.
+size_t moistair_process_output_count(int32_t process);
+
+// What a column that a process takes holds.
+//
+// process: selector; place: of the column, from 0 to one less than moistair_process_input_count; field: output; error: may be null.
+// Returns 0, 101, 102 (also for a place that it does not have), 103.
+int32_t moistair_process_input(int32_t process,
+                               size_t place,
+                               moistair_field *field,
+                               moistair_error *error);
+
+// What a column that a process gives holds.
+//
+// process: selector; place: of the column, from 0 to one less than moistair_process_output_count; field: output; error: may be null.
+// Returns 0, 101, 102 (also for a place that it does not have), 103.
+int32_t moistair_process_output(int32_t process,
+                                size_t place,
+                                moistair_field *field,
+                                moistair_error *error);
+
+// A process on many rows at once: row by row the same results, bit for bit, as its call for one row. A bad row costs only itself.
+//
+// The constants MOISTAIR_PROCESS_… say what each column holds. A state is three columns: dry bulb [°C], humidity ratio [kg/kg], pressure [Pa];
+// its formulation is that of the call. Choices and statuses are whole numbers.
+//
+// rows: number of rows, 0 allowed; process: MOISTAIR_PROCESS_…; inputs: the columns that it takes; input_count: how many they are,
+// moistair_process_input_count unless a group repeats; formulation: of all rows; outputs: array with the output column of each result, each with
+// room for rows doubles, null where it is not wanted, NaN where there is no value; output_count: moistair_process_output_count; status:
+// room for the status of each row (102 for a choice that its input does not have), may be null; report: output, may be null; error: the
+// detail of the first row that failed, may be null. Columns to be written may not overlap with any other memory of the call. With no rows
+// the arrays are not read and may be null. Takes some 20 kB of stack.
+// Returns 0 when every row is good, else the status of the first row that is not (all outputs and report are written then as well); 101,
+// 102, 103, 104, 105, 107 when an argument is wrong (nothing is written). Where 102 may be either, report tells: it is written only when the rows
+// have been run.
+int32_t moistair_process_columns(size_t rows,
+                                 int32_t process,
+                                 const moistair_column *inputs,
+                                 size_t input_count,
+                                 int32_t formulation,
+                                 double *const *outputs,
+                                 size_t output_count,
+                                 int32_t *status,
+                                 moistair_column_report *report,
+                                 moistair_error *error);
 
 // A stream from its dry-air mass flow.
 //

@@ -19,6 +19,8 @@ pub const MOISTAIR_OVERLAPPING: i32 = 104;
 pub const MOISTAIR_TOO_LONG: i32 = 105;
 /// A structure holds what the library cannot have written.
 pub const MOISTAIR_DAMAGED: i32 = 106;
+/// There are not as many columns as the process takes or gives.
+pub const MOISTAIR_WRONG_COUNT: i32 = 107;
 /// A value is NaN or infinite.
 pub const MOISTAIR_NOT_FINITE: i32 = 201;
 /// A value lies outside the declared range of its quantity.
@@ -61,7 +63,7 @@ pub const MOISTAIR_INTERNAL: i32 = 901;
 #[derive(Clone, Copy, Debug)]
 pub struct moistair_error {
     /// The offending value in the unit of its quantity; NaN where there is none. For a selector of something else than a quantity
-    /// (MOISTAIR_UNKNOWN_SELECTOR) the selector given.
+    /// (MOISTAIR_UNKNOWN_SELECTOR) the selector given; for MOISTAIR_WRONG_COUNT the count given.
     pub value: f64,
     /// The least value allowed; NaN where there is none.
     pub min: f64,
@@ -89,6 +91,12 @@ pub(crate) enum Failure {
     /// A selector of anything else.
     UnknownSelector(i32),
     Damaged,
+    /// How many columns there are, and the fewest and the most that there may be.
+    WrongCount {
+        given: usize,
+        fewest: usize,
+        most: usize,
+    },
     NotFinite,
     InvalidChannel,
     Overflow,
@@ -120,6 +128,9 @@ impl From<Failure> for moistair_error {
             Failure::Overlapping => plain(MOISTAIR_OVERLAPPING),
             Failure::TooLong => plain(MOISTAIR_TOO_LONG),
             Failure::Damaged => plain(MOISTAIR_DAMAGED),
+            Failure::WrongCount { given, fewest, most } => {
+                Self { value: given as f64, min: fewest as f64, max: most as f64, ..plain(MOISTAIR_WRONG_COUNT) }
+            }
             Failure::NotFinite => plain(MOISTAIR_NOT_FINITE),
             Failure::InvalidChannel => plain(MOISTAIR_INVALID_CHANNEL),
             Failure::Overflow => plain(MOISTAIR_OVERFLOW),
@@ -158,6 +169,7 @@ pub fn text(code: i32) -> Option<&'static CStr> {
         MOISTAIR_OVERLAPPING => c"memory to be written overlaps other memory of the call",
         MOISTAIR_TOO_LONG => c"a count or a stride reaches beyond the address space",
         MOISTAIR_DAMAGED => c"a structure holds what the library cannot have written",
+        MOISTAIR_WRONG_COUNT => c"there are not as many columns as the process takes or gives",
         MOISTAIR_NOT_FINITE => c"a value is not a finite number",
         MOISTAIR_OUT_OF_RANGE => c"a value is outside the range of its quantity",
         MOISTAIR_UNATTAINABLE => c"no state has this value at this dry bulb and pressure",

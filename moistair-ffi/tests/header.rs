@@ -11,6 +11,7 @@ use std::{env, fs};
 
 use libtest_mimic::Arguments;
 use moistair_core::account::{Added, Rule};
+use moistair_core::columns::{Field, Process};
 use moistair_core::process::economizer;
 use moistair_core::process::mixing::outdoor_air::{FractionStatus, Reach};
 use moistair_core::signal::{Kind, Quality, Reason, Unit};
@@ -18,7 +19,12 @@ use moistair_core::{Error, Quantity};
 use moistair_tests::toolchain::{Face, c_compiler, cpp_compiler, trial};
 
 fn main() -> ExitCode {
+    if env::var_os("MOISTAIR_WRITE_HEADER").is_some() {
+        fs::write(selectors(), rendered_selectors()).unwrap();
+        fs::write(header(), rendered()).unwrap();
+    }
     let trials = vec![
+        trial("selectors_of_processes_are_those_of_the_catalogue", &[], selectors_of_processes),
         trial("committed_header_is_up_to_date", &[], committed_header_is_up_to_date),
         trial("every_code_of_the_core_has_its_constant", &[], every_code_of_the_core_has_its_constant),
         trial("every_status_has_a_text", &[], every_status_has_a_text),
@@ -34,8 +40,75 @@ fn here() -> &'static Path {
     Path::new(env!("CARGO_MANIFEST_DIR"))
 }
 
+fn header() -> PathBuf {
+    here().join("include/moistair.h")
+}
+
 fn committed() -> String {
-    fs::read_to_string(here().join("include/moistair.h")).unwrap()
+    fs::read_to_string(header()).unwrap()
+}
+
+fn selectors() -> PathBuf {
+    here().join("src/columns/selectors.rs")
+}
+
+/// A constant for each process of the catalogue, and at which place its columns stand.
+fn rendered_selectors() -> String {
+    let note = "MOISTAIR_WRITE_HEADER=1 cargo test -p moistair-ffi --test header";
+    let mut text = format!("//! Selectors of processes, made from the catalogue; do not edit: `{note}`.\n");
+    for process in Process::ALL {
+        let name = process.name().to_uppercase().replace('.', "_");
+        let group = process.input_count() - process.repeated();
+        let inputs = columns(process, Process::input, group);
+        let outputs = columns(process, Process::output, usize::MAX);
+        let sentence = format!("{}. Takes {inputs}; gives {outputs}.", process.name());
+        text += &format!("\n{}pub const MOISTAIR_PROCESS_{name}: i32 = {};\n", wrapped(&sentence), process.code());
+    }
+    text
+}
+
+/// A space at which no line ends.
+const JOINED: char = '\u{a0}';
+
+/// The columns with their places; those of a state in one, those from `group` on as one that repeats.
+fn columns(process: Process, field: fn(Process, usize) -> Option<Field>, group: usize) -> String {
+    let fields: Vec<Field> = (0..).map_while(|place| field(process, place)).collect();
+    let names: Vec<String> = fields.iter().map(Field::to_string).collect();
+    let (mut parts, mut place) = (Vec::new(), 0);
+    while place < fields.len() {
+        let begin = if place == group { "any number of times: " } else { "" };
+        let state = names[place].strip_suffix(".dry_bulb").filter(|air| {
+            let next = names.get(place + 1..place + 3);
+            next.is_some_and(|next| next[0] == format!("{air}.humidity_ratio") && next[1] == format!("{air}.pressure"))
+        });
+        if let Some(air) = state {
+            parts.push(format!("{begin}{place}–{}{JOINED}{air} (state)", place + 2));
+            place += 3;
+        } else {
+            parts.push(format!("{begin}{place}{JOINED}{} [{}]", names[place], fields[place].unit()));
+            place += 1;
+        }
+    }
+    parts.join(", ")
+}
+
+/// A documentation comment, line by line.
+fn wrapped(text: &str) -> String {
+    let mut lines = vec![String::from("///")];
+    for word in text.split(' ') {
+        if lines[lines.len() - 1].chars().count() + word.chars().count() > 139 {
+            lines.push(String::from("///"));
+        }
+        *lines.last_mut().unwrap() += &format!(" {word}");
+    }
+    lines.iter().map(|line| format!("{line}\n").replace(JOINED, " ")).collect()
+}
+
+fn selectors_of_processes() {
+    assert!(
+        rendered_selectors() == fs::read_to_string(selectors()).unwrap(),
+        "src/columns/selectors.rs is stale: MOISTAIR_WRITE_HEADER=1 cargo test -p moistair-ffi --test header"
+    );
 }
 
 /// Macros that follow from Cargo.toml or have arguments.
@@ -79,7 +152,9 @@ fn rendered() -> String {
         "psychrometer",
         "at_pressure",
         "derivatives",
-        "columns",
+        "columns/mod",
+        "columns/selectors",
+        "columns/process",
         "process/stream",
         "process/sensible",
         "process/coil",
@@ -107,13 +182,8 @@ fn rendered() -> String {
 }
 
 fn committed_header_is_up_to_date() {
-    let path = here().join("include/moistair.h");
-    let text = rendered();
-    if env::var_os("MOISTAIR_WRITE_HEADER").is_some() {
-        fs::write(&path, &text).unwrap();
-    }
     assert!(
-        text == committed(),
+        rendered() == committed(),
         "include/moistair.h is stale: MOISTAIR_WRITE_HEADER=1 cargo test -p moistair-ffi --test header"
     );
 }
@@ -147,6 +217,10 @@ fn every_code_of_the_core_has_its_constant() {
             }
         )*};
     }
+    for process in Process::ALL {
+        let name = process.name().to_uppercase().replace('.', "_");
+        assert_defined(&header, &format!("PROCESS_{name}"), process.code());
+    }
     enumeration!(Kind: "KIND", Unit: "UNIT", Quality: "QUALITY", Reason: "REASON", Rule: "RULE", Added: "ADDED");
     enumeration!(economizer::Rule: "ECONOMIZER_RULE", economizer::Reason: "ECONOMIZER_REASON");
     enumeration!(economizer::Fallback: "ECONOMIZER_FALLBACK", FractionStatus: "FRACTION", Reach: "REACH");
@@ -156,10 +230,10 @@ fn every_code_of_the_core_has_its_constant() {
 fn every_status_has_a_text() {
     let header = committed();
     let codes = header.lines().filter_map(|line| line.strip_prefix("#define MOISTAIR_")?.split_once(' '));
-    // Selectors of quantities share the range of numbers.
+    // Selectors of quantities and processes share the range of numbers.
     let quantities: BTreeSet<String> =
         Quantity::ALL.iter().map(|quantity| quantity.name().to_uppercase().replace([' ', '-'], "_")).collect();
-    let codes = codes.filter(|(name, _)| !quantities.contains(*name));
+    let codes = codes.filter(|(name, _)| !quantities.contains(*name) && !name.starts_with("PROCESS_"));
     let codes: Vec<i32> = codes.filter_map(|(_, value)| value.parse().ok()).filter(|code| *code >= 100).collect();
     assert!(codes.len() > 15);
     let error = Error::Infeasible { quantity: Quantity::DewPoint, value: 0.0, min: 0.0, max: 0.0 };
@@ -221,8 +295,7 @@ fn compiler(standard: &str) -> Command {
 
 fn header_compiles_strictly() {
     for (standard, language) in [("c99", "c"), ("c11", "c"), ("c17", "c"), ("c++17", "c++"), ("c++20", "c++")] {
-        let header = here().join("include/moistair.h");
-        run(compiler(standard).args(["-fsyntax-only", "-x", language]).arg(header));
+        run(compiler(standard).args(["-fsyntax-only", "-x", language]).arg(header()));
     }
 }
 

@@ -171,7 +171,7 @@ pub fn process_table() -> Vec<(i32, &'static str, Fields, usize, Fields)> {
         let (inputs, outputs) = (fields(Process::input, process), fields(Process::output, process));
         (process.code(), process.name(), inputs, process.repeated(), outputs)
     };
-    Process::all().map(row).collect()
+    Process::ALL.into_iter().map(row).collect()
 }
 
 /// A plain number or one state; `None` for what holds an array.

@@ -80,22 +80,47 @@ struct Entry {
 #[derive(Clone, Copy)]
 pub struct Process(&'static Entry);
 
-impl Process {
-    /// All of them.
-    pub fn all() -> impl Iterator<Item = Self> {
-        TRADES.iter().flat_map(|entries| entries.iter()).map(Self)
+/// How many there are.
+const COUNT: usize = {
+    let (mut count, mut trade) = (0, 0);
+    while trade < TRADES.len() {
+        #[allow(clippy::indexing_slicing, reason = "evaluated at compile time")]
+        {
+            count += TRADES[trade].len();
+        }
+        trade += 1;
     }
+    count
+};
+
+impl Process {
+    /// All of them, trade by trade, in the order of their codes there.
+    #[allow(clippy::indexing_slicing, reason = "evaluated at compile time")]
+    pub const ALL: [Self; COUNT] = {
+        let mut all = [Self(&TRADES[0][0]); COUNT];
+        let (mut place, mut trade) = (0, 0);
+        while trade < TRADES.len() {
+            let mut entry = 0;
+            while entry < TRADES[trade].len() {
+                all[place] = Self(&TRADES[trade][entry]);
+                place += 1;
+                entry += 1;
+            }
+            trade += 1;
+        }
+        all
+    };
 
     /// The process with a given code.
     #[must_use]
     pub fn from_code(code: i32) -> Option<Self> {
-        Self::all().find(|process| process.0.code == code)
+        Self::ALL.into_iter().find(|process| process.0.code == code)
     }
 
     /// The process with a given name, such as `coil.to_state`.
     #[must_use]
     pub fn from_name(name: &str) -> Option<Self> {
-        Self::all().find(|process| process.0.name == name)
+        Self::ALL.into_iter().find(|process| process.0.name == name)
     }
 
     /// The stable code, never re-used.

@@ -137,6 +137,11 @@ pub struct Field {
 }
 
 impl Field {
+    /// The names of the records that it stands in, from the outermost, and its own.
+    pub fn path(&self) -> impl Iterator<Item = &'static str> {
+        self.path.into_iter().filter(|name| !name.is_empty())
+    }
+
     /// The unit; `choice: ` and the meaning of each code for a choice, `flag` for 0 or 1.
     #[must_use]
     pub const fn unit(&self) -> &'static str {
@@ -147,7 +152,7 @@ impl Field {
 /// The name: those of the records that it stands in and its own, with points between them, as in `leaving.air.dry_bulb`.
 impl fmt::Display for Field {
     fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
-        let mut names = self.path.iter().filter(|name| !name.is_empty());
+        let mut names = self.path();
         if let Some(first) = names.next() {
             f.write_str(first)?;
         }

@@ -24,7 +24,7 @@ fn codes_and_names_are_unique_and_fields_have_names_and_units() {
     let mut codes = BTreeSet::new();
     let mut names = BTreeSet::new();
     let mut fields = 0;
-    for process in Process::all() {
+    for process in Process::ALL {
         assert!(codes.insert(process.code()) && names.insert(process.name()), "{process:?} is there twice");
         assert_eq!(Process::from_code(process.code()), Some(process));
         assert_eq!(Process::from_name(process.name()), Some(process));
@@ -155,7 +155,7 @@ fn numbers_of(values: &[Value]) -> Vec<f64> {
 #[test]
 fn columns_are_rows_and_rows_are_values_bit_for_bit() {
     let (mut good, mut compared) = (0, 0);
-    for (place, process) in Process::all().enumerate() {
+    for (place, process) in Process::ALL.into_iter().enumerate() {
         // Of its own, so that a new process changes no other's rows.
         let mut random = Random(1405 + process.code() as u64);
         let formulation = Formulation::ALL[place % 2];

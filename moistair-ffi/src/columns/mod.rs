@@ -1,4 +1,10 @@
-//! Columns of states.
+//! Columns of states and of processes.
+
+mod process;
+mod selectors;
+
+pub use process::*;
+pub use selectors::*;
 
 use moistair_core::Quantity;
 use moistair_core::columns::{Column, ColumnReport, StateColumns};
@@ -31,6 +37,12 @@ pub struct moistair_column_report {
     pub first_failed: usize,
 }
 
+impl moistair_column_report {
+    fn new(outcome: &ColumnReport, rows: usize) -> Self {
+        Self { failed: outcome.failed, first_failed: outcome.first.map_or(rows, |(row, _)| row) }
+    }
+}
+
 /// Properties of many states at once: row by row the same results, bit for bit, as the calls for one state. A bad row costs only itself.
 ///
 /// rows: number of rows, 0 allowed; dry_bulb: [°C]; property: selector of the second property; second: its values; pressure: [Pa]; formulation: of
@@ -58,16 +70,12 @@ pub unsafe extern "C" fn moistair_state_columns(
     let call = || {
         let (property, formulation) = (quantity(property)?, self::formulation(formulation)?);
         check_mask(mask)?;
-        if rows > isize::MAX as usize / size_of::<f64>() {
-            return Err(Failure::TooLong);
-        }
+        check_rows(rows)?;
         // SAFETY: the caller's array of output columns.
         let selected = unsafe { Selected::new(rows, mask, outputs) }?;
         let reads = [dry_bulb.extent(rows)?, second.extent(rows)?, pressure.extent(rows)?, selected.array];
         let writes = [Extent::new(status, rows, true)?, Extent::new(report, 1, true)?, Extent::new(error, 1, true)?];
-        if !apart(&selected.extents, &writes, &reads) {
-            return Err(Failure::Overlapping);
-        }
+        apart(&[&selected.extents, &writes], &[&reads])?;
         // SAFETY: the caller's memory, not null and aligned.
         let inputs = unsafe {
             StateColumns {
@@ -80,9 +88,8 @@ pub unsafe extern "C" fn moistair_state_columns(
         };
         // SAFETY: as above; what is written overlaps with nothing.
         let outcome = unsafe { selected.compute(&inputs, rows, status) }?;
-        let first_failed = outcome.first.map_or(rows, |(row, _)| row);
         // SAFETY: the caller's pointer.
-        unsafe { write(report, moistair_column_report { failed: outcome.failed, first_failed }) };
+        unsafe { write(report, moistair_column_report::new(&outcome, rows)) };
         outcome.first.map_or(Ok(()), |(_, error)| Err(error.into()))
     };
     // SAFETY: the caller's pointer.
@@ -117,13 +124,20 @@ impl Extent {
     }
 }
 
-/// Whether everything that is written is apart from everything else.
-fn apart(columns: &[Extent], writes: &[Extent], reads: &[Extent]) -> bool {
-    let written = columns.iter().chain(writes);
-    written
-        .clone()
-        .enumerate()
-        .all(|(place, one)| written.clone().skip(place + 1).chain(reads).all(|other| !one.overlaps(other)))
+/// Everything that is written has to be apart from everything else.
+fn apart(writes: &[&[Extent]], reads: &[&[Extent]]) -> Result<(), Failure> {
+    let written = writes.iter().copied().flatten();
+    let read = reads.iter().copied().flatten();
+    let are_apart = written.clone().enumerate().all(|(place, one)| {
+        let others = written.clone().skip(place + 1).chain(read.clone());
+        others.into_iter().all(|other| !one.overlaps(other))
+    });
+    if are_apart { Ok(()) } else { Err(Failure::Overlapping) }
+}
+
+/// As many doubles as the address space has room for.
+fn check_rows(rows: usize) -> Result<(), Failure> {
+    if rows > isize::MAX as usize / size_of::<f64>() { Err(Failure::TooLong) } else { Ok(()) }
 }
 
 impl moistair_column {
