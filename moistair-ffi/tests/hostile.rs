@@ -11,6 +11,9 @@ use std::collections::{BTreeMap, BTreeSet};
 use std::{env, fs};
 
 use moistair::*;
+use moistair_core::columns::{Field, Process};
+use moistair_tests::checks::Random;
+use moistair_tests::plausible::plausible;
 
 const SENTINEL: u64 = 0xA5A5_5A5A_A5A5_5A5A;
 const NAN_BITS: u64 = 0x7FF8_0000_0000_0000;
@@ -53,6 +56,7 @@ words! {
     f64, [], [], [];
     u64, [0], [], [];
     moistair_limits, [], [], [];
+    moistair_field, [0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15, 16, 17, 18, 19, 20, 21, 22, 23], [], [];
     moistair_basis, [1], [], [];
     moistair_state, [12], [], [0];
     moistair_stream, [12], [], [0];
@@ -208,6 +212,13 @@ impl Caller {
             1 => [-1, i32::MIN, i32::MAX, count][self.below(4) as usize],
             _ => self.below(count as u64) as i32,
         }
+    }
+
+    /// Mostly a process.
+    fn process(&self) -> i32 {
+        let all = Process::ALL;
+        let code = all[self.below(all.len() as u64) as usize].code();
+        [self.bits() as i32, code + 1, code, code, code, code, code, code][self.below(8) as usize]
     }
 
     fn mask(&self) -> u64 {
@@ -527,6 +538,8 @@ fn no_argument_upsets_an_export() {
 
     run!(exercise moistair_quantity_limits: |c, out, e| (c.selector(90), out, e));
     run!(exercise moistair_formulation_limits: |c, out, e| (c.selector(3), c.selector(90), out, e));
+    run!(exercise moistair_process_input: |c, out, e| (c.process(), c.below(20) as usize, out, e));
+    run!(exercise moistair_process_output: |c, out, e| (c.process(), c.below(20) as usize, out, e));
     run!(exercise moistair_pressure_at_elevation: |c, out, e| (c.number(-5e3, 1.1e4), out, e));
     run!(exercise moistair_pressure_at_geometric_elevation: |c, out, e| (c.number(-5e3, 1.1e4), out, e));
     run!(exercise moistair_temperature_at_elevation: |c, out, e| (c.number(-5e3, 1.1e4), out, e));
@@ -974,8 +987,8 @@ fn head_name(head: &str) -> &str {
 
 /// Exports with more than one output, or none.
 fn several_outputs(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static str, (u64, u64)>) {
-    let (mut read, mut sloped, mut columned, mut unfinished) = (0, 0, 0, 0);
-    for _ in 0..n {
+    let (mut read, mut sloped, mut columned, mut processed, mut unfinished) = (0, 0, 0, 0, 0);
+    for call in 0..n {
         caller.broken.set(false);
         let (state, mask) = (caller.state(), caller.mask());
         let mut values = [f64::from_bits(SENTINEL); MOISTAIR_PROPERTY_COUNT as usize];
@@ -997,6 +1010,10 @@ fn several_outputs(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static st
         read += u64::from(status == MOISTAIR_OK);
         sloped += u64::from(derivatives(caller));
         columned += u64::from(columns(caller) != 0);
+        // A row may be a march, which takes as long as hundreds of states.
+        if call % 10 == 0 {
+            processed += u64::from(process_columns(caller));
+        }
         caller.broken.set(false);
         let (periods, mut period, mut begun) = (caller.kept(), caller.kept::<moistair_period>(), 0);
         let (periods, period, begun) = (caller.pointer(&periods), caller.place(&mut period), caller.place(&mut begun));
@@ -1008,6 +1025,7 @@ fn several_outputs(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static st
     successes.insert("moistair_properties", (read, n));
     successes.insert("moistair_derivatives", (sloped, n));
     successes.insert("moistair_state_columns", (columned, n));
+    successes.insert("moistair_process_columns", (processed, n.div_ceil(10)));
     successes.insert("moistair_periods_unfinished", (unfinished, n));
 }
 
@@ -1099,10 +1117,83 @@ fn columns(caller: &Caller) -> usize {
     1 + rows - report.failed
 }
 
+/// A process on a few rows; whether one of them had a result.
+fn process_columns(caller: &Caller) -> bool {
+    const MOST: usize = 4;
+    let selector = caller.process();
+    let process = Process::from_code(selector).unwrap_or(Process::ALL[0]);
+    let rows =
+        if caller.below(16) == 0 { usize::MAX >> caller.below(3) } else { caller.below(MOST as u64 + 1) as usize };
+    let fields: Vec<Field> = (0..process.input_count()).map_while(|place| process.input(place)).collect();
+    let mut random = Random(caller.bits());
+    // One number in eight is wild in half of the calls, each number plausible in the others.
+    let careless = caller.below(2) == 0;
+    let mut draw = |field: &Field| -> [f64; MOST] {
+        core::array::from_fn(|row| {
+            let sound = plausible(process.name(), &field.to_string(), field.unit(), row, &mut random);
+            if careless && caller.below(8) == 0 { caller.wild() } else { sound }
+        })
+    };
+    let inputs: Vec<[f64; MOST]> = fields.iter().map(&mut draw).collect();
+    let column = |input: &[f64; MOST]| {
+        let stride = if caller.below(256) == 0 && rows > 1 { usize::MAX / 4 } else { caller.below(2) as usize };
+        moistair_column { values: caller.pointer(input).cast(), stride }
+    };
+    caller.broken.set(false);
+    let columns: Vec<moistair_column> = inputs.iter().map(column).collect();
+    let mut memory = vec![[f64::from_bits(SENTINEL); MOST]; process.output_count()];
+    let outputs: Vec<*mut f64> = memory.iter_mut().map(|column| caller.optional(column).cast()).collect();
+    let (takes, gives) = (columns.len(), outputs.len());
+    let count = |count: usize| if caller.below(32) == 0 { caller.bits() as usize } else { count };
+    let mut status = [77; MOST];
+    let mut report = moistair_column_report { failed: 77, first_failed: 77 };
+    let mut error = moistair_error { value: 0.0, min: 0.0, max: 0.0, code: -1, quantity: -1 };
+    // SAFETY: valid memory for as many rows, or more rows or columns than the library takes.
+    let first = unsafe {
+        moistair_process_columns(
+            rows,
+            selector,
+            columns.as_ptr(),
+            count(takes),
+            caller.formulation(),
+            outputs.as_ptr(),
+            count(gives),
+            status.as_mut_ptr(),
+            &mut report,
+            &mut error,
+        )
+    };
+    // Without rows no pointer is looked at.
+    if rows == 0 {
+        caller.broken.set(false);
+    }
+    verdict(caller, "moistair_process_columns", first, Some(&error));
+    if report.failed == 77 {
+        assert!(memory.iter().flatten().all(|value| value.to_bits() == SENTINEL) && status == [77; MOST]);
+        return false;
+    }
+    assert_eq!(report.failed, status.iter().take(rows).filter(|status| **status != 0).count());
+    assert_eq!(first, if report.first_failed < rows { status[report.first_failed] } else { 0 });
+    for (column, place) in memory.iter().zip(&outputs) {
+        for (row, value) in column.iter().enumerate() {
+            match (!place.is_null() && row < rows, status[row]) {
+                (false, _) => assert_eq!(value.to_bits(), SENTINEL),
+                (true, 0) => {
+                    assert!(!value.is_nan() || value.to_bits() == NAN_BITS, "{process:?} {:x}", value.to_bits())
+                }
+                (true, _) => assert_eq!(value.to_bits(), NAN_BITS),
+            }
+        }
+    }
+    assert!(status.iter().take(rows).all(|status| text(*status).is_some() && *status != MOISTAIR_INTERNAL));
+    report.failed < rows
+}
+
 /// Texts are terminated and static whatever the code.
 fn texts(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static str, (u64, u64)>) {
     type Text = extern "C" fn(i32) -> *const core::ffi::c_char;
-    let all: [(&str, Text); 9] = [
+    let all: [(&str, Text); 10] = [
+        ("moistair_process_name", moistair_process_name),
         ("moistair_status_text", moistair_status_text),
         ("moistair_quantity_name", moistair_quantity_name),
         ("moistair_quantity_unit", moistair_quantity_unit),
@@ -1119,6 +1210,16 @@ fn texts(caller: &Caller, n: u64, successes: &mut BTreeMap<&'static str, (u64, u
             let text = unsafe { core::ffi::CStr::from_ptr(function(caller.selector(400))) };
             assert!(text.to_str().unwrap().len() < 100, "{name}");
         }
+        successes.insert(name, (n, n));
+    }
+    type Count = extern "C" fn(i32) -> usize;
+    let counts: [(&str, Count); 3] = [
+        ("moistair_process_input_count", moistair_process_input_count),
+        ("moistair_process_repeated_count", moistair_process_repeated_count),
+        ("moistair_process_output_count", moistair_process_output_count),
+    ];
+    for (name, function) in counts {
+        assert!((0..n).all(|_| function(caller.process()) < 100), "{name}");
         successes.insert(name, (n, n));
     }
     assert!(moistair_version() > 0 && moistair_abi_version() > 0 && moistair_numerics_version() > 0);

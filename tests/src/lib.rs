@@ -5,5 +5,7 @@
 pub mod checks;
 pub mod helmholtz_reference;
 pub mod pairs;
+#[path = "../../moistair-core/src/columns/process/tests/plausible.rs"]
+pub mod plausible;
 pub mod publications;
 pub mod toolchain;

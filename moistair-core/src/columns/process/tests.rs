@@ -1,9 +1,13 @@
 //! The catalogue by itself, and every process of it as numbers, as values and in columns.
 
+mod plausible;
+
 use std::collections::BTreeSet;
 use std::string::{String, ToString};
 use std::vec::Vec;
 use std::{format, println, vec};
+
+use plausible::plausible;
 
 use super::*;
 use crate::checks::Random;
@@ -49,63 +53,6 @@ fn codes_of_a_trade_stand_together() {
         let hundred = entries[0].code / 100;
         assert!(entries.iter().all(|entry| entry.code / 100 == hundred));
         assert!(entries.windows(2).all(|pair| pair[0].code < pair[1].code));
-    }
-}
-
-/// A number that may stand in a field: most rows are feasible, and every kind of refusal occurs.
-fn plausible(process: Process, field: &Field, row: usize, random: &mut Random) -> f64 {
-    let name = field.to_string();
-    let last = name.rsplit('.').next().unwrap();
-    if row % 8 == 7 && random.between(0.0, 4.0) < 1.0 {
-        return [f64::NAN, -1.0, 1e9, 0.5][row / 8 % 4];
-    }
-    let leaves_tower = name.starts_with("leaving") && process.name().starts_with("tower");
-    match (last, field.unit()) {
-        ("given" | "wanted", unit) if unit.starts_with("choice: code") => [21.0, 22.0][row % 2],
-        ("humidity_quantity", _) => 12.0,
-        ("quantity", _) => [0.0, 2.0, 7.0, 0.0][row % 4],
-        (_, unit) if unit.starts_with("choice") => [0.0, 0.0, 1.0, 2.0][row % 4],
-        ("dry_bulb", _) if leaves_tower => random.between(30.0, 35.0),
-        ("humidity_ratio", _) if leaves_tower => random.between(0.02, 0.025),
-        ("dry_bulb", _) if name.starts_with("leaving") => random.between(7.0, 13.0),
-        ("humidity_ratio", _) if name.starts_with("leaving") => random.between(0.004, 0.006),
-        ("value", _) if name.contains("humidity") => random.between(0.2, 0.8),
-        ("standard_uncertainty", _) => random.between(0.0, 0.1),
-        ("dry_bulb" | "value", _) => random.between(15.0, 40.0),
-        ("ice", _) => [0.0, 0.0, 0.0, 0.001][row % 4],
-        ("hot_water", _) => random.between(36.0, 45.0),
-        ("cold_water", _) => random.between(30.0, 36.0),
-        ("entering_water" | "given", "°C") => random.between(5.0, 15.0),
-        ("specific_enthalpy", _) => random.between(2e4, 8e4),
-        ("slope", _) => random.between(3e6, 2e7),
-        ("moisture", _) => random.between(0.0, 0.004),
-        ("steam_enthalpy", _) => random.between(2.6e6, 2.8e6),
-        ("steam_temperature", _) => random.between(110.0, 190.0),
-        ("pump_heat", _) => random.between(0.0, 500.0),
-        ("circulating", _) => 1500.0,
-        ("make_up", _) => random.between(100.0, 1500.0),
-        (_, "kg" | "mg/kg") => random.between(100.0, 1e4),
-        ("drift_fraction", _) => random.between(0.0, 0.01),
-        ("cycles_of_concentration", _) => random.between(1.0, 5.0),
-        ("coefficient", "1/K") => random.between(5e-4, 1e-3),
-        ("first_water_to_air", _) => random.between(0.5, 1.0),
-        ("second_water_to_air", _) => random.between(1.0, 2.0),
-        ("first_number", _) => random.between(1.5, 2.0),
-        ("second_number", _) => random.between(1.0, 1.5),
-        ("rows", _) => (row % 8) as f64,
-        ("total_flow", _) => random.between(2.0, 8.0),
-        ("blowdown" | "make_up_flow" | "drift" | "steam_flow", _) => random.between(0.0, 0.02),
-        (_, "°C") => random.between(5.0, 40.0),
-        (_, "K") => random.between(0.0, 10.0),
-        (_, "kg/kg") => random.between(0.0, 0.012),
-        (_, "Pa") => [101_325.0, 95_000.0, 101_325.0][row % 3],
-        (_, "kg/s" | "m³/s" | "m" | "kg/m³") => random.between(0.9, 1.9),
-        (_, "W") => random.between(-5e3, 2e4),
-        (_, "J/(kg K)") => random.between(3500.0, 4200.0),
-        (_, "W/K") => random.between(1e3, 1e4),
-        (_, "1") => random.between(0.0, 1.0),
-        (_, "s") => random.between(0.0, 1e4),
-        (_, unit) => panic!("a unit that this test does not know: {unit}"),
     }
 }
 
@@ -165,10 +112,11 @@ fn columns_are_rows_and_rows_are_values_bit_for_bit() {
             fields.extend(&group);
         }
         assert!(process.takes(fields.len()) && !process.takes(fields.len() + 1));
-        let columns: Vec<Vec<f64>> = fields
-            .iter()
-            .map(|field| (0..ROWS).map(|row| plausible(process, field, row, &mut random)).collect())
-            .collect();
+        let mut column = |field: &Field| -> Vec<f64> {
+            let name = field.to_string();
+            (0..ROWS).map(|row| plausible(process.name(), &name, field.unit(), row, &mut random)).collect()
+        };
+        let columns: Vec<Vec<f64>> = fields.iter().map(&mut column).collect();
         let views: Vec<_> = columns.iter().map(|column| Column::new(column)).collect();
         let call = ProcessColumns { process, inputs: &views, formulation };
         let count = process.output_count();
