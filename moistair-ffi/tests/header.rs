@@ -316,4 +316,12 @@ fn c_sees_the_same_layout_and_version() {
 fn examples_run() {
     let printed = compiled_and_run("examples/states.c");
     assert!(printed.contains("wet bulb"), "{printed}");
+    let printed = compiled_and_run("examples/process_columns.c");
+    for line in [
+        "takes entering.dry_air_flow [kg/s]",
+        "gives exchange.heat [W]",
+        "120 s: a value is outside the range of its quantity",
+    ] {
+        assert!(printed.contains(line), "{line} in {printed}");
+    }
 }
