@@ -196,7 +196,7 @@ fn washers_balance() {
         prop_assert!((done.heat_to_water.watts() - to_water).abs() <= 1e-11 * scale);
         // Below freezing they come to equilibrium with the air.
         let melted = numbers(&left.air()).0 > 0.1;
-        prop_assert!(!melted || kg(done.air.carried) >= droplets * (1.0 - 1e-12), "droplets are carried");
+        prop_assert!(!melted || kg(done.air.carried) >= droplets * (1.0 - 1e-12) - 1e-12 * m, "droplets are carried");
         // The water lies between its own temperature, warmed by the pump, and the wet bulb.
         let warmed = washer.temperature.celsius() + washer.pump_heat.watts() / (water * 4_150.0);
         let (low, high) =
@@ -231,6 +231,8 @@ fn washers_at_their_limits() {
             prop_assert!((none.leaving_water_temperature.celsius() - plain.temperature.celsius()).abs() < 1e-9);
         }
         let much = feasible!(humidify::wash(&entering, Washer { water: flow(9e5), ..plain }));
+        // Where the water boils away it cools, however much there is.
+        prop_assume!(numbers(&much.air.leaving.air().air()).1 < 1.0);
         prop_assert!((much.leaving_water_temperature.celsius() - plain.temperature.celsius()).abs() < 0.02, "{much:?}");
         Ok(())
     });
@@ -261,7 +263,11 @@ fn washers_dry_below_the_dew_point() {
             prop_assert!(cold.moistening == Moistening::Dehumidifies && kg(cold.air.evaporated) < 0.0);
             let warm = feasible!(washed(dew + off));
             // Contact counts on temperature, so that next to the dew point the line in humidity may bend across.
-            prop_assert!(off < 1.0 || (warm.moistening == Moistening::Humidifies && kg(warm.air.evaporated) > 0.0));
+            prop_assert!(
+                off < 1.0
+                    || basis.pressure().pascals() > 3e5
+                    || (warm.moistening == Moistening::Humidifies && kg(warm.air.evaporated) > 0.0)
+            );
             prop_assert!(cold.heat_to_water.watts() > 0.0);
             Ok(())
         },

@@ -91,9 +91,13 @@ pub fn direct<S: Scalar>(entering: &AirStream<S>, cooler: DirectCooler<S>) -> Re
         EvaporatingWater::AtWetBulb => None,
         EvaporatingWater::Given(temperature) => Some(water_enthalpy(&entering.air(), temperature)?),
     };
+    // What condenses on water colder than the dew point leaves with the bleed.
     let used = |evaporated: S| {
-        let evaporation = MassFlow::from_kilograms_per_second(evaporated.at_least(k(0.0)));
-        water_use(evaporation, cooler.circulating, cooler.treatment)
+        let flow = MassFlow::from_kilograms_per_second;
+        let condensed = (-evaporated).at_least(k(0.0));
+        let used = water_use(flow(evaporated.at_least(k(0.0))), cooler.circulating, cooler.treatment)?;
+        let limited_by_drift = used.limited_by_drift || condensed > k(0.0);
+        Ok::<_, Error>(WaterUse { blowdown: used.blowdown + flow(condensed), limited_by_drift, ..used })
     };
     let still = used(k(0.0))?;
     let droplets = still.drift.kilograms_per_second();

@@ -139,7 +139,7 @@ pub fn indirect<S: Scalar>(
     limit_of_working_air(&working, cooler.effectiveness, start, wet_bulb, leaving)?;
     let cooled = Cooled::to(&air, leaving)?;
     let heat = flow * cooled.heat;
-    let taken = Taken { heat: heat + pump, flow: exhaust_flow, water, humidity: wanted, wall: start };
+    let taken = Taken { heat: heat + pump, flow: exhaust_flow, water, humidity: wanted, wall: start, melting };
     let exhaust = exhaust(&working, taken)?;
     let evaporated = exhaust_flow * (parts(&exhaust).1 - parts(&working).1);
     let flow_of = MassFlow::from_kilograms_per_second;
@@ -271,6 +271,8 @@ struct Taken<S> {
     humidity: S,
     /// The warmest that the wet wall can be, °C.
     wall: S,
+    /// Below which the water freezes, °C.
+    melting: S,
 }
 
 /// The secondary air after it took heat at a stated humidity.
@@ -293,25 +295,27 @@ fn exhaust<S: Scalar>(working: &MoistAir<S>, taken: Taken<S>) -> Result<MoistAir
         h - h1 - (w - w1) * taken.water
     };
     let excess = |celsius: S| heat_to(&at(celsius, taken.humidity)) - heat;
-    let cold = working.wet_bulb()?.celsius();
+    // Colder water than at the wet bulb leaves the air a little below it.
+    let cold = taken.melting;
     let warm = taken.wall.at_least(working.dry_bulb().celsius());
     let (least, most) = (excess(cold), excess(warm));
     if most < k(0.0) {
         let able = (heat_to(&at(warm, taken.humidity)) * taken.flow).at_least(k(0.0));
         return Err(infeasible(Quantity::HeatFlow, taken.heat, k(0.0), able));
     }
-    let celsius = if least < k(0.0) {
-        solve::between((cold, least), (warm, most), solve::temperature_resolution(), excess)
-    } else {
-        cold
-    };
+    let within = least < k(0.0);
+    if !within {
+        let (wet_bulb, (_, end)) = (working.wet_bulb()?.celsius(), formulation.limits(Quantity::WetBulb));
+        return Err(infeasible(Quantity::WetBulb, wet_bulb, cold, k(end)));
+    }
+    let celsius = solve::between((cold, least), (warm, most), solve::temperature_resolution(), excess);
     let near = at(celsius, taken.humidity);
     // What the last unit of the temperature leaves over goes into the vapor, so that the book closes.
     let latent = with_mixture!(formulation, S, M =>
         M::<S>::at(celsius).gas(pressure, parts(&near).1).enthalpy_of_water)
         - taken.water;
     let rest = heat_to(&near) - heat;
-    let ratio = if least < k(0.0) { parts(&near).1 - rest / latent } else { parts(&near).1 };
+    let ratio = parts(&near).1 - rest / latent;
     let wall = at(taken.wall, k(1.0));
     // No wet wall of at most that temperature gives so much heat with so little vapor.
     let evaporated = heat * (parts(&wall).1 - w1) / heat_to(&wall);

@@ -61,6 +61,8 @@ impl<S: Scalar> Contact<S> {
         let air = entering.air();
         let melting = with_mixture!(air.formulation(), S, M =>
             <M<S> as Mixture<S>>::melting_temperature(air.pressure().pascals()));
+        // Under pressure water melts below 0 °C; no water that enters a process is so cold.
+        let melting = melting.at_least(k(Quantity::WaterTemperature.limits().0));
         let flow = entering.flow()?;
         Ok(Self { entering: *entering, flow, effectiveness, site: Site::of(&air), melting })
     }
