@@ -550,6 +550,49 @@
 // 3 dry_air_flow [kg/s], 4 volume_flow [m³/s].
 #define MOISTAIR_PROCESS_MIXING_REMAINDER 502
 
+// mixing.outdoor_air_from_readings. Takes 0 quantity [choice: code of a quantity], 1 outdoor.value [unit of the quantity],
+// 2 outdoor.standard_uncertainty [unit of the quantity], 3 outdoor.quality [choice: 0 good 1 repaired 2 refused], 4 returned.value [unit
+// of the quantity], 5 returned.standard_uncertainty [unit of the quantity], 6 returned.quality [choice: 0 good 1 repaired 2 refused],
+// 7 mixed.value [unit of the quantity], 8 mixed.standard_uncertainty [unit of the quantity], 9 mixed.quality [choice: 0 good 1 repaired 2
+// refused], 10 acceptable [1]; gives 0 fraction [1], 1 standard_uncertainty [1], 2 fraction_status [choice, 0 determined, 1 uncertain, 2
+// below zero, 3 above one, 4 indeterminate], 3 quality [choice, 0 good, 1 repaired, 2 refused].
+#define MOISTAIR_PROCESS_MIXING_OUTDOOR_AIR_FROM_READINGS 510
+
+// mixing.outdoor_air_from_air. Takes 0 quantity [choice: code of a quantity], 1 outdoor.dry_bulb.value [unit of the quantity],
+// 2 outdoor.dry_bulb.standard_uncertainty [unit of the quantity], 3 outdoor.dry_bulb.quality [choice: 0 good 1 repaired 2 refused],
+// 4 outdoor.humidity.value [unit of the quantity], 5 outdoor.humidity.standard_uncertainty [unit of the quantity],
+// 6 outdoor.humidity.quality [choice: 0 good 1 repaired 2 refused], 7 outdoor.humidity_quantity [choice: code of a quantity],
+// 8 returned.dry_bulb.value [unit of the quantity], 9 returned.dry_bulb.standard_uncertainty [unit of the quantity],
+// 10 returned.dry_bulb.quality [choice: 0 good 1 repaired 2 refused], 11 returned.humidity.value [unit of the quantity],
+// 12 returned.humidity.standard_uncertainty [unit of the quantity], 13 returned.humidity.quality [choice: 0 good 1 repaired 2 refused],
+// 14 returned.humidity_quantity [choice: code of a quantity], 15 mixed.dry_bulb.value [unit of the quantity],
+// 16 mixed.dry_bulb.standard_uncertainty [unit of the quantity], 17 mixed.dry_bulb.quality [choice: 0 good 1 repaired 2 refused],
+// 18 mixed.humidity.value [unit of the quantity], 19 mixed.humidity.standard_uncertainty [unit of the quantity], 20 mixed.humidity.quality
+// [choice: 0 good 1 repaired 2 refused], 21 mixed.humidity_quantity [choice: code of a quantity], 22 pressure [Pa], 23 acceptable [1];
+// gives 0 fraction [1], 1 standard_uncertainty [1], 2 fraction_status [choice, 0 determined, 1 uncertain, 2 below zero, 3 above one, 4
+// indeterminate], 3 quality [choice, 0 good, 1 repaired, 2 refused].
+#define MOISTAIR_PROCESS_MIXING_OUTDOOR_AIR_FROM_AIR 511
+
+// mixing.outdoor_air_from_flows. Takes 0 outdoor.value [unit of the quantity], 1 outdoor.standard_uncertainty [unit of the quantity],
+// 2 outdoor.quality [choice: 0 good 1 repaired 2 refused], 3 other.value [unit of the quantity], 4 other.standard_uncertainty [unit of the
+// quantity], 5 other.quality [choice: 0 good 1 repaired 2 refused], 6 other_is [choice: 0 total 1 recirculated], 7 acceptable [1]; gives
+// 0 fraction [1], 1 standard_uncertainty [1], 2 fraction_status [choice, 0 determined, 1 uncertain, 2 below zero, 3 above one, 4
+// indeterminate], 3 quality [choice, 0 good, 1 repaired, 2 refused].
+#define MOISTAIR_PROCESS_MIXING_OUTDOOR_AIR_FROM_FLOWS 512
+
+// mixing.outdoor_air_for_temperature. Takes 0–2 outdoor (state), 3–5 returned (state), 6 wanted_temperature [°C], 7 least [1], 8 most [1];
+// gives 0 fraction [1], 1–3 mixed.leaving.air.air (state), 4 mixed.leaving.air.liquid [kg/kg], 5 mixed.leaving.air.ice [kg/kg],
+// 6 mixed.leaving.air.total_water [kg/kg], 7 mixed.leaving.air.specific_enthalpy [J/kg], 8 mixed.leaving.air.is_wet [flag],
+// 9 mixed.leaving.dry_air_flow [kg/s], 10 mixed.exchange.heat [W], 11 mixed.exchange.water [kg/s], 12 mixed.exchange.water_enthalpy_flow
+// [W], 13 reach [choice, 0 reached, 1 at the least, 2 at the most].
+#define MOISTAIR_PROCESS_MIXING_OUTDOOR_AIR_FOR_TEMPERATURE 513
+
+// mixing.with_outdoor_air. Takes 0–2 outdoor (state), 3–5 returned (state), 6 fraction [1]; gives 0–2 leaving.air.air (state),
+// 3 leaving.air.liquid [kg/kg], 4 leaving.air.ice [kg/kg], 5 leaving.air.total_water [kg/kg], 6 leaving.air.specific_enthalpy [J/kg],
+// 7 leaving.air.is_wet [flag], 8 leaving.dry_air_flow [kg/s], 9 exchange.heat [W], 10 exchange.water [kg/s],
+// 11 exchange.water_enthalpy_flow [W].
+#define MOISTAIR_PROCESS_MIXING_WITH_OUTDOOR_AIR 514
+
 // humidify.saturated_steam_enthalpy. Takes 0 steam_temperature [°C]; gives 0 specific_enthalpy [J/kg].
 #define MOISTAIR_PROCESS_HUMIDIFY_SATURATED_STEAM_ENTHALPY 600
 
@@ -866,13 +909,13 @@
 #define MOISTAIR_PROCESS_EVAPORATIVE_INDIRECT 1701
 
 // evaporative.two_stage. Takes 0–2 primary.air (state), 3 primary.dry_air_flow [kg/s], 4–6 secondary.air (state), 7 secondary.dry_air_flow
-// [kg/s], 8 first.effectiveness_of [choice: 0 wet bulb, 1 dew point], 9 first.effectiveness [1], 10 first.exhaust_humidity [1],
-// 11 first.pump_heat [W], 12 first.water_temperature [choice: 0 wet bulb, 2 given], 13 first.water_temperature.given [°C],
-// 14 saturation_effectiveness [1], 15 circulating_flow [kg/s], 16 pump_heat [W], 17 make_up_temperature [choice: 0 wet bulb, 2 given],
-// 18 make_up_temperature.given [°C], 19 drift_fraction [1], 20 cycles_of_concentration [1]; gives 0–2 indirect.primary.air (state),
-// 3 indirect.primary.dry_air_flow [kg/s], 4 indirect.primary.volume_flow [m³/s], 5 indirect.primary_exchange.heat [W],
-// 6 indirect.primary_exchange.water [kg/s], 7 indirect.primary_exchange.water_enthalpy_flow [W], 8–10 indirect.secondary.leaving.air.air
-// (state), 11 indirect.secondary.leaving.air.liquid [kg/kg], 12 indirect.secondary.leaving.air.ice [kg/kg],
+// [kg/s], 8 effectiveness_of [choice: 0 wet bulb, 1 dew point], 9 effectiveness [1], 10 exhaust_humidity [1], 11 indirect_pump_heat [W],
+// 12 water_temperature [choice: 0 wet bulb, 2 given], 13 water_temperature.given [°C], 14 saturation_effectiveness [1],
+// 15 circulating_flow [kg/s], 16 pump_heat [W], 17 make_up_temperature [choice: 0 wet bulb, 2 given], 18 make_up_temperature.given [°C],
+// 19 drift_fraction [1], 20 cycles_of_concentration [1]; gives 0–2 indirect.primary.air (state), 3 indirect.primary.dry_air_flow [kg/s],
+// 4 indirect.primary.volume_flow [m³/s], 5 indirect.primary_exchange.heat [W], 6 indirect.primary_exchange.water [kg/s],
+// 7 indirect.primary_exchange.water_enthalpy_flow [W], 8–10 indirect.secondary.leaving.air.air (state),
+// 11 indirect.secondary.leaving.air.liquid [kg/kg], 12 indirect.secondary.leaving.air.ice [kg/kg],
 // 13 indirect.secondary.leaving.air.total_water [kg/kg], 14 indirect.secondary.leaving.air.specific_enthalpy [J/kg],
 // 15 indirect.secondary.leaving.air.is_wet [flag], 16 indirect.secondary.leaving.dry_air_flow [kg/s], 17 indirect.secondary.exchange.heat
 // [W], 18 indirect.secondary.exchange.water [kg/s], 19 indirect.secondary.exchange.water_enthalpy_flow [W],
@@ -885,6 +928,19 @@
 // 41 direct.water.drift [kg/s], 42 direct.water.blowdown [kg/s], 43 direct.water.make_up [kg/s], 44 direct.water.limited_by_drift [flag],
 // 45 direct.condition [choice, 0 evaporating, 1 already saturated], 46 evaporated [kg/s].
 #define MOISTAIR_PROCESS_EVAPORATIVE_TWO_STAGE 1702
+
+// economizer.coil_load. Takes 0–2 air (state), 3 supply_temperature [°C], 4 coil_leaving_humidity [1]; gives 0 heat [J/kg], 1 wet [flag].
+#define MOISTAIR_PROCESS_ECONOMIZER_COIL_LOAD 1900
+
+// economizer.enthalpy_limit. Takes 0 pressure [Pa]; gives 0 enthalpy_limit [J/kg].
+#define MOISTAIR_PROCESS_ECONOMIZER_ENTHALPY_LIMIT 1901
+
+// economizer.outdoor_air. Takes 0 enabled [choice: 0 no 1 yes], 1–3 outdoor (state), 4–6 returned (state), 7 wanted_temperature [°C],
+// 8 least [1], 9 most [1]; gives 0 fraction [1], 1–3 mixed.leaving.air.air (state), 4 mixed.leaving.air.liquid [kg/kg],
+// 5 mixed.leaving.air.ice [kg/kg], 6 mixed.leaving.air.total_water [kg/kg], 7 mixed.leaving.air.specific_enthalpy [J/kg],
+// 8 mixed.leaving.air.is_wet [flag], 9 mixed.leaving.dry_air_flow [kg/s], 10 mixed.exchange.heat [W], 11 mixed.exchange.water [kg/s],
+// 12 mixed.exchange.water_enthalpy_flow [W], 13 reach [choice, 0 reached, 1 at the least, 2 at the most].
+#define MOISTAIR_PROCESS_ECONOMIZER_OUTDOOR_AIR 1902
 
 // Water below the melting temperature freezes.
 #define MOISTAIR_FREEZING_EQUILIBRIUM 0
@@ -2926,7 +2982,7 @@ int32_t moistair_process_output(int32_t process,
 // room for rows doubles, null where it is not wanted, NaN where there is no value; output_count: moistair_process_output_count; status:
 // room for the status of each row (102 for a choice that its input does not have), may be null; report: output, may be null; error: the
 // detail of the first row that failed, may be null. Columns to be written may not overlap with any other memory of the call. With no rows
-// the arrays are not read and may be null. Takes some 20 kB of stack.
+// the arrays are not read and may be null. Takes up to 50 kB of stack on a machine of 64 bits.
 // Returns 0 when every row is good, else the status of the first row that is not (all outputs and report are written then as well); 101,
 // 102, 103, 104, 105, 107 when an argument is wrong (nothing is written). Where 102 may be either, report tells: it is written only when the rows
 // have been run.
@@ -2982,7 +3038,7 @@ int32_t moistair_process_output(int32_t process,
 // room for rows doubles, null where it is not wanted, NaN where there is no value; output_count: moistair_process_output_count; status:
 // room for the status of each row (102 for a choice that its input does not have), may be null; report: output, may be null; error: the
 // detail of the first row that failed, may be null. Columns to be written may not overlap with any other memory of the call. With no rows
-// the arrays are not read and may be null. Takes some 20 kB of stack.
+// the arrays are not read and may be null. Takes up to 50 kB of stack on a machine of 64 bits.
 // Returns 0 when every row is good, else the status of the first row that is not (all outputs and report are written then as well); 101,
 // 102, 103, 104, 105, 107 when an argument is wrong (nothing is written). Where 102 may be either, report tells: it is written only when the rows
 // have been run.

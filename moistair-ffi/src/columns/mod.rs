@@ -129,8 +129,8 @@ fn apart(writes: &[&[Extent]], reads: &[&[Extent]]) -> Result<(), Failure> {
     let written = writes.iter().copied().flatten();
     let read = reads.iter().copied().flatten();
     let are_apart = written.clone().enumerate().all(|(place, one)| {
-        let others = written.clone().skip(place + 1).chain(read.clone());
-        others.into_iter().all(|other| !one.overlaps(other))
+        let mut others = written.clone().skip(place + 1).chain(read.clone());
+        others.all(|other| !one.overlaps(other))
     });
     if are_apart { Ok(()) } else { Err(Failure::Overlapping) }
 }

@@ -127,7 +127,7 @@ fn described(
 /// room for rows doubles, null where it is not wanted, NaN where there is no value; output_count: moistair_process_output_count; status:
 /// room for the status of each row (102 for a choice that its input does not have), may be null; report: output, may be null; error: the
 /// detail of the first row that failed, may be null. Columns to be written may not overlap with any other memory of the call. With no rows
-/// the arrays are not read and may be null. Takes some 20 kB of stack.
+/// the arrays are not read and may be null. Takes up to 50 kB of stack on a machine of 64 bits.
 /// Returns 0 when every row is good, else the status of the first row that is not (all outputs and report are written then as well); 101,
 /// 102, 103, 104, 105, 107 when an argument is wrong (nothing is written). Where 102 may be either, report tells: it is written only when the rows
 /// have been run.
