@@ -141,7 +141,6 @@ def test_saturated_steam(tally, water):
     tally.finish("saturated steam", 200 + 150)
 
 
-@pytest.mark.filterwarnings("ignore:Metastable ice")
 @both_packages
 def test_superheated_and_throttled_steam(tally, water):
     """IAPWS-95 vapor up to 400 °C and 1.6 MPa; throttled, the temperature at which it has that enthalpy."""
@@ -165,6 +164,7 @@ def test_superheated_and_throttled_steam(tally, water):
     tally.finish("superheated steam", 13 * (3 + 2 * 15))
 
 
+@pytest.mark.filterwarnings("ignore:Metastable ice")
 @both_packages
 def test_ice(tally, water):
     """IAPWS R10-06, and IAPWS-95 vapor in equilibrium with it."""

@@ -24,7 +24,7 @@ pub const MAX_STEPS: usize = 32;
 /// let number = Value::Number;
 /// // The stream: its gas, liquid, ice and dry-air flow.
 /// let inputs = [Value::State(air), number(0.0), number(0.0), number(1.0), number(20.0), number(1_000.0)];
-/// let mut outputs = [number(0.0); 100];
+/// let mut outputs = [number(0.0); 200];
 /// let given = rows.run(&inputs, &mut outputs)?;
 /// let Value::State(leaving) = outputs[7] else { panic!("behind the seven values of what enters") };
 /// assert_eq!(leaving.dry_bulb().celsius(), 20.0);
