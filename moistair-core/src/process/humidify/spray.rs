@@ -11,7 +11,7 @@ use crate::real::Scalar;
 /// circulates many times more, is not modeled here.
 ///
 /// # Errors
-/// As [`steam`].
+/// As [`steam`](super::steam()).
 pub fn spray<S: Scalar>(
     entering: &AirStream<S>,
     water: MassFlow<S>,
