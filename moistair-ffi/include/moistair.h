@@ -1206,10 +1206,10 @@
 // The mixture has the wanted temperature.
 #define MOISTAIR_REACH_REACHED 0
 
-// The nearest that the dampers allow, at their least outdoor air.
+// At the least outdoor air: the nearest that the dampers allow, or held there by an economizer that is off.
 #define MOISTAIR_REACH_AT_LEAST 1
 
-// The nearest that the dampers allow, at their most outdoor air.
+// At the most outdoor air: the nearest that the dampers allow, or all of it where an economizer wants air colder than either.
 #define MOISTAIR_REACH_AT_MOST 2
 
 // The other flow is that of all the air: the supply air.
@@ -1884,7 +1884,7 @@ typedef struct {
 typedef struct {
     // The air that leaves, with what it could not take up.
     moistair_wet_stream leaving;
-    // Water into the air and its enthalpy, no heat.
+    // Water into the air and its enthalpy; heat is that of pump, make-up, spray or wall where there is one, else 0.
     moistair_exchange exchange;
     // Water that became vapor [kg/s].
     double evaporated;
@@ -1936,7 +1936,7 @@ typedef struct {
     double leaving_water;
     // Its temperature [°C].
     double leaving_water_temperature;
-    // What the water gains, its pump counted; negative where the air cools it [W].
+    // What the water gains, its pump counted, less the enthalpy of what evaporated; negative where the air cools it [W]. Not the load of a chiller.
     double heat_to_water;
     // MOISTAIR_HUMIDIFIES or MOISTAIR_DEHUMIDIFIES.
     int32_t moistening;
@@ -3416,7 +3416,8 @@ int32_t moistair_room_ratio_of_slope(const moistair_state *room,
                                      double *sensible_heat_ratio,
                                      moistair_error *error);
 
-// The apparatus dew points of a room that is cooled: where the line of its supply states meets saturation.
+// The apparatus dew points of a room that is cooled: where the line of its supply states meets saturation. Not for a room that liquid water cools
+// (a ratio below 0): its line runs the other way.
 //
 // room: the state of the room; sensible_heat_ratio: [1] by moistair_room_latent_heat; found: output; error: may be null.
 // Returns 0, 1xx, 2xx, 301 (a room of a dew point below -40 °C).
@@ -3722,7 +3723,8 @@ int32_t moistair_evaporative_direct(const moistair_stream *entering,
                                     moistair_direct_cooled *done,
                                     moistair_error *error);
 
-// Cools the primary air by a wetted secondary stream behind a wall, without moistening it.
+// Cools the primary air by a wetted secondary stream behind a wall, without moistening it. The second law is not looked at, and freezing only at the
+// wet bulb of the secondary air: beyond it (dew-point cycles) use effectivenesses and flows of a test.
 //
 // primary, secondary: the streams that enter; cooler: the cooler; done: output; error: may be null.
 // Returns 0, 1xx, 2xx, 207, 301 (the water would freeze, an effectiveness beyond the dew point of the secondary air, a secondary air that

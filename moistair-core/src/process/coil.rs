@@ -17,7 +17,7 @@ pub use coolant::{CoilWater, Coolant, LoadByWater, load_by_water};
 pub use flows::{CoilFlows, FlowExponents};
 pub use rating::{Measured, surface_from_rating};
 
-use super::{AirStream, Exchange, infeasible, parts, same_formulation};
+use super::{AirStream, Exchange, infeasible, melting_temperature, parts, same_formulation};
 use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked, checked_for};
@@ -295,6 +295,5 @@ fn drain_temperature<S: Scalar>(
 }
 
 fn freezes<S: Scalar>(air: &MoistAir<S>, celsius: S) -> bool {
-    let pressure = air.pressure().pascals();
-    with_mixture!(air.formulation(), S, M => celsius < <M<S> as Mixture<S>>::melting_temperature(pressure))
+    celsius < melting_temperature(air)
 }

@@ -198,6 +198,12 @@ pub(crate) fn infeasible<S: Scalar>(quantity: Quantity, value: S, min: S, max: S
     Error::Infeasible { quantity, value: value.to_f64(), min: min.to_f64(), max: max.to_f64() }
 }
 
+/// The temperature at which water melts at the pressure of this air, °C.
+fn melting_temperature<S: Scalar>(air: &MoistAir<S>) -> S {
+    let pressure = air.pressure().pascals();
+    with_mixture!(air.formulation(), S, M => <M<S> as Mixture<S>>::melting_temperature(pressure))
+}
+
 /// The most vapor that air of this pressure and formulation holds at another temperature.
 fn capacity<S: Scalar>(air: &MoistAir<S>, celsius: S) -> S {
     let pressure = air.pressure().pascals();

@@ -104,7 +104,8 @@ pub struct Solved<S = f64> {
 /// # Errors
 /// With the step at fault: [`Error::UnknownSelector`] for a step that is not there, or before the free one, for a number that it has not,
 /// for what is no property; [`Error::NotFinite`] and [`Error::OutOfRange`] for the ends of the bracket and the target; the error of the first step
-/// before the free one that fails, or of the chain at the lower end of the bracket if it runs nowhere. The steps are then as they were.
+/// before the free one that fails, or of the chain at the lower end of the bracket if it runs nowhere; that of a step behind the one looked at, which the search leaves out and the
+/// last run meets. The steps are then as they were.
 ///
 /// ```
 /// use moistair_core::*;

@@ -209,6 +209,11 @@ pub(super) fn settle<S: Scalar>(ratio: S, limit: S, searched: bool) -> Option<S>
     Some(ratio.at_least(k(0.0)).at_most(limit))
 }
 
+/// How far a process may compute a humidity ratio past saturation, relative: [`SATURATION_TOLERANCE`], in single precision its own rounding.
+pub(crate) fn saturation_tolerance<S: Scalar>() -> S {
+    k::<S>(SATURATION_TOLERANCE).at_least(S::epsilon() * k(64.0))
+}
+
 /// What rounding may carry a saturated humidity ratio past saturation. As much in the mole fraction is more in the humidity
 /// ratio where there is little air: d ln W = d ln x / (1 − x).
 pub(crate) fn saturation_rounding<S: Scalar>(ratio: S) -> S {

@@ -42,6 +42,11 @@ impl<S: Scalar> MoistAir<S> {
         Self { celsius, pascals, humidity_ratio, gas, formulation }
     }
 
+    /// Enthalpy of the vapor in this air, ∂h/∂W at constant temperature and pressure.
+    pub(crate) fn vapor_enthalpy(&self) -> S {
+        self.gas.enthalpy_of_water
+    }
+
     /// Dry-bulb temperature, bit for bit as given.
     pub fn dry_bulb(&self) -> Temperature<S> {
         Temperature::from_celsius(self.celsius)

@@ -223,7 +223,8 @@ pub unsafe extern "C" fn moistair_evaporative_direct(
     unsafe { answer(done, error, call) }
 }
 
-/// Cools the primary air by a wetted secondary stream behind a wall, without moistening it.
+/// Cools the primary air by a wetted secondary stream behind a wall, without moistening it. The second law is not looked at, and freezing only at the
+/// wet bulb of the secondary air: beyond it (dew-point cycles) use effectivenesses and flows of a test.
 ///
 /// primary, secondary: the streams that enter; cooler: the cooler; done: output; error: may be null.
 /// Returns 0, 1xx, 2xx, 207, 301 (the water would freeze, an effectiveness beyond the dew point of the secondary air, a secondary air that

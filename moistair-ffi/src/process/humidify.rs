@@ -21,7 +21,7 @@ pub const MOISTAIR_WATER_AT_GIVEN: i32 = 1;
 pub struct moistair_humidified {
     /// The air that leaves, with what it could not take up.
     pub leaving: moistair_wet_stream,
-    /// Water into the air and its enthalpy, no heat.
+    /// Water into the air and its enthalpy; heat is that of pump, make-up, spray or wall where there is one, else 0.
     pub exchange: moistair_exchange,
     /// Water that became vapor [kg/s].
     pub evaporated: f64,
@@ -119,7 +119,7 @@ pub struct moistair_washed {
     pub leaving_water: f64,
     /// Its temperature [°C].
     pub leaving_water_temperature: f64,
-    /// What the water gains, its pump counted; negative where the air cools it [W].
+    /// What the water gains, its pump counted, less the enthalpy of what evaporated; negative where the air cools it [W]. Not the load of a chiller.
     pub heat_to_water: f64,
     /// MOISTAIR_HUMIDIFIES or MOISTAIR_DEHUMIDIFIES.
     pub moistening: i32,

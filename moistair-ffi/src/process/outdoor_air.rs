@@ -32,9 +32,9 @@ pub const MOISTAIR_FRACTION_INDETERMINATE: i32 = 4;
 
 /// The mixture has the wanted temperature.
 pub const MOISTAIR_REACH_REACHED: i32 = 0;
-/// The nearest that the dampers allow, at their least outdoor air.
+/// At the least outdoor air: the nearest that the dampers allow, or held there by an economizer that is off.
 pub const MOISTAIR_REACH_AT_LEAST: i32 = 1;
-/// The nearest that the dampers allow, at their most outdoor air.
+/// At the most outdoor air: the nearest that the dampers allow, or all of it where an economizer wants air colder than either.
 pub const MOISTAIR_REACH_AT_MOST: i32 = 2;
 
 /// The other flow is that of all the air: the supply air.

@@ -440,7 +440,8 @@ pub unsafe extern "C" fn moistair_room_ratio_of_slope(
     unsafe { answer(sensible_heat_ratio, error, call) }
 }
 
-/// The apparatus dew points of a room that is cooled: where the line of its supply states meets saturation.
+/// The apparatus dew points of a room that is cooled: where the line of its supply states meets saturation. Not for a room that liquid water cools
+/// (a ratio below 0): its line runs the other way.
 ///
 /// room: the state of the room; sensible_heat_ratio: [1] by moistair_room_latent_heat; found: output; error: may be null.
 /// Returns 0, 1xx, 2xx, 301 (a room of a dew point below -40 °C).

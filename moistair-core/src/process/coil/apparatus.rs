@@ -11,7 +11,7 @@ use crate::real::{Scalar, k};
 use crate::saturation::Surface;
 use crate::solve;
 use crate::state::MoistAir;
-use crate::state::construct::SATURATION_TOLERANCE;
+use crate::state::construct::saturation_tolerance;
 use crate::state::property::saturates;
 
 /// A coil by its bypass.
@@ -158,9 +158,9 @@ impl<S: Scalar> Line<S> {
         let resolution = solve::temperature_resolution::<S>();
         let w2 = self.leaving_ratio;
         // Saturated air has met the surface, wherever its line leads.
-        let rounding = k::<S>(SATURATION_TOLERANCE).at_least(S::epsilon() * k(64.0));
         let at_start = M::at(start).saturation(self.pressure, Surface::Stable);
-        let saturated = saturates(at_start.mole_fraction) && at_start.humidity_ratio <= w2 * (rounding + k(1.0));
+        let saturated =
+            saturates(at_start.mole_fraction) && at_start.humidity_ratio <= w2 * (saturation_tolerance::<S>() + k(1.0));
         let start_air = Apparatus { dew_point: Temperature::from_celsius(start), bypass_factor: k(0.0) };
         let mut found =
             ApparatusDewPoints { warmer: saturated.then_some(start_air), colder: None, nearest: start_air.dew_point };

@@ -26,10 +26,8 @@ mod wheel;
 pub use wheel::{Regeneration, Wheel, WheelStatus, wheel};
 
 use super::{AirStream, Exchange, infeasible, parts, same_formulation, unsaturated};
-use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
-use crate::mixture::Mixture;
 use crate::quantity::{HeatFlow, HumidityRatio, MassFlow, TemperatureDifference};
 use crate::real::{Scalar, k};
 use crate::saturation::Surface;
@@ -184,9 +182,7 @@ impl<S: Scalar> Vaporization<S> {
             let (_, warmest) = air.formulation().limits(Quantity::DryBulb);
             return Err(infeasible(Quantity::DryBulb, celsius, least, k(warmest)));
         }
-        let (_, ratio) = parts(air);
-        let vapor =
-            with_mixture!(air.formulation(), S, M => M::<S>::at(celsius).gas(pressure, ratio).enthalpy_of_water);
+        let vapor = air.vapor_enthalpy();
         let liquid = condensed_enthalpy(air.formulation(), celsius, pressure, Surface::Liquid);
         Ok(Self { vapor, heat: vapor - liquid })
     }

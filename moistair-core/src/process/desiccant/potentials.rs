@@ -30,7 +30,7 @@ use crate::quantity::{HeatFlow, MassFlow, ZERO_CELSIUS};
 use crate::real::{Scalar, k};
 use crate::solve;
 use crate::state::MoistAir;
-use crate::state::construct::SATURATION_TOLERANCE;
+use crate::state::construct::saturation_tolerance;
 
 /// How far a wheel leads the process air toward the regeneration air.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -112,26 +112,36 @@ pub fn potentials<S: Scalar>(air: &MoistAir<S>) -> Result<(S, S), Error> {
     Ok(of(celsius, ratio))
 }
 
+/// 1.490, the power of T in both potentials.
+const TEMPERATURE_POWER: f64 = 1.490;
+/// −2865 and 4.344 w^0.8624 in F₁.
+const FIRST: (f64, f64, f64) = (2865.0, 4.344, 0.8624);
+/// 1/6360 and −1.127 w^0.07969 in F₂.
+const SECOND: (f64, f64, f64) = (6360.0, 1.127, 0.07969);
+
 /// F₁ and F₂ of a temperature, °C, and a humidity ratio.
 pub(super) fn of<S: Scalar>(celsius: S, ratio: S) -> (S, S) {
     let (x, logarithm) = (temperature_term(celsius + k(ZERO_CELSIUS)), ratio.ln());
-    (k::<S>(4.344) * (logarithm * k(0.8624)).exp() - k::<S>(2865.0) / x, second(x, logarithm))
+    let (of_temperature, of_vapor, power) = FIRST;
+    (k::<S>(of_vapor) * (logarithm * k(power)).exp() - k::<S>(of_temperature) / x, second(x, logarithm))
 }
 
 /// T^1.490.
 fn temperature_term<S: Scalar>(kelvins: S) -> S {
-    (kelvins.ln() * k(1.490)).exp()
+    (kelvins.ln() * k(TEMPERATURE_POWER)).exp()
 }
 
 /// F₂ of T^1.490 and ln w.
 fn second<S: Scalar>(x: S, log_ratio: S) -> S {
-    x / k(6360.0) - k::<S>(1.127) * (log_ratio * k(0.07969)).exp()
+    let (of_temperature, of_vapor, power) = SECOND;
+    x / k(of_temperature) - k::<S>(of_vapor) * (log_ratio * k(power)).exp()
 }
 
 /// ln w of given F₁ and T^1.490; −∞ or less than nothing where F₁ lies below that of dry air.
 fn log_ratio<S: Scalar>(first: S, x: S) -> S {
-    let vapor = (first + k::<S>(2865.0) / x) / k(4.344);
-    if vapor > k(0.0) { vapor.ln() / k(0.8624) } else { -S::infinity() }
+    let (of_temperature, of_vapor, power) = FIRST;
+    let vapor = (first + k::<S>(of_temperature) / x) / k(of_vapor);
+    if vapor > k(0.0) { vapor.ln() / k(power) } else { -S::infinity() }
 }
 
 /// Temperature, °C, and humidity ratio of given potentials. With w from F₁, which falls as T rises, F₂ rises with T: one root in the range,
@@ -144,17 +154,21 @@ pub(super) fn state<S: Scalar>(first: S, second_potential: S) -> Result<(S, S), 
         let logarithm = log_ratio(first, x);
         let value = second(x, logarithm) - second_potential;
         // d ln w / dx = −2865 / (0.8624 · 4.344 w^0.8624 x²)
-        let vapor = (logarithm * k(0.8624)).exp() * k(0.8624 * 4.344);
-        let log_slope = k::<S>(-2865.0) / (vapor * x * x);
-        let along = k::<S>(1.0 / 6360.0) - k::<S>(1.127 * 0.07969) * (logarithm * k(0.07969)).exp() * log_slope;
-        (value, along * x * k(1.490) / kelvins)
+        let (of_temperature, of_vapor, power) = FIRST;
+        let vapor = (logarithm * k(power)).exp() * k(power * of_vapor);
+        let log_slope = k::<S>(-of_temperature) / (vapor * x * x);
+        let (of_temperature, of_vapor, power) = SECOND;
+        let along = k::<S>(1.0 / of_temperature) - k::<S>(of_vapor * power) * (logarithm * k(power)).exp() * log_slope;
+        (value, along * x * k(TEMPERATURE_POWER) / kelvins)
     };
     // In nearly dry air the rounding of the first potential moves the state by more than its own.
     let resolution = solve::temperature_resolution::<S>();
     let margin = resolution * k(1e4);
     let (low, high) = (coldest - margin, warmest + margin);
-    if excess(low).0 > k(0.0) || excess(high).0 < k(0.0) {
-        let beyond = if excess(high).0 < k(0.0) { max + 1.0 } else { min - 1.0 };
+    let too_hot = excess(high).0 < k(0.0);
+    if too_hot || excess(low).0 > k(0.0) {
+        // The correlation ends here: which side it is on is all that is known of the temperature.
+        let beyond = if too_hot { max + 1.0 } else { min - 1.0 };
         return Err(infeasible(Quantity::DesiccantTemperature, k::<S>(beyond), k(min), k(max)));
     }
     let kelvins = solve::increasing(low, high, resolution, excess).at_least(coldest).at_most(warmest);
@@ -268,8 +282,7 @@ fn air_at<S: Scalar>(like: &MoistAir<S>, celsius: S, ratio: S) -> Result<MoistAi
         return Err(infeasible(Quantity::DryBulb, celsius, k(coldest), k(warmest)));
     }
     let held = capacity(like, celsius);
-    let rounding = k::<S>(SATURATION_TOLERANCE).at_least(S::epsilon() * k(64.0));
-    if ratio > held * (rounding + k(1.0)) {
+    if ratio > held * (saturation_tolerance::<S>() + k(1.0)) {
         return Err(infeasible(Quantity::HumidityRatio, ratio, k(0.0), held));
     }
     Ok(MoistAir::assemble(celsius, like.pressure().pascals(), ratio.at_most(held), like.formulation()))

@@ -46,7 +46,8 @@ pub struct DirectCooled<S = f64> {
     pub air: Humidified<S>,
     /// Of the circulating water.
     pub water_temperature: Temperature<S>,
-    /// Evaporation, carry-over, bleed (blowdown) and make-up.
+    /// Evaporation, carry-over, bleed (blowdown) and make-up. Where vapor of the air condenses, that leaves with the bleed, beyond what make-up
+    /// brings, and `limited_by_drift` is set.
     pub water: WaterUse<S>,
     /// Whether there was anything to do.
     pub status: DirectStatus,

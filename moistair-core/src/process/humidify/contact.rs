@@ -10,7 +10,7 @@ use crate::bounds::Quantity;
 use crate::error::{Error, checked};
 use crate::mixture::Mixture;
 use crate::process::film::Site;
-use crate::process::{AirStream, Exchange, WetStream};
+use crate::process::{AirStream, Exchange, WetStream, melting_temperature};
 use crate::quantity::{HumidityRatio, MassFlow, SpecificEnthalpy};
 use crate::real::{Scalar, k};
 use crate::solve;
@@ -59,10 +59,8 @@ impl<S: Scalar> Contact<S> {
     /// The effectiveness is checked by the caller.
     pub fn new(entering: &AirStream<S>, effectiveness: S) -> Result<Self, Error> {
         let air = entering.air();
-        let melting = with_mixture!(air.formulation(), S, M =>
-            <M<S> as Mixture<S>>::melting_temperature(air.pressure().pascals()));
         // Under pressure water melts below 0 °C; no water that enters a process is so cold.
-        let melting = melting.at_least(k(Quantity::WaterTemperature.limits().0));
+        let melting = melting_temperature(&air).at_least(k(Quantity::WaterTemperature.limits().0));
         let flow = entering.flow()?;
         Ok(Self { entering: *entering, flow, effectiveness, site: Site::of(&air), melting })
     }

@@ -6,11 +6,12 @@ use crate::basis::with_mixture;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
 use crate::mixture::Mixture;
+use crate::process::melting_temperature;
 use crate::quantity::{MassFlow, Temperature};
 use crate::real::{Scalar, k};
 use crate::saturation::Surface;
 use crate::state::condensate::condensed_enthalpy;
-use crate::state::construct::{SATURATION_TOLERANCE, greatest_humidity_ratio};
+use crate::state::construct::{greatest_humidity_ratio, saturation_tolerance};
 
 /// Temperature of the water that a wetted medium evaporates.
 #[derive(Clone, Copy, Debug, Default, PartialEq)]
@@ -36,7 +37,7 @@ pub fn evaporative<S: Scalar>(
     let air = entering.air();
     let (celsius, pressure) = (air.dry_bulb().celsius(), air.pressure().pascals());
     let wet_bulb = air.wet_bulb()?.celsius();
-    let melting = with_mixture!(air.formulation(), S, M => <M<S> as Mixture<S>>::melting_temperature(pressure));
+    let melting = melting_temperature(&air);
     if wet_bulb < melting {
         let (_, warmest) = air.formulation().limits(Quantity::WetBulb);
         return Err(infeasible(Quantity::WetBulb, wet_bulb, melting, k(warmest)));
@@ -55,7 +56,7 @@ pub fn evaporative<S: Scalar>(
         let limit = greatest_humidity_ratio(&mixture, leaving, pressure);
         (ratio_of_heat(&mixture, &air, limit, water, k(0.0)), limit)
     });
-    if ratio > limit + limit * k::<S>(SATURATION_TOLERANCE).at_least(S::epsilon() * k(64.0)) {
+    if ratio > limit + limit * saturation_tolerance::<S>() {
         return Err(infeasible(Quantity::HumidityRatio, ratio, w1, limit));
     }
     let evaporated = (ratio - w1).at_least(k(0.0));

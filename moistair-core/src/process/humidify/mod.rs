@@ -41,7 +41,7 @@ use crate::state::{AirWithCondensate, Freezing, MoistAir};
 pub struct Humidified<S = f64> {
     /// The air that leaves, with what it could not take up as liquid or ice.
     pub leaving: WetStream<S>,
-    /// Water into the air and the enthalpy that came with it; no heat.
+    /// Water into the air and the enthalpy that came with it; heat is that of pump, make-up, spray or wall where there is one, else zero.
     pub exchange: Exchange<S>,
     /// Water that became vapor; negative where cold water condensed vapor of the air.
     pub evaporated: MassFlow<S>,

@@ -42,7 +42,8 @@ pub struct Washed<S = f64> {
     pub leaving_water: MassFlow<S>,
     /// Its temperature.
     pub leaving_water_temperature: Temperature<S>,
-    /// What the water gains, its pump counted: ṁ h of what leaves less that of what enters; negative where the air cools the water.
+    /// What the water gains, its pump counted: ṁ h of what leaves less that of what enters; negative where the air cools the water. Less the
+    /// enthalpy of what evaporated, on the datum of liquid water: not the load of a chiller or heater, which is that of the sprayed flow.
     pub heat_to_water: HeatFlow<S>,
     /// Which way the water goes.
     pub moistening: Moistening,

@@ -249,9 +249,9 @@ coded_enum! {
     Reach {
         /// The mixture has the wanted temperature.
         Reached = 0, "reached";
-        /// The nearest that the dampers allow, at their least outdoor air.
+        /// At the least outdoor air: the nearest that the dampers allow, or held there by an economizer that is off.
         AtLeast = 1, "not reached, at the least outdoor air";
-        /// The nearest that the dampers allow, at their most outdoor air.
+        /// At the most outdoor air: the nearest that the dampers allow, or all of it where an economizer wants air colder than either.
         AtMost = 2, "not reached, at the most outdoor air";
     }
 }

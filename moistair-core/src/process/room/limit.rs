@@ -1,6 +1,5 @@
 //! Whether a room line meets what a coil can leave, the limit beyond which it does not, and the reheat that is then unavoidable.
 
-use super::ratio::vapor_enthalpy;
 use super::{Load, RoomGains, supply_at_flow};
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
@@ -33,7 +32,8 @@ impl<S: Scalar> RoomDewPoints<S> {
 
 /// The apparatus dew points of a room that is cooled, from its state and its sensible heat ratio (by [`latent_heat`](super::latent_heat)): where the
 /// line of supply states, straight in enthalpy and humidity ratio, meets saturation. A ratio above 1 leads to moister supply air, one below 0 as
-/// well: more moisture is taken out of such a room than there is sensible heat. Bounded work, as
+/// well: more moisture is taken out of such a room than there is sensible heat. Not for a room in which so much liquid water evaporates that its
+/// ratio is below 0: its line runs the other way, to supply air that is warmer and drier, and the meetings here are not its own. Bounded work, as
 /// [`coil::apparatus_dew_points`](crate::process::coil::apparatus_dew_points).
 ///
 /// # Errors
@@ -56,7 +56,7 @@ pub fn apparatus_dew_points<S: Scalar>(room: &MoistAir<S>, sensible_heat_ratio: 
     let (zero, one) = (k::<S>(0.0), k::<S>(1.0));
     // Of the two lines of one ratio that of a cooled room: sensible heat |SHR|, latent heat to match.
     let (sensible, latent) = if ratio < zero { (-ratio, ratio - one) } else { (ratio, one - ratio) };
-    let dried = latent / vapor_enthalpy(room);
+    let dried = latent / room.vapor_enthalpy();
     let celsius = room.dry_bulb().celsius();
     // Toward moister air the line is no warmer than the room, but for the forces between molecules, which bend its isotherm.
     let start = if dried < zero { celsius + k(BENT_ISOTHERM) } else { dew_point(room)?.at_most(celsius) };
@@ -190,7 +190,7 @@ impl<S: Scalar> Tangents<S> {
     fn limit(&self, room: &MoistAir<S>) -> LimitingLine<S> {
         let Chord { slope, celsius, at_coldest, leaving } = self.least;
         LimitingLine {
-            sensible_heat_ratio: k::<S>(1.0) - vapor_enthalpy(room) / slope,
+            sensible_heat_ratio: k::<S>(1.0) - room.vapor_enthalpy() / slope,
             slope: SpecificEnthalpy::from_joules_per_kilogram(slope),
             touches: Temperature::from_celsius(celsius),
             at_coldest,

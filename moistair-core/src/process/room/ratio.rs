@@ -1,11 +1,10 @@
 //! Sensible heat ratio and slope of the room line, by one definition of the latent heat.
 
 use super::{Load, RoomGains};
-use crate::basis::{Basis, with_mixture};
+use crate::basis::Basis;
 use crate::bounds::Quantity;
 use crate::error::{Error, checked};
-use crate::mixture::Mixture;
-use crate::process::{infeasible, parts};
+use crate::process::infeasible;
 use crate::quantity::SpecificEnthalpy;
 use crate::real::{Scalar, k};
 use crate::state::MoistAir;
@@ -17,14 +16,7 @@ use crate::state::MoistAir;
 /// the slope of the line say the same. Other definitions differ in the latent part: 2501 kJ/kg by 2 %, the heat of vaporization by 4 %; with the
 /// enthalpy of the source (ASHRAE Fundamentals 2021 ch. 1, Example 6: 0.701, here 0.702) lines of one ratio would differ by source.
 pub fn latent_heat<S: Scalar>(room: &MoistAir<S>) -> SpecificEnthalpy<S> {
-    SpecificEnthalpy::from_joules_per_kilogram(vapor_enthalpy(room))
-}
-
-/// ∂h/∂W at the state of the air.
-pub(super) fn vapor_enthalpy<S: Scalar>(air: &MoistAir<S>) -> S {
-    let pressure = air.pressure().pascals();
-    with_mixture!(air.formulation(), S, M =>
-        M::<S>::at(air.dry_bulb().celsius()).gas(pressure, parts(air).1).enthalpy_of_water)
+    SpecificEnthalpy::from_joules_per_kilogram(room.vapor_enthalpy())
 }
 
 /// Sensible over total gain by [`latent_heat`]; below 0 or above 1 where one gain is negative or water evaporates in the room, and never clamped.
@@ -49,7 +41,7 @@ pub(super) fn vapor_enthalpy<S: Scalar>(air: &MoistAir<S>) -> S {
 /// ```
 pub fn sensible_heat_ratio<S: Scalar>(room: &MoistAir<S>, gains: &RoomGains<S>) -> Result<S, Error> {
     let load = Load::of(gains, room.basis())?;
-    quotient(Quantity::SensibleHeatRatio, load.sensible_at(vapor_enthalpy(room)), load.total)
+    quotient(Quantity::SensibleHeatRatio, load.sensible_at(room.vapor_enthalpy()), load.total)
 }
 
 /// Slope of the room line, Δh/ΔW = (Q + ṁ_w h_w)/ṁ_w.
@@ -83,7 +75,7 @@ pub fn process_slope<S: Scalar>(
 /// ```
 pub fn slope_of_ratio<S: Scalar>(room: &MoistAir<S>, sensible_heat_ratio: S) -> Result<SpecificEnthalpy<S>, Error> {
     let ratio = checked(Quantity::SensibleHeatRatio, sensible_heat_ratio)?;
-    quotient(Quantity::ProcessSlope, vapor_enthalpy(room), k::<S>(1.0) - ratio)
+    quotient(Quantity::ProcessSlope, room.vapor_enthalpy(), k::<S>(1.0) - ratio)
         .map(SpecificEnthalpy::from_joules_per_kilogram)
 }
 
@@ -93,7 +85,7 @@ pub fn slope_of_ratio<S: Scalar>(room: &MoistAir<S>, sensible_heat_ratio: S) -> 
 /// [`Error::Infeasible`] for a slope of zero, that of gains which cancel; [`Error::OutOfRange`], [`Error::NotFinite`].
 pub fn ratio_of_slope<S: Scalar>(room: &MoistAir<S>, slope: SpecificEnthalpy<S>) -> Result<S, Error> {
     let slope = checked(Quantity::ProcessSlope, slope.joules_per_kilogram())?;
-    quotient(Quantity::SensibleHeatRatio, slope - vapor_enthalpy(room), slope)
+    quotient(Quantity::SensibleHeatRatio, slope - room.vapor_enthalpy(), slope)
 }
 
 /// A quotient within the limits of its quantity, refused beyond them.

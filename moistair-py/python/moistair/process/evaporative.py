@@ -262,7 +262,8 @@ def indirect(
     """Cools the primary air by a wetted secondary stream behind a wall, without moistening it.
 
     Where the primary air would be cooled below its dew point, the heat of that cooling is kept and equilibrium decides how much
-    condenses. The secondary air leaves with that heat and that of the pump at the stated humidity.
+    condenses. The secondary air leaves with that heat and that of the pump at the stated humidity. The second law is not looked at,
+    and freezing only at the wet bulb of the secondary air: beyond it (dew-point cycles) use effectivenesses and flows of a test.
 
     Parameters
     ----------

@@ -52,7 +52,7 @@ class Humidified(Record, Generic[T]):
     leaving : WetStream
         The air that leaves, with what it could not take up as liquid or ice.
     exchange : Exchange
-        Water into the air and the enthalpy that came with it; no heat.
+        Water into the air and the enthalpy that came with it; heat is that of pump, make-up, spray or wall where there is one, else zero.
     evaporated : float or numpy.ndarray
         Water that became vapor, kg/s; negative where cold water condensed vapor of the air.
     carried : float or numpy.ndarray
@@ -134,7 +134,8 @@ class Washed(Record, Generic[T]):
     leaving_water_temperature : float or numpy.ndarray
         Its temperature, °C.
     heat_to_water : float or numpy.ndarray
-        What the water gains, its pump counted, W; negative where the air cools it.
+        What the water gains, its pump counted, less the enthalpy of what evaporated, W; negative where the air cools it. Not the load
+        of a chiller.
     moistening : Moistening or numpy.ndarray
         Which way the water goes; the code in an array, −1 without a result.
     """

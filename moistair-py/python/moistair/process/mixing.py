@@ -59,9 +59,9 @@ class Reach(enum.IntEnum):
     REACHED = 0
     """The mixture has it."""
     AT_LEAST = 1
-    """The nearest that the dampers allow, at their least outdoor air."""
+    """At the least outdoor air: the nearest that the dampers allow, or held there by an economizer that is off."""
     AT_MOST = 2
-    """The nearest that the dampers allow, at their most outdoor air."""
+    """At the most outdoor air: the nearest that the dampers allow, or all of it where an economizer wants air colder than either."""
 
 
 @dataclass(frozen=True, eq=False, init=False)

@@ -730,6 +730,8 @@ def apparatus_dew_points(
 ) -> RoomDewPoints[Any]:
     """Where the line of the supply states of a cooled room meets saturation.
 
+    Not for a room that liquid water cools (a ratio below 0): its line runs the other way.
+
     The line is straight in enthalpy and humidity ratio.
 
     Parameters
