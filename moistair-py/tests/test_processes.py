@@ -56,15 +56,16 @@ def reading(value, uncertainty):
 def decision(t, rh):
     outdoor = MeasuredAir(dry_bulb=reading(t, 0.2), relative_humidity=reading(rh, 0.02))
     rule = economizer.EconomizerRule.FIXED_DRY_BULB
-    settings = economizer.Economizer(rule=rule, pressure=SEA_LEVEL, dry_bulb_limit=30.0, least_time_on=0.0, least_time_off=0.0)
-    if np.ndim(t) == 0:
-        return settings.decide(economizer.EconomizerState(), time=0.0, outdoor=outdoor)
-    # One that has been off before each row.
-    made = [decision(float(a), float(b)) for a, b in zip(np.ravel(t), np.ravel(rh))]
-    many = settings.decide(economizer.EconomizerState(), time=np.arange(len(made)), outdoor=outdoor)
-    assert [one.margin for one in made] == list(many.margin)
-    object.__setattr__(many, "enabled", np.array([one.enabled for one in made]))
-    return many
+    # Without hysteresis and least times a decision stands by itself, wherever in the series.
+    settings = economizer.Economizer(
+        rule=rule,
+        pressure=SEA_LEVEL,
+        dry_bulb_limit=30.0,
+        temperature_hysteresis=0.0,
+        least_time_on=0.0,
+        least_time_off=0.0,
+    )
+    return settings.decide(economizer.EconomizerState(), time=np.arange(np.size(t), dtype=float).reshape(np.shape(t)), outdoor=outdoor)
 
 
 #: Each process as a function of three columns: dry bulb, relative humidity, and a share between 0 and 1.
