@@ -197,15 +197,15 @@ loads! {
     sensible_cooling: HeatFlow::from_watts;
     /// The rest of it.
     latent_cooling: HeatFlow::from_watts;
-    /// Heat from another stream through a heat recovery or an indirect cooler, or carried over by a desiccant; signed.
+    /// Heat from another stream through an indirect cooler, or carried over by a desiccant; signed.
     recovered: HeatFlow::from_watts;
-    /// Sensible heat of rooms, and heat through the walls of ducts; signed.
+    /// Sensible heat of rooms; signed.
     gains: HeatFlow::from_watts;
     /// Heat that circulating water brings with it: of its pump, of its make-up, of chilled spray; signed.
     water_heat: HeatFlow::from_watts;
-    /// Power of fans that reaches the air.
+    /// Power of fans that reaches the air: zero, as no step is a fan yet.
     fan_work: HeatFlow::from_watts;
-    /// Electric power of fans, that part of it included.
+    /// Electric power of fans, that part of it included: zero likewise.
     fan_power: HeatFlow::from_watts;
     /// Of compression and expansion: work less the heat of cooling; signed.
     compression: HeatFlow::from_watts;
@@ -217,7 +217,7 @@ loads! {
     humidifying_water: MassFlow::from_kilograms_per_second;
     /// Moisture of rooms; signed.
     moisture_gain: MassFlow::from_kilograms_per_second;
-    /// Vapor from another stream through a heat recovery, or from a desiccant; signed.
+    /// Vapor from a desiccant; signed.
     recovered_water: MassFlow::from_kilograms_per_second;
     /// Water that evaporates into a secondary stream, not into this one.
     secondary_water: MassFlow::from_kilograms_per_second;
@@ -241,7 +241,7 @@ pub struct StepResult<S = f64> {
     pub regime: Option<CoilRegime>,
     /// Frost forms, or water in a coil may freeze.
     pub frost: bool,
-    /// Water condenses where no coil drains it: on or in a duct, in a heat recovery or an indirect cooler.
+    /// Water condenses where no coil drains it: in an indirect cooler.
     pub condenses: bool,
     /// What enters, with a stream mixed in, against what leaves.
     pub books: Books<S>,

@@ -2281,15 +2281,15 @@ typedef struct {
     double sensible_cooling;
     // The rest of it [W].
     double latent_cooling;
-    // Heat from another stream through a heat recovery or an indirect cooler, or carried over by a desiccant; signed [W].
+    // Heat from another stream through an indirect cooler, or carried over by a desiccant; signed [W].
     double recovered;
-    // Sensible heat of rooms, and heat through the walls of ducts; signed [W].
+    // Sensible heat of rooms; signed [W].
     double gains;
     // Heat that circulating water brings with it: of its pump, of its make-up, of chilled spray; signed [W].
     double water_heat;
-    // Power of fans that reaches the air [W].
+    // Power of fans that reaches the air [W]: 0, as no step is a fan yet.
     double fan_work;
-    // Electric power of fans, that part of it included [W].
+    // Electric power of fans, that part of it included [W]: 0 likewise.
     double fan_power;
     // Of compression and expansion: work less the heat of cooling; signed [W].
     double compression;
@@ -2301,7 +2301,7 @@ typedef struct {
     double humidifying_water;
     // Moisture of rooms; signed [kg/s].
     double moisture_gain;
-    // Vapor from another stream through a heat recovery, or from a desiccant; signed [kg/s].
+    // Vapor from a desiccant; signed [kg/s].
     double recovered_water;
     // Water that evaporates into a secondary stream, not into this one [kg/s].
     double secondary_water;
@@ -2325,7 +2325,7 @@ typedef struct {
     int32_t regime;
     // 1 if frost forms, or water in a coil may freeze; else 0. No freezestat.
     int32_t frost;
-    // 1 if water condenses where no coil drains it: on or in a duct, in a heat recovery or an indirect cooler; else 0.
+    // 1 if water condenses where no coil drains it: in an indirect cooler; else 0.
     int32_t condenses;
     // 0.
     int32_t reserved;

@@ -149,15 +149,15 @@ pub struct moistair_loads {
     pub sensible_cooling: f64,
     /// The rest of it [W].
     pub latent_cooling: f64,
-    /// Heat from another stream through a heat recovery or an indirect cooler, or carried over by a desiccant; signed [W].
+    /// Heat from another stream through an indirect cooler, or carried over by a desiccant; signed [W].
     pub recovered: f64,
-    /// Sensible heat of rooms, and heat through the walls of ducts; signed [W].
+    /// Sensible heat of rooms; signed [W].
     pub gains: f64,
     /// Heat that circulating water brings with it: of its pump, of its make-up, of chilled spray; signed [W].
     pub water_heat: f64,
-    /// Power of fans that reaches the air [W].
+    /// Power of fans that reaches the air [W]: 0, as no step is a fan yet.
     pub fan_work: f64,
-    /// Electric power of fans, that part of it included [W].
+    /// Electric power of fans, that part of it included [W]: 0 likewise.
     pub fan_power: f64,
     /// Of compression and expansion: work less the heat of cooling; signed [W].
     pub compression: f64,
@@ -169,7 +169,7 @@ pub struct moistair_loads {
     pub humidifying_water: f64,
     /// Moisture of rooms; signed [kg/s].
     pub moisture_gain: f64,
-    /// Vapor from another stream through a heat recovery, or from a desiccant; signed [kg/s].
+    /// Vapor from a desiccant; signed [kg/s].
     pub recovered_water: f64,
     /// Water that evaporates into a secondary stream, not into this one [kg/s].
     pub secondary_water: f64,
@@ -195,7 +195,7 @@ pub struct moistair_step_result {
     pub regime: i32,
     /// 1 if frost forms, or water in a coil may freeze; else 0. No freezestat.
     pub frost: i32,
-    /// 1 if water condenses where no coil drains it: on or in a duct, in a heat recovery or an indirect cooler; else 0.
+    /// 1 if water condenses where no coil drains it: in an indirect cooler; else 0.
     pub condenses: i32,
     /// 0.
     pub reserved: i32,

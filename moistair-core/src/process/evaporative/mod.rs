@@ -7,7 +7,7 @@
 //! # Accuracy
 //! Effectiveness models: what leaves is as good as the test that gave the effectiveness (ASHRAE 133 for direct, ASHRAE 143 for indirect
 //! coolers) and holds near its flows. Heat and water close on both streams whatever it is. Not modeled: drying out of the medium, heat through
-//! the casing, fouling, fans (see the heat of a fan), how the effectiveness changes with the flows.
+//! the casing, fouling, fans, how the effectiveness changes with the flows.
 //!
 //! # Caution
 //! Wet media, sumps and droplets can grow and spread *Legionella*, moist ducts grow mould: hygiene rules (such as VDI 6022, ASHRAE 188)

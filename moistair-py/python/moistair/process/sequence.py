@@ -648,16 +648,16 @@ class Loads(Record, Generic[T]):
     sensible_cooling, latent_cooling : float or numpy.ndarray
         Its parts, W.
     recovered : float or numpy.ndarray
-        Heat from another stream through a heat recovery or an indirect cooler, or carried over by a desiccant, W;
+        Heat from another stream through an indirect cooler, or carried over by a desiccant, W;
         signed.
     gains : float or numpy.ndarray
-        Sensible heat of rooms, and heat through the walls of ducts, W; signed.
+        Sensible heat of rooms, W; signed.
     water_heat : float or numpy.ndarray
         Heat that circulating water brings with it: of its pump, of its make-up, of chilled spray, W; signed.
     fan_work : float or numpy.ndarray
-        Power of fans that reaches the air, W.
+        Power of fans that reaches the air, W: 0, as no step is a fan yet.
     fan_power : float or numpy.ndarray
-        Electric power of fans, that part of it included, W.
+        Electric power of fans, that part of it included, W: 0 likewise.
     compression : float or numpy.ndarray
         Of compression and expansion: work less the heat of cooling, W; signed.
     condensate : float or numpy.ndarray
@@ -669,7 +669,7 @@ class Loads(Record, Generic[T]):
     moisture_gain : float or numpy.ndarray
         Moisture of rooms, kg/s; signed.
     recovered_water : float or numpy.ndarray
-        Vapor from another stream through a heat recovery, or from a desiccant, kg/s; signed.
+        Vapor from a desiccant, kg/s; signed.
     secondary_water : float or numpy.ndarray
         Water that evaporates into a secondary stream, not into this one, kg/s.
     mixed_in : float or numpy.ndarray
@@ -712,7 +712,7 @@ class StepResult(Record, Generic[T]):
     frost : bool or numpy.ndarray
         Frost forms, or water in a coil may freeze. No freezestat.
     condenses : bool or numpy.ndarray
-        Water condenses where no coil drains it: on or in a duct, in a heat recovery or an indirect cooler.
+        Water condenses where no coil drains it: in an indirect cooler.
     books : Books
         What enters, with a stream mixed in, against what leaves.
     """
